@@ -1,0 +1,110 @@
+"""The list of checks: each declares what it needs and gives only its judgement.
+
+The runner supplies the readings by band, answers for missing ones, attaches cells, tries the
+innocent readings and turns a crash into a finding.
+"""
+
+from __future__ import annotations
+
+import inspect
+from collections.abc import Callable
+from dataclasses import dataclass
+from typing import Literal
+
+from speccheck.dictionary import parameters
+from speccheck.records import Amount, Band, Fit, Interval, Panel, Settings, Step
+
+Scope = Literal["band", "panel"]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Judgement:
+    """What a check function returns; the runner makes a Finding of it."""
+
+    verdict: Fit
+    summary: str
+    claimed: Amount | None = None
+    expected: Interval | None = None
+    working: tuple[Step, ...] = ()
+    assumptions: tuple[str, ...] = ()
+    question: str = ""
+    missing: tuple[str, ...] = ()
+
+
+@dataclass(frozen=True, slots=True)
+class Case:
+    """What is being judged: the panel, the band [MHz] (None for a panel-wide check), the settings."""
+
+    panel: Panel
+    band: Band | None
+    settings: Settings
+
+
+JudgementFunction = Callable[..., Judgement | None]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Check:
+    """A registered check; `explanation` is its docstring."""
+
+    slug: str
+    title: str
+    family: str
+    scope: Scope
+    needs: tuple[str, ...]
+    optional: tuple[str, ...]
+    source: str
+    explanation: str
+    judge: JudgementFunction
+
+
+CHECKS: dict[str, Check] = {}
+
+
+def check(
+    slug: str,
+    title: str,
+    *,
+    needs: tuple[str, ...],
+    source: str,
+    optional: tuple[str, ...] = (),
+    scope: Scope = "band",
+) -> Callable[[JudgementFunction], JudgementFunction]:
+    """Register a check function; its arguments are `case` and the parameters it names.
+
+    A needed parameter arrives as a Reading, an optional one as a Reading or None. The function
+    returns a Judgement, or None where the check does not apply to this panel at all.
+
+    Raises
+    ------
+    ValueError : a slug claimed twice, a parameter the dictionary does not know, an argument that
+        was not declared, or a check without explanation
+    """
+
+    def register(judge: JudgementFunction) -> JudgementFunction:
+        if slug in CHECKS:
+            raise ValueError(f"check '{slug}' is registered twice")
+        unknown = [key for key in (*needs, *optional) if key not in parameters()]
+        if unknown:
+            raise ValueError(f"check '{slug}' names parameters the dictionary lacks: {', '.join(unknown)}")
+        arguments = set(inspect.signature(judge).parameters) - {"case"}
+        if arguments != {*needs, *optional}:
+            odd = ", ".join(sorted(arguments ^ {*needs, *optional}))
+            raise ValueError(f"check '{slug}': arguments and declared parameters differ in {odd}")
+        explanation = inspect.getdoc(judge) or ""
+        if not explanation:
+            raise ValueError(f"check '{slug}' has no explanation")
+        CHECKS[slug] = Check(
+            slug=slug,
+            title=title,
+            family=judge.__module__.rsplit(".", 1)[-1],
+            scope=scope,
+            needs=needs,
+            optional=optional,
+            source=source,
+            explanation=explanation,
+            judge=judge,
+        )
+        return judge
+
+    return register

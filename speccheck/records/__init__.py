@@ -1,0 +1,55 @@
+"""The frozen data types that flow from a cell to a verdict."""
+
+from speccheck.records.offers import (
+    Band,
+    CellRef,
+    MirrorCell,
+    MirrorSheet,
+    Notice,
+    Panel,
+    Reading,
+    Statement,
+    Submission,
+    Unread,
+    Value,
+)
+from speccheck.records.results import Assessment, Curve, Drawing, ExposureNote, ExposureRow, PanelAssessment
+from speccheck.records.tenders import Deviation, MatrixRow, Requirement, Settings, Tender
+from speccheck.records.verdicts import Amount, Convention, Finding, Interval, Step
+from speccheck.records.words import Compliance, Fit, Level, Outcome, Sense, Status
+
+__all__ = [
+    "Amount",
+    "Assessment",
+    "Band",
+    "CellRef",
+    "Compliance",
+    "Convention",
+    "Curve",
+    "Deviation",
+    "Drawing",
+    "ExposureNote",
+    "ExposureRow",
+    "Finding",
+    "Fit",
+    "Interval",
+    "Level",
+    "MatrixRow",
+    "MirrorCell",
+    "MirrorSheet",
+    "Notice",
+    "Outcome",
+    "Panel",
+    "PanelAssessment",
+    "Reading",
+    "Requirement",
+    "Sense",
+    "Settings",
+    "Statement",
+    "Status",
+    "Step",
+    "Submission",
+    "Tender",
+    "Unread",
+    "Value",
+]

@@ -1,0 +1,61 @@
+"""The words of the program: one enumeration a scale, never swapped."""
+
+from __future__ import annotations
+
+from enum import StrEnum
+
+
+class Sense(StrEnum):
+    """What the sign or word beside a figure says it bounds."""
+
+    NOMINAL = "nominal"
+    MIN = "min"
+    MAX = "max"
+
+
+class Status(StrEnum):
+    """A cell that speaks about a parameter without giving a figure."""
+
+    MISSING = "missing"
+    NOT_APPLICABLE = "not applicable"
+    TO_BE_ADVISED = "to be advised"
+    REFERRED = "referred"
+    DECLARED = "declared"
+
+
+class Fit(StrEnum):
+    """Verdict of physics and arithmetic on a claim."""
+
+    FITS = "fits"
+    DOUBTFUL = "doubtful"
+    DOES_NOT_FIT = "does not fit"
+    NOT_JUDGED = "not judged"
+
+
+class Compliance(StrEnum):
+    """Verdict of a tender requirement on an offer (the middle pair after ILAC-G8:09/2019)."""
+
+    MEETS = "meets"
+    MEETS_NARROWLY = "meets narrowly"
+    FAILS_NARROWLY = "fails narrowly"
+    FAILS = "fails"
+    DECLARED_ONLY = "declared only"
+    NOT_STATED = "not stated"
+    NOT_JUDGED = "not judged"
+    DEVIATION_ACCEPTED = "deviation accepted"
+
+
+class Outcome(StrEnum):
+    """What a panel's findings and requirements add up to."""
+
+    ACCEPTABLE = "acceptable"
+    CLARIFY = "clarify"
+    REJECT = "reject"
+
+
+class Level(StrEnum):
+    """Weight of a requirement."""
+
+    MANDATORY = "mandatory"
+    DESIRABLE = "desirable"
+    INFORMATION = "information"
