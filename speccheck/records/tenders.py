@@ -12,7 +12,11 @@ from speccheck.records.words import Compliance, Level
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Requirement:
-    """One row of the buyer's requirements as read; `limit` is in the requirement's own unit."""
+    """One row of the buyer's requirements as read; `limit` is in the requirement's own unit.
+
+    `at` holds structured conditions by name with the unit in the name, as in `Reading.at`. A doubt
+    starts with its code word and says in words what a person has to settle.
+    """
 
     where: CellRef
     clause: str
@@ -25,6 +29,7 @@ class Requirement:
     statistic: str = ""
     bands: tuple[Band, ...] = ()
     scope: str = ""
+    at: Mapping[str, float] = field(default_factory=dict)
     doubts: tuple[str, ...] = ()
     unread: str = ""
     confirmed: bool = False
@@ -45,13 +50,14 @@ class Deviation:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class MatrixRow:
-    """One requirement held against one panel.
+    """One requirement held against one panel, in one band where its parameter is stated by band.
 
     `margin` is signed in the parameter's good direction, in the requirement's unit.
     """
 
     requirement: Requirement
     verdict: Compliance
+    band: Band | None = None
     offered: Reading | None = None
     statement: Statement | None = None
     offered_in_unit: Value | None = None
