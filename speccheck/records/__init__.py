@@ -1,5 +1,6 @@
 """The frozen data types that flow from a cell to a verdict."""
 
+from speccheck.records.cautions import MOUNTING_CAUTIONS, WIND_CAUTIONS
 from speccheck.records.offers import (
     Band,
     CellRef,
@@ -13,12 +14,22 @@ from speccheck.records.offers import (
     Unread,
     Value,
 )
-from speccheck.records.results import Assessment, Curve, Drawing, ExposureNote, ExposureRow, PanelAssessment
+from speccheck.records.results import (
+    Assessment,
+    Curve,
+    Drawing,
+    ExposureNote,
+    ExposureRow,
+    ExposureZone,
+    PanelAssessment,
+)
 from speccheck.records.tenders import Deviation, MatrixRow, Requirement, Settings, Tender
 from speccheck.records.verdicts import Amount, Convention, Finding, Interval, Step
 from speccheck.records.words import Compliance, Fit, Level, Outcome, Sense, Status
 
 __all__ = [
+    "MOUNTING_CAUTIONS",
+    "WIND_CAUTIONS",
     "Amount",
     "Assessment",
     "Band",
@@ -30,6 +41,7 @@ __all__ = [
     "Drawing",
     "ExposureNote",
     "ExposureRow",
+    "ExposureZone",
     "Finding",
     "Fit",
     "Interval",
