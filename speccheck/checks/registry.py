@@ -12,14 +12,18 @@ from dataclasses import dataclass
 from typing import Literal
 
 from speccheck.dictionary import parameters
-from speccheck.records import Amount, Band, Fit, Interval, Panel, Settings, Step
+from speccheck.records import Amount, Band, Fit, Interval, Panel, Reading, Settings, Step
 
 Scope = Literal["band", "panel"]
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Judgement:
-    """What a check function returns; the runner makes a Finding of it."""
+    """What a check function returns; the runner makes a Finding of it.
+
+    `used` names readings beyond the arguments that the judgement stands on, so that their cells are
+    shown; with `alone` it stands on these only.
+    """
 
     verdict: Fit
     summary: str
@@ -29,6 +33,8 @@ class Judgement:
     assumptions: tuple[str, ...] = ()
     question: str = ""
     missing: tuple[str, ...] = ()
+    used: tuple[Reading, ...] = ()
+    alone: bool = False
 
 
 @dataclass(frozen=True, slots=True)
@@ -40,7 +46,7 @@ class Case:
     settings: Settings
 
 
-JudgementFunction = Callable[..., Judgement | None]
+JudgementFunction = Callable[..., Judgement | tuple[Judgement, ...] | None]
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -53,6 +59,8 @@ class Check:
     scope: Scope
     needs: tuple[str, ...]
     optional: tuple[str, ...]
+    about: tuple[str, ...]
+    sees_impossible: bool
     source: str
     explanation: str
     judge: JudgementFunction
@@ -68,12 +76,17 @@ def check(
     needs: tuple[str, ...],
     source: str,
     optional: tuple[str, ...] = (),
+    about: tuple[str, ...] = (),
     scope: Scope = "band",
+    sees_impossible: bool = False,
 ) -> Callable[[JudgementFunction], JudgementFunction]:
     """Register a check function; its arguments are `case` and the parameters it names.
 
     A needed parameter arrives as a Reading, an optional one as a Reading or None. The function
-    returns a Judgement, or None where the check does not apply to this panel at all.
+    returns a Judgement (or several), or None where the check does not apply to this panel at all.
+    `about` names the claims that are judged: where the panel states none of them (without `about`:
+    none of `needs`), the check does not apply and nothing is reported missing. Figures outside what is
+    possible at all are withheld unless a check says that it `sees_impossible` ones.
 
     Raises
     ------
@@ -84,7 +97,7 @@ def check(
     def register(judge: JudgementFunction) -> JudgementFunction:
         if slug in CHECKS:
             raise ValueError(f"check '{slug}' is registered twice")
-        unknown = [key for key in (*needs, *optional) if key not in parameters()]
+        unknown = [key for key in (*needs, *optional, *about) if key not in parameters()]
         if unknown:
             raise ValueError(f"check '{slug}' names parameters the dictionary lacks: {', '.join(unknown)}")
         arguments = set(inspect.signature(judge).parameters) - {"case"}
@@ -101,6 +114,8 @@ def check(
             scope=scope,
             needs=needs,
             optional=optional,
+            about=about or needs,
+            sees_impossible=sees_impossible,
             source=source,
             explanation=explanation,
             judge=judge,
