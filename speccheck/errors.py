@@ -41,3 +41,23 @@ class UnusableInputError(Exception):
             "cell": self.cell,
         }
         return functools.partial(UnusableInputError, **named), (self.file,)
+
+
+class OutputError(Exception):
+    """An output that could not be written; its text is the one message the user sees.
+
+    Parameters
+    ----------
+    file : path of the output
+    reason : what the system said
+    """
+
+    def __init__(self, file: str, reason: str) -> None:
+        self.file, self.reason = file, reason
+        super().__init__(file, reason)
+
+    def __str__(self) -> str:
+        return (
+            f"{self.file}: could not be written ({self.reason}); nothing half-written was left; "
+            "free some space or give a folder you may write to"
+        )

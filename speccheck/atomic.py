@@ -1,0 +1,49 @@
+"""Files that are whole or absent: written beside their place under another name, then moved."""
+
+from __future__ import annotations
+
+import os
+import tempfile
+from pathlib import Path
+
+from speccheck.errors import OutputError
+
+
+def write_bytes_atomic(path: Path | str, data: bytes) -> None:
+    """Write `data` to `path` so that no reader ever sees half of it.
+
+    Raises
+    ------
+    OutputError : folder missing or not writable, disk full; what stood at `path` before is kept
+    """
+    target = Path(path)
+    unfinished: Path | None = None
+    try:
+        handle, name = tempfile.mkstemp(prefix=f".{target.name[:80]}.", suffix=".part", dir=target.parent)
+        unfinished = Path(name)
+        with os.fdopen(handle, "wb") as stream:
+            stream.write(data)
+            stream.flush()
+            os.fsync(stream.fileno())
+        unfinished.chmod(0o666 & ~_umask())
+        unfinished.replace(target)
+    except OSError as error:
+        if unfinished is not None:
+            unfinished.unlink(missing_ok=True)
+        raise OutputError(str(target), error.strerror or str(error)) from error
+    except BaseException:
+        if unfinished is not None:
+            unfinished.unlink(missing_ok=True)
+        raise
+
+
+def write_text_atomic(path: Path | str, text: str) -> None:
+    """Write `text` as UTF-8; a lone surrogate becomes a replacement mark. Errors as above."""
+    write_bytes_atomic(path, text.encode("utf-8", "replace"))
+
+
+def _umask() -> int:
+    """Return the process's file mode mask, which can only be read by setting it."""
+    mask = os.umask(0o077)
+    os.umask(mask)
+    return mask
