@@ -1,0 +1,126 @@
+"""How numbers, bands and places are written: digits that the data support, one decimal sign."""
+
+from __future__ import annotations
+
+import math
+from dataclasses import dataclass
+
+from speccheck.records import Amount, Band, Interval, Value
+
+MINUS = "−"
+NARROW_SPACE = " "
+
+_DECIMALS = {
+    "dB": 1,
+    "dBi": 1,
+    "dBd": 1,
+    "dBm": 1,
+    "dBc": 0,
+    "deg": 0,
+    "λ": 2,
+    "wl": 2,
+    "kg": 1,
+    "N": 0,
+    "MHz": 0,
+}
+"""Decimals a figure carries by unit; the rest is written with three significant digits."""
+
+_SHOWN_UNITS = {"deg": "°", "ohm": "Ω", "wl": "λ", "W/m2": "W/m²", "m2": "m²", "kg/m3": "kg/m³", "1": ""}
+
+
+@dataclass(frozen=True, slots=True)
+class Numbers:
+    """The number habits of a report: decimal comma or decimal point."""
+
+    decimal_comma: bool = False
+
+    def plain(self, value: float, decimals: int | None = None) -> str:
+        """A number with `decimals` digits after the sign, or as many as it was stated with."""
+        if not math.isfinite(value):
+            return "∞" if value > 0 else (f"{MINUS}∞" if value < 0 else "not a number")
+        if decimals is None:
+            text = f"{value:.6g}"
+            if "e" in text and abs(value) < 1e15:
+                text = f"{value:.0f}" if abs(value) >= 1 else f"{value:.9f}".rstrip("0")
+        else:
+            text = f"{value:.{decimals}f}"
+            if float(text) == 0:
+                text = text.lstrip("-")
+        text = text.replace("-", MINUS)
+        return text.replace(".", ",") if self.decimal_comma else text
+
+    def figure(self, value: Value | None, unit: str = "") -> str:
+        """A computed value with its unit and the digits that the unit's data support."""
+        if value is None:
+            return "–"
+        if isinstance(value, str):
+            return value
+        if isinstance(value, tuple):
+            low, high = (self.plain(v, decimals_for(v, unit)) for v in value)
+            return self._with_unit(f"{low} to {high}", unit)
+        return self._with_unit(self.plain(value, decimals_for(value, unit)), unit)
+
+    def stated(self, value: Value | None, unit: str = "") -> str:
+        """A value as read: every digit it was stated with."""
+        if value is None:
+            return "–"
+        if isinstance(value, str):
+            return value
+        if isinstance(value, tuple):
+            return self._with_unit(f"{self.plain(value[0])} to {self.plain(value[1])}", unit)
+        return self._with_unit(self.plain(value), unit)
+
+    def signed(self, value: float, unit: str = "", decimals: int | None = None) -> str:
+        """A difference: always with its sign."""
+        digits = decimals_for(value, unit) if decimals is None else decimals
+        text = self.plain(value, digits)
+        return self._with_unit(text if text.startswith(MINUS) or float(value) == 0 else f"+{text}", unit)
+
+    def amount(self, amount: Amount | None) -> str:
+        """A claimed figure."""
+        return "–" if amount is None else self.stated(amount.value, amount.unit)
+
+    def interval(self, interval: Interval | None) -> str:
+        """What a claim is held against: both ends, or the one that is not open."""
+        if interval is None or (interval.low is None and interval.high is None):
+            return "–"
+        if interval.low is None:
+            return f"at most {self.figure(interval.high, interval.unit)}"
+        if interval.high is None:
+            return f"at least {self.figure(interval.low, interval.unit)}"
+        if interval.low == interval.high:
+            return self.figure(interval.low, interval.unit)
+        return self.figure((interval.low, interval.high), interval.unit)
+
+    def band(self, band: Band | None) -> str:
+        """A frequency range in MHz, or the words for a figure of the whole panel."""
+        if band is None:
+            return "whole panel"
+        return f"{self.plain(band[0])}–{self.plain(band[1])}{NARROW_SPACE}MHz"
+
+    def rounded_up(self, metres: float) -> str:
+        """A compliance distance: upwards to 0.1 m, never down."""
+        return self._with_unit(self.plain(math.ceil(round(metres * 10, 6)) / 10, 1), "m")
+
+    @staticmethod
+    def _with_unit(number: str, unit: str) -> str:
+        shown = _SHOWN_UNITS.get(unit, unit)
+        if not shown:
+            return number
+        return f"{number}{shown}" if shown in {"°", "%"} else f"{number}{NARROW_SPACE}{shown}"
+
+
+def decimals_for(value: float, unit: str) -> int:
+    """Digits after the decimal sign for a computed figure in a unit."""
+    if unit == "deg" and abs(value) < 10:
+        return 1
+    if unit in _DECIMALS:
+        return _DECIMALS[unit]
+    if value == 0 or not math.isfinite(value):
+        return 0
+    return max(0, 2 - math.floor(math.log10(abs(value))))
+
+
+def shown_unit(unit: str) -> str:
+    """The unit as a page prints it."""
+    return _SHOWN_UNITS.get(unit, unit)

@@ -1,0 +1,153 @@
+"""One self-contained HTML page from an Assessment: no network, complete without script."""
+
+from __future__ import annotations
+
+import base64
+import functools
+import hashlib
+from collections.abc import Iterable
+from pathlib import Path
+from typing import Any
+
+import jinja2
+from markupsafe import Markup
+
+from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
+from speccheck.report.formats import Numbers, shown_unit
+from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
+from speccheck.report.view import build_view, label
+from speccheck.text import plain
+
+PAPERS = {"a4": "A4", "letter": "letter"}
+
+
+def render_html(assessment: Assessment) -> str:
+    """The report of one bidder's file.
+
+    Returns
+    -------
+    A whole HTML document; the same assessment gives the same bytes.
+    """
+    view = build_view(assessment)
+    return render("report.html", assessment.settings.paper, view.numbers, view=view)
+
+
+def render(template: str, paper: str, numbers: Numbers, **context: Any) -> str:
+    """Fill a page template that extends ``base.html``; other reports of the program use it too.
+
+    Parameters
+    ----------
+    template : file name in the templates folder
+    paper : ``A4`` or ``Letter``
+    numbers : number habits of the page
+    context : what the template prints
+    """
+    style = _stylesheet(PAPERS.get(paper.lower(), "A4"))
+    script = _asset("report.js")
+    page = _environment(numbers.decimal_comma).get_template(template)
+    return page.render(
+        style=Markup(style),  # noqa: S704 - the program's own style sheet and script
+        script=Markup(script),  # noqa: S704
+        style_hash=_csp_hash(style),
+        script_hash=_csp_hash(script),
+        **context,
+    )
+
+
+def templates_folder() -> Path:
+    """Where the templates lie: beside the package when installed, at the top of a checkout."""
+    package = Path(__file__).parents[1]
+    installed = package / "templates"
+    return installed if installed.is_dir() else package.parent / "templates"
+
+
+@functools.cache
+def _environment(decimal_comma: bool) -> jinja2.Environment:
+    numbers = Numbers(decimal_comma)
+    environment = jinja2.Environment(
+        loader=jinja2.FileSystemLoader(templates_folder()),
+        autoescape=True,
+        undefined=jinja2.StrictUndefined,
+        finalize=_clean,
+        trim_blocks=True,
+        lstrip_blocks=True,
+        auto_reload=False,
+    )
+    environment.filters.update(
+        label=label,
+        unit=shown_unit,
+        mark=mark_for,
+        stated=numbers.stated,
+        figure=numbers.figure,
+        signed=numbers.signed,
+        amount=numbers.amount,
+        interval=numbers.interval,
+        band=numbers.band,
+        number=numbers.plain,
+        metres_up=numbers.rounded_up,
+        capitalize_first=_capitalize_first,
+        by_weight=_by_weight,
+    )
+    environment.globals.update(
+        FITS=FITS,
+        COMPLIANCE=COMPLIANCE,
+        OUTCOMES=OUTCOMES,
+        LEVELS=LEVELS,
+        Fit=Fit,
+        Level=Level,
+        WIND_CAUTIONS=WIND_CAUTIONS,
+        MOUNTING_CAUTIONS=MOUNTING_CAUTIONS,
+    )
+    return environment
+
+
+def _clean(value: Any) -> Any:
+    """Every text that a template prints loses control and direction marks before it is escaped."""
+    return plain(value, limit=20_000) if type(value) is str else value
+
+
+def _capitalize_first(text: str) -> str:
+    return text[:1].upper() + text[1:]
+
+
+_WEIGHT = {
+    Compliance.FAILS: 0,
+    Compliance.FAILS_NARROWLY: 1,
+    Compliance.NOT_STATED: 2,
+    Compliance.NOT_JUDGED: 2,
+    Compliance.DECLARED_ONLY: 2,
+    Compliance.MEETS_NARROWLY: 3,
+    Compliance.DEVIATION_ACCEPTED: 4,
+    Compliance.MEETS: 5,
+}
+
+
+def _by_weight(rows: Iterable[MatrixRow]) -> list[MatrixRow]:
+    """Requirement rows with the failed ones first, tender order within a verdict."""
+    return sorted(rows, key=lambda row: _WEIGHT[row.verdict])
+
+
+@functools.cache
+def _stylesheet(paper: str) -> str:
+    """Style sheet with the typeface inside, for one paper size."""
+    faces = "".join(
+        f"@font-face{{font-family:'Report Sans';font-weight:{weight};"
+        f"src:url(data:font/woff2;base64,{_font(name)}) format('woff2')}}\n"
+        for name, weight in (("inter-regular.woff2", 400), ("inter-semibold.woff2", 600))
+    )
+    return faces + _asset("report.css").replace("size: A4", f"size: {paper}")
+
+
+@functools.cache
+def _asset(name: str) -> str:
+    return (templates_folder() / name).read_text(encoding="utf-8").strip()
+
+
+def _font(name: str) -> str:
+    return base64.b64encode((templates_folder() / "fonts" / name).read_bytes()).decode("ascii")
+
+
+@functools.cache
+def _csp_hash(text: str) -> str:
+    """Fingerprint that lets the page's own style or script through its content policy."""
+    return "sha256-" + base64.b64encode(hashlib.sha256(text.encode()).digest()).decode("ascii")

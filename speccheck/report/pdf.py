@@ -1,0 +1,105 @@
+"""The same page as PDF: tagged, bookmarked, its files attached; nothing is fetched while rendering."""
+
+from __future__ import annotations
+
+import datetime as dt
+import hashlib
+import io
+import os
+from collections.abc import Sequence
+from dataclasses import dataclass
+from pathlib import Path
+from typing import Any, Literal
+
+from speccheck.atomic import write_bytes_atomic
+from speccheck.text import plain
+
+VARIANT = "pdf/a-3a"
+"""Form in which the file is written: tags and attachments need it. No validator has confirmed a level."""
+
+Relationship = Literal["Source", "Data", "Supplement", "Unspecified"]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Attachment:
+    """A file that travels inside the PDF; `relationship` as in ISO 19005-3 (Source, Data, Supplement)."""
+
+    name: str
+    content: bytes
+    description: str
+    relationship: Relationship = "Supplement"
+
+
+class PdfUnavailableError(Exception):
+    """The libraries that a PDF needs are not on this machine; the HTML report does not need them."""
+
+    def __init__(self, reason: str) -> None:
+        self.reason = reason
+        super().__init__(reason)
+
+    def __str__(self) -> str:
+        return (
+            f"no PDF was written: found {self.reason}; expected the Pango libraries (version 1.44 or later); "
+            "install them (Debian and Ubuntu: apt-get install libpango-1.0-0 libpangoft2-1.0-0 "
+            "libharfbuzz-subset0; macOS: brew install pango) or leave pdf out of the formats; "
+            "the other formats are not affected"
+        )
+
+
+def write_pdf(html: str, path: str | Path, attachments: Sequence[Attachment] = ()) -> None:
+    """Write a page of this program as PDF; the same page and date give the same bytes.
+
+    Parameters
+    ----------
+    html : a whole document as `render_html` makes it
+    path : where the PDF goes; whole or absent
+    attachments : files that travel inside, with relationship, description and checksum
+
+    Raises
+    ------
+    PdfUnavailableError : native libraries are missing
+    OutputError : the file cannot be written
+    """
+    write_bytes_atomic(path, pdf_bytes(html, attachments))
+
+
+def pdf_bytes(html: str, attachments: Sequence[Attachment] = ()) -> bytes:
+    """The PDF of a page; parameters and errors as for `write_pdf`."""
+    weasyprint = _load_weasyprint()
+    fetcher = weasyprint.urls.URLFetcher(allowed_protocols=["data"])
+    document = weasyprint.HTML(string=html, url_fetcher=fetcher)
+    moment = _moment()
+    enclosed = [
+        weasyprint.Attachment(
+            file_obj=io.BytesIO(item.content),
+            name=plain(item.name, limit=200),
+            description=plain(f"{item.description} (SHA-256 {hashlib.sha256(item.content).hexdigest()})"),
+            created=moment,
+            modified=moment,
+            relationship=item.relationship,
+        )
+        for item in attachments
+    ]
+    content: bytes = document.write_pdf(
+        attachments=enclosed,
+        pdf_variant=VARIANT,
+        pdf_identifier=hashlib.sha256(html.encode("utf-8", "replace")).digest()[:16],
+    )
+    return content
+
+
+def _load_weasyprint() -> Any:
+    """WeasyPrint, loaded only when a PDF is asked for: it takes longer to load than HTML to write."""
+    try:
+        import weasyprint  # noqa: PLC0415
+    except (ImportError, OSError) as error:
+        raise PdfUnavailableError(str(error).splitlines()[0][:300]) from error
+    return weasyprint
+
+
+def _moment() -> dt.datetime:
+    """Date of the attachments: SOURCE_DATE_EPOCH, else the start of today."""
+    epoch = os.environ.get("SOURCE_DATE_EPOCH")
+    if epoch:
+        return dt.datetime.fromtimestamp(int(epoch), dt.UTC)
+    return dt.datetime.now(dt.UTC).replace(hour=0, minute=0, second=0, microsecond=0)

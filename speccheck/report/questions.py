@@ -1,0 +1,94 @@
+"""The clarification list: every question of a report, numbered once."""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Iterator
+from dataclasses import dataclass, replace
+
+from speccheck.records import Assessment, Band, CellRef, Compliance, MatrixRow, PanelAssessment
+
+UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
+
+_ASKED = {
+    Compliance.NOT_STATED: "The offer has no cell for {what}. Please state the figure, with its unit and conditions.",
+    Compliance.DECLARED_ONLY: "The offer declares {what} without a figure that can be judged. "
+    "Please state the figure, with its unit and conditions.",
+    Compliance.NOT_JUDGED: "{what} could not be judged from what the offer states. "
+    "Please state the figure, with its unit and conditions.",
+}
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Question:
+    """One question to the bidder about one panel; `findings` are the places of those that ask it."""
+
+    panel_number: int
+    panel: str
+    asked: str
+    problem: str
+    number: int = 0
+    clauses: tuple[str, ...] = ()
+    bands: tuple[Band, ...] = ()
+    where: tuple[CellRef, ...] = ()
+    findings: tuple[int, ...] = ()
+
+
+def collect_questions(assessment: Assessment, label: Callable[[str], str]) -> tuple[Question, ...]:
+    """Questions of the findings, then of the requirement rows that no figure answers; none twice."""
+    questions: list[Question] = []
+    for panel_number, panel in enumerate(assessment.panels, start=1):
+        merged: dict[str, Question] = {}
+        for question in (*_from_findings(panel_number, panel), *_from_rows(panel_number, panel, label)):
+            known = merged.get(question.asked)
+            merged[question.asked] = _joined(known, question) if known else question
+        questions.extend(merged.values())
+    return tuple(replace(question, number=i) for i, question in enumerate(questions, start=1))
+
+
+def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Question]:
+    for index, finding in enumerate(panel.findings):
+        if finding.question:
+            rows = (row for row in panel.requirements if finding.check in row.in_doubt)
+            yield Question(
+                panel_number=panel_number,
+                panel=panel.panel.name,
+                asked=finding.question,
+                problem=finding.summary,
+                clauses=tuple(dict.fromkeys(row.requirement.clause for row in rows)),
+                bands=(finding.band,) if finding.band else (),
+                where=finding.where,
+                findings=(index,),
+            )
+
+
+def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str], str]) -> Iterator[Question]:
+    for row in panel.requirements:
+        if row.verdict not in UNANSWERED or not row.requirement.parameter:
+            continue
+        name = label(row.requirement.parameter)
+        what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name
+        yield Question(
+            panel_number=panel_number,
+            panel=panel.panel.name,
+            asked=_ASKED[row.verdict].format(what=what),
+            problem=row.note or row.requirement.wording,
+            clauses=(row.requirement.clause,) if row.requirement.clause else (),
+            bands=(row.band,) if row.band else (),
+            where=_answer_cells(row),
+        )
+
+
+def _answer_cells(row: MatrixRow) -> tuple[CellRef, ...]:
+    answers = (row.offered, row.statement)
+    return tuple(answer.where for answer in answers if answer is not None)
+
+
+def _joined(first: Question, second: Question) -> Question:
+    """The same question asked of two bands or cells."""
+    return replace(
+        first,
+        clauses=tuple(dict.fromkeys((*first.clauses, *second.clauses))),
+        bands=tuple(dict.fromkeys((*first.bands, *second.bands))),
+        where=tuple(dict.fromkeys((*first.where, *second.where))),
+        findings=(*first.findings, *second.findings),
+    )

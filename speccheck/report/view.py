@@ -1,0 +1,327 @@
+"""What the templates print: an Assessment put in reading order, counted once, numbered once.
+
+Nothing is judged here. Every count of the report comes from `Tally`, so summary and tables cannot differ.
+"""
+
+from __future__ import annotations
+
+import hashlib
+import json
+from collections import Counter
+from collections.abc import Iterable, Sequence
+from dataclasses import asdict, dataclass
+
+from speccheck.dictionary import parameters
+from speccheck.records import (
+    Assessment,
+    Band,
+    CellRef,
+    Compliance,
+    Finding,
+    Fit,
+    Level,
+    MatrixRow,
+    Outcome,
+    PanelAssessment,
+    Settings,
+)
+from speccheck.report.canvas import Figure
+from speccheck.report.figures import panel_figures
+from speccheck.report.formats import Numbers
+from speccheck.report.inputs import InputRow, input_rows
+from speccheck.report.marks import Mark, mark_for
+from speccheck.report.questions import Question, collect_questions
+
+MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
+MISSES = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
+OPEN = (Compliance.NOT_JUDGED, Compliance.NOT_STATED, Compliance.DECLARED_ONLY)
+TOP_REASONS = 5
+
+
+@dataclass(frozen=True, slots=True)
+class Tally:
+    """Counts of one panel: requirements by level and verdict, findings by verdict."""
+
+    requirements: dict[Level, Counter[Compliance]]
+    findings: Counter[Fit]
+
+    def of(self, level: Level, *verdicts: Compliance) -> int:
+        """How many requirement rows of a level have one of the verdicts; all of them without any."""
+        counts = self.requirements[level]
+        return sum(counts[v] for v in verdicts) if verdicts else counts.total()
+
+    @property
+    def levels(self) -> tuple[Level, ...]:
+        """Levels that occur."""
+        return tuple(level for level in Level if self.requirements[level].total())
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class FindingView:
+    """A finding with its place in the report."""
+
+    finding: Finding
+    anchor: str
+    mark: Mark
+    question: Question | None
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class BandView:
+    """The physics pages of one band, or of the panel as a whole."""
+
+    band: Band | None
+    findings: tuple[FindingView, ...]
+    figures: tuple[Figure, ...]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class PanelView:
+    """One panel, ready to print."""
+
+    anchor: str
+    number: int
+    source: PanelAssessment
+    mark: Mark
+    sentence: str
+    tally: Tally
+    findings: tuple[FindingView, ...]
+    contradictions: tuple[MatrixRow, ...]
+    bands: tuple[BandView, ...]
+    figures: tuple[Figure, ...]
+    exposure_figures: tuple[Figure, ...]
+    questions: tuple[Question, ...]
+
+    @property
+    def name(self) -> str:
+        """The panel's name as its bidder wrote it."""
+        return self.source.panel.name
+
+    @property
+    def misfits(self) -> tuple[FindingView, ...]:
+        """Claims that do not fit, then doubtful ones."""
+        return tuple(f for verdict in MISFITS for f in self.findings if f.finding.verdict is verdict)
+
+    def with_verdict(self, verdict: Fit) -> tuple[FindingView, ...]:
+        """Findings of one verdict."""
+        return tuple(f for f in self.findings if f.finding.verdict is verdict)
+
+    def rows(self, level: Level, *verdicts: Compliance) -> tuple[MatrixRow, ...]:
+        """Requirement rows of a level, those with one of the verdicts where any are named."""
+        rows = (row for row in self.source.requirements if row.requirement.level is level)
+        return tuple(row for row in rows if not verdicts or row.verdict in verdicts)
+
+    @property
+    def top_reasons(self) -> tuple[str, ...]:
+        """What decided the outcome, the weightiest first, at most five."""
+        return self.source.reasons[:TOP_REASONS]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class MatrixLine:
+    """One line of the offer matrix: a requirement in one band, and each panel's row or None."""
+
+    requirement_index: int
+    band: Band | None
+    rows: tuple[MatrixRow | None, ...]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ReportView:
+    """The whole report, ready to print."""
+
+    source: Assessment
+    numbers: Numbers
+    panels: tuple[PanelView, ...]
+    matrix: tuple[MatrixLine, ...]
+    questions: tuple[Question, ...]
+    inputs: tuple[InputRow, ...]
+    anchors: dict[CellRef, str]
+    settings: tuple[tuple[str, str], ...]
+    rules_fingerprint: str
+    decisions: tuple[str, ...]
+
+    @property
+    def draft(self) -> bool:
+        """Whether the report still has to be issued."""
+        return not self.source.settings.issued
+
+    @property
+    def checks_used(self) -> tuple[tuple[str, str, str], ...]:
+        """Slug, title and source of every check that answered, once."""
+        found = {f.check: (f.check, f.title, f.source) for p in self.source.panels for f in p.findings}
+        return tuple(found[slug] for slug in sorted(found))
+
+
+def build_view(assessment: Assessment) -> ReportView:
+    """Put an assessment in reading order."""
+    numbers = Numbers(assessment.settings.decimal_comma)
+    questions = collect_questions(assessment, label)
+    panels = tuple(
+        _panel_view(i, panel, assessment, questions, numbers)
+        for i, panel in enumerate(assessment.panels, start=1)
+    )
+    rows, anchors = input_rows(assessment.submission)
+    return ReportView(
+        source=assessment,
+        numbers=numbers,
+        panels=panels,
+        matrix=_matrix(assessment),
+        questions=questions,
+        inputs=rows,
+        anchors=anchors,
+        settings=_settings_rows(assessment.settings, numbers),
+        rules_fingerprint=fingerprint(assessment),
+        decisions=_decisions(assessment, panels, questions),
+    )
+
+
+def label(key: str) -> str:
+    """Name of a parameter in the dictionary; its key in words where it has none."""
+    known = parameters().get(key)
+    return known.label if known else key.replace("_", " ")
+
+
+def fingerprint(assessment: Assessment) -> str:
+    """SHA-256 over the rules: settings, tender and program version; the same rules give the same one."""
+    rules = asdict(assessment.settings)
+    for not_a_rule in ("today", "report_number", "revision", "issued", "paper", "decimal_comma"):
+        rules.pop(not_a_rule, None)
+    rules["program"] = assessment.program_version
+    rules["tender_file"] = assessment.tender.sha256 if assessment.tender else ""
+    return hashlib.sha256(json.dumps(rules, sort_keys=True, default=str).encode()).hexdigest()
+
+
+def tally(panel: PanelAssessment) -> Tally:
+    """Counts of one panel."""
+    by_level: dict[Level, Counter[Compliance]] = {level: Counter() for level in Level}
+    for row in panel.requirements:
+        by_level[row.requirement.level][row.verdict] += 1
+    return Tally(by_level, Counter(f.verdict for f in panel.findings))
+
+
+def _panel_view(
+    number: int,
+    panel: PanelAssessment,
+    assessment: Assessment,
+    questions: Sequence[Question],
+    numbers: Numbers,
+) -> PanelView:
+    own = tuple(q for q in questions if q.panel_number == number)
+    by_finding = {index: q for q in own for index in q.findings}
+    findings = tuple(
+        FindingView(finding=f, anchor=f"p{number}f{i}", mark=mark_for(f.verdict), question=by_finding.get(i))
+        for i, f in enumerate(panel.findings)
+    )
+    drawn = panel_figures(panel, numbers, label)
+    counted = tally(panel)
+    return PanelView(
+        anchor=f"panel-{number}",
+        number=number,
+        source=panel,
+        mark=mark_for(panel.outcome),
+        sentence=_sentence(panel, counted, len(own), bool(assessment.tender)),
+        tally=counted,
+        findings=findings,
+        contradictions=tuple(r for r in panel.requirements if r.statement and r.verdict in MISSES),
+        bands=_bands(panel, findings, drawn.by_band),
+        figures=drawn.overview,
+        exposure_figures=drawn.exposure,
+        questions=own,
+    )
+
+
+def _bands(
+    panel: PanelAssessment, findings: Iterable[FindingView], figures: dict[Band | None, tuple[Figure, ...]]
+) -> tuple[BandView, ...]:
+    groups: dict[Band | None, list[FindingView]] = {band: [] for band in (*panel.panel.bands, None)}
+    for view in findings:
+        groups.setdefault(view.finding.band, []).append(view)
+    views = (
+        BandView(band=band, findings=tuple(found), figures=figures.get(band, ()))
+        for band, found in groups.items()
+    )
+    return tuple(view for view in views if view.findings or view.figures)
+
+
+def _matrix(assessment: Assessment) -> tuple[MatrixLine, ...]:
+    """Requirements in tender order; the panels' rows side by side."""
+    if assessment.tender is None:
+        return ()
+    place = {id(r): i for i, r in enumerate(assessment.tender.requirements)}
+    equal = {(r.where, r.clause): i for i, r in enumerate(assessment.tender.requirements)}
+    lines: dict[tuple[int, Band | None], list[MatrixRow | None]] = {}
+    for column, panel in enumerate(assessment.panels):
+        for row in panel.requirements:
+            index = place.get(id(row.requirement), equal.get((row.requirement.where, row.requirement.clause)))
+            if index is None:
+                raise ValueError(f"requirement {row.requirement.clause!r} is not in the tender")
+            line = lines.setdefault((index, row.band), [None] * len(assessment.panels))
+            line[column] = row
+    return tuple(
+        MatrixLine(requirement_index=index, band=band, rows=tuple(rows))
+        for (index, band), rows in sorted(lines.items(), key=lambda item: item[0][0])
+    )
+
+
+def _sentence(panel: PanelAssessment, counted: Tally, questions: int, judged: bool) -> str:
+    failed = counted.of(Level.MANDATORY, Compliance.FAILS)
+    narrow = counted.of(Level.MANDATORY, Compliance.FAILS_NARROWLY)
+    unanswered = counted.of(Level.MANDATORY, *OPEN)
+    facts = [
+        _count(failed, "mandatory requirement fails", "mandatory requirements fail"),
+        _count(narrow, "mandatory requirement fails narrowly", "mandatory requirements fail narrowly"),
+        _count(unanswered, "mandatory requirement is open", "mandatory requirements are open"),
+        _count(counted.findings[Fit.DOES_NOT_FIT], "claim does not fit", "claims do not fit"),
+        _count(counted.findings[Fit.DOUBTFUL], "claim is doubtful", "claims are doubtful"),
+        _count(counted.findings[Fit.NOT_JUDGED], "check could not be judged", "checks could not be judged"),
+        _count(questions, "question to the bidder", "questions to the bidder"),
+    ]
+    said = [fact for fact in facts if fact]
+    if not judged:
+        said.append("no tender was given, so no requirement is judged")
+    return (", ".join(said) or "nothing stands against it in what was stated and checked") + "."
+
+
+def _count(number: int, one: str, many: str) -> str:
+    return f"{number} {one if number == 1 else many}" if number else ""
+
+
+def _decisions(
+    assessment: Assessment, panels: Sequence[PanelView], questions: Sequence[Question]
+) -> tuple[str, ...]:
+    asked = []
+    for panel in panels:
+        if panel.source.outcome is Outcome.REJECT:
+            clauses = dict.fromkeys(
+                row.requirement.clause for row in panel.rows(Level.MANDATORY, Compliance.FAILS)
+            )
+            asked.append(f"{panel.name}: confirm or withdraw the rejection on {', '.join(clauses)}.")
+    if questions:
+        span = f"questions 1 to {len(questions)}" if len(questions) > 1 else "question 1"
+        asked.append(f"Release {span} to the bidder and set the date the answers are due.")
+    unconfirmed = [r for r in assessment.tender.requirements if not r.confirmed] if assessment.tender else []
+    if unconfirmed:
+        asked.append(
+            f"Confirm how {_count(len(unconfirmed), 'requirement was', 'requirements were')} read (section 10)."
+        )
+    if not asked:
+        asked.append("Accept the result, or return it with conditions.")
+    return tuple(asked)
+
+
+def _settings_rows(settings: Settings, numbers: Numbers) -> tuple[tuple[str, str], ...]:
+    guards = "; ".join(f"{label(k)} {numbers.stated(v)}" for k, v in settings.guard_bands.items())
+    losses = "; ".join(f"{k} {numbers.stated(v, 'dB')}" for k, v in settings.loss_db.items())
+    return (
+        ("Limit set of the exposure note", settings.limit_set),
+        ("Reflection factor on power density", numbers.stated(settings.reflection_factor)),
+        ("TDD duty", numbers.stated(settings.tdd_duty)),
+        ("Actual-maximum factor", numbers.stated(settings.actual_maximum_factor)),
+        ("Power tolerance of the cautious set", numbers.stated(settings.power_tolerance_db, "dB")),
+        ("Equality with a limit", "meets" if settings.equality_meets else "does not meet"),
+        ("Statistic where a requirement names none", settings.statistic),
+        ("Guard bands", guards or "as built in for each parameter"),
+        ("Loss ranges", losses or "as built in for each class of panel"),
+        ("House headings", str(len(settings.headings)) if settings.headings else "none"),
+    )
