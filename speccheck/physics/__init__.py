@@ -25,8 +25,9 @@ exposure         power_density_wm2(eirp_w, distance_m, reflection=1),
                  surface_density_wm2, near_field_density_wm2, transition_density_wm2,
                  cylindrical_oet65_wm2, cylindrical_crossover_m, cylindrical_iec62232_wm2,
                  REFLECTION_NONE / _GROUND / _FULL
-grating          pitch_limit_wl(scan_deg, count=inf), entry_angle_deg(pitch_wl), entry_freq_hz(pitch_m, scan_deg),
-                 lobe_angle_deg(pitch_wl, scan_deg, order=-1), triangular_side_limit_wl(scan_deg)
+grating          pitch_limit_wl(scan_deg, count=inf), entry_angle_deg(pitch_wl),
+                 entry_freq_hz(pitch_m, scan_deg), lobe_angle_deg(pitch_wl, scan_deg, order=-1),
+                 triangular_side_limit_wl(scan_deg)
 
 element          SectorElement(az_hpbw_deg=65, el_hpbw_deg=65, floor_db=30, el_floor_db=30) of TR 38.901 form,
                  CosineElement(exponent), IsotropicElement(front_only=False); each
@@ -47,22 +48,29 @@ states           array_states(layout, element, freq_hz, tilt_deg=0, scan_deg=0) 
                  scan_loss_db(layout, element, freq_hz, tilt_deg=0, scan_deg=0) against the unscanned beam
 pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, tilt_deg=0, scan_deg=0):
                  directivity in any directions, for drawings and exposure
-lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0) -> Lobes, subarray_lobes(...),
-                 highest_lobe(...) anywhere in front. Lobes: level_db against the beam (nan: none),
+lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0) -> Lobes,
+                 subarray_lobes(...), highest_lobe(...) anywhere in front. Lobes: level_db against the beam (nan: none),
                  theta_deg, phi_deg, visible_count, centre_visible
 taper            taylor(count, sidelobe_db, nbar), chebyshev(count, sidelobe_db),
                  cosine_on_pedestal(count, pedestal), efficiency_db(weights), beamwidth_ratio(weights),
                  pedestal_for_ratio(count, ratio), sidelobe_db(weights)
 errors           gain_loss_db, sidelobe_floor_db, pointing_rms_deg, null_depth_db, phase_step_rms_deg(bits),
                  phase_quantisation_lobe_db(bits), amplitude_step_rms_db(step_db), surface_loss_db(rms_wl)
-bounds           aperture_directivity_dbi(width_m, height_m, freq_hz), narrowest_beamwidth_deg(length_m, freq_hz),
+bounds           aperture_directivity_dbi(width_m, height_m, freq_hz),
+                 narrowest_beamwidth_deg(length_m, freq_hz),
                  chebyshev_beamwidth_ratio(count, sidelobe_db), chebyshev_sidelobe_db(count, ratio),
-                 gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant), normal_gain_dbi(radius_m, freq_hz),
+                 gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant),
+                 normal_gain_dbi(radius_m, freq_hz),
                  cosine_scan_loss_db(scan_deg, exponent=1), aperture_slope_db(from_hz, to_hz)
 beamwidth        uniform_line_deg(count, pitch_m, freq_hz), level_width_deg(hpbw_deg, level_db),
                  uniform_width_ratio(level_db)
 sector           F.1336-5: elevation_beamwidth_deg(gain_dbi, az_hpbw_deg), peak_pattern_dbi, average_pattern_dbi
 zones            panel_distances(...): distances in front, beside, above, below, behind from a pattern
-expected         PanelClass, expected_gain(...) -> ExpectedGain with edges and .zone(gain_dbi),
-                 expected_beamwidths(...) -> ExpectedBeamwidths
+expected         PanelClass (PASSIVE, MASSIVE_MIMO, MMWAVE), panel_class(freq_hz, columns),
+                 expected_gain(layout, freq_hz, kind, *, tilt_deg=0, scan_deg=0, horizontal_beamwidth_deg=None,
+                 vertical_beamwidth_deg=None, declared_loss_db=None) -> ExpectedGain: directivity_dbi,
+                 impossible_dbi, question_dbi, low_dbi, binding, assumptions, .zone(gain_dbi) -> GainZone
+                 (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW),
+                 expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0) -> ExpectedBeamwidths:
+                 .horizontal, .vertical = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
 """

@@ -8,7 +8,7 @@ from numpy.typing import ArrayLike
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS, Floats, floats
 
 SIDE_PER_SQUARE_PITCH = 2 / 3**0.5
-"""Side of an equilateral lattice over the square pitch with the same nearest lobe [1] (R. C. Hansen, ch. 2)."""
+"""Side of an equilateral lattice over the square pitch with the same nearest lobe [1] (Hansen, ch. 2)."""
 
 
 def pitch_limit_wl(scan_deg: ArrayLike, count: ArrayLike = np.inf) -> Floats:

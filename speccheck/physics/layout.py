@@ -1,0 +1,202 @@
+"""Where the elements of a panel stand and how its ports drive them."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+from enum import Enum
+from functools import lru_cache
+
+import numpy as np
+from numpy.typing import NDArray
+
+from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS, Floats, floats
+
+Complex = NDArray[np.complex128]
+
+
+class Lattice(Enum):
+    """How rows stand to each other."""
+
+    RECTANGULAR = "rectangular"
+    TRIANGULAR = "triangular"
+    """Odd rows shifted by half a horizontal pitch."""
+
+
+@dataclass(frozen=True, slots=True)
+class ArrayLayout:
+    """A panel: element positions, sub-arrays, tapers, panel groups in one housing.
+
+    rows [1]: element positions along the height of one panel group (M of TR 38.901).
+    columns [1]: element positions along its width (N).
+    vertical_pitch_m [m]: distance of rows (d_V).
+    horizontal_pitch_m [m]: distance of columns (d_H).
+    subarray_rows [1]: neighbours of one column that share a port.
+    subarray_columns [1]: neighbours of one row that share a port.
+    subarray_tilt_deg [deg]: fixed tilt inside a sub-array, positive downwards.
+    row_taper [1]: amplitudes along the whole height, all groups together, of ports or of single elements;
+        empty for uniform.
+    column_taper [1]: the same along the whole width.
+    panel_rows [1]: panel groups along the height (M_g).
+    panel_columns [1]: panel groups along the width (N_g).
+    panel_vertical_pitch_m [m]: first element to first element of groups (d_g,V).
+    panel_horizontal_pitch_m [m]: the same along the width (d_g,H).
+    lattice [Lattice]: rectangular or triangular.
+    Raises ValueError where counts, pitches or tapers do not go together.
+    Source: 3GPP TR 38.901 clause 7.3.
+    """
+
+    rows: int
+    columns: int
+    vertical_pitch_m: float
+    horizontal_pitch_m: float
+    subarray_rows: int = 1
+    subarray_columns: int = 1
+    subarray_tilt_deg: float = 0.0
+    row_taper: tuple[float, ...] = ()
+    column_taper: tuple[float, ...] = ()
+    panel_rows: int = 1
+    panel_columns: int = 1
+    panel_vertical_pitch_m: float = 0.0
+    panel_horizontal_pitch_m: float = 0.0
+    lattice: Lattice = Lattice.RECTANGULAR
+
+    def __post_init__(self) -> None:
+        counts = (self.rows, self.columns, self.subarray_rows, self.subarray_columns)
+        if min(*counts, self.panel_rows, self.panel_columns) < 1:
+            raise ValueError("counts of rows, columns, sub-arrays and panel groups must be at least 1")
+        if self.rows % self.subarray_rows or self.columns % self.subarray_columns:
+            raise ValueError(
+                f"{self.rows} x {self.columns} elements do not divide into sub-arrays of "
+                f"{self.subarray_rows} x {self.subarray_columns}"
+            )
+        pitched = (
+            (self.rows, self.vertical_pitch_m),
+            (self.columns, self.horizontal_pitch_m),
+            (self.panel_rows, self.panel_vertical_pitch_m),
+            (self.panel_columns, self.panel_horizontal_pitch_m),
+        )
+        if any(count > 1 and not (np.isfinite(pitch) and pitch > 0) for count, pitch in pitched):
+            raise ValueError("the pitch of two or more rows, columns or panel groups must be positive [m]")
+        for name, taper, ports, elements in (
+            ("row", self.row_taper, self.port_rows, self.panel_rows * self.rows),
+            ("column", self.column_taper, self.port_columns, self.panel_columns * self.columns),
+        ):
+            if taper and len(taper) not in (ports, elements):
+                raise ValueError(f"the {name} taper has {len(taper)} amplitudes for {ports} ports")
+
+    @property
+    def port_rows(self) -> int:
+        """Ports [1] along the whole height, one polarisation."""
+        return self.panel_rows * (self.rows // self.subarray_rows)
+
+    @property
+    def port_columns(self) -> int:
+        """Ports [1] along the whole width, one polarisation."""
+        return self.panel_columns * (self.columns // self.subarray_columns)
+
+    @property
+    def ports_per_polarisation(self) -> int:
+        """Ports [1] of the whole panel, one polarisation."""
+        return self.port_rows * self.port_columns
+
+    @property
+    def height_m(self) -> float:
+        """Height [m] taken by the elements, half a pitch beyond the outermost ones."""
+        return (self.panel_rows - 1) * self.panel_vertical_pitch_m + self.rows * self.vertical_pitch_m
+
+    @property
+    def width_m(self) -> float:
+        """Width [m] taken by the elements, half a pitch beyond the outermost ones."""
+        return (
+            self.panel_columns - 1
+        ) * self.panel_horizontal_pitch_m + self.columns * self.horizontal_pitch_m
+
+
+@dataclass(frozen=True, eq=False, slots=True)
+class Line:
+    """Element positions of one axis: total and port-centre positions [m], offset within the sub-array [m]."""
+
+    positions: Floats
+    centres: Floats
+    offsets: Floats
+    amplitudes: Floats
+    uniform_pitch_m: float
+
+
+@lru_cache(maxsize=512)
+def lines(layout: ArrayLayout) -> tuple[Line, Line, Floats]:
+    """Rows and columns of a layout, centred, and the sideways shift of each row.
+
+    layout [ArrayLayout]: the panel.
+    Returns [Line, Line, m]: rows along z, columns along y, shift of each row.
+    Source: 3GPP TR 38.901 clause 7.3.
+    """
+    rows = _line(
+        (layout.rows, layout.vertical_pitch_m, layout.subarray_rows),
+        (layout.panel_rows, layout.panel_vertical_pitch_m),
+        layout.row_taper,
+    )
+    columns = _line(
+        (layout.columns, layout.horizontal_pitch_m, layout.subarray_columns),
+        (layout.panel_columns, layout.panel_horizontal_pitch_m),
+        layout.column_taper,
+    )
+    shifted = layout.lattice is Lattice.TRIANGULAR
+    row_in_panel = np.tile(np.arange(layout.rows), layout.panel_rows)
+    shift_m = layout.horizontal_pitch_m / 2 if shifted else 0.0
+    return rows, columns, floats(row_in_panel % 2) * shift_m
+
+
+def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...]) -> Line:
+    (count, pitch, grouped), (groups, group_pitch) = inner, outer
+    one = np.arange(count) * pitch
+    positions = (np.arange(groups)[:, None] * group_pitch + one).ravel()
+    positions = positions - (positions[0] + positions[-1]) / 2
+    centres = np.repeat(positions.reshape(-1, grouped).mean(1), grouped)
+    amplitudes = floats(taper or np.ones(len(positions)))
+    amplitudes = np.repeat(amplitudes, len(positions) // len(amplitudes))
+    steps = np.diff(positions)
+    uniform = len(steps) == 0 or bool(np.ptp(steps) < 1e-9 * np.abs(steps).max())
+    uniform_pitch = float(steps[0]) if uniform and len(steps) else 0.0
+    return Line(positions, centres, positions - centres, amplitudes, uniform_pitch)
+
+
+def wavenumber(freq_hz: Floats) -> Floats:
+    """Wavenumber in free space.
+
+    freq_hz [Hz]: frequency.
+    Returns [rad/m]: 2 pi f/c.
+    Source: definition.
+    """
+    return 2 * np.pi / SPEED_OF_LIGHT_MPS * freq_hz
+
+
+def row_weights(layout: ArrayLayout, wavenumbers: Floats, tilt_rad: Floats) -> Complex:
+    """Excitation along the height, one row of values per state.
+
+    Ports follow the tilt, elements inside a sub-array its fixed tilt.
+    layout [ArrayLayout]: the panel.
+    wavenumbers [rad/m]: shape (S,).
+    tilt_rad [rad]: electrical tilt, positive downwards, shape (S,).
+    Returns [1]: complex weights, shape (S, M).
+    Source: 3GPP TR 37.840 clause 5.4.4; the phase that points a line along sin(tilt).
+    """
+    rows = lines(layout)[0]
+    inside = np.sin(np.radians(layout.subarray_tilt_deg)) * rows.offsets
+    path = np.multiply.outer(np.sin(tilt_rad), rows.centres) + inside
+    return np.asarray(rows.amplitudes * np.exp(1j * wavenumbers[:, None] * path))
+
+
+def column_weights(layout: ArrayLayout, wavenumbers: Floats, u_y: Floats) -> Complex:
+    """Excitation along the width, one row of values per state.
+
+    layout [ArrayLayout]: the panel.
+    wavenumbers [rad/m]: shape (S,).
+    u_y [1]: direction cosine of the steering along y, shape (S,).
+    Returns [1]: complex weights, shape (S, N).
+    Source: 3GPP TR 37.840 clause 5.4.4.
+    """
+    columns = lines(layout)[1]
+    return np.asarray(
+        columns.amplitudes * np.exp(-1j * np.multiply.outer(wavenumbers * u_y, columns.centres))
+    )

@@ -1,0 +1,224 @@
+"""Grating and sub-array lobes where they really stand, element pattern included.
+
+Lobes repeat the beam on the reciprocal lattice of the elements (grating lobes) or of the sub-arrays
+(quantisation lobes). Each is searched within one null width of its lattice point, inside visible space, so
+that the flank of a lobe whose centre is still hidden counts too.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+from dataclasses import dataclass
+
+import numpy as np
+from numpy.typing import ArrayLike
+
+from speccheck.physics.beam import beam_peak
+from speccheck.physics.decibels import Floats, db, floats, wavelength_m
+from speccheck.physics.element import Element
+from speccheck.physics.field import Excitation, excite, intensity
+from speccheck.physics.layout import ArrayLayout, Lattice
+
+_ACROSS = 13
+"""Samples [1] across the search box of one lobe, each way."""
+
+
+@dataclass(frozen=True, eq=False, slots=True)
+class Lobes:
+    """The strongest lobe of each state, same shape as the states; nan and 0 where there is none.
+
+    level_db [dB]: level against the beam.
+    theta_deg, phi_deg [deg]: where it stands.
+    visible_count [1]: lattice points inside visible space.
+    centre_visible [bool]: the strongest one is seen with its centre, not with its flank alone.
+    """
+
+    level_db: Floats
+    theta_deg: Floats
+    phi_deg: Floats
+    visible_count: Floats
+    centre_visible: Floats
+
+
+@dataclass(frozen=True, slots=True)
+class _Lobe:
+    level_db: float = float("nan")
+    theta_deg: float = float("nan")
+    phi_deg: float = float("nan")
+    visible_count: int = 0
+    centre_visible: bool = False
+
+
+def element_lobes(
+    layout: ArrayLayout,
+    element: Element,
+    freq_hz: ArrayLike,
+    tilt_deg: ArrayLike = 0.0,
+    scan_deg: ArrayLike = 0.0,
+) -> Lobes:
+    """Strongest grating lobe of the element lattice; a triangular lattice by its own reciprocal lattice.
+
+    layout [ArrayLayout]: the panel.
+    element [Element]: its element.
+    freq_hz [Hz]: frequency.
+    tilt_deg [deg]: electrical tilt, positive downwards.
+    scan_deg [deg]: azimuth scan.
+    Returns [Lobes]: of the broadcast states.
+    Source: R. J. Mailloux, "Phased Array Antenna Handbook", ch. 1 (grating lobe lattice).
+
+    >>> from speccheck.physics.element import SectorElement
+    >>> panel = ArrayLayout(16, 8, 0.6, 0.6)
+    >>> lobe = element_lobes(panel, SectorElement(80, 65), 299792458.0, scan_deg=50)
+    >>> float(lobe.level_db.round(2)), float(lobe.phi_deg.round())
+    (-2.65, -60.0)
+    """
+    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), _element_points)
+
+
+def subarray_lobes(
+    layout: ArrayLayout,
+    element: Element,
+    freq_hz: ArrayLike,
+    tilt_deg: ArrayLike = 0.0,
+    scan_deg: ArrayLike = 0.0,
+) -> Lobes:
+    """Strongest quantisation lobe of the sub-array lattice (points of the element lattice left out).
+
+    layout [ArrayLayout]: the panel.
+    element [Element]: its element.
+    freq_hz [Hz]: frequency.
+    tilt_deg [deg]: electrical tilt, positive downwards.
+    scan_deg [deg]: azimuth scan.
+    Returns [Lobes]: of the broadcast states.
+    Source: R. J. Mailloux, "Phased Array Antenna Handbook", ch. 7 (sub-arrays, quantisation lobes).
+
+    >>> from speccheck.physics.element import SectorElement
+    >>> panel = ArrayLayout(12, 8, 0.7, 0.5, subarray_rows=3, subarray_tilt_deg=3)
+    >>> lobe = subarray_lobes(panel, SectorElement(), 299792458.0, tilt_deg=10)
+    >>> float(lobe.level_db.round(1)), float(lobe.theta_deg.round(1))
+    (-7.9, 74.3)
+    """
+    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), _subarray_points)
+
+
+def _all_states(
+    layout: ArrayLayout,
+    element: Element,
+    keys: tuple[ArrayLike, ...],
+    points: Callable[[ArrayLayout, float], Floats],
+) -> Lobes:
+    grids = np.broadcast_arrays(*(floats(key) for key in keys))
+    states = excite(layout, element, *(grid.ravel() for grid in grids))
+    theta, phi = beam_peak(states)
+    beam = intensity(states, theta[:, None], phi[:, None])[:, 0]
+    found = [
+        _strongest(_one(states, s), wavelength, beam[s], points(layout, wavelength))
+        for s, wavelength in enumerate(wavelength_m(grids[0].ravel()))
+    ]
+    shape = grids[0].shape
+    return Lobes(
+        *(
+            np.array([getattr(lobe, name) for lobe in found]).reshape(shape)
+            for name in ("level_db", "theta_deg", "phi_deg", "visible_count", "centre_visible")
+        )
+    )
+
+
+def _one(states: Excitation, s: int) -> Excitation:
+    part = slice(s, s + 1)
+    return Excitation(
+        states.layout,
+        states.element,
+        states.wavenumbers[part],
+        states.theta_rad[part],
+        states.phi_rad[part],
+        states.rows[part],
+        states.columns[part],
+    )
+
+
+def _element_points(layout: ArrayLayout, wavelength: float) -> Floats:
+    """Reciprocal points (u_y, u_z) of the element lattice around the beam, itself left out."""
+    y_step = wavelength / layout.horizontal_pitch_m if layout.columns > 1 else np.inf
+    z_step = wavelength / layout.vertical_pitch_m if layout.rows > 1 else np.inf
+    y, z = _orders(y_step, z_step)
+    shear = y * z_step / 2 if layout.lattice is Lattice.TRIANGULAR and layout.rows > 1 else 0.0
+    points = floats(np.stack([y * _finite(y_step), z * _finite(z_step) - shear], 1))
+    return floats(points[(y != 0) | (z != 0)])
+
+
+def _subarray_points(layout: ArrayLayout, wavelength: float) -> Floats:
+    """Reciprocal points of the sub-array lattice that are no points of the element lattice."""
+    across, along = layout.subarray_columns, layout.subarray_rows
+    y_pitch, z_pitch = across * layout.horizontal_pitch_m, along * layout.vertical_pitch_m
+    y_step = wavelength / y_pitch if layout.columns > across or across > 1 else np.inf
+    z_step = wavelength / z_pitch if layout.rows > along or along > 1 else np.inf
+    y, z = _orders(y_step, z_step)
+    points = floats(np.stack([y * _finite(y_step), z * _finite(z_step)], 1))
+    return floats(points[(y % across != 0) | (z % along != 0)])
+
+
+def _orders(y_step: float, z_step: float) -> tuple[Floats, Floats]:
+    """All orders that can come within a null width of visible space."""
+    most = [0 if not np.isfinite(step) else int(np.ceil(3 / step)) + 1 for step in (y_step, z_step)]
+    y, z = np.meshgrid(*(np.arange(-count, count + 1.0) for count in most), indexing="ij")
+    return y.ravel(), z.ravel()
+
+
+def _finite(step: float) -> float:
+    return step if np.isfinite(step) else 0.0
+
+
+def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats) -> _Lobe:
+    """Highest level within a null width of any of the points; the box is searched three times, ever finer."""
+    layout = state.layout
+    tilt, phi = state.theta_rad[0] - np.pi / 2, state.phi_rad[0]
+    centres = np.array([np.cos(tilt) * np.sin(phi), -np.sin(tilt)]) + points
+    half_width = np.array(
+        [
+            wavelength / (layout.columns * layout.horizontal_pitch_m) if layout.columns > 1 else 0.0,
+            wavelength / (layout.rows * layout.vertical_pitch_m) if layout.rows > 1 else 0.0,
+        ]
+    )
+    near = (np.abs(centres) < 1 + half_width).all(1)
+    centres = centres[near]
+    radius = np.hypot(*centres.T)
+    best: tuple[float, Floats, int] | None = None
+    for at, centre in enumerate(centres):
+        found = _highest_in_box(state, centre, half_width)
+        if found is not None and (best is None or found[0] > best[0]):
+            best = (*found, at)
+    if best is None or best[0] <= 0:
+        return _Lobe(visible_count=int((radius <= 1 + 1e-9).sum()))
+    level, (u_y, u_z), at = best
+    theta = np.arccos(u_z)
+    phi = np.arcsin(np.clip(u_y / max(np.sin(theta), 1e-12), -1, 1))
+    return _Lobe(
+        float(db(level / beam)),
+        float(np.degrees(theta)),
+        float(np.degrees(phi)),
+        int((radius <= 1 + 1e-9).sum()),
+        bool(radius[at] <= 1 + 1e-9),
+    )
+
+
+def _highest_in_box(state: Excitation, centre: Floats, half_width: Floats) -> tuple[float, Floats] | None:
+    best, at = -1.0, centre
+    span = half_width
+    for _ in range(3):
+        steps = np.linspace(-1, 1, _ACROSS)
+        y, z = ((at[axis] + span[axis] * steps if span[axis] > 0 else at[axis : axis + 1]) for axis in (0, 1))
+        y = y[np.abs(y - centre[0]) <= half_width[0] + 1e-12]
+        z = z[np.abs(z - centre[1]) <= half_width[1] + 1e-12]
+        u_y, u_z = (grid.ravel() for grid in np.meshgrid(y, z, indexing="ij"))
+        seen = u_y**2 + u_z**2 <= 1 - 1e-9
+        if not seen.any():
+            return None if best < 0 else (best, at)
+        u_y, u_z = u_y[seen], u_z[seen]
+        theta = np.arccos(u_z)
+        phi = np.arcsin(np.clip(u_y / np.sin(theta), -1, 1))
+        power = intensity(state, theta[None], phi[None])[0]
+        highest = int(power.argmax())
+        best, at = float(power[highest]), np.array([u_y[highest], u_z[highest]])
+        span = span * 2 / (_ACROSS - 1)
+    return best, at
