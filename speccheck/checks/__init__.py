@@ -4,7 +4,14 @@
 order of the imports is the order of the findings.
 """
 
+# isort: off
 from speccheck.checks import plausibility
+from speccheck.checks import housing, ports, layers
+from speccheck.checks import innocent_gain, innocent_geometry
 from speccheck.checks.runner import examine
+# isort: on
 
-__all__ = ["examine", "plausibility"]
+FAMILIES = (plausibility, housing, ports, layers)
+INNOCENT = (innocent_gain, innocent_geometry)
+
+__all__ = ["FAMILIES", "INNOCENT", "examine"]

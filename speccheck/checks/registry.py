@@ -61,6 +61,7 @@ class Check:
     optional: tuple[str, ...]
     about: tuple[str, ...]
     sees_impossible: bool
+    arguments: frozenset[str]
     source: str
     explanation: str
     judge: JudgementFunction
@@ -80,9 +81,10 @@ def check(
     scope: Scope = "band",
     sees_impossible: bool = False,
 ) -> Callable[[JudgementFunction], JudgementFunction]:
-    """Register a check function; its arguments are `case` and the parameters it names.
+    """Register a check function; it takes `case` and the parameters it names, as it wants.
 
-    A needed parameter arrives as a Reading, an optional one as a Reading or None. The function
+    A needed parameter arrives as a Reading, an optional one as a Reading or None, by keyword. Declared
+    parameters the function does not take are cited only. The function
     returns a Judgement (or several), or None where the check does not apply to this panel at all.
     `about` names the claims that are judged: where the panel states none of them (without `about`:
     none of `needs`), the check does not apply and nothing is reported missing. Figures outside what is
@@ -100,10 +102,10 @@ def check(
         unknown = [key for key in (*needs, *optional, *about) if key not in parameters()]
         if unknown:
             raise ValueError(f"check '{slug}' names parameters the dictionary lacks: {', '.join(unknown)}")
-        arguments = set(inspect.signature(judge).parameters) - {"case"}
-        if arguments != {*needs, *optional}:
-            odd = ", ".join(sorted(arguments ^ {*needs, *optional}))
-            raise ValueError(f"check '{slug}': arguments and declared parameters differ in {odd}")
+        arguments = frozenset(inspect.signature(judge).parameters)
+        odd = ", ".join(sorted(arguments - {"case", *needs, *optional}))
+        if odd:
+            raise ValueError(f"check '{slug}' takes arguments it does not declare: {odd}")
         explanation = inspect.getdoc(judge) or ""
         if not explanation:
             raise ValueError(f"check '{slug}' has no explanation")
@@ -116,6 +118,7 @@ def check(
             optional=optional,
             about=about or needs,
             sees_impossible=sees_impossible,
+            arguments=arguments,
             source=source,
             explanation=explanation,
             judge=judge,

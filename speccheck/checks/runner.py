@@ -66,7 +66,8 @@ def _findings(check: Check, case: Case, panel: Panel) -> Iterator[Finding]:
         yield _not_judged(check, case, lacking, stated, panel)
         return
     try:
-        said = check.judge(case, **needed, **extra)
+        offered = {"case": case, **needed, **extra}
+        said = check.judge(**{name: offered[name] for name in check.arguments})
         judgements = said if isinstance(said, tuple) else (said,) if said is not None else ()
         findings = [_finding(check, case, judgement, stated, panel) for judgement in judgements]
     except Exception as error:  # a crash in one check must not cost the others

@@ -1,0 +1,189 @@
+"""From a panel's figures to the array that physics can compute.
+
+A `Model` is what one band of a panel says of its array: counts, pitches, sub-arrays, frequencies, and
+every assumption made where the bid is silent. It is built once for a panel and band and shared.
+"""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass, replace
+
+from speccheck.checks.registry import Case
+from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
+from speccheck.physics.layout import ArrayLayout, Lattice
+from speccheck.records import Band, Panel, Reading
+
+WAVELENGTHS = frozenset({"λ", "wl", "lambda"})
+_TRIANGULAR = re.compile(
+    r"triang|hexag|stagger|offset|dreieck|versetzt|decal|décal|trójk|driehoek", re.IGNORECASE
+)
+
+SECTOR_COLUMN_AZ_DEG = 65.0
+"""Azimuth width [deg] taken for one column when the bid states none (TR 38.901 Table 7.3-1)."""
+
+
+@dataclass(frozen=True, slots=True)
+class Model:
+    """One band's array: layout, frequencies [MHz], the readings it was made of, what was assumed."""
+
+    band: Band
+    layout: ArrayLayout
+    used: tuple[Reading, ...]
+    assumptions: tuple[str, ...]
+
+    @property
+    def low_hz(self) -> float:
+        """Lower band edge [Hz]."""
+        return self.band[0] * 1e6
+
+    @property
+    def high_hz(self) -> float:
+        """Upper band edge [Hz]."""
+        return self.band[1] * 1e6
+
+    @property
+    def centre_hz(self) -> float:
+        """Middle of the band [Hz]."""
+        return (self.low_hz + self.high_hz) / 2
+
+    def vertical_pitch_wl(self, freq_hz: float) -> float:
+        """Row pitch [wavelengths] at `freq_hz` [Hz]."""
+        return self.layout.vertical_pitch_m * freq_hz / SPEED_OF_LIGHT_MPS
+
+    def horizontal_pitch_wl(self, freq_hz: float) -> float:
+        """Column pitch [wavelengths] at `freq_hz` [Hz]."""
+        return self.layout.horizontal_pitch_m * freq_hz / SPEED_OF_LIGHT_MPS
+
+    def with_columns(self, columns: int) -> Model:
+        """The same array with so many columns forming the beam."""
+        grouped = self.layout.subarray_columns if columns % self.layout.subarray_columns == 0 else 1
+        groups = self.layout.panel_columns if columns == self.layout.columns else 1
+        layout = replace(self.layout, columns=columns, subarray_columns=grouped, panel_columns=groups)
+        return replace(self, layout=layout)
+
+
+@dataclass(frozen=True, slots=True)
+class Lacking:
+    """What the bid does not state and no model can do without."""
+
+    missing: tuple[str, ...]
+    used: tuple[Reading, ...] = ()
+
+
+class _Maker:
+    """Collects readings and assumptions while a model is made."""
+
+    def __init__(self, panel: Panel, band: Band) -> None:
+        self.panel, self.band = panel, band
+        self.used: list[Reading] = []
+        self.assumptions: list[str] = []
+        self.missing: list[str] = []
+
+    def count(self, key: str) -> int | None:
+        reading = self.reading(key)
+        return None if reading is None else round(reading.nominal)
+
+    def reading(self, key: str) -> Reading | None:
+        found = self.panel.get(key, self.band)
+        if found is None or isinstance(found.value, str):
+            return None
+        self.used.append(found)
+        return found
+
+    def text(self, key: str) -> str:
+        found = self.panel.get(key, self.band)
+        if found is None:
+            return ""
+        self.used.append(found)
+        return str(found.value)
+
+    def pitch_m(self, key: str) -> float | None:
+        """A spacing [m]; one spacing for both planes serves where the plane's own is not stated."""
+        reading = self.reading(key) or self.reading("element_spacing")
+        if reading is None:
+            return None
+        if reading.unit in WAVELENGTHS or (
+            reading.stated_unit in WAVELENGTHS and "frequency_mhz" not in reading.at
+        ):
+            self.assumptions.append(f"Spacing in λ ({reading.where}) taken at the middle of the band.")
+        return pitch_m(reading, self.band)
+
+
+def pitch_m(reading: Reading, band: Band) -> float:
+    """A spacing [m], whatever it is stated in; λ without a frequency counts at mid `band` [MHz]."""
+    if reading.unit not in WAVELENGTHS:
+        return reading.nominal
+    at_mhz = reading.at.get("frequency_mhz", (band[0] + band[1]) / 2)
+    return reading.nominal * SPEED_OF_LIGHT_MPS / (at_mhz * 1e6)
+
+
+def model_of(case: Case) -> Model | Lacking:
+    """The array of one band of a panel, or what is missing for it."""
+    if case.band is None:
+        return Lacking(("frequency_range",))
+    maker = _Maker(case.panel, case.band)
+    rows, columns = _counts(maker)
+    vertical = maker.pitch_m("vertical_element_spacing") if rows and rows > 1 else 0.0
+    horizontal = maker.pitch_m("horizontal_element_spacing") if columns > 1 else 0.0
+    if rows is None:
+        maker.missing.append("array_rows")
+    if vertical is None:
+        maker.missing.append("vertical_element_spacing")
+    if horizontal is None:
+        maker.missing.append("horizontal_element_spacing")
+    if rows is None or vertical is None or horizontal is None:
+        return Lacking(tuple(maker.missing), _unique(maker.used))
+    grouped_rows, grouped_columns, tilt = _subarrays(maker, rows, columns)
+    layout = ArrayLayout(
+        rows=rows,
+        columns=columns,
+        vertical_pitch_m=vertical,
+        horizontal_pitch_m=horizontal,
+        subarray_rows=grouped_rows,
+        subarray_columns=grouped_columns,
+        subarray_tilt_deg=tilt,
+        lattice=_lattice(maker),
+    )
+    return Model(case.band, layout, _unique(maker.used), tuple(dict.fromkeys(maker.assumptions)))
+
+
+def _unique(readings: list[Reading]) -> tuple[Reading, ...]:
+    return tuple({r.where: r for r in readings}.values())
+
+
+def _counts(maker: _Maker) -> tuple[int | None, int]:
+    rows, columns = maker.count("array_rows"), maker.count("array_columns")
+    if columns is None:
+        maker.assumptions.append("One column: the bid states no number of columns.")
+        columns = 1
+    return rows, columns
+
+
+def _lattice(maker: _Maker) -> Lattice:
+    return Lattice.TRIANGULAR if _TRIANGULAR.search(maker.text("lattice")) else Lattice.RECTANGULAR
+
+
+def _subarrays(maker: _Maker, rows: int, columns: int) -> tuple[int, int, float]:
+    """Rows and columns that share a port, and the tilt [deg] built into the sub-array.
+
+    A whole column on one feed steers by phase shifters inside it, so its elements count one by one.
+    """
+    grouped_rows, grouped_columns = maker.count("subarray_rows") or 1, maker.count("subarray_columns") or 1
+    if rows % grouped_rows or columns % grouped_columns:
+        maker.assumptions.append(
+            f"Sub-arrays of {grouped_rows} × {grouped_columns} do not divide {rows} × {columns} positions; "
+            "computed element by element."
+        )
+        return 1, 1, 0.0
+    grouped_rows = 1 if grouped_rows == rows else grouped_rows
+    grouped_columns = 1 if grouped_columns == columns else grouped_columns
+    if grouped_rows == 1:
+        return grouped_rows, grouped_columns, 0.0
+    stated = maker.reading("subarray_tilt")
+    if stated is not None:
+        return grouped_rows, grouped_columns, stated.nominal
+    tilts = maker.reading("electrical_tilt") or maker.reading("vertical_scan")
+    middle = tilts.nominal if tilts else 0.0
+    maker.assumptions.append(f"Sub-arrays built for a fixed tilt of {middle:g}°, middle of the tilt range.")
+    return grouped_rows, grouped_columns, middle
