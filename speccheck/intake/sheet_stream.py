@@ -1,0 +1,229 @@
+"""One worksheet part read as a stream: values, formulas, merged ranges, what is hidden.
+
+A single pass gives formula and stored result together, which a general workbook library needs two loads for.
+"""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass, field
+
+from openpyxl.utils.datetime import CALENDAR_MAC_1904, CALENDAR_WINDOWS_1900, from_excel, from_ISO8601
+
+from speccheck.intake.archive import Archive
+from speccheck.intake.grid import Cell, Grid, Raw, Span, text_of
+from speccheck.intake.limits import Limits
+from speccheck.intake.package import Package, SheetEntry, shows_date
+from speccheck.intake.xml_parts import stream
+
+_ADDRESS = re.compile(r"([A-Z]{1,3})([0-9]{1,7})")
+_NO_RESULT = "formula without a stored result"
+_MAX_ROW, _MAX_COLUMN = 1_048_576, 16_384
+
+
+@dataclass(slots=True)
+class Allowance:
+    """Cells still allowed in this workbook."""
+
+    cells: int
+
+
+@dataclass(slots=True)
+class _Open:
+    """The cell being read."""
+
+    kind: str = ""
+    style: str = ""
+    value: str = ""
+    formula: str = ""
+    has_formula: bool = False
+    texts: list[str] = field(default_factory=list)
+
+
+def read_sheet(
+    archive: Archive, entry: SheetEntry, package: Package, limits: Limits, allowance: Allowance
+) -> Grid:
+    """Read one sheet into a grid.
+
+    Raises
+    ------
+    UnusableInputError : broken XML or more than the limits allow
+    """
+    reader = _SheetReader(archive, entry, package, limits, allowance)
+    stream(
+        archive.chunks(entry.part),
+        file=archive.file,
+        part=entry.part,
+        limits=limits,
+        start=reader.start,
+        end=reader.end,
+        text=reader.text,
+    )
+    return reader.grid()
+
+
+class _SheetReader:
+    def __init__(
+        self, archive: Archive, entry: SheetEntry, package: Package, limits: Limits, allowance: Allowance
+    ) -> None:
+        self._archive, self._entry, self._package = archive, entry, package
+        self._limits, self._allowance = limits, allowance
+        self._cells: list[Cell] = []
+        self._spans: list[Span] = []
+        self._hidden_rows: set[int] = set()
+        self._hidden_columns: list[tuple[int, int]] = []
+        self._columns: dict[str, int] = {}
+        self._row = self._column = 0
+        self._kind = self._style = self._formula = ""
+        self._has_formula = False
+        self._pieces: list[str] = []
+        self._listening = False
+        self._epoch = CALENDAR_MAC_1904 if package.counts_from_1904 else CALENDAR_WINDOWS_1900
+
+    def start(self, tag: str, at: dict[str, str]) -> None:
+        if tag == "c":
+            self._start_cell(at)
+        elif tag in ("v", "f", "t"):
+            if tag == "f":
+                self._has_formula = True
+            if tag != "t":
+                self._pieces.clear()
+            self._listening = True
+        elif tag == "row":
+            number = at.get("r", "")
+            self._row = int(number) if number.isdigit() and len(number) < 8 else self._row + 1
+            self._column = 0
+            if at.get("hidden") in ("1", "true") or at.get("ht") == "0":
+                self._hidden_rows.add(self._row)
+        elif tag == "mergeCell":
+            self._merge(at.get("ref", ""))
+        elif tag == "col" and (at.get("hidden") in ("1", "true") or at.get("width") == "0"):
+            low, high = at.get("min", ""), at.get("max", "")
+            if low.isdigit() and high.isdigit():
+                self._hidden_columns.append((int(low), int(high)))
+        elif tag == "rPh":
+            self._listening = False
+
+    def end(self, tag: str) -> None:
+        if tag == "c":
+            if self._pieces or self._has_formula:
+                self._end_cell()
+        elif tag in ("v", "t"):
+            self._listening = False
+        elif tag == "f":
+            self._formula = "".join(self._pieces)
+            self._pieces.clear()
+            self._listening = False
+
+    def text(self, data: str) -> None:
+        if self._listening:
+            self._pieces.append(data)
+
+    def grid(self) -> Grid:
+        grid = Grid(name=self._entry.name, hidden=self._entry.hidden)
+        hidden_rows, ranges = self._hidden_rows, self._hidden_columns
+        for cell in self._cells:
+            out_of_sight = cell.row in hidden_rows or any(low <= cell.column <= high for low, high in ranges)
+            (grid.hidden_cells if out_of_sight else grid.cells)[cell.row, cell.column] = cell
+        grid.spans = {(span.top, span.left): span for span in self._spans}
+        grid.hidden_rows, grid.hidden_columns = frozenset(hidden_rows), tuple(ranges)
+        return grid
+
+    def _start_cell(self, at: dict[str, str]) -> None:
+        address = at.get("r", "")
+        letters = address.rstrip("0123456789")
+        column = self._columns.get(letters)
+        if column is None:
+            column = self._columns[letters] = _column_number(letters)
+        self._column = column or self._column + 1
+        if len(letters) < len(address) and column:
+            self._row = min(int(address[len(letters) :][:8]), _MAX_ROW)
+        self._kind = at.get("t", "n")
+        self._style = at.get("s", "")
+        self._formula, self._has_formula = "", False
+        self._pieces.clear()
+
+    def _end_cell(self) -> None:
+        stored = "".join(self._pieces)
+        number_format = self._package.number_format(self._style) if self._style else ""
+        raw, fault = self._value(stored, number_format)
+        formula = f"={self._formula}" if self._has_formula else ""
+        if self._has_formula and raw is None and not fault:
+            fault = _NO_RESULT
+        text = text_of(raw)
+        if not fault and (not text or text.isspace()):
+            return
+        if len(text) > self._limits.text_length:
+            fault = f"text of {len(text)} characters, more than {self._limits.text_length}"
+            raw = text = text[: self._limits.text_length]
+        self._allowance.cells -= 1
+        if self._allowance.cells < 0:
+            raise self._archive.too_large(f"more than {self._limits.cells} filled cells")
+        self._cells.append(
+            Cell(
+                self._row,
+                self._column,
+                raw,
+                (fault and not text and formula) or text,
+                number_format,
+                formula[:500],
+                fault,
+            )
+        )
+
+    def _value(self, stored: str, number_format: str) -> tuple[Raw, str]:
+        kind = self._kind
+        if kind == "s":
+            texts = self._package.texts
+            index = int(stored) if stored.isdigit() and len(stored) < 10 else -1
+            return (
+                (texts[index], "")
+                if 0 <= index < len(texts)
+                else (None, "reference to a text that is not there")
+            )
+        if kind in ("str", "inlineStr"):
+            return stored, ""
+        if not stored:
+            return None, ""
+        if kind == "e":
+            return stored, f"error value {stored[:20]}"
+        if kind == "b":
+            return stored.strip() == "1", ""
+        return self._number_or_date(stored, number_format)
+
+    def _number_or_date(self, stored: str, number_format: str) -> tuple[Raw, str]:
+        try:
+            if self._kind == "d":
+                return from_ISO8601(stored), ""
+            number = float(stored)
+            if number_format and shows_date(number_format):
+                return from_excel(number, self._epoch), ""
+        except (ValueError, OverflowError):
+            return stored, ""
+        if number.is_integer() and abs(number) < 1e15:
+            return int(number), ""
+        return number, ""
+
+    def _merge(self, reference: str) -> None:
+        ends = [_place(part) for part in reference.split(":", 1)]
+        if len(ends) == 2 and ends[0] and ends[1] and len(self._spans) < self._limits.merged_ranges:
+            (top, left), (bottom, right) = ends[0], ends[1]
+            if top <= bottom and left <= right:
+                self._spans.append(Span(top, left, bottom, right))
+
+
+def _place(address: str) -> tuple[int, int] | None:
+    match = _ADDRESS.fullmatch(address.replace("$", ""))
+    if match is None:
+        return None
+    column = _column_number(match[1])
+    return (int(match[2]), column) if column else None
+
+
+def _column_number(letters: str) -> int:
+    if not 0 < len(letters) <= 3 or not letters.isascii() or not letters.isupper():
+        return 0
+    number = 0
+    for letter in letters:
+        number = number * 26 + ord(letter) - 64
+    return number if number <= _MAX_COLUMN else 0

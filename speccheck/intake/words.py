@@ -1,0 +1,79 @@
+"""Words that say what a column, row or title is for, from ``data/table_words.toml``."""
+
+from __future__ import annotations
+
+import re
+import tomllib
+import unicodedata
+from functools import cache, lru_cache
+from importlib import resources
+
+_BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]\s*$")
+_SPACES = re.compile(r"[\s\u00a0\u2007\u2009\u202f\u200b_]+")
+_DASHES = str.maketrans(
+    {"–": "-", "—": "-", "−": "-", "‐": "-", "‑": "-", "’": "'", "ß": "ss", "ł": "l", "ø": "o"}
+)
+
+
+@lru_cache(maxsize=20_000)
+def fold(text: str) -> str:
+    """A text in lower case without accents, with plain dashes and single spaces, without a closing colon."""
+    plain = unicodedata.normalize("NFKD", text.casefold().translate(_DASHES))
+    plain = "".join(letter for letter in plain if not unicodedata.combining(letter))
+    return _SPACES.sub(" ", plain).strip(" :*\t\n")
+
+
+@cache
+def _table() -> dict[str, dict[str, frozenset[str]]]:
+    text = resources.files("speccheck").joinpath("data", "table_words.toml").read_text(encoding="utf-8")
+    return {
+        name: {role: frozenset(fold(word) for word in words) for role, words in roles.items()}
+        for name, roles in tomllib.loads(text).items()
+    }
+
+
+@cache
+def _column_roles() -> dict[str, str]:
+    return {word: role for role, words in reversed(_table()["column"].items()) for word in words}
+
+
+def column_role(text: str) -> str:
+    """What a column under this heading holds: ``unit``, ``offered``, ``remark`` …; empty when unknown."""
+    if len(text) > 60:
+        return ""
+    folded = fold(text)
+    roles = _column_roles()
+    return roles.get(folded) or roles.get(_BRACKETED.sub("", folded).strip(" :"), "")
+
+
+def is_generic_sheet_name(name: str) -> bool:
+    """Whether a sheet name says nothing of the panel on it."""
+    return fold(name).rstrip("0123456789 -_.()") in _table()["sheet"]["generic"] | {""}
+
+
+def title_prefixes() -> frozenset[str]:
+    """Words before the name of a panel in a title."""
+    return _table()["title"]["prefix"]
+
+
+def is_band_nickname(text: str) -> bool:
+    """Whether a text names a band without saying its frequencies, such as ``Low band`` or ``Sub-band 2``."""
+    folded = _BRACKETED.sub("", fold(text))
+    if len(folded) > 40:
+        return False
+    words = _table()["band"]
+    if folded in words["nickname"]:
+        return True
+    return bool(re.fullmatch(r"(?:r|b|y|l|m|h|lb|mb|hb)\d{1,2}", folded)) or any(
+        re.fullmatch(re.escape(start) + r"s?[ -]?(?:\d|[a-h]|[ivx]+)\b.{0,20}", folded)
+        for start in words["starts"]
+    )
+
+
+def answer(text: str) -> str:
+    """``comply`` or ``deviate`` for an answer without a figure, else empty."""
+    folded = fold(text).rstrip(".!")
+    for name, words in _table()["answer"].items():
+        if folded in words:
+            return name
+    return ""
