@@ -46,31 +46,36 @@ states           array_states(layout, element, freq_hz, tilt_deg=0, scan_deg=0) 
                  (at highest_sidelobe_theta_deg): against the beam, negative; nan where the cut has none
                  directivity_dbi(layout, element, freq_hz, tilt_deg=0, scan_deg=0) alone
                  scan_loss_db(layout, element, freq_hz, tilt_deg=0, scan_deg=0) against the unscanned beam
-pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, tilt_deg=0, scan_deg=0):
+pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, *, tilt_deg=0, scan_deg=0):
                  directivity in any directions, for drawings and exposure
+                 nominal_pattern_dbi(..., element_gain_dbi): composite gain as ITU-R M.2101 prints it
 lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0) -> Lobes,
-                 subarray_lobes(...), highest_lobe(...) anywhere in front. Lobes: level_db against the beam (nan: none),
-                 theta_deg, phi_deg, visible_count, centre_visible
+                 subarray_lobes(...), highest_lobe(...) anywhere in front. Lobes: level_db against the beam
+                 (nan: none), theta_deg, phi_deg, visible_count, centre_visible
 taper            taylor(count, sidelobe_db, nbar), chebyshev(count, sidelobe_db),
                  cosine_on_pedestal(count, pedestal), efficiency_db(weights), beamwidth_ratio(weights),
                  pedestal_for_ratio(count, ratio), sidelobe_db(weights)
-errors           gain_loss_db, sidelobe_floor_db, pointing_rms_deg, null_depth_db, phase_step_rms_deg(bits),
+errors           gain_loss_db(amplitude_rms_db, phase_rms_deg), sidelobe_floor_db(count, ...),
+                 pointing_rms_deg(count, pitch_wl, phase_rms_deg), null_depth_db(count, ...),
+                 phase_step_rms_deg(bits), phase_quantisation_floor_db(count, bits),
                  phase_quantisation_lobe_db(bits), amplitude_step_rms_db(step_db), surface_loss_db(rms_wl)
-bounds           aperture_directivity_dbi(width_m, height_m, freq_hz),
+bounds           BEAMWIDTH_CONSTANTS, aperture_directivity_dbi(width_m, height_m, freq_hz),
                  narrowest_beamwidth_deg(length_m, freq_hz),
                  chebyshev_beamwidth_ratio(count, sidelobe_db), chebyshev_sidelobe_db(count, ratio),
                  gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant),
+                 implied_beamwidth_constant(gain_dbi, az_hpbw_deg, el_hpbw_deg), aperture_is_hard(...),
+                 shortest_length_m(el_hpbw_deg, freq_hz), cell_directivity_dbi(horizontal_pitch_wl, vertical_pitch_wl),
                  normal_gain_dbi(radius_m, freq_hz),
                  cosine_scan_loss_db(scan_deg, exponent=1), aperture_slope_db(from_hz, to_hz)
-beamwidth        uniform_line_deg(count, pitch_m, freq_hz), level_width_deg(hpbw_deg, level_db),
-                 uniform_width_ratio(level_db)
+beamwidth        uniform_line_deg(count, pitch_m, freq_hz), first_null_width_deg(...),
+                 parabolic_level_width_deg(hpbw_deg, level_db), uniform_level_ratio(level_db),
+                 scanned_width_deg(hpbw_deg, scan_deg), phase_step_deg(pitch_wl, steer_deg)
 sector           F.1336-5: elevation_beamwidth_deg(gain_dbi, az_hpbw_deg), peak_pattern_dbi, average_pattern_dbi
 zones            panel_distances(...): distances in front, beside, above, below, behind from a pattern
 expected         PanelClass (PASSIVE, MASSIVE_MIMO, MMWAVE), panel_class(freq_hz, columns),
-                 expected_gain(layout, freq_hz, kind, *, tilt_deg=0, scan_deg=0, horizontal_beamwidth_deg=None,
-                 vertical_beamwidth_deg=None, declared_loss_db=None) -> ExpectedGain: directivity_dbi,
+                 expected_gain(layout, freq_hz, kind, *, tilt_deg=0, scan_deg=0,
+                 horizontal_beamwidth_deg=None, vertical_beamwidth_deg=None, declared_loss_db=None) -> ExpectedGain: directivity_dbi,
                  impossible_dbi, question_dbi, low_dbi, binding, assumptions, .zone(gain_dbi) -> GainZone
                  (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW),
-                 expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0) -> ExpectedBeamwidths:
-                 .horizontal, .vertical = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
+                 expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0): .horizontal, .vertical = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
 """
