@@ -1,0 +1,255 @@
+"""Amounts to quantities: which figures are the claim, and which say where it holds."""
+
+from __future__ import annotations
+
+import itertools
+import math
+from dataclasses import dataclass, field, replace
+
+from speccheck.quantities.amounts import Amount
+from speccheck.quantities.content import Quantity, SenseWord
+from speccheck.quantities.units import UnknownUnitError, convert, dimension
+from speccheck.quantities.words import PLACES
+
+_COMPATIBLE = {
+    "gain": {"gain", "level"},
+    "level": {"level", "gain", "carrier level"},
+    "carrier level": {"carrier level", "level", "power"},
+    "length": {"length", "wavelengths"},
+    "": {"", "count"},
+}
+_RESTATED_WITHIN = 0.02
+_MOST_IN_PRODUCT = 512
+_TILT_WORDS = frozenset(
+    "tilt downtilt tilts dt et edt neigung inclinaison inclinación inclinazione pochylenie".split()
+)
+
+
+@dataclass(slots=True)
+class Claim:
+    """A figure of the cell with the amounts that qualify it."""
+
+    amount: Amount
+    factors: tuple[float, ...] = ()
+    conditions: list[Amount] = field(default_factory=list)
+
+
+def claims(found: list[Amount], unit: str, expected: str | None) -> list[Claim]:
+    """Figures that answer for the parameter, each with its conditions.
+
+    Parameters
+    ----------
+    found : amounts of the cell in order
+    unit : unit of the heading, "" where it has none
+    expected : unit of the parameter, "" for a pure number, None where it is not known
+    """
+    wanted = _wanted(found, unit, expected)
+    result: list[Claim] = []
+    for labels, values in _labelled(found):
+        here = _plain_claims(values, wanted)
+        if len(labels) == len(here):
+            for label, claim in zip(labels, here, strict=True):
+                claim.conditions.append(label)
+        else:
+            for claim in here:
+                claim.conditions += labels
+        result += here
+    _share_conditions(result)
+    return _without_restatements(result)
+
+
+def answers(unit: str, wanted: str) -> bool:
+    """Whether a figure in `unit` can answer for a parameter of the dimension `wanted`."""
+    return not unit or dimension(unit) in _COMPATIBLE.get(wanted, {wanted})
+
+
+def quantity(claim: Claim, unit: str, *, symmetric: bool = False) -> Quantity:
+    """The quantity of a claim; `unit` is the heading's, used where the cell has none.
+
+    `symmetric` reads '±60' as the range -60 to 60, otherwise it is the largest deviation 60.
+    """
+    amount = claim.amount
+    own = amount.unit or unit
+    value: float | tuple[float, float] = amount.low
+    sense: SenseWord = "min" if amount.sense == "min" else "max" if amount.sense == "max" else "nominal"
+    if amount.high is not None:
+        value = (min(amount.low, amount.high), max(amount.low, amount.high))
+    elif amount.plusminus and symmetric:
+        value = (-amount.low, amount.low)
+    elif amount.plusminus:
+        sense = "max"
+    at: dict[str, float] = {"count": math.prod(claim.factors)} if claim.factors else {}
+    for condition in claim.conditions:
+        at |= _at(condition, dimension(own))
+    return Quantity(
+        value=value,
+        unit=own,
+        tolerance=_tolerance(amount, own),
+        sense=sense,
+        statistic="better than" if amount.better else amount.statistic,
+        at=at,
+        condition=_condition(claim),
+    )
+
+
+def unread_words(found: list[Amount], stray: list[str]) -> str:
+    """Words of the cell that are not known to qualify a figure."""
+    words = itertools.chain(stray, *((*a.before, *a.words) for a in found))
+    return " ".join(w for w in words if w.casefold().rstrip(".") not in PLACES)
+
+
+def _wanted(found: list[Amount], unit: str, expected: str | None) -> str:
+    if expected is not None and (expected or not unit):
+        return dimension(expected)
+    if unit:
+        return dimension(unit)
+    plain = next((a for a in found if a.role == ""), found[0] if found else None)
+    return dimension(plain.unit) if plain else ""
+
+
+def _labelled(found: list[Amount]) -> list[tuple[list[Amount], list[Amount]]]:
+    """Split at colons: '0°/5°: 17.2/17.0' and '0°: 17.2; 5°: 17.0' give labels and their values."""
+    runs: list[list[Amount]] = [[]]
+    for amount in found:
+        if amount.joined == ":" and runs[-1]:
+            runs.append([])
+        runs[-1].append(amount)
+    if len(runs) == 1:
+        return [([], runs[0])]
+    parts: list[tuple[list[Amount], list[Amount]]] = []
+    labels = runs[0]
+    for index, run in enumerate(runs[1:], start=1):
+        last = index == len(runs) - 1
+        values, following = (run, []) if last else (run[:-1], run[-1:])
+        parts.append(([] if _is_one(labels) else labels, values))
+        labels = following
+    return parts
+
+
+def _is_one(labels: list[Amount]) -> bool:
+    """The 1 of a ratio written '1:1.5'."""
+    return len(labels) == 1 and labels[0].low == 1 and not labels[0].unit
+
+
+def _plain_claims(values: list[Amount], wanted: str) -> list[Claim]:
+    result: list[Claim] = []
+    waiting: list[Amount] = []
+    factors: tuple[float, ...] = ()
+    for index, amount in enumerate(values):
+        following = values[index + 1] if index + 1 < len(values) else None
+        if following is not None and following.joined == "×" and _is_count(amount):
+            factors = (*factors, amount.low)
+            continue
+        carriers = bool(factors) and wanted == "carrier level"
+        if carriers or amount.role == "at" or not answers(amount.unit, wanted):
+            amount = replace(amount, before=[*amount.before, *(f"{factor:g} ×" for factor in factors)])
+            (result[-1].conditions if result else waiting).append(amount)
+        else:
+            result.append(Claim(amount, factors, waiting))
+            waiting = []
+        factors = ()
+    if not result and waiting:
+        return [Claim(waiting[0], (), waiting[1:])]
+    return result
+
+
+def _is_count(amount: Amount) -> bool:
+    return amount.high is None and amount.low.is_integer() and 0 < amount.low <= _MOST_IN_PRODUCT
+
+
+def _share_conditions(result: list[Claim]) -> None:
+    """'16.5/17.0 dBi for 1710-1880/1850-1990 MHz' zips; '300/200 N at 150 km/h' holds for both."""
+    if (
+        len(result) < 2
+        or any(c.conditions for c in result[:-1])
+        or any(c.amount.joined != "/" for c in result[1:])
+    ):
+        return
+    shared = result[-1].conditions
+    if len(shared) == len(result):
+        for claim, condition in zip(result, list(shared), strict=True):
+            claim.conditions = [condition]
+    elif len(shared) == 1:
+        for claim in result[:-1]:
+            claim.conditions = list(shared)
+
+
+def _without_restatements(result: list[Claim]) -> list[Claim]:
+    """Drop '83.5 in' after '2120 mm': the same figure in another unit."""
+    kept: list[Claim] = []
+    for claim in result:
+        if kept and _restates(kept[-1].amount, claim.amount):
+            continue
+        kept.append(claim)
+    return kept
+
+
+def _restates(first: Amount, second: Amount) -> bool:
+    if not second.unit or first.unit == second.unit or first.high is not None or second.high is not None:
+        return False
+    try:
+        again = convert(second.low, second.unit, first.unit)
+    except UnknownUnitError:
+        return False
+    return math.isclose(again, first.low, rel_tol=_RESTATED_WITHIN, abs_tol=0.06)
+
+
+def _tolerance(amount: Amount, unit: str) -> float | None:
+    if amount.tolerance is None:
+        return None
+    size = abs(amount.tolerance)
+    if amount.tolerance_unit == "%" and unit != "%":
+        return abs(amount.low) * size / 100
+    if amount.tolerance_unit == "dB" and unit in ("W", "kW", "mW"):
+        return abs(amount.low) * (10 ** (size / 10) - 1)
+    try:
+        return (
+            convert(size, amount.tolerance_unit, unit)
+            if dimension(unit) in ("length", "mass", "power")
+            else size
+        )
+    except UnknownUnitError:
+        return size
+
+
+_NAMED = {
+    "speed": ("wind_speed_mps", "m/s"),
+    "temperature": ("temperature_c", "°C"),
+    "power": ("carrier_dbm", "dBm"),
+    "length": ("length_m", "m"),
+}
+
+
+def _at(condition: Amount, claim_dimension: str) -> dict[str, float]:
+    kind = dimension(condition.unit)
+    if kind == "frequency":
+        low = convert(condition.low, condition.unit, "MHz")
+        if condition.high is None:
+            return {"frequency_mhz": low}
+        high = convert(condition.high, condition.unit, "MHz")
+        return {"frequency_low_mhz": min(low, high), "frequency_high_mhz": max(low, high)}
+    if kind == "angle" and condition.high is None:
+        tilt = claim_dimension in ("gain", "angle") or any(
+            w.casefold() in _TILT_WORDS for w in (*condition.words, *condition.before)
+        )
+        named = {"tilt_deg" if tilt and not condition.plusminus else "angle_deg": condition.low}
+        return named if condition.tolerance is None else {**named, "angle_span_deg": condition.tolerance}
+    if kind in _NAMED and condition.high is None:
+        name, unit = _NAMED[kind]
+        try:
+            return {name: convert(condition.low, condition.unit, unit)}
+        except UnknownUnitError:
+            return {}
+    return {}
+
+
+def _condition(claim: Claim) -> str:
+    words = [*claim.amount.before, *claim.amount.words]
+    return ", ".join(filter(None, [" ".join(words), *map(_spelled, claim.conditions)]))
+
+
+def _spelled(amount: Amount) -> str:
+    sign = "±" if amount.plusminus else "-" if amount.low < 0 else ""
+    figure = sign + amount.spelled + (f" ± {amount.tolerance:g}" if amount.tolerance is not None else "")
+    unit = "°" if amount.unit == "deg" else f" {amount.unit}" if amount.unit else ""
+    return " ".join([*amount.before, figure + unit, *amount.words])

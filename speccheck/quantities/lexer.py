@@ -1,0 +1,124 @@
+"""A tidy cell text cut into numerals, units, signs and words."""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass
+from typing import Literal
+
+from speccheck.quantities.numerals import NUMERAL_PATTERN
+from speccheck.quantities.units import UNIT_PATTERN, unit_name
+from speccheck.quantities.words import LONGEST_PHRASE, ROLES
+
+TokenKind = Literal[
+    "num", "unit", "pm", "plus", "minus", "range", "times", "slash", "sep", "colon", "open", "close",
+    "min", "max", "better", "statistic", "from", "at", "and", "word",
+]  # fmt: skip
+
+
+@dataclass(frozen=True, slots=True)
+class Token:
+    """One piece of a cell; `value` is the unit's name, the statistic's name, or the text."""
+
+    kind: TokenKind
+    text: str
+    value: str = ""
+
+
+_UNIT = re.compile(r"\s?(?:" + UNIT_PATTERN + ")")
+_TOKEN = re.compile(
+    rf"""
+    (?P<num>{NUMERAL_PATTERN})
+    |(?P<pm>±) |(?P<plus>\+) |(?P<hyphen>-) |(?P<range>[…÷]) |(?P<about>[~≈])
+    |(?P<times>[×*]|[xX](?=\s?[\d±+-]))
+    |(?P<slash>/) |(?P<sep>[;|\n]|,(?=\s|$)|,) |(?P<colon>:) |(?P<open>[\[(]) |(?P<close>[\])])
+    |(?P<more>[≥>]) |(?P<less>[≤<]) |(?P<equal>=) |(?P<at>@)
+    |(?P<word>[^\W\d_][\w'’]*(?:[-.·/][^\W\d_][\w']*)*\.?) |(?P<other>\S)
+    """,
+    re.VERBOSE,
+)
+_AMOUNT_END = ("num", "unit", "close")
+_SIGNED = {"more": "min", "less": "max"}
+
+
+def tokens(text: str) -> list[Token]:
+    """Tokens of a tidy text; nothing is dropped but white space and equals signs.
+
+    >>> [t.kind for t in tokens("≥ 17.5 ± 0.5 dBi (typ.)")]
+    ['min', 'num', 'pm', 'num', 'unit', 'open', 'statistic', 'close']
+    """
+    found: list[Token] = []
+    position = 0
+    while position < len(text):
+        if found and found[-1].kind == "num":
+            unit = _UNIT.match(text, position)
+            if unit:
+                found.append(Token("unit", unit.group().strip(), unit_name(unit.group())))
+                position = unit.end()
+                continue
+        match = _TOKEN.match(text, position)
+        if not match:
+            position += 1
+            continue
+        position = match.end()
+        token = _token(match, found, text)
+        if token:
+            found.append(token)
+    return _phrases(found)
+
+
+def _token(match: re.Match[str], found: list[Token], text: str) -> Token | None:
+    kind, piece = match.lastgroup or "other", match.group()
+    before = found[-1].kind if found else ""
+    digit_follows = text[match.end() : match.end() + 2].strip()[:1].isdigit()
+    if kind == "hyphen":
+        if before in ("num", "unit"):
+            return Token("range", piece)
+        return Token("minus" if digit_follows or text[match.end() :][:1] in ".," else "sep", piece)
+    if kind == "about":
+        return Token("range", piece) if before in _AMOUNT_END else Token("statistic", piece, "approximate")
+    if kind in _SIGNED:
+        return Token("min" if kind == "more" else "max", piece)
+    if kind == "equal":
+        return None
+    if kind == "other":
+        return Token("word", piece)
+    return Token(kind, piece)  # type: ignore[arg-type]
+
+
+def _phrases(found: list[Token]) -> list[Token]:
+    """Words that have a role, up to the longest phrase, become tokens of that role."""
+    if not any(token.kind == "word" for token in found):
+        return found
+    result: list[Token] = []
+    index = 0
+    while index < len(found):
+        token = found[index]
+        if token.kind != "word":
+            result.append(token)
+            index += 1
+            continue
+        run = 1
+        while run < LONGEST_PHRASE and index + run < len(found) and found[index + run].kind == "word":
+            run += 1
+        for length in range(run, 0, -1):
+            phrase = " ".join(t.text for t in found[index : index + length]).casefold()
+            role = ROLES.get(phrase)
+            if role and _fits(role[0], result, found[index + length :]):
+                result.append(Token(role[0], phrase, role[1]))
+                index += length
+                break
+        else:
+            result.append(token)
+            index += 1
+    return result
+
+
+def _fits(role: str, before: list[Token], after: list[Token]) -> bool:
+    """Short words count only in their place: 'a' between figures, 'from' before one."""
+    figure_next = bool(after) and after[0].kind in ("num", "minus", "plus", "pm", "min", "max", "statistic")
+    if role == "range":
+        return bool(before) and before[-1].kind in _AMOUNT_END and figure_next
+    if role in ("from", "and", "at"):
+        return figure_next
+    return True
