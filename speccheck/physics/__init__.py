@@ -59,23 +59,28 @@ errors           gain_loss_db(amplitude_rms_db, phase_rms_deg), sidelobe_floor_d
                  pointing_rms_deg(count, pitch_wl, phase_rms_deg), null_depth_db(count, ...),
                  phase_step_rms_deg(bits), phase_quantisation_floor_db(count, bits),
                  phase_quantisation_lobe_db(bits), amplitude_step_rms_db(step_db), surface_loss_db(rms_wl)
-bounds           BEAMWIDTH_CONSTANTS, aperture_directivity_dbi(width_m, height_m, freq_hz),
-                 narrowest_beamwidth_deg(length_m, freq_hz),
+bounds           BEAMWIDTH_CONSTANTS (values, domains, sources), aperture_directivity_dbi(width_m, height_m,
+                 freq_hz), aperture_is_hard(...), cell_directivity_dbi(horizontal_pitch_wl, vertical_pitch_wl),
+                 narrowest_beamwidth_deg(length_m, freq_hz), shortest_length_m(el_hpbw_deg, freq_hz),
                  chebyshev_beamwidth_ratio(count, sidelobe_db), chebyshev_sidelobe_db(count, ratio),
-                 gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant),
-                 implied_beamwidth_constant(gain_dbi, az_hpbw_deg, el_hpbw_deg), aperture_is_hard(...),
-                 shortest_length_m(el_hpbw_deg, freq_hz), cell_directivity_dbi(horizontal_pitch_wl, vertical_pitch_wl),
-                 normal_gain_dbi(radius_m, freq_hz),
-                 cosine_scan_loss_db(scan_deg, exponent=1), aperture_slope_db(from_hz, to_hz)
-beamwidth        uniform_line_deg(count, pitch_m, freq_hz), first_null_width_deg(...),
+                 gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant=31000),
+                 implied_beamwidth_constant(gain_dbi, az_hpbw_deg, el_hpbw_deg),
+                 normal_gain_dbi(radius_m, freq_hz), cosine_scan_loss_db(scan_deg, exponent=1),
+                 aperture_slope_db(from_hz, to_hz)
+beamwidth        uniform_line_deg(count, pitch_m, freq_hz), first_null_width_deg(count, pitch_m, freq_hz),
                  parabolic_level_width_deg(hpbw_deg, level_db), uniform_level_ratio(level_db),
                  scanned_width_deg(hpbw_deg, scan_deg), phase_step_deg(pitch_wl, steer_deg)
-sector           F.1336-5: elevation_beamwidth_deg(gain_dbi, az_hpbw_deg), peak_pattern_dbi, average_pattern_dbi
-zones            panel_distances(...): distances in front, beside, above, below, behind from a pattern
+sector           F.1336-5: elevation_beamwidth_deg(gain_dbi, az_hpbw_deg), peak_pattern_dbi and
+                 average_pattern_dbi(gain_dbi, az_hpbw_deg, el_hpbw_deg, azimuth_deg, elevation_deg, *,
+                 parameters=IMPROVED), tilted_mechanically(azimuth_deg, elevation_deg, tilt_deg)
+zones            panel_distances(layout, element, freq_hz, *, power_w, limit_wm2, beams_deg=((0, 0),),
+                 reflection=1, factor=1, mechanical_tilt_deg=0, gain_dbi=None) -> PanelDistances: front_m,
+                 above_m, below_m, beside_m, behind_m; envelope_dbi(...) of a set of beams
 expected         PanelClass (PASSIVE, MASSIVE_MIMO, MMWAVE), panel_class(freq_hz, columns),
                  expected_gain(layout, freq_hz, kind, *, tilt_deg=0, scan_deg=0,
-                 horizontal_beamwidth_deg=None, vertical_beamwidth_deg=None, declared_loss_db=None) -> ExpectedGain: directivity_dbi,
-                 impossible_dbi, question_dbi, low_dbi, binding, assumptions, .zone(gain_dbi) -> GainZone
-                 (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW),
-                 expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0): .horizontal, .vertical = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
+                 horizontal_beamwidth_deg=None, vertical_beamwidth_deg=None, declared_loss_db=None)
+                 -> ExpectedGain: directivity_dbi, impossible_dbi, question_dbi, low_dbi, binding,
+                 assumptions, .zone(gain_dbi) -> GainZone (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW);
+                 expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0): .horizontal and .vertical
+                 = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
 """

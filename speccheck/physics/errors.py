@@ -22,7 +22,8 @@ def error_variance(amplitude_rms_db: ArrayLike, phase_rms_deg: ArrayLike) -> Flo
     0.0437
     """
     phase_rad: Floats = np.radians(floats(phase_rms_deg))
-    return (_NEPERS_PER_DB * floats(amplitude_rms_db)) ** 2 + phase_rad**2
+    variance: Floats = (_NEPERS_PER_DB * floats(amplitude_rms_db)) ** 2 + phase_rad**2
+    return variance
 
 
 def gain_loss_db(amplitude_rms_db: ArrayLike, phase_rms_deg: ArrayLike) -> Floats:

@@ -14,6 +14,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from speccheck.physics.beam import beam_peak
+from speccheck.physics.cuts import half_grid
 from speccheck.physics.decibels import Floats, db, floats, wavelength_m
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation, excite, intensity
@@ -101,20 +102,48 @@ def subarray_lobes(
     return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), _subarray_points)
 
 
+def highest_lobe(
+    layout: ArrayLayout,
+    element: Element,
+    freq_hz: ArrayLike,
+    tilt_deg: ArrayLike = 0.0,
+    scan_deg: ArrayLike = 0.0,
+) -> Lobes:
+    """Highest lobe anywhere in front other than the beam, whatever its origin.
+
+    layout [ArrayLayout]: the panel.
+    element [Element]: its element.
+    freq_hz [Hz]: frequency.
+    tilt_deg [deg]: electrical tilt, positive downwards.
+    scan_deg [deg]: azimuth scan.
+    Returns [Lobes]: of the broadcast states; visible_count is the number of lobes found.
+    Source: definition; local maxima of the pattern over the front, refined.
+
+    >>> from speccheck.physics.element import SectorElement
+    >>> lobe = highest_lobe(ArrayLayout(8, 8, 0.5, 0.5), SectorElement(), 299792458.0)
+    >>> float(lobe.level_db.round(2))
+    -14.04
+    """
+    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), None)
+
+
 def _all_states(
     layout: ArrayLayout,
     element: Element,
     keys: tuple[ArrayLike, ...],
-    points: Callable[[ArrayLayout, float], Floats],
+    points: Callable[[ArrayLayout, float], Floats] | None,
 ) -> Lobes:
     grids = np.broadcast_arrays(*(floats(key) for key in keys))
     states = excite(layout, element, *(grid.ravel() for grid in grids))
     theta, phi = beam_peak(states)
     beam = intensity(states, theta[:, None], phi[:, None])[:, 0]
-    found = [
-        _strongest(_one(states, s), wavelength, beam[s], points(layout, wavelength))
-        for s, wavelength in enumerate(wavelength_m(grids[0].ravel()))
-    ]
+    found = []
+    for s, wavelength in enumerate(wavelength_m(grids[0].ravel())):
+        state = _one(states, s)
+        if points is None:
+            found.append(_anywhere(state, (theta[s], phi[s]), beam[s]))
+        else:
+            found.append(_strongest(state, wavelength, beam[s], points(layout, wavelength)))
     shape = grids[0].shape
     return Lobes(
         *(
@@ -222,3 +251,37 @@ def _highest_in_box(state: Excitation, centre: Floats, half_width: Floats) -> tu
         best, at = float(power[highest]), np.array([u_y[highest], u_z[highest]])
         span = span * 2 / (_ACROSS - 1)
     return best, at
+
+
+def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
+    """Highest local maximum over the front outside the beam's own."""
+    grids = [half_grid(side, state.wavenumbers) for side in (state.layout.height_m, state.layout.width_m)]
+    elevation, phi = (np.concatenate([-half[:0:-1], half]) for half in grids)
+    theta = np.pi / 2 + elevation[1:-1]
+    mesh = np.meshgrid(theta, phi, indexing="ij")
+    power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)
+    padded = np.pad(power, 1, constant_values=-1.0)
+    rows, columns = power.shape
+    higher = np.ones(power.shape, bool)
+    for down in (0, 1, 2):
+        for right in (0, 1, 2):
+            if (down, right) != (1, 1):
+                higher &= power >= padded[down : down + rows, right : right + columns] * (1 + 1e-9)
+    steps = theta[1] - theta[0], phi[1] - phi[0]
+    own = (np.abs(mesh[0] - beam_rad[0]) <= 1.5 * steps[0]) & (
+        np.abs(mesh[1] - beam_rad[1]) <= 1.5 * steps[1]
+    )
+    lobes = higher & ~own & (power > 1e-9 * beam)
+    if not lobes.any():
+        return _Lobe()
+    at = np.unravel_index(np.where(lobes, power, -1.0).argmax(), power.shape)
+    level, where = float(power[at]), (float(mesh[0][at]), float(mesh[1][at]))
+    for finer in (1.0, 0.2):
+        offsets = np.linspace(-finer, finer, _ACROSS)
+        near = np.meshgrid(where[0] + steps[0] * offsets, where[1] + steps[1] * offsets, indexing="ij")
+        near_phi = np.clip(near[1].reshape(1, -1), -np.pi / 2, np.pi / 2)
+        values = intensity(state, near[0].reshape(1, -1), near_phi)[0]
+        best = int(values.argmax())
+        level, where = float(values[best]), (float(near[0].ravel()[best]), float(near_phi[0, best]))
+    degrees = np.degrees(where)
+    return _Lobe(float(db(level / beam)), float(degrees[0]), float(degrees[1]), int(lobes.sum()), True)
