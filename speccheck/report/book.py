@@ -31,6 +31,9 @@ LAST_COLUMN = 16_384
 SPARE_ROWS = 500
 """Rows below a table of entries for which pick-lists and number checks hold too."""
 
+UNDATED = datetime(2000, 1, 1)  # noqa: DTZ001 - the file format has no zone
+"""Date of a workbook whose content has none, so that the same content gives the same bytes."""
+
 Row = Sequence[tuple[int, Content, str]]
 
 
@@ -65,15 +68,20 @@ class Table:
     rows: Sequence[Sequence[Content]]
     frozen: int = 1
     spare_rows: int = 0
+    sortable: bool = True
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Grid:
-    """A sheet whose cells keep the addresses of another sheet: row, then column, then content."""
+    """A sheet whose cells keep the addresses of another sheet: row, then column, then content.
+
+    `notes` are shown beside the cell of (row, column); nothing may stand in a note only.
+    """
 
     name: str
     cells: Mapping[int, Mapping[int, Content]]
     widths: Mapping[int, float] = field(default_factory=dict)
+    notes: Mapping[tuple[int, int], str] = field(default_factory=dict)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -84,7 +92,7 @@ class Imprint:
     subject: str = ""
     footer: str = ""
     paper: str = "A4"
-    moment: datetime = datetime(2000, 1, 1)  # noqa: DTZ001 - the file format has no zone
+    moment: datetime = UNDATED
 
 
 def book_bytes(sheets: Sequence[Table | Grid], imprint: Imprint) -> bytes:
@@ -149,7 +157,7 @@ def _frame_table(worksheet: Worksheet, table: Table) -> None:
     beyond.max = LAST_COLUMN
     beyond.protection = Protection(locked=False)
     worksheet.column_dimensions[beyond.index] = beyond
-    _lock_headings(worksheet)
+    _lock_headings(worksheet, sortable=table.sortable)
 
 
 def _add_helps(worksheet: Worksheet, column: Column, cells: str) -> None:
@@ -182,20 +190,23 @@ def _comment(text: str) -> Comment:
     return Comment(text, "speccheck", height=24 + 16 * lines, width=260)
 
 
-def _lock_headings(worksheet: Worksheet) -> None:
+def _lock_headings(worksheet: Worksheet, *, sortable: bool) -> None:
     """Protect the sheet without password; only headings are locked, all work on the rest is allowed."""
     protection = worksheet.protection
     protection.sheet = True
-    for freedom in ("formatCells", "formatColumns", "formatRows", "insertRows", "deleteRows", "sort"):
+    for freedom in ("formatCells", "formatColumns", "formatRows", "insertRows", "deleteRows"):
         setattr(protection, freedom, False)
     for freedom in ("insertColumns", "deleteColumns", "insertHyperlinks", "autoFilter", "pivotTables"):
         setattr(protection, freedom, False)
+    protection.sort = not sortable
 
 
 def _frame_grid(worksheet: Worksheet, grid: Grid) -> None:
     for number, width in grid.widths.items():
         worksheet.column_dimensions[get_column_letter(number)].width = width
     worksheet.freeze_panes = "B2"
+    for (row, number), text in grid.notes.items():
+        worksheet.cell(row, number).comment = _comment(plain(text, 500))
 
 
 def _set_print(worksheet: Worksheet, imprint: Imprint, area: str, *, repeat_header: bool) -> None:
