@@ -46,8 +46,9 @@ states           array_states(layout, element, freq_hz, tilt_deg=0, scan_deg=0) 
                  (at highest_sidelobe_theta_deg): against the beam, negative; nan where the cut has none
                  directivity_dbi(layout, element, freq_hz, tilt_deg=0, scan_deg=0) alone
                  scan_loss_db(layout, element, freq_hz, tilt_deg=0, scan_deg=0) against the unscanned beam
-pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, *, tilt_deg=0, scan_deg=0):
-                 directivity in any directions, for drawings and exposure
+pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, *, tilt_deg=0, scan_deg=0)
+                 directivity in any directions, for drawings and exposure; power_pattern(layout, element,
+                 freq_hz, tilt_deg, scan_deg, theta_deg, phi_deg): the same as a ratio
                  nominal_pattern_dbi(..., element_gain_dbi): composite gain as ITU-R M.2101 prints it
 lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0) -> Lobes,
                  subarray_lobes(...), highest_lobe(...) anywhere in front. Lobes: level_db against the beam

@@ -12,6 +12,37 @@ from speccheck.physics.layout import ArrayLayout
 from speccheck.physics.radiated import radiated_power
 
 
+def power_pattern(
+    layout: ArrayLayout,
+    element: Element,
+    freq_hz: float,
+    tilt_deg: float,
+    scan_deg: float,
+    theta_deg: ArrayLike,
+    phi_deg: ArrayLike,
+) -> Floats:  # noqa: PLR0917 state first, direction last, as in a cut table
+    """Directivity as a ratio in given directions.
+
+    layout [ArrayLayout]: the panel.
+    element [Element]: its element.
+    freq_hz [Hz]: frequency.
+    tilt_deg [deg]: electrical tilt, positive downwards.
+    scan_deg [deg]: azimuth scan.
+    theta_deg [deg]: zenith angle, broadcast with phi.
+    phi_deg [deg]: azimuth.
+    Returns [1]: 4 pi U/P.
+    Source: definition, with the power by the lag form.
+
+    >>> from speccheck.physics.element import IsotropicElement
+    >>> pair = ArrayLayout(2, 1, 0.5, 0.5)
+    >>> float(power_pattern(pair, IsotropicElement(), 299792458.0, 0, 0, 90, 0).round(4))
+    2.0
+    """
+    state, theta, phi = _prepared(layout, element, freq_hz, (tilt_deg, scan_deg), (theta_deg, phi_deg))
+    power = intensity(state, theta.reshape(1, -1), phi.reshape(1, -1)) / radiated_power(state)[:, None]
+    return floats(power.reshape(theta.shape)[()])
+
+
 def gain_pattern_dbi(
     layout: ArrayLayout,
     element: Element,
@@ -39,9 +70,7 @@ def gain_pattern_dbi(
     >>> float(gain_pattern_dbi(column, SectorElement(), 299792458.0, 90.0, 0.0).round(2))
     19.25
     """
-    state, theta, phi = _prepared(layout, element, freq_hz, (tilt_deg, scan_deg), (theta_deg, phi_deg))
-    power = intensity(state, theta.reshape(1, -1), phi.reshape(1, -1)) / radiated_power(state)[:, None]
-    return floats(db(power).reshape(theta.shape)[()])
+    return db(power_pattern(layout, element, freq_hz, tilt_deg, scan_deg, theta_deg, phi_deg))
 
 
 def nominal_pattern_dbi(
