@@ -6,12 +6,13 @@ order of the imports is the order of the findings.
 
 # isort: off
 from speccheck.checks import plausibility
+from speccheck.checks import spacing, lattices
 from speccheck.checks import housing, ports, layers
 from speccheck.checks import innocent_gain, innocent_geometry
 from speccheck.checks.runner import examine
 # isort: on
 
-FAMILIES = (plausibility, housing, ports, layers)
+FAMILIES = (plausibility, spacing, lattices, housing, ports, layers)
 INNOCENT = (innocent_gain, innocent_geometry)
 
 __all__ = ["FAMILIES", "INNOCENT", "examine"]

@@ -1,0 +1,179 @@
+"""The lobes a lattice raises over the claimed steering range, and the bid's own claims they break."""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass
+
+import numpy as np
+
+from speccheck.checks.model import Model
+from speccheck.checks.saying import named
+from speccheck.physics import lobes
+from speccheck.physics.decibels import Floats
+from speccheck.physics.element import SectorElement
+from speccheck.records import Fit, Reading, Step
+
+HARD_DB, SOFT_DB = -3.0, -8.0
+"""Lobe levels [dB against the beam] from which a spacing does not fit, or is doubtful (this program's rule)."""
+
+ORDINARY_SIDELOBE_DB = -13.3
+"""First side lobe of a uniform line [dB]: a lobe below it is not distinct (any antenna handbook)."""
+
+_FREE = re.compile(
+    r"\b(no|none|free|without|absent|nil|keine?|ohne|aucune?|sans|sin|nessun[oa]?|brak|geen)\b", re.I
+)
+_ANGLE = re.compile(r"[±+-]?\s*(\d+(?:[.,]\d+)?)\s*(?:°|deg)")
+_LEVEL = re.compile(r"(-?−?\s*\d+(?:[.,]\d+)?)\s*dB", re.I)
+_EVERY_LOBE = re.compile(
+    r"\b(all|any|highest|maximum|worst|every)\s+(upper\s+)?(side|grating)?[\s-]*lobes?\b", re.I
+)
+
+
+@dataclass(frozen=True, slots=True)
+class Steering:
+    """Both ends of a claimed range [deg], in one plane, and where it is claimed."""
+
+    ends_deg: tuple[float, float]
+    horizontal: bool
+    reading: Reading | None
+
+    @property
+    def largest_deg(self) -> float:
+        """The end farther from the panel normal [deg]."""
+        return max(self.ordered_deg, key=abs)
+
+    @property
+    def ordered_deg(self) -> tuple[float, float]:
+        """Both ends [deg], the upper one first."""
+        return self.ends_deg[1], self.ends_deg[0]
+
+    def keys(self, tilt_deg: float) -> tuple[Floats, Floats]:
+        """Tilts and scans [deg] of both ends; the other plane at its rest position."""
+        ends = np.array(self.ordered_deg)
+        return (np.full(2, tilt_deg), ends) if self.horizontal else (ends, np.zeros(2))
+
+
+@dataclass(frozen=True, slots=True)
+class Lobe:
+    """The strongest lobe over the range at the top of the band."""
+
+    level_db: float
+    scan_deg: float
+    stands_deg: float
+    visible: bool
+
+    @property
+    def verdict(self) -> Fit:
+        """By the -3 and -8 dB rule; the flank of a hidden lobe fits."""
+        if not self.visible or np.isnan(self.level_db):
+            return Fit.FITS
+        return (
+            Fit.DOES_NOT_FIT
+            if self.level_db >= HARD_DB
+            else Fit.DOUBTFUL
+            if self.level_db >= SOFT_DB
+            else Fit.FITS
+        )
+
+
+def span_deg(reading: Reading | None) -> tuple[float, float] | None:
+    """Both ends [deg] of a steering range; a single figure is the end of a range to either side."""
+    if reading is None or isinstance(reading.value, str):
+        return None
+    if isinstance(reading.value, tuple):
+        return min(reading.value), max(reading.value)
+    return -abs(reading.value), abs(reading.value)
+
+
+def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[float, float], Reading] | None:
+    """Both ends [deg] of the claimed steering in the vertical plane, positive downwards."""
+    if tilt is not None and not isinstance(tilt.value, str):
+        return (tilt.low, tilt.high), tilt
+    if scan is not None and (ends := span_deg(scan)):
+        return (-ends[1], -ends[0]), scan
+    return None
+
+
+def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
+    """The strongest lobe of the element or of the sub-array lattice over both ends of the range."""
+    layout = model.layout
+    tilt, scan = steering.keys(layout.subarray_tilt_deg)
+    search = lobes.subarray_lobes if subarrays else lobes.element_lobes
+    found = search(layout, SectorElement(), model.high_hz, tilt, scan)
+    # of a lobe whose centre is hidden only the flank is seen: it counts behind any visible one
+    rank = np.where(found.centre_visible, 0.0, -1e3) + np.nan_to_num(found.level_db, nan=-1e6)
+    at = int(np.argmax(rank))
+    stands = found.phi_deg if steering.horizontal else found.theta_deg - 90
+    return Lobe(
+        float(found.level_db[at]), steering.ordered_deg[at], float(stands[at]), bool(found.centre_visible[at])
+    )
+
+
+def claimed_freedom(grating_lobes: Reading | None) -> tuple[float | None, float | None] | None:
+    """What 'none within ±60°' claims: the angle [deg] and the level [dB] it names, or None for no claim."""
+    if grating_lobes is None:
+        return None
+    text = f"{grating_lobes.value}"
+    level, angle = _LEVEL.search(text), _ANGLE.search(text)
+    if not _FREE.search(text) and level is None:
+        return None
+    number = None if level is None else -abs(float(re.sub(r"[−\s-]", "", level[1]).replace(",", ".")))
+    return (None if angle is None else float(angle[1].replace(",", "."))), number
+
+
+def broken_claims(
+    lobe: Lobe, *, grating_lobes: Reading | None, suppressions: tuple[Reading | None, ...]
+) -> list[str]:
+    """The bid's own claims that the lobe breaks, in words."""
+    if not lobe.visible or np.isnan(lobe.level_db):
+        return []
+    broken: list[str] = []
+    freedom = claimed_freedom(grating_lobes)
+    if (
+        freedom is not None
+        and grating_lobes is not None
+        and (freedom[0] is None or abs(lobe.scan_deg) <= freedom[0])
+    ):
+        allowed = freedom[1] if freedom[1] is not None else ORDINARY_SIDELOBE_DB
+        if lobe.level_db > allowed:
+            broken.append(f"the claim '{grating_lobes.value}' ({grating_lobes.where})")
+    broken += [named(s) for s in suppressions if s is not None and -lobe.level_db < s.low - 0.5]
+    return broken
+
+
+def every_lobe(reading: Reading | None) -> Reading | None:
+    """A side-lobe claim, if it says that it covers every lobe and not the first one only."""
+    if reading is None:
+        return None
+    said = f"{reading.heading} {reading.condition} {reading.raw}"
+    return reading if _EVERY_LOBE.search(said) else None
+
+
+ELEMENT_ASSUMED = "Element pattern of TR 38.901 form, 65° × 65°; a wider element raises the lobe."
+
+
+def lobe_steps(lobe: Lobe) -> tuple[Step, ...]:
+    """The line of working for a lobe; none where there is no lobe."""
+    if np.isnan(lobe.level_db):
+        return ()
+    seen = "lobe" if lobe.visible else "flank of a hidden lobe"
+    formula = (
+        f"array and element pattern, beam steered to {lobe.scan_deg:g}°, {seen} at {lobe.stands_deg:.0f}°"
+    )
+    return (Step("Strongest lobe against the beam", formula, round(lobe.level_db, 1), "dB"),)
+
+
+def lobe_said(lobe: Lobe, enters_at_deg: float) -> str:
+    """A sentence on the lobe."""
+    if not lobe.visible or np.isnan(lobe.level_db):
+        return "No lobe enters within the range."
+    return (
+        f"Steered to {lobe.scan_deg:g}° a lobe of {lobe.level_db:.1f} dB stands at {lobe.stands_deg:.0f}°;"
+        f" it enters from {enters_at_deg:.0f}°."
+    )
+
+
+def broken_said(broken: list[str]) -> str:
+    """A sentence on the bid's claims that are broken."""
+    return f" It breaks {' and '.join(broken)}." if broken else ""
