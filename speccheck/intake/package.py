@@ -142,7 +142,7 @@ class _PartReader:
         pieces: list[str] = []
         state = {"text": False, "hint": 0, "total": 0}
 
-        def start(tag: str, at: dict[str, str]) -> None:
+        def start(tag: str, _: dict[str, str]) -> None:
             if tag == "si":
                 pieces.clear()
             elif tag == "rPh":

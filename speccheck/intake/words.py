@@ -51,9 +51,9 @@ def is_generic_sheet_name(name: str) -> bool:
     return fold(name).rstrip("0123456789 -_.()") in _table()["sheet"]["generic"] | {""}
 
 
-def title_prefixes() -> frozenset[str]:
-    """Words before the name of a panel in a title."""
-    return _table()["title"]["prefix"]
+def title_prefixes(strength: str = "prefix") -> frozenset[str]:
+    """Words before the name of a panel in a title: the sure ones, or the ``weak`` ones such as 'Data sheet'."""
+    return _table()["title"][strength]
 
 
 def is_band_nickname(text: str) -> bool:
@@ -77,3 +77,8 @@ def answer(text: str) -> str:
         if folded in words:
             return name
     return ""
+
+
+def is_counting_unit(text: str) -> bool:
+    """Whether a text stands in a unit column without being a physical unit: ``pcs``, ``–``, ``dBc @ 2x43 dBm``."""
+    return fold(text).strip("[]() ") in _table()["unit"]["words"]

@@ -1,0 +1,256 @@
+"""Tables with headings across: one row a panel, or a panel and band."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from speccheck.intake.bands import find_bands, is_band_label
+from speccheck.intake.claims import Claim, Context, Draft, SheetResult
+from speccheck.intake.columns import Column, describe, heading_stack
+from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.labels import Label, Labels, is_unit, statistic_of
+from speccheck.intake.marks import Marks
+from speccheck.intake.naming import Names, model_name
+from speccheck.intake.regions import Across
+from speccheck.intake.words import column_role
+from speccheck.records import Band
+
+_FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
+_NAME_KEYS = ("model", "panel_type", "part_number")
+_SILENT_ROLES = {"remark": "note", "number": "label", "group": "label", "level": "label", "required": "label"}
+
+
+@dataclass(slots=True)
+class _Field:
+    """One column: what its cells claim."""
+
+    column: Column
+    label: Label
+    context: Context
+    role: str = ""
+    misses: int = 0
+
+
+@dataclass(slots=True)
+class _Row:
+    """The panel and band the walk stands at."""
+
+    draft: Draft | None = None
+    name: str = ""
+    band: Band | None = None
+    band_name: str = ""
+
+
+class AcrossReader:
+    """Walks one table from its first data row to its last."""
+
+    def __init__(self, marks: Marks, table: Across, result: SheetResult, names: Names) -> None:
+        self._marks, self._table, self._result, self._names = marks, table, result, names
+        self._grid: Grid = marks.grid
+        self._fields: dict[int, _Field] = {}
+        self._named: int = 0
+        self._banded: int = 0
+        self._by_name: dict[str, tuple[Draft, set[object]]] = {}
+        self._at = _Row()
+
+    def read(self) -> None:
+        """Place every cell of the table and collect its claims."""
+        self._describe()
+        for row in [*self._table.heading_rows, *self._table.repeated]:
+            for cell in self._cells(row):
+                self._result.mark(cell, "heading")
+        self._choose_names_and_bands()
+        for row in self._table.data_rows:
+            self._row(row, self._cells(row))
+        self._report_unknown()
+
+    def _cells(self, row: int) -> list[Cell]:
+        return [c for c in self._marks.rows.get(row, ()) if self._table.left <= c.column <= self._table.right]
+
+    def _describe(self) -> None:
+        rows, labels = self._table.heading_rows, self._marks.labels
+        used = {c.column for row in [*rows, *self._table.data_rows] for c in self._cells(row)}
+        for index in sorted(used):
+            stack = heading_stack(self._grid, rows, index, self._table.left)
+            label, column = compose(index, stack, labels)
+            role = "" if label else column.role
+            context = Context(
+                label=label,
+                unit=column.unit,
+                statistic=column.statistic,
+                heading=column.heading,
+                band_name=column.band_name if column.band is None else "",
+            )
+            self._fields[index] = _Field(column, label, context, role)
+
+    def _choose_names_and_bands(self) -> None:
+        fields = self._fields
+        for key in _NAME_KEYS:
+            named = [i for i, f in fields.items() if f.label.parameters[:1] == (key,)]
+            if named:
+                self._named = named[0]
+                break
+        else:
+            roles = [i for i, f in fields.items() if f.role == "panel"]
+            self._named = roles[0] if roles else self._unlabelled_text_column()
+        frequencies = [
+            i
+            for i, f in fields.items()
+            if f.role == "band"
+            or (f.label and set(f.label.parameters) <= _FREQUENCY_KEYS and not f.context.statistic)
+        ]
+        if len(frequencies) > 1:
+            narrow = [i for i in frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
+            frequencies = narrow or frequencies
+        self._banded = frequencies[0] if frequencies else 0
+
+    def _unlabelled_text_column(self) -> int:
+        for index, found in self._fields.items():
+            if not found.label and found.role in ("", "parameter", "offered"):
+                cells = [c for r in self._table.data_rows[:50] if (c := self._grid.cells.get((r, index)))]
+                if cells and all(isinstance(c.raw, str) for c in cells):
+                    return index
+        numbers = [i for i, f in self._fields.items() if f.role == "number"]
+        return numbers[0] if numbers else 0
+
+    def _row(self, row: int, cells: list[Cell]) -> None:
+        if len(cells) == 1 and len(self._fields) > 2:
+            cell = cells[0]
+            known = self._fields.get(cell.column)
+            if known is None or not known.label or cell.column in (self._named, self._table.left):
+                self._result.mark(cell, "heading")
+                self._at = _Row() if cell.column != self._named else self._at
+                if cell.column == self._named:
+                    self._start_panel(row, cell)
+                return
+        self._place(row, cells)
+        draft = self._at.draft
+        if draft is None:
+            return
+        for cell in cells:
+            if cell.column != self._named:
+                self._claim(cell, draft)
+
+    def _place(self, row: int, cells: list[Cell]) -> None:
+        name_cell = self._grid.cells.get((row, self._named)) if self._named else None
+        band_cell = self._grid.covering(row, self._banded) if self._banded else None
+        band, band_name = self._band(band_cell)
+        if name_cell is not None:
+            self._result.mark(name_cell, "heading")
+            name = model_name(name_cell.text)
+            known = self._by_name.get(name)
+            if known and (band or band_name) and (band or band_name) not in known[1]:
+                self._at = _Row(known[0], name)
+            else:
+                self._start_panel(row, name_cell)
+        elif self._at.draft is None or not self._named:
+            self._start_panel(row, cells[0])
+        self._at.band, self._at.band_name = band, band_name
+        if self._at.draft is not None and (band or band_name):
+            self._by_name[self._at.name][1].add(band or band_name)
+            if band and band not in self._at.draft.bands:
+                self._at.draft.bands.append(band)
+
+    def _start_panel(self, row: int, cell: Cell) -> None:
+        if self._named and cell.column == self._named:
+            draft = Draft(model_name(cell.text), self._grid, cell, named=True)
+        else:
+            top = self._table.heading_rows[0]
+            title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
+            several = len(self._table.data_rows) > 1
+            draft = Draft(
+                f"{title.name} row {row}" if several else title.name, self._grid, cell, named=title.certain
+            )
+        self._result.drafts.append(draft)
+        self._by_name[draft.name] = (draft, set())
+        self._at = _Row(draft, draft.name)
+
+    def _band(self, cell: Cell | None) -> tuple[Band | None, str]:
+        if cell is None:
+            return None, ""
+        unit = self._fields[self._banded].label.unit or self._fields[self._banded].column.unit
+        text = cell.text
+        if unit and not any(word in text.lower() for word in ("mhz", "ghz")):
+            text = f"{text} {unit}"
+        found = find_bands(text)
+        if len(found.spans) > 1 and not found.names:
+            return None, ""
+        return found.hull, "" if found.hull else " ".join(cell.text.split())
+
+    def _claim(self, cell: Cell, draft: Draft) -> None:
+        found = self._fields.get(cell.column)
+        if found is None:
+            return
+        at, column = self._at, found.column
+        if found.label:
+            band, banded, context = (
+                column.band,
+                column.band is not None or bool(column.band_name),
+                found.context,
+            )
+            if not banded and column.index != self._banded and (at.band or at.band_name):
+                band, banded = at.band, True
+            draft.claims.append(Claim(cell, context, band, banded=banded))
+            if column.band is not None and column.band not in draft.bands:
+                draft.bands.append(column.band)
+        elif cell.column == self._banded:
+            label = Label(column.heading, ("operating_bands",), column.unit or "MHz")
+            if find_bands(cell.text).spans:
+                draft.claims.append(Claim(cell, Context(label, heading=column.heading), at.band))
+            else:
+                self._result.mark(cell, "label")
+        elif found.role in _SILENT_ROLES:
+            self._result.mark(cell, _SILENT_ROLES[found.role])
+        elif found.role == "tolerance" and draft.claims:
+            draft.claims[-1].tolerance = cell
+            self._result.mark(cell, "label")
+        else:
+            found.misses += 1
+            self._result.mark(cell, "unread")
+
+    def _report_unknown(self) -> None:
+        """One line for a column that was not read, not one a cell."""
+        for index, found in self._fields.items():
+            if not found.misses:
+                continue
+            where = found.column.cells[-1] if found.column.cells else None
+            if where is None:
+                rows = self._table.data_rows
+                where = next(c for r in rows if (c := self._grid.cells.get((r, index))) is not None)
+            heading = found.column.heading[:80]
+            reason = (
+                f"column heading '{heading}' is not in the dictionary"
+                if heading
+                else "a column without a heading"
+            )
+            self._result.unread.append(
+                (where, f"{reason}; its {found.misses} cells were not read", found.label.suggestion)
+            )
+
+
+def compose(index: int, stack: list[Cell], labels: Labels) -> tuple[Label, Column]:
+    """The parameter a stack of heading cells names, and what else the stack says."""
+    column = describe(index, stack, labels)
+    words = [
+        " ".join(c.text.split())
+        for c in stack
+        if not (is_unit(c.text) or is_band_label(c.text) or statistic_of(c.text))
+    ]
+    suggestion = ""
+    for text in _combinations(words):
+        label = labels.of(text)
+        if label:
+            if column.band is None and label.bands.spans:
+                column.band = label.bands.hull
+            return label, column
+        suggestion = suggestion or label.suggestion
+    if words and column_role(words[-1]):
+        column.role = column_role(words[-1])
+    return Label(" ".join(words), suggestion=suggestion), column
+
+
+def _combinations(words: list[str]) -> list[str]:
+    if not words:
+        return []
+    joined = [" ".join(words), ", ".join(words), " ".join(reversed(words))] if len(words) > 1 else []
+    return [*joined, *reversed(words)]

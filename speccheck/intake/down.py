@@ -1,0 +1,285 @@
+"""Tables with parameters down the side: one panel, several bands or several panels across."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass, field
+
+from speccheck.intake.bands import find_bands, is_band_label
+from speccheck.intake.claims import Claim, Context, SheetResult
+from speccheck.intake.columns import VALUE_ROLES, Column
+from speccheck.intake.down_headings import describe_columns, extend, find_headings
+from speccheck.intake.down_panels import NAME_KEYS, DownPanels
+from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.labels import Label
+from speccheck.intake.marks import Marks
+from speccheck.intake.naming import Names, model_name
+from speccheck.intake.regions import Down
+from speccheck.intake.words import answer
+from speccheck.records import Band
+
+
+@dataclass(slots=True)
+class _State:
+    """Where the walk down the table stands."""
+
+    label: Label | None = None
+    label_row: int = 0
+    label_bottom: int = 0
+    section_band: Band | None = None
+    section_name: str = ""
+    side_band: Band | None = None
+    side_name: str = ""
+    side_bottom: int = 0
+    pending_title: Cell | None = None
+    seen: set[tuple[object, ...]] = field(default_factory=set)
+
+
+class DownReader:
+    """Walks one table from its headings to its last row."""
+
+    def __init__(self, marks: Marks, table: Down, result: SheetResult, names: Names) -> None:
+        self._marks, self._table, self._result, self._names = marks, table, result, names
+        self._grid: Grid = marks.grid
+        self._columns: dict[int, Column] = {}
+        self._heading_rows: list[int] = []
+        self._state = _State()
+
+    def read(self) -> None:
+        """Place every cell of the table and collect its claims."""
+        self._heading_rows = find_headings(self._marks, self._table, self._result)
+        extend(self._marks, self._table, self._result)
+        self._columns = describe_columns(self._marks, self._table, self._heading_rows, self._result)
+        self._panels = DownPanels(self._marks, self._table, self._columns, self._result)
+        self._panels.open(self._names, self._heading_rows)
+        first = (self._heading_rows[-1] + 1) if self._heading_rows else self._table.top
+        for row in range(min(first, self._table.top), self._table.bottom + 1):
+            cells = [
+                c for c in self._marks.rows.get(row, ()) if self._table.left <= c.column <= self._table.right
+            ]
+            if cells:
+                self._row(row, cells)
+
+    def _row(self, row: int, cells: list[Cell]) -> None:
+        state, table = self._state, self._table
+        beside = [c for c in cells if c.column > table.label_column]
+        label_cell = self._grid.cells.get((row, table.label_column))
+        self._left_cells(row, [c for c in cells if c.column < table.label_column])
+        if label_cell is not None and not beside:
+            self._section(label_cell)
+            return
+        if label_cell is not None and self._repeats_heading(cells):
+            for cell in cells:
+                self._result.mark(cell, "heading")
+            return
+        if label_cell is not None:
+            span = self._grid.span(label_cell)
+            state.label = self._marks.labels.of(label_cell.text)
+            state.label_row, state.label_bottom = row, span.bottom
+            self._result.mark(label_cell, "label")
+        elif not beside:
+            return
+        self._values(row, label_cell, beside)
+
+    def _repeats_heading(self, cells: list[Cell]) -> bool:
+        if not self._heading_rows:
+            return False
+        texts = [
+            (c.column, c.text)
+            for c in self._marks.rows.get(self._heading_rows[-1], ())
+            if c.column <= self._table.right
+        ]
+        return len(texts) > 1 and [(c.column, c.text) for c in cells] == texts
+
+    def _left_cells(self, row: int, cells: list[Cell]) -> None:
+        state = self._state
+        for cell in cells:
+            self._result.mark(cell, "label")
+            bands = find_bands(cell.text)
+            if is_band_label(cell.text) and isinstance(cell.raw, str):
+                state.side_band, state.side_name = bands.hull, cell.text
+                state.side_bottom = max(self._grid.span(cell).bottom, row)
+                if state.side_bottom == row:
+                    state.side_bottom = self._table.bottom
+                if bands.hull:
+                    draft = self._panels.first
+                    draft.bands.append(bands.hull)
+                    self._panels.claim_band(draft, cell, bands.hull, "row group")
+            elif state.side_name and isinstance(cell.raw, str):
+                state.side_band, state.side_name = None, ""
+        if state.side_name and row > state.side_bottom:
+            state.side_band, state.side_name = None, ""
+
+    def _section(self, cell: Cell) -> None:
+        """A label with nothing beside it: a group word, a band for the rows below, or a panel's title."""
+        state = self._state
+        state.label = None
+        if is_band_label(cell.text):
+            state.section_band, state.section_name = find_bands(cell.text).hull, cell.text
+            self._result.mark(cell, "heading")
+            if state.section_band:
+                draft = self._panels.first
+                draft.bands.append(state.section_band)
+                self._panels.claim_band(draft, cell, state.section_band, "heading of the rows below")
+            return
+        self._result.mark(cell, "heading")
+        state.section_band, state.section_name = None, ""
+        if self._names.is_title(cell.text):
+            state.pending_title = cell
+
+    def _values(self, row: int, label_cell: Cell | None, beside: list[Cell]) -> None:
+        state = self._state
+        extra = {role: self._cell_with_role(row, role) for role in ("unit", "condition", "tolerance", "band")}
+        if label_cell is None and row > state.label_bottom and not (extra["condition"] or extra["band"]):
+            state.label = None
+        label = state.label
+        if label is not None and not label and extra["condition"] is None:
+            self._unknown_row(label, beside)
+            return
+        if label is None:
+            self._unknown_row(Label(""), beside)
+            return
+        self._maybe_new_panel()
+        if label.parameters[0] in NAME_KEYS:
+            self._name_panel(label, beside)
+        condition = extra["condition"].text if extra["condition"] else ""
+        merged = self._with_condition(label, condition)
+        if not merged:
+            self._unknown_row(label, beside)
+            return
+        for cell in beside:
+            column = self._columns.get(cell.column)
+            if column is None:
+                continue
+            if column.role in VALUE_ROLES and cell is not extra["band"]:
+                self._claim(cell, column, merged, extra)
+            else:
+                self._result.mark(cell, "note" if column.role == "remark" else "label")
+        self._answers(row)
+
+    def _cell_with_role(self, row: int, role: str) -> Cell | None:
+        for index, column in self._columns.items():
+            if column.role == role and (role != "band" or column.band is None):
+                cell = self._grid.cells.get((row, index))
+                if cell is None and role in ("unit", "band"):
+                    cell = self._grid.covering(row, index)
+                if cell is not None:
+                    return cell
+        return None
+
+    def _with_condition(self, label: Label, condition: str) -> Label:
+        if not condition or is_band_label(condition):
+            return label
+        joined = self._marks.labels.of(f"{label.text} {condition}")
+        if not joined:
+            joined = self._marks.labels.of(f"{label.text}, {condition}")
+        return joined or label
+
+    def _claim(self, cell: Cell, column: Column, label: Label, extra: dict[str, Cell | None]) -> None:
+        state = self._state
+        draft = self._panels.of(column)
+        condition_cell, band_cell = extra["condition"], extra["band"]
+        condition = condition_cell.text if condition_cell else ""
+        band, name = self._band_of(cell, column, label, condition, band_cell)
+        if cell.row == self._panels.model_row and label.parameters[0] in NAME_KEYS:
+            self._result.mark(cell, "heading")
+            return
+        context = Context(
+            label=label,
+            unit=extra["unit"].text if extra["unit"] else column.unit,
+            condition=condition if not find_bands(condition).proved else find_bands(condition).rest,
+            statistic=column.statistic,
+            heading=state.label.text if state.label else "",
+            band_name=name,
+        )
+        claim = Claim(
+            cell, context, band, banded=band is not None or bool(name), tolerance=extra["tolerance"]
+        )
+        draft.claims.append(claim)
+        if band is not None and band not in draft.bands:
+            draft.bands.append(band)
+
+    def _band_of(
+        self, cell: Cell, column: Column, label: Label, condition: str, band_cell: Cell | None
+    ) -> tuple[Band | None, str]:
+        if label.bands.spans:
+            return label.bands.hull, ""
+        for text in filter(None, (band_cell.text if band_cell else "", condition)):
+            bands = find_bands(text)
+            if bands.spans and (bands.proved or is_band_label(text)):
+                return bands.hull, ""
+            if is_band_label(text):
+                return None, text
+        span = self._grid.span(cell)
+        others = [
+            c for i, c in self._columns.items() if span.left < i <= span.right and c.role in VALUE_ROLES
+        ]
+        if any(c.band != column.band or c.band_name != column.band_name for c in others):
+            return None, ""
+        if column.band or column.band_name:
+            return column.band, column.band_name if column.band is None else ""
+        state = self._state
+        if state.side_name:
+            return state.side_band, state.side_name if state.side_band is None else ""
+        return state.section_band, state.section_name if state.section_band is None else ""
+
+    def _maybe_new_panel(self) -> None:
+        """A title inside the table, over parameters the panel above already has, starts the next panel."""
+        state = self._state
+        if state.pending_title is None:
+            return
+        title, state.pending_title = state.pending_title, None
+        if self._panels.several:
+            return
+        current = self._panels.first
+        if not current.claims:
+            current.name, current.where, current.named = model_name(title.text), title, True
+            return
+        below = {
+            key
+            for row in range(title.row + 1, self._table.bottom + 1)
+            if (found := self._marks.headings.get((row, self._table.label_column)))
+            for key in found.parameters
+        }
+        if len(below & current.keys()) >= 2:
+            name = model_name(title.text)
+            self._panels.start(name, title)
+            state.section_band, state.section_name = None, ""
+
+    def _name_panel(self, label: Label, beside: list[Cell]) -> None:
+        """A row 'Model' beside one column of values names the panel, or the next one below it."""
+        cells = [c for c in beside if (k := self._columns.get(c.column)) and k.role in VALUE_ROLES]
+        texts = [c for c in cells if isinstance(c.raw, str)]
+        panels = self._panels
+        if panels.several or panels.model_row or len(texts) != 1 or label.parameters[0] != "model":
+            return
+        name = model_name(texts[0].text)
+        if panels.first.keys() - {"model", "manufacturer", "part_number", "revision"} and panels.named_by_row:
+            panels.start(name, texts[0])
+        elif panels.first.keys() <= {"manufacturer", "part_number", "revision"} or not panels.first.named:
+            panels.first.name, panels.first.where, panels.first.named = name, texts[0], True
+        panels.named_by_row = True
+
+    def _unknown_row(self, label: Label, beside: list[Cell]) -> None:
+        label_text = label.text.strip()
+        reason = (
+            f"heading '{label_text[:80]}' is not in the dictionary"
+            if label_text
+            else "value without a heading"
+        )
+        for cell in beside:
+            column = self._columns.get(cell.column)
+            if column is not None and column.role in VALUE_ROLES:
+                self._result.unread.append((cell, reason, label.suggestion))
+                self._result.mark(cell, "unread")
+            else:
+                self._result.mark(cell, "label")
+
+    def _answers(self, row: int) -> None:
+        """A declaration of compliance beside an offer is shown, never used as a figure."""
+        answers = [self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role == "compliance"]
+        offers = [self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role in VALUE_ROLES]
+        for said in filter(None, answers):
+            if not any(offers) and self._state.label and answer(said.text):
+                draft = self._panels.first
+                context = Context(self._state.label, heading=self._state.label.text)
+                draft.claims.append(Claim(said, context, None))

@@ -1,0 +1,80 @@
+"""The heading rows above a table with parameters down the side, and what its columns hold."""
+
+from __future__ import annotations
+
+from speccheck.intake.bands import is_band_label
+from speccheck.intake.claims import SheetResult
+from speccheck.intake.columns import Column, describe, heading_stack
+from speccheck.intake.grid import Cell
+from speccheck.intake.marks import Marks
+from speccheck.intake.regions import Down, cells_between
+from speccheck.intake.roles import settle_roles
+from speccheck.intake.words import column_role
+
+_REACH = 7
+_LONG_NOTE = 120
+
+
+def find_headings(marks: Marks, table: Down, result: SheetResult) -> list[int]:
+    """Rows of headings over the table; moves the table's top up to just below them."""
+    found: list[int] = []
+    for row in range(table.top - 1, max(0, table.top - 1 - _REACH), -1):
+        cells = cells_between(marks, row, table.left, table.right)
+        if any((row, cell.column) in result.roles for cell in cells):
+            break
+        beside = [cell for cell in cells if cell.column > table.label_column]
+        if beside and _is_heading_row(marks, table, row, cells, beside):
+            found.insert(0, row)
+        elif found:
+            break
+    if found:
+        table.top = min(table.top, found[-1] + 1)
+    return found
+
+
+def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], beside: list[Cell]) -> bool:
+    label = marks.grid.covering(row, table.label_column)
+    if any((c.row, c.column) in marks.lines for c in cells):
+        return False
+    if label is None or label.row != row or column_role(label.text):
+        return all(isinstance(c.raw, str | int | float) for c in beside)
+    if marks.is_heading(label):
+        return False
+    if any(column_role(c.text) or is_band_label(c.text) for c in beside):
+        return True
+    return len(beside) > 1 and all(isinstance(c.raw, str) for c in beside)
+
+
+def extend(marks: Marks, table: Down, result: SheetResult) -> None:
+    """Take in rows below the last known heading that continue the table."""
+    span = marks.grid.span(marks.grid.cells[table.bottom, table.label_column])
+    row = max(table.bottom, min(span.bottom, table.bottom + 60))
+    while True:
+        cells = cells_between(marks, row + 1, table.label_column, table.right)
+        if len(cells) < 2 or any((c.row, c.column) in result.roles for c in cells):
+            break
+        if cells[0].column == table.label_column and len(cells[0].text) > _LONG_NOTE:
+            break
+        row += 1
+    table.bottom = row
+
+
+def describe_columns(
+    marks: Marks, table: Down, heading_rows: list[int], result: SheetResult
+) -> dict[int, Column]:
+    """The columns beside the labels, with roles settled by heading words and then by content."""
+    used: dict[int, list[Cell]] = {}
+    for row in heading_rows:
+        for cell in cells_between(marks, row, table.label_column + 1, table.right):
+            used.setdefault(cell.column, [])
+        for cell in cells_between(marks, row, table.left, table.right):
+            result.mark(cell, "heading")
+    for row in range(table.top, table.bottom + 1):
+        for cell in cells_between(marks, row, table.label_column + 1, table.right):
+            used.setdefault(cell.column, []).append(cell)
+    columns = {}
+    for index in sorted(used):
+        stack = heading_stack(marks.grid, heading_rows, index, table.label_column + 1)
+        columns[index] = describe(index, stack, marks.labels)
+    settle_roles(columns, used)
+    return columns

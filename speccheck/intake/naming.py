@@ -1,0 +1,124 @@
+"""Which panel a table speaks of: titles, sheet names, model cells."""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass
+
+from speccheck.intake.claims import SheetResult
+from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.marks import Marks
+from speccheck.intake.regions import Down
+from speccheck.intake.words import fold, is_generic_sheet_name, title_prefixes
+
+_CODE = re.compile(r"(?<![\w.])(?=[\w./+-]*\d)(?=[\w./+-]*[A-Za-z])[A-Za-z0-9][\w./+-]{2,}(?![\w])")
+_NOT_A_CODE = re.compile(
+    r"^(?:\d+(?:[.,]\d+)?(?:mhz|ghz|dbi|dbd|db|mm|cm|m|kg|w|kw|n|v|deg|port|ports|x\d.*)|[nb]\d{1,3}|\d+t\d+r|ip\d\d|rev\.?\w*|v\d.*|[245]g|ts\d+.*|\d{4}-\d\d-\d\d|\d+x\d+\w*|q[1-4])$",
+    re.IGNORECASE,
+)
+_PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—]\s+")
+_DESCRIBES = re.compile(
+    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|datenblatt|"
+    r"fiche|ficha|scheda|hoja|karta|donnees|datos|dati|dados|dane|gegevens|technische)\b"
+)
+_LONG_TITLE = 90
+_LONG_NAME = 40
+
+
+@dataclass(frozen=True, slots=True)
+class Title:
+    """A name found for a panel, the cell it stands in, and whether it is surely a name."""
+
+    name: str
+    cell: Cell
+    certain: bool
+
+
+def model_name(text: str) -> str:
+    """The panel's name in a title or model cell: 'Type Kaldora 12S' is Kaldora 12S.
+
+    Without a word such as 'Type', a title of several words is named by the code in it.
+    """
+    words = " ".join(text.split())
+    stripped = _without_prefix(words, "prefix")
+    plain = _without_prefix(stripped, "weak")
+    parts = [part for part in _PARTS.split(plain) if part and not _DESCRIBES.search(fold(part))]
+    name = parts[0] if parts else plain
+    codes = _codes(name)
+    if stripped == words and codes and len(name.split()) > 2:
+        return codes[-1]
+    return name
+
+
+def _codes(text: str) -> list[str]:
+    return [m for m in _CODE.findall(text) if not _NOT_A_CODE.match(m)]
+
+
+def _without_prefix(words: str, strength: str) -> str:
+    folded = fold(words)
+    best = 0
+    for prefix in title_prefixes(strength):
+        if folded.startswith(prefix) and len(prefix) > best:
+            after = words[len(prefix) : len(prefix) + 1]
+            if after in (" ", ":", "-", "–") and len(fold(words[: len(prefix)])) == len(prefix):
+                best = len(prefix)
+    return (words[best:].strip(" :–-—") if best else words) or words
+
+
+def _score(text: str, sheet: str) -> int:
+    """How surely a text is a panel's title; 0 when it is none."""
+    words = " ".join(text.split())
+    if len(words) > _LONG_TITLE:
+        return 0
+    if len(sheet) > 2 and not is_generic_sheet_name(sheet) and fold(sheet) in fold(words):
+        return 4
+    stripped = _without_prefix(words, "prefix")
+    if stripped != words and len(stripped) <= _LONG_NAME and _codes(stripped):
+        return 3
+    if _codes(words):
+        return 2
+    return 1 if stripped != words and len(stripped.split()) <= 3 else 0
+
+
+class Names:
+    """Finds names on one sheet, with the file's name to fall back on."""
+
+    def __init__(self, grid: Grid, stem: str) -> None:
+        self._grid, self._stem = grid, stem
+
+    def is_title(self, text: str) -> bool:
+        """Whether a text reads as the title of a panel."""
+        return _score(text, self._grid.name.strip()) > 0
+
+    def title_for(self, table: Down, heading_rows: list[int], marks: Marks, result: SheetResult) -> Title:
+        """The name of the one panel a table is about."""
+        top = heading_rows[0] if heading_rows else table.top
+        return self.above(top, table.label_column, table.right, marks, result)
+
+    def above(self, top: int, left: int, right: int, marks: Marks, result: SheetResult) -> Title:
+        """The nearest title above a row, else the sheet's name, else the file's."""
+        first = Cell(max(top, 1), left, self._grid.name, self._grid.name)
+        sheet = self._grid.name.strip()
+        candidates: list[Cell] = []
+        for row in range(top - 1, max(0, top - 25), -1):
+            cells = [c for c in marks.rows.get(row, ()) if c.column <= right]
+            if any(
+                (c.row, c.column) in result.roles and result.roles[c.row, c.column] != "note" for c in cells
+            ):
+                break
+            near = [c for c in cells if c.column >= left - 2] or cells
+            candidates += [c for c in near if isinstance(c.raw, str) and not marks.is_heading(c)]
+        scores = [_score(c.text, sheet) for c in candidates]
+        if any(scores):
+            return self._taken(candidates[scores.index(max(scores))], result)
+        if not is_generic_sheet_name(sheet):
+            return Title(model_name(sheet), first, True)
+        short = [c for c in candidates if len(c.text) <= 40 and len(candidates) <= 2]
+        if short:
+            result.mark(short[-1], "heading")
+            return Title(model_name(short[-1].text), short[-1], False)
+        return Title(self._stem, first, False)
+
+    def _taken(self, cell: Cell, result: SheetResult) -> Title:
+        result.mark(cell, "heading")
+        return Title(model_name(cell.text), cell, True)

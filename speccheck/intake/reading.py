@@ -1,0 +1,232 @@
+"""Claims to readings: the cell read by its parameter's kind, converted, with how it was recognised."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Iterator
+from dataclasses import dataclass, field
+
+from speccheck.dictionary import Parameter, parameters
+from speccheck.intake.claims import Claim, Context
+from speccheck.intake.grid import Raw
+from speccheck.quantities import CellContent, DecimalHabit, Quantity, UnknownUnitError, read_cell, settle
+from speccheck.records import CellRef, Reading, Sense, Statement, Status, Unread
+from speccheck.text import plain
+
+_MAX_WORDS = re.compile(
+    r"(?<![a-z])(?:max(?:imum|imal\w*|i|\.)?|p\s?max|massim\w+|m[áa]xim\w+|maks\w*)(?![a-z])", re.IGNORECASE
+)
+_MIN_WORDS = re.compile(
+    r"(?<![a-z])(?:min(?:imum|imal\w*|\.)?|m[íi]nim\w+|at least|mindest\w*)(?![a-z])", re.IGNORECASE
+)
+_AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
+_IDENTITY_UNITS = ("", "–", "-", "—")
+
+
+@dataclass(slots=True)
+class Outcome:
+    """What became of one claim."""
+
+    readings: list[Reading] = field(default_factory=list)
+    statement: Statement | None = None
+    unread: Unread | None = None
+    footnotes: tuple[str, ...] = ()
+
+
+@dataclass(frozen=True, slots=True)
+class _Figure:
+    """A quantity settled in its parameter's unit: all of a reading that does not depend on place and band."""
+
+    parameter: str
+    quantity: Quantity
+    unit: str
+    sense: Sense
+    statistic: str
+    recognised: str
+    condition: str
+
+
+_Understood = tuple[CellContent, tuple[_Figure, ...], str]
+
+
+class Reader:
+    """Reads claims of one file; equal cells under equal headings are understood once."""
+
+    def __init__(self, file: str, habit: DecimalHabit) -> None:
+        self._file, self._habit = file, habit
+        self._known: dict[tuple[Context, type, Raw, str], _Understood] = {}
+        self._refs: dict[tuple[str, str], CellRef] = {}
+
+    def where(self, sheet: str, address: str) -> CellRef:
+        """The reference of a cell, made once."""
+        key = (sheet, address)
+        ref = self._refs.get(key)
+        if ref is None:
+            ref = self._refs[key] = CellRef(self._file, sheet, address)
+        return ref
+
+    def read(self, claim: Claim, sheet: str) -> Outcome:
+        """Readings of one claim, or its statement, or why it was not read."""
+        cell, context = claim.cell, claim.context
+        where = self.where(sheet, cell.address)
+        if cell.fault:
+            return Outcome(
+                unread=Unread(where=where, text=cell.text, reason=cell.fault, suggestion=_remedy(cell.fault))
+            )
+        raw: Raw = cell.raw if claim.text is None else claim.text
+        key = (context, type(raw), raw, cell.number_format)
+        known = self._known.get(key)
+        if known is None:
+            known = self._known[key] = self._understand(raw, context, cell.number_format)
+        content, figures, trouble = known
+        first = context.label.parameters[0]
+        if content.status is not None:
+            statement = Statement(
+                where=where,
+                parameter=first,
+                raw=cell.text,
+                status=Status(content.status),
+                band=claim.band,
+                heading=context.heading,
+            )
+            return Outcome(statement=statement, footnotes=content.footnotes)
+        if not figures:
+            reason = trouble or f"no {parameters()[first].label} could be read from it"
+            return Outcome(
+                unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
+            )
+        readings = [
+            Reading(
+                where=where,
+                parameter=f.parameter,
+                raw=cell.text,
+                value=f.quantity.value,
+                unit=f.unit,
+                band=claim.band,
+                tolerance=f.quantity.tolerance,
+                sense=f.sense,
+                statistic=f.statistic,
+                stated_value=f.quantity.stated_value,
+                stated_unit=f.quantity.stated_unit,
+                condition=f.condition,
+                at=f.quantity.at,
+                heading=context.heading,
+                recognised=f.recognised,
+                alternatives=f.quantity.alternatives,
+            )
+            for f in figures
+        ]
+        unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
+        return Outcome(readings, unread=unread, footnotes=content.footnotes)
+
+    def _understand(
+        self, raw: Raw, context: Context, number_format: str
+    ) -> _Understood:
+        label = context.label
+        keys = label.parameters
+        table = parameters()
+        unit, source = _unit(context)
+        first = table[keys[0]]
+        content = read_cell(
+            raw,
+            kind=first.kind if len(keys) == 1 else "size",
+            unit=unit,
+            decimal_comma=self._habit.comma,
+            number_format=number_format,
+            expected=first.unit,
+            plausible=first.plausible,
+            possible=first.possible,
+        )
+        trouble = ""
+        figures = []
+        for parameter, quantity in _paired(keys, content.quantities):
+            try:
+                figures.append(self._figure(table[parameter], quantity, context, source, raw, content))
+            except UnknownUnitError as error:
+                trouble = str(error)
+        if len(keys) > 1 and content.quantities and not figures:
+            trouble = f"{len(content.quantities)} figures for {len(keys)} parameters ({', '.join(keys)})"
+        return content, tuple(figures), trouble
+
+    def _figure(
+        self, parameter: Parameter, quantity: Quantity, context: Context, source: str, raw: Raw, content: CellContent
+    ) -> _Figure:
+        settled = settle(
+            quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
+        )
+        statistic = settled.statistic or context.statistic
+        heading = context.label.text
+        sense = Sense(settled.sense)
+        if sense is Sense.NOMINAL and not isinstance(settled.value, str | tuple):
+            sense = _sense_of_words(f"{context.heading} {heading} {context.condition}", context.statistic)
+        condition = "; ".join(
+            dict.fromkeys(
+                filter(
+                    None, (context.band_name, context.label.condition, context.condition, settled.condition)
+                )
+            )
+        )
+        how = f"heading '{context.heading or heading}' is {parameter.label}"
+        if quantity.unit or parameter.unit:
+            how += f"; {_unit_told(quantity, source, parameter)}"
+        if self._habit.comma is not None and _AMBIGUOUS.search(str(raw)) and not quantity.alternatives:
+            how += f"; decimal sign settled by the file: {self._habit.why}"
+        how = "; ".join((how, *content.notes))
+        if _substantial(content.rest):
+            how += f"; beside the figure stands '{plain(content.rest, 80)}'"
+        return _Figure(
+            parameter=parameter.key,
+            quantity=settled,
+            unit=settled.unit or parameter.unit,
+            sense=sense,
+            statistic=statistic,
+            recognised=how,
+            condition=condition,
+        )
+
+
+def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator[tuple[str, Quantity]]:
+    table = parameters()
+    if len(keys) == 1:
+        for quantity in quantities:
+            yield (quantity.parameter if quantity.parameter in table else keys[0]), quantity
+    elif len(quantities) == len(keys):
+        yield from zip(keys, quantities, strict=True)
+
+
+def _unit(context: Context) -> tuple[str, str]:
+    for unit, source in ((context.unit, "unit column"), (context.label.unit, "heading")):
+        if unit.strip() not in _IDENTITY_UNITS:
+            return unit, source
+    return "", ""
+
+
+def _unit_told(quantity: Quantity, source: str, parameter: Parameter) -> str:
+    unit = quantity.unit or parameter.unit
+    if not quantity.unit:
+        return f"no unit given, {unit} taken"
+    return f"unit {unit} from the {source or 'cell'}"
+
+
+def _sense_of_words(words: str, statistic: str) -> Sense:
+    if statistic in ("min", "max"):
+        return Sense(statistic)
+    smallest, largest = bool(_MIN_WORDS.search(words)), bool(_MAX_WORDS.search(words))
+    if smallest != largest:
+        return Sense.MIN if smallest else Sense.MAX
+    return Sense.NOMINAL
+
+
+def _substantial(rest: str) -> bool:
+    return sum(letter.isalnum() for letter in rest) >= 2
+
+
+def _example(key: str) -> str:
+    examples = parameters()[key].examples
+    return f"such as '{examples[0].cell}'" if examples else ""
+
+
+def _remedy(fault: str) -> str:
+    if fault.startswith("formula"):
+        return "open the file in a spreadsheet program and save it, so that results are stored"
+    return "ask the bidder for the figure"

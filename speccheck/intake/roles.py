@@ -1,0 +1,71 @@
+"""Roles of columns that no heading word settles, judged by what stands in them."""
+
+from __future__ import annotations
+
+from speccheck.intake.columns import Column
+from speccheck.intake.grid import Cell
+from speccheck.intake.labels import is_unit
+from speccheck.intake.words import answer
+
+
+def settle_roles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
+    """Give each column without a role the one its cells speak for; `cells` holds them by column."""
+    for index, column in columns.items():
+        if not column.role and not column.band and not column.band_name:
+            column.role = _by_content(column, cells.get(index, []))
+    _band_columns(columns, cells)
+    _conditions_before_units(columns, cells)
+    _offer_beside_requirement(columns)
+    if not any(c.role in ("", "offered", "panel", "typical", "minimum", "maximum") for c in columns.values()):
+        for column in columns.values():
+            if column.role in ("condition", "compliance", "group"):
+                column.role = ""
+                break
+
+
+def _by_content(column: Column, cells: list[Cell]) -> str:
+    if not cells:
+        return ""
+    texts = [c.text for c in cells if isinstance(c.raw, str)]
+    units = sum(is_unit(text) for text in texts)
+    dashes = sum(text.strip() in ("-", "–", "—") for text in texts)
+    if units - dashes >= 1 and units >= 0.6 * len(cells) and not column.words:
+        return "unit"
+    answers = sum(bool(answer(text)) for text in texts)
+    if answers >= 2 and answers >= 0.7 * len(cells) and not column.words:
+        return "compliance"
+    wordy = sum(len(text) > 25 and not any(letter.isdigit() for letter in text) for text in texts)
+    if wordy >= 0.6 * len(cells) and not column.words:
+        return "remark"
+    return ""
+
+
+def _band_columns(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
+    """A column headed 'Band' holds the band of its row, unless it is the only column of values."""
+    for index, column in columns.items():
+        if column.role == "band" and not cells.get(index):
+            column.role = ""
+
+
+def _conditions_before_units(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
+    """Between the headings and the unit column stand conditions, when values follow the units."""
+    units = [index for index, column in columns.items() if column.role == "unit"]
+    if not units:
+        return
+    after = [i for i, c in columns.items() if i > units[0] and c.role == "" and cells.get(i)]
+    before = [i for i, c in columns.items() if i < units[0] and c.role == "" and cells.get(i)]
+    if not after:
+        return
+    for index in before:
+        texts = [c for c in cells[index] if isinstance(c.raw, str)]
+        if not columns[index].words and len(texts) == len(cells[index]):
+            columns[index].role = "condition"
+
+
+def _offer_beside_requirement(columns: dict[int, Column]) -> None:
+    """Where a column is named as the offer, limits given beside it as minimum or maximum are the buyer's."""
+    roles = {column.role for column in columns.values()}
+    if "offered" in roles and "required" not in roles:
+        for column in columns.values():
+            if column.role in ("minimum", "maximum") and not column.words:
+                column.role = "required"

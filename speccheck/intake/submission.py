@@ -1,0 +1,133 @@
+"""A bidder's file, the whole way: opened, laid out, read, put together by panel."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import dataclass
+from datetime import date, time
+from pathlib import Path
+
+from speccheck.errors import UnusableInputError
+from speccheck.intake.claims import SheetResult
+from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.labels import Labels
+from speccheck.intake.layout import read_layout
+from speccheck.intake.limits import Limits
+from speccheck.intake.notices import book_notices, footnotes, grid_notices, note_notices
+from speccheck.intake.opening import Book, open_book
+from speccheck.intake.panels import Builder, joined
+from speccheck.intake.reading import Reader
+from speccheck.quantities import decimal_habit
+from speccheck.records import MirrorCell, MirrorSheet, Notice, Submission, Unread
+
+
+@dataclass(frozen=True, slots=True)
+class Account:
+    """A submission and what became of each filled cell: sheet, row and column to a word."""
+
+    submission: Submission
+    roles: Mapping[tuple[str, int, int], str]
+
+
+def read_submission(
+    path: str | Path, *, headings: Mapping[str, str] | None = None, limits: Limits | None = None
+) -> Submission:
+    """Read a bid: what it says of each panel, what was not understood, what one must know of the file.
+
+    Parameters
+    ----------
+    path : workbook (.xlsx, .xlsm) or delimited text
+    headings : the buyer's own headings and the parameters they mean
+    limits : ceilings on the input
+
+    Raises
+    ------
+    UnusableInputError : the file cannot be used at all
+    """
+    return read_account(path, headings=headings, limits=limits).submission
+
+
+def read_account(
+    path: str | Path, *, headings: Mapping[str, str] | None = None, limits: Limits | None = None
+) -> Account:
+    """As `read_submission`, with what became of every filled cell."""
+    book = open_book(path, limits)
+    labels = Labels(headings or {})
+    stem = Path(path).stem
+    visible = [grid for grid in book.grids if not grid.hidden]
+    results = [read_layout(grid, labels, stem) for grid in visible]
+    drafts = joined([draft for result in results for draft in result.drafts])
+    if not drafts:
+        raise _no_table(book)
+    texts = (cell.raw for grid in visible for cell in grid.cells.values() if isinstance(cell.raw, str))
+    reader = Reader(book.file, decimal_habit(texts))
+    builder = Builder(reader, {result.grid.name: footnotes(result) for result in results})
+    built = [builder.build(draft) for draft in drafts]
+    notices: list[Notice] = book_notices(book, reader.where)
+    for grid in book.grids:
+        notices += grid_notices(grid, reader.where)
+    unread: list[Unread] = []
+    roles: dict[tuple[str, int, int], str] = {}
+    for result in results:
+        notices += note_notices(result, labels, reader.where)
+        notices += [
+            Notice(where=reader.where(result.grid.name, c.address), text=t) for c, t in result.notices
+        ]
+        unread += _layout_unread(result, reader)
+        roles.update({(result.grid.name, row, column): role for (row, column), role in result.roles.items()})
+    for piece in built:
+        unread += piece.unread
+        roles.update(piece.roles)
+    submission = Submission(
+        file=book.file,
+        sha256=book.sha256,
+        size_bytes=book.size_bytes,
+        panels=tuple(piece.panel for piece in built),
+        unread=tuple(unread),
+        notices=tuple(notices),
+        mirror=tuple(_mirror(grid) for grid in book.grids),
+    )
+    return Account(submission, roles)
+
+
+def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
+    listed = [
+        Unread(
+            where=reader.where(result.grid.name, c.address), text=c.text, reason=reason, suggestion=nearest
+        )
+        for c, reason, nearest in result.unread
+    ]
+    known = {(c.row, c.column) for c, _, _ in result.unread}
+    for place, role in result.roles.items():
+        cell = result.grid.cells[place]
+        if cell.fault and role != "reading" and place not in known:
+            where = reader.where(result.grid.name, cell.address)
+            listed.append(Unread(where=where, text=cell.text, reason=cell.fault))
+    return listed
+
+
+def _mirror(grid: Grid) -> MirrorSheet:
+    cells = {**grid.cells, **grid.hidden_cells}
+    return MirrorSheet(
+        name=grid.name,
+        hidden=grid.hidden,
+        cells=tuple(
+            MirrorCell(c.address, _plain_value(c), c.formula) for c in map(cells.__getitem__, sorted(cells))
+        ),
+    )
+
+
+def _plain_value(cell: Cell) -> str | float | None:
+    if isinstance(cell.raw, date | time | bool) or cell.raw is None:
+        return cell.text
+    return cell.raw
+
+
+def _no_table(book: Book) -> UnusableInputError:
+    names = ", ".join(f"'{grid.name}'" for grid in book.grids[:5])
+    return UnusableInputError(
+        book.file,
+        found=f"no heading of the dictionary with a figure beside or below it (sheets {names})",
+        expected="a table of panel parameters such as 'Gain', 'Frequency range', 'Height'",
+        remedy="check that the right file was sent, or add the house's headings to the tender workbook",
+    )
