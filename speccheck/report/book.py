@@ -9,90 +9,20 @@ import io
 import re
 import zipfile
 from collections.abc import Mapping, Sequence
-from dataclasses import dataclass, field
-from datetime import datetime
+from dataclasses import dataclass
 from pathlib import Path
 from typing import Any
 
 from openpyxl import Workbook
-from openpyxl.comments import Comment
-from openpyxl.styles import Protection
 from openpyxl.utils import get_column_letter
-from openpyxl.worksheet.datavalidation import DataValidation
-from openpyxl.worksheet.dimensions import ColumnDimension
-from openpyxl.worksheet.worksheet import Worksheet
 from openpyxl.writer.excel import ExcelWriter
 
 from speccheck.report.cells import Content, Rich, StyleIds, hyperlinks, sheet_data
-from speccheck.report.looks import register_looks, status_rules
-from speccheck.text import plain
-
-LAST_COLUMN = 16_384
-SPARE_ROWS = 500
-"""Rows below a table of entries for which pick-lists and number checks hold too."""
-
-UNDATED = datetime(2000, 1, 1)  # noqa: DTZ001 - the file format has no zone
-"""Date of a workbook whose content has none, so that the same content gives the same bytes."""
+from speccheck.report.frames import frame_grid, frame_table, row_heights, set_print, set_properties
+from speccheck.report.looks import register_looks
+from speccheck.report.sheets import Grid, Imprint, Table
 
 Row = Sequence[tuple[int, Content, str]]
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class NumberCheck:
-    """A range [in the heading's unit] outside which a person is warned, not stopped."""
-
-    low: float
-    high: float
-    message: str
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Column:
-    """One column of a table: its heading, width in characters, look and helps."""
-
-    heading: str
-    width: float = 12
-    look: str = "text"
-    note: str = ""
-    status: Sequence[str] = ()
-    choices: str = ""
-    check: NumberCheck | None = None
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Table:
-    """A sheet with one header row and one record a row; `frozen` columns stay in view."""
-
-    name: str
-    columns: Sequence[Column]
-    rows: Sequence[Sequence[Content]]
-    frozen: int = 1
-    spare_rows: int = 0
-    sortable: bool = True
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Grid:
-    """A sheet whose cells keep the addresses of another sheet: row, then column, then content.
-
-    `notes` are shown beside the cell of (row, column); nothing may stand in a note only.
-    """
-
-    name: str
-    cells: Mapping[int, Mapping[int, Content]]
-    widths: Mapping[int, float] = field(default_factory=dict)
-    notes: Mapping[tuple[int, int], str] = field(default_factory=dict)
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Imprint:
-    """What a workbook says of itself: document properties, footer, paper."""
-
-    title: str
-    subject: str = ""
-    footer: str = ""
-    paper: str = "A4"
-    moment: datetime = UNDATED
 
 
 def book_bytes(sheets: Sequence[Table | Grid], imprint: Imprint) -> bytes:
@@ -103,14 +33,15 @@ def book_bytes(sheets: Sequence[Table | Grid], imprint: Imprint) -> bytes:
     bodies: dict[str, _Body] = {}
     for number, sheet in enumerate(sheets, start=1):
         worksheet = workbook.create_sheet(sheet.name)
-        rows = _table_rows(sheet) if isinstance(sheet, Table) else _grid_rows(sheet)
         if isinstance(sheet, Table):
-            _frame_table(worksheet, sheet)
+            body = _Body(_table_rows(sheet), row_heights(sheet), styles)
+            frame_table(worksheet, sheet)
         else:
-            _frame_grid(worksheet, sheet)
-        _set_print(worksheet, imprint, _extent(rows), repeat_header=isinstance(sheet, Table))
-        bodies[f"xl/worksheets/sheet{number}.xml"] = _Body(rows, styles)
-    _set_properties(workbook, imprint)
+            body = _Body(_grid_rows(sheet), {}, styles)
+            frame_grid(worksheet, sheet)
+        set_print(worksheet, imprint, _print_area(sheet, body), repeat_header=isinstance(sheet, Table))
+        bodies[f"xl/worksheets/sheet{number}.xml"] = body
+    set_properties(workbook, imprint)
     buffer = io.BytesIO()
     ExcelWriter(workbook, _SteadyArchive(buffer, bodies)).save()
     return buffer.getvalue()
@@ -132,102 +63,10 @@ def _grid_rows(grid: Grid) -> dict[int, Row]:
     }
 
 
-def _extent(rows: Mapping[int, Row]) -> str:
-    last_column = max((column for row in rows.values() for column, _, _ in row), default=1)
-    return f"A1:{get_column_letter(last_column)}{max(rows, default=1)}"
-
-
-def _frame_table(worksheet: Worksheet, table: Table) -> None:
-    last_row = max(len(table.rows) + 1 + table.spare_rows, 2)
-    worksheet.freeze_panes = worksheet.cell(2, table.frozen + 1)
-    worksheet.auto_filter.ref = f"A1:{get_column_letter(len(table.columns))}{max(len(table.rows) + 1, 2)}"
-    for number, column in enumerate(table.columns, start=1):
-        letter = get_column_letter(number)
-        worksheet.column_dimensions[letter].width = column.width
-        worksheet.column_dimensions[letter].protection = Protection(locked=False)
-        if column.note:
-            worksheet.cell(1, number).comment = _comment(column.note)
-        cells = f"{letter}2:{letter}{last_row}"
-        for rule in status_rules(column.status):
-            worksheet.conditional_formatting.add(cells, rule)
-        _add_helps(worksheet, column, cells)
-    beyond = ColumnDimension(
-        worksheet, index=get_column_letter(len(table.columns) + 1), width=13, min=len(table.columns) + 1
-    )
-    beyond.max = LAST_COLUMN
-    beyond.protection = Protection(locked=False)
-    worksheet.column_dimensions[beyond.index] = beyond
-    _lock_headings(worksheet, sortable=table.sortable)
-
-
-def _add_helps(worksheet: Worksheet, column: Column, cells: str) -> None:
-    if column.choices:
-        choice = DataValidation(type="list", formula1=column.choices, allow_blank=True, errorStyle="warning")
-        choice.showErrorMessage = True
-        choice.error = "This is not on the list of the sheet Lists. Keep it all the same?"
-        choice.errorTitle = column.heading[:32]
-        worksheet.add_data_validation(choice)
-        choice.add(cells)
-    if column.check:
-        check = DataValidation(
-            type="decimal",
-            operator="between",
-            formula1=repr(column.check.low),
-            formula2=repr(column.check.high),
-            allow_blank=True,
-            errorStyle="warning",
-            showErrorMessage=True,
-            showInputMessage=True,
-        )
-        check.error = check.prompt = column.check.message[:225]
-        check.errorTitle = check.promptTitle = column.heading[:32]
-        worksheet.add_data_validation(check)
-        check.add(cells)
-
-
-def _comment(text: str) -> Comment:
-    lines = 1 + len(text) // 38 + text.count("\n")
-    return Comment(text, "speccheck", height=24 + 16 * lines, width=260)
-
-
-def _lock_headings(worksheet: Worksheet, *, sortable: bool) -> None:
-    """Protect the sheet without password; only headings are locked, all work on the rest is allowed."""
-    protection = worksheet.protection
-    protection.sheet = True
-    for freedom in ("formatCells", "formatColumns", "formatRows", "insertRows", "deleteRows"):
-        setattr(protection, freedom, False)
-    for freedom in ("insertColumns", "deleteColumns", "insertHyperlinks", "autoFilter", "pivotTables"):
-        setattr(protection, freedom, False)
-    protection.sort = not sortable
-
-
-def _frame_grid(worksheet: Worksheet, grid: Grid) -> None:
-    for number, width in grid.widths.items():
-        worksheet.column_dimensions[get_column_letter(number)].width = width
-    worksheet.freeze_panes = "B2"
-    for (row, number), text in grid.notes.items():
-        worksheet.cell(row, number).comment = _comment(plain(text, 500))
-
-
-def _set_print(worksheet: Worksheet, imprint: Imprint, area: str, *, repeat_header: bool) -> None:
-    worksheet.page_setup.orientation = "landscape"
-    worksheet.page_setup.paperSize = 1 if imprint.paper.lower() == "letter" else 9
-    worksheet.page_setup.fitToWidth, worksheet.page_setup.fitToHeight = 1, 0
-    worksheet.sheet_properties.pageSetUpPr.fitToPage = True
-    worksheet.print_area = area
-    if repeat_header:
-        worksheet.print_title_rows = "1:1"
-    worksheet.oddFooter.left.text = plain(imprint.footer, 120).replace("&", "&&")
-    worksheet.oddFooter.center.text = "&A, page &P of &N"
-    worksheet.oddFooter.right.text = "&F, printed &D &T"
-
-
-def _set_properties(workbook: Workbook, imprint: Imprint) -> None:
-    properties = workbook.properties
-    properties.title, properties.subject = plain(imprint.title, 200), plain(imprint.subject, 200)
-    properties.creator = properties.lastModifiedBy = "speccheck"
-    properties.language = "en"
-    properties.created = properties.modified = imprint.moment
+def _print_area(sheet: Table | Grid, body: _Body) -> str:
+    if isinstance(sheet, Table) and sheet.printed:
+        return f"A1:{get_column_letter(sheet.printed)}{max(body.rows)}"
+    return body.extent
 
 
 @dataclass(frozen=True, slots=True)
@@ -235,12 +74,20 @@ class _Body:
     """The rows of one sheet, to be put into the frame that openpyxl wrote."""
 
     rows: Mapping[int, Row]
+    heights: Mapping[int, float]
     styles: StyleIds
 
+    @property
+    def extent(self) -> str:
+        """The range that holds everything, from A1."""
+        last = max((column for row in self.rows.values() for column, _, _ in row), default=1)
+        return f"A1:{get_column_letter(last)}{max(self.rows, default=1)}"
+
     def put_into(self, frame: str) -> str:
-        data = sheet_data(self.rows, self.styles)
+        """Return the sheet with rows and links; raises ValueError where `frame` is no sheet."""
+        data = sheet_data(self.rows, self.heights, self.styles)
         head, tail = _SHEET_DATA.split(frame, maxsplit=1)
-        head = _DIMENSION.sub(f'<dimension ref="{_extent(self.rows)}"', head)
+        head = _DIMENSION.sub(f'<dimension ref="{self.extent}"', head)
         before, found, after = tail.partition("<pageMargins")
         return f"{head}{data}{before}{hyperlinks(self._links())}{found}{after}"
 

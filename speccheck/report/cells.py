@@ -63,12 +63,18 @@ def xml_attribute(text: str) -> str:
     return xml_text(text).replace('"', "&quot;").replace("\n", "&#10;")
 
 
-def sheet_data(rows: Mapping[int, Iterable[tuple[int, Content, str]]], styles: StyleIds) -> str:
-    """Return the ``sheetData`` element; each row is (column number, content, look) in column order."""
+def sheet_data(
+    rows: Mapping[int, Iterable[tuple[int, Content, str]]], heights: Mapping[int, float], styles: StyleIds
+) -> str:
+    """Return the ``sheetData`` element; each row is (column number, content, look) in column order.
+
+    `heights` [points] is what a row starts with; a program may fit it anew.
+    """
     letters = [get_column_letter(n) for n in range(1, _widest(rows) + 1)]
     parts = ["<sheetData>"]
     for number, row in rows.items():
-        parts.append(f'<row r="{number}">')
+        height = f' ht="{heights[number]:g}"' if number in heights else ""
+        parts.append(f'<row r="{number}"{height}>')
         parts += [_cell(f"{letters[column - 1]}{number}", item, look, styles) for column, item, look in row]
         parts.append("</row>")
     parts.append("</sheetData>")

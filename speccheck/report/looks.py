@@ -30,6 +30,7 @@ UNREAD_FILL = "F3E8FD"
 ENTRY_FILL = "FFFDF0"
 EXAMPLE_INK = "52606D"
 
+TEXTS = frozenset({"text", "wrap", "bold", "link", "heading", "example"})
 NUMBER_FORMATS = {
     "number": "General",
     "number0": "0",
@@ -61,8 +62,13 @@ def _register(cell: Cell, name: str, *, quoted: bool) -> int:
     fill = HEADING_FILL if name == "heading" else FILLS.get(name, ENTRY_FILL if name == "entry-date" else "")
     cell.font = _font(name)
     cell.fill = PatternFill("solid", start_color=fill) if fill else PatternFill()
-    wrapped = name in {"wrap", "heading"}
-    cell.alignment = Alignment(vertical="center" if name == "heading" else "top", wrap_text=wrapped)
+    written = name in TEXTS
+    cell.alignment = Alignment(
+        horizontal="left" if written else None,
+        indent=1 if written else 0,
+        vertical="center" if name == "heading" else "top",
+        wrap_text=name in {"wrap", "heading"},
+    )
     line = Side(style="thin", color="D9E2EC")
     cell.border = Border(bottom=line, right=line) if fill else Border(bottom=line)
     cell.protection = Protection(locked=name == "heading")
@@ -88,7 +94,7 @@ def _number_format(name: str) -> str:
         return NUMBER_FORMATS[name]
     if name in {"date", "entry-date"}:
         return "yyyy-mm-dd"
-    if name in {"text", "wrap", "bold", "link", "heading", "example"}:
+    if name in TEXTS:
         return "@"
     return "General"
 

@@ -10,13 +10,14 @@ from pathlib import Path
 
 from speccheck.atomic import write_bytes_atomic
 from speccheck.records import Assessment
-from speccheck.report.book import UNDATED, Grid, Imprint, Table, book_bytes
+from speccheck.report.book import book_bytes
 from speccheck.report.questions import collect_questions
 from speccheck.report.review_front import lists, read_me, rules_used
 from speccheck.report.review_inputs import inputs_as_read, mirror_grids
 from speccheck.report.review_places import place_everything
 from speccheck.report.review_recomputed import recomputed
 from speccheck.report.review_tables import findings, question_list, requirements, summary
+from speccheck.report.sheets import UNDATED, Grid, Imprint, Table
 from speccheck.report.view import label
 
 

@@ -5,10 +5,10 @@ from __future__ import annotations
 from collections.abc import Mapping, Sequence
 
 from speccheck.records import Assessment, Compliance, Fit, Outcome
-from speccheck.report.book import Column, Table
 from speccheck.report.cells import Content, Rich
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES
 from speccheck.report.review_places import Places
+from speccheck.report.sheets import Column, Table
 from speccheck.report.view import fingerprint, label
 
 
@@ -75,7 +75,7 @@ _LEGEND = (
 _CARE = (
     (
         "Text from the bidder",
-        "Stored as text and never run as a formula. When you export to CSV, put an apostrophe before text that "
+        "Stored as text and never run as a formula. On export to CSV put an apostrophe before text that "
         "starts with =, +, - or @; leave negative numbers as they are.",
     ),
     (
@@ -91,7 +91,7 @@ _CARE = (
     ),
     (
         "Distances",
-        "Calculated compliance distances are a desk check from the bidder's figures along the strongest beam. "
+        "Calculated compliance distances are a desk check from bidder's figures along the strongest beam. "
         "They are no site assessment and no permission to work near it: local rules and licensed "
         "practice decide. Read them only with the assumptions and cautions on the sheet Rules used.",
     ),

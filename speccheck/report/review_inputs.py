@@ -6,12 +6,12 @@ from collections.abc import Mapping
 from dataclasses import dataclass
 
 from speccheck.records import Assessment, CellRef, Fit, MirrorSheet, Reading, Statement, Submission
-from speccheck.report.book import Column, Grid, Table
 from speccheck.report.cells import Content, Rich
 from speccheck.report.formats import shown_unit
 from speccheck.report.inputs import InputRow
 from speccheck.report.marks import mark_for
 from speccheck.report.review_places import INPUTS, NumberedFinding, Places, row_and_column
+from speccheck.report.sheets import Column, Grid, Table
 from speccheck.report.view import label
 
 VALUE_COLUMN, UPPER_COLUMN = "H", "I"
@@ -51,6 +51,7 @@ def inputs_as_read(submission: Submission, places: Places) -> Table:
             Column(heading="How it was read", width=44, look="wrap"),
         ),
         rows=rows,
+        printed=13,
     )
 
 

@@ -7,11 +7,11 @@ from collections.abc import Callable, Iterable
 from dataclasses import dataclass, field
 
 from speccheck.records import Band, Reading
-from speccheck.report.book import Column, Table
 from speccheck.report.cells import Content, Rich
 from speccheck.report.formats import shown_unit
 from speccheck.report.review_inputs import UPPER_COLUMN, VALUE_COLUMN
 from speccheck.report.review_places import INPUTS, Places
+from speccheck.report.sheets import Column, Table
 
 SHEET = "Recomputed"
 SAME = 1e-9

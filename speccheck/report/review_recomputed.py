@@ -8,9 +8,9 @@ from __future__ import annotations
 import math
 
 from speccheck.records import Assessment, Band, ExposureRow, Panel, PanelAssessment, Reading, Settings
-from speccheck.report.book import Table
 from speccheck.report.review_ledger import Figure, Ledger
 from speccheck.report.review_places import Places
+from speccheck.report.sheets import Table
 
 SPEED_OF_LIGHT_M_S = 299_792_458.0
 SECTOR_CONSTANT_DEG2 = 31_000.0

@@ -18,11 +18,11 @@ from speccheck.records import (
     Step,
     Value,
 )
-from speccheck.report.book import Column, Table
 from speccheck.report.cells import Content, Rich
 from speccheck.report.formats import decimals_for, shown_unit
 from speccheck.report.questions import Question
 from speccheck.report.review_places import FINDINGS, NumberedFinding, Places
+from speccheck.report.sheets import Column, Table
 from speccheck.report.view import label, tally
 
 MOST_DECIMALS = 4
@@ -91,9 +91,9 @@ def findings(places: Places) -> Table:
         name=FINDINGS,
         columns=(
             Column(heading="No.", width=7, look="number0", note="Number of the finding; keeps when sorted."),
-            Column(heading="Panel", width=22),
-            Column(heading="Band from (MHz)", width=11, look="number", note="Empty: the panel as a whole."),
-            Column(heading="Band to (MHz)", width=11, look="number"),
+            Column(heading="Panel", width=18),
+            Column(heading="Band from (MHz)", width=10, look="number", note="Empty: the panel as a whole."),
+            Column(heading="Band to (MHz)", width=10, look="number"),
             Column(heading="Verdict", width=13, status=tuple(Fit), note="Words of physics; see Lists."),
             Column(heading="Check", width=30),
             Column(heading="Summary", width=50, look="wrap"),
@@ -102,12 +102,12 @@ def findings(places: Places) -> Table:
                 for name in bounds
             ),
             Column(heading="Unit", width=8),
+            Column(heading="Cells", width=16, look="link", note="Leads to the first of the cells."),
+            Column(heading="Question", width=40, look="wrap"),
             Column(heading="Claimed in words", width=16),
-            Column(heading="Cells", width=20, look="link", note="Leads to the first of the cells."),
             Column(
                 heading="Innocent readings", width=40, look="wrap", note="Conventions that would explain it."
             ),
-            Column(heading="Question", width=44, look="wrap"),
             Column(heading="Working", width=50, look="wrap"),
             Column(heading="Assumptions", width=40, look="wrap"),
             Column(heading="Source", width=32, look="wrap"),
@@ -115,6 +115,7 @@ def findings(places: Places) -> Table:
         ),
         rows=[_finding_row(one, places) for one in places.findings],
         frozen=2,
+        printed=14,
     )
 
 
@@ -135,10 +136,10 @@ def _finding_row(one: NumberedFinding, places: Places) -> list[Content]:
         _number(expected.low if expected else None, unit),
         _number(expected.high if expected else None, unit),
         shown_unit(unit),
-        words,
         _cells(finding.where, places),
-        "\n".join(map(_convention, finding.conventions)) or _none_tried(finding.verdict),
         finding.question,
+        words,
+        "\n".join(map(_convention, finding.conventions)) or _none_tried(finding.verdict),
         "\n".join(map(_step, finding.working)),
         "\n".join(finding.assumptions),
         finding.source,
@@ -152,12 +153,12 @@ def requirements(assessment: Assessment, places: Places) -> Table:
         name="Requirements",
         columns=(
             Column(heading="Clause", width=10),
-            Column(heading="Panel", width=22),
+            Column(heading="Panel", width=18),
             Column(heading="Level", width=12),
             Column(heading="Wording", width=44, look="wrap"),
             Column(heading="Parameter", width=26),
-            Column(heading="Band from (MHz)", width=11, look="number", note="Empty: the panel as a whole."),
-            Column(heading="Band to (MHz)", width=11, look="number"),
+            Column(heading="Band from (MHz)", width=10, look="number", note="Empty: the panel as a whole."),
+            Column(heading="Band to (MHz)", width=10, look="number"),
             Column(heading="Operator", width=10),
             Column(heading="Limit", width=10, look="number", note="In the unit beside it."),
             Column(heading="Limit to", width=10, look="number", note="Upper end of a range."),
@@ -165,14 +166,14 @@ def requirements(assessment: Assessment, places: Places) -> Table:
             Column(heading="Unit", width=8),
             Column(heading="Offered", width=10, look="number", note="In the requirement's unit."),
             Column(heading="Offered to", width=10, look="number"),
-            Column(heading="As written", width=20, note="The bidder's own text."),
             Column(heading="Margin", width=10, look="number", note="Positive is on the good side."),
             Column(heading="Verdict", width=18, status=tuple(Compliance), note="See Lists."),
+            Column(heading="Offer's cell", width=14, look="link"),
+            Column(heading="As written", width=20, note="The bidder's own text."),
             Column(heading="Verdict without deviation", width=16, status=tuple(Compliance)),
             Column(heading="Claim in doubt", width=26, note="Checks that the offered figure does not fit."),
             Column(heading="Note", width=40, look="wrap"),
             Column(heading="Reading confirmed", width=11, note="By the buyer, in the tender workbook."),
-            Column(heading="Offer's cell", width=14, look="link"),
             Column(heading="Tender's cell", width=18),
             *PEOPLE,
         ),
@@ -182,6 +183,7 @@ def requirements(assessment: Assessment, places: Places) -> Table:
             for row in one.requirements
         ],
         frozen=2,
+        printed=17,
     )
 
 
@@ -201,14 +203,14 @@ def _requirement_row(panel: str, row: MatrixRow, places: Places) -> list[Content
         *limit,
         shown_unit(asked.unit),
         *offered[:2],
-        answer.raw if answer else "",
         _number(row.margin, asked.unit),
         row.verdict.value,
+        _cells((answer.where,), places) if answer else "",
+        answer.raw if answer else "",
         row.underlying.value if row.underlying else "",
         ", ".join(row.in_doubt),
         row.note,
         "yes" if asked.confirmed else "no",
-        _cells((answer.where,), places) if answer else "",
         str(asked.where),
         *UNFILLED,
     ]
@@ -220,7 +222,7 @@ def question_list(questions: Iterable[Question], places: Places) -> Table:
         name="Questions",
         columns=(
             Column(heading="No.", width=7, look="number0"),
-            Column(heading="Panel", width=22),
+            Column(heading="Panel", width=18),
             Column(heading="Clause", width=10),
             Column(heading="Bands (MHz)", width=18),
             Column(heading="Cells", width=20, look="link"),
@@ -252,6 +254,7 @@ def question_list(questions: Iterable[Question], places: Places) -> Table:
             for one in questions
         ],
         frozen=2,
+        printed=7,
     )
 
 
