@@ -1,0 +1,1 @@
+"""Words of tender clauses: cut into tokens, sorted into parts, settled into demands."""

@@ -1,0 +1,86 @@
+"""A margin to a verdict: guard band, equality and rounding, as fixed before opening.
+
+The four outcomes follow ILAC-G8:09/2019 section 4.2.3 (guard band, conditional pass and fail; from
+memory); a guard band of zero gives plain acceptance.
+"""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from speccheck.records import Compliance
+
+_SLACK = 1e-9
+"""Share of the figures below which two floats count as equal."""
+
+
+@dataclass(frozen=True, slots=True)
+class Grade:
+    """Verdict, margin in the good direction, and what decided where that is not plain."""
+
+    verdict: Compliance
+    margin: float | None = None
+    note: str = ""
+
+
+def settled(margin: float, scale: float) -> float:
+    """Margin with float noise of unit conversion taken out: zero where the figures are equal."""
+    return 0.0 if abs(margin) <= _SLACK * max(1.0, abs(scale)) else margin
+
+
+def graded(margin: float, guard: float, *, equal_meets: bool = True, equal_note: str = "") -> Grade:
+    """Grade of one figure against one limit.
+
+    Parameters
+    ----------
+    margin : figure against limit, positive on the good side, in the unit of the limit
+    guard : guard band in the same unit, not negative
+    equal_meets : whether a figure exactly at the limit meets it
+    equal_note : what to say where equality decided
+    """
+    if margin == 0 and (not equal_meets or equal_note):
+        if equal_meets:
+            return Grade(Compliance.MEETS_NARROWLY, 0.0, equal_note)
+        verdict = Compliance.FAILS_NARROWLY if guard > 0 else Compliance.FAILS
+        return Grade(verdict, 0.0, equal_note or "exactly at a limit that must be exceeded")
+    if margin >= guard:
+        return Grade(Compliance.MEETS, margin)
+    if margin >= 0:
+        return Grade(Compliance.MEETS_NARROWLY, margin, f"within the guard band of {guard:g}")
+    if margin >= -guard and guard > 0:
+        return Grade(Compliance.FAILS_NARROWLY, margin, f"within the guard band of {guard:g}")
+    return Grade(Compliance.FAILS, margin)
+
+
+def rounded(grade: Grade, allowance: float, *, converted: bool) -> Grade:
+    """The grade once half a unit of the last digit printed in the offer is allowed for.
+
+    After conversion of units the allowance carries a shortfall; in the offer's own unit it only
+    softens the fail, since the bidder chose how many digits to print.
+    """
+    if grade.margin is None or grade.margin >= 0 or grade.margin + allowance < 0:
+        return grade
+    if grade.verdict is not Compliance.FAILS and not (
+        converted and grade.verdict is Compliance.FAILS_NARROWLY
+    ):
+        return grade
+    note = f"ROUND: within half a unit of the last digit printed ({allowance:.2g})"
+    verdict = Compliance.MEETS_NARROWLY if converted else Compliance.FAILS_NARROWLY
+    return Grade(verdict, grade.margin, note)
+
+
+PASSING = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
+FAILING = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
+OPEN = (Compliance.DECLARED_ONLY, Compliance.NOT_STATED, Compliance.NOT_JUDGED)
+
+SEVERITY = (
+    Compliance.FAILS,
+    Compliance.FAILS_NARROWLY,
+    Compliance.NOT_STATED,
+    Compliance.DECLARED_ONLY,
+    Compliance.NOT_JUDGED,
+    Compliance.DEVIATION_ACCEPTED,
+    Compliance.MEETS_NARROWLY,
+    Compliance.MEETS,
+)
+"""Verdicts from the one that weighs most to the one that weighs least."""

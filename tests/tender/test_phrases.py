@@ -1,0 +1,124 @@
+"""The phrases of phrases.toml, each read as its entry says; expectations are common practice unless an entry
+names another source."""
+
+from __future__ import annotations
+
+import tomllib
+from pathlib import Path
+from typing import Any
+
+import pytest
+from hypothesis import given
+from hypothesis import strategies as st
+
+from speccheck.intake.phrases import PLAIN_HABITS, read_wording
+from speccheck.intake.requirements import read_requirements
+from speccheck.intake.wording.clauses import Clause
+from speccheck.quantities import convert
+from speccheck.records import Level
+from speccheck.records.demands import blocked
+from tender.books import table_of
+
+CASES = tomllib.loads((Path(__file__).parent / "phrases.toml").read_text(encoding="utf-8"))["phrase"]
+SPOKEN = [
+    (case, words)
+    for case in CASES
+    if "columns" not in case
+    for words in (case["wording"], *case.get("variants", []))
+]
+
+
+def test_all_sixty_four_phrasings_are_here() -> None:
+    assert sorted({case["number"] for case in CASES}) == list(range(1, 65))
+
+
+@pytest.mark.parametrize(("case", "words"), SPOKEN, ids=[f"{c['number']}-{w[:40]}" for c, w in SPOKEN])
+def test_wording_is_read_as_intended(case: dict[str, Any], words: str) -> None:
+    clauses = read_wording(words)
+    assert len(clauses) == len(case["reading"])
+    for clause, expected in zip(clauses, case["reading"], strict=True):
+        _check(clause, expected)
+    if "unread" in case:
+        assert clauses[0].unread.split() == case["unread"]
+
+
+@pytest.mark.parametrize("case", [c for c in CASES if "columns" in c], ids=lambda c: str(c["number"]))
+def test_columns_of_two_values_give_two_levels(case: dict[str, Any]) -> None:
+    rows, _ = read_requirements(table_of([{"wording": case["wording"], **case["columns"]}]), PLAIN_HABITS)
+    requirements = [r for row in rows for r in row.requirements]
+    for requirement, expected in zip(requirements, case["reading"], strict=True):
+        _check(requirement, expected)
+
+
+def _check(read: Any, expected: dict[str, Any]) -> None:
+    codes = {text.partition(":")[0] for text in read.doubts}
+    for field in ("parameter", "operator", "unit", "statistic"):
+        if field in expected:
+            assert getattr(read, field) == expected[field], field
+    if "limit" in expected:
+        assert read.limit == (
+            pytest.approx(tuple(expected["limit"]), rel=1e-3)
+            if isinstance(expected["limit"], list)
+            else expected["limit"]
+        )
+    if "limit_dbi" in expected:
+        assert convert(read.limit, read.unit, "dBi") == pytest.approx(expected["limit_dbi"])
+    if "bands" in expected:
+        assert read.bands == tuple(tuple(band) for band in expected["bands"])
+    if "at" in expected:
+        assert dict(read.at) == pytest.approx(expected["at"], rel=1e-3)
+    if "level" in expected:
+        assert read.level is Level(expected["level"])
+    assert expected.get("scope", "") in read.scope
+    assert set(expected.get("doubts", ())) <= codes
+    assert not set(expected.get("without", ())) & codes
+    assert bool(blocked(read.doubts)) is expected.get("blocked", False)
+
+
+@pytest.mark.parametrize(
+    ("column", "words", "level", "doubtful"),
+    [
+        (Level.MANDATORY, "Gain should be at least 17 dBi", Level.MANDATORY, True),
+        (Level.DESIRABLE, "Gain at least 17 dBi", Level.DESIRABLE, False),
+        (None, "Gain must be at least 17 dBi", Level.MANDATORY, False),
+        (None, "Gain will be at least 17 dBi", Level.MANDATORY, True),
+        (None, "Gain should be at least 17 dBi", Level.DESIRABLE, False),
+        (None, "Please state the gain", Level.INFORMATION, False),
+    ],
+)
+def test_a_level_column_beats_the_verb(
+    column: Level | None, words: str, level: Level, doubtful: bool
+) -> None:
+    """RFC 2119 equates must and shall; 'will' is not a level word of 3GPP TR 21.801, so it leaves a doubt."""
+    clause = read_wording(words, level=column)[0]
+    assert clause.level is level
+    assert ("LEVEL" in clause.codes) is doubtful
+
+
+def test_words_not_understood_are_kept() -> None:
+    clause = read_wording("Gain shall be at least 17 dBi in the frobnicated state")[0]
+    assert clause.unread == "frobnicated state"
+
+
+def test_a_range_of_a_beamwidth_is_a_window_and_of_a_band_a_capability() -> None:
+    """Common practice: the word 'between' does not tell which, the parameter does."""
+    assert read_wording("Horizontal beamwidth between 60 and 70 degrees")[0].operator == "within"
+    assert read_wording("Frequency between 1710 and 2690 MHz")[0].operator == "contains"
+
+
+@given(st.text(max_size=80))
+def test_any_wording_gives_a_clause_and_never_fails(words: str) -> None:
+    clauses = read_wording(words)
+    assert clauses
+    assert all(isinstance(clause, Clause) for clause in clauses)
+
+
+@given(
+    st.floats(min_value=10, max_value=25).map(lambda x: round(x, 1)),
+    st.sampled_from(
+        ["≥ {} dBi", "at least {} dBi", "not less than {} dBi", "min. {} dBi", "{} dBi or better"]
+    ),
+)
+def test_any_gain_reads_back_to_itself(gain: float, words: str) -> None:
+    clause = read_wording(f"Gain {words.format(gain)}")[0]
+    assert (clause.operator, clause.limit, clause.unit) == ("≥", gain, "dBi")
