@@ -8,11 +8,19 @@ order of the imports is the order of the findings.
 from speccheck.checks import plausibility
 from speccheck.checks import spacing, lattices
 from speccheck.checks import housing, ports, layers
-from speccheck.checks import innocent_gain, innocent_geometry
+from speccheck.checks import power, power_budget, losses, matching, intermodulation
+from speccheck.checks import bands, duplex, directions
+from speccheck.checks import wind, mechanics, exposure, wording
+from speccheck.checks import innocent_gain, innocent_geometry, innocent_statements
+from speccheck.checks.exposure_note import exposure_note
 from speccheck.checks.runner import examine
 # isort: on
 
-FAMILIES = (plausibility, spacing, lattices, housing, ports, layers)
-INNOCENT = (innocent_gain, innocent_geometry)
+FAMILIES = (
+    plausibility, spacing, lattices, housing, ports, layers,
+    power, power_budget, losses, matching, intermodulation,
+    bands, duplex, directions, wind, mechanics, exposure, wording,
+)  # fmt: skip
+INNOCENT = (innocent_gain, innocent_geometry, innocent_statements)
 
-__all__ = ["FAMILIES", "INNOCENT", "examine"]
+__all__ = ["FAMILIES", "INNOCENT", "examine", "exposure_note"]
