@@ -2,12 +2,15 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Iterable
 from dataclasses import dataclass
 
 from speccheck.records import Band, PanelAssessment
+from speccheck.report.array_figures import draw
 from speccheck.report.canvas import Figure
+from speccheck.report.exposure_figures import exposure_figures
 from speccheck.report.formats import Numbers
+from speccheck.report.offer_figures import coverage_chart, interval_chart, margin_chart
 
 
 @dataclass(frozen=True, slots=True)
@@ -21,4 +24,17 @@ class PanelFigures:
 
 def panel_figures(panel: PanelAssessment, numbers: Numbers, label: Callable[[str], str]) -> PanelFigures:
     """Draw everything that one panel's records allow."""
-    return PanelFigures((), {}, ())
+    by_band: dict[Band | None, tuple[Figure, ...]] = {}
+    for band in (*panel.panel.bands, None):
+        own = (f for f in panel.findings if f.band == band)
+        drawn = (draw(drawing, numbers) for drawing in panel.drawings if drawing.band == band)
+        by_band[band] = _present((interval_chart(own, numbers, band), *drawn))
+    return PanelFigures(
+        overview=_present((margin_chart(panel, numbers, label), coverage_chart(panel, numbers, label))),
+        by_band=by_band,
+        exposure=exposure_figures(panel.panel, panel.exposure, numbers),
+    )
+
+
+def _present(figures: Iterable[Figure | None]) -> tuple[Figure, ...]:
+    return tuple(figure for figure in figures if figure is not None)

@@ -22,8 +22,11 @@ _DECIMALS = {
     "kg": 1,
     "N": 0,
     "MHz": 0,
+    "mm": 0,
 }
 """Decimals a figure carries by unit; the rest is written with three significant digits."""
+
+_SHOWN_IN_MM = 2.0
 
 _SHOWN_UNITS = {"deg": "°", "ohm": "Ω", "wl": "λ", "W/m2": "W/m²", "m2": "m²", "kg/m3": "kg/m³", "1": ""}
 
@@ -54,11 +57,13 @@ class Numbers:
         if value is None:
             return "–"
         if isinstance(value, str):
-            return value
+            return self._with_unit(value, unit)
         if isinstance(value, tuple):
-            low, high = (self.plain(v, decimals_for(v, unit)) for v in value)
+            shown, unit = _in_millimetres(value, unit)
+            low, high = (self.plain(v, decimals_for(v, unit)) for v in shown)
             return self._with_unit(f"{low} to {high}", unit)
-        return self._with_unit(self.plain(value, decimals_for(value, unit)), unit)
+        (number,), unit = _in_millimetres((value,), unit)
+        return self._with_unit(self.plain(number, decimals_for(number, unit)), unit)
 
     def stated(self, value: Value | None, unit: str = "") -> str:
         """A value as read: every digit it was stated with."""
@@ -72,13 +77,21 @@ class Numbers:
 
     def signed(self, value: float, unit: str = "", decimals: int | None = None) -> str:
         """A difference: always with its sign."""
+        (value,), unit = _in_millimetres((value,), unit)
         digits = decimals_for(value, unit) if decimals is None else decimals
         text = self.plain(value, digits)
         return self._with_unit(text if text.startswith(MINUS) or float(value) == 0 else f"+{text}", unit)
 
     def amount(self, amount: Amount | None) -> str:
         """A claimed figure."""
-        return "–" if amount is None else self.stated(amount.value, amount.unit)
+        if amount is None:
+            return "–"
+        if isinstance(amount.value, str):
+            return self._with_unit(amount.value, amount.unit)
+        stated: tuple[float, ...] = amount.value if isinstance(amount.value, tuple) else (amount.value,)
+        ends, unit = _in_millimetres(stated, amount.unit)
+        shown = [self.plain(v, _least_decimals(v, unit)) for v in ends]
+        return self._with_unit(" to ".join(shown), unit)
 
     def interval(self, interval: Interval | None) -> str:
         """What a claim is held against: both ends, or the one that is not open."""
@@ -110,6 +123,13 @@ class Numbers:
         return f"{number}{shown}" if shown in {"°", "%"} else f"{number}{NARROW_SPACE}{shown}"
 
 
+def _in_millimetres(values: tuple[float, ...], unit: str) -> tuple[tuple[float, ...], str]:
+    """Lengths below two metres in millimetres, as drawings of panels state them."""
+    if unit != "m" or max(abs(v) for v in values) >= _SHOWN_IN_MM:
+        return values, unit
+    return tuple(round(v * 1000, 6) for v in values), "mm"
+
+
 def decimals_for(value: float, unit: str) -> int:
     """Digits after the decimal sign for a computed figure in a unit."""
     if unit == "deg" and abs(value) < 10:
@@ -119,6 +139,12 @@ def decimals_for(value: float, unit: str) -> int:
     if value == 0 or not math.isfinite(value):
         return 0
     return max(0, 2 - math.floor(math.log10(abs(value))))
+
+
+def _least_decimals(value: float, unit: str) -> int | None:
+    """The unit's usual digits where they hold the whole figure, else as many as were stated."""
+    digits = decimals_for(value, unit)
+    return digits if round(value, digits) == value else None
 
 
 def shown_unit(unit: str) -> str:

@@ -13,6 +13,7 @@ import jinja2
 from markupsafe import Markup
 
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
+from speccheck.report.exposure_lines import exposure_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
 from speccheck.report.view import build_view, label
@@ -95,6 +96,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         LEVELS=LEVELS,
         Fit=Fit,
         Level=Level,
+        exposure_table=exposure_table,
         WIND_CAUTIONS=WIND_CAUTIONS,
         MOUNTING_CAUTIONS=MOUNTING_CAUTIONS,
     )

@@ -10,7 +10,8 @@ from speccheck.records import Assessment, Band, CellRef, Compliance, MatrixRow, 
 UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
 
 _ASKED = {
-    Compliance.NOT_STATED: "The offer has no cell for {what}. Please state the figure, with its unit and conditions.",
+    Compliance.NOT_STATED: "The offer has no cell for {what}. "
+    "Please state the figure, with its unit and conditions.",
     Compliance.DECLARED_ONLY: "The offer declares {what} without a figure that can be judged. "
     "Please state the figure, with its unit and conditions.",
     Compliance.NOT_JUDGED: "{what} could not be judged from what the offer states. "

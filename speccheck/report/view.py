@@ -7,7 +7,6 @@ from __future__ import annotations
 
 import hashlib
 import json
-from collections import Counter
 from collections.abc import Iterable, Sequence
 from dataclasses import asdict, dataclass
 
@@ -21,7 +20,6 @@ from speccheck.records import (
     Fit,
     Level,
     MatrixRow,
-    Outcome,
     PanelAssessment,
     Settings,
 )
@@ -31,29 +29,11 @@ from speccheck.report.formats import Numbers
 from speccheck.report.inputs import InputRow, input_rows
 from speccheck.report.marks import Mark, mark_for
 from speccheck.report.questions import Question, collect_questions
+from speccheck.report.summary import Tally, decisions, sentence, tally
 
 MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 MISSES = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
-OPEN = (Compliance.NOT_JUDGED, Compliance.NOT_STATED, Compliance.DECLARED_ONLY)
 TOP_REASONS = 5
-
-
-@dataclass(frozen=True, slots=True)
-class Tally:
-    """Counts of one panel: requirements by level and verdict, findings by verdict."""
-
-    requirements: dict[Level, Counter[Compliance]]
-    findings: Counter[Fit]
-
-    def of(self, level: Level, *verdicts: Compliance) -> int:
-        """How many requirement rows of a level have one of the verdicts; all of them without any."""
-        counts = self.requirements[level]
-        return sum(counts[v] for v in verdicts) if verdicts else counts.total()
-
-    @property
-    def levels(self) -> tuple[Level, ...]:
-        """Levels that occur."""
-        return tuple(level for level in Level if self.requirements[level].total())
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -73,6 +53,11 @@ class BandView:
     band: Band | None
     findings: tuple[FindingView, ...]
     figures: tuple[Figure, ...]
+
+    @property
+    def judged(self) -> tuple[FindingView, ...]:
+        """Findings with a verdict; the others are listed with the offer."""
+        return tuple(f for f in self.findings if f.finding.verdict is not Fit.NOT_JUDGED)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -172,7 +157,7 @@ def build_view(assessment: Assessment) -> ReportView:
         anchors=anchors,
         settings=_settings_rows(assessment.settings, numbers),
         rules_fingerprint=fingerprint(assessment),
-        decisions=_decisions(assessment, panels, questions),
+        decisions=decisions(assessment, questions),
     )
 
 
@@ -190,14 +175,6 @@ def fingerprint(assessment: Assessment) -> str:
     rules["program"] = assessment.program_version
     rules["tender_file"] = assessment.tender.sha256 if assessment.tender else ""
     return hashlib.sha256(json.dumps(rules, sort_keys=True, default=str).encode()).hexdigest()
-
-
-def tally(panel: PanelAssessment) -> Tally:
-    """Counts of one panel."""
-    by_level: dict[Level, Counter[Compliance]] = {level: Counter() for level in Level}
-    for row in panel.requirements:
-        by_level[row.requirement.level][row.verdict] += 1
-    return Tally(by_level, Counter(f.verdict for f in panel.findings))
 
 
 def _panel_view(
@@ -220,7 +197,7 @@ def _panel_view(
         number=number,
         source=panel,
         mark=mark_for(panel.outcome),
-        sentence=_sentence(panel, counted, len(own), bool(assessment.tender)),
+        sentence=sentence(counted, len(own), bool(assessment.tender)),
         tally=counted,
         findings=findings,
         contradictions=tuple(r for r in panel.requirements if r.statement and r.verdict in MISSES),
@@ -241,7 +218,7 @@ def _bands(
         BandView(band=band, findings=tuple(found), figures=figures.get(band, ()))
         for band, found in groups.items()
     )
-    return tuple(view for view in views if view.findings or view.figures)
+    return tuple(view for view in views if view.judged or view.figures)
 
 
 def _matrix(assessment: Assessment) -> tuple[MatrixLine, ...]:
@@ -262,52 +239,6 @@ def _matrix(assessment: Assessment) -> tuple[MatrixLine, ...]:
         MatrixLine(requirement_index=index, band=band, rows=tuple(rows))
         for (index, band), rows in sorted(lines.items(), key=lambda item: item[0][0])
     )
-
-
-def _sentence(panel: PanelAssessment, counted: Tally, questions: int, judged: bool) -> str:
-    failed = counted.of(Level.MANDATORY, Compliance.FAILS)
-    narrow = counted.of(Level.MANDATORY, Compliance.FAILS_NARROWLY)
-    unanswered = counted.of(Level.MANDATORY, *OPEN)
-    facts = [
-        _count(failed, "mandatory requirement fails", "mandatory requirements fail"),
-        _count(narrow, "mandatory requirement fails narrowly", "mandatory requirements fail narrowly"),
-        _count(unanswered, "mandatory requirement is open", "mandatory requirements are open"),
-        _count(counted.findings[Fit.DOES_NOT_FIT], "claim does not fit", "claims do not fit"),
-        _count(counted.findings[Fit.DOUBTFUL], "claim is doubtful", "claims are doubtful"),
-        _count(counted.findings[Fit.NOT_JUDGED], "check could not be judged", "checks could not be judged"),
-        _count(questions, "question to the bidder", "questions to the bidder"),
-    ]
-    said = [fact for fact in facts if fact]
-    if not judged:
-        said.append("no tender was given, so no requirement is judged")
-    return (", ".join(said) or "nothing stands against it in what was stated and checked") + "."
-
-
-def _count(number: int, one: str, many: str) -> str:
-    return f"{number} {one if number == 1 else many}" if number else ""
-
-
-def _decisions(
-    assessment: Assessment, panels: Sequence[PanelView], questions: Sequence[Question]
-) -> tuple[str, ...]:
-    asked = []
-    for panel in panels:
-        if panel.source.outcome is Outcome.REJECT:
-            clauses = dict.fromkeys(
-                row.requirement.clause for row in panel.rows(Level.MANDATORY, Compliance.FAILS)
-            )
-            asked.append(f"{panel.name}: confirm or withdraw the rejection on {', '.join(clauses)}.")
-    if questions:
-        span = f"questions 1 to {len(questions)}" if len(questions) > 1 else "question 1"
-        asked.append(f"Release {span} to the bidder and set the date the answers are due.")
-    unconfirmed = [r for r in assessment.tender.requirements if not r.confirmed] if assessment.tender else []
-    if unconfirmed:
-        asked.append(
-            f"Confirm how {_count(len(unconfirmed), 'requirement was', 'requirements were')} read (section 10)."
-        )
-    if not asked:
-        asked.append("Accept the result, or return it with conditions.")
-    return tuple(asked)
 
 
 def _settings_rows(settings: Settings, numbers: Numbers) -> tuple[tuple[str, str], ...]:

@@ -1,0 +1,51 @@
+"""Rows of the exposure note folded for print: a line for a band and averaging kind, populations abreast."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+
+from speccheck.records import Band, ExposureNote, ExposureRow
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ExposureLine:
+    """One line: the rows of a band and averaging kind in the order of `ExposureTable.populations`."""
+
+    band: Band | None
+    basis: str
+    averaging_min: float
+    rows: tuple[ExposureRow | None, ...]
+
+    @property
+    def first(self) -> ExposureRow:
+        """A row of the line, for what all of them share."""
+        return next(row for row in self.rows if row is not None)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ExposureTable:
+    """All lines; `factored` where a time factor below 1 gives a second figure."""
+
+    populations: tuple[tuple[str, str], ...]
+    lines: tuple[ExposureLine, ...]
+    factored: bool
+
+
+def exposure_table(note: ExposureNote) -> ExposureTable:
+    """Fold the rows of a note; no row is left out."""
+    populations = {row.population: row.category or row.population for row in note.rows}
+    places = {name: i for i, name in enumerate(populations)}
+    folded: dict[tuple[Band | None, str, float], list[ExposureRow | None]] = {}
+    for row in note.rows:
+        line = folded.setdefault((row.band, row.basis, row.averaging_min), [None] * len(places))
+        if line[places[row.population]] is not None:
+            raise ValueError(f"two exposure rows for {row.band}, {row.basis}, {row.population}")
+        line[places[row.population]] = row
+    return ExposureTable(
+        populations=tuple(populations.items()),
+        lines=tuple(
+            ExposureLine(band=band, basis=basis, averaging_min=minutes, rows=tuple(rows))
+            for (band, basis, minutes), rows in folded.items()
+        ),
+        factored=any(row.factored_distance_m is not None for row in note.rows),
+    )
