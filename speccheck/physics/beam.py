@@ -2,52 +2,73 @@
 
 from __future__ import annotations
 
+from dataclasses import dataclass
+
 import numpy as np
 
 from speccheck.physics.decibels import Floats
-from speccheck.physics.field import Excitation
+from speccheck.physics.field import Excitation, squared
 from speccheck.physics.layout import Complex, lines
 
 _STEPS = 30
-_SETTLED_RAD = 2e-6
-_PROBE_RAD = 1e-3
+_SETTLED_RAD = 2e-3
+"""Newton's method squares the error: a last step of 2e-3 rad leaves about 1e-5 rad."""
+_FLAT = 1e-6
 
 
-def beam_peak(states: Excitation) -> tuple[Floats, Floats]:
+@dataclass(frozen=True, eq=False, slots=True)
+class Beam:
+    """Direction [rad] of the beam of each state and its power factors [1]: element, rows, columns."""
+
+    theta_rad: Floats
+    phi_rad: Floats
+    element_power: Floats
+    row_power: Floats
+    column_power: Floats
+
+    @property
+    def intensity(self) -> Floats:
+        """Radiation intensity [1], not normalised."""
+        return self.element_power * self.row_power * self.column_power
+
+
+def find_beam(states: Excitation) -> Beam:
     """Direction of the beam: Newton's method on the logarithm of the intensity, from the steering direction.
 
     The element pattern pulls the beam towards boresight. Along an axis where nothing varies the steering
     direction stays; a grating lobe of equal height is never jumped to.
     states [Excitation]: the states.
-    Returns [rad, rad]: theta and phi, shape (S,) each.
+    Returns [Beam]: direction and power factors, shape (S,) each.
     Source: definition of the beam peak; analytic derivatives of the array factor.
     """
-    rows, columns, _ = lines(states.layout)
-    k = states.wavenumbers
-    # half a null width of the aperture, and never more than a sixth of a radian a step
-    reach = [
-        np.minimum(0.3 * 2 * np.pi / (k * (np.ptp(line.positions) + 1e-9)), 0.17) for line in (rows, columns)
-    ]
-    theta, phi = states.theta_rad.copy(), states.phi_rad.copy()
+    theta, phi = states.theta_rad, states.phi_rad
+    reach = [_reach(states, axis) for axis in (0, 1)]
     for _ in range(_STEPS):
-        g_theta, g_phi, h_theta, h_phi, h_cross = _derivatives(states, theta, phi)
-        determinant = h_theta * h_phi - h_cross**2
-        peaked = (h_theta < -1e-6) & (h_phi < -1e-6) & (determinant > 1e-9)
-        safe = np.where(peaked, determinant, 1.0)
-        d_theta = np.where(peaked, (h_cross * g_phi - h_phi * g_theta) / safe, _uphill(g_theta, h_theta))
-        d_phi = np.where(peaked, (h_cross * g_theta - h_theta * g_phi) / safe, _uphill(g_phi, h_phi))
-        d_theta = np.clip(d_theta, -reach[0], reach[0])
-        d_phi = np.clip(d_phi, -reach[1], reach[1])
-        theta += d_theta
-        phi += d_phi
+        g_t, g_p, h_t, h_p, h_tp = _derivatives(states, theta, phi)
+        determinant = h_t * h_p - h_tp * h_tp
+        if (h_t < -_FLAT).all() and (h_p < -_FLAT).all() and (determinant > 1e-9).all():
+            d_theta, d_phi = (h_tp * g_p - h_p * g_t) / determinant, (h_tp * g_t - h_t * g_p) / determinant
+        else:  # each axis on its own
+            d_theta, d_phi = _uphill(g_t, h_t), _uphill(g_p, h_p)
+        d_theta = np.minimum(np.maximum(d_theta, -reach[0]), reach[0])
+        d_phi = np.minimum(np.maximum(d_phi, -reach[1]), reach[1])
+        theta, phi = theta + d_theta, phi + d_phi
         if max(np.abs(d_theta).max(), np.abs(d_phi).max()) < _SETTLED_RAD:
             break
-    return theta, phi
+    row, column = _turned(states, np.sin(theta) * np.sin(phi), np.cos(theta))
+    return Beam(theta, phi, states.element.power(theta, phi), squared(row.sum(1)), squared(column.sum(1)))
+
+
+def _reach(states: Excitation, axis: int) -> Floats:
+    """Longest step [rad]: about a third of a null width of the aperture, and never more than a sixth."""
+    positions = lines(states.layout)[axis].positions
+    extent = float(positions[-1] - positions[0])
+    return np.minimum(2.0 / (states.wavenumbers * (extent + 1e-9)), 0.17)
 
 
 def _uphill(gradient: Floats, curvature: Floats) -> Floats:
     """Step along one axis alone: Newton where it curves down, along the slope elsewhere, none where flat."""
-    curved = curvature < -1e-6
+    curved = curvature < -_FLAT
     newton = -gradient / np.where(curved, curvature, -1.0)
     return np.where(curved, newton, np.where(np.abs(gradient) > 1e-9, 0.1 * np.sign(gradient), 0.0))
 
@@ -55,59 +76,49 @@ def _uphill(gradient: Floats, curvature: Floats) -> Floats:
 def _derivatives(states: Excitation, theta: Floats, phi: Floats) -> tuple[Floats, ...]:
     """Gradient and second derivatives of the log intensity in theta and phi."""
     sin_t, cos_t, sin_p, cos_p = np.sin(theta), np.cos(theta), np.sin(phi), np.cos(phi)
-    z, y, zz, yy, zy = _factor_derivatives(states, sin_t * sin_p, cos_t)
-    e_t, e_p, e_tt, e_pp = _element_derivatives(states, theta, phi)
-    yt, yp = cos_t * sin_p, sin_t * cos_p  # slopes of u_y; u_z slopes with -sin theta
-    bend = y * sin_t * sin_p
-    return (
-        -z * sin_t + y * yt + e_t,
-        y * yp + e_p,
-        zz * sin_t**2 - z * cos_t + yy * yt**2 - 2 * zy * sin_t * yt - bend + e_tt,
-        yy * yp**2 - bend + e_pp,
-        yy * yt * yp - zy * sin_t * yp + y * cos_t * cos_p,
-    )
+    u_y = sin_t * sin_p
+    z, y, zz, yy, zy = _factor_derivatives(states, u_y, cos_t)
+    e_t, e_p, e_tt, e_pp = states.element.log_slopes(theta, phi)
+    y_t, y_p = cos_t * sin_p, sin_t * cos_p  # slopes of u_y; u_z slopes with -sin theta
+    bend = y * u_y
+    h_tt = zz * sin_t * sin_t - z * cos_t + yy * y_t * y_t - bend + e_tt
+    h_tp = yy * y_t * y_p + y * cos_t * cos_p
+    if zy is not None:
+        h_tt, h_tp = h_tt - 2 * zy * sin_t * y_t, h_tp - zy * sin_t * y_p
+    return y * y_t - z * sin_t + e_t, y * y_p + e_p, h_tt, yy * y_p * y_p - bend + e_pp, h_tp
 
 
-def _factor_derivatives(states: Excitation, u_y: Floats, u_z: Floats) -> tuple[Floats, ...]:
-    """Derivatives of the log power of the array factor: by z, y, zz, yy, zy."""
-    rows, columns, shifts = lines(states.layout)
+def _factor_derivatives(
+    states: Excitation, u_y: Floats, u_z: Floats
+) -> tuple[Floats, Floats, Floats, Floats, Floats | None]:
+    """Derivatives of the log power of the array factor: by z, y, zz, yy, zy (None: rectangular lattice)."""
+    rows, columns = lines(states.layout)
     k = states.wavenumbers
-    position, shift = 1j * rows.positions, 1j * shifts
-    turned = states.rows * np.exp(k[:, None] * (u_z[:, None] * position + u_y[:, None] * shift))
-    ones = np.ones(len(position))
-    if shifts.any():
-        moments = np.stack([ones, position, position**2, shift, shift**2, shift * position], axis=1)
-    else:
-        moments = np.stack([ones, position, position**2], axis=1)
-    row = turned @ moments
-    along = 1j * columns.positions
-    column = (states.columns * np.exp((k * u_y)[:, None] * along)) @ np.stack(
-        [np.ones(len(along)), along, along**2], axis=1
-    )
-    z, zz = _log_derivatives(row[:, 0], row[:, 1], row[:, 2])
-    y, yy = _log_derivatives(column[:, 0], column[:, 1], column[:, 2])
-    zy: Floats = np.zeros(len(k))
-    if shifts.any():
-        extra = _log_derivatives(row[:, 0], row[:, 3], row[:, 4])
-        y, yy = y + extra[0], yy + extra[1]
-        zy = 2 * (row[:, 5] / row[:, 0] - row[:, 1] * row[:, 3] / row[:, 0] ** 2).real
-    return k * z, k * y, k**2 * zz, k**2 * yy, k**2 * zy
+    turned, column = _turned(states, u_y, u_z)
+    y, yy = _log_derivatives(column @ columns.moments)
+    z, zz = _log_derivatives(turned @ rows.moments)
+    if states.row_shifts_m is None:
+        return k * z, k * y, k * k * zz, k * k * yy, None
+    shift = 1j * states.row_shifts_m
+    sideways = turned @ np.stack([shift**0, shift, shift**2, shift * rows.moments[:, 1]], axis=1)
+    ahead = turned @ rows.moments[:, 1] / sideways[:, 0]
+    y_shift, yy_shift = _log_derivatives(sideways[:, :3])
+    zy = 2 * (sideways[:, 3] / sideways[:, 0] - ahead * sideways[:, 1] / sideways[:, 0]).real
+    return k * z, k * (y + y_shift), k * k * zz, k * k * (yy + yy_shift), k * k * zy
 
 
-def _log_derivatives(value: Complex, first: Complex, second: Complex) -> tuple[Floats, Floats]:
-    slope = first / value
-    return 2 * slope.real, 2 * (second / value - slope**2).real
+def _turned(states: Excitation, u_y: Floats, u_z: Floats) -> tuple[Complex, Complex]:
+    """Contribution of each row (S, M) and of each column (S, N) in one direction per state."""
+    rows, columns = lines(states.layout)
+    across = (states.wavenumbers * u_y)[:, None]
+    path = (states.wavenumbers * u_z)[:, None] * rows.moments[:, 1]
+    if states.row_shifts_m is not None:
+        path = path + across * (1j * states.row_shifts_m)
+    return states.rows * np.exp(path), states.columns * np.exp(across * columns.moments[:, 1])
 
 
-def _element_derivatives(states: Excitation, theta: Floats, phi: Floats) -> tuple[Floats, ...]:
-    """Gradient and curvature of the log element power, by differences (exact for parabolas in dB)."""
-    d = _PROBE_RAD
-    thetas = np.stack([theta, theta + d, theta - d, theta, theta])
-    phis = np.stack([phi, phi, phi, phi + d, phi - d])
-    centre, up, down, left, right = np.log(np.maximum(states.element.power(thetas, phis), 1e-30))
-    return (
-        (up - down) / (2 * d),
-        (left - right) / (2 * d),
-        (up + down - 2 * centre) / d**2,
-        (left + right - 2 * centre) / d**2,
-    )
+def _log_derivatives(moments: Complex) -> tuple[Floats, Floats]:
+    """First and second derivative of the log power from a factor and its two derivatives, shape (S, 3)."""
+    scaled = moments[:, 1:] / moments[:, :1]
+    slope = scaled[:, 0]
+    return 2 * slope.real, 2 * (scaled[:, 1] - slope * slope).real

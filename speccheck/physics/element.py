@@ -15,6 +15,9 @@ from numpy.typing import ArrayLike
 
 from speccheck.physics.decibels import Floats, db, floats, ratio
 
+_PER_DB = np.log(10) / 10
+"""Nepers of power [1] in a decibel."""
+
 
 class Element(Protocol):
     """What an element must offer: its power pattern, peak 1, and its kernel."""
@@ -24,6 +27,10 @@ class Element(Protocol):
         ...
 
     def __hash__(self) -> int: ...
+
+    def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
+        """Slopes and curvatures of log power by theta_rad [rad] and phi_rad [rad]: t, p, tt, pp."""
+        ...
 
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
         """Integrals [1], shape (F, Y, Z), at wavenumbers [rad/m] (F), lags y_m [m] (Y) and z_m [m] (Z)."""
@@ -72,10 +79,23 @@ class SectorElement:
         >>> float(db(SectorElement().power(np.pi / 2, np.radians(32.5))).round(4))
         -3.0
         """
-        elevation = np.degrees(floats(theta_rad)) - 90
-        vertical = np.minimum(12 * (elevation / self.el_hpbw_deg) ** 2, self.el_floor_db)
-        horizontal = np.minimum(12 * (np.degrees(floats(phi_rad)) / self.az_hpbw_deg) ** 2, self.floor_db)
-        return ratio(-np.minimum(vertical + horizontal, self.floor_db))
+        elevation = (np.degrees(theta_rad) - 90) / self.el_hpbw_deg
+        azimuth = np.degrees(phi_rad) / self.az_hpbw_deg
+        vertical = np.minimum(12 * elevation * elevation, self.el_floor_db)
+        total = np.minimum(vertical + 12 * azimuth * azimuth, self.floor_db)
+        return np.asarray(np.exp(-_PER_DB * total))
+
+    def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
+        """Slopes and curvatures of the logarithm of the power, of the parabolas before clamping.
+
+        theta_rad [rad]: zenith angle.
+        phi_rad [rad]: azimuth.
+        Returns [1/rad, 1/rad, 1/rad^2, 1/rad^2]: by theta, phi, theta twice, phi twice.
+        Source: derivative of the parabolas.
+        """
+        bend_t, bend_p = (-24 * _PER_DB / np.radians(w) ** 2 for w in (self.el_hpbw_deg, self.az_hpbw_deg))
+        slope_t = bend_t * (theta_rad - np.pi / 2)
+        return slope_t, bend_p * phi_rad, np.full_like(slope_t, bend_t), np.full_like(slope_t, bend_p)
 
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
         """Kernel of the element: the floor in closed form, the rest by quadrature over its own region.
@@ -89,7 +109,10 @@ class SectorElement:
         largest = float(wavenumbers.max())
         y_wl, z_wl = (largest * float(np.abs(lags).max()) / (2 * np.pi) for lags in (y_m, z_m))
         sines, u_z, weights = _nodes(self, _order(2.5 * z_wl), _order(2.9 * y_wl))
-        over_phi = np.einsum("fytp,tp->fyt", cosines(wavenumbers[:, None, None] * sines, y_m), weights)
+        weighted = cosines(wavenumbers[:, None, None] * sines, y_m, weights)
+        over_phi = (weighted.reshape(-1, sines.shape[1]) @ np.ones(sines.shape[1])).reshape(
+            weighted.shape[:3]
+        )
         over_theta: Floats = over_phi @ cosines(wavenumbers[:, None] * u_z, z_m).transpose(0, 2, 1)
         return over_theta + ratio(-self.floor_db) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
@@ -115,6 +138,22 @@ class CosineElement:
         along = np.sin(floats(theta_rad)) * np.cos(floats(phi_rad))
         front: Floats = np.where(along > 0, np.maximum(along, 0) ** self.exponent, 0.0)
         return front
+
+    def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
+        """Slopes and curvatures of the logarithm of the power in front.
+
+        theta_rad [rad]: zenith angle.
+        phi_rad [rad]: azimuth.
+        Returns [1/rad, 1/rad, 1/rad^2, 1/rad^2]: by theta, phi, theta twice, phi twice.
+        Source: derivatives of n log(sin theta cos phi).
+        """
+        n, sin_t, cos_p = self.exponent, np.sin(theta_rad), np.maximum(np.cos(phi_rad), 1e-6)
+        return (
+            n * np.cos(theta_rad) / sin_t,
+            -n * np.sin(phi_rad) / cos_p,
+            -n / sin_t**2,
+            -n / cos_p**2,
+        )
 
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
         """Kernel of the element, a function of the distance alone.
@@ -157,6 +196,17 @@ class IsotropicElement:
         shown: Floats = np.where((along > 0) | (not self.front_only), 1.0, 0.0)
         return shown
 
+    def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
+        """Slopes and curvatures of the logarithm of the power: none.
+
+        theta_rad [rad]: zenith angle.
+        phi_rad [rad]: azimuth.
+        Returns [1/rad, 1/rad, 1/rad^2, 1/rad^2]: zeros.
+        Source: definition.
+        """
+        none = np.zeros(np.broadcast(theta_rad, phi_rad).shape)
+        return none, none, none, none
+
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
         """Kernel of the element.
 
@@ -169,22 +219,22 @@ class IsotropicElement:
         return (0.5 if self.front_only else 1.0) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
-def cosines(angles: Floats, lags: Floats) -> Floats:
+def cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Floats:
     """Cosines of lag times angle, by recurrence where the lags are whole multiples of one step.
 
     angles [rad/m]: shape (F, ...).
     lags [m]: shape (L,), ascending.
-    Returns [1]: cos(lag angle), shape (F, L, ...).
+    weights [1]: factor of each angle, shape (...).
+    Returns [1]: weight cos(lag angle), shape (F, L, ...).
     Source: cos((n + 1) x) = 2 cos x cos(n x) - cos((n - 1) x).
     """
-    steps = np.diff(lags)
-    shape = (len(angles), len(lags), *angles.shape[1:])
-    if len(lags) < 3 or abs(lags[0]) > 1e-12 or np.ptp(steps) > 1e-9 * steps[0]:
-        return np.cos(angles[:, None] * lags.reshape((1, -1) + (1,) * (angles.ndim - 1)))
-    out = np.empty(shape)
-    out[:, 0] = 1
-    np.cos(angles * steps[0], out=out[:, 1])
-    twice = 2 * out[:, 1]
+    steps = lags[1:] - lags[:-1]
+    if len(lags) < 3 or abs(lags[0]) > 1e-12 or steps.max() - steps.min() > 1e-9 * steps[0]:
+        return weights * np.cos(angles[:, None] * lags.reshape((1, -1) + (1,) * (angles.ndim - 1)))
+    out = np.empty((len(angles), len(lags), *angles.shape[1:]))
+    out[:, 0] = weights
+    twice = 2 * np.cos(angles * steps[0])
+    np.multiply(0.5 * weights, twice, out=out[:, 1])
     for n in range(2, len(lags)):
         np.multiply(twice, out[:, n - 1], out=out[:, n])
         out[:, n] -= out[:, n - 2]

@@ -5,6 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 import numpy as np
+from numpy.typing import NDArray
 
 from speccheck.physics.decibels import Floats
 from speccheck.physics.element import Element
@@ -14,6 +15,7 @@ from speccheck.physics.layout import (
     Line,
     column_weights,
     lines,
+    row_shifts,
     row_weights,
     wavenumber,
 )
@@ -21,7 +23,10 @@ from speccheck.physics.layout import (
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Excitation:
-    """A panel driven in S states: wavenumbers [rad/m], steering, weights of rows (S, M), columns (S, N)."""
+    """A panel driven in S states: wavenumbers [rad/m], steering, weights of rows (S, M), columns (S, N).
+
+    `distinct` holds the F different wavenumbers, `which` the one of each state.
+    """
 
     layout: ArrayLayout
     element: Element
@@ -30,14 +35,16 @@ class Excitation:
     phi_rad: Floats
     rows: Complex
     columns: Complex
+    row_shifts_m: Floats | None
+    distinct: Floats
+    which: NDArray[np.intp]
 
     @property
     def row_groups(self) -> tuple[tuple[slice, float], ...]:
         """Rows that share a sideways shift, and that shift [m]."""
-        shifts = lines(self.layout)[2]
-        if not shifts.any():
+        if self.row_shifts_m is None or len(self.row_shifts_m) < 2:
             return ((slice(None), 0.0),)
-        return ((slice(0, None, 2), 0.0), (slice(1, None, 2), float(shifts[1])))
+        return ((slice(0, None, 2), 0.0), (slice(1, None, 2), float(self.row_shifts_m[1])))
 
 
 def excite(
@@ -53,41 +60,39 @@ def excite(
     Returns [Excitation]: the states.
     Source: 3GPP TR 37.840 clause 5.4.4, with theta = 90 + tilt.
     """
-    wavenumbers = wavenumber(freq_hz)
+    k = wavenumber(freq_hz)
     tilt, phi = np.radians(tilt_deg), np.radians(scan_deg)
     u_y = np.cos(tilt) * np.sin(phi)
-    rows = row_weights(layout, wavenumbers, tilt)
-    shifts = lines(layout)[2]
-    if shifts.any():
-        rows = rows * np.exp(-1j * np.multiply.outer(wavenumbers * u_y, shifts))
-    return Excitation(
-        layout, element, wavenumbers, np.pi / 2 + tilt, phi, rows, column_weights(layout, wavenumbers, u_y)
-    )
+    rows, columns = row_weights(layout, k, tilt), column_weights(layout, k, u_y)
+    shifts = row_shifts(layout)
+    if shifts is not None:
+        rows = rows * np.exp(-1j * (k * u_y)[:, None] * shifts)
+    distinct, which = np.unique(k, return_inverse=True)
+    return Excitation(layout, element, k, np.pi / 2 + tilt, phi, rows, columns, shifts, distinct, which)
 
 
-def phasors(line: Line, path_phase: Floats, part: slice = slice(None)) -> Complex:
-    """Phase of each element of a line towards given directions, by recurrence on a uniform line.
+def phasors(line: Line, path_phase: Floats) -> Complex:
+    """Phase of each element of a line towards given directions, counted from its first element.
 
     line [Line]: element positions.
     path_phase [rad/m]: wavenumber times direction cosine, shape (G, P).
-    part [1]: which elements of the line.
-    Returns [1]: exp(j position path_phase), shape (G, M, P).
+    Returns [1]: exp(j (position - first) path_phase), shape (G, M, P).
     Source: definition; powers of one phasor where the positions are equally spaced.
     """
-    positions = line.positions[part]
-    if line.uniform_pitch_m == 0.0:
-        return np.asarray(np.exp(1j * path_phase[:, None, :] * positions[:, None]))
-    out = np.empty((path_phase.shape[0], len(positions), path_phase.shape[1]), complex)
-    np.exp(1j * positions[0] * path_phase, out=out[:, 0])
-    if len(positions) > 1:
-        step = np.exp(1j * (positions[1] - positions[0]) * path_phase)
-        for n in range(1, len(positions)):
-            np.multiply(out[:, n - 1], step, out=out[:, n])
+    count = len(line.positions)
+    if line.pitch_m == 0.0 or count == 1:
+        return np.asarray(np.exp(1j * path_phase[:, None] * (line.positions - line.positions[0])[:, None]))
+    out = np.empty((path_phase.shape[0], count, path_phase.shape[1]), complex)
+    out[:, 0] = 1
+    step = out[:, 1]
+    np.exp(1j * line.pitch_m * path_phase, out=step)
+    for n in range(2, count):
+        np.multiply(out[:, n - 1], step, out=out[:, n])
     return out
 
 
 def row_factor(states: Excitation, u_y: Floats, u_z: Floats) -> Complex:
-    """Sum over the rows of one column.
+    """Sum over the rows of one column, its phase counted from the first row.
 
     states [Excitation]: the states.
     u_y [1]: direction cosine along y, shape (S, P).
@@ -95,17 +100,17 @@ def row_factor(states: Excitation, u_y: Floats, u_z: Floats) -> Complex:
     Returns [1]: complex factor, shape (S, P).
     Source: array factor, 3GPP TR 37.840 clause 5.4.4.
     """
-    line = lines(states.layout)[0]
     k = states.wavenumbers[:, None]
+    table = phasors(lines(states.layout)[0], k * u_z)
     total: Complex = np.zeros(u_z.shape, complex)
     for part, shift in states.row_groups:
-        factor = np.einsum("sm,smp->sp", states.rows[:, part], phasors(line, k * u_z, part))
+        factor = (states.rows[:, None, part] @ table[:, part])[:, 0]
         total += factor * np.exp(1j * shift * k * u_y) if shift else factor
     return total
 
 
 def column_factor(states: Excitation, u_y: Floats) -> Complex:
-    """Sum over the columns of one row.
+    """Sum over the columns of one row, its phase counted from the first column.
 
     states [Excitation]: the states.
     u_y [1]: direction cosine along y, shape (S, P).
@@ -113,7 +118,17 @@ def column_factor(states: Excitation, u_y: Floats) -> Complex:
     Source: array factor, 3GPP TR 37.840 clause 5.4.4.
     """
     table = phasors(lines(states.layout)[1], states.wavenumbers[:, None] * u_y)
-    return np.asarray(np.einsum("sn,snp->sp", states.columns, table))
+    return np.asarray((states.columns[:, None] @ table)[:, 0])
+
+
+def squared(factor: Complex) -> Floats:
+    """Power of a complex factor.
+
+    factor [1]: any shape.
+    Returns [1]: its squared magnitude.
+    Source: definition.
+    """
+    return np.asarray(factor.real**2 + factor.imag**2)
 
 
 def intensity(states: Excitation, theta_rad: Floats, phi_rad: Floats) -> Floats:
@@ -129,5 +144,5 @@ def intensity(states: Excitation, theta_rad: Floats, phi_rad: Floats) -> Floats:
     shape = (len(states.wavenumbers), theta_rad.shape[1])
     u_y = np.broadcast_to(sine * np.sin(phi_rad), shape)
     u_z = np.broadcast_to(np.cos(theta_rad), shape)
-    factor = row_factor(states, u_y, u_z) * column_factor(states, u_y)
-    return states.element.power(theta_rad, phi_rad) * (factor.real**2 + factor.imag**2)
+    power = squared(row_factor(states, u_y, u_z)) * squared(column_factor(states, u_y))
+    return states.element.power(theta_rad, phi_rad) * power

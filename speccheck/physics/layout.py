@@ -114,21 +114,26 @@ class ArrayLayout:
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Line:
-    """Element positions of one axis: total and port-centre positions [m], offset within the sub-array [m]."""
+    """The elements of one axis.
+
+    positions [m]: of the elements, centred. centres [m]: of the port each belongs to. amplitudes [1]: of each.
+    pitch_m [m]: where all are equally spaced, else 0.
+    moments [1, m, m^2]: 1, j z and (j z)^2 of each element, for derivatives of the line factor.
+    """
 
     positions: Floats
     centres: Floats
-    offsets: Floats
     amplitudes: Floats
-    uniform_pitch_m: float
+    pitch_m: float
+    moments: Complex
 
 
 @lru_cache(maxsize=512)
-def lines(layout: ArrayLayout) -> tuple[Line, Line, Floats]:
-    """Rows and columns of a layout, centred, and the sideways shift of each row.
+def lines(layout: ArrayLayout) -> tuple[Line, Line]:
+    """Rows and columns of a layout, centred.
 
     layout [ArrayLayout]: the panel.
-    Returns [Line, Line, m]: rows along z, columns along y, shift of each row.
+    Returns [Line, Line]: rows along z, columns along y.
     Source: 3GPP TR 38.901 clause 7.3.
     """
     rows = _line(
@@ -141,24 +146,41 @@ def lines(layout: ArrayLayout) -> tuple[Line, Line, Floats]:
         (layout.panel_columns, layout.panel_horizontal_pitch_m),
         layout.column_taper,
     )
-    shifted = layout.lattice is Lattice.TRIANGULAR
+    return rows, columns
+
+
+def row_shifts(layout: ArrayLayout) -> Floats | None:
+    """Sideways shift of each row.
+
+    layout [ArrayLayout]: the panel.
+    Returns [m]: half a pitch for the odd rows of a triangular lattice; None for a rectangular one.
+    Source: 3GPP-style panels with staggered rows (common practice).
+    """
+    if layout.lattice is Lattice.RECTANGULAR:
+        return None
     row_in_panel = np.tile(np.arange(layout.rows), layout.panel_rows)
-    shift_m = layout.horizontal_pitch_m / 2 if shifted else 0.0
-    return rows, columns, floats(row_in_panel % 2) * shift_m
+    return floats(row_in_panel % 2) * (layout.horizontal_pitch_m / 2)
 
 
 def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...]) -> Line:
     (count, pitch, grouped), (groups, group_pitch) = inner, outer
-    one = np.arange(count) * pitch
-    positions = (np.arange(groups)[:, None] * group_pitch + one).ravel()
-    positions = positions - (positions[0] + positions[-1]) / 2
-    centres = np.repeat(positions.reshape(-1, grouped).mean(1), grouped)
-    amplitudes = floats(taper or np.ones(len(positions)))
-    amplitudes = np.repeat(amplitudes, len(positions) // len(amplitudes))
-    steps = np.diff(positions)
-    uniform = len(steps) == 0 or bool(np.ptp(steps) < 1e-9 * np.abs(steps).max())
-    uniform_pitch = float(steps[0]) if uniform and len(steps) else 0.0
-    return Line(positions, centres, positions - centres, amplitudes, uniform_pitch)
+    positions = floats(np.arange(count) - (count - 1) / 2) * pitch
+    if groups > 1:
+        middles = (np.arange(groups) - (groups - 1) / 2) * group_pitch
+        positions = floats(middles[:, None] + positions).ravel()
+    uniform = groups == 1 or abs(group_pitch - count * pitch) < 1e-9 * group_pitch
+    if not uniform:
+        pitch = 0.0
+    elif count == 1:
+        pitch = group_pitch
+    centres = positions
+    if grouped > 1:
+        centres = np.repeat(positions.reshape(-1, grouped).mean(1), grouped)
+    amplitudes = np.ones(len(positions))
+    if taper:
+        amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
+    along = 1j * positions
+    return Line(positions, centres, amplitudes, pitch, np.array([amplitudes**0, along, along * along]).T)
 
 
 def wavenumber(freq_hz: Floats) -> Floats:
@@ -182,8 +204,9 @@ def row_weights(layout: ArrayLayout, wavenumbers: Floats, tilt_rad: Floats) -> C
     Source: 3GPP TR 37.840 clause 5.4.4; the phase that points a line along sin(tilt).
     """
     rows = lines(layout)[0]
-    inside = np.sin(np.radians(layout.subarray_tilt_deg)) * rows.offsets
-    path = np.multiply.outer(np.sin(tilt_rad), rows.centres) + inside
+    path = np.sin(tilt_rad)[:, None] * rows.centres
+    if layout.subarray_rows > 1 and layout.subarray_tilt_deg:
+        path += np.sin(np.radians(layout.subarray_tilt_deg)) * (rows.positions - rows.centres)
     return np.asarray(rows.amplitudes * np.exp(1j * wavenumbers[:, None] * path))
 
 
@@ -197,6 +220,4 @@ def column_weights(layout: ArrayLayout, wavenumbers: Floats, u_y: Floats) -> Com
     Source: 3GPP TR 37.840 clause 5.4.4.
     """
     columns = lines(layout)[1]
-    return np.asarray(
-        columns.amplitudes * np.exp(-1j * np.multiply.outer(wavenumbers * u_y, columns.centres))
-    )
+    return np.asarray(columns.amplitudes * np.exp(-1j * (wavenumbers * u_y)[:, None] * columns.centres))

@@ -13,8 +13,8 @@ from dataclasses import dataclass
 import numpy as np
 from numpy.typing import ArrayLike
 
-from speccheck.physics.beam import beam_peak
-from speccheck.physics.cuts import half_grid
+from speccheck.physics.beam import find_beam
+from speccheck.physics.cuts import both_sides, half_grid
 from speccheck.physics.decibels import Floats, db, floats, wavelength_m
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation, excite, intensity
@@ -135,15 +135,15 @@ def _all_states(
 ) -> Lobes:
     grids = np.broadcast_arrays(*(floats(key) for key in keys))
     states = excite(layout, element, *(grid.ravel() for grid in grids))
-    theta, phi = beam_peak(states)
-    beam = intensity(states, theta[:, None], phi[:, None])[:, 0]
+    beam = find_beam(states)
+    level, theta, phi = beam.intensity, beam.theta_rad, beam.phi_rad
     found = []
     for s, wavelength in enumerate(wavelength_m(grids[0].ravel())):
         state = _one(states, s)
         if points is None:
-            found.append(_anywhere(state, (theta[s], phi[s]), beam[s]))
+            found.append(_anywhere(state, (theta[s], phi[s]), level[s]))
         else:
-            found.append(_strongest(state, wavelength, beam[s], points(layout, wavelength)))
+            found.append(_strongest(state, wavelength, level[s], points(layout, wavelength)))
     shape = grids[0].shape
     return Lobes(
         *(
@@ -163,6 +163,9 @@ def _one(states: Excitation, s: int) -> Excitation:
         states.phi_rad[part],
         states.rows[part],
         states.columns[part],
+        states.row_shifts_m,
+        states.wavenumbers[part],
+        np.zeros(1, np.intp),
     )
 
 
@@ -255,9 +258,8 @@ def _highest_in_box(state: Excitation, centre: Floats, half_width: Floats) -> tu
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
     """Highest local maximum over the front outside the beam's own."""
-    grids = [half_grid(side, state.wavenumbers) for side in (state.layout.height_m, state.layout.width_m)]
-    elevation, phi = (np.concatenate([-half[:0:-1], half]) for half in grids)
-    theta = np.pi / 2 + elevation[1:-1]
+    phi = both_sides(half_grid(state.layout, state.wavenumbers))
+    theta = np.pi / 2 + phi[1:-1]
     mesh = np.meshgrid(theta, phi, indexing="ij")
     power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)
     padded = np.pad(power, 1, constant_values=-1.0)

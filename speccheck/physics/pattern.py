@@ -12,7 +12,7 @@ from speccheck.physics.layout import ArrayLayout
 from speccheck.physics.radiated import radiated_power
 
 
-def power_pattern(
+def power_pattern(  # noqa: PLR0917 state first, directions last
     layout: ArrayLayout,
     element: Element,
     freq_hz: float,
@@ -20,7 +20,7 @@ def power_pattern(
     scan_deg: float,
     theta_deg: ArrayLike,
     phi_deg: ArrayLike,
-) -> Floats:  # noqa: PLR0917 state first, direction last, as in a cut table
+) -> Floats:
     """Directivity as a ratio in given directions.
 
     layout [ArrayLayout]: the panel.

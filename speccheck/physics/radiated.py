@@ -14,7 +14,7 @@ from numpy.typing import NDArray
 from speccheck.physics.decibels import Floats
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation
-from speccheck.physics.layout import ArrayLayout, Complex, lines
+from speccheck.physics.layout import Complex, Line, lines
 
 
 def radiated_power(states: Excitation) -> Floats:
@@ -24,38 +24,35 @@ def radiated_power(states: Excitation) -> Floats:
     Returns [1]: (1/4 pi) integral of the intensity, shape (S,).
     Source: quadratic form of the far field over a lossless array, C. A. Balanis, "Antenna Theory", ch. 6.
     """
-    wavenumbers, which = _distinct(states.wavenumbers)
-    rows, columns, shifts = lines(states.layout)
-    if not shifts.any():
-        y_lags, y_pairs = _folded(states.layout, 1)
-        z_lags, z_pairs = _folded(states.layout, 0)
-        kernel = _kernel(states.element, tuple(wavenumbers), tuple(y_lags), tuple(z_lags))
-        over_y = _correlation(states.columns).real @ y_pairs
-        over_z = _correlation(states.rows).real @ z_pairs
-        return np.asarray(((over_y[:, None, :] @ kernel[which])[:, 0] * over_z).sum(1))
-    same = shifts[:, None] == shifts
-    from_shifted = (shifts[:, None] > 0) & (shifts == 0)
+    if states.row_shifts_m is not None:
+        return _staggered_power(states, states.row_shifts_m)
+    rows, columns = lines(states.layout)
+    (y_lags, y_pairs), (z_lags, z_pairs) = _folded(columns), _folded(rows)
+    kernel = _kernels(states, y_lags, z_lags)
+    over_y = _correlation(states.columns).real @ y_pairs
+    over_z = _correlation(states.rows).real @ z_pairs
+    return np.asarray(((over_y[:, None] @ kernel)[:, 0] * over_z).sum(1))
+
+
+def _staggered_power(states: Excitation, shifts: Floats) -> Floats:
+    """Pairs of rows with equal shift, and twice the real part of the pairs shifted against unshifted rows."""
+    rows, columns = lines(states.layout)
+    every = np.ones((len(columns.positions),) * 2, bool)
+    y_lags, y_pairs = _sum_over(_differences(columns), every)
+    over_y, pairs_z = _correlation(states.columns) @ y_pairs, _correlation(states.rows)
     total = np.zeros(len(states.wavenumbers))
-    for mask, shift, weight in ((same, 0.0, 1.0), (from_shifted, float(shifts.max()), 2.0)):
-        y_lags, y_pairs = _signed(columns.positions, np.ones((len(columns.positions),) * 2, bool))
-        z_lags, z_pairs = _signed(rows.positions, mask)
-        kernel = _kernel(
-            states.element, tuple(wavenumbers), tuple(np.abs(y_lags + shift)), tuple(np.abs(z_lags))
-        )
-        seen = (_correlation(states.columns) @ y_pairs)[:, None, :] @ kernel[which]
-        total += weight * (seen[:, 0] * (_correlation(states.rows) @ z_pairs)).sum(1).real
+    crossed = (shifts[:, None] > 0) & (shifts == 0)
+    for mask, shift, weight in ((shifts[:, None] == shifts, 0.0, 1.0), (crossed, float(shifts.max()), 2.0)):
+        z_lags, z_pairs = _sum_over(_differences(rows), mask)
+        kernel = _kernels(states, np.abs(y_lags + shift), np.abs(z_lags))
+        total += weight * ((over_y[:, None] @ kernel)[:, 0] * (pairs_z @ z_pairs)).sum(1).real
     return total
 
 
-def _distinct(wavenumbers: Floats) -> tuple[Floats, NDArray[np.intp]]:
-    values, which = np.unique(wavenumbers, return_inverse=True)
-    return values, which
-
-
-def _correlation(weights: Complex) -> Complex:
-    """Products w_i w_j* of all pairs, shape (S, M M)."""
-    pairs = weights[:, :, None] * weights.conj()[:, None, :]
-    return pairs.reshape(len(weights), -1)
+def _kernels(states: Excitation, y_m: Floats, z_m: Floats) -> Floats:
+    """Kernel of each state, computed once per frequency."""
+    keys = (tuple(values.tolist()) for values in (states.distinct, y_m, z_m))
+    return _kernel(states.element, *keys)[states.which]
 
 
 @lru_cache(maxsize=512)
@@ -65,22 +62,33 @@ def _kernel(
     return element.kernel(np.array(wavenumbers), np.array(y_m), np.array(z_m))
 
 
-@lru_cache(maxsize=512)
-def _folded(layout: ArrayLayout, axis: int) -> tuple[Floats, Floats]:
+def _correlation(weights: Complex) -> Complex:
+    """Products w_i w_j* of all pairs, shape (S, M M)."""
+    pairs = weights[:, :, None] * weights.conj()[:, None, :]
+    return pairs.reshape(len(weights), -1)
+
+
+def _folded(line: Line) -> tuple[Floats, Floats]:
     """Distinct absolute lags [m] of a line and the matrix that sums pairs over them."""
-    rows, columns, _ = lines(layout)
-    positions = (rows, columns)[axis].positions
-    return _sum_over(np.abs(positions[:, None] - positions).ravel(), np.ones(len(positions) ** 2, bool))
+    count = len(line.positions)
+    if line.pitch_m or count == 1:
+        return np.arange(float(count)) * line.pitch_m, _uniform_pairs(count)
+    return _sum_over(np.abs(_differences(line)), np.ones((count, count), bool))
 
 
-def _signed(positions: Floats, mask: NDArray[np.bool_]) -> tuple[Floats, Floats]:
-    """Distinct signed lags [m] among the pairs of a mask and the matrix that sums those pairs over them."""
-    return _sum_over((positions[:, None] - positions).ravel(), mask.ravel())
+@lru_cache(maxsize=64)
+def _uniform_pairs(count: int) -> Floats:
+    steps = np.abs(np.subtract.outer(np.arange(count), np.arange(count))).ravel()
+    return np.eye(count)[steps]
+
+
+def _differences(line: Line) -> Floats:
+    return line.positions[:, None] - line.positions
 
 
 def _sum_over(lags: Floats, mask: NDArray[np.bool_]) -> tuple[Floats, Floats]:
+    """Distinct lags [m] and the matrix, shape (pairs, lags), that sums the pairs of the mask over them."""
+    lags = lags.ravel()
     scale = max(float(np.abs(lags).max()), 1e-300)
-    values, first, which = np.unique(np.round(lags / scale, 9), return_index=True, return_inverse=True)
-    matrix = np.zeros((len(lags), len(values)))
-    matrix[np.arange(len(lags)), which.ravel()] = mask
-    return lags[first], matrix
+    _, first, which = np.unique(np.round(lags / scale, 9), return_index=True, return_inverse=True)
+    return lags[first], np.eye(len(first))[which.ravel()] * mask.ravel()[:, None]

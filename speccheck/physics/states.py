@@ -8,14 +8,14 @@ from functools import lru_cache
 import numpy as np
 from numpy.typing import ArrayLike
 
-from speccheck.physics.beam import beam_peak
-from speccheck.physics.cuts import horizontal_cut, vertical_cut
+from speccheck.physics.beam import find_beam
+from speccheck.physics.cuts import both_sides, half_grid, horizontal_cut, vertical_cut
 from speccheck.physics.decibels import Floats, db, floats
 from speccheck.physics.element import Element
-from speccheck.physics.field import Excitation, excite, intensity
+from speccheck.physics.field import excite
 from speccheck.physics.layout import ArrayLayout
 from speccheck.physics.radiated import radiated_power
-from speccheck.physics.readings import read_cut
+from speccheck.physics.readings import read_cuts
 
 
 @dataclass(frozen=True, eq=False, slots=True)
@@ -73,9 +73,13 @@ def array_states(
     (19.25, 6.35)
     """
     grids = np.broadcast_arrays(floats(freq_hz), floats(tilt_deg), floats(scan_deg))
-    keys, back = np.unique(np.stack([grid.ravel() for grid in grids]), axis=1, return_inverse=True)
-    figures = _figures(layout, element, *(tuple(row) for row in keys.tolist()))
-    return ArrayStates(*(row[back.ravel()].reshape(grids[0].shape) for row in figures))
+    asked = list(zip(*(grid.ravel().tolist() for grid in grids), strict=True))
+    distinct = dict.fromkeys(asked)
+    figures = _figures(layout, element, tuple(distinct))
+    if len(distinct) < len(asked):
+        place = {state: at for at, state in enumerate(distinct)}
+        figures = figures[:, [place[state] for state in asked]]
+    return ArrayStates(*figures.reshape(-1, *grids[0].shape))
 
 
 def directivity_dbi(
@@ -102,7 +106,7 @@ def directivity_dbi(
     """
     grids = np.broadcast_arrays(floats(freq_hz), floats(tilt_deg), floats(scan_deg))
     states = excite(layout, element, *(grid.ravel() for grid in grids))
-    return _beam(states)[0].reshape(grids[0].shape)
+    return db(find_beam(states).intensity / radiated_power(states)).reshape(grids[0].shape)[()]
 
 
 def scan_loss_db(
@@ -132,39 +136,43 @@ def scan_loss_db(
     return directivity_dbi(layout, element, freq_hz, rest) - steered
 
 
-def _beam(states: Excitation) -> tuple[Floats, Floats, Floats, Floats]:
-    """Directivity [dBi], theta and phi [rad] and intensity [1] of the beam."""
-    theta, phi = beam_peak(states)
-    peak = intensity(states, theta[:, None], phi[:, None])[:, 0]
-    return db(peak / radiated_power(states)), theta, phi, peak
-
-
 @lru_cache(maxsize=1024)
 def _figures(
-    layout: ArrayLayout,
-    element: Element,
-    freq_hz: tuple[float, ...],
-    tilt_deg: tuple[float, ...],
-    scan_deg: tuple[float, ...],
-) -> tuple[Floats, ...]:
-    """Figures in the order of ArrayStates, of distinct states."""
-    keys = np.array(freq_hz), np.array(tilt_deg), np.array(scan_deg)
+    layout: ArrayLayout, element: Element, distinct: tuple[tuple[float, float, float], ...]
+) -> Floats:
+    """Figures in the order of ArrayStates, one row each, of distinct states (frequency, tilt, scan)."""
+    keys = np.array(distinct).T
     states = excite(layout, element, *keys)
-    directivity, theta, phi, peak = _beam(states)
-    across = read_cut(horizontal_cut(states, theta, phi, peak))
-    along = read_cut(vertical_cut(states, theta, phi, peak))
-    return (
-        *keys,
-        directivity,
-        np.degrees(theta),
-        np.degrees(phi),
-        np.degrees(across.width_rad),
-        np.degrees(along.width_rad),
-        np.fmax(across.before_db, across.after_db),
-        np.fmax(along.before_db, along.after_db),
-        along.before_db,
-        across.highest_db,
-        np.degrees(across.highest_rad),
-        along.highest_db,
-        90 + np.degrees(along.highest_rad),
+    beam = find_beam(states)
+    half = half_grid(layout, states.wavenumbers)
+    cuts = np.concatenate([horizontal_cut(states, beam, half), vertical_cut(states, beam, half)])
+    peaks = np.concatenate([beam.phi_rad, beam.theta_rad - np.pi / 2])
+    read = read_cuts(cuts, both_sides(half), peaks)
+    width, before, after, highest, where = (
+        figure.reshape(2, -1)
+        for figure in (
+            np.degrees(read.width_rad),
+            read.before_db,
+            read.after_db,
+            read.highest_db,
+            np.degrees(read.highest_rad),
+        )
     )
+    first = np.fmax(before, after)
+    figures = np.stack(
+        [
+            *keys,
+            db(beam.intensity / radiated_power(states)),
+            np.degrees(beam.theta_rad),
+            np.degrees(beam.phi_rad),
+            *width,
+            *first,
+            before[1],
+            highest[0],
+            where[0],
+            highest[1],
+            90 + where[1],
+        ]
+    )
+    figures.flags.writeable = False
+    return figures
