@@ -12,6 +12,7 @@ from speccheck.checks import power, power_budget, losses, matching, intermodulat
 from speccheck.checks import bands, duplex, directions
 from speccheck.checks import wind, mechanics, exposure, wording
 from speccheck.checks import innocent_gain, innocent_geometry, innocent_statements
+from speccheck.checks.curves import panel_drawings
 from speccheck.checks.exposure_note import exposure_note
 from speccheck.checks.runner import examine
 # isort: on
@@ -23,4 +24,4 @@ FAMILIES = (
 )  # fmt: skip
 INNOCENT = (innocent_gain, innocent_geometry, innocent_statements)
 
-__all__ = ["FAMILIES", "INNOCENT", "examine", "exposure_note"]
+__all__ = ["FAMILIES", "INNOCENT", "examine", "exposure_note", "panel_drawings"]
