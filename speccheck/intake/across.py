@@ -188,7 +188,8 @@ class AcrossReader:
                 column.band is not None or bool(column.band_name),
                 found.context,
             )
-            if not banded and column.index != self._banded and (at.band or at.band_name):
+            of_row = column.index == self._banded or not set(found.label.parameters) <= _FREQUENCY_KEYS
+            if not banded and of_row and (at.band or at.band_name):
                 band, banded = at.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
             if column.band is not None and column.band not in draft.bands:
@@ -196,7 +197,8 @@ class AcrossReader:
         elif cell.column == self._banded:
             label = Label(column.heading, ("operating_bands",), column.unit or "MHz")
             if find_bands(cell.text).spans:
-                draft.claims.append(Claim(cell, Context(label, heading=column.heading), at.band))
+                context = Context(label, heading=column.heading)
+                draft.claims.append(Claim(cell, context, at.band, banded=at.band is not None))
             else:
                 self._result.mark(cell, "label")
         elif found.role in _SILENT_ROLES:

@@ -35,7 +35,7 @@ class Claim:
 
 @dataclass(slots=True)
 class Draft:
-    """A panel being collected."""
+    """A panel being collected; `joined` are pieces found elsewhere, often on other sheets."""
 
     name: str
     grid: Grid
@@ -43,10 +43,17 @@ class Draft:
     claims: list[Claim] = field(default_factory=list)
     named: bool = False
     bands: list[Band] = field(default_factory=list)
+    joined: list[Draft] = field(default_factory=list)
+
+    def pieces(self) -> list[Draft]:
+        """This draft and all joined to it."""
+        return [self, *(piece for other in self.joined for piece in other.pieces())]
 
     def keys(self) -> set[str]:
         """Parameters claimed so far."""
-        return {key for claim in self.claims for key in claim.context.label.parameters}
+        return {
+            key for piece in self.pieces() for claim in piece.claims for key in claim.context.label.parameters
+        }
 
 
 @dataclass(slots=True)

@@ -205,10 +205,8 @@ class DownReader:
             return label.bands.hull, ""
         for text in filter(None, (band_cell.text if band_cell else "", condition)):
             bands = find_bands(text)
-            if bands.spans and (bands.proved or is_band_label(text)):
-                return bands.hull, ""
-            if is_band_label(text):
-                return None, text
+            if bands.proved or is_band_label(text):
+                return bands.hull, "" if bands.hull else text
         span = self._grid.span(cell)
         others = [
             c for i, c in self._columns.items() if span.left < i <= span.right and c.role in VALUE_ROLES
@@ -216,11 +214,20 @@ class DownReader:
         if any(c.band != column.band or c.band_name != column.band_name for c in others):
             return None, ""
         if column.band or column.band_name:
+            if self._said_once(cell, column):
+                return None, ""
             return column.band, column.band_name if column.band is None else ""
         state = self._state
         if state.side_name:
             return state.side_band, state.side_name if state.side_band is None else ""
         return state.section_band, state.section_name if state.section_band is None else ""
+
+    def _said_once(self, cell: Cell, column: Column) -> bool:
+        """A figure in the first of a panel's band columns, the others empty, is said of all: merges get lost."""
+        mine = [c for c in self._columns.values() if c.role in VALUE_ROLES and (c.band or c.band_name)]
+        mine = [c for c in mine if self._panels.of(c) is self._panels.of(column)]
+        filled = [c for c in mine if self._grid.covering(cell.row, c.index) is not None]
+        return len(mine) > 1 and mine[0] is column and filled == [column]
 
     def _maybe_new_panel(self) -> None:
         """A title inside the table, over parameters the panel above already has, starts the next panel."""

@@ -96,6 +96,11 @@ def is_unit(text: str) -> bool:
     return len(text) <= 24 and (bool(unit_name(text)) or is_counting_unit(text))
 
 
+def looks_like_line(text: str) -> bool:
+    """Whether a text has the form ``Label: value``, known or not."""
+    return len(text) < 200 and _LINE.match(text) is not None
+
+
 def statistic_of(text: str) -> str:
     """``min``, ``typ`` or ``max`` when a heading cell says only that."""
     return _STATISTIC.get(column_role(text), "")

@@ -35,7 +35,7 @@ def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
 
 
 def _side_by_side(marks: Marks, table: Across) -> list[Across]:
-    """Tables beside each other share rows; an empty column with the same headings on both sides parts them."""
+    """Tables beside each other share rows; an empty column between the same headings parts them."""
     columns = sorted({c.column for row in table.heading_rows for c in marks.rows[row]})
     for before, after in pairwise(columns):
         if after - before < 2:

@@ -9,6 +9,9 @@ from speccheck.intake.labels import Label, Labels, is_unit
 from speccheck.intake.words import column_role
 
 
+_LINE_MARKS = (":", "=", "\t", "...", "…")
+
+
 @dataclass(slots=True)
 class Marks:
     """Headings and pasted lines of a sheet by place, and its cells by row."""
@@ -36,12 +39,13 @@ def mark(grid: Grid, labels: Labels) -> Marks:
         if not isinstance(raw, str) or cell.fault or len(raw) > 400 or is_unit(raw):
             continue
         label = labels.of(raw)
-        if label:
-            marks.headings[place] = label
-        elif ":" in raw or "=" in raw or "\t" in raw or "..." in raw or "…" in raw:
+        line = None
+        if (not label or label.bands.spans) and any(mark in raw for mark in _LINE_MARKS):
             line = labels.parse_line(raw)
-            if line is not None:
-                marks.lines[place] = line
+        if line is not None:
+            marks.lines[place] = line
+        elif label:
+            marks.headings[place] = label
     return marks
 
 

@@ -18,8 +18,8 @@ _NOT_A_CODE = re.compile(
 )
 _PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—]\s+")
 _DESCRIBES = re.compile(
-    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|datenblatt|"
-    r"fiche|ficha|scheda|hoja|karta|donnees|datos|dati|dados|dane|gegevens|technische)\b"
+    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|"
+    r"datenblatt|fiche|ficha|scheda|hoja|karta|donnees|datos|dati|dados|dane|gegevens|technische)\b"
 )
 _LONG_TITLE = 90
 _LONG_NAME = 40
@@ -113,7 +113,8 @@ class Names:
             return self._taken(candidates[scores.index(max(scores))], result)
         if not is_generic_sheet_name(sheet):
             return Title(model_name(sheet), first, True)
-        short = [c for c in candidates if len(c.text) <= 40 and len(candidates) <= 2]
+        short = [c for c in candidates if len(c.text) <= _LONG_NAME and not is_generic_sheet_name(c.text)]
+        short = short if len(candidates) <= 3 else []
         if short:
             result.mark(short[-1], "heading")
             return Title(model_name(short[-1].text), short[-1], False)

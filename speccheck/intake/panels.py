@@ -9,19 +9,16 @@ from dataclasses import dataclass, field, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Draft
-from speccheck.intake.reading import Outcome, Reader
-from speccheck.records import Band, Panel, Reading, Statement, Unread
+from speccheck.intake.reading import Found, Outcome, Reader
+from speccheck.records import Band, Panel, Statement, Unread
 
 FREQUENCY = frozenset({"frequency_range", "operating_bands"})
 GEOMETRY = frozenset(
-    {
-        "array_rows", "array_columns", "element_count", "array_size", "horizontal_element_spacing",
-        "vertical_element_spacing", "element_spacing", "subarray_rows", "subarray_columns",
-        "subarray_spacing_vertical", "lattice", "panel_groups", "element_type", "transceivers",
-        "csi_rs_ports", "mimo_layers", "served_users", "beam_count", "element_gain", "subarray_gain", "tdd_duty",
-        "occupied_bandwidth", "front_to_back_definition", "grating_lobes",
-    }
-)  # fmt: skip
+    "array_rows array_columns element_count array_size horizontal_element_spacing vertical_element_spacing "
+    "element_spacing subarray_rows subarray_columns subarray_spacing_vertical lattice panel_groups element_type "
+    "transceivers csi_rs_ports mimo_layers served_users beam_count element_gain subarray_gain tdd_duty "
+    "occupied_bandwidth front_to_back_definition grating_lobes".split()
+)
 """Band-scoped in a panel of several arrays, but said of the whole panel when it has one."""
 PER_BAND_IF_SAID = GEOMETRY | {
     "rf_ports",
@@ -38,29 +35,31 @@ _TITLE_KEYS = frozenset(
 def joined(drafts: list[Draft]) -> list[Draft]:
     """Drafts of one panel put together: by name, or because a piece has no name of its own."""
     kept: list[Draft] = []
+    by_name: dict[str, list[Draft]] = {}
     for draft in drafts:
         if not draft.claims:
             continue
-        home = _home(draft, kept)
+        home = _home(draft, kept, by_name.get(draft.name.casefold(), []))
         if home is None:
             kept.append(draft)
+            by_name.setdefault(draft.name.casefold(), []).append(draft)
             continue
         if draft.named and not home.named:
             home.name, home.named = draft.name, True
-        home.claims += draft.claims
+            by_name.setdefault(draft.name.casefold(), []).append(home)
+        home.joined.append(draft)
         home.bands += [band for band in draft.bands if band not in home.bands]
     return kept
 
 
-def _home(draft: Draft, kept: list[Draft]) -> Draft | None:
-    for other in reversed(kept):
-        same_name = other.name.casefold() == draft.name.casefold()
-        if same_name and not _clashes(draft, other):
+def _home(draft: Draft, kept: list[Draft], namesakes: list[Draft]) -> Draft | None:
+    for other in reversed(namesakes):
+        if not _clashes(draft, other):
             return other
     if not kept:
         return None
     last = kept[-1]
-    if last.keys() <= _TITLE_KEYS and last.grid is draft.grid and not draft.named:
+    if not draft.named and last.grid is draft.grid and last.keys() <= _TITLE_KEYS:
         return last
     if draft.named and (last.named or last.grid is draft.grid):
         return None
@@ -70,10 +69,20 @@ def _home(draft: Draft, kept: list[Draft]) -> Draft | None:
 
 def _clashes(draft: Draft, other: Draft) -> bool:
     """Whether two drafts state the same things and so are two panels."""
-    mine = {(key, c.band, c.context.band_name) for c in draft.claims for key in c.context.label.parameters}
-    theirs = {(key, c.band, c.context.band_name) for c in other.claims for key in c.context.label.parameters}
+    mine = {(key, c.band, c.context.band_name) for c in _claims(draft) for key in c.context.label.parameters}
+    theirs = {
+        (key, c.band, c.context.band_name) for c in _claims(other) for key in c.context.label.parameters
+    }
     shared = {entry for entry in mine & theirs if entry[0] not in _TITLE_KEYS}
     return len(shared) >= 2 and len(shared) * 3 >= min(len(mine), len(theirs))
+
+
+def _stated(draft: Draft) -> set[tuple[str, Band | None, str]]:
+    return {(key, c.band, c.context.band_name) for c in _claims(draft) for key in c.context.label.parameters}
+
+
+def _claims(draft: Draft) -> list[Claim]:
+    return [claim for piece in draft.pieces() for claim in piece.claims]
 
 
 @dataclass(slots=True)
@@ -93,12 +102,16 @@ class Builder:
 
     def build(self, draft: Draft) -> Built:
         """Read the claims of a draft and settle what only the whole panel can settle."""
-        sheet = draft.grid.name
-        built = Built(Panel(name=draft.name, where=self._reader.where(sheet, draft.where.address)))
-        readings: list[Reading] = []
+        where = self._reader.where(draft.grid.name, draft.where.address)
+        built = Built(Panel(name=draft.name, where=where))
         statements: list[Statement] = []
+        readings: list[Found] = []
         tolerances: list[tuple[Claim, Outcome]] = []
-        outcomes = [(claim, self._reader.read(claim, sheet)) for claim in draft.claims]
+        outcomes = [
+            (claim, self._reader.read(claim, piece.grid.name))
+            for piece in draft.pieces()
+            for claim in piece.claims
+        ]
         several = self._bands(draft, outcomes)
         for claim, outcome in outcomes:
             role = "unread"
@@ -106,10 +119,11 @@ class Builder:
                 tolerances.append((claim, outcome))
                 role = "label"
             else:
-                if outcome.readings:
+                if outcome.found:
                     role = "reading"
-                    found, trouble = _shared_out(claim, outcome.readings, draft.bands, several)
-                    readings += self._noted(found, outcome, claim, sheet)
+                    found, trouble = _shared_out(claim, outcome.found, draft.bands, several)
+                    self._add_notes(found, outcome, claim)
+                    readings += found
                     if trouble is not None:
                         built.unread.append(trouble)
                 if outcome.statement is not None:
@@ -117,10 +131,12 @@ class Builder:
                     statements.append(outcome.statement)
                 if outcome.unread is not None:
                     built.unread.append(outcome.unread)
-            built.roles[sheet, claim.cell.row, claim.cell.column] = role
-        readings = _with_tolerances(readings, tolerances, built.unread)
-        readings = _placed(readings, draft.bands, several)
-        built.panel = replace(built.panel, readings=tuple(readings), statements=tuple(statements))
+            built.roles[outcome.sheet, claim.cell.row, claim.cell.column] = role
+        _add_tolerances(readings, tolerances, built.unread)
+        _place(readings, draft.bands, several)
+        built.panel = replace(
+            built.panel, readings=tuple(f.reading() for f in readings), statements=tuple(statements)
+        )
         return built
 
     def _bands(self, draft: Draft, outcomes: list[tuple[Claim, Outcome]]) -> bool:
@@ -129,8 +145,9 @@ class Builder:
         for claim, outcome in outcomes:
             if claim.context.label.parameters[0] not in FREQUENCY:
                 continue
-            outcome.readings = [_as_span(reading) for reading in outcome.readings]
-            spans = [r.value for r in outcome.readings if isinstance(r.value, tuple)]
+            for found in outcome.found:
+                _name_to_span(found)
+            spans = [f.value for f in outcome.found if isinstance(f.value, tuple)]
             if len(spans) > 1 and len(draft.bands) < 2:
                 draft.bands += [s for s in spans if s not in draft.bands]
             elif len(spans) == 1 and not claim.banded:
@@ -142,23 +159,24 @@ class Builder:
             return True
         return len(draft.bands) > 1 or named
 
-    def _noted(self, readings: list[Reading], outcome: Outcome, claim: Claim, sheet: str) -> list[Reading]:
-        markers = dict.fromkeys((*outcome.footnotes, *_markers(claim.context.heading)))
-        notes = [f"note {m}: {self._notes[sheet][m]}" for m in markers if m in self._notes.get(sheet, {})]
+    def _add_notes(self, found: list[Found], outcome: Outcome, claim: Claim) -> None:
+        notes = self._notes.get(outcome.sheet)
         if not notes:
-            return readings
-        extra = "; ".join(notes)
-        return [replace(r, condition=f"{r.condition}; {extra}" if r.condition else extra) for r in readings]
+            return
+        markers = dict.fromkeys((*outcome.footnotes, *_markers(claim.context.heading)))
+        remark = "; ".join(f"note {m}: {notes[m]}" for m in markers if m in notes)
+        for one in found:
+            one.remark = remark
 
 
-def _as_span(reading: Reading) -> Reading:
+def _name_to_span(found: Found) -> None:
     """A band given by name ('n78') as its frequencies."""
-    if isinstance(reading.value, str):
-        hull = find_bands(reading.value).hull
+    if isinstance(found.value, str):
+        hull = find_bands(found.value).hull
         if hull is not None:
-            how = f"{reading.recognised}; {reading.value} is {hull[0]:g}–{hull[1]:g} MHz by the band table"
-            return replace(reading, value=hull, unit="MHz", recognised=how)
-    return reading
+            how = f"{found.value} is {hull[0]:g}–{hull[1]:g} MHz by the band table"
+            found.recognised = f"{found.figure.recognised}; {how}"
+            found.value = hull
 
 
 def _markers(heading: str) -> tuple[str, ...]:
@@ -167,86 +185,79 @@ def _markers(heading: str) -> tuple[str, ...]:
 
 
 def _shared_out(
-    claim: Claim, readings: list[Reading], bands: list[Band], several: bool
-) -> tuple[list[Reading], Unread | None]:
+    claim: Claim, found: list[Found], bands: list[Band], several: bool
+) -> tuple[list[Found], Unread | None]:
     """A list of figures in one cell, given to the panel's bands in their order."""
-    first = readings[0]
+    first = found[0]
     if first.parameter in FREQUENCY:
-        return _frequency_readings(claim, readings, several), None
-    alike = [r for r in readings if r.parameter == first.parameter]
-    plain = len(alike) > 1 and not any(r.at for r in alike) and len({r.condition for r in alike}) == 1
-    if (
-        claim.band is not None
-        or not plain
-        or parameters()[first.parameter].kind not in ("number", "range", "count")
-    ):
-        return readings, None
+        return _frequencies(claim, found, several), None
+    if len(found) == 1 or claim.band is not None:
+        return found, None
+    alike = [f for f in found if f.parameter == first.parameter]
+    plain = len(alike) > 1 and not any(f.figure.quantity.at for f in alike)
+    plain = plain and len({(f.figure.condition, f.figure.sense) for f in alike}) == 1
+    if not plain or parameters()[first.parameter].kind not in ("number", "range", "count"):
+        return found, None
     if len(alike) == len(bands):
-        others = [r for r in readings if r not in alike]
-        return [*(replace(r, band=b) for r, b in zip(alike, bands, strict=True)), *others], None
-    if len({r.sense for r in alike}) > 1:
-        return readings, None
+        for one, band in zip(alike, bands, strict=True):
+            one.band = band
+        return found, None
     reason = f"{len(alike)} figures in one cell, but {len(bands)} known bands to give them to"
-    return [], Unread(
-        where=first.where, text=first.raw, reason=reason, suggestion="ask which figure holds for which band"
-    )
+    ask = "ask which figure holds for which band"
+    return [], Unread(where=first.where, text=first.raw, reason=reason, suggestion=ask)
 
 
-def _frequency_readings(claim: Claim, readings: list[Reading], several: bool) -> list[Reading]:
-    spans = [r for r in readings if isinstance(r.value, tuple)]
-    others = [r for r in readings if r not in spans]
-    if len(spans) > 1 or claim.banded:
-        banded = [
-            replace(r, parameter="operating_bands", band=r.value) for r in spans if isinstance(r.value, tuple)
-        ]
-        return [*banded, *others]
-    if spans and not several:
+def _frequencies(claim: Claim, found: list[Found], several: bool) -> list[Found]:
+    """The one range of a panel is also its operating band; of several ranges each is a band."""
+    spans = [f for f in found if isinstance(f.value, tuple)]
+    if len(spans) > 1 or (claim.banded and several):
+        for one in spans:
+            one.parameter, one.band = "operating_bands", _span_of(one)
+    elif spans and not several:
         whole = replace(spans[0], parameter="frequency_range", band=None)
-        band = spans[0].value if isinstance(spans[0].value, tuple) else None
-        return [whole, replace(spans[0], parameter="operating_bands", band=band), *others]
-    return [replace(r, band=None) if r.parameter == "frequency_range" else r for r in readings]
+        spans[0].parameter, spans[0].band = "operating_bands", _span_of(spans[0])
+        return [whole, *found]
+    else:
+        for one in found:
+            if one.parameter == "frequency_range":
+                one.band = None
+    return found
 
 
-def _with_tolerances(
-    readings: list[Reading], tolerances: list[tuple[Claim, Outcome]], unread: list[Unread]
-) -> list[Reading]:
+def _span_of(found: Found) -> Band | None:
+    return found.value if isinstance(found.value, tuple) else None
+
+
+def _add_tolerances(
+    readings: list[Found], tolerances: list[tuple[Claim, Outcome]], unread: list[Unread]
+) -> None:
     for claim, outcome in tolerances:
         key = claim.context.label.parameters[0]
-        amounts = [r.tolerance if r.tolerance is not None else r.value for r in outcome.readings]
+        amounts = [f.tolerance if f.tolerance is not None else f.value for f in outcome.found]
         amount = amounts[0] if amounts else None
-        hit = False
-        for index, reading in enumerate(readings):
-            fits = (
-                reading.parameter == key and claim.band in (None, reading.band) and reading.tolerance is None
-            )
-            if fits and isinstance(amount, float | int):
-                readings[index] = replace(reading, tolerance=abs(float(amount)))
-                hit = True
-        if not hit:
-            where = outcome.readings[0].where if outcome.readings else None
-            if where is not None:
-                reason = "a tolerance without a figure it belongs to"
-                unread.append(Unread(where=where, text=claim.cell.text, reason=reason))
-            elif outcome.unread is not None:
-                unread.append(outcome.unread)
-    return readings
+        fits = [
+            f for f in readings if f.parameter == key and claim.band in (None, f.band) and f.tolerance is None
+        ]
+        if isinstance(amount, float) and fits:
+            for one in fits:
+                one.tolerance = abs(amount)
+        elif outcome.found:
+            reason = "a tolerance without a figure it belongs to"
+            unread.append(Unread(where=outcome.found[0].where, text=claim.cell.text, reason=reason))
+        elif outcome.unread is not None:
+            unread.append(outcome.unread)
 
 
-def _placed(readings: list[Reading], bands: list[Band], several: bool) -> list[Reading]:
+def _place(readings: list[Found], bands: list[Band], several: bool) -> None:
     """Bands by the scope of each parameter."""
     table = parameters()
     only = bands[0] if len(bands) == 1 and not several else None
-    placed = []
-    for reading in readings:
-        key = reading.parameter
+    for found in readings:
+        key = found.parameter
         if key in FREQUENCY:
-            placed.append(reading)
             continue
         by_band = table[key].scope == "band" and key not in GEOMETRY
-        band = reading.band
         if only is not None:
-            band = only if by_band else None
+            found.band = only if by_band else None
         elif not by_band and key not in PER_BAND_IF_SAID:
-            band = None
-        placed.append(reading if band == reading.band else replace(reading, band=band))
-    return placed
+            found.band = None

@@ -6,7 +6,7 @@ from collections import defaultdict
 
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.grid import Cell
-from speccheck.intake.labels import Label
+from speccheck.intake.labels import Label, looks_like_line
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
 
@@ -20,7 +20,10 @@ def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
         if place not in result.roles:
             columns[place[1]].append(marks.grid.cells[place])
     for column, cells in columns.items():
-        _Column(marks, result, names, column).read(cells[0].row, cells[-1].row)
+        last = cells[-1].row
+        while (below := marks.grid.cells.get((last + 1, column))) is not None and looks_like_line(below.text):
+            last += 1
+        _Column(marks, result, names, column).read(cells[0].row, last)
 
 
 class _Column:
@@ -37,6 +40,9 @@ class _Column:
             if (row, self._index) in self._marks.lines:
                 for line in lines:
                     self._line(cell, line)
+            elif looks_like_line(cell.text):
+                self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
+                self._result.mark(cell, "unread")
             elif self._names.is_title(cell.text):
                 self._title(cell)
 

@@ -10,7 +10,7 @@ from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.claims import Claim, Context
 from speccheck.intake.grid import Raw
 from speccheck.quantities import CellContent, DecimalHabit, Quantity, UnknownUnitError, read_cell, settle
-from speccheck.records import CellRef, Reading, Sense, Statement, Status, Unread
+from speccheck.records import Band, CellRef, Reading, Sense, Statement, Status, Unread, Value
 from speccheck.text import plain
 
 _MAX_WORDS = re.compile(
@@ -23,18 +23,8 @@ _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
 _IDENTITY_UNITS = ("", "–", "-", "—")
 
 
-@dataclass(slots=True)
-class Outcome:
-    """What became of one claim."""
-
-    readings: list[Reading] = field(default_factory=list)
-    statement: Statement | None = None
-    unread: Unread | None = None
-    footnotes: tuple[str, ...] = ()
-
-
 @dataclass(frozen=True, slots=True)
-class _Figure:
+class Figure:
     """A quantity settled in its parameter's unit: all of a reading that does not depend on place and band."""
 
     parameter: str
@@ -46,7 +36,59 @@ class _Figure:
     condition: str
 
 
-_Understood = tuple[CellContent, tuple[_Figure, ...], str]
+@dataclass(slots=True)
+class Found:
+    """A reading in the making: band, tolerance and notes may still change."""
+
+    where: CellRef
+    raw: str
+    heading: str
+    figure: Figure
+    parameter: str
+    value: Value
+    band: Band | None
+    tolerance: float | None
+    remark: str = ""
+    recognised: str = ""
+
+    def reading(self) -> Reading:
+        """The finished reading."""
+        figure, quantity = self.figure, self.figure.quantity
+        condition = figure.condition
+        if self.remark:
+            condition = f"{condition}; {self.remark}" if condition else self.remark
+        return Reading(
+            where=self.where,
+            parameter=self.parameter,
+            raw=self.raw,
+            value=self.value,
+            unit=figure.unit,
+            band=self.band,
+            tolerance=self.tolerance,
+            sense=figure.sense,
+            statistic=figure.statistic,
+            stated_value=quantity.stated_value,
+            stated_unit=quantity.stated_unit,
+            condition=condition,
+            at=quantity.at,
+            heading=self.heading,
+            recognised=self.recognised or figure.recognised,
+            alternatives=quantity.alternatives,
+        )
+
+
+@dataclass(slots=True)
+class Outcome:
+    """What became of one claim."""
+
+    sheet: str
+    found: list[Found] = field(default_factory=list)
+    statement: Statement | None = None
+    unread: Unread | None = None
+    footnotes: tuple[str, ...] = ()
+
+
+_Understood = tuple[CellContent, tuple[Figure, ...], str]
 
 
 class Reader:
@@ -89,48 +131,25 @@ class Reader:
                 band=claim.band,
                 heading=context.heading,
             )
-            return Outcome(statement=statement, footnotes=content.footnotes)
+            return Outcome(sheet, statement=statement, footnotes=content.footnotes)
         if not figures:
             reason = trouble or f"no {parameters()[first].label} could be read from it"
             return Outcome(
                 unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
             )
-        readings = [
-            Reading(
-                where=where,
-                parameter=f.parameter,
-                raw=cell.text,
-                value=f.quantity.value,
-                unit=f.unit,
-                band=claim.band,
-                tolerance=f.quantity.tolerance,
-                sense=f.sense,
-                statistic=f.statistic,
-                stated_value=f.quantity.stated_value,
-                stated_unit=f.quantity.stated_unit,
-                condition=f.condition,
-                at=f.quantity.at,
-                heading=context.heading,
-                recognised=f.recognised,
-                alternatives=f.quantity.alternatives,
-            )
-            for f in figures
-        ]
+        found = [_found(where, claim, figure) for figure in figures]
         unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
-        return Outcome(readings, unread=unread, footnotes=content.footnotes)
+        return Outcome(sheet, found, unread=unread, footnotes=content.footnotes)
 
-    def _understand(
-        self, raw: Raw, context: Context, number_format: str
-    ) -> _Understood:
+    def _understand(self, raw: Raw, context: Context, number_format: str) -> _Understood:
         label = context.label
         keys = label.parameters
         table = parameters()
-        unit, source = _unit(context)
         first = table[keys[0]]
         content = read_cell(
             raw,
             kind=first.kind if len(keys) == 1 else "size",
-            unit=unit,
+            unit=_unit(context)[0],
             decimal_comma=self._habit.comma,
             number_format=number_format,
             expected=first.unit,
@@ -139,50 +158,53 @@ class Reader:
         )
         trouble = ""
         figures = []
+        tail = self._tail(raw, content)
         for parameter, quantity in _paired(keys, content.quantities):
             try:
-                figures.append(self._figure(table[parameter], quantity, context, source, raw, content))
+                figures.append(_figure(table[parameter], quantity, context, tail))
             except UnknownUnitError as error:
                 trouble = str(error)
-        if len(keys) > 1 and content.quantities and not figures:
+        if len(keys) > 1 and content.quantities and not figures and not trouble:
             trouble = f"{len(content.quantities)} figures for {len(keys)} parameters ({', '.join(keys)})"
         return content, tuple(figures), trouble
 
-    def _figure(
-        self, parameter: Parameter, quantity: Quantity, context: Context, source: str, raw: Raw, content: CellContent
-    ) -> _Figure:
-        settled = settle(
-            quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
-        )
-        statistic = settled.statistic or context.statistic
-        heading = context.label.text
-        sense = Sense(settled.sense)
-        if sense is Sense.NOMINAL and not isinstance(settled.value, str | tuple):
-            sense = _sense_of_words(f"{context.heading} {heading} {context.condition}", context.statistic)
-        condition = "; ".join(
-            dict.fromkeys(
-                filter(
-                    None, (context.band_name, context.label.condition, context.condition, settled.condition)
-                )
-            )
-        )
-        how = f"heading '{context.heading or heading}' is {parameter.label}"
-        if quantity.unit or parameter.unit:
-            how += f"; {_unit_told(quantity, source, parameter)}"
-        if self._habit.comma is not None and _AMBIGUOUS.search(str(raw)) and not quantity.alternatives:
-            how += f"; decimal sign settled by the file: {self._habit.why}"
-        how = "; ".join((how, *content.notes))
+    def _tail(self, raw: Raw, content: CellContent) -> str:
+        """What else is to be said of how a cell was read."""
+        parts = [*content.notes]
+        if self._habit.comma is not None and isinstance(raw, str) and _AMBIGUOUS.search(raw):
+            parts.append(f"decimal sign settled by the file: {self._habit.why}")
         if _substantial(content.rest):
-            how += f"; beside the figure stands '{plain(content.rest, 80)}'"
-        return _Figure(
-            parameter=parameter.key,
-            quantity=settled,
-            unit=settled.unit or parameter.unit,
-            sense=sense,
-            statistic=statistic,
-            recognised=how,
-            condition=condition,
-        )
+            parts.append(f"beside the figure stands '{plain(content.rest, 80)}'")
+        return "".join(f"; {part}" for part in parts)
+
+
+def _found(where: CellRef, claim: Claim, figure: Figure) -> Found:
+    value, tolerance = figure.quantity.value, figure.quantity.tolerance
+    text, heading = claim.cell.text, claim.context.heading
+    return Found(where, text, heading, figure, figure.parameter, value, claim.band, tolerance)
+
+
+def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: str) -> Figure:
+    settled = settle(
+        quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
+    )
+    label = context.label
+    sense = Sense(settled.sense)
+    if sense is Sense.NOMINAL and isinstance(settled.value, float):
+        sense = _sense_of_words(f"{context.heading} {label.text} {context.condition}", context.statistic)
+    conditions = (context.band_name, label.condition, context.condition, settled.condition)
+    how = f"heading '{context.heading or label.text}' is {parameter.label}"
+    if quantity.unit or parameter.unit:
+        how += f"; {_unit_told(quantity, _unit(context)[1], parameter)}"
+    return Figure(
+        parameter=parameter.key,
+        quantity=settled,
+        unit=settled.unit or parameter.unit,
+        sense=sense,
+        statistic=settled.statistic or (context.statistic if parameter.kind == "number" else ""),
+        recognised=how + tail,
+        condition="; ".join(dict.fromkeys(filter(None, conditions))),
+    )
 
 
 def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator[tuple[str, Quantity]]:

@@ -52,7 +52,7 @@ def is_generic_sheet_name(name: str) -> bool:
 
 
 def title_prefixes(strength: str = "prefix") -> frozenset[str]:
-    """Words before the name of a panel in a title: the sure ones, or the ``weak`` ones such as 'Data sheet'."""
+    """Words before the name of a panel in a title; the ``weak`` ones, such as 'Data sheet', name none."""
     return _table()["title"][strength]
 
 
@@ -80,5 +80,5 @@ def answer(text: str) -> str:
 
 
 def is_counting_unit(text: str) -> bool:
-    """Whether a text stands in a unit column without being a physical unit: ``pcs``, ``–``, ``dBc @ 2x43 dBm``."""
+    """Whether a text of a unit column is no physical unit: ``pcs``, ``–``, ``dBc @ 2x43 dBm``."""
     return fold(text).strip("[]() ") in _table()["unit"]["words"]
