@@ -7,7 +7,7 @@ units of one dimension, `settle` brings a figure into a parameter's unit and sig
 from speccheck.quantities.attachments import connector_of_date
 from speccheck.quantities.cell import read_cell
 from speccheck.quantities.content import CellContent, Quantity
-from speccheck.quantities.numerals import DecimalHabit, decimal_habit, numeral
+from speccheck.quantities.numerals import NUMERAL_PATTERN, DecimalHabit, decimal_habit, numeral
 from speccheck.quantities.settling import settle
 from speccheck.quantities.spectrum import band_names
 from speccheck.quantities.statuses import status_of
@@ -15,6 +15,7 @@ from speccheck.quantities.tidy import split_footnotes, tidy
 from speccheck.quantities.units import UNIT_PATTERN, UnknownUnitError, convert, dimension, unit_name
 
 __all__ = [
+    "NUMERAL_PATTERN",
     "UNIT_PATTERN",
     "CellContent",
     "DecimalHabit",

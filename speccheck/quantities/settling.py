@@ -50,7 +50,7 @@ def settle(
     tolerance = found.tolerance
     if tolerance is not None and isinstance(found.value, float):
         upper = convert(found.value + tolerance, stated, target)
-        tolerance = abs(upper - convert(found.value, stated, target))
+        tolerance = round(abs(upper - convert(found.value, stated, target)), 9)
     return replace(
         found,
         value=value,

@@ -92,7 +92,8 @@ def _parameter(key: str, table: dict[str, Any]) -> Parameter:
         parameter = Parameter(**{**table, **pairs, "key": key, "examples": examples})
     except TypeError as error:
         raise ValueError(f"parameter '{key}': {error}") from None
-    for field, allowed in (("scope", Scope), ("direction", Direction), ("kind", Kind), ("sign", Sign)):
+    closed: dict[str, Any] = {"scope": Scope, "direction": Direction, "kind": Kind, "sign": Sign}
+    for field, allowed in closed.items():
         if getattr(parameter, field) not in get_args(allowed):
             raise ValueError(f"parameter '{key}': {field} is {getattr(parameter, field)!r}")
     return parameter

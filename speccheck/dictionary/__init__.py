@@ -1,0 +1,16 @@
+"""The dictionary: what a parameter is, what bidders call it, and how a heading is recognised."""
+
+from speccheck.dictionary.folding import fold
+from speccheck.dictionary.matching import HeadingMatch, match_heading
+from speccheck.dictionary.parameters import LANGUAGES, Example, Parameter, parameters, synonyms
+
+__all__ = [
+    "LANGUAGES",
+    "Example",
+    "HeadingMatch",
+    "Parameter",
+    "fold",
+    "match_heading",
+    "parameters",
+    "synonyms",
+]

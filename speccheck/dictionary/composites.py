@@ -1,0 +1,80 @@
+"""Headings over several figures: 'Dimensions H×W×D', 'HPBW (H x V)', 'rows x columns x pol'."""
+
+from __future__ import annotations
+
+import re
+
+from speccheck.dictionary.folding import fold, heading_words, word_list
+from speccheck.dictionary.index import find
+
+_BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
+_PARTS = re.compile(
+    r"\s*[×*]\s*|\s+x\s+|\s*/\s*|\s+by\s+|\s*&\s*|\s*\+\s*|\s+(?:and|und|et|y|e|i|en)\s+|\s*,\s+|(?<=\b\w)x(?=\w\b)",
+    re.IGNORECASE,
+)
+_LETTERS = re.compile(r"\b([a-z])\s*[x×*/,]\s*([a-z])(?:\s*[x×*/,]\s*([a-z]))?\b", re.IGNORECASE)
+_DIMENSIONS = {"high": "height", "wide": "width", "deep": "depth"}
+_ARRAY = {
+    "rows": "array_rows",
+    "columns": "array_columns",
+    "poles": "polarisations",
+    "vertical": "array_rows",
+    "horizontal": "array_columns",
+}
+
+
+def composite(text: str) -> str:
+    """Parameter keys joined by ``+`` in the order of the heading's parts; empty if it has none."""
+    return _letters(text) or _parts(text)
+
+
+def _letters(text: str) -> str:
+    """'H x W x D' in the letters of eight languages, alone or beside a word for size."""
+    found = _LETTERS.search(text)
+    if not found or not found.group(3):
+        return ""
+    order = heading_words()["letters"].get("".join(found.groups()).casefold())
+    rest = fold(text[: found.start()] + " " + text[found.end() :])
+    if not order or (rest and find(rest) not in ("height+width+depth", "")) or (rest and not find(rest)):
+        return ""
+    names = {"h": "height", "w": "width", "d": "depth"}
+    return "+".join(names[letter] for letter in order)
+
+
+def _parts(text: str) -> str:
+    pieces = [fold(p) for p in _PARTS.split(_BRACKETS.sub(r" \1 ", text)) if p.strip()]
+    if not 2 <= len(pieces) <= 3:
+        return ""
+    together = _same_kind(pieces)
+    if together:
+        return together
+    keys = [find(piece) for piece in pieces]
+    if all(keys) and len(set(keys)) == len(keys) and not any("+" in key for key in keys):
+        return "+".join(keys)
+    return ""
+
+
+def _same_kind(pieces: list[tuple[str, ...]]) -> str:
+    """Parts that differ in one word each, such as 'HPBW H' and 'V', share the rest."""
+    for names in (("horizontal", "vertical"), ("rows", "columns", "poles"), ("high", "wide", "deep")):
+        parts = [next((n for n in names if word_list(n).intersection(p)), "") for p in pieces]
+        if not all(parts) or len(set(parts)) != len(parts):
+            continue
+        base = tuple(w for p, n in zip(pieces, parts, strict=True) for w in p if w not in word_list(n))
+        keys = [_with_part(base, name) for name in parts]
+        if all(keys):
+            return "+".join(keys)
+    return ""
+
+
+def _with_part(base: tuple[str, ...], part: str) -> str:
+    if part in _DIMENSIONS and (not base or find(base).startswith("height")):
+        return _DIMENSIONS[part]
+    if part in _ARRAY and (not base or find(base).startswith(("array_", "element_count"))):
+        return _ARRAY[part]
+    named = {"rows": "row", "columns": "column", "poles": "pol"}.get(part, part)
+    for form in (named, {"horizontal": "azimuth", "vertical": "elevation"}.get(part, "")):
+        key = find((*base, form)) if form else ""
+        if key and "+" not in key:
+            return key
+    return ""

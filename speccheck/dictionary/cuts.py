@@ -1,0 +1,143 @@
+"""Setting aside what a heading says beside the name: unit, figures, remarks."""
+
+from __future__ import annotations
+
+import functools
+import itertools
+import re
+from collections.abc import Iterator
+from dataclasses import dataclass, replace
+
+from speccheck.dictionary.folding import fold, heading_words, word_list
+from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN, unit_name
+
+_BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
+_AT_WORDS = (
+    r"(?:@|\b(?:at|bei|for|für|à|pour|a|para|per|przy|dla|bij|voor|with|mit|avec|con|com|z|met|in|within)\b)"
+)
+_FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{UNIT_PATTERN}|1(?=\W|$))?"
+_CONDITION = re.compile(
+    rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])",
+    re.IGNORECASE,
+)
+_TRAILING_UNIT = re.compile(rf"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?({UNIT_PATTERN})\s*$")
+_SPLIT_NOTES = re.compile(r"\s*[,;]\s+|\s+[-–:]\s+|:\s*|\s*@\s*|\s+/\s+")
+
+
+@dataclass(frozen=True, slots=True)
+class Cut:
+    """A heading with something set aside."""
+
+    text: str
+    unit: str = ""
+    conditions: tuple[str, ...] = ()
+
+
+def cuts(body: str) -> Iterator[Cut]:
+    """The heading as it stands, then with its unit, its conditions and its remarks set aside."""
+    whole = Cut(body)
+    yield whole
+    unit = _without_unit(whole)
+    if unit != whole:
+        yield unit
+    figures = _without_figures(unit)
+    if figures != unit:
+        yield figures
+        trimmed = _without_unit(figures)
+        if trimmed != figures:
+            yield trimmed
+    remarks = _without_remarks(figures)
+    if remarks != figures:
+        yield remarks
+    seen = {whole, unit, figures, remarks}
+    for base in dict.fromkeys((unit, figures, remarks)):
+        for cut in _without_notes(base):
+            if cut not in seen:
+                seen.add(cut)
+                yield cut
+
+
+def _without_unit(cut: Cut) -> Cut:
+    for bracket in _BRACKETS.finditer(cut.text):
+        name = unit_name(bracket.group(1))
+        if name:
+            rest = cut.text[: bracket.start()] + " " + cut.text[bracket.end() :]
+            return replace(cut, text=rest.strip(" ,;:/"), unit=name)
+        inner = bracket.group(1).split(" @ ")[0].split(" at ")[0].split(",")[0]
+        if inner != bracket.group(1) and unit_name(inner):
+            rest = (
+                cut.text[: bracket.start()]
+                + " ("
+                + bracket.group(1)[len(inner) :]
+                + ") "
+                + cut.text[bracket.end() :]
+            )
+            return replace(cut, text=rest, unit=unit_name(inner))
+    trailing = _TRAILING_UNIT.search(cut.text)
+    if (
+        trailing
+        and unit_name(trailing.group(1))
+        and not cut.text[trailing.start() - 1 : trailing.start()].isdigit()
+    ):
+        bare = trailing.group()[0].isspace() and len(trailing.group(1)) < 2 and trailing.group(1) not in "°%Ω"
+        if not bare:
+            return replace(
+                cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=unit_name(trailing.group(1))
+            )
+    return cut
+
+
+def _without_figures(cut: Cut) -> Cut:
+    """Set figures with their units aside: '150 km/h', '2 x 43 dBm carriers', '1710-2170 MHz', '±60°'."""
+    conditions: list[str] = []
+
+    def keep(match: re.Match[str]) -> str:
+        piece = match.group().strip()
+        if not any(c.isdigit() for c in piece) or re.search(r"\ddB\b|\d dB\b", piece):
+            return match.group()
+        conditions.append(re.sub(rf"^{_AT_WORDS}\s?", "", piece, flags=re.IGNORECASE))
+        return " "
+
+    rest = _CONDITION.sub(keep, cut.text)
+    rest = re.sub(r"[\[(][\s,;@]*[\])]", " ", rest)
+    rest = re.sub(rf"(?:\s*[,;@/-]\s*|\s+{_AT_WORDS}\s*)+$", "", " ".join(rest.split()))
+    return Cut(rest, cut.unit, (*cut.conditions, *conditions)) if conditions else cut
+
+
+@functools.cache
+def _remarks() -> re.Pattern[str]:
+    longest_first = sorted(heading_words()["remarks"], key=len, reverse=True)
+    return re.compile(
+        r"[,;(]?\s*(?<!\w)(" + "|".join(map(re.escape, longest_first)) + r")(?!\w)\s*\)?", re.IGNORECASE
+    )
+
+
+def _without_remarks(cut: Cut) -> Cut:
+    """Set known remarks aside: 'on axis', 'all tilts', 'without brackets'."""
+    conditions: list[str] = []
+
+    def keep(match: re.Match[str]) -> str:
+        conditions.append(match.group(1))
+        return " "
+
+    rest = " ".join(_remarks().sub(keep, cut.text).split()).strip(" ,;")
+    return Cut(rest, cut.unit, (*cut.conditions, *conditions)) if conditions and rest else cut
+
+
+def _without_notes(cut: Cut) -> Iterator[Cut]:
+    """Every way of leaving out remarks in brackets or after commas, the fewest left out first."""
+    brackets = [b.group(1).strip() for b in _BRACKETS.finditer(cut.text)]
+    main, *others = [s.strip() for s in _SPLIT_NOTES.split(_BRACKETS.sub(" ", cut.text)) if s.strip()] or [""]
+    notes = [n for n in (*others, *brackets) if n][:5]
+    droppable = [n for n in notes if not word_list("vital").intersection(fold(n))]
+    for size in range(1, len(droppable) + 1):
+        for left_out in itertools.combinations(droppable, size):
+            kept = [n for n in notes if n not in left_out]
+            yield Cut(" ".join([main, *(f"({n})" for n in kept)]), cut.unit, (*cut.conditions, *left_out))
+
+
+def conditions_of(cut: Cut) -> Cut:
+    """The cut with the conditions that its text still holds."""
+    return (
+        cut if cut.conditions else replace(cut, conditions=_without_remarks(_without_figures(cut)).conditions)
+    )

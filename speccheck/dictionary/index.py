@@ -1,0 +1,76 @@
+"""Folded headings to parameters, and the headings nearest to an unknown one."""
+
+from __future__ import annotations
+
+import difflib
+import functools
+
+from speccheck.dictionary.folding import fold, key_of, without_neutral
+from speccheck.dictionary.parameters import parameters, synonyms
+
+_LONGEST_SUGGESTED = 80
+
+
+@functools.cache
+def index() -> dict[str, str]:
+    """Folded heading to parameter key, or keys joined by ``+``.
+
+    Raises
+    ------
+    ValueError : a heading claimed by two parameters, or one for an unknown parameter
+    """
+    table: dict[str, str] = {}
+    for language, headings in synonyms().items():
+        for key, texts in headings.items():
+            unknown = [part for part in key.split("+") if part not in parameters()]
+            if unknown:
+                raise ValueError(f"headings/{language}.toml: no parameter '{unknown[0]}'")
+            for text in texts:
+                _claim(table, text, key, language)
+    return table
+
+
+def find(words: tuple[str, ...]) -> str:
+    """Parameter key of a heading's words, as they stand or without neutral ones; empty if unknown."""
+    if not words:
+        return ""
+    table = index()
+    found = table.get(key_of(words)) or table.get("".join(words))
+    if found:
+        return found
+    fewer = without_neutral(words)
+    return (table.get(key_of(fewer)) or table.get("".join(fewer)) or "") if fewer else ""
+
+
+def suggestions(text: str) -> tuple[str, ...]:
+    """The three nearest headings with their parameters; for the reader, never taken as a match."""
+    words = fold(text)[:8]
+    if not words or len(text) > _LONGEST_SUGGESTED:
+        return ()
+    near: dict[tuple[str, str], int] = {}
+    for stem in {word[:5] for word in words if len(word) > 2}:
+        for entry in _by_stem().get(stem, ()):
+            near[entry] = near.get(entry, 0) + 1
+    ranked = sorted(near, key=lambda entry: -near[entry])[:24]
+    scored = [(difflib.SequenceMatcher(None, text.casefold(), t.casefold()).ratio(), t, k) for t, k in ranked]
+    best = sorted((entry for entry in scored if entry[0] > 0.5), reverse=True)
+    return tuple(dict.fromkeys(f"{heading} ({key})" for _, heading, key in best))[:3]
+
+
+def _claim(table: dict[str, str], text: str, key: str, language: str) -> None:
+    words = fold(text)
+    for form in (key_of(words), "".join(words)):
+        if form and table.setdefault(form, key) != key:
+            raise ValueError(f"headings/{language}.toml: '{text}' is claimed by {table[form]} and by {key}")
+
+
+@functools.cache
+def _by_stem() -> dict[str, list[tuple[str, str]]]:
+    """First five letters of a word to the headings that hold it."""
+    table: dict[str, list[tuple[str, str]]] = {}
+    for headings in synonyms().values():
+        for key, texts in headings.items():
+            for text in texts:
+                for stem in {word[:5] for word in fold(text) if len(word) > 2}:
+                    table.setdefault(stem, []).append((text, key))
+    return table

@@ -1,0 +1,119 @@
+"""Recognising a bidder's heading: which parameter, in which unit, under which conditions.
+
+Headings are compared after folding: case, accents, hyphens, plural s, articles and the order of words
+do not count. A heading that is not known word for word is taken only when what is left out is a unit,
+a figure with its unit, or a remark without any word that could make it another parameter. Anything
+else is no match, with suggestions.
+"""
+
+from __future__ import annotations
+
+import functools
+import re
+from collections.abc import Mapping
+from dataclasses import dataclass
+
+from speccheck.dictionary.composites import composite
+from speccheck.dictionary.cuts import Cut, conditions_of, cuts
+from speccheck.dictionary.folding import fold, key_of, word_list
+from speccheck.dictionary.index import find, suggestions
+from speccheck.dictionary.parameters import parameters
+from speccheck.quantities import split_footnotes, tidy
+
+_LONGEST_HEADING = 160
+_STATISTICS = ("max", "min", "typical", "mean")
+_NUMBERING = re.compile(r"^\s*(?:(?:\d{1,2}\.)+\d{0,2}\.?\s+|\(?\d{1,2}[.)]\s+|\(?[a-zA-Z]\)\s+|[-•*·▪–]\s+)")
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class HeadingMatch:
+    """What a heading says. No `parameters` means it is not in the dictionary.
+
+    Several parameters stand for figures in one cell, in order. `exact` is true when they are certain.
+    `sense` and `statistic` come from words such as 'max.' and 'typical'; `tolerance_of` marks a row
+    that states the tolerance of the parameter. `plane` is horizontal or vertical where the heading
+    names one. `how` tells the reader how the heading was recognised.
+    """
+
+    parameters: tuple[str, ...] = ()
+    unit: str = ""
+    condition: str = ""
+    sense: str = "nominal"
+    statistic: str = ""
+    tolerance_of: bool = False
+    plane: str = ""
+    exact: bool = False
+    how: str = ""
+    suggestions: tuple[str, ...] = ()
+
+
+def match_heading(text: str, extra: Mapping[str, str] | None = None) -> HeadingMatch:
+    """Recognise a heading.
+
+    Parameters
+    ----------
+    text : heading as the bidder wrote it
+    extra : the buyer's own headings, text to parameter key; they go before the dictionary's
+
+    >>> match_heading("Half-power beam width, azimuth [°]").parameters
+    ('horizontal_beamwidth',)
+    >>> match_heading("Dimensions H×W×D (mm)").parameters
+    ('height', 'width', 'depth')
+    >>> match_heading("Gains of scale").parameters
+    ()
+    """
+    house = _house(tuple(sorted(extra.items()))) if extra else {}
+    return _match(text, house) if house else _match_known(text)
+
+
+@functools.lru_cache(maxsize=8)
+def _house(extra: tuple[tuple[str, str], ...]) -> dict[str, str]:
+    return {key_of(fold(text)): key for text, key in extra if all(k in parameters() for k in key.split("+"))}
+
+
+@functools.lru_cache(maxsize=8192)
+def _match_known(text: str) -> HeadingMatch:
+    return _match(text, {})
+
+
+def _match(text: str, house: Mapping[str, str]) -> HeadingMatch:
+    if not text or len(text) > _LONGEST_HEADING or not any(c.isalpha() for c in text):
+        return HeadingMatch()
+    body = _NUMBERING.sub("", tidy(split_footnotes(text)[0])).strip(" :;.")
+    words = fold(body)
+    tolerance_of = bool(word_list("tolerance").intersection(words))
+    for cut in cuts(body):
+        found = _look_up(cut.text, house, tolerance_of=tolerance_of)
+        if found:
+            return _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
+    return HeadingMatch(suggestions=suggestions(body))
+
+
+def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:
+    words = fold(text)
+    if tolerance_of:
+        words = tuple(word for word in words if word not in word_list("tolerance"))
+    bare = tuple(word for word in words if word not in _STATISTICS)
+    return house.get(key_of(words), "") or find(words) or find(bare) or composite(text)
+
+
+def _result(found: str, cut: Cut, words: tuple[str, ...], *, tolerance_of: bool) -> HeadingMatch:
+    keys = tuple(found.split("+"))
+    statistic = next((s for s in _STATISTICS if s in words), "")
+    bounds = statistic in ("min", "max") and not keys[0].endswith("_max")
+    plane = next((p for p in ("horizontal", "vertical") if keys[0].startswith(p)), "")
+    condition = ", ".join(cut.conditions)
+    how = [f"heading '{cut.text}'"]
+    how += [f"unit {cut.unit}"] if cut.unit else []
+    how += [f"condition '{condition}'"] if condition else []
+    return HeadingMatch(
+        parameters=keys,
+        unit=cut.unit,
+        condition=condition,
+        sense=statistic if bounds else "nominal",
+        statistic="" if statistic in ("min", "max") else statistic,
+        tolerance_of=tolerance_of,
+        plane=plane if len(keys) == 1 else "",
+        exact=True,
+        how=", ".join(how),
+    )
