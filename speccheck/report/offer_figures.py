@@ -46,7 +46,7 @@ def margin_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Fig
     canvas.write(scale(0), bottom + 14, "full bar: 3 dB, or 20 % of the limit", "middle", "small")
     short = sum(1 for row, _ in rows if (row.margin or 0) < 0)
     title = (
-        f"{short} of {len(rows)} numeric rows lie outside their limit"
+        f"{short} of {len(rows)} numeric rows are outside their limit"
         if short
         else (f"{_all(len(rows), 'numeric row')} on the good side of the limit")
     )
@@ -119,7 +119,7 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     outside = [f for f in shown if f.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
     where = "" if band is None else f" of {numbers.band(band)}"
     title = (
-        f"{len(outside)} of {len(shown)} claims{where} lie outside what is expected, or at its edge"
+        f"{len(outside)} of {len(shown)} claims{where} are outside what is expected, or at its edge"
         if outside
         else f"{_all(len(shown), 'claim')}{where} inside what is expected"
     )

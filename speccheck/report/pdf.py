@@ -6,6 +6,7 @@ import datetime as dt
 import hashlib
 import io
 import os
+import warnings
 from collections.abc import Sequence
 from dataclasses import dataclass
 from pathlib import Path
@@ -80,20 +81,28 @@ def pdf_bytes(html: str, attachments: Sequence[Attachment] = ()) -> bytes:
         )
         for item in attachments
     ]
-    content: bytes = document.write_pdf(
-        attachments=enclosed,
-        pdf_variant=VARIANT,
-        pdf_identifier=hashlib.sha256(html.encode("utf-8", "replace")).digest()[:16],
-    )
+    with warnings.catch_warnings():
+        # WeasyPrint leaves its colour profile to the garbage collector, which warns of an open file
+        warnings.simplefilter("ignore", ResourceWarning)
+        content: bytes = document.write_pdf(
+            attachments=enclosed,
+            pdf_variant=VARIANT,
+            pdf_identifier=hashlib.sha256(html.encode("utf-8", "replace")).digest()[:16],
+        )
     return content
 
 
 def _load_weasyprint() -> Any:
     """WeasyPrint, loaded only when a PDF is asked for: it takes longer to load than HTML to write."""
     try:
-        import weasyprint  # noqa: PLC0415
+        return _import_weasyprint()
     except (ImportError, OSError) as error:
         raise PdfUnavailableError(str(error).splitlines()[0][:300]) from error
+
+
+def _import_weasyprint() -> Any:
+    import weasyprint  # noqa: PLC0415
+
     return weasyprint
 
 

@@ -14,6 +14,7 @@ from speccheck.records import (
     CellRef,
     Compliance,
     Convention,
+    Curve,
     Deviation,
     Drawing,
     ExposureNote,
@@ -313,7 +314,99 @@ EXPOSURE = ExposureNote(
     where=(at("B12"), at("C12"), at("B5"), at("C5")),
 )
 
-DRAWINGS: tuple[Drawing, ...] = ()
+
+def _cut(name: str, width: float, middle: float = 0.0, end: float = 180.0) -> Curve:
+    """A parabola in dB with a floor: the form of TR 38.901 Table 7.3-1."""
+    angles = tuple(float(a) for a in range(int(-end), int(end) + 1, 2))
+    levels = tuple(max(-12 * ((a - middle) / width) ** 2, -30.0) for a in angles)
+    return Curve(name=name, x=angles, y=levels, x_unit="deg", y_unit="dB")
+
+
+def _outline(name: str, u: float, v: float) -> Curve:
+    corners = ((u - 0.1, v), (u + 0.1, v), (u + 0.1, v - 0.2), (u - 0.1, v - 0.2))
+    return Curve(
+        name=name, x=tuple(c[0] for c in corners), y=tuple(c[1] for c in corners), x_unit="u", y_unit="v"
+    )
+
+
+DRAWINGS = (
+    Drawing(
+        kind="spacing",
+        title="Vertical spacing passes its limit of 0.83λ for 12° at 1939 MHz",
+        text="1695–2690 MHz: 0.72λ to 1.15λ.",
+        band=HIGH,
+        curves=(Curve(name="vertical, 128 mm", x=HIGH, y=(0.72, 1.15), x_unit="MHz", y_unit="λ"),),
+        marks={"limit_vertical_wl": 0.83, "angle_vertical_deg": 12.0, "crossing_vertical_mhz": 1939.0},
+        where=(at("C9"), at("C8")),
+    ),
+    Drawing(
+        kind="vertical-cut",
+        title="Vertical cut: 5.5° claimed, expected 4.5° at −3 dB",
+        text="Computed at 2192 MHz.",
+        band=HIGH,
+        curves=(_cut("tilt 2°", 4.5, -2, 90), _cut("tilt 7°", 4.5, -7, 90), _cut("tilt 12°", 4.5, -12, 90)),
+        marks={
+            "expected_3db_deg": 4.5,
+            "expected_3db_from_deg": -9.2,
+            "expected_3db_to_deg": -4.7,
+            "claimed_3db_deg": 5.5,
+            "upper_sidelobe_db": -12.9,
+        },
+        where=(at("C7"),),
+    ),
+    Drawing(
+        kind="horizontal-cut",
+        title="Horizontal cut: 63° claimed, expected 65° at −3 dB and 118° at −10 dB",
+        text="Computed at 2192 MHz.",
+        band=HIGH,
+        curves=(_cut("azimuth 0°", 65.0),),
+        marks={"expected_3db_deg": 65.0, "expected_10db_deg": 118.0, "claimed_3db_deg": 63.0},
+        where=(at("C6"),),
+    ),
+    Drawing(
+        kind="steering-map",
+        title="At 2690 MHz grating lobes reach visible space within the claimed steering",
+        text="2 lobes of the element lattice are visible.",
+        band=HIGH,
+        curves=(
+            _outline("claimed steering", 0, 0),
+            _outline("grating lobe", 0, 0.87),
+            _outline("grating lobe", 0, -0.87),
+        ),
+        marks={"lobes_seen": 2.0},
+        where=(at("C9"),),
+    ),
+    Drawing(
+        kind="eirp-ladder",
+        title="Power 59.0 dBm and gain 21.0 dBi add up to 80.0 dBm EIRP; 78.0 dBm is claimed (−2.0 dB)",
+        text="Rating of the ports 800 W over both polarisations.",
+        band=HIGH,
+        marks={"power_w": 800.0, "power_dbm": 59.03, "gain_dbi": 21.0, "sum_dbm": 80.03, "claimed_dbm": 78.0},
+        where=(at("C5"), at("C12")),
+    ),
+    Drawing(
+        kind="port-map",
+        title="6 ports over 2 bands; 6 are stated for the panel",
+        text="2 ports below 1 GHz, 4 above.",
+        marks={
+            "band_1_low_mhz": LOW[0],
+            "band_1_high_mhz": LOW[1],
+            "band_1_ports": 2.0,
+            "band_2_low_mhz": HIGH[0],
+            "band_2_high_mhz": HIGH[1],
+            "band_2_ports": 4.0,
+        },
+        where=(at("B24"),),
+    ),
+    Drawing(
+        kind="port-map",
+        title="4 × 8 sub-arrays in two polarisations make 64 ports, while 32 transceivers are stated",
+        text="Grid of 4 rows and 8 columns of sub-arrays.",
+        band=LOW,
+        marks={"grid_rows": 4, "grid_columns": 8, "stated_ports": 32.0},
+        where=(at("B24"),),
+    ),
+)
 
 OUTLINE = PanelAssessment(
     panel=PANEL,

@@ -1,0 +1,59 @@
+"""How numbers are written; expectations by hand after the digits of report practice."""
+
+from __future__ import annotations
+
+import pytest
+
+from speccheck.records import Amount, Interval
+from speccheck.report.formats import Numbers
+
+POINT, COMMA = Numbers(), Numbers(decimal_comma=True)
+
+
+@pytest.mark.parametrize(
+    ("value", "unit", "written"),
+    [
+        (18.04, "dBi", "18.0 dBi"),  # gain to 0.1 dB
+        (64.6, "deg", "65°"),  # angle to 1°
+        (5.52, "deg", "5.5°"),
+        (1.1493, "λ", "1.15 λ"),  # spacing to 0.01 λ
+        (-153.0, "dBc", "−153 dBc"),
+        (0.1281, "m", "128 mm"),
+        (2.5, "m", "2.50 m"),
+        ((60.0, 70.0), "deg", "60 to 70°"),
+        (0.0, "W", "0 W"),
+        (-0.04, "dB", "0.0 dB"),  # no negative zero
+    ],
+)
+def test_computed_figures_carry_the_digits_the_data_support(value: float, unit: str, written: str) -> None:
+    assert POINT.figure(value, unit).replace("\u202f", " ") == written
+
+
+def test_a_stated_figure_keeps_every_digit() -> None:
+    assert POINT.stated(1234.567, "W").replace("\u202f", " ") == "1234.57 W"
+    assert POINT.amount(Amount(21.0, "dBi")).startswith("21.0")
+    assert POINT.amount(Amount(21.25, "dBi")).startswith("21.25")
+
+
+def test_the_decimal_sign_is_one_setting() -> None:
+    assert COMMA.figure(18.04, "dBi").startswith("18,0")
+    assert COMMA.interval(Interval(1.5, 2.5, "dB")).startswith("1,5 to 2,5")
+
+
+def test_open_intervals_say_which_side_binds() -> None:
+    assert POINT.interval(Interval(None, 3.0, "dB")).startswith("at most 3.0")
+    assert POINT.interval(Interval(3.0, None, "dB")).startswith("at least 3.0")
+
+
+def test_margins_carry_their_sign() -> None:
+    assert POINT.signed(0.3, "dB").startswith("+0.3")
+    assert POINT.signed(-0.3, "dB").startswith("−0.3")
+    assert POINT.signed(0.0, "dB").startswith("0.0")
+
+
+@pytest.mark.parametrize(
+    ("metres", "written"), [(5.01, "5.1"), (5.0, "5.0"), (0.301, "0.4"), (9.433981, "9.5")]
+)
+def test_compliance_distances_are_rounded_up(metres: float, written: str) -> None:
+    # 5 m and 8 m together: √(25 + 64) = 9.43 m, printed as 9.5 m
+    assert POINT.rounded_up(metres).startswith(written)
