@@ -178,7 +178,8 @@ def _paired_panels(
     old: Sequence[PanelAssessment], new: Sequence[PanelAssessment]
 ) -> Iterator[tuple[PanelAssessment | None, PanelAssessment | None]]:
     """Pair panels by name; one renamed panel on either side is taken for the same."""
-    pairs = list(_paired(old, new, _name))
+    paired = _paired(old, new, _name)
+    pairs = list(paired)
     gone = [one for one, other in pairs if one is not None and other is None]
     come = [other for one, other in pairs if other is not None and one is None]
     if len(gone) == len(come) == 1:
@@ -195,7 +196,8 @@ def _panel_changes(old: PanelAssessment | None, new: PanelAssessment | None) -> 
     if old is None or new is None:
         before, after = before[:1], after[:1]
     name = (after or before)[0].text
-    for left, right in sorted(_paired(before, after, _key), key=_by_kind):
+    paired = _paired(before, after, _key)
+    for left, right in sorted(paired, key=_by_kind):
         some = right or left
         if some is not None and (left is None or right is None or left.text != right.text):
             yield Change(
