@@ -28,7 +28,7 @@ _OWN_PLACE = frozenset({"requirement", "verdict", "margin", "offered_in_unit", "
 
 def to_json(assessment: Assessment) -> str:
     """Return the whole result as JSON text; long lists have one item a line, so that lines compare."""
-    return _layout(_document(assessment))
+    return laid_out(_document(assessment))
 
 
 def from_json(text: str, file: str = "result.json") -> Assessment:
@@ -137,7 +137,8 @@ def _read_matrix_row(data: dict[str, Json], home: str) -> MatrixRow:
     return row
 
 
-def _layout(document: dict[str, Json]) -> str:
+def laid_out(document: dict[str, Json]) -> str:
+    """Return JSON text with one member, and one item of a long list, a line."""
     members = [f"{_compact(name)}:{_member(value)}" for name, value in document.items()]
     text = "{" + ",\n".join(members) + "}\n"
     # a lone surrogate cannot be stored as UTF-8; JSON has an escape of the same look for it
