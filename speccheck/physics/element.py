@@ -15,6 +15,8 @@ from numpy.typing import ArrayLike
 
 from speccheck.physics.decibels import Floats, db, floats, ratio
 
+_FEW = 400
+"""Angles [1] below which a recurrence costs more than the cosines it saves."""
 _PER_DB = np.log(10) / 10
 """Nepers of power [1] in a decibel."""
 
@@ -106,9 +108,10 @@ class SectorElement:
         Returns [1]: integrals, shape (F, Y, Z).
         Source: closed form sin(kr)/(kr) of the isotropic part; Gauss-Legendre quadrature of the smooth part.
         """
-        largest = float(wavenumbers.max())
-        y_wl, z_wl = (largest * float(np.abs(lags).max()) / (2 * np.pi) for lags in (y_m, z_m))
-        sines, u_z, weights = _nodes(self, _order(2.5 * z_wl), _order(2.9 * y_wl))
+        y_phase, z_phase = (float(wavenumbers.max() * np.abs(lags).max()) for lags in (y_m, z_m))
+        reach = np.radians(min(180.0, self.az_hpbw_deg * (self.floor_db / 12) ** 0.5))
+        orders = _order(np.pi / 4 * float(np.hypot(y_phase, z_phase))), _order(reach / 2 * y_phase)
+        sines, u_z, weights = _nodes(self, *orders)
         weighted = cosines(wavenumbers[:, None, None] * sines, y_m, weights)
         over_phi = (weighted.reshape(-1, sines.shape[1]) @ np.ones(sines.shape[1])).reshape(
             weighted.shape[:3]
@@ -165,10 +168,11 @@ class CosineElement:
         Source: half of the mean of cos(k r sin psi cos chi), weighted by cos^n psi; trapezoid in chi.
         """
         distance = wavenumbers[:, None, None] * np.hypot(y_m[None, :, None], z_m[None, None, :])
-        nodes, weights = _legendre(_order(0.6 * float(distance.max()), margin=24))
+        order = _order(float(distance.max())) + 16
+        nodes, weights = _legendre(order)
         root = (nodes + 1) / 2  # cos psi = root^2 keeps a fractional power smooth at the horizon
         weights = weights * root * root ** (2 * self.exponent)
-        turns = np.cos(np.pi * (np.arange(_order(0.6 * float(distance.max()), margin=24)) + 0.5) / len(nodes))
+        turns = np.cos(np.pi * (np.arange(order) + 0.5) / order)
         argument = np.multiply.outer(distance, np.sqrt(1 - root**4)[:, None] * turns)
         kernel: Floats = 0.5 * np.cos(argument).mean(-1) @ weights
         return kernel
@@ -229,7 +233,12 @@ def cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Floa
     Source: cos((n + 1) x) = 2 cos x cos(n x) - cos((n - 1) x).
     """
     steps = lags[1:] - lags[:-1]
-    if len(lags) < 3 or abs(lags[0]) > 1e-12 or steps.max() - steps.min() > 1e-9 * steps[0]:
+    if (
+        len(lags) < 3
+        or angles.size < _FEW
+        or abs(lags[0]) > 1e-12
+        or steps.max() - steps.min() > 1e-9 * steps[0]
+    ):
         return weights * np.cos(angles[:, None] * lags.reshape((1, -1) + (1,) * (angles.ndim - 1)))
     out = np.empty((len(angles), len(lags), *angles.shape[1:]))
     out[:, 0] = weights
@@ -246,9 +255,12 @@ def _isotropic_kernel(wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
     return np.sinc(wavenumbers[:, None, None] / np.pi * distance)
 
 
-def _order(scale: float, margin: int = 12) -> int:
-    """Quadrature order: what the phase over the aperture needs, in steps of four to share caches."""
-    return 4 * int(np.ceil((scale + margin) / 4))
+def _order(phase_rad: float) -> int:
+    """Quadrature order for a phase that swings by this much either side of the middle of the span.
+
+    Half of it resolves the swing; the rest covers the pattern and the edge of the swing (1e-7 and better).
+    """
+    return 2 * int(np.ceil((phase_rad / 2 + 6 + np.cbrt(phase_rad)) / 2)) + 2 * (phase_rad < 1)
 
 
 @lru_cache(maxsize=64)
