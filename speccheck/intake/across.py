@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from dataclasses import dataclass
 
 from speccheck.intake.bands import find_bands, is_band_label
@@ -17,6 +18,7 @@ from speccheck.records import Band
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _NAME_KEYS = ("model", "panel_type", "part_number")
+_EXAMPLE = re.compile(r"\s*example\b", re.IGNORECASE)
 _SILENT_ROLES = {"remark": "note", "number": "label", "group": "label", "level": "label", "required": "label"}
 
 
@@ -114,6 +116,11 @@ class AcrossReader:
         return numbers[0] if numbers else 0
 
     def _row(self, row: int, cells: list[Cell]) -> None:
+        if _EXAMPLE.match(cells[0].text):
+            for cell in cells:
+                self._result.mark(cell, "label")
+            self._result.notices.append((cells[0], "an example row of the form, not read as a claim"))
+            return
         if len(cells) == 1 and len(self._fields) > 2:
             cell = cells[0]
             known = self._fields.get(cell.column)

@@ -11,6 +11,7 @@ from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.words import column_role, is_counting_unit
 from speccheck.quantities.units import unit_name
 
+FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _WORDS = re.compile(r"[^\W\d_]{2,}|\b[A-Z]/[A-Z]\b|\b[PFv]\b")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
@@ -25,8 +26,10 @@ class Label:
     unit: str = ""
     condition: str = ""
     bands: BandText = NO_BANDS
+    sense: str = "nominal"
     statistic: str = ""
     tolerance: bool = False
+    how: str = ""
     suggestion: str = ""
 
     def __bool__(self) -> bool:
@@ -81,8 +84,11 @@ class Labels:
             parameters=tuple(found.parameters),
             unit=found.unit,
             condition=condition,
-            bands=bands if bands.proved else NO_BANDS,
+            bands=bands if bands.proved or set(found.parameters) <= FREQUENCY_KEYS else NO_BANDS,
+            sense=found.sense,
+            statistic=found.statistic,
             tolerance=found.tolerance_of,
+            how=found.how,
         )
 
 

@@ -8,7 +8,6 @@ from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label, Labels, is_unit
 from speccheck.intake.words import column_role
 
-
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 

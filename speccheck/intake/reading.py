@@ -3,8 +3,9 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Iterator
+from collections.abc import Iterator, Mapping
 from dataclasses import dataclass, field
+from functools import lru_cache
 
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.claims import Claim, Context
@@ -34,6 +35,7 @@ class Figure:
     statistic: str
     recognised: str
     condition: str
+    at: Mapping[str, float]
 
 
 @dataclass(slots=True)
@@ -70,7 +72,7 @@ class Found:
             stated_value=quantity.stated_value,
             stated_unit=quantity.stated_unit,
             condition=condition,
-            at=quantity.at,
+            at=figure.at,
             heading=self.heading,
             recognised=self.recognised or figure.recognised,
             alternatives=quantity.alternatives,
@@ -92,11 +94,14 @@ _Understood = tuple[CellContent, tuple[Figure, ...], str]
 
 
 class Reader:
-    """Reads claims of one file; equal cells under equal headings are understood once."""
+    """Reads claims of one file; equal cells under one heading are understood once.
+
+    Contexts are told apart by identity, so they must live as long as the reader.
+    """
 
     def __init__(self, file: str, habit: DecimalHabit) -> None:
         self._file, self._habit = file, habit
-        self._known: dict[tuple[Context, type, Raw, str], _Understood] = {}
+        self._known: dict[tuple[int, type, Raw, str], _Understood] = {}
         self._refs: dict[tuple[str, str], CellRef] = {}
 
     def where(self, sheet: str, address: str) -> CellRef:
@@ -113,10 +118,11 @@ class Reader:
         where = self.where(sheet, cell.address)
         if cell.fault:
             return Outcome(
-                unread=Unread(where=where, text=cell.text, reason=cell.fault, suggestion=_remedy(cell.fault))
+                sheet,
+                unread=Unread(where=where, text=cell.text, reason=cell.fault, suggestion=_remedy(cell.fault)),
             )
         raw: Raw = cell.raw if claim.text is None else claim.text
-        key = (context, type(raw), raw, cell.number_format)
+        key = (id(context), type(raw), raw, cell.number_format)
         known = self._known.get(key)
         if known is None:
             known = self._known[key] = self._understand(raw, context, cell.number_format)
@@ -135,7 +141,7 @@ class Reader:
         if not figures:
             reason = trouble or f"no {parameters()[first].label} could be read from it"
             return Outcome(
-                unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
+                sheet, unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
             )
         found = [_found(where, claim, figure) for figure in figures]
         unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
@@ -189,20 +195,18 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
         quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
     )
     label = context.label
-    sense = Sense(settled.sense)
-    if sense is Sense.NOMINAL and isinstance(settled.value, float):
-        sense = _sense_of_words(f"{context.heading} {label.text} {context.condition}", context.statistic)
     conditions = (context.band_name, label.condition, context.condition, settled.condition)
-    how = f"heading '{context.heading or label.text}' is {parameter.label}"
+    how = f"{label.how or f"heading '{context.heading or label.text}'"}: {parameter.label}"
     if quantity.unit or parameter.unit:
         how += f"; {_unit_told(quantity, _unit(context)[1], parameter)}"
     return Figure(
         parameter=parameter.key,
         quantity=settled,
         unit=settled.unit or parameter.unit,
-        sense=sense,
-        statistic=settled.statistic or (context.statistic if parameter.kind == "number" else ""),
+        sense=_sense(settled, context),
+        statistic=settled.statistic or label.statistic or _column_statistic(context, parameter),
         recognised=how + tail,
+        at=_at(" ".join(filter(None, conditions[1:3])), parameter.unit) | dict(settled.at),
         condition="; ".join(dict.fromkeys(filter(None, conditions))),
     )
 
@@ -230,13 +234,31 @@ def _unit_told(quantity: Quantity, source: str, parameter: Parameter) -> str:
     return f"unit {unit} from the {source or 'cell'}"
 
 
-def _sense_of_words(words: str, statistic: str) -> Sense:
-    if statistic in ("min", "max"):
-        return Sense(statistic)
-    smallest, largest = bool(_MIN_WORDS.search(words)), bool(_MAX_WORDS.search(words))
+def _sense(settled: Quantity, context: Context) -> Sense:
+    """What the sign in the cell bounds, else the word in the heading, the column or the condition."""
+    if settled.sense != "nominal" or not isinstance(settled.value, float):
+        return Sense(settled.sense)
+    if context.label.sense != "nominal":
+        return Sense(context.label.sense)
+    if context.statistic in ("min", "max"):
+        return Sense(context.statistic)
+    smallest, largest = (bool(words.search(context.condition)) for words in (_MIN_WORDS, _MAX_WORDS))
     if smallest != largest:
         return Sense.MIN if smallest else Sense.MAX
     return Sense.NOMINAL
+
+
+def _column_statistic(context: Context, parameter: Parameter) -> str:
+    return "typical" if context.statistic == "typ" and parameter.kind == "number" else ""
+
+
+@lru_cache(maxsize=2000)
+def _at(condition: str, unit: str) -> dict[str, float]:
+    """Conditions of a heading by name, understood as if they stood in the cell behind a figure."""
+    if not any(letter.isdigit() for letter in condition):
+        return {}
+    found = read_cell(f"1 {unit} @ {condition}", kind="number", expected=unit).quantities
+    return dict(found[0].at) if len(found) == 1 and found[0].value == 1.0 else {}
 
 
 def _substantial(rest: str) -> bool:

@@ -8,7 +8,7 @@ from dataclasses import dataclass, field, replace
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.wording.families import belongs
 from speccheck.intake.wording.figures import Figure, Form
-from speccheck.intake.wording.lexicon import Kind
+from speccheck.intake.wording.lexicon import Kind, general_vocabularies
 from speccheck.intake.wording.tokens import Token
 from speccheck.quantities import convert, dimension
 from speccheck.records import Band, Level
@@ -90,9 +90,15 @@ def own_level(segment: Iterable[Token]) -> Level | None:
 
 
 def scope_of(found: Sequence[Token]) -> tuple[str, ...]:
-    """Words of scope anywhere in a clause."""
-    ranking = [t.text for t in found if t.kind is Kind.COMPARATOR and t.said == "best"]
-    return (*(t.text for t in found if t.kind is Kind.SCOPE), *ranking)
+    """Words of scope anywhere in a clause, those inside a parameter's name among them."""
+    (scopes,) = (v for v in general_vocabularies() if v.kind is Kind.SCOPE)
+    texts: list[str] = []
+    for token in found:
+        if token.kind is Kind.SCOPE or (token.kind is Kind.COMPARATOR and token.said == "best"):
+            texts.append(token.text)
+        elif token.kind is Kind.PARAMETER:
+            texts.extend(match.group() for match in scopes.pattern.finditer(token.text))
+    return tuple(texts)
 
 
 def _part(segment: Sequence[Token], parameter: Parameter) -> Demand:
