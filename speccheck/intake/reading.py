@@ -196,7 +196,8 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
     )
     label = context.label
     conditions = (context.band_name, label.condition, context.condition, settled.condition)
-    how = f"{label.how or f"heading '{context.heading or label.text}'"}: {parameter.label}"
+    heading = label.how or f"heading '{context.heading or label.text}'"
+    how = f"{heading} is {parameter.label}"
     if quantity.unit or parameter.unit:
         how += f"; {_unit_told(quantity, _unit(context)[1], parameter)}"
     return Figure(
