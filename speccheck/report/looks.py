@@ -30,7 +30,7 @@ UNREAD_FILL = "F3E8FD"
 ENTRY_FILL = "FFFDF0"
 EXAMPLE_INK = "52606D"
 
-TEXTS = frozenset({"text", "wrap", "bold", "link", "heading", "example"})
+TEXTS = frozenset({"text", "wrap", "bold", "link", "heading", "example", "entry-text"})
 NUMBER_FORMATS = {
     "number": "General",
     "number0": "0",
@@ -41,6 +41,8 @@ NUMBER_FORMATS = {
 }
 FILLS = {
     "entry": ENTRY_FILL,
+    "entry-text": ENTRY_FILL,
+    "entry-date": ENTRY_FILL,
     "read": READ_FILL,
     "unread": UNREAD_FILL,
     **{tone: fill for tone, (fill, _) in TONES.items()},
@@ -51,7 +53,7 @@ def register_looks(workbook: Workbook) -> StyleIds:
     """Return the format numbers of every look; the workbook keeps the formats."""
     sheet = workbook.create_sheet("looks")
     names = ["heading", "text", "wrap", "bold", "link", "date", "example", "example-number", *NUMBER_FORMATS]
-    names += ["entry-date", *FILLS]
+    names += FILLS
     ids = {name: _register(sheet.cell(row, 1), name, quoted=False) for row, name in enumerate(names, 1)}
     quoted = {name: _register(sheet.cell(row, 2), name, quoted=True) for row, name in enumerate(names, 1)}
     workbook.remove(sheet)
@@ -59,7 +61,7 @@ def register_looks(workbook: Workbook) -> StyleIds:
 
 
 def _register(cell: Cell, name: str, *, quoted: bool) -> int:
-    fill = HEADING_FILL if name == "heading" else FILLS.get(name, ENTRY_FILL if name == "entry-date" else "")
+    fill = HEADING_FILL if name == "heading" else FILLS.get(name, "")
     cell.font = _font(name)
     cell.fill = PatternFill("solid", start_color=fill) if fill else PatternFill()
     written = name in TEXTS

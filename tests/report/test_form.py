@@ -1,0 +1,168 @@
+"""The blank bid form: filled without a manual, read back whole, its example row left out."""
+
+import io
+
+import openpyxl
+import pytest
+
+from speccheck.dictionary import match_heading, parameters
+from speccheck.errors import UnusableInputError
+from speccheck.intake import read_submission
+from speccheck.records import CellRef, Level, Requirement, Settings, Tender
+from speccheck.report.form import EXAMPLE, USUAL, form_bytes, form_heading, form_unit, write_form
+
+FIGURES = {
+    "array_rows": 10,
+    "array_columns": 4,
+    "gain": 17.3,
+    "horizontal_beamwidth": 64,
+    "vertical_beamwidth": 7.1,
+    "height": 1400,
+    "weight": 21.5,
+    "passive_intermodulation": -153,
+    "vertical_element_spacing": 105,
+}
+TEXTS = {"electrical_tilt": ("2 to 12", (2, 12)), "temperature_range": ("-40 to 55", (-40, 55))}
+
+
+def asked(clause, parameter, wording):
+    where = CellRef("tender.xlsx", "Requirements", f"B{clause}")
+    return Requirement(
+        where=where, clause=clause, wording=wording, level=Level.MANDATORY, parameter=parameter
+    )
+
+
+TENDER = Tender(
+    file="tender.xlsx",
+    sha256="",
+    requirements=(
+        asked("1", "gain", "Gain shall be at least 17 dBi"),
+        asked("2", "ice_load", "State the ice load"),
+        asked("3", "", "=Deliver within 20 weeks"),
+    ),
+    settings=Settings(paper="Letter"),
+)
+
+
+def columns(sheet):
+    return {cell.value: cell.column for cell in sheet[1]}
+
+
+@pytest.fixture
+def form():
+    return openpyxl.load_workbook(io.BytesIO(form_bytes()))
+
+
+@pytest.mark.parametrize("key", [p.key for p in parameters().values() if p.headings])
+def test_every_heading_reads_back_as_its_parameter_and_unit(key):
+    parameter = parameters()[key]
+    match = match_heading(form_heading(parameter))
+    assert match.parameters == (key,)
+    # a bare % in brackets adds nothing to a ratio that is always stated in percent
+    assert match.unit == ("" if parameter.unit == "%" else form_unit(parameter)[0])
+
+
+def test_filled_form_gives_every_figure_in_its_own_unit(form, tmp_path):
+    sheet = form["Bid"]
+    place = columns(sheet)
+    for row, (model, band) in enumerate([("Fenwick 4", "1710-2170"), ("Fenwick 4", "2500-2690")], start=3):
+        sheet.cell(row, place["Model"]).value = model
+        sheet.cell(row, 2).value = band
+        for key, value in [*FIGURES.items(), *((key, text) for key, (text, _) in TEXTS.items())]:
+            sheet.cell(row, place[form_heading(parameters()[key])]).value = value
+    path = tmp_path / "filled.xlsx"
+    form.save(path)
+    submission = read_submission(path)
+    (panel,) = submission.panels
+    assert panel.name == "Fenwick 4"
+    assert panel.bands == ((1710, 2170), (2500, 2690))
+    for key, value in FIGURES.items():
+        for band in panel.bands:
+            reading = panel.get(key, band)
+            assert reading.value == pytest.approx(value / form_unit(parameters()[key])[1]), key
+            assert reading.unit == parameters()[key].unit
+    for key, (_, span) in TEXTS.items():
+        assert panel.get(key, panel.bands[0]).value == span
+    assert submission.unread == ()
+
+
+def test_example_row_is_named_and_never_read(form, tmp_path):
+    form["Bid"]["A3"].value = "Fenwick 4"
+    form["Bid"].cell(3, columns(form["Bid"])["Gain (dBi)"]).value = 17.3
+    path = tmp_path / "filled.xlsx"
+    form.save(path)
+    submission = read_submission(path)
+    assert [panel.name for panel in submission.panels] == ["Fenwick 4"]
+    assert [r.value for r in submission.panels[0].all("gain")] == [17.3]
+    assert any("example row" in notice.text for notice in submission.notices)
+
+
+def test_unfilled_form_is_no_bid(tmp_path):
+    path = tmp_path / "form.xlsx"
+    write_form(path)
+    with pytest.raises(UnusableInputError):
+        read_submission(path)
+
+
+def test_conveniences(form):
+    sheet = form["Bid"]
+    assert sheet.freeze_panes == "C2"
+    assert sheet["A2"].value == EXAMPLE["model"]
+    assert not sheet["A3"].protection.locked
+    assert sheet["A1"].protection.locked
+    assert all(cell.comment for cell in sheet[1])
+    assert form.sheetnames == ["Read me", "Bid", "Lists"]
+    assert sheet["B3"].number_format == "@"
+
+
+def test_numbers_are_warned_about_not_refused(form):
+    checks = form["Bid"].data_validations.dataValidation
+    gain = next(check for check in checks if check.errorTitle == "Gain (dBi)")
+    assert (gain.errorStyle, gain.type) == ("warning", "decimal")
+    assert gain.error == "Gain: a number in dBi, usually 5 to 28 dBi."
+    spacing = next(check for check in checks if check.errorTitle.startswith("Vertical element spac"))
+    assert (float(spacing.formula1), float(spacing.formula2)) == (20, 400)
+
+
+def test_pick_lists_point_at_their_words(form):
+    checks = [check for check in form["Bid"].data_validations.dataValidation if check.type == "list"]
+    words = [[cell.value for (cell,) in form["Lists"][check.formula1.split("!")[1]]] for check in checks]
+    assert words == [
+        ["±45°", "vertical and horizontal", "vertical", "horizontal"],
+        ["4.3-10 female", "7/16 female", "2.2-5 female", "N female"],
+    ]
+
+
+def test_form_for_a_tender_asks_exactly_its_clauses():
+    book = openpyxl.load_workbook(io.BytesIO(form_bytes(TENDER)))
+    headings = columns(book["Bid"])
+    assert "Gain (dBi)" in headings
+    assert "Ice load" in headings
+    assert "VSWR" not in headings
+    assert (
+        "Clause 1: Gain shall be at least 17 dBi" in book["Bid"].cell(1, headings["Gain (dBi)"]).comment.text
+    )
+    rows = list(book["Clauses"].iter_rows(min_row=2, values_only=True))
+    assert [row[0] for row in rows] == ["1", "2", "3"]
+    assert rows[2][2:4] == ("=Deliver within 20 weeks", "here, in words")
+    assert book["Clauses"]["C4"].data_type == "s"
+    assert book["Bid"].page_setup.paperSize == 1
+
+
+def test_clauses_are_not_read_as_the_bidders_figures(tmp_path):
+    book = openpyxl.load_workbook(io.BytesIO(form_bytes(TENDER)))
+    sheet = book["Bid"]
+    sheet["A3"].value, sheet["B3"].value = "Fenwick 4", "1710-2170"
+    sheet.cell(3, columns(sheet)["Gain (dBi)"]).value = 16.5
+    path = tmp_path / "filled.xlsx"
+    book.save(path)
+    (panel,) = read_submission(path).panels
+    assert [reading.value for reading in panel.all("gain")] == [16.5]
+
+
+def test_same_tender_same_bytes():
+    assert form_bytes(TENDER) == form_bytes(TENDER)
+
+
+def test_usual_columns_are_parameters():
+    assert set(USUAL) <= set(parameters())
