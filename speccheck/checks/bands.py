@@ -2,15 +2,14 @@
 
 from __future__ import annotations
 
-import re
 from itertools import pairwise
 
 from speccheck.checks.cell_text import listed
 from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.stated_conditions import named_bands, stated_ranges
 from speccheck.records import Amount, Band, Fit, Interval, Panel, Reading, Step
 from speccheck.standards import OperatingBand, operating_band, union
 
-_SEPARATORS = re.compile(r"\s*(?:[,;/&+]|\band\b|\bund\b|\bet\b|\by\b)\s*", re.IGNORECASE)
 _SLACK_MHZ = 0.5
 _WIDE_GAP = 1.3
 _EDGE_SHARE = 0.01
@@ -27,7 +26,7 @@ TABLES = "3GPP TS 38.104 Tables 5.2-1 and 5.2-2; TS 36.104 Table 5.5-1"
     source=TABLES,
     scope="panel",
 )
-def named_bands_inside_range(case: Case, frequency_range: Reading | None) -> Judgement | None:  # noqa: ARG001
+def named_bands_inside_range(case: Case) -> Judgement | None:
     """Holds the bands a bid names against the megahertz it offers.
 
     Formula
@@ -35,20 +34,18 @@ def named_bands_inside_range(case: Case, frequency_range: Reading | None) -> Jud
 
     Assumptions
     A named band means all of it, both directions, as the standard prints its edges; half a megahertz is
-    allowed for. A bare number means the E-UTRA band. A band outside the headline range does not fit; one
+    allowed for. A band outside the headline range does not fit; one
     inside the headline but outside every sub-band with figures is doubtful.
 
     Worked example
     n78 is 3300 to 3800 MHz. A panel for 3400 to 3600 MHz misses 300 MHz of it: it does not fit. n78 lies
     inside n77 (3300 to 4200 MHz): a panel for n77 has n78 as well, not the reverse.
     """
-    named = _named_bands(case.panel)
-    if not named:
+    named = _named(case.panel)
+    ranges = stated_ranges(case.panel, "frequency_range") or stated_ranges(case.panel, "operating_bands")
+    if not named or not ranges:
         return None
-    headline = union(_spans(case.panel, "frequency_range") or case.panel.bands)
-    table = union(case.panel.bands) or headline
-    if not headline:
-        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("frequency_range",))
+    headline, table = union(ranges), union(case.panel.bands) or union(ranges)
     outside = _not_covered(named, headline)
     untold = {name: mhz for name, mhz in _not_covered(named, table).items() if name not in outside}
     steps = tuple(
@@ -68,18 +65,13 @@ def named_bands_inside_range(case: Case, frequency_range: Reading | None) -> Jud
         working=steps,
         assumptions=(f"A named band means both directions in full. {listed(tuple(_editions(named)))}.",),
         question="Please state which part of each named band is covered, in MHz, for both directions.",
-        used=tuple(dict.fromkeys(r for _, r in named)),
+        used=tuple({r.where: r for _, r in named}.values()),
     )
 
 
-def _named_bands(panel: Panel) -> list[tuple[OperatingBand, Reading]]:
-    found: dict[str, tuple[OperatingBand, Reading]] = {}
-    for reading in panel.all("operating_bands"):
-        if isinstance(reading.value, str):
-            for name in _SEPARATORS.split(reading.value):
-                if (band := operating_band(name)) is not None:
-                    found.setdefault(band.name, (band, reading))
-    return list(found.values())
+def _named(panel: Panel) -> list[tuple[OperatingBand, Reading]]:
+    known = ((operating_band(name), reading) for name, reading in named_bands(panel).items())
+    return [(band, reading) for band, reading in known if band is not None]
 
 
 def _not_covered(named: list[tuple[OperatingBand, Reading]], offered: tuple[Band, ...]) -> dict[str, float]:
@@ -96,10 +88,6 @@ def _not_covered(named: list[tuple[OperatingBand, Reading]], offered: tuple[Band
 
 def _editions(named: list[tuple[OperatingBand, Reading]]) -> list[str]:
     return list(dict.fromkeys(f"{b.source} {b.edition}".strip() + f", {b.confidence}" for b, _ in named))
-
-
-def _spans(panel: Panel, key: str) -> tuple[Band, ...]:
-    return tuple((r.low, r.high) for r in panel.all(key) if isinstance(r.value, tuple))
 
 
 def shown(spans: tuple[Band, ...]) -> str:
@@ -151,7 +139,7 @@ def sub_bands_make_up_range(case: Case, frequency_range: Reading) -> Judgement |
     Headline 1710 to 2690 MHz with figures for 1710 to 2170 and 2300 to 2690 MHz: a gap of 130 MHz (ratio
     1.06), usual. With figures for 1710 to 2170 MHz only, 520 MHz at the top have none: doubtful.
     """
-    headline = union(_spans(case.panel, "frequency_range"))
+    headline = union(stated_ranges(case.panel, "frequency_range"))
     table = tuple(b for b in case.panel.bands if b not in headline)
     if not headline or not table:
         return None

@@ -5,7 +5,7 @@ from __future__ import annotations
 import re
 
 from speccheck.checks.cell_text import words
-from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.registry import Judgement, check
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 _TOTAL = re.compile(r"total|co\s*\+|sum|±\s*30|\+/-\s*30|150\s*°|210\s*°")
@@ -29,7 +29,6 @@ _HORIZON = re.compile(r"horizon(?!tal)|at 0\s*° elevation|elevation 0")
     source="two definitions in use: co-polar at 180°, total power within 180° ± 30° (common practice)",
 )
 def front_to_back_defined(
-    case: Case,  # noqa: ARG001
     front_to_back_ratio: Reading,
     front_to_back_definition: Reading | None,
 ) -> Judgement | None:
@@ -77,7 +76,6 @@ def front_to_back_defined(
     source="25 dB on axis and 10 dB at the sector edge are both usual (common practice)",
 )
 def cross_polar_defined(
-    case: Case,  # noqa: ARG001
     cross_polar_discrimination: Reading | None,
     cross_polar_sector: Reading | None,
 ) -> Judgement | None:
@@ -142,7 +140,6 @@ def _cross_kind(stated: Reading) -> tuple[str, float]:
     source="3GPP TR 38.901 Table 7.3-1: main beam falls by 12·(angle/beamwidth)² dB",
 )
 def horizontal_cut_through_beam(
-    case: Case,  # noqa: ARG001
     *,
     horizontal_beamwidth: Reading,
     gain: Reading | None,

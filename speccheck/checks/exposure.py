@@ -114,8 +114,11 @@ def _judged(cell: Reading, reach: _Reach, plain: float) -> Judgement:
     re_read = "time_factor" in cell.at
     enough = abs(stated - plain) <= max(_WITHIN * plain, slack) if re_read else stated + slack >= plain * 0.99
     verdict = Fit.FITS if enough else Fit.DOES_NOT_FIT if stated + slack < shortest else Fit.DOUBTFUL
-    names = listed(tuple(name for name, _ in near))
-    said = f"; {names} would give it" if near else "; none of the familiar sets gives it"
+    said = (
+        f"; {listed(tuple(name for name, _ in near))} would give it"
+        if near
+        else "; none of the familiar sets gives it"
+    )
     total_w = sum(s.eirp_w for s in reach.sources)
     needed = 4 * math.pi * stated**2 / total_w
     return Judgement(

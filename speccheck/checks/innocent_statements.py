@@ -23,6 +23,16 @@ def _texts(panel: Panel, keys: tuple[str, ...], reach: Reach, **conditions: floa
     return replace(panel, readings=tuple(one(r) for r in panel.readings))
 
 
+@innocent(
+    "port rating for one port in use at a time",
+    "the power per port holds for all ports at the same time",
+    "max_power_per_port",
+)
+def one_port_in_use(panel: Panel, reach: Reach) -> Panel:
+    """The rating of a port not multiplied by their number."""
+    return reread(panel, reach, ("max_power_per_port",), marked(one_port=1))
+
+
 @innocent("VSWR is typical", "the VSWR is typical or guaranteed", "vswr")
 def vswr_typical(panel: Panel, reach: Reach) -> Panel:
     """VSWR marked typical: the guaranteed return loss may be lower than it gives."""
@@ -179,15 +189,6 @@ def weight_without_radio(panel: Panel, reach: Reach) -> Panel:
 def consumption_at_part_load(panel: Panel, reach: Reach) -> Panel:
     """1.8 times the stated consumption."""
     return reread(panel, reach, ("power_consumption",), scaled(FULL_LOAD_OVER_TYPICAL))
-
-
-@innocent("gain is the mean over all tilts", "the gain is the mean over all tilts or holds at each", "gain")
-def gain_mean_over_tilts(panel: Panel, reach: Reach) -> Panel:
-    """Gains at several tilts marked as their mean."""
-    mean = reread(
-        panel, reach, ("gain",), lambda r: replace(r, statistic="mean") if "tilt_deg" in r.at else r
-    )
-    return panel if mean == panel else mean
 
 
 @innocent("bare decibels are dBi", "the gain is in dBi or dBd", "gain")

@@ -5,7 +5,8 @@ from __future__ import annotations
 import re
 
 from speccheck.checks.cell_text import words
-from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.registry import Judgement, check
+from speccheck.checks.stated_conditions import carrier_dbm
 from speccheck.physics.intermodulation import at_carrier_dbc, relative_dbc
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
@@ -24,7 +25,6 @@ _POSITIVE = re.compile(r"(?<![-−–\d.,])\d{2,3}(?:[.,]\d+)?\s*dBc", re.IGNORE
     source="IEC 62037-1: two carriers of 20 W, third order (from memory); series of a weak non-linearity",
 )
 def intermodulation_comparable(
-    case: Case,  # noqa: ARG001
     passive_intermodulation: Reading,
     pim_test_power: Reading | None,
     max_power_per_port: Reading | None,
@@ -44,7 +44,8 @@ def intermodulation_comparable(
     -162 dBc at two carriers of 37 dBm is -150 to -153 dBc at 43 dBm: the lower power flatters the figure by 9
     to 12 dB. -110 dBm at 43 dBm is -153 dBc.
     """
-    carrier, assumed = _carrier_dbm(passive_intermodulation, pim_test_power)
+    known = carrier_dbm(passive_intermodulation, pim_test_power)
+    carrier = _STANDARD_CARRIER_DBM if known is None else known
     in_dbm = passive_intermodulation.unit == "dBm"
     stated = passive_intermodulation.nominal
     dbc = float(relative_dbc(stated, carrier)) if in_dbm else stated
@@ -53,7 +54,7 @@ def intermodulation_comparable(
     small = rated_low or passive_intermodulation.at.get("tested_at_rating") == 1
     trouble, verdict = _trouble(passive_intermodulation, carrier, ends, small)
     span = f"{ends[0]:.1f} dBc" if ends[0] == ends[1] else f"{ends[0]:.1f} to {ends[1]:.1f} dBc"
-    notes = [assumed] if assumed else []
+    notes = [] if known is not None else ["Test power not stated; two carriers of 43 dBm (20 W) are taken."]
     if _POSITIVE.search(passive_intermodulation.raw):
         notes.append("Written without its minus sign; read as a negative level.")
     return Judgement(
@@ -70,14 +71,6 @@ def intermodulation_comparable(
         ),
         question="Please state the third-order level and its unit at two carriers of 43 dBm, worst port.",
     )
-
-
-def _carrier_dbm(pim: Reading, test_power: Reading | None) -> tuple[float, str]:
-    if "carrier_dbm" in pim.at:
-        return pim.at["carrier_dbm"], ""
-    if test_power is not None:
-        return test_power.nominal, ""
-    return _STANDARD_CARRIER_DBM, "Test power not stated; two carriers of 43 dBm (20 W) are taken."
 
 
 def _trouble(pim: Reading, carrier: float, ends: list[float], small_panel: bool) -> tuple[str, Fit]:

@@ -28,7 +28,6 @@ _BEYOND_MEASURED_DB = 50.0
     source="D. M. Pozar, Microwave Engineering, ch. 2: reflection coefficient, standing-wave ratio",
 )
 def vswr_matches_return_loss(
-    case: Case,  # noqa: ARG001
     vswr: Reading | None,
     return_loss: Reading | None,
 ) -> Judgement | None:
@@ -53,7 +52,7 @@ def vswr_matches_return_loss(
     slack = half_digit(return_loss) + 0.05
     low, high = exact - slack, exact + slack
     verdict = _matching_verdict(vswr, return_loss, claimed - exact, slack)
-    off = "agrees with" if verdict is Fit.FITS else f"{claimed - exact:+.2f} dB from"
+    off = "agrees with" if verdict is Fit.FITS else f"is {claimed - exact:+.2f} dB from"
     typical = "; one of the two is typical" if _typical(vswr) != _typical(return_loss) else ""
     return Judgement(
         verdict=verdict,

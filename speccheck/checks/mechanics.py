@@ -5,7 +5,7 @@ from __future__ import annotations
 import math
 
 from speccheck.checks.cell_text import half_digit
-from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.registry import Judgement, check
 from speccheck.checks.saying import label
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
@@ -24,7 +24,6 @@ _SOLID_ALUMINIUM = 2700.0
     scope="panel",
 )
 def weight_fits_size(
-    case: Case,  # noqa: ARG001
     *,
     weight: Reading,
     height: Reading,
@@ -86,7 +85,6 @@ def weight_fits_size(
     scope="panel",
 )
 def weights_add_up(
-    case: Case,  # noqa: ARG001
     weight: Reading,
     weight_with_brackets: Reading | None,
     mounting_kit_weight: Reading | None,

@@ -149,7 +149,7 @@ def _eirp_summary(claimed: float, low: float, high: float, excess: float, short:
     optional=("eirp",),
     source="ITU Radio Regulations Nos. 1.161 and 1.162; gain of a half-wave dipole 2.15 dBi (ITU-R V.573)",
 )
-def erp_agrees_with_eirp(case: Case, erp: Reading, eirp: Reading | None) -> Judgement | None:  # noqa: ARG001
+def erp_agrees_with_eirp(erp: Reading, eirp: Reading | None) -> Judgement | None:
     """Holds ERP against EIRP: the same power against two reference antennas.
 
     Formula

@@ -46,7 +46,9 @@ def port_power_adds_up(
     highest = max(r.high + half_digit(r) for r in case.panel.all("max_power_per_port"))
     together = float(total_power_w(highest, rf_ports.high))
     claimed = max_power_total.nominal
-    too_much, little = claimed - half_digit(max_power_total) > together, claimed < _LEAST_SHARE * together
+    one_at_a_time = max_power_per_port.at.get("one_port") == 1
+    too_much = claimed - half_digit(max_power_total) > together
+    little = claimed < _LEAST_SHARE * together and not one_at_a_time
     said = "exceeds" if too_much else "is a small share of" if little else "stays within"
     return Judgement(
         verdict=Fit.DOES_NOT_FIT if too_much else Fit.DOUBTFUL if little else Fit.FITS,
@@ -70,7 +72,6 @@ def port_power_adds_up(
     source="conservation of energy: independent transmitters add in power",
 )
 def transceiver_power_adds_up(
-    case: Case,  # noqa: ARG001
     power_per_transceiver: Reading,
     conducted_power: Reading | None,
     transceivers: Reading | None,
@@ -118,7 +119,7 @@ def transceiver_power_adds_up(
     "mains-power-covers-rf",
     "Mains power covers the radio power",
     needs=("power_consumption",),
-    optional=("tdd_duty", "transceivers"),
+    optional=("tdd_duty",),
     about=("power_consumption",),
     source="conservation of energy; efficiency of active panels up to about 45 % (common practice)",
     scope="panel",
@@ -127,7 +128,6 @@ def mains_power_covers_rf(
     case: Case,
     power_consumption: Reading,
     tdd_duty: Reading | None,
-    transceivers: Reading | None,  # noqa: ARG001
 ) -> Judgement | None:
     """Holds the power drawn against the average radio power that leaves the panel.
 

@@ -5,6 +5,7 @@ from __future__ import annotations
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import label
+from speccheck.checks.stated_conditions import wind_speed_mps
 from speccheck.physics.wind import drag_coefficient, dynamic_pressure_pa, force_n, scaled_force_n
 from speccheck.records import WIND_CAUTIONS, Amount, Fit, Interval, Panel, Reading, Step
 
@@ -27,7 +28,6 @@ _TRADE_AIR_KGM3 = 1.225
     scope="panel",
 )
 def wind_load_fits_area(
-    case: Case,  # noqa: ARG001
     *,
     wind_load: Reading,
     height: Reading,
@@ -56,13 +56,13 @@ def wind_load_fits_area(
     judged = [
         (face, _drag(face, height, speed))
         for face in faces
-        if (speed := _speed_mps(face[0], wind_load_speed))
+        if (speed := wind_speed_mps(face[0], wind_load_speed))
     ]
     if not judged:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("wind_load_speed",))
     worst = min(judged, key=lambda j: _drag_rank(j[1]))
     (load, across, name), drag = worst
-    speed = _speed_mps(load, wind_load_speed) or 0.0
+    speed = wind_speed_mps(load, wind_load_speed) or 0.0
     area = height.nominal * across.nominal
     low, high = (float(force_n(c, speed, area)) for c in _USUAL_DRAG)
     verdict = _drag_verdict(drag, load)
@@ -105,7 +105,7 @@ def _drag_steps(
     face: tuple[Reading, Reading, str], drag: float, height: Reading, stated_speed: Reading | None
 ) -> list[Step]:
     load, across, name = face
-    speed = _speed_mps(load, stated_speed) or 0.0
+    speed = wind_speed_mps(load, stated_speed) or 0.0
     pressure, area = float(dynamic_pressure_pa(speed)), height.nominal * across.nominal
     return [
         Step("Dynamic pressure", f"½ × {_TRADE_AIR_KGM3} × {speed:.2f}²", round(pressure, 1), "Pa"),
@@ -116,12 +116,6 @@ def _drag_steps(
             round(drag, 3),
         ),
     ]
-
-
-def _speed_mps(load: Reading, stated: Reading | None) -> float | None:
-    if "wind_speed_mps" in load.at:
-        return load.at["wind_speed_mps"]
-    return stated.nominal if stated else None
 
 
 @check(
@@ -154,7 +148,7 @@ def wind_loads_agree(case: Case, wind_load_speed: Reading | None) -> Judgement |
 
 
 def _scaling(loads: tuple[Reading, ...], stated: Reading | None) -> Judgement | None:
-    timed = sorted(((s, r) for r in loads if (s := _speed_mps(r, stated))), key=lambda pair: pair[0])
+    timed = sorted(((s, r) for r in loads if (s := wind_speed_mps(r, stated))), key=lambda pair: pair[0])
     if len(timed) < 2 or timed[0][0] == timed[-1][0]:
         return None
     (slow, first), (fast, last) = timed[0], timed[-1]
@@ -189,7 +183,10 @@ def _largest_load(panel: Panel, stated: Reading | None) -> Judgement | None:
     if most is None:
         return None
     sides = [
-        r for key in _SIDES[:3] for r in panel.all(key) if _speed_mps(r, stated) == _speed_mps(most, stated)
+        r
+        for key in _SIDES[:3]
+        for r in panel.all(key)
+        if wind_speed_mps(r, stated) == wind_speed_mps(most, stated)
     ]
     if not sides:
         return None

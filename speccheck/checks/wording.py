@@ -7,12 +7,11 @@ from __future__ import annotations
 
 import re
 
-from speccheck.checks.cell_text import half_digit, listed, words
+from speccheck.checks.cell_text import listed, words
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import label
 from speccheck.dictionary import parameters
-from speccheck.physics.decibels import db, ratio
-from speccheck.records import Amount, Fit, Interval, Reading, Sense, Step
+from speccheck.records import Fit, Reading, Sense, Step
 from speccheck.records.words import Status
 
 _GUARANTEED = ("vswr", "return_loss", "port_isolation", "passive_intermodulation")
@@ -25,8 +24,6 @@ _KEY_FIGURES = (
     *_GUARANTEED,
 )
 _TYPICAL = re.compile(r"\btyp")
-_MEAN = re.compile(r"\b(mean|average|avg)\b")
-_TILT_SPAN_DEG = 4.0
 _STATISTICS = (
     "industry recommendation on base-station antennas: tolerance is 1.5 standard deviations (from memory)"
 )
@@ -96,103 +93,6 @@ def _says_nothing(reading: Reading) -> bool:
 
 def _names(readings: tuple[Reading, ...]) -> str:
     return listed(tuple(dict.fromkeys(label(r.parameter) for r in readings))) if readings else "any figure"
-
-
-@check(
-    "gain-differs-over-tilt",
-    "Gain differs over tilt",
-    needs=(),
-    about=("gain",),
-    source="array theory: 8 elements 0.9 λ apart lose 0.3 dB from 2° to 12° of tilt before taper and errors",
-)
-def gain_differs_over_tilt(case: Case) -> Judgement | None:
-    """Asks about one and the same gain at tilts far apart.
-
-    Formula
-    G(lowest tilt) − G(highest tilt) > 0 for tilts 4° or more apart
-
-    Assumptions
-    Applies where the gain is stated at several tilts. Equal figures at all of them are doubtful: a mean over
-    the tilts copied into each row, most often.
-
-    Worked example
-    16.5 dBi at 2°, 7° and 12° is doubtful. A column of 8 elements 0.9 λ apart loses 0.3 dB over that range
-    before taper and phase errors.
-    """
-    gains = sorted(
-        (r for r in case.panel.all("gain", case.band) if "tilt_deg" in r.at), key=lambda r: r.at["tilt_deg"]
-    )
-    if len(gains) < 2 or gains[-1].at["tilt_deg"] - gains[0].at["tilt_deg"] < _TILT_SPAN_DEG:
-        return None
-    equal = len({r.nominal for r in gains}) == 1
-    change = gains[0].nominal - gains[-1].nominal
-    meant = any(_MEAN.search(words(r)) for r in gains)
-    return Judgement(
-        verdict=Fit.DOUBTFUL if equal and not meant else Fit.FITS,
-        summary=f"The gain changes by {change:.2f} dB from {gains[0].at['tilt_deg']:g}° to "
-        f"{gains[-1].at['tilt_deg']:g}°" + ("; the figures are equal at all tilts." if equal else "."),
-        claimed=Amount((gains[0].nominal, gains[-1].nominal), "dBi"),
-        working=(
-            Step(
-                "Change over tilt",
-                f"{gains[0].nominal:g} − {gains[-1].nominal:g} dBi",
-                round(change, 3),
-                "dB",
-            ),
-        ),
-        assumptions=("Same band, port and statistic at each tilt.",),
-        question="Please state the gain at the lowest, middle and highest tilt, as measured there.",
-        used=tuple(gains),
-    )
-
-
-@check(
-    "mean-gain-follows-rule",
-    "Mean gain follows from its parts",
-    needs=(),
-    about=("gain",),
-    source="arithmetic: 14 and 18 dBi average to 16.0 as decibels and to 16.4 as powers",
-    scope="panel",
-)
-def mean_gain_follows_rule(case: Case) -> Judgement | None:
-    """Holds a gain marked as mean against the gains by frequency it is the mean of.
-
-    Formula
-    mean of decibels: Σ Gᵢ/n; mean of powers: 10·log10(Σ 10^(Gᵢ/10)/n)
-
-    Assumptions
-    Both rules are in use. A figure between the two, with half of the last printed digits, fits either rule or
-    rounding; outside is doubtful.
-
-    Worked example
-    14 and 18 dBi give 16.00 dBi as the mean of decibels and 16.44 dBi as the mean of powers; a mean of 17 dBi
-    is doubtful.
-    """
-    gains = case.panel.all("gain")
-    means = [r for r in gains if _MEAN.search(words(r)) and r.band is None]
-    parts = [r for r in gains if r.band is not None and not _MEAN.search(words(r))]
-    if not means or len(parts) < 2:
-        return None
-    mean, levels = means[0], [r.nominal for r in parts]
-    of_db, of_power = sum(levels) / len(levels), float(db(sum(float(ratio(g)) for g in levels) / len(levels)))
-    slack = half_digit(mean) + max(half_digit(r) for r in parts)
-    inside = of_db - slack <= mean.nominal <= of_power + slack
-    shown = " + ".join(f"{g:g}" for g in levels)
-    return Judgement(
-        verdict=Fit.FITS if inside else Fit.DOUBTFUL,
-        summary=f"The parts average to {of_db:.2f} dBi (decibels) or {of_power:.2f} dBi (powers); "
-        f"{mean.nominal:g} dBi is stated as the mean.",
-        claimed=Amount(mean.nominal, "dBi"),
-        expected=Interval(round(of_db - slack, 3), round(of_power + slack, 3), "dBi"),
-        working=(
-            Step("Mean of decibels", f"({shown})/{len(levels)}", round(of_db, 3), "dBi"),
-            Step("Mean of powers", "10·log10 of the mean of 10^(G/10)", round(of_power, 3), "dBi"),
-        ),
-        assumptions=("All parts weigh the same.",),
-        question="Please state the rule of the mean gain (decibels or powers) and over which frequencies.",
-        used=(mean, *parts),
-        alone=True,
-    )
 
 
 @check(

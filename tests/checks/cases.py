@@ -16,6 +16,8 @@ One file a check, ``<slug>.toml``; `test_cases.py` runs them all. A file looks s
     gain = [{ value = 26.8, at = { tilt_deg = 2 } }, { value = 26.8, at = { tilt_deg = 10 } }]
     electrical_tilt = { value = [0, 10], sense = "nominal", tolerance = 1, condition = "…", raw = "…" }
     front_to_back_ratio = "TBD"             # text without a number for a numeric key: a statement
+    vswr = { value = "comply", declared = true }   # a statement that declares without a figure
+    operating_bands = "n78"                 # a named band is a reading
     [case.bands."1710-2170"]   # readings of one band
     gain = 17.1
     [case.expect]
@@ -131,11 +133,11 @@ def _entry(
     value, unit = table["value"], table.get("unit", "")
     written = value if isinstance(value, str) else f"{_printed(value)} {unit}".strip()
     number, _, tail = str(value).partition(" ") if isinstance(value, str) else ("", "", "")
-    if isinstance(value, str) and parameter.kind not in ("text", "connectors"):
+    named = parameter.kind == "bands" and not _is_number(number) and "declared" not in table
+    if isinstance(value, str) and parameter.kind not in ("text", "connectors") and not named:
         if not _is_number(number):
-            return Statement(
-                where=where, parameter=key, raw=value, status=Status.TO_BE_ADVISED, band=band, heading=key
-            )
+            status = Status.DECLARED if table.get("declared") else Status.TO_BE_ADVISED
+            return Statement(where=where, parameter=key, raw=value, status=status, band=band, heading=key)
         value, unit = float(number), tail
     at = {name: float(figure) for name, figure in table.get("at", {}).items()}
     return Reading(
