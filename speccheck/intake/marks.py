@@ -8,6 +8,7 @@ from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label, Labels, is_unit
 from speccheck.intake.words import column_role
 
+_LONGEST = 400
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -33,19 +34,31 @@ class Marks:
 def mark(grid: Grid, labels: Labels) -> Marks:
     """Look at every visible cell once."""
     marks = Marks(grid, labels, grid.rows())
-    for place, cell in grid.cells.items():
-        raw = cell.raw
-        if not isinstance(raw, str) or cell.fault or len(raw) > 400 or is_unit(raw):
-            continue
-        label = labels.of(raw)
-        line = None
-        if (not label or label.bands.spans) and any(mark in raw for mark in _LINE_MARKS):
-            line = labels.parse_line(raw)
+    for row, cells in marks.rows.items():
+        following: Cell | None = None
+        for cell in reversed(cells):
+            raw = cell.raw
+            if isinstance(raw, str) and not cell.fault and _might_be_heading(raw):
+                _mark_text(marks, (row, cell.column), raw, following)
+            following = cell
+    return marks
+
+
+def _might_be_heading(text: str) -> bool:
+    return len(text) <= _LONGEST and any(letter.isalpha() for letter in text) and not is_unit(text)
+
+
+def _mark_text(marks: Marks, place: tuple[int, int], text: str, following: Cell | None) -> None:
+    """A label with its value behind a colon is a line, unless the value stands in the next cell."""
+    alone = following is None or (following.row, following.column) in marks.lines
+    if (alone or "\n" in text) and any(mark in text for mark in _LINE_MARKS):
+        line = marks.labels.parse_line(text)
         if line is not None:
             marks.lines[place] = line
-        elif label:
-            marks.headings[place] = label
-    return marks
+            return
+    label = marks.labels.of(text)
+    if label:
+        marks.headings[place] = label
 
 
 def looks_like_value(cell: Cell) -> bool:

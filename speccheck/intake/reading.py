@@ -195,7 +195,9 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
         quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
     )
     label = context.label
-    conditions = (context.band_name, label.condition, context.condition, settled.condition)
+    said = set(re.findall(r"\w+", context.condition))
+    of_label = "" if set(re.findall(r"\w+", label.condition)) <= said else label.condition
+    conditions = (context.band_name, of_label, context.condition, settled.condition)
     heading = label.how or f"heading '{context.heading or label.text}'"
     how = f"{heading} is {parameter.label}"
     if quantity.unit or parameter.unit:
