@@ -93,7 +93,7 @@ def _finding(
         expected=judgement.expected,
         working=judgement.working,
         assumptions=judgement.assumptions,
-        question=judgement.question,
+        question="" if judgement.verdict is Fit.FITS else judgement.question,
         source=check.source,
         missing=judgement.missing,
         where=_places(used, panel),
