@@ -10,7 +10,8 @@ import pytest
 PACKAGE = Path(__file__).parents[1] / "speccheck"
 
 LAYERS: tuple[frozenset[str], ...] = (
-    frozenset({"quantities", "errors", "text", "physics", "atomic"}),
+    frozenset({"errors", "text", "physics"}),
+    frozenset({"quantities", "atomic"}),
     frozenset({"records"}),
     frozenset({"dictionary", "headings", "standards"}),
     frozenset({"intake", "checks", "tender", "report", "revisions"}),
