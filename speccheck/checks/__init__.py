@@ -7,6 +7,8 @@ order of the imports is the order of the findings.
 # isort: off
 from speccheck.checks import plausibility
 from speccheck.checks import spacing, lattices
+from speccheck.checks import gain, gain_widths, gain_runs
+from speccheck.checks import beamwidth, beamwidth_box
 from speccheck.checks import housing, ports, layers
 from speccheck.checks import power, power_budget, losses, matching, intermodulation
 from speccheck.checks import bands, duplex, directions
@@ -18,7 +20,8 @@ from speccheck.checks.runner import examine
 # isort: on
 
 FAMILIES = (
-    plausibility, spacing, lattices, housing, ports, layers,
+    plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box,
+    housing, ports, layers,
     power, power_budget, losses, matching, intermodulation,
     bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip

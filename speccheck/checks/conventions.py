@@ -102,8 +102,14 @@ class _Candidate:
     leaves: tuple[str, ...]
 
     @property
-    def order(self) -> tuple[bool, int, int]:
-        return (bool(self.leaves), -len(self.repaired), self.rank)
+    def order(self) -> tuple[bool, int, float, int]:
+        """Repairs everything, repairs most, leaves least over, listed first."""
+        return (
+            bool(self.leaves),
+            -len(self.repaired),
+            max(map(_off_middle, self.repaired.values())),
+            self.rank,
+        )
 
 
 def offer_innocent_readings(panel: Panel, findings: tuple[Finding, ...], rerun: Rerun) -> tuple[Finding, ...]:
@@ -191,6 +197,16 @@ def _convention(candidate: _Candidate, after: Finding) -> Convention:
         repairs=tuple(dict.fromkeys(key[0] for key in candidate.repaired)),
         leaves=candidate.leaves,
     )
+
+
+def _off_middle(after: Finding) -> float:
+    """Distance of the re-read claim from the middle of what is expected, in half widths of that interval."""
+    value = after.claimed.value if after.claimed else None
+    span = after.expected
+    if not isinstance(value, int | float) or span is None or span.low is None or span.high is None:
+        return 0.5
+    half = (span.high - span.low) / 2
+    return round(abs(value - (span.low + span.high) / 2) / half, 1) if half > 0 else 0.0
 
 
 def _left_over(candidate: _Candidate, after: Finding) -> tuple[Step, ...]:

@@ -7,6 +7,7 @@ from dataclasses import replace
 
 from speccheck.checks.conventions import Reach, innocent, marked, reread, scaled, shifted
 from speccheck.checks.model import WAVELENGTHS
+from speccheck.dictionary import parameters
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.records import Band, Panel, Reading
 
@@ -16,6 +17,16 @@ _LENGTHS = (*_SPACINGS, "height", "width", "depth")
 
 def _halved(reading: Reading) -> Reading:
     return scaled(0.5)(reading) if reading.nominal >= 2 and reading.nominal % 2 == 0 else reading
+
+
+def _rescaled(factor: float) -> Callable[[Reading], Reading]:
+    """Scaled where the result is a plausible figure; left alone elsewhere."""
+
+    def change(reading: Reading) -> Reading:
+        low, high = parameters()[reading.parameter].plausible or (0.0, float("inf"))
+        return scaled(factor)(reading) if low <= reading.nominal * factor <= high else reading
+
+    return change
 
 
 def _swapped(panel: Panel, one: str, other: str) -> Panel:
@@ -217,14 +228,14 @@ def two_lines(panel: Panel, reach: Reach) -> Panel:
 
 @innocent("lengths in inches", "lengths are in millimetres or in inches", *_LENGTHS)
 def inches_for_millimetres(panel: Panel, reach: Reach) -> Panel:
-    """Lengths times 25.4."""
-    return reread(panel, reach, _LENGTHS, scaled(25.4))
+    """Lengths times 25.4, where that leaves a length panels have."""
+    return reread(panel, reach, _LENGTHS, _rescaled(25.4))
 
 
 @innocent("lengths in millimetres", "lengths are in millimetres or in inches", *_LENGTHS)
 def millimetres_for_inches(panel: Panel, reach: Reach) -> Panel:
-    """Lengths divided by 25.4."""
-    return reread(panel, reach, _LENGTHS, scaled(1 / 25.4))
+    """Lengths divided by 25.4, where that leaves a length panels have."""
+    return reread(panel, reach, _LENGTHS, _rescaled(1 / 25.4))
 
 
 @innocent(

@@ -15,10 +15,13 @@ from speccheck.physics.element import SectorElement
 from speccheck.records import Fit, Reading, Step
 
 HARD_DB, SOFT_DB = -3.0, -8.0
-"""Lobe levels [dB against the beam] from which a spacing does not fit, or is doubtful (this program's rule)."""
+"""Lobe levels [dB against the beam] from which a spacing does not fit, or is doubtful."""
 
 ORDINARY_SIDELOBE_DB = -13.3
 """First side lobe of a uniform line [dB]: a lobe below it is not distinct (any antenna handbook)."""
+
+FAR_PITCH_WL = 6.0
+"""Pitch [wavelengths] from which the next lobe is within ten degrees of the beam: no search needed."""
 
 _FREE = re.compile(
     r"\b(no|none|free|without|absent|nil|keine?|ohne|aucune?|sans|sin|nessun[oa]?|brak|geen)\b", re.I
@@ -98,6 +101,9 @@ def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[flo
 def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
     """The strongest lobe of the element or of the sub-array lattice over both ends of the range."""
     layout = model.layout
+    pitch_wl = _pitch_wl(model, steering, subarrays=subarrays)
+    if pitch_wl > FAR_PITCH_WL:
+        return _far(pitch_wl, steering)
     tilt, scan = steering.keys(layout.subarray_tilt_deg)
     search = lobes.subarray_lobes if subarrays else lobes.element_lobes
     found = search(layout, SectorElement(), model.high_hz, tilt, scan)
@@ -108,6 +114,21 @@ def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
     return Lobe(
         float(found.level_db[at]), steering.ordered_deg[at], float(stands[at]), bool(found.centre_visible[at])
     )
+
+
+def _pitch_wl(model: Model, steering: Steering, *, subarrays: bool) -> float:
+    layout = model.layout
+    if steering.horizontal:
+        return model.horizontal_pitch_wl(model.high_hz)
+    return model.vertical_pitch_wl(model.high_hz) * (layout.subarray_rows if subarrays else 1)
+
+
+def _far(pitch_wl: float, steering: Steering) -> Lobe:
+    """The lobe next to the beam of a very wide pitch, by the element pattern alone."""
+    beam = float(np.sin(np.radians(steering.largest_deg)))
+    stands = float(np.degrees(np.arcsin(beam - np.copysign(1 / pitch_wl, beam))))
+    drop = 12 * (stands**2 - steering.largest_deg**2) / 65**2
+    return Lobe(-drop, steering.largest_deg, stands, True)
 
 
 def claimed_freedom(grating_lobes: Reading | None) -> tuple[float | None, float | None] | None:

@@ -1,0 +1,271 @@
+"""Gain against the geometry it is made of: counts, spacings, losses, and the short formula of system
+models."""
+
+from __future__ import annotations
+
+import math
+from dataclasses import dataclass
+
+from speccheck.checks.beams import (
+    BeamGain,
+    Claims,
+    beam_gains,
+    claim_freq_hz,
+    declared_loss_db,
+    panel_class,
+    rest_tilt_deg,
+)
+from speccheck.checks.model import Lacking, Model, model_of
+from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim, figure, last_digit_slack
+from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
+from speccheck.physics.expected import GainZone
+from speccheck.records import Amount, Fit, Interval, Reading, Step
+
+VERDICTS = {
+    GainZone.IMPOSSIBLE: Fit.DOES_NOT_FIT,
+    GainZone.QUESTION: Fit.DOUBTFUL,
+    GainZone.PLAUSIBLE: Fit.FITS,
+    GainZone.LOW: Fit.DOUBTFUL,
+}
+SHORT_FORMULA_WITHIN_DB = 0.3
+"""A system-model figure is computed to 0.1 dB; rounding of element gain and count stays within this [dB]."""
+
+
+def number(reading: Reading | None) -> float | None:
+    """The figure of a reading, None where there is none."""
+    return None if reading is None or isinstance(reading.value, str) else reading.nominal
+
+
+@check(
+    "gain-fits-geometry",
+    "Gain fits the array",
+    needs=("gain",),
+    optional=(
+        "array_rows",
+        "horizontal_beamwidth",
+        "vertical_beamwidth",
+        "electrical_tilt",
+        "feed_loss",
+        "efficiency",
+    ),
+    source="integrated directivity of the declared array, TR 38.901 elements; loss ranges: common practice",
+)
+def gain_fits_geometry(
+    *,
+    case: Case,
+    gain: Reading,
+    horizontal_beamwidth: Reading | None,
+    vertical_beamwidth: Reading | None,
+    electrical_tilt: Reading | None,
+    feed_loss: Reading | None,
+    efficiency: Reading | None,
+) -> Judgement:
+    """Computes the directivity of the declared array, takes off a range of losses and compares.
+
+    The array is fitted to the claimed beamwidths by a taper and integrated over the sphere, at the frequency
+    of
+    the claim (mid band unless stated). Above the lossless value a claim does not fit; between the least
+    plausible loss and the lossless value it needs a loss statement; far below the expectation it is
+    questioned
+    too.
+
+    Formula
+    D = 4π·U(beam) ÷ ∮U dΩ; gain = D − loss; loss 0.5–1.6 dB passive, 0.5–1.8 dB massive MIMO, 0.9–2.8 dB
+    millimetre wave, or as declared ± 0.3 dB
+
+    Assumptions
+    Element of TR 38.901 form; cosine taper on a pedestal; model allowance 0.2 dB. Where the horizontal width
+    is that of fewer columns, the gain may be theirs or that of all columns.
+
+    Worked example
+    8 × 8 positions at 0.7 λ × 0.5 λ, beam of 8.9° × 12.5°: D = 24.7 dBi lossless; 26.8 dBi does not fit.
+    """
+    model = model_of(case)
+    if isinstance(model, Lacking):
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
+    if "element_gain_dbi" in gain.at:
+        return _against_short_formula(model, gain)
+    stated_columns = gain.at.get("beam_columns")
+    other_beam = horizontal_beamwidth is not None and "beam_columns" in horizontal_beamwidth.at
+    claims = Claims(
+        freq_hz=claim_freq_hz(gain, model),
+        tilt_deg=rest_tilt_deg(gain, model, electrical_tilt),
+        horizontal_deg=None if other_beam else number(horizontal_beamwidth),
+        vertical_deg=number(vertical_beamwidth),
+        loss_db=declared_loss_db(gain, feed_loss, efficiency),
+        beam_columns=None if stated_columns is None else round(stated_columns),
+    )
+    beams = beam_gains(model, claims)
+    return _judged(model, gain, claims, beams)
+
+
+@dataclass(frozen=True, slots=True)
+class _Edges:
+    """Edges [dBi] for a claim, widened for a wide band when the claim names no frequency."""
+
+    low: float
+    question: float
+    impossible: float
+
+    def zone(self, gain_dbi: float, slack_db: float) -> GainZone:
+        if gain_dbi - slack_db > self.impossible:
+            return GainZone.IMPOSSIBLE
+        if gain_dbi - slack_db > self.question:
+            return GainZone.QUESTION
+        return GainZone.LOW if gain_dbi + slack_db < self.low else GainZone.PLAUSIBLE
+
+
+def _edges(model: Model, claims: Claims, beam: BeamGain) -> _Edges:
+    """A best value of the band may reach the question edge at its top before it cannot be true at all."""
+    expected = beam.expected
+    per_octave = 10 if beam.columns == 1 else 20
+    rise = per_octave * math.log10(max(1.0, model.high_hz / claims.freq_hz))
+    return _Edges(
+        expected.low_dbi, expected.question_dbi, max(expected.impossible_dbi, expected.question_dbi + rise)
+    )
+
+
+def _judged(model: Model, gain: Reading, claims: Claims, beams: tuple[BeamGain, ...]) -> Judgement:
+    slack, value = last_digit_slack(gain), gain.nominal
+    ranked = [(beam, _edges(model, claims, beam)) for beam in beams]
+    order = [GainZone.PLAUSIBLE, GainZone.LOW, GainZone.QUESTION, GainZone.IMPOSSIBLE]
+    beam, edges = min(
+        ranked, key=lambda pair: (order.index(pair[1].zone(value, slack)), abs(value - pair[1].question))
+    )
+    zone = edges.zone(value, slack)
+    expected = beam.expected
+    layout = model.layout
+    counted = f"{layout.rows} × {beam.columns} positions"
+    sense = {
+        GainZone.IMPOSSIBLE: f"{value - expected.directivity_dbi:.1f} dB above the lossless value",
+        GainZone.QUESTION: f"{value - expected.question_dbi:.1f} dB above what the least loss leaves",
+        GainZone.PLAUSIBLE: f"an implied loss of {expected.directivity_dbi - value:.1f} dB",
+        GainZone.LOW: f"{expected.low_dbi - value:.1f} dB under what such a panel has at least",
+    }[zone]
+    return Judgement(
+        verdict=VERDICTS[zone],
+        summary=f"{claim(gain)} gain claimed; {counted} at {pitches(model, beam.columns, claims.freq_hz)}"
+        " have"
+        f" {expected.directivity_dbi:.1f} dBi lossless at {claims.freq_hz / 1e6:.0f} MHz and"
+        f" {expected.low_dbi:.1f} to {expected.question_dbi:.1f} dBi with losses: {sense}.",
+        claimed=Amount(round(value, 2), "dBi"),
+        expected=Interval(round(expected.low_dbi, 2), round(expected.question_dbi, 2), "dBi"),
+        working=_working(model, gain, claims, beam),
+        assumptions=(
+            f"Gain of {beam.columns} of {layout.columns} columns.",
+            *(text[0].upper() + text[1:] + "." for text in expected.assumptions),
+            f"Upper edge set by: {expected.binding}.",
+            *model.assumptions,
+        ),
+        question="Please state the frequency, tilt and beam of the gain figure, whether it is measured at the"
+        " connector, and the loss inside the panel.",
+        used=model.used,
+    )
+
+
+def pitches(model: Model, columns: int, freq_hz: float) -> str:
+    """The spacings in wavelengths, in words."""
+    vertical = f"{model.vertical_pitch_wl(freq_hz):.2f} λ"
+    return vertical if columns == 1 else f"{vertical} × {model.horizontal_pitch_wl(freq_hz):.2f} λ"
+
+
+def _working(model: Model, gain: Reading, claims: Claims, beam: BeamGain) -> tuple[Step, ...]:
+    expected, layout = beam.expected, model.layout
+    wavelength_m = SPEED_OF_LIGHT_MPS / claims.freq_hz
+    height = layout.rows * layout.vertical_pitch_m
+    steps = [
+        Step("Wavelength", f"c ÷ {claims.freq_hz / 1e6:.1f} MHz", round(wavelength_m * 1000, 2), "mm"),
+    ]
+    if beam.columns > 1:
+        width = beam.columns * layout.horizontal_pitch_m
+        area = 10 * math.log10(4 * math.pi * width * height / wavelength_m**2)
+        formula = f"10·log10(4π × {width:.3f} m × {height:.3f} m ÷ ({wavelength_m:.4f} m)²)"
+        steps.append(Step("Area value, for comparison", formula, round(area, 2), "dBi"))
+    tapers = f"pedestals {expected.row_pedestal:.2f} (rows), {expected.column_pedestal:.2f} (columns)"
+    steps += [
+        Step(
+            "Directivity of the fitted array",
+            f"4π·U ÷ ∮U dΩ, {layout.rows} × {beam.columns}, tilt {claims.tilt_deg:g}°, {tapers}",
+            round(expected.directivity_dbi, 2),
+            "dBi",
+        ),
+        Step(
+            "Upper edge",
+            f"{expected.directivity_dbi:.2f} − {expected.directivity_dbi - expected.question_dbi:.2f} dB"
+            " loss",
+            round(expected.question_dbi, 2),
+            "dBi",
+        ),
+        Step(
+            "Lower edge",
+            f"{expected.directivity_dbi:.2f} − {expected.directivity_dbi - expected.low_dbi:.2f} dB",
+            round(expected.low_dbi, 2),
+            "dBi",
+        ),
+        Step(
+            "Implied loss",
+            f"{expected.directivity_dbi:.2f} − {gain.nominal:.2f}",
+            round(expected.directivity_dbi - gain.nominal, 2),
+            "dB",
+        ),
+    ]
+    return tuple(steps)
+
+
+def _against_short_formula(model: Model, gain: Reading) -> Judgement:
+    """Under the system-model reading: element gain plus 10·log10 N, and no array theory."""
+    count = model.layout.rows * model.layout.columns
+    element = gain.at["element_gain_dbi"]
+    short = element + 10 * math.log10(count)
+    off = abs(gain.nominal - short)
+    return Judgement(
+        verdict=Fit.FITS if off <= SHORT_FORMULA_WITHIN_DB else Fit.DOES_NOT_FIT,
+        summary=f"{claim(gain)} gain claimed; {element:g} dBi + 10·log10 {count} = {short:.1f} dBi.",
+        claimed=Amount(gain.nominal, "dBi"),
+        expected=Interval(short - SHORT_FORMULA_WITHIN_DB, short + SHORT_FORMULA_WITHIN_DB, "dBi"),
+        working=(Step("Short formula", f"{element:g} + 10·log10 {count}", round(short, 2), "dBi"),),
+        assumptions=(f"Class {panel_class(model).value}.",),
+        used=model.used,
+    )
+
+
+@check(
+    "gain-below-directivity",
+    "Gain stays below directivity",
+    needs=("gain", "directivity"),
+    about=("directivity",),
+    source="gain = efficiency × directivity (IEEE Std 145)",
+)
+def gain_below_directivity(gain: Reading, directivity: Reading) -> Judgement:
+    """Takes the gain off the stated directivity: what is left is the loss, and a loss is positive.
+
+    Formula
+    loss = D − G ≥ 0; a passive panel loses at least about 0.3 dB
+
+    Assumptions
+    Both figures are of the same beam, frequency and tilt.
+
+    Worked example
+    18.5 dBi gain beside 18.3 dBi directivity: a loss of -0.2 dB, does not fit.
+    """
+    loss = directivity.nominal - gain.nominal
+    slack = last_digit_slack(gain) + last_digit_slack(directivity)
+    verdict = Fit.DOES_NOT_FIT if loss < -slack else Fit.DOUBTFUL if loss < 0.2 else Fit.FITS
+    return Judgement(
+        verdict=verdict,
+        summary=f"{claim(gain)} gain beside {claim(directivity)} directivity: a loss of {loss:.1f} dB"
+        + ("." if verdict is Fit.FITS else ", less than any feed and radome leave."),
+        claimed=Amount(gain.nominal, "dBi"),
+        expected=Interval(None, directivity.nominal, "dBi"),
+        working=(
+            Step(
+                "Loss",
+                f"{figure(directivity.nominal, 'dBi')} − {figure(gain.nominal, 'dBi')}",
+                round(loss, 2),
+                "dB",
+            ),
+        ),
+        assumptions=("Both figures are of the same beam, frequency and tilt.",),
+        question="Please state the loss between connector and radiated beam.",
+    )

@@ -1,0 +1,188 @@
+"""Gain against the beam and the box: beamwidths and housing."""
+
+from __future__ import annotations
+
+import math
+
+from speccheck.checks.beams import SAME_BEAM, claim_freq_hz, flat, rest_tilt_deg, uniform_widths_deg
+from speccheck.checks.model import Lacking, Model, model_of
+from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim, last_digit_slack, mhz
+from speccheck.physics.bounds import aperture_directivity_dbi, aperture_is_hard
+from speccheck.records import Amount, Fit, Interval, Reading, Step
+
+SOLID_ANGLE = 41_253.0
+PLANAR = 32_400.0
+LOSSY = 17_000.0
+"""Products gain × width × width [deg²]: the sphere; arrays with side lobes (Balanis ch. 6); a lossy or
+heavily
+shaped beam (the 14 dBi, 70° × 10° panel of 3GPP TR 36.814 Table A.2.1.1-2 gives 17 600)."""
+
+HOUSING_ALLOWANCE_DB = 0.5
+"""Uniform arrays exceed 4πA/λ² by up to 0.4 dB (brute force on published arrays); rounded up [dB]."""
+
+
+@check(
+    "gain-fits-beamwidths",
+    "Gain fits the beamwidths",
+    needs=("gain", "horizontal_beamwidth", "vertical_beamwidth"),
+    optional=("electrical_tilt",),
+    about=("gain",),
+    source="beam solid angle (41 253 square degrees); C. A. Balanis, Antenna Theory, ch. 6 (32 400); "
+    "ITU-R F.1336-5 recommends 3.3 (31 000)",
+)
+def gain_fits_beamwidths(
+    *,
+    case: Case,
+    gain: Reading,
+    horizontal_beamwidth: Reading,
+    vertical_beamwidth: Reading,
+    electrical_tilt: Reading | None,
+) -> Judgement | None:
+    """Holds the gain against the solid angle of a beam of the claimed half-power widths.
+
+    Formula
+    G ≤ 10·log10(K ÷ (θh·θv)), K = 32 400 for arrays with side lobes; 41 253 is the sphere itself. A gain
+    between them is questioned, one above does not fit, one under K = 17 000 is questioned as low.
+
+    Assumptions
+    Gain and both widths belong to one beam at one frequency. Widths may be half of their last printed digit
+    smaller. Horizontal widths to about 130°.
+
+    Worked example
+    65° × 7°: 18.5 dBi with 32 400 and 19.6 dBi with 41 253; 20.5 dBi does not fit.
+    """
+    across, along = horizontal_beamwidth.nominal, vertical_beamwidth.nominal
+    note: tuple[str, ...] = ()
+    model = model_of(case)
+    other = _width_of_another_beam(model, gain, horizontal_beamwidth, electrical_tilt)
+    if other is not None and "beam_columns" in horizontal_beamwidth.at:
+        across, note = other, (f"Width of all columns, {other:.1f}°, in place of the broadcast width.",)
+    if across > 130:
+        return None
+    rounding = last_digit_slack(horizontal_beamwidth) / across + last_digit_slack(vertical_beamwidth) / along
+    slack = last_digit_slack(gain) + 4.343 * rounding
+    product = across * along
+    sphere, planar, least = (10 * math.log10(k / product) for k in (SOLID_ANGLE, PLANAR, LOSSY))
+    value = gain.nominal
+    verdict = (
+        Fit.DOES_NOT_FIT
+        if value - slack > sphere
+        else Fit.DOUBTFUL
+        if value - slack > planar or value + slack < least
+        else Fit.FITS
+    )
+    implied = 10 ** (value / 10) * product
+    if verdict is not Fit.FITS and other is not None and not note and isinstance(model, Model):
+        return _of_two_beams(gain, horizontal_beamwidth, other, model)
+    meaning = {
+        Fit.FITS: "in the ordinary range",
+        Fit.DOUBTFUL: f"{value - planar:+.1f} dB against 32 400",
+        Fit.DOES_NOT_FIT: "more than a sphere holds",
+    }[verdict]
+    return Judgement(
+        verdict=verdict,
+        summary=f"{claim(gain)} gain claimed with {across:.4g}° × {along:.4g}°; such a beam has up to"
+        f" {planar:.1f} dBi"
+        f" (K = 32 400), {sphere:.1f} dBi at most (K = 41 253). The claim implies K = {implied:.0f}:"
+        f" {meaning}.",
+        claimed=Amount(value, "dBi"),
+        expected=Interval(round(least, 2), round(planar, 2), "dBi"),
+        working=(
+            Step("Upper edge", f"10·log10(32400 ÷ ({across:.4g} × {along:.4g}))", round(planar, 2), "dBi"),
+            Step("Sphere", f"10·log10(41253 ÷ ({across:.4g} × {along:.4g}))", round(sphere, 2), "dBi"),
+            Step(
+                "Implied constant",
+                f"10^({value:g} ÷ 10) × {across:.4g} × {along:.4g}",
+                round(implied),
+                "deg²",
+            ),
+        ),
+        assumptions=("Gain and both widths belong to one beam at one frequency, widths at -3 dB.", *note),
+        question="Please state frequency, tilt and level (-3 dB) of the gain and of each beamwidth.",
+    )
+
+
+def _width_of_another_beam(
+    model: Model | Lacking, gain: Reading, width: Reading, tilt: Reading | None
+) -> float | None:
+    """Width [deg] of all columns, where the stated one is far from it; None where they agree."""
+    if isinstance(model, Lacking) or model.layout.columns < 2:
+        return None
+    freq_hz = claim_freq_hz(gain, model)
+    uniform, _ = uniform_widths_deg(flat(model.layout), freq_hz, rest_tilt_deg(gain, model, tilt))
+    return uniform if uniform is not None and width.nominal / uniform > SAME_BEAM[1] else None
+
+
+def _of_two_beams(gain: Reading, width: Reading, all_deg: float, model: Model) -> Judgement:
+    columns = model.layout.columns
+    return Judgement(
+        verdict=Fit.DOUBTFUL,
+        summary=f"{claim(gain)} gain and {claim(width)} horizontal width claimed; {columns} columns in phase"
+        " have"
+        f" {all_deg:.1f}°. Gain and width are not of the same beam.",
+        claimed=Amount(width.nominal, "deg"),
+        expected=Interval(round(0.92 * all_deg, 1), round(1.22 * all_deg, 1), "deg"),
+        working=(
+            Step("Width of all columns", f"{columns} columns, uniform weights", round(all_deg, 1), "deg"),
+        ),
+        assumptions=("The width may be that of a broadcast beam or of one column.",),
+        question="Please state which beam (traffic, broadcast, one column) each of gain and beamwidth belongs"
+        " to.",
+        used=model.used,
+    )
+
+
+@check(
+    "gain-fits-housing",
+    "Gain fits the housing",
+    needs=("gain", "height", "width"),
+    about=("gain",),
+    source="aperture theorem G ≤ 4πA/λ²: C. A. Balanis, Antenna Theory, ch. 12",
+)
+def gain_fits_housing(*, case: Case, gain: Reading, height: Reading, width: Reading) -> Judgement:
+    """Holds the gain against the area of the housing.
+
+    Formula
+    G ≤ 10·log10(4π·h·w ÷ λ²), a side shorter than 0.8 λ taken as 0.8 λ
+
+    Assumptions
+    The box holds the whole aperture. The bound is hard where both sides exceed one wavelength, a question
+    otherwise: narrow columns collect from beyond their edge. Allowance 0.5 dB.
+
+    Worked example
+    720 mm × 420 mm at 3500 MHz: 27.1 dBi; 29.0 dBi does not fit.
+    """
+    if case.band is None:
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("frequency_range",))
+    freq_mhz = gain.at.get("frequency_mhz", sum(case.band) / 2)
+    bound = float(aperture_directivity_dbi(width.high, height.high, freq_mhz * 1e6))
+    hard = bool(aperture_is_hard(width.high, height.high, freq_mhz * 1e6))
+    over = gain.nominal - last_digit_slack(gain) - bound - HOUSING_ALLOWANCE_DB
+    verdict = Fit.FITS if over <= 0 else Fit.DOES_NOT_FIT if hard else Fit.DOUBTFUL
+    wavelength_mm = 299_792.458 / freq_mhz
+    sides = " × ".join(f"max({side * 1000 / wavelength_mm:.2f}, 0.8)" for side in (height.high, width.high))
+    return Judgement(
+        verdict=verdict,
+        summary=f"{claim(gain)} gain claimed from {claim(height)} × {claim(width)}; that area has {bound:.1f}"
+        " dBi at"
+        f" {freq_mhz:.0f} MHz without losses."
+        + (f" The claim is {gain.nominal - bound:.1f} dB more." if over > 0 else ""),
+        claimed=Amount(gain.nominal, "dBi"),
+        expected=Interval(None, round(bound + HOUSING_ALLOWANCE_DB, 2), "dBi"),
+        working=(
+            Step(
+                "Aperture bound",
+                f"10·log10(4π × {sides}), sides in λ of {wavelength_mm:.1f} mm",
+                round(bound, 2),
+                "dBi",
+            ),
+        ),
+        assumptions=(
+            f"Band {mhz(case.band)}, middle; allowance {HOUSING_ALLOWANCE_DB} dB.",
+            "Both sides exceed one wavelength."
+            if hard
+            else "A side is shorter than one wavelength: a guide only.",
+        ),
+        question="Please confirm the outer size of the radome and the frequency of the gain figure.",
+    )
