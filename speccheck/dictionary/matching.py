@@ -47,13 +47,14 @@ class HeadingMatch:
     suggestions: tuple[str, ...] = ()
 
 
-def match_heading(text: str, extra: Mapping[str, str] | None = None) -> HeadingMatch:
+def match_heading(text: str, extra: Mapping[str, str] | None = None, *, suggest: bool = True) -> HeadingMatch:
     """Recognise a heading.
 
     Parameters
     ----------
     text : heading as the bidder wrote it
     extra : the buyer's own headings, text to parameter key; they go before the dictionary's
+    suggest : whether to look for near headings where none matches, which takes most of the time
 
     >>> match_heading("Half-power beam width, azimuth [°]").parameters
     ('horizontal_beamwidth',)
@@ -63,7 +64,7 @@ def match_heading(text: str, extra: Mapping[str, str] | None = None) -> HeadingM
     ()
     """
     house = _house(tuple(sorted(extra.items()))) if extra else {}
-    return _match(text, house) if house else _match_known(text)
+    return _match(text, house, suggest) if house else _match_known(text, suggest)
 
 
 @functools.lru_cache(maxsize=8)
@@ -72,11 +73,11 @@ def _house(extra: tuple[tuple[str, str], ...]) -> dict[str, str]:
 
 
 @functools.lru_cache(maxsize=8192)
-def _match_known(text: str) -> HeadingMatch:
-    return _match(text, {})
+def _match_known(text: str, suggest: bool) -> HeadingMatch:
+    return _match(text, {}, suggest)
 
 
-def _match(text: str, house: Mapping[str, str]) -> HeadingMatch:
+def _match(text: str, house: Mapping[str, str], suggest: bool) -> HeadingMatch:
     if not text or len(text) > _LONGEST_HEADING or not any(c.isalpha() for c in text):
         return HeadingMatch()
     body = _NUMBERING.sub("", tidy(split_footnotes(text)[0])).strip(" :;.")
@@ -86,7 +87,7 @@ def _match(text: str, house: Mapping[str, str]) -> HeadingMatch:
         found = _look_up(cut.text, house, tolerance_of=tolerance_of)
         if found:
             return _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
-    return HeadingMatch(suggestions=suggestions(body))
+    return HeadingMatch(suggestions=suggestions(body) if suggest else ())
 
 
 def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:

@@ -233,7 +233,11 @@ class AcrossReader:
                 else "a column without a heading"
             )
             self._result.unread.append(
-                (where, f"{reason}; its {found.misses} cells were not read", found.label.suggestion)
+                (
+                    where,
+                    f"{reason}; its {found.misses} cells were not read",
+                    self._marks.labels.suggestion(found.label.text),
+                )
             )
 
 
@@ -245,17 +249,15 @@ def compose(index: int, stack: list[Cell], labels: Labels) -> tuple[Label, Colum
         for c in stack
         if not (is_unit(c.text) or is_band_label(c.text) or statistic_of(c.text))
     ]
-    suggestion = ""
     for text in _combinations(words):
         label = labels.of(text)
         if label:
             if column.band is None and label.bands.spans:
                 column.band = label.bands.hull
             return label, column
-        suggestion = suggestion or label.suggestion
     if words and column_role(words[-1]):
         column.role = column_role(words[-1])
-    return Label(" ".join(words), suggestion=suggestion), column
+    return Label(" ".join(words)), column
 
 
 def _combinations(words: list[str]) -> list[str]:

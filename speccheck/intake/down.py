@@ -276,7 +276,7 @@ class DownReader:
         for cell in beside:
             column = self._columns.get(cell.column)
             if column is not None and column.role in VALUE_ROLES:
-                self._result.unread.append((cell, reason, label.suggestion))
+                self._result.unread.append((cell, reason, self._marks.labels.suggestion(label_text)))
                 self._result.mark(cell, "unread")
             else:
                 self._result.mark(cell, "label")

@@ -5,14 +5,18 @@ from __future__ import annotations
 import re
 from collections.abc import Mapping
 from dataclasses import dataclass, replace
+from functools import cache, lru_cache
 
-from speccheck.dictionary import match_heading
+from speccheck.dictionary import match_heading, synonyms
 from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
-from speccheck.intake.words import column_role, is_counting_unit
+from speccheck.intake.words import column_role, fold, is_counting_unit
 from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
-_WORDS = re.compile(r"[^\W\d_]{2,}|\b[A-Z]/[A-Z]\b|\b[PFv]\b")
+_LONGEST = 160
+_MOST_MISSES = 10_000
+"""More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
+_RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
@@ -30,7 +34,6 @@ class Label:
     statistic: str = ""
     tolerance: bool = False
     how: str = ""
-    suggestion: str = ""
 
     def __bool__(self) -> bool:
         return bool(self.parameters)
@@ -42,6 +45,8 @@ class Labels:
     def __init__(self, synonyms: Mapping[str, str]) -> None:
         self._synonyms = dict(synonyms)
         self._known: dict[str, Label] = {}
+        self._vocabulary = _vocabulary() | {_stem(word) for text in synonyms for word in _runs(text)}
+        self._misses = 0
 
     def of(self, text: str) -> Label:
         """Understand one heading text."""
@@ -59,7 +64,12 @@ class Labels:
         return (label, match[2].strip()) if label else None
 
     def _understand(self, text: str) -> Label:
-        if len(text) > 160 or not _WORDS.search(text):
+        words = _runs(text)
+        if len(text) > _LONGEST or not any(_stem(word) in self._vocabulary for word in words):
+            return Label(text)
+        if max(map(len, words)) < 2 and "/" not in text:
+            return Label(text)
+        if self._misses > _MOST_MISSES:
             return Label(text)
         cleaned = text.strip().rstrip(":").strip()
         whole = self._match(cleaned)
@@ -70,13 +80,21 @@ class Labels:
             inner = self._match(_tidy(bands.rest))
             if inner:
                 return replace(inner, text=text, bands=bands)
+        self._misses += 1
         return replace(whole, text=text)
 
+    def letter(self, text: str) -> Label:
+        """A single letter as a heading, such as H for the height; only its neighbours can prove it one."""
+        return self._match(text.strip()) if len(text.strip()) == 1 else Label(text)
+
+    def suggestion(self, text: str) -> str:
+        """The nearest known headings to a text."""
+        return "; ".join(match_heading(text, self._synonyms).suggestions[:2]) if text else ""
+
     def _match(self, text: str) -> Label:
-        found = match_heading(text, self._synonyms)
-        suggestion = ", ".join(found.suggestions[:2])
+        found = match_heading(text, self._synonyms, suggest=False)
         if not found.exact or not found.parameters:
-            return Label(text, suggestion=suggestion)
+            return Label(text)
         condition = found.condition
         bands = find_bands(condition) if condition else NO_BANDS
         return Label(
@@ -95,6 +113,22 @@ class Labels:
 def _tidy(text: str) -> str:
     text = re.sub(r"[(\[]\s*[)\]]", " ", text)
     return re.sub(r"\s*[@,;:–-]\s*$", "", " ".join(text.split())).strip()
+
+
+def _runs(text: str) -> list[str]:
+    return _RUN.findall(text)
+
+
+@lru_cache(maxsize=20_000)
+def _stem(word: str) -> str:
+    return fold(word)[:4]
+
+
+@cache
+def _vocabulary() -> frozenset[str]:
+    """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
+    texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
+    return frozenset(_stem(word) for text in texts for word in _runs(text) if not unit_name(word))
 
 
 def is_unit(text: str) -> bool:

@@ -75,10 +75,5 @@ def _leftovers(marks: Marks, result: SheetResult) -> None:
                 before = free[position - 1].text if position else ""
                 if not (before and column_role(before) == "number"):
                     reason = f"a figure beside '{before[:60]}'" if before else "a figure outside every table"
-                    result.unread.append((cell, reason, labels_suggestion(marks, before)))
+                    result.unread.append((cell, reason, marks.labels.suggestion(before)))
                 result.mark(cell, "unread")
-
-
-def labels_suggestion(marks: Marks, text: str) -> str:
-    """The nearest known heading to a text."""
-    return marks.labels.of(text).suggestion if text else ""

@@ -9,6 +9,7 @@ from speccheck.intake.labels import Label, Labels, is_unit
 from speccheck.intake.words import column_role
 
 _LONGEST = 400
+_SIZES = ("H", "W", "D", "B", "T", "L")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -41,7 +42,21 @@ def mark(grid: Grid, labels: Labels) -> Marks:
             if isinstance(raw, str) and not cell.fault and _might_be_heading(raw):
                 _mark_text(marks, (row, cell.column), raw, following)
             following = cell
+    _mark_letters(marks)
     return marks
+
+
+def _mark_letters(marks: Marks) -> None:
+    """H, W and D beside or below one another head the three sizes."""
+    letters = {
+        place: marks.labels.letter(cell.text)
+        for place, cell in marks.grid.cells.items()
+        if isinstance(cell.raw, str) and cell.text.strip().upper() in _SIZES
+    }
+    for (row, column), label in letters.items():
+        around = ((row - 1, column), (row + 1, column), (row, column - 1), (row, column + 1))
+        if label and any(place in letters and letters[place] != label for place in around):
+            marks.headings[row, column] = label
 
 
 def _might_be_heading(text: str) -> bool:

@@ -13,9 +13,6 @@ from speccheck.intake.archive import Archive
 from speccheck.intake.limits import Limits
 from speccheck.intake.xml_parts import End, Start, Text, stream
 
-_RELATION = "http://schemas.openxmlformats.org/officeDocument/2006/relationships id"
-_RELATION_STRICT = "http://purl.oclc.org/ooxml/officeDocument/relationships id"
-
 
 @dataclass(frozen=True, slots=True)
 class SheetEntry:
@@ -124,7 +121,7 @@ class _PartReader:
             if tag == "workbookPr":
                 package.counts_from_1904 = at.get("date1904") in ("1", "true")
             elif tag == "sheet":
-                kind, target = relations.get(at.get(_RELATION) or at.get(_RELATION_STRICT, ""), ("", ""))
+                kind, target = relations.get(_relation_id(at), ("", ""))
                 if kind == "worksheet" and target in self._archive:
                     hidden = at.get("state", "visible") != "visible"
                     found.append(SheetEntry(at.get("name", ""), target, hidden))
@@ -206,6 +203,11 @@ class _PartReader:
             expected="an .xlsx or .xlsm workbook",
             remedy="save the data as .xlsx",
         )
+
+
+def _relation_id(at: dict[str, str]) -> str:
+    """The attribute ``id`` of the relationships namespace, whatever prefix the writer gave it."""
+    return next((value for name, value in at.items() if name.endswith(":id")), "")
 
 
 def _whole(text: str) -> int:

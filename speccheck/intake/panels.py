@@ -14,7 +14,32 @@ from speccheck.records import Band, Panel, Statement, Unread
 
 FREQUENCY = frozenset({"frequency_range", "operating_bands"})
 GEOMETRY = frozenset(
-    ["array_rows", "array_columns", "element_count", "array_size", "horizontal_element_spacing", "vertical_element_spacing", "element_spacing", "subarray_rows", "subarray_columns", "subarray_spacing_vertical", "lattice", "panel_groups", "element_type", "transceivers", "csi_rs_ports", "mimo_layers", "served_users", "beam_count", "element_gain", "subarray_gain", "tdd_duty", "occupied_bandwidth", "front_to_back_definition", "grating_lobes"]
+    [
+        "array_rows",
+        "array_columns",
+        "element_count",
+        "array_size",
+        "horizontal_element_spacing",
+        "vertical_element_spacing",
+        "element_spacing",
+        "subarray_rows",
+        "subarray_columns",
+        "subarray_spacing_vertical",
+        "lattice",
+        "panel_groups",
+        "element_type",
+        "transceivers",
+        "csi_rs_ports",
+        "mimo_layers",
+        "served_users",
+        "beam_count",
+        "element_gain",
+        "subarray_gain",
+        "tdd_duty",
+        "occupied_bandwidth",
+        "front_to_back_definition",
+        "grating_lobes",
+    ]
 )
 """Band-scoped in a panel of several arrays, but said of the whole panel when it has one."""
 PER_BAND_IF_SAID = GEOMETRY | {

@@ -102,15 +102,10 @@ class Reader:
     def __init__(self, file: str, habit: DecimalHabit) -> None:
         self._file, self._habit = file, habit
         self._known: dict[tuple[int, type, Raw, str], _Understood] = {}
-        self._refs: dict[tuple[str, str], CellRef] = {}
 
     def where(self, sheet: str, address: str) -> CellRef:
-        """The reference of a cell, made once."""
-        key = (sheet, address)
-        ref = self._refs.get(key)
-        if ref is None:
-            ref = self._refs[key] = CellRef(self._file, sheet, address)
-        return ref
+        """The reference of a cell."""
+        return CellRef(self._file, sheet, address)
 
     def read(self, claim: Claim, sheet: str) -> Outcome:
         """Readings of one claim, or its statement, or why it was not read."""

@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
-from collections.abc import Mapping
+import gc
+from collections.abc import Iterator, Mapping
+from contextlib import contextmanager
 from dataclasses import dataclass
 from datetime import date, time
 from pathlib import Path
@@ -51,9 +53,24 @@ def read_account(
     path: str | Path, *, headings: Mapping[str, str] | None = None, limits: Limits | None = None
 ) -> Account:
     """As `read_submission`, with what became of every filled cell."""
-    book = open_book(path, limits)
-    labels = Labels(headings or {})
-    stem = Path(path).stem
+    with _collector_at_rest():
+        return _account(open_book(path, limits), Path(path).stem, headings or {})
+
+
+@contextmanager
+def _collector_at_rest() -> Iterator[None]:
+    """Hold the cycle collector: it would walk the many small records again and again, and none has cycles."""
+    running = gc.isenabled()
+    gc.disable()
+    try:
+        yield
+    finally:
+        if running:
+            gc.enable()
+
+
+def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
+    labels = Labels(headings)
     visible = [grid for grid in book.grids if not grid.hidden]
     results = [read_layout(grid, labels, stem) for grid in visible]
     drafts = joined([draft for result in results for draft in result.drafts])

@@ -23,23 +23,24 @@ Text = Callable[[str], None]
 def stream(
     chunks: Iterable[bytes], *, file: str, part: str, limits: Limits, start: Start, end: End, text: Text
 ) -> None:
-    """Feed a part to the handlers; element names come without their namespace.
+    """Feed a part to the handlers; element names come without their namespace prefix.
 
     Raises
     ------
     UnusableInputError : not well formed, a document type, or more elements or longer text than the limits
     """
-    parser = expat.ParserCreate(namespace_separator=" ")
+    parser = expat.ParserCreate()
     parser.buffer_text = True
     count = 0
+    local: dict[str, str] = {}
 
     def started(name: str, attributes: dict[str, str]) -> None:
         nonlocal count
         count += 1
-        start(name[name.rfind(" ") + 1 :], attributes)
+        start(local.get(name) or local.setdefault(name, name[name.rfind(":") + 1 :]), attributes)
 
     def ended(name: str) -> None:
-        end(name[name.rfind(" ") + 1 :])
+        end(local.get(name) or name)
 
     def refuse_document_type(*_: object) -> None:
         raise _unusable(file, f"a document type declaration in '{part}'", "remove it; spreadsheets have none")
