@@ -163,14 +163,18 @@ def _steering_map(model: Model, steering: Steering) -> Iterator[Drawing]:
     yield Drawing(
         kind="steering-map",
         title=title,
-        text=f"Element lattice at {at}, {span}: {seen} lobes of the lattice have their centre inside the "
-        "circle of visible directions for some beam of that range. Their level, and the lobes of sub-arrays, "
-        "are computed in the checks.",
+        text=f"Element lattice at {at}, {span}: {_lobes(seen)} with the centre inside the circle of visible "
+        "directions for some beam of that range. Their level, and the lobes of sub-arrays, are computed in "
+        "the checks.",
         band=model.band,
         curves=tuple(curves),
         marks={"lobes_seen": float(seen)},
         where=_cells(model, steering),
     )
+
+
+def _lobes(count: int) -> str:
+    return "no lobe" if count == 0 else f"{count} lobe{'s' if count > 1 else ''}"
 
 
 def _lattice_points(u_step: float, v_step: float, triangular: bool) -> Iterator[tuple[float, float]]:

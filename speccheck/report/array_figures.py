@@ -11,9 +11,15 @@ from speccheck.report.canvas import Canvas, Figure, Plot, Scale, axes, scale_aro
 from speccheck.report.formats import Numbers
 
 EXPECTED = "Curves: expected, not measured."
+FLOOR_DB = -30.0
+SIDE_TILT_DB = -12.0
+"""Least and greatest tilt are drawn above this level only: beam and any grating lobe, no side lobes."""
+
 HALF, FULL = 320, 640
 _HIDDEN = (math.nan, math.nan)
 _CURVE_STYLES = ("first", "second", "third")
+_ORDER = ("second", "first", "third")
+"""Styles of the vertical cut: the middle tilt carries the strong line."""
 
 
 def draw(drawing: Drawing, numbers: Numbers) -> Figure | None:
@@ -23,16 +29,17 @@ def draw(drawing: Drawing, numbers: Numbers) -> Figure | None:
 
 
 def _spacing(drawing: Drawing, numbers: Numbers) -> Figure:
-    canvas = Canvas(FULL, 220, numbers)
+    canvas = Canvas(HALF, 230, numbers)
     limits = {k: v for k, v in drawing.marks.items() if k.startswith("limit_")}
     values = [y for curve in drawing.curves for y in curve.y] + list(limits.values())
     ends = drawing.curves[0].x
     plot = axes(
         canvas,
-        Scale(ends[0], ends[-1], 46, 490),
-        scale_around([*values, min(values) * 0.9], 180, 20),
+        Scale(ends[0], ends[-1], 36, 214),
+        scale_around([*values, min(values) * 0.9], 190, 20),
         "Frequency [MHz]",
         "Spacing [λ]",
+        x_ticks=Scale(ends[0], ends[-1], 0, 1).ticks(3),
     )
     rows = []
     for i, curve in enumerate(drawing.curves):
@@ -40,7 +47,7 @@ def _spacing(drawing: Drawing, numbers: Numbers) -> Figure:
         style = _CURVE_STYLES[i]
         plot.curve(curve.x, curve.y, style)
         canvas.write(
-            496, plot.y(curve.y[-1]) + 4, f"{plane} {numbers.plain(curve.y[-1], 2)}λ", style=f"{style}-text"
+            218, plot.y(curve.y[-1]) + 4, f"{plane} {numbers.plain(curve.y[-1], 2)}λ", style=f"{style}-text"
         )
         limit = drawing.marks[f"limit_{plane}_wl"]
         plot.level(limit, "limit")
@@ -81,52 +88,53 @@ def _limit_labels(plot: Plot, drawing: Drawing, limits: dict[str, float], taken:
         while any(abs(y - other) < 12 for other in placed):
             y += 3
         placed.append(y)
-        plot.canvas.write(496, y + 4, f"limit {plane}, {angle}", style="limit-text")
+        plot.canvas.write(218, y + 4, f"limit {plane}, {angle}", style="limit-text")
 
 
 def _vertical_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     """Level to the right, elevation upwards: up is up."""
-    canvas = Canvas(HALF, 300, numbers)
-    x, y = Scale(-30, 0, 40, 258), Scale(-90, 90, 262, 22)
+    canvas = Canvas(HALF, 250, numbers)
+    x, y = Scale(-30, 0, 34, 246), Scale(-90, 90, 212, 22)
     axes(canvas, x, y, "Level against the beam [dB]", "Elevation [°]", y_ticks=range(-90, 91, 30))
     canvas.line(((x.start, y(0)), (x.end, y(0))), "axis")
+    middle = len(drawing.curves[:3]) // 2
     for i, curve in enumerate(drawing.curves[:3]):
+        lowest = FLOOR_DB if i == middle else SIDE_TILT_DB
+        points = zip(curve.x, curve.y, strict=True)
         canvas.line(
-            ((x.clipped(level), y(angle)) for angle, level in zip(curve.x, curve.y, strict=True)),
-            _CURVE_STYLES[i],
+            ((x(level), y(angle)) if level >= lowest else _HIDDEN for angle, level in points), _ORDER[i]
         )
-    for i, curve in enumerate(drawing.curves[:3]):
-        canvas.write(264, 34 + 14 * i, curve.name, style=f"{_CURVE_STYLES[i]}-text")
+        canvas.write(252, 34 + 13 * i, curve.name, style=f"{_ORDER[i]}-text")
     marks = drawing.marks
     for level, name in ((-3.0, "3db"), (-10.0, "10db")):
         if f"expected_{name}_from_deg" in marks:
             ends = [y(marks[f"expected_{name}_{end}_deg"]) for end in ("from", "to")]
             canvas.line(((x(level), ends[0]), (x(level), ends[1])), "claimspan")
     if "upper_sidelobe_db" in marks:
-        canvas.write(264, 96, "upper lobe", style="small")
-        canvas.write(264, 109, numbers.figure(marks["upper_sidelobe_db"], "dB"), style="small")
+        canvas.write(252, 84, "upper lobe", style="small")
+        canvas.write(252, 97, numbers.figure(marks["upper_sidelobe_db"], "dB"), style="small")
     for i, (said, name) in enumerate((("−3 dB", "3db"), ("−10 dB", "10db"))):
         if f"expected_{name}_deg" in marks:
-            canvas.write(264, 186 + 32 * i, said, style="small")
+            canvas.write(252, 140 + 30 * i, said, style="small")
             canvas.write(
-                264, 199 + 32 * i, numbers.figure(marks[f"expected_{name}_deg"], "deg"), style="small"
+                252, 153 + 30 * i, numbers.figure(marks[f"expected_{name}_deg"], "deg"), style="small"
             )
     return canvas.figure(
         drawing.title,
         drawing.text,
         where=drawing.where,
-        note=EXPECTED,
+        note=f"{EXPECTED} Least and greatest tilt: drawn above {numbers.plain(SIDE_TILT_DB)} dB.",
         kind=drawing.kind,
         **_width_table(drawing, numbers),
     )
 
 
 def _horizontal_cut(drawing: Drawing, numbers: Numbers) -> Figure:
-    canvas = Canvas(HALF, 318, numbers)
+    canvas = Canvas(HALF, 262, numbers)
     plot = axes(
         canvas,
         Scale(-180, 180, 40, 310),
-        Scale(-30, 0, 216, 22),
+        Scale(-30, 0, 160, 22),
         "Azimuth [°]",
         "Level against the beam [dB]",
         x_ticks=range(-180, 181, 60),
@@ -134,7 +142,7 @@ def _horizontal_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     for i, curve in enumerate(drawing.curves[:3]):
         plot.curve(curve.x, curve.y, _CURVE_STYLES[i])
         canvas.write(304, 34 + 13 * i, curve.name, "end", f"{_CURVE_STYLES[i]}-text")
-    marks, y = drawing.marks, 262.0
+    marks, y = drawing.marks, 206.0
     for name_shown, name in (("−3 dB", "3db"), ("−10 dB", "10db")):
         expected, claimed = marks.get(f"expected_{name}_deg"), marks.get(f"claimed_{name}_deg")
         canvas.write(36, y + 4, name_shown, "end", "small")
@@ -169,8 +177,8 @@ def _width_table(drawing: Drawing, numbers: Numbers) -> dict[str, tuple[object, 
 
 
 def _steering_map(drawing: Drawing, numbers: Numbers) -> Figure:
-    canvas = Canvas(HALF, 300, numbers)
-    x, y = Scale(-1.6, 1.6, 26, 294), Scale(-1.6, 1.6, 276, 8)
+    canvas = Canvas(HALF, 230, numbers)
+    x, y = Scale(-1.6, 1.6, 56, 264), Scale(-1.6, 1.6, 211, 3)
     canvas.arc(x(0), y(0), x(1) - x(0), y(0) - y(1), "shade")
     canvas.arc(x(0), y(0), x(1) - x(0), y(0) - y(1), "axis")
     canvas.line(((x(-1.6), y(0)), (x(1.6), y(0))), "guide")
@@ -180,10 +188,10 @@ def _steering_map(drawing: Drawing, numbers: Numbers) -> Figure:
         outline = [*zip(lobe.x, lobe.y, strict=True), (lobe.x[0], lobe.y[0])]
         canvas.line(((x(u), y(v)) if max(abs(u), abs(v)) <= 1.6 else _HIDDEN for u, v in outline), "limit")
     canvas.line([(x(u), y(v)) for u, v in zip(claimed.x, claimed.y, strict=True)], "first", close=True)
-    canvas.write(x(1.6), y(0) - 4, "u, to the side", "end", "small")
-    canvas.write(x(0) + 5, y(1.6) + 10, "v, upwards", style="small")
-    canvas.write(26, 294, "– – grating lobes", style="limit-text")
-    canvas.write(160, 294, "—— claimed steering", style="first-text")
+    canvas.write(x(1.62), y(0) + 3, "u →", "start", "small")
+    canvas.write(x(0) + 5, y(1.6) + 8, "v ↑", style="small")
+    canvas.write(40, 227, "– · – grating lobes", style="limit-text")
+    canvas.write(170, 227, "—— claimed steering", style="first-text")
     return canvas.figure(drawing.title, drawing.text, where=drawing.where, note=EXPECTED, kind=drawing.kind)
 
 

@@ -9,7 +9,7 @@ from speccheck.records import ExposureNote, ExposureRow, ExposureZone, Panel
 from speccheck.report.canvas import Canvas, Figure
 from speccheck.report.formats import Numbers
 
-WIDTH, HEIGHT = 316, 190
+WIDTH, HEIGHT = 316, 160
 _PUBLIC_STYLE, _WORKER_STYLE = "first", "second"
 
 
@@ -82,7 +82,7 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
     return canvas.figure(
         f"Side view to scale: {said} in front of the radome along the beam",
         f"Arcs at full power for tilts of {spread} downwards, all bands "
-        "together where there are several. The assumptions and cautions of this box belong to this figure.",
+        "together; read with this box’s assumptions and cautions.",
         note="Expected, not measured.",
         kind="exposure-side",
     )
@@ -112,7 +112,7 @@ def _at(distance: float, tilt_deg: float, origin: tuple[float, float], px: float
 def _top_view(zone: ExposureZone, numbers: Numbers) -> Figure:
     aside = max(abs(y) for _, y in zone.top_view)
     front, behind = max(x for x, _ in zone.top_view), -min(0.0, *(x for x, _ in zone.top_view))
-    px = min(230 / (front + behind or 1), 120 / (2 * aside or 1))
+    px = min(230 / (front + behind or 1), 100 / (2 * aside or 1))
     canvas = Canvas(WIDTH, round(2 * aside * px + 62), numbers)
     x0, y0 = 20 + behind * px, 18 + aside * px
     canvas.line(((x0 + x * px, y0 - y * px) for x, y in zone.top_view), "shade", close=True)
@@ -128,8 +128,8 @@ def _top_view(zone: ExposureZone, numbers: Numbers) -> Figure:
     return canvas.figure(
         f"Top view to scale: {front_said} in front and {beside_said} to each side for {zone.population}, "
         f"{numbers.band(zone.band)}",
-        "Reach of the limit at full power from the modelled pattern, swept over the stated azimuths. The "
-        "assumptions and cautions of this box belong to this figure.",
+        "Reach of the limit at full power, modelled over the stated azimuths; read with this box’s "
+        "assumptions.",
         note="Expected, not measured.",
         kind="exposure-top",
     )

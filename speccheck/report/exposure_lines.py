@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass
 
-from speccheck.records import Band, ExposureNote, ExposureRow
+from speccheck.records import Band, ExposureNote, ExposureRow, ExposureZone
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -49,3 +49,31 @@ def exposure_table(note: ExposureNote) -> ExposureTable:
         ),
         factored=any(row.factored_distance_m is not None for row in note.rows),
     )
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ZoneLine:
+    """Zones of a band and averaging kind in the order of `ZoneTable.populations`."""
+
+    band: Band
+    basis: str
+    zones: tuple[ExposureZone | None, ...]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ZoneTable:
+    """All zones of a note, folded."""
+
+    populations: tuple[str, ...]
+    lines: tuple[ZoneLine, ...]
+
+
+def zone_table(note: ExposureNote) -> ZoneTable:
+    """Fold the zones of a note; no zone is left out."""
+    populations = tuple(dict.fromkeys(zone.population for zone in note.around))
+    folded: dict[tuple[Band, str], list[ExposureZone | None]] = {}
+    for zone in note.around:
+        line = folded.setdefault((zone.band, zone.basis), [None] * len(populations))
+        line[populations.index(zone.population)] = zone
+    lines = (ZoneLine(band=band, basis=basis, zones=tuple(zones)) for (band, basis), zones in folded.items())
+    return ZoneTable(populations=populations, lines=tuple(lines))

@@ -136,6 +136,8 @@ def decimals_for(value: float, unit: str) -> int:
         return 1
     if unit in _DECIMALS:
         return _DECIMALS[unit]
+    if not unit and value == round(value):
+        return 0
     if value == 0 or not math.isfinite(value):
         return 0
     return max(0, 2 - math.floor(math.log10(abs(value))))

@@ -13,7 +13,7 @@ import jinja2
 from markupsafe import Markup
 
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
-from speccheck.report.exposure_lines import exposure_table
+from speccheck.report.exposure_lines import exposure_table, zone_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
 from speccheck.report.view import build_view, label
@@ -88,6 +88,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         metres_up=numbers.rounded_up,
         capitalize_first=_capitalize_first,
         by_weight=_by_weight,
+        joined=_joined,
     )
     environment.globals.update(
         FITS=FITS,
@@ -97,6 +98,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         Fit=Fit,
         Level=Level,
         exposure_table=exposure_table,
+        zone_table=zone_table,
         WIND_CAUTIONS=WIND_CAUTIONS,
         MOUNTING_CAUTIONS=MOUNTING_CAUTIONS,
     )
@@ -110,6 +112,11 @@ def _clean(value: Any) -> Any:
 
 def _capitalize_first(text: str) -> str:
     return text[:1].upper() + text[1:]
+
+
+def _joined(texts: Iterable[str]) -> str:
+    """Several remarks as one sentence."""
+    return "; ".join(text.rstrip(".") for text in texts) + "."
 
 
 _WEIGHT = {

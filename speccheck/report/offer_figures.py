@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Callable, Iterable
 
-from speccheck.records import Band, Compliance, Finding, Fit, MatrixRow, PanelAssessment
+from speccheck.records import Band, Compliance, Finding, Fit, Interval, MatrixRow, PanelAssessment
 from speccheck.report.canvas import Canvas, Figure, Scale
 from speccheck.report.formats import Numbers
 from speccheck.report.marks import mark_for
@@ -12,6 +12,13 @@ from speccheck.report.marks import mark_for
 Labels = Callable[[str], str]
 
 _DECIBEL_UNITS = {"dB", "dBi", "dBm", "dBc"}
+_DRAWN = {
+    Compliance.MEETS,
+    Compliance.MEETS_NARROWLY,
+    Compliance.FAILS_NARROWLY,
+    Compliance.FAILS,
+    Compliance.DEVIATION_ACCEPTED,
+}
 FULL = 640
 MOST_ROWS = 24
 
@@ -67,7 +74,7 @@ def _all(count: int, thing: str) -> str:
 
 def _margin_share(row: MatrixRow) -> float | None:
     """Margin as part of a full bar: 3 dB, or a fifth of the limit."""
-    if row.margin is None:
+    if row.margin is None or row.verdict not in _DRAWN:
         return None
     if row.requirement.unit in _DECIBEL_UNITS:
         return row.margin / 3
@@ -98,10 +105,10 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     shown = [f for f in findings if f.verdict is not Fit.NOT_JUDGED and _ends(f) is not None][:MOST_ROWS]
     if not shown:
         return None
-    canvas = Canvas(FULL, 32 + 32 * len(shown), numbers)
+    canvas = Canvas(FULL, 26 + 34 * len(shown), numbers)
     table = []
     for i, finding in enumerate(shown):
-        y = 6 + 32 * i
+        y = 14 + 34 * i
         mark = mark_for(finding.verdict)
         title = finding.title if len(finding.title) <= 46 else finding.title[:45] + "…"
         canvas.write(4, y + 8, title, style="text")
@@ -112,7 +119,7 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
         )
     canvas.write(
         290,
-        22 + 32 * len(shown),
+        22 + 34 * len(shown),
         "bar: expected interval   ◆ claim   each row has its own scale",
         style="small",
     )
@@ -155,17 +162,25 @@ def _interval_row(canvas: Canvas, finding: Finding, y: float, tone: str) -> None
     scale = Scale(min(known) - 0.25 * span, max(known) + 0.25 * span, 290, 540)
     left = scale.start if expected.low is None else scale(expected.low)
     right = scale.end if expected.high is None else scale(expected.high)
-    canvas.line(((scale.start, y + 5), (scale.end, y + 5)), "grid")
-    canvas.box(left, y, max(right - left, 1.5), 10, "expected")
-    number, unit = canvas.numbers, expected.unit
-    for value, at, anchor in ((expected.low, left, "end"), (expected.high, right, "start")):
-        if value is not None:
-            gap = -4 if anchor == "end" else 4
-            canvas.write(at + gap, y + 20, number.figure(value, unit), "middle", "small")
+    canvas.line(((scale.start, y + 4), (scale.end, y + 4)), "grid")
+    canvas.box(left, y, max(right - left, 1.5), 8, "expected")
+    _interval_labels(canvas, expected, (left, right), y + 19)
     if ends[0] != ends[1]:
-        canvas.line(((scale(ends[0]), y + 5), (scale(ends[1]), y + 5)), "zero")
+        canvas.line(((scale(ends[0]), y + 4), (scale(ends[1]), y + 4)), "zero")
     for value in dict.fromkeys(ends):
-        canvas.diamond(scale(value), y + 5, 5, "claim" if tone == "good" else tone)
+        canvas.diamond(scale(value), y + 4, 4.5, "claim" if tone == "good" else tone)
+    canvas.write(scale(sum(ends) / 2), y - 4, canvas.numbers.amount(finding.claimed), "middle", "strong")
+
+
+def _interval_labels(canvas: Canvas, expected: Interval, ends: tuple[float, float], y: float) -> None:
+    """Figures under the ends of a bar; one label where the two would run into each other."""
+    number, unit = canvas.numbers, expected.unit
+    if expected.low is not None and expected.high is not None and ends[1] - ends[0] < 60:
+        canvas.write(sum(ends) / 2, y, number.interval(expected), "middle", "small")
+        return
+    for value, at in ((expected.low, ends[0]), (expected.high, ends[1])):
+        if value is not None:
+            canvas.write(at, y, number.figure(value, unit), "middle", "small")
 
 
 def coverage_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Figure | None:

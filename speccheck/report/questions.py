@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable, Iterator
 from dataclasses import dataclass, replace
 
-from speccheck.records import Assessment, Band, CellRef, Compliance, MatrixRow, PanelAssessment
+from speccheck.records import Assessment, Band, CellRef, Compliance, Fit, Level, MatrixRow, PanelAssessment
 
 UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
 
@@ -17,6 +17,8 @@ _ASKED = {
     Compliance.NOT_JUDGED: "{what} could not be judged from what the offer states. "
     "Please state the figure, with its unit and conditions.",
 }
+
+_PAPERS = "The offer declares {what}. Please supply the papers that show it."
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -48,7 +50,7 @@ def collect_questions(assessment: Assessment, label: Callable[[str], str]) -> tu
 
 def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Question]:
     for index, finding in enumerate(panel.findings):
-        if finding.question:
+        if finding.question and finding.verdict is not Fit.FITS:
             rows = (row for row in panel.requirements if finding.check in row.in_doubt)
             yield Question(
                 panel_number=panel_number,
@@ -64,14 +66,16 @@ def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Questi
 
 def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str], str]) -> Iterator[Question]:
     for row in panel.requirements:
-        if row.verdict not in UNANSWERED or not row.requirement.parameter:
+        if row.verdict not in UNANSWERED or row.requirement.level is Level.INFORMATION:
             continue
-        name = label(row.requirement.parameter)
+        name = label(row.requirement.parameter) if row.requirement.parameter else "this requirement"
         what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name
+        papers = row.requirement.operator == "evidence" and row.verdict is Compliance.DECLARED_ONLY
+        asked = _PAPERS if papers else _ASKED[row.verdict]
         yield Question(
             panel_number=panel_number,
             panel=panel.panel.name,
-            asked=_ASKED[row.verdict].format(what=what),
+            asked=asked.format(what=what),
             problem=row.note or row.requirement.wording,
             clauses=(row.requirement.clause,) if row.requirement.clause else (),
             bands=(row.band,) if row.band else (),
