@@ -55,8 +55,10 @@ lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0)
                  (nan: none), theta_deg, phi_deg, visible_count, centre_visible
 taper            taylor(count, sidelobe_db, nbar), chebyshev(count, sidelobe_db),
                  cosine_on_pedestal(count, pedestal), efficiency_db(weights), beamwidth_ratio(weights),
-                 pedestal_for_ratio(count, ratio), sidelobe_db(weights)
-errors           gain_loss_db(amplitude_rms_db, phase_rms_deg), sidelobe_floor_db(count, ...),
+                 pedestal_for_ratio(count, ratio, grouped=1), sidelobe_db(weights), line_pattern(weights),
+                 half_power_phase_rad(weights), taylor_dilation(sidelobe_db, nbar)
+errors           error_variance(amplitude_rms_db, phase_rms_deg), gain_loss_db(...) of the same,
+                 sidelobe_floor_db(count, ...),
                  pointing_rms_deg(count, pitch_wl, phase_rms_deg), null_depth_db(count, ...),
                  phase_step_rms_deg(bits), phase_quantisation_floor_db(count, bits),
                  phase_quantisation_lobe_db(bits), amplitude_step_rms_db(step_db), surface_loss_db(rms_wl)
@@ -84,4 +86,8 @@ expected         PanelClass (PASSIVE, MASSIVE_MIMO, MMWAVE), panel_class(freq_hz
                  assumptions, .zone(gain_dbi) -> GainZone (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW);
                  expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0): .horizontal and .vertical
                  = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
+
+Inner workings, in the order of a calculation: layout (lines, row_shifts, wavenumber, row_weights,
+column_weights) places and drives the elements, field gives the far field, beam finds where it points,
+radiated integrates it by the lag form, cuts samples both principal cuts, readings reads widths and lobes.
 """

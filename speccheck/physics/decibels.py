@@ -18,6 +18,7 @@ def floats(values: ArrayLike) -> Floats:
 
     values [any]: numbers, any shape.
     Returns [as given]: the same numbers as float64.
+    Source: conversion only.
     """
     return np.asarray(values, dtype=np.float64)
 

@@ -112,11 +112,11 @@ class SectorElement:
         reach = np.radians(min(180.0, self.az_hpbw_deg * (self.floor_db / 12) ** 0.5))
         orders = _order(np.pi / 4 * float(np.hypot(y_phase, z_phase))), _order(reach / 2 * y_phase)
         sines, u_z, weights = _nodes(self, *orders)
-        weighted = cosines(wavenumbers[:, None, None] * sines, y_m, weights)
+        weighted = _cosines(wavenumbers[:, None, None] * sines, y_m, weights)
         over_phi = (weighted.reshape(-1, sines.shape[1]) @ np.ones(sines.shape[1])).reshape(
             weighted.shape[:3]
         )
-        over_theta: Floats = over_phi @ cosines(wavenumbers[:, None] * u_z, z_m).transpose(0, 2, 1)
+        over_theta: Floats = over_phi @ _cosines(wavenumbers[:, None] * u_z, z_m).transpose(0, 2, 1)
         return over_theta + ratio(-self.floor_db) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
@@ -223,7 +223,7 @@ class IsotropicElement:
         return (0.5 if self.front_only else 1.0) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
-def cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Floats:
+def _cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Floats:
     """Cosines of lag times angle, by recurrence where the lags are whole multiples of one step.
 
     angles [rad/m]: shape (F, ...).

@@ -118,7 +118,7 @@ class Line:
 
     positions [m]: of the elements, centred. centres [m]: of the port each belongs to. amplitudes [1]: of each.
     pitch_m [m]: where all are equally spaced, else 0.
-    moments [1, m, m^2]: 1, j z and (j z)^2 of each element, for derivatives of the line factor.
+    moments [1, m, m^2]: 1, j z and (j z)^2 of each element, for the slopes of the line factor.
     """
 
     positions: Floats
