@@ -62,7 +62,7 @@ def without_neutral(words: tuple[str, ...]) -> tuple[str, ...]:
 
 
 def _unaccented(text: str) -> str:
-    plain = text.casefold()
+    plain = text.replace("ß", "sz").casefold()
     if plain.isascii():
         return plain
     plain = unicodedata.normalize("NFKD", plain.translate(_SPECIAL_LETTERS))

@@ -9,6 +9,7 @@ from speccheck.dictionary.folding import fold, key_of, without_neutral
 from speccheck.dictionary.parameters import parameters, synonyms
 
 _LONGEST_SUGGESTED = 80
+_TRANSCRIBED = str.maketrans({"ä": "ae", "ö": "oe", "ü": "ue", "Ä": "Ae", "Ö": "Oe", "Ü": "Ue"})
 
 
 @functools.cache
@@ -27,6 +28,8 @@ def index() -> dict[str, str]:
                 raise ValueError(f"headings/{language}.toml: no parameter '{unknown[0]}'")
             for text in texts:
                 _claim(table, text, key, language)
+                if language == "de" and not text.isascii():
+                    _claim(table, text.translate(_TRANSCRIBED), key, language)
     return table
 
 
