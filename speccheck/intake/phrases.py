@@ -12,6 +12,7 @@ from dataclasses import dataclass, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.wording import names
 from speccheck.intake.wording.clauses import Clause
+from speccheck.intake.wording.families import belongs
 from speccheck.intake.wording.lexicon import Kind
 from speccheck.intake.wording.segments import demands, own_level, scope_of, segments
 from speccheck.intake.wording.tokens import Token, tokens
@@ -58,9 +59,11 @@ def read_wording(
 
 
 def _parameter(found: Sequence[Token]) -> str:
-    """Key of the first parameter named; several keys joined by '+' for a name of several."""
+    """Key of the parameter named, the first that a figure's unit fits; several keys joined by '+'."""
     named = names.of_kind(found, Kind.PARAMETER)
-    key = named[0].said if named else ""
+    units = {t.figure.unit for t in found if t.figure is not None and t.figure.unit}
+    fitting = [t for t in named if any(belongs(u, parameters()[t.said.split("+")[0]]) for u in units)]
+    key = (fitting or named)[0].said if named else ""
     with_kit = any(t.text.casefold().startswith(_WITH_KIT) for t in names.of_kind(found, Kind.SCOPE))
     return "weight_with_brackets" if key == "weight" and with_kit else key
 

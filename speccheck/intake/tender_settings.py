@@ -74,7 +74,7 @@ def _equality(text: str) -> bool:
     raise ValueError("'meets' or 'does not meet'")
 
 
-@_setting("statistic", "Default statistic", "Statistic default", "Statistic")
+@_setting("statistic", "Default statistic", "Statistic default", "Statistic", "Statistic when none is named")
 def _statistic(text: str) -> str:
     aliases = {"worst case": "each", "mean": "mean-dB", "typical": "typ", "average": "mean-dB"}
     word = aliases.get(fold(text), text.strip())

@@ -76,8 +76,11 @@ def _span(requirement: Requirement, parameter: Parameter, offered: Comparable, r
         (reading.low, reading.high) if firm or isinstance(reading.value, tuple) else (reading.nominal,) * 2
     )
     unit = parameter.unit if relation.parameter and relation.convert is not float else reading.unit
+    carrier = requirement.at.get("carrier_dbm", reading.at.get("carrier_dbm"))
 
     def there(value: float) -> float:
+        if carrier is not None and {unit, requirement.unit} == {"dBm", "dBc"}:
+            return value - carrier if requirement.unit == "dBc" else value + carrier
         return convert(relation.convert(value) * offered.factor, unit, requirement.unit)
 
     ends = sorted((there(low), there(high)))

@@ -9,7 +9,6 @@ from speccheck.dictionary import parameters
 from speccheck.records import (
     Compliance,
     Finding,
-    Fit,
     MatrixRow,
     Panel,
     Requirement,
@@ -21,6 +20,7 @@ from speccheck.records.demands import blocked
 from speccheck.tender.capabilities import covers_bands, covers_range
 from speccheck.tender.conditions import at_demanded_tilt, comparable
 from speccheck.tender.deviations import with_deviation
+from speccheck.tender.doubts import marked
 from speccheck.tender.figures import Comparison, compare, guard_band
 from speccheck.tender.grading import FAILING, PASSING, SEVERITY, Grade, graded, settled
 from speccheck.tender.named import compare_names
@@ -45,7 +45,7 @@ def judge(tender: Tender, panel: Panel, findings: Sequence[Finding]) -> tuple[Ma
         if requirement.operator in _NOT_ROWS:
             continue
         for row in _rows(requirement, panel, tender.settings):
-            rows.append(with_deviation(_marked(row, findings), tender, panel))
+            rows.append(with_deviation(marked(row, findings), tender, panel))
     return tuple(rows)
 
 
@@ -211,20 +211,3 @@ def _over_tilts(requirement: Requirement, offer: Offer, settings: Settings) -> G
     if unclear and (grades[0].verdict in PASSING) != (grades[1].verdict in PASSING):
         return Grade(Compliance.NOT_JUDGED, wanted.margin, f"the two kinds of mean disagree: {said}")
     return replace(wanted, note=said)
-
-
-def _marked(row: MatrixRow, findings: Sequence[Finding]) -> MatrixRow:
-    """The row with the checks that put its claim in doubt."""
-    if row.offered is None:
-        return row
-    doubting = [
-        finding.check
-        for finding in findings
-        if row.offered.parameter in finding.parameters
-        and (finding.band is None or row.band is None or finding.band == row.band)
-        and (
-            finding.verdict is Fit.DOES_NOT_FIT
-            or (finding.verdict is Fit.DOUBTFUL and finding.expected is not None)
-        )
-    ]
-    return replace(row, in_doubt=tuple(dict.fromkeys(doubting)))

@@ -29,6 +29,8 @@ _BY_SENSE = {
     ("lower", "max"): "each",
     ("lower", "min"): "best",
 }
+_SPREAD_UNITS = ("dB", "dBi", "dBc", "%")
+"""Units of figures that spread over frequency, tilt and port, so that a maximum is their best case."""
 _RANK = {"each": 0, "mean": 1, "typ": 1, "best": 2}
 
 
@@ -39,11 +41,15 @@ def canonical(statistic: str, direction: str) -> str:
 
 
 def offered_statistic(reading: Reading, direction: str) -> str:
-    """Statistic of an offered figure; a bound in the good direction is worst case, the other best case."""
+    """Statistic of an offered figure; a bound in the good direction is worst case, the other best case.
+
+    'Maximum power 250 W' or 'max. wind speed' names a capability and bounds nothing.
+    """
     stated = canonical(reading.statistic, direction)
     if stated:
         return stated
-    if reading.sense is Sense.NOMINAL:
+    capability = direction == "higher" and reading.sense is Sense.MAX and reading.unit not in _SPREAD_UNITS
+    if reading.sense is Sense.NOMINAL or capability:
         return ""
     return canonical(reading.sense.value, direction)
 

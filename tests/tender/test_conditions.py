@@ -130,3 +130,15 @@ def test_the_verdict_follows_the_sign_of_the_margin(limit: float, offered: float
     assert row.margin is not None
     assert (row.margin >= 0) == row.verdict.value.startswith("meets")
     assert ("narrowly" in row.verdict.value) <= (abs(row.margin) <= guard)
+
+
+def test_a_level_in_dbm_is_held_against_a_limit_in_dbc_at_the_test_power() -> None:
+    """-110 dBm with 43 dBm carriers is -153 dBc (common practice; IEC 62037-1 states both, from memory)."""
+    requirement = demand("passive_intermodulation", "≤", -150.0, at={"carrier_dbm": 43.0})
+    row = _row(requirement, says("passive_intermodulation", -110.0, unit="dBm", at={"carrier_dbm": 43.0}))
+    assert (row.verdict, row.offered_in_unit) == (Compliance.MEETS, -153.0)
+
+
+def test_maximum_power_names_a_capability_and_bounds_nothing() -> None:
+    row = _row(demand("max_power_per_port", "≥", 200.0), says("max_power_per_port", 250.0, sense="max"))
+    assert row.verdict is Compliance.MEETS

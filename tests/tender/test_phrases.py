@@ -95,6 +95,11 @@ def test_a_level_column_beats_the_verb(
     assert ("LEVEL" in clause.codes) is doubtful
 
 
+def test_the_parameter_is_the_one_whose_unit_the_figure_has() -> None:
+    clause = read_wording("On all RF ports and at every tilt the isolation shall be at least 28 dB")[0]
+    assert (clause.parameter, clause.operator, clause.limit) == ("port_isolation", "≥", 28)
+
+
 def test_words_not_understood_are_kept() -> None:
     clause = read_wording("Gain shall be at least 17 dBi in the frobnicated state")[0]
     assert clause.unread == "frobnicated state"

@@ -9,6 +9,7 @@ import pytest
 from openpyxl import load_workbook
 
 from speccheck.errors import UnusableInputError
+from speccheck.intake import read_submission
 from speccheck.intake.tender_book import read_tender
 from speccheck.records import Level, Tender
 from tender.books import write_tender
@@ -200,3 +201,12 @@ def test_group_labels_are_listed_and_not_judged(tmp_path: Path) -> None:
     tender = _tender(tmp_path, [None, "Electrical"], ["1", "Gain ≥ 17 dBi", "M"], ["2", None, None])
     assert len(tender.requirements) == 1
     assert any(u.text == "Electrical" for u in tender.unread)
+
+
+def test_a_tender_given_as_bid_is_refused_by_name(tmp_path: Path) -> None:
+    sheets = {"Settings": [["Setting", "Value"]]}
+    path = write_tender(tmp_path / "tender.xlsx", [HEAD, ["1", "Gain ≥ 17 dBi", "M"]], **sheets)
+    with pytest.raises(
+        UnusableInputError, match=r"'Requirements', cell B1: found a tender workbook.*--tender"
+    ):
+        read_submission(path)

@@ -93,11 +93,14 @@ def scope_of(found: Sequence[Token]) -> tuple[str, ...]:
     """Words of scope anywhere in a clause, those inside a parameter's name among them."""
     (scopes,) = (v for v in general_vocabularies() if v.kind is Kind.SCOPE)
     texts: list[str] = []
+    named = False
     for token in found:
         if token.kind is Kind.SCOPE or (token.kind is Kind.COMPARATOR and token.said == "best"):
             texts.append(token.text)
         elif token.kind is Kind.PARAMETER:
-            texts.extend(match.group() for match in scopes.pattern.finditer(token.text))
+            inside = scopes.pattern.finditer(token.text)
+            texts.extend(match.group() for match in inside if match.start() or named)
+            named = True
     return tuple(texts)
 
 
