@@ -19,6 +19,7 @@ from speccheck.intake.notices import book_notices, footnotes, grid_notices, note
 from speccheck.intake.opening import Book, open_book
 from speccheck.intake.panels import Builder, joined
 from speccheck.intake.reading import Reader
+from speccheck.intake.tender_given_as_bid import refuse_tender
 from speccheck.quantities import decimal_habit
 from speccheck.records import MirrorCell, MirrorSheet, Notice, Submission, Unread
 
@@ -54,7 +55,9 @@ def read_account(
 ) -> Account:
     """As `read_submission`, with what became of every filled cell."""
     with _collector_at_rest():
-        return _account(open_book(path, limits), Path(path).stem, headings or {})
+        book = open_book(path, limits)
+        refuse_tender(book)
+        return _account(book, Path(path).stem, headings or {})
 
 
 @contextmanager

@@ -66,27 +66,6 @@ def read_tender(path: str | Path) -> Tender:
     )
 
 
-def looks_like_tender(book: Book) -> bool:
-    """Whether a file is a tender workbook: requirement rows beside sheets only a buyer fills."""
-    sheets = {fold(grid.name): grid for grid in book.grids}
-    if "requirements" not in sheets or not {"settings", "deviations"} & set(sheets):
-        return False
-    return any(table(sheets["requirements"], book.file, COLUMNS, needed) for needed in _NEEDED)
-
-
-def refuse_tender(book: Book) -> None:
-    """Raise UnusableInputError where a tender workbook was given as a bid."""
-    if looks_like_tender(book):
-        raise UnusableInputError(
-            book.file,
-            sheet="Requirements",
-            cell="A1",
-            found="a tender workbook (requirements and settings)",
-            expected="a bidder's workbook",
-            remedy="give this file with --tender and the bids as arguments",
-        )
-
-
 def _requirements_table(book: Book, grid: Grid | None) -> Table:
     if grid is None:
         names = ", ".join(f"'{g.name}'" for g in book.grids[:8])
