@@ -43,7 +43,21 @@ def mark(grid: Grid, labels: Labels) -> Marks:
                 _mark_text(marks, (row, cell.column), raw, following)
             following = cell
     _mark_letters(marks)
+    _unmark_column_words(marks)
     return marks
+
+
+def _unmark_column_words(marks: Marks) -> None:
+    """Words over the columns of a table with headings down the side are no headings: 'Parameter | Typ | Max'."""
+    for row, cells in marks.rows.items():
+        headings = marks.heading_columns(row)
+        if not 0 < len(headings) <= 2:
+            continue
+        roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
+        statistics = sum(role in ("minimum", "typical", "maximum") for role in roles)
+        if "parameter" in roles or statistics > 1:
+            for column in headings:
+                del marks.headings[row, column]
 
 
 def _mark_letters(marks: Marks) -> None:

@@ -193,8 +193,7 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
     said = set(re.findall(r"\w+", context.condition))
     of_label = "" if set(re.findall(r"\w+", label.condition)) <= said else label.condition
     conditions = (context.band_name, of_label, context.condition, settled.condition)
-    heading = label.how or f"heading '{context.heading or label.text}'"
-    how = f"{heading} is {parameter.label}"
+    how = label.how or f"heading '{context.heading or label.text}'"
     if quantity.unit or parameter.unit:
         how += f"; {_unit_told(quantity, _unit(context)[1], parameter)}"
     return Figure(

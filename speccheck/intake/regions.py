@@ -97,6 +97,8 @@ def _grow(marks: Marks, row: int, numbers: list[int], position: int, floor: int)
     for r in heading_rows:
         for cell in marks.rows[r]:
             span = marks.grid.span(cell)
+            if cell.column < left and (marks.is_heading(cell) or says_column_role(cell)):
+                left = cell.column
             if span.right > right and span.left <= right + 1:
                 right = min(span.right, right + 60)
     table = Across(heading_rows, [], left, right)
