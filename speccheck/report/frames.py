@@ -1,17 +1,22 @@
-"""What openpyxl does for a sheet: frozen panes, filters, widths, pick-lists, warnings, print set-up."""
+"""A sheet of a generated workbook: panes, filter, widths, colours, pick-lists, warnings, print set-up.
+
+The order of the elements is that of the schema of ISO/IEC 29500-1, CT_Worksheet.
+"""
 
 from __future__ import annotations
 
-from openpyxl import Workbook
-from openpyxl.comments import Comment
-from openpyxl.styles import Protection
-from openpyxl.utils import get_column_letter
-from openpyxl.worksheet.datavalidation import DataValidation
-from openpyxl.worksheet.dimensions import ColumnDimension
-from openpyxl.worksheet.worksheet import Worksheet
+from collections.abc import Mapping, Sequence
 
-from speccheck.report.cells import Content, Rich
-from speccheck.report.looks import status_rules
+from speccheck.report.cells import (
+    Content,
+    Rich,
+    column_letter,
+    hyperlinks,
+    sheet_data,
+    xml_attribute,
+    xml_text,
+)
+from speccheck.report.looks import status_rules, style_number
 from speccheck.report.sheets import Column, Grid, Imprint, Table
 from speccheck.text import plain
 
@@ -21,8 +26,185 @@ TALLEST_POINTS = 409.0
 WIDE_LETTERS = 1.05
 """Room a letter takes, against the digit that column widths are counted in."""
 
+_MAIN = "http://schemas.openxmlformats.org/spreadsheetml/2006/main"
+_RELATIONS = "http://schemas.openxmlformats.org/officeDocument/2006/relationships"
+_ALLOWED = [
+    *("formatCells", "formatColumns", "formatRows", "insertColumns", "insertRows", "insertHyperlinks"),
+    *("deleteColumns", "deleteRows", "autoFilter", "pivotTables"),
+]
 
-def row_heights(table: Table) -> dict[int, float]:
+Row = Sequence[tuple[int, Content, str]]
+
+
+def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> str:
+    """Return the worksheet part of a sheet."""
+    rows = _rows_of(sheet)
+    heights = _row_heights(sheet) if isinstance(sheet, Table) else {}
+    frozen = sheet.frozen if isinstance(sheet, Table) else 1
+    return (
+        f'<worksheet xmlns="{_MAIN}" xmlns:r="{_RELATIONS}">'
+        '<sheetPr><pageSetUpPr fitToPage="1"/></sheetPr>'
+        f'<dimension ref="{extent(sheet)}"/>'
+        f"{_view(frozen)}"
+        '<sheetFormatPr defaultRowHeight="15"/>'
+        f"{_columns(sheet)}"
+        f"{sheet_data(rows, heights)}"
+        f"{_helps(sheet) if isinstance(sheet, Table) else ''}"
+        f"{hyperlinks(_links(rows))}"
+        '<pageMargins left="0.6" right="0.6" top="0.6" bottom="0.7" header="0.3" footer="0.3"/>'
+        f'<pageSetup paperSize="{1 if imprint.paper.lower() == "letter" else 9}" orientation="landscape"'
+        ' fitToWidth="1" fitToHeight="0"/>'
+        f"<headerFooter><oddFooter>{xml_text(_footer(imprint))}</oddFooter></headerFooter>"
+        f"{'<legacyDrawing r:id=' + chr(34) + 'notes' + chr(34) + '/>' if notes_of(sheet) else ''}"
+        "</worksheet>"
+    )
+
+
+def _rows_of(sheet: Table | Grid) -> dict[int, Row]:
+    """Return the cells of a sheet by row: column number, content, look."""
+    if isinstance(sheet, Grid):
+        return {
+            number: [(column, item, "number") for column, item in sorted(row.items())]
+            for number, row in sorted(sheet.cells.items())
+        }
+    looks = [column.look for column in sheet.columns]
+    rows: dict[int, Row] = {1: [(n, c.heading, "heading") for n, c in enumerate(sheet.columns, start=1)]}
+    numbers = range(1, len(looks) + 1)
+    for number, row in enumerate(sheet.rows, start=2):
+        rows[number] = list(zip(numbers, row, looks, strict=True))
+    return rows
+
+
+def extent(sheet: Table | Grid) -> str:
+    """The range that holds everything, from A1."""
+    if isinstance(sheet, Table):
+        return f"A1:{column_letter(len(sheet.columns))}{len(sheet.rows) + 1}"
+    last = max((column for row in sheet.cells.values() for column in row), default=1)
+    return f"A1:{column_letter(last)}{max(sheet.cells, default=1)}"
+
+
+def notes_of(sheet: Table | Grid) -> dict[tuple[int, int], str]:
+    """Notes by (row, column), in reading order."""
+    if isinstance(sheet, Grid):
+        return dict(sorted(sheet.notes.items()))
+    return {(1, n): column.note for n, column in enumerate(sheet.columns, start=1) if column.note}
+
+
+def defined_names(sheet: Table | Grid, number: int) -> str:
+    """Return the names that hold filter range, print area and repeated rows of the sheet at `number`."""
+    area = extent(sheet)
+    name = xml_text("'" + sheet.name.replace("'", "''") + "'")
+    found = []
+    if isinstance(sheet, Table):
+        found.append(("_FilterDatabase", f' localSheetId="{number}" hidden="1"', _filter_range(sheet)))
+        if sheet.printed:
+            area = f"A1:{column_letter(sheet.printed)}{len(sheet.rows) + 1}"
+    found.append(("Print_Area", f' localSheetId="{number}"', area))
+    text = "".join(
+        f'<definedName name="_xlnm.{kind}"{where}>{name}!{_absolute(span)}</definedName>'
+        for kind, where, span in found
+    )
+    if isinstance(sheet, Table):
+        text += f'<definedName name="_xlnm.Print_Titles" localSheetId="{number}">{name}!$1:$1</definedName>'
+    return text
+
+
+def _absolute(span: str) -> str:
+    return ":".join(
+        f"${end.rstrip('0123456789')}${end.lstrip('ABCDEFGHIJKLMNOPQRSTUVWXYZ')}" for end in span.split(":")
+    )
+
+
+def _filter_range(table: Table) -> str:
+    return f"A1:{column_letter(len(table.columns))}{max(len(table.rows) + 1, 2)}"
+
+
+def _view(frozen: int) -> str:
+    corner = f"{column_letter(frozen + 1)}2"
+    return (
+        '<sheetViews><sheetView workbookViewId="0">'
+        f'<pane xSplit="{frozen}" ySplit="1" topLeftCell="{corner}" activePane="bottomRight" state="frozen"/>'
+        '<selection pane="topRight"/><selection pane="bottomLeft"/>'
+        f'<selection pane="bottomRight" activeCell="{corner}" sqref="{corner}"/>'
+        "</sheetView></sheetViews>"
+    )
+
+
+def _columns(sheet: Table | Grid) -> str:
+    """Widths; in tables every cell below and beside the headings may be changed."""
+    if isinstance(sheet, Grid):
+        widths = "".join(
+            f'<col min="{n}" max="{n}" width="{width:g}" customWidth="1"/>'
+            for n, width in sorted(sheet.widths.items())
+        )
+        return f"<cols>{widths}</cols>" if widths else ""
+    free = style_number("number")
+    columns = [
+        f'<col min="{n}" max="{n}" width="{column.width:g}" style="{free}" customWidth="1"/>'
+        for n, column in enumerate(sheet.columns, start=1)
+    ]
+    columns.append(
+        f'<col min="{len(columns) + 1}" max="{LAST_COLUMN}" width="13" style="{free}" customWidth="1"/>'
+    )
+    return f"<cols>{''.join(columns)}</cols>"
+
+
+def _helps(table: Table) -> str:
+    """Locks without password, filter, status colours, pick-lists and number warnings of a table."""
+    last_row = max(len(table.rows) + 1, 2)
+    freedoms = [*_ALLOWED, "sort"] if table.sortable else _ALLOWED
+    allowed = "".join(f' {name}="0"' for name in freedoms)
+    colours, checks, priority = "", [], 1
+    for number, column in enumerate(table.columns, start=1):
+        cells = f"{column_letter(number)}2:{column_letter(number)}{last_row}"
+        if column.status:
+            rules = status_rules(column.status, priority)
+            priority += len(column.status)
+            colours += f'<conditionalFormatting sqref="{cells}">{rules}</conditionalFormatting>'
+        checks += _checks(column, cells)
+    validations = f'<dataValidations count="{len(checks)}">{"".join(checks)}</dataValidations>'
+    return (
+        f'<sheetProtection sheet="1"{allowed}/><autoFilter ref="{_filter_range(table)}"/>'
+        f"{colours}{validations if checks else ''}"
+    )
+
+
+def _checks(column: Column, cells: str) -> list[str]:
+    """Data validations that warn and never stop."""
+    title = xml_attribute(column.heading[:32])
+    found = []
+    if column.choices:
+        found.append(
+            f'<dataValidation type="list" errorStyle="warning" allowBlank="1" showErrorMessage="1"'
+            f' errorTitle="{title}" error="This is not on the list of the sheet Lists. Keep it all the same?"'
+            f' sqref="{cells}"><formula1>{xml_text(column.choices)}</formula1></dataValidation>'
+        )
+    if column.check:
+        message = xml_attribute(column.check.message[:225])
+        found.append(
+            f'<dataValidation type="decimal" errorStyle="warning" operator="between" allowBlank="1"'
+            f' showInputMessage="1" showErrorMessage="1" errorTitle="{title}" error="{message}"'
+            f' promptTitle="{title}" prompt="{message}" sqref="{cells}">'
+            f"<formula1>{column.check.low!r}</formula1><formula2>{column.check.high!r}</formula2></dataValidation>"
+        )
+    return found
+
+
+def _links(rows: Mapping[int, Row]) -> list[tuple[str, Rich]]:
+    return [
+        (f"{column_letter(column)}{number}", item)
+        for number, row in rows.items()
+        for column, item, _ in row
+        if isinstance(item, Rich) and item.link
+    ]
+
+
+def _footer(imprint: Imprint) -> str:
+    """File, revision, page and time of printing; an ampersand of the text is doubled."""
+    return f"&L{plain(imprint.footer, 120).replace('&', '&&')}&C&A, page &P of &N&R&F, printed &D &T"
+
+
+def _row_heights(table: Table) -> dict[int, float]:
     """Heights [points] that show wrapped text whole, for programs that don't fit rows on opening."""
     wrapped = [(n, column.width) for n, column in enumerate(table.columns) if column.look == "wrap"]
     headings = max(_lines(column.heading, column.width - 3) for column in table.columns)
@@ -41,100 +223,3 @@ def _text(item: Content) -> str:
 
 def _lines(text: str, width: float) -> int:
     return sum(1 + int(len(part) * WIDE_LETTERS / max(width, 1)) for part in text.split("\n"))
-
-
-def frame_table(worksheet: Worksheet, table: Table) -> None:
-    """Give a table its panes, filter, widths, notes, pick-lists, warnings, colours and locks."""
-    last_row = max(len(table.rows) + 1 + table.spare_rows, 2)
-    worksheet.freeze_panes = worksheet.cell(2, table.frozen + 1)
-    worksheet.auto_filter.ref = f"A1:{get_column_letter(len(table.columns))}{max(len(table.rows) + 1, 2)}"
-    for number, column in enumerate(table.columns, start=1):
-        letter = get_column_letter(number)
-        worksheet.column_dimensions[letter].width = column.width
-        worksheet.column_dimensions[letter].protection = Protection(locked=False)
-        if column.note:
-            worksheet.cell(1, number).comment = _comment(column.note)
-        cells = f"{letter}2:{letter}{last_row}"
-        for rule in status_rules(column.status):
-            worksheet.conditional_formatting.add(cells, rule)
-        _add_helps(worksheet, column, cells)
-    beyond = ColumnDimension(
-        worksheet, index=get_column_letter(len(table.columns) + 1), width=13, min=len(table.columns) + 1
-    )
-    beyond.max = LAST_COLUMN
-    beyond.protection = Protection(locked=False)
-    worksheet.column_dimensions[beyond.index] = beyond
-    _lock_headings(worksheet, sortable=table.sortable)
-
-
-def _add_helps(worksheet: Worksheet, column: Column, cells: str) -> None:
-    if column.choices:
-        choice = DataValidation(type="list", formula1=column.choices, allow_blank=True, errorStyle="warning")
-        choice.showErrorMessage = True
-        choice.error = "This is not on the list of the sheet Lists. Keep it all the same?"
-        choice.errorTitle = column.heading[:32]
-        worksheet.add_data_validation(choice)
-        choice.add(cells)
-    if column.check:
-        check = DataValidation(
-            type="decimal",
-            operator="between",
-            formula1=repr(column.check.low),
-            formula2=repr(column.check.high),
-            allow_blank=True,
-            errorStyle="warning",
-            showErrorMessage=True,
-            showInputMessage=True,
-        )
-        check.error = check.prompt = column.check.message[:225]
-        check.errorTitle = check.promptTitle = column.heading[:32]
-        worksheet.add_data_validation(check)
-        check.add(cells)
-
-
-def _comment(text: str) -> Comment:
-    lines = 1 + len(text) // 38 + text.count("\n")
-    return Comment(text, "speccheck", height=24 + 16 * lines, width=260)
-
-
-def _lock_headings(worksheet: Worksheet, *, sortable: bool) -> None:
-    """Protect the sheet without password; only headings are locked, all work on the rest is allowed."""
-    protection = worksheet.protection
-    protection.sheet = True
-    for freedom in ("formatCells", "formatColumns", "formatRows", "insertRows", "deleteRows"):
-        setattr(protection, freedom, False)
-    for freedom in ("insertColumns", "deleteColumns", "insertHyperlinks", "autoFilter", "pivotTables"):
-        setattr(protection, freedom, False)
-    protection.sort = not sortable
-
-
-def frame_grid(worksheet: Worksheet, grid: Grid) -> None:
-    """Give a mirror its widths and notes."""
-    for number, width in grid.widths.items():
-        worksheet.column_dimensions[get_column_letter(number)].width = width
-    worksheet.freeze_panes = "B2"
-    for (row, number), text in grid.notes.items():
-        worksheet.cell(row, number).comment = _comment(plain(text, 500))
-
-
-def set_print(worksheet: Worksheet, imprint: Imprint, area: str, *, repeat_header: bool) -> None:
-    """Landscape, one page wide, header row repeated, footer with file, revision, page and time."""
-    worksheet.page_setup.orientation = "landscape"
-    worksheet.page_setup.paperSize = 1 if imprint.paper.lower() == "letter" else 9
-    worksheet.page_setup.fitToWidth, worksheet.page_setup.fitToHeight = 1, 0
-    worksheet.sheet_properties.pageSetUpPr.fitToPage = True
-    worksheet.print_area = area
-    if repeat_header:
-        worksheet.print_title_rows = "1:1"
-    worksheet.oddFooter.left.text = plain(imprint.footer, 120).replace("&", "&&")
-    worksheet.oddFooter.center.text = "&A, page &P of &N"
-    worksheet.oddFooter.right.text = "&F, printed &D &T"
-
-
-def set_properties(workbook: Workbook, imprint: Imprint) -> None:
-    """Title, subject, language and a date that is not the clock's."""
-    properties = workbook.properties
-    properties.title, properties.subject = plain(imprint.title, 200), plain(imprint.subject, 200)
-    properties.creator = properties.lastModifiedBy = "speccheck"
-    properties.language = "en"
-    properties.created = properties.modified = imprint.moment

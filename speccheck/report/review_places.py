@@ -6,8 +6,6 @@ import re
 from collections.abc import Iterable
 from dataclasses import dataclass, field
 
-from openpyxl.utils import column_index_from_string
-
 from speccheck.records import Assessment, CellRef, Finding
 from speccheck.report.inputs import InputRow, input_rows
 
@@ -88,4 +86,9 @@ def _numbered(assessment: Assessment) -> Iterable[NumberedFinding]:
 def row_and_column(address: str) -> tuple[int, int] | None:
     """Row and column number of a cell address; None for what is not one."""
     match = _ADDRESS.match(address)
-    return (int(match[2]), column_index_from_string(match[1])) if match else None
+    if match is None:
+        return None
+    column = 0
+    for letter in match[1]:
+        column = column * 26 + ord(letter) - ord("A") + 1
+    return int(match[2]), column
