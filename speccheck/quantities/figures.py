@@ -9,7 +9,7 @@ from dataclasses import dataclass, field, replace
 from speccheck.quantities.amounts import Amount
 from speccheck.quantities.content import Quantity, SenseWord
 from speccheck.quantities.units import UnknownUnitError, convert, dimension
-from speccheck.quantities.words import PLACES
+from speccheck.quantities.words import understood
 
 _COMPATIBLE = {
     "gain": {"gain", "level"},
@@ -95,7 +95,7 @@ def quantity(claim: Claim, unit: str, *, symmetric: bool = False) -> Quantity:
 def unread_words(found: list[Amount], stray: list[str]) -> str:
     """Words of the cell that are not known to qualify a figure."""
     words = itertools.chain(stray, *((*a.before, *a.words) for a in found))
-    return " ".join(w for w in words if w.casefold().rstrip(".") not in PLACES)
+    return " ".join(w for w in words if w.casefold().rstrip(".") not in understood())
 
 
 def _wanted(found: list[Amount], unit: str, expected: str | None) -> str:

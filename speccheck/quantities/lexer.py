@@ -8,7 +8,7 @@ from typing import Literal
 
 from speccheck.quantities.numerals import NUMERAL_PATTERN
 from speccheck.quantities.units import UNIT_PATTERN, unit_name
-from speccheck.quantities.words import LONGEST_PHRASE, ROLES
+from speccheck.quantities.words import longest_phrase, roles
 
 TokenKind = Literal[
     "num", "unit", "pm", "plus", "minus", "range", "times", "slash", "sep", "colon", "open", "close",
@@ -99,13 +99,14 @@ def _phrases(found: list[Token]) -> list[Token]:
             index += 1
             continue
         run = 1
-        while run < LONGEST_PHRASE and index + run < len(found) and found[index + run].kind == "word":
+        while run < longest_phrase() and index + run < len(found) and found[index + run].kind == "word":
             run += 1
         for length in range(run, 0, -1):
             phrase = " ".join(t.text for t in found[index : index + length]).casefold()
-            role = ROLES.get(phrase)
-            if role and _fits(role[0], result, found[index + length :]):
-                result.append(Token(role[0], phrase, role[1]))
+            after = found[index + length :]
+            role = next((r for r in roles().get(phrase, ()) if _fits(r[0], result, after)), None)
+            if role:
+                result.append(Token(role[0], phrase, role[1]))  # type: ignore[arg-type]
                 index += length
                 break
         else:

@@ -5,7 +5,7 @@ from __future__ import annotations
 import re
 
 from speccheck.quantities.content import StatusWord
-from speccheck.quantities.words import ERROR_VALUES, REFERRALS, STATUSES
+from speccheck.quantities.words import ERROR_VALUES, referrals, statuses
 
 _OUTER = re.compile(r"^[\s('\"\[]+|[\s)'\"\],;!]+$")
 _NUMBERED_NOTE = re.compile(
@@ -30,7 +30,7 @@ def status_of(text: str, *, answers_count: bool = True) -> StatusWord | None:
         return "missing"
     if not answers_count and folded in _ANSWERS:
         return None
-    found = STATUSES.get(folded) or STATUSES.get(folded.rstrip("."))
+    found = statuses().get(folded) or statuses().get(folded.rstrip("."))
     if found:
         return found  # type: ignore[return-value]
     if _refers(folded):
@@ -56,5 +56,5 @@ def _refers(folded: str) -> bool:
     return any(
         folded.startswith(start)
         and (start.endswith((" ", ".")) or not folded[len(start) : len(start) + 1].isalpha())
-        for start in REFERRALS
+        for start in referrals()
     )
