@@ -9,8 +9,9 @@ from speccheck.checks import plausibility
 from speccheck.checks import spacing, lattices
 from speccheck.checks import gain, gain_widths, gain_runs
 from speccheck.checks import beamwidth, beamwidth_box
+from speccheck.checks import sidelobes, scan
 from speccheck.checks import housing, ports, layers
-from speccheck.checks import power, power_budget, losses, matching, intermodulation
+from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
 from speccheck.checks import bands, duplex, directions
 from speccheck.checks import wind, mechanics, exposure, wording
 from speccheck.checks import innocent_gain, innocent_geometry, innocent_statements
@@ -20,9 +21,9 @@ from speccheck.checks.runner import examine
 # isort: on
 
 FAMILIES = (
-    plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box,
+    plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box, sidelobes, scan,
     housing, ports, layers,
-    power, power_budget, losses, matching, intermodulation,
+    power, power_array, power_budget, losses, matching, intermodulation,
     bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip
 INNOCENT = (innocent_gain, innocent_geometry, innocent_statements)

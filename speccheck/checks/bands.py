@@ -222,7 +222,7 @@ def fractional_bandwidth(case: Case, gain: Reading | None) -> Judgement | None:
     wide = share > _WIDEST
     return Judgement(
         verdict=Fit.DOUBTFUL if wide else Fit.FITS,
-        summary=f"One set of figures covers {low:g} to {high:g} MHz, a bandwidth of {share:.1%}"
+        summary=f"One set of figures covers {low:g} to {high:g} MHz, a bandwidth of {share * 100:.1f} %"
         + (": more than one array usually covers." if wide else "."),
         claimed=Amount(round(share * 100, 2), "%"),
         expected=Interval(None, _WIDEST * 100, "%"),

@@ -49,7 +49,8 @@ def exposure_note(panel: Panel, settings: Settings) -> ExposureNote:
         cautions=CAUTIONS,
         validity=VALIDITY,
         factors=_factors(frame),
-        working=tuple(step for s in sources for step in s.steps) + distance_steps(sources, frame),
+        working=tuple(dict.fromkeys(step for s in sources for step in s.steps))
+        + distance_steps(sources, frame),
         around=around,
         where=readings,
     )

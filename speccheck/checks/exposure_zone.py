@@ -14,7 +14,7 @@ from speccheck.checks.exposure_rows import Frame
 from speccheck.checks.model import SECTOR_COLUMN_AZ_DEG, Lacking, Model, model_of
 from speccheck.checks.registry import Case
 from speccheck.checks.saying import label, mhz
-from speccheck.physics.decibels import ratio
+from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS, ratio
 from speccheck.physics.element import SectorElement
 from speccheck.physics.exposure import distance_m, round_up_m
 from speccheck.physics.zones import envelope_dbi
@@ -30,6 +30,7 @@ _FLOOR_DB = 20.0
 _COARSE_DEG = 5.0
 _FINE_DEG = 1.0
 _BESIDE_BEAM_DEG = 12.0
+_MOST_STEPS = 24
 
 
 @dataclass(frozen=True, slots=True)
@@ -73,19 +74,23 @@ def zones(
 def _cuts(panel: Panel, source: Radiated, model: Model) -> _Cuts:
     tilts = _ends(panel, source, ("electrical_tilt", "vertical_scan"))
     scans = _ends(panel, source, ("horizontal_scan",))
-    beams = list(product(tilts, scans))
+    wavelength_m = SPEED_OF_LIGHT_MPS / model.centre_hz
+    steps_down = _sweep(tilts, wavelength_m / max(model.layout.height_m, wavelength_m))
+    steps_across = _sweep(scans, wavelength_m / max(model.layout.width_m, wavelength_m))
+    ahead = min(steps_across, key=abs)
     element = SectorElement(az_hpbw_deg=_element_width_deg(panel, source, model))
     elevation, azimuth = _circle(tuple(-t for t in tilts)), _circle(scans)
     side = envelope_dbi(
         model.layout,
         element,
         model.centre_hz,
-        beams,
+        list(product(steps_down, dict.fromkeys((*scans, ahead)))),
         theta_deg=np.degrees(np.arccos(np.sin(np.radians(elevation)))),
         phi_deg=np.where(np.abs(elevation) > 90, 180.0, 0.0),
     )
     cone = np.full_like(azimuth, 90 + float(np.mean(tilts)))
-    top = envelope_dbi(model.layout, element, model.centre_hz, beams, theta_deg=cone, phi_deg=azimuth)
+    across = list(product(dict.fromkeys((*tilts, float(np.mean(tilts)))), steps_across))
+    top = envelope_dbi(model.layout, element, model.centre_hz, across, theta_deg=cone, phi_deg=azimuth)
     floor_db = min([_FLOOR_DB, *(r.low for r in panel.all("front_to_back_ratio", source.band))])
     floor = float(ratio(-floor_db))
     return _Cuts(
@@ -105,6 +110,13 @@ def _ends(panel: Panel, source: Radiated, keys: tuple[str, ...]) -> tuple[float,
     if reading is None or isinstance(reading.value, str):
         return (0.0,)
     return tuple(sorted({reading.low, reading.high}))
+
+
+def _sweep(ends_deg: tuple[float, ...], beam_rad: float) -> tuple[float, ...]:
+    """Beams from one end of a range to the other [deg], at most half a beam width apart."""
+    low, high = ends_deg[0], ends_deg[-1]
+    steps = int(np.clip(np.ceil((high - low) / (np.degrees(beam_rad) / 2)), 1, _MOST_STEPS))
+    return tuple(np.linspace(low, high, steps + 1).tolist()) if high > low else ends_deg
 
 
 def _element_width_deg(panel: Panel, source: Radiated, model: Model) -> float:

@@ -156,8 +156,8 @@ def mains_power_covers_rf(
     shown = float(rf_efficiency(strongest.nominal_w, power_consumption.nominal, duty))
     return Judgement(
         verdict=verdict,
-        summary=f"{strongest.nominal_w:.5g} W of radio power at {duty:.0%} of the time from "
-        f"{power_consumption.nominal:g} W is an efficiency of {shown:.0%}.",
+        summary=f"{strongest.nominal_w:.5g} W of radio power for {duty * 100:.3g} % of the time from "
+        f"{power_consumption.nominal:g} W is an efficiency of {shown * 100:.3g} %.",
         claimed=Amount(power_consumption.nominal, "W"),
         expected=Interval(round(radiated_w / _USUAL_EFFICIENCY, 2), None, "W"),
         working=(
@@ -167,7 +167,7 @@ def mains_power_covers_rf(
         ),
         assumptions=(
             *strongest.assumptions,
-            f"Downlink share {duty:.0%}, {'as stated' if tdd_duty else 'assumed'}.",
+            f"Downlink share {duty * 100:.3g} %, {'as stated' if tdd_duty else 'assumed'}.",
             "Up to 45 % of the mains power leaves as radio power (common practice).",
         ),
         question="Please state the load and the downlink share at which the power consumption holds, and the "

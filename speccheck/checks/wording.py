@@ -79,7 +79,6 @@ def figures_say_their_statistic(case: Case) -> Judgement | None:
         else "Please state for each tolerance, minimum and maximum whether it holds for every sample or is "
         "statistical, and for which share.",
         used=typical or stated,
-        alone=True,
     )
 
 
@@ -131,7 +130,6 @@ def gain_names_its_reference(case: Case) -> Judgement | None:
         assumptions=("Bare decibels are read as dBi.",) if bare else (),
         question="Please state the gain in dBi." if bare else "",
         used=bare or gains,
-        alone=True,
     )
 
 

@@ -194,8 +194,13 @@ def test_far_field_distance(height_mm, range_mhz, far_m):
 
 def test_cylindrical_model_only_where_it_holds():
     """OET 65: it meets the spherical one at R = G·h·θ/720; 17 dBi, 2 m, 65°: 9.05 m by hand."""
-    column = {"frequency_range": [1710, 2170], "conducted_power": 100, "gain": "17.0 dBi", "height": "2000 mm",
-              "horizontal_beamwidth": 65}  # fmt: skip
+    column = {
+        "frequency_range": [1710, 2170],
+        "conducted_power": 100,
+        "gain": "17.0 dBi",
+        "height": "2000 mm",
+        "horizontal_beamwidth": 65,
+    }
     note = note_of(column)
     public, workers = row(note), row(note, "workers")
     assert public.cylindrical_distance_m == pytest.approx(180 * 100 / (65 * math.pi * 2 * 8.55), abs=0.1)
