@@ -167,7 +167,9 @@ def horizontal_beamwidth_fits_columns(
         return _held(model, horizontal_beamwidth, uniform, words, rough)
     if gain is None and not marked:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("gain",), used=model.used)
-    theirs = marked or _gain_of(model, own, gain, vertical_beamwidth, tilt, feed_loss)
+    theirs = marked or _gain_of(
+        model, own, gain=gain, vertical=vertical_beamwidth, loss=feed_loss, tilt_deg=tilt
+    )
     return _of_fewer(model, horizontal_beamwidth, own, uniform, theirs=theirs)
 
 
@@ -188,10 +190,11 @@ def _single_column(width: Reading) -> Judgement:
 def _gain_of(
     model: Model,
     columns: int,
+    *,
     gain: Reading | None,
     vertical: Reading | None,
+    loss: Reading | None,
     tilt_deg: float,
-    feed_loss: Reading | None,
 ) -> bool:
     """Whether the gain is no higher than that of so many columns."""
     if gain is None or isinstance(gain.value, str):
@@ -201,7 +204,7 @@ def _gain_of(
         tilt_deg=tilt_deg,
         horizontal_deg=None,
         vertical_deg=None if vertical is None or isinstance(vertical.value, str) else vertical.nominal,
-        loss_db=declared_loss_db(gain, feed_loss, None),
+        loss_db=declared_loss_db(gain, loss, None),
         beam_columns=columns,
     )
     zone = beam_gains(model, claims)[0].zone(gain.nominal, last_digit_slack(gain))
@@ -212,13 +215,15 @@ def _of_fewer(model: Model, width: Reading, columns: int, uniform_deg: float, *,
     total = model.layout.columns
     share = "one column" if columns == 1 else f"{columns} columns"
     tail = "the gain is theirs." if theirs else "the gain is higher than theirs: another beam."
+    own = COLUMN_WIDTHS_DEG if columns == 1 else (width.low, width.high)
+    span = own if theirs else (QUESTION * uniform_deg, WIDE * uniform_deg)
     return Judgement(
         verdict=Fit.FITS if theirs else Fit.DOUBTFUL,
         summary=f"{claim(width)} claimed; all {total} columns in phase have {uniform_deg:.1f}°. Such a width"
         " is that"
         f" of {share} or of a broadcast beam; {tail}",
         claimed=Amount(width.nominal, "deg"),
-        expected=Interval(round(QUESTION * uniform_deg, 2), round(WIDE * uniform_deg, 2), "deg"),
+        expected=Interval(round(span[0], 2), round(span[1], 2), "deg"),
         working=(
             Step("Width of all columns", f"exact pattern of {total} columns", round(uniform_deg, 2), "deg"),
         ),

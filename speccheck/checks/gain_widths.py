@@ -13,10 +13,11 @@ from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 SOLID_ANGLE = 41_253.0
 PLANAR = 32_400.0
+LOSSLESS = 35_000.0
 LOSSY = 17_000.0
-"""Products gain × width × width [deg²]: the sphere; arrays with side lobes (Balanis ch. 6); a lossy or
-heavily
-shaped beam (the 14 dBi, 70° × 10° panel of 3GPP TR 36.814 Table A.2.1.1-2 gives 17 600)."""
+"""Products gain × width × width [deg²]: the sphere; arrays with side lobes (Balanis ch. 6); the
+lossless directivity of a uniform column (8 at 0.8 λ, computed); a lossy or heavily shaped
+beam (the 14 dBi, 70° × 10° panel of 3GPP TR 36.814 Table A.2.1.1-2 gives 17 600)."""
 
 HOUSING_ALLOWANCE_DB = 0.5
 """Uniform arrays exceed 4πA/λ² by up to 0.4 dB (brute force on published arrays); rounded up [dB]."""
@@ -52,6 +53,8 @@ def gain_fits_beamwidths(
     Worked example
     65° × 7°: 18.5 dBi with 32 400 and 19.6 dBi with 41 253; 20.5 dBi does not fit.
     """
+    if "element_gain_dbi" in gain.at:
+        return _of_the_short_formula(gain)
     across, along = horizontal_beamwidth.nominal, vertical_beamwidth.nominal
     note: tuple[str, ...] = ()
     model = model_of(case)
@@ -63,7 +66,8 @@ def gain_fits_beamwidths(
     rounding = last_digit_slack(horizontal_beamwidth) / across + last_digit_slack(vertical_beamwidth) / along
     slack = last_digit_slack(gain) + 4.343 * rounding
     product = across * along
-    sphere, planar, least = (10 * math.log10(k / product) for k in (SOLID_ANGLE, PLANAR, LOSSY))
+    upper = LOSSLESS if gain.at.get("loss_db") == 0 else PLANAR
+    sphere, planar, least = (10 * math.log10(k / product) for k in (SOLID_ANGLE, upper, LOSSY))
     value = gain.nominal
     verdict = (
         Fit.DOES_NOT_FIT
@@ -114,6 +118,15 @@ def _width_of_another_beam(
     return uniform if uniform is not None and width.nominal / uniform > SAME_BEAM[1] else None
 
 
+def _of_the_short_formula(gain: Reading) -> Judgement:
+    return Judgement(
+        verdict=Fit.FITS,
+        summary=f"{claim(gain)} read as element gain plus 10·log10 N is not the gain of a beam: not held.",
+        claimed=Amount(gain.nominal, "dBi"),
+        expected=Interval(gain.nominal, gain.nominal, "dBi"),
+    )
+
+
 def _of_two_beams(gain: Reading, width: Reading, all_deg: float, model: Model) -> Judgement:
     columns = model.layout.columns
     return Judgement(
@@ -155,6 +168,8 @@ def gain_fits_housing(*, case: Case, gain: Reading, height: Reading, width: Read
     """
     if case.band is None:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("frequency_range",))
+    if "element_gain_dbi" in gain.at:
+        return _of_the_short_formula(gain)
     freq_mhz = gain.at.get("frequency_mhz", sum(case.band) / 2)
     bound = float(aperture_directivity_dbi(width.high, height.high, freq_mhz * 1e6))
     hard = bool(aperture_is_hard(width.high, height.high, freq_mhz * 1e6))

@@ -18,6 +18,9 @@ PEAK_OVER_AVERAGE_DB = 9.0
 SYSTEM_MODEL_ELEMENT_DBI = 8.0
 """Element gain of the system models, 3GPP TR 38.901 Table 7.3-1."""
 
+SHORT_FORMULA_WITHIN_DB = 0.3
+"""Rounding of element gain and count [dB]."""
+
 _POWERS = ("conducted_power", "max_power_total")
 
 
@@ -124,10 +127,20 @@ def widths_at_bottom(panel: Panel, reach: Reach) -> Panel:
     "gain",
 )
 def system_model_gain(panel: Panel, reach: Reach) -> Panel:
-    """The figure held against the short formula of system models."""
+    """The figure held against the short formula of system models, where it is that formula's result."""
     element = panel.get("element_gain")
     gain = SYSTEM_MODEL_ELEMENT_DBI if element is None or isinstance(element.value, str) else element.nominal
-    return reread(panel, reach, ("gain",), marked(element_gain_dbi=gain))
+
+    def marked_if_equal(reading: Reading) -> Reading:
+        rows, columns = (panel.get(key, reading.band) for key in ("array_rows", "array_columns"))
+        if rows is None or isinstance(rows.value, str):
+            return reading
+        count = rows.nominal * (1 if columns is None or isinstance(columns.value, str) else columns.nominal)
+        short = gain + 10 * math.log10(max(1.0, count))
+        equal = abs(reading.nominal - short) <= SHORT_FORMULA_WITHIN_DB
+        return marked(element_gain_dbi=gain)(reading) if equal else reading
+
+    return reread(panel, reach, ("gain",), marked_if_equal)
 
 
 @innocent("gain of one column or sub-array", "the gain is that of the whole panel or of one column", "gain")

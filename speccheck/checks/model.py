@@ -6,6 +6,7 @@ every assumption made where the bid is silent. It is built once for a panel and 
 
 from __future__ import annotations
 
+import math
 import re
 from dataclasses import dataclass, replace
 
@@ -21,6 +22,9 @@ _TRIANGULAR = re.compile(
 
 SECTOR_COLUMN_AZ_DEG = 65.0
 """Azimuth width [deg] taken for one column when the bid states none (TR 38.901 Table 7.3-1)."""
+
+MOST_COUNTED = 256
+"""Rows or columns beyond which a count is no count of elements."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -82,7 +86,9 @@ class _Maker:
 
     def count(self, key: str) -> int | None:
         reading = self.reading(key)
-        return None if reading is None else round(reading.nominal)
+        return (
+            round(reading.nominal) if reading is not None and 1 <= reading.nominal <= MOST_COUNTED else None
+        )
 
     def reading(self, key: str) -> Reading | None:
         found = self.panel.get(key, self.band)
@@ -101,7 +107,7 @@ class _Maker:
     def pitch_m(self, key: str) -> float | None:
         """A spacing [m]; one spacing for both planes serves where the plane's own is not stated."""
         reading = self.reading(key) or self.reading("element_spacing")
-        if reading is None:
+        if reading is None or not 0 < reading.nominal < math.inf:
             return None
         if reading.unit in WAVELENGTHS or (
             reading.stated_unit in WAVELENGTHS and "frequency_mhz" not in reading.at
