@@ -20,6 +20,8 @@ from speccheck.records import CellRef
 Json = Any
 """What json.loads returns: dict, list, str, int, float, bool or None."""
 
+_AS_THEY_ARE = frozenset({str, int, bool, type(None)})
+
 
 def encode(item: object, home: str) -> Json:
     """Return a record, or any value inside one, as JSON values; `home` is the input file's name.
@@ -29,8 +31,10 @@ def encode(item: object, home: str) -> Json:
     TypeError : a type that no record holds
     """
     if item is None or isinstance(item, str | int | float):
-        return _encode_scalar(item)
+        return item if type(item) in _AS_THEY_ARE else _encode_scalar(item)
     if isinstance(item, tuple | list):
+        if all(map(_is_plain_number, item)):
+            return list(item)
         return [encode(part, home) for part in item]
     if isinstance(item, Mapping):
         return {str(key): encode(part, home) for key, part in item.items()}
@@ -38,6 +42,11 @@ def encode(item: object, home: str) -> Json:
         place = {"sheet": item.sheet, "cell": item.cell}
         return place if item.file == home else {"file": item.file, **place}
     return encode_fields(item, home)
+
+
+def _is_plain_number(item: object) -> bool:
+    """Whether an item needs no care; the points of curves are many."""
+    return type(item) is float and math.isfinite(item)
 
 
 def _encode_scalar(item: str | float | None) -> Json:

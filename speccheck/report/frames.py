@@ -6,6 +6,7 @@ The order of the elements is that of the schema of ISO/IEC 29500-1, CT_Worksheet
 from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
+from textwrap import wrap
 
 from speccheck.report.cells import (
     Content,
@@ -207,7 +208,7 @@ def _footer(imprint: Imprint) -> str:
 def _row_heights(table: Table) -> dict[int, float]:
     """Heights [points] that show wrapped text whole, for programs that don't fit rows on opening."""
     wrapped = [(n, column.width) for n, column in enumerate(table.columns) if column.look == "wrap"]
-    headings = max(_lines(column.heading, column.width - 3) for column in table.columns)
+    headings = max(len(wrap(column.heading, max(int(column.width) - 3, 4))) for column in table.columns)
     heights = {1: LINE_POINTS * headings + 4}
     for number, row in enumerate(table.rows, start=2):
         lines = max((_lines(_text(row[n]), width) for n, width in wrapped), default=1)

@@ -16,7 +16,8 @@ from speccheck.report.review_front import lists, read_me, rules_used
 from speccheck.report.review_inputs import inputs_as_read, mirror_grids
 from speccheck.report.review_places import place_everything
 from speccheck.report.review_recomputed import recomputed
-from speccheck.report.review_tables import findings, question_list, requirements, summary
+from speccheck.report.review_summary import question_list, summary
+from speccheck.report.review_tables import findings, requirements
 from speccheck.report.sheets import UNDATED, Grid, Imprint, Table
 from speccheck.report.view import label
 

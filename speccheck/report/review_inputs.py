@@ -48,7 +48,7 @@ def inputs_as_read(submission: Submission, places: Places) -> Table:
             Column(heading="Statistic", width=12),
             Column(heading="Conditions", width=26),
             Column(heading="Heading", width=30),
-            Column(heading="How it was read", width=44, look="wrap"),
+            Column(heading="How it was read", width=80, look="wrap"),
         ),
         rows=rows,
         printed=13,

@@ -102,7 +102,7 @@ class Ledger:
                 Column(heading="Panel", width=22),
                 Column(heading="Band from (MHz)", width=11, look="number"),
                 Column(heading="Band to (MHz)", width=11, look="number"),
-                Column(heading="Quantity", width=46),
+                Column(heading="Quantity", width=58),
                 Column(
                     heading="Figure",
                     width=14,
@@ -116,7 +116,7 @@ class Ledger:
                     note="input: refers to a cell as read; assumption: may be changed; result: formula.",
                 ),
                 Column(heading="Formula", width=44, look="wrap"),
-                Column(heading="Source", width=44, look="wrap"),
+                Column(heading="Source", width=70, look="wrap"),
             ),
             rows=self.rows,
             frozen=2,

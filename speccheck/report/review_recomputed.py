@@ -24,7 +24,9 @@ def recomputed(assessment: Assessment, places: Places) -> Table:
     sector = ledger.assume(
         "Product of gain and beamwidths", SECTOR_CONSTANT_DEG2, "deg²", "ITU-R F.1336-5, recommends 3.3"
     )
-    sphere = ledger.assume("Square degrees of the sphere", SPHERE_DEG2, "deg²", "4π · (180/π)²")
+    sphere = ledger.result(
+        "Square degrees of the sphere", "deg²", "4*PI()*(180/PI())^2", lambda: SPHERE_DEG2, (), look="number1"
+    )
     for one in assessment.panels:
         ledger.panel = one.panel.name
         for band in one.panel.bands or (None,):
@@ -140,7 +142,7 @@ def _spacing(
 
 
 def _gain_and_power(
-    ledger: Ledger, panel: Panel, band: Band | None, constants: tuple[Figure, Figure]
+    ledger: Ledger, panel: Panel, band: Band | None, constants: tuple[Figure | None, ...]
 ) -> None:
     gain = ledger.read(panel.get("gain", band), "Gain as claimed", "dBi")
     widths = tuple(
@@ -163,7 +165,8 @@ def _gain_and_power(
             source=source,
             look="number2",
         )
-    power = ledger.read(panel.get("max_power_total", band), "Total power as claimed", "W")
+    stated = panel.get("conducted_power", band) or panel.get("max_power_total", band)
+    power = ledger.read(stated, "Total power as claimed", "W")
     total = ledger.result(
         "EIRP of all power through this gain",
         "dBm",

@@ -5,15 +5,19 @@ import re
 import shutil
 import subprocess
 import zipfile
+from pathlib import Path
 
 import openpyxl
 import pytest
 
+from speccheck.pipeline import assess
 from speccheck.report.review import review_bytes
 
 SOFFICE = shutil.which("soffice")
 
-pytestmark = pytest.mark.skipif(SOFFICE is None, reason="LibreOffice is not installed")
+SAMPLES = sorted(Path(__file__).parents[2].joinpath("sample_specs").glob("*-*.xlsx"))
+
+needs_soffice = pytest.mark.skipif(SOFFICE is None, reason="LibreOffice is not installed")
 
 
 def without_results(data):
@@ -53,6 +57,7 @@ def figures(book):
     return {row[0]: row[5] for row in book["Recomputed"].iter_rows(min_row=2, values_only=True)}
 
 
+@needs_soffice
 def test_libreoffice_agrees_with_every_stored_result(bid, tmp_path):
     data = review_bytes(bid)
     stored = figures(openpyxl.load_workbook(io.BytesIO(data), data_only=True))
@@ -61,8 +66,26 @@ def test_libreoffice_agrees_with_every_stored_result(bid, tmp_path):
     assert again == {line: pytest.approx(value, rel=1e-9) for line, value in stored.items()}
 
 
+@needs_soffice
 def test_libreoffice_keeps_hostile_text_as_text(bid, tmp_path):
     book = recalculated(review_bytes(bid), tmp_path)
     assert book["Input 1"]["D1"].value == "=cmd|'/c calc'!A0"
     assert book["Input 1"]["D1"].data_type == "s"
     assert book["Input 1"]["D13"].value == -153
+
+
+@needs_soffice
+def test_libreoffice_agrees_on_a_sample_bid(tmp_path):
+    data = review_bytes(assess(SAMPLES[0]))
+    stored = figures(openpyxl.load_workbook(io.BytesIO(data), data_only=True))
+    again = figures(recalculated(without_results(data), tmp_path))
+    assert again == {line: pytest.approx(value, rel=1e-9) for line, value in stored.items()}
+
+
+@pytest.mark.parametrize("sample", SAMPLES, ids=lambda path: path.stem)
+def test_recomputed_distances_are_those_of_the_exposure_note(sample):
+    assessment = assess(sample)
+    sheet = openpyxl.load_workbook(io.BytesIO(review_bytes(assessment)), data_only=True)["Recomputed"]
+    found = [row[5] for row in sheet.iter_rows(values_only=True) if row[4].startswith("The same, rounded up")]
+    notes = [one.exposure for one in assessment.panels if one.exposure and one.exposure.complete]
+    assert found == [row.distance_m for note in notes for row in note.rows if row.band is not None]

@@ -69,7 +69,7 @@ def test_findings_say_what_the_assessment_says(book):
         "dBi",
     )
     assert (first["Band from (MHz)"], first["Band to (MHz)"]) == (3300, 3800)
-    assert first["Cells"] == "Bid!D3, Bid!D6, Bid!D7"
+    assert first["Cells"] == "Bid!D3, D6, D7"
     assert first["Question"] == "Please confirm the number of positions."
     assert first["Innocent readings"] == "both polarisations together: 23.8 dBi"
     assert first["Working"] == "Aperture: 12 · 55 mm × 8 · 45 mm = 0.2376 m²"
