@@ -63,7 +63,8 @@ errors           error_variance(amplitude_rms_db, phase_rms_deg), gain_loss_db(.
                  phase_step_rms_deg(bits), phase_quantisation_floor_db(count, bits),
                  phase_quantisation_lobe_db(bits), amplitude_step_rms_db(step_db), surface_loss_db(rms_wl)
 bounds           BEAMWIDTH_CONSTANTS (values, domains, sources), aperture_directivity_dbi(width_m, height_m,
-                 freq_hz), aperture_is_hard(...), cell_directivity_dbi(horizontal_pitch_wl, vertical_pitch_wl),
+                 freq_hz), aperture_is_hard(width_m, height_m, freq_hz),
+                 cell_directivity_dbi(horizontal_pitch_wl, vertical_pitch_wl),
                  narrowest_beamwidth_deg(length_m, freq_hz), shortest_length_m(el_hpbw_deg, freq_hz),
                  chebyshev_beamwidth_ratio(count, sidelobe_db), chebyshev_sidelobe_db(count, ratio),
                  gain_from_beamwidths_dbi(az_hpbw_deg, el_hpbw_deg, constant=31000),

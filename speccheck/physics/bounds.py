@@ -13,8 +13,9 @@ from speccheck.physics.taper import beamwidth_ratio, chebyshev
 NARROW_APERTURE_WL = 0.95
 """Effective width [wavelengths] of an aperture that is narrower: elements collect from beyond their box.
 
-A 65 deg column collects from 0.84 wavelengths, a 58 deg one from 0.95 (35000 deg^2 over both widths set equal to
-4 pi A): 1.3 m x 0.15 m at 800 MHz has 12.4 dBi by the plain formula, an honest 65 deg column 15.7 dBi."""
+A 65 deg column collects from 0.84 wavelengths, a 58 deg one from 0.95 (35000 deg^2 over both widths set
+equal to 4 pi A). A panel of 1.3 m x 0.15 m at 800 MHz has 12.4 dBi by the plain formula, an honest 65 deg
+column of that length 15.7 dBi."""
 HARD_APERTURE_WL = 1.0
 """Both sides must exceed this [wavelengths] for the aperture bound to be hard."""
 UNIFORM_LINE_DEG = 50.77

@@ -240,14 +240,15 @@ def _cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Flo
         or steps.max() - steps.min() > 1e-9 * steps[0]
     ):
         return weights * np.cos(angles[:, None] * lags.reshape((1, -1) + (1,) * (angles.ndim - 1)))
-    out = np.empty((len(angles), len(lags), *angles.shape[1:]))
-    out[:, 0] = weights
-    twice = 2 * np.cos(angles * steps[0])
-    np.multiply(0.5 * weights, twice, out=out[:, 1])
+    out = np.empty((len(lags), *angles.shape))  # one slab a lag, so that each step runs over adjacent memory
+    out[0] = weights
+    twice = np.cos(angles * steps[0])
+    np.multiply(weights, twice, out=out[1])
+    twice += twice
     for n in range(2, len(lags)):
-        np.multiply(twice, out[:, n - 1], out=out[:, n])
-        out[:, n] -= out[:, n - 2]
-    return out
+        np.multiply(twice, out[n - 1], out=out[n])
+        out[n] -= out[n - 2]
+    return np.moveaxis(out, 0, 1)
 
 
 def _isotropic_kernel(wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:

@@ -38,6 +38,8 @@ class Excitation:
     row_shifts_m: Floats | None
     distinct: Floats
     which: NDArray[np.intp]
+    steer_y: Floats
+    steer_z: Floats
 
     @property
     def row_groups(self) -> tuple[tuple[slice, float], ...]:
@@ -67,8 +69,11 @@ def excite(
     shifts = row_shifts(layout)
     if shifts is not None:
         rows = rows * np.exp(-1j * (k * u_y)[:, None] * shifts)
-    distinct, which = np.unique(k, return_inverse=True)
-    return Excitation(layout, element, k, np.pi / 2 + tilt, phi, rows, columns, shifts, distinct, which)
+    places = {value: at for at, value in enumerate(dict.fromkeys(k.tolist()))}
+    distinct, which = np.array(list(places)), np.array([places[value] for value in k.tolist()])
+    return Excitation(
+        layout, element, k, np.pi / 2 + tilt, phi, rows, columns, shifts, distinct, which, u_y, -np.sin(tilt)
+    )
 
 
 def phasors(line: Line, path_phase: Floats) -> Complex:
@@ -119,6 +124,38 @@ def column_factor(states: Excitation, u_y: Floats) -> Complex:
     """
     table = phasors(lines(states.layout)[1], states.wavenumbers[:, None] * u_y)
     return np.asarray((states.columns[:, None] @ table)[:, 0])
+
+
+def line_power(line: Line, path_phase: Floats, steered_phase: Floats, fixed_phase: Floats) -> Floats:
+    """Power of a line that is a product of uniform lines: a cosine series in the phase between neighbours.
+
+    line [Line]: with factors.
+    path_phase [rad/m]: wavenumber times direction cosine, shape (S, P).
+    steered_phase [rad/m]: the same for the steering direction, shape (S, 1).
+    fixed_phase [rad/m]: the same for the fixed direction of the sub-arrays, shape (S, 1).
+    Returns [1]: squared magnitude of the line factor, shape (S, P).
+    Source: power spectrum as the transform of the autocorrelation; Clenshaw's summation.
+    """
+    power: Floats | None = None
+    for factor in line.factors:
+        series = factor.autocorrelation
+        phase = path_phase - (steered_phase if factor.steered else fixed_phase)
+        phase *= factor.pitch_m
+        cosine = np.cos(phase, out=phase)
+        twice = cosine + cosine
+        last, before = np.full_like(twice, series[-1]), np.zeros_like(twice)
+        for coefficient in series[-2:0:-1]:
+            following = twice * last
+            following -= before
+            following += coefficient
+            last, before = following, last
+        if len(series) > 1:
+            last *= cosine
+            last -= before
+            last += last
+            last += series[0]
+        power = last if power is None else power * last
+    return np.ones_like(path_phase) if power is None else power
 
 
 def squared(factor: Complex) -> Floats:

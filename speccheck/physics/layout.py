@@ -113,19 +113,33 @@ class ArrayLayout:
 
 
 @dataclass(frozen=True, eq=False, slots=True)
+class Factor:
+    """A uniform line that is one factor of another: its pitch [m], the autocorrelation of its amplitudes [1],
+    and whether its phase follows the steering (ports) or is fixed (inside a sub-array)."""
+
+    pitch_m: float
+    autocorrelation: tuple[float, ...]
+    steered: bool
+
+
+@dataclass(frozen=True, eq=False, slots=True)
 class Line:
     """The elements of one axis.
 
-    positions [m]: of the elements, centred. centres [m]: of the port each belongs to. amplitudes [1]: of each.
+    positions [m]: of the elements, centred. centres [m]: of the port of each. amplitudes [1]: of each.
     pitch_m [m]: where all are equally spaced, else 0.
-    moments [1, m, m^2]: 1, j z and (j z)^2 of each element, for the slopes of the line factor.
+    spread_m2 [m^2]: variance of the positions, weighted by amplitude.
+    factors [Factor]: the line as a product of uniform lines, empty where it is none.
+    moments [1, m, m^2]: 1, j z, (j z)^2 of each element, for slopes of the factor.
     """
 
     positions: Floats
     centres: Floats
     amplitudes: Floats
     pitch_m: float
+    spread_m2: float
     moments: Complex
+    factors: tuple[Factor, ...]
 
 
 @lru_cache(maxsize=512)
@@ -179,8 +193,35 @@ def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[
     amplitudes = np.ones(len(positions))
     if taper:
         amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
+    share = amplitudes / amplitudes.sum()
+    spread = float(share @ positions**2 - (share @ positions) ** 2)
     along = 1j * positions
-    return Line(positions, centres, amplitudes, pitch, np.array([amplitudes**0, along, along * along]).T)
+    moments = np.array([amplitudes**0, along, along * along]).T
+    return Line(positions, centres, amplitudes, pitch, spread, moments, _factors(inner, outer, taper, pitch))
+
+
+def _factors(
+    inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...], pitch: float
+) -> tuple[Factor, ...]:
+    """Ports, elements inside a sub-array, and panel groups as factors of one line."""
+    (count, _, grouped), (groups, group_pitch) = inner, outer
+    if pitch == 0.0 and groups * count > 1:  # groups apart: a factor of their own, unless a taper runs across
+        if taper:
+            return ()
+        inside = _factors(inner, (1, 0.0), (), inner[1])
+        return (*inside, Factor(group_pitch, _autocorrelation((1.0,) * groups), True))
+    ports = groups * count // grouped
+    if len(taper) not in (0, ports):
+        return ()
+    of_ports = Factor(grouped * pitch, _autocorrelation(taper or (1.0,) * ports), True)
+    if grouped == 1:
+        return (of_ports,)
+    return of_ports, Factor(pitch, _autocorrelation((1.0,) * grouped), False)
+
+
+@lru_cache(maxsize=256)
+def _autocorrelation(amplitudes: tuple[float, ...]) -> tuple[float, ...]:
+    return tuple(np.correlate(amplitudes, amplitudes, "full")[len(amplitudes) - 1 :].tolist())
 
 
 def wavenumber(freq_hz: Floats) -> Floats:

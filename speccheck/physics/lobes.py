@@ -14,7 +14,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from speccheck.physics.beam import find_beam
-from speccheck.physics.cuts import both_sides, half_grid
+from speccheck.physics.cuts import front_angles
 from speccheck.physics.decibels import Floats, db, floats, wavelength_m
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation, excite, intensity
@@ -139,7 +139,7 @@ def _all_states(
     level, theta, phi = beam.intensity, beam.theta_rad, beam.phi_rad
     found = []
     for s, wavelength in enumerate(wavelength_m(grids[0].ravel())):
-        state = _one(states, s)
+        state = excite(layout, element, *(grid.ravel()[s : s + 1] for grid in grids))
         if points is None:
             found.append(_anywhere(state, (theta[s], phi[s]), level[s]))
         else:
@@ -150,22 +150,6 @@ def _all_states(
             np.array([getattr(lobe, name) for lobe in found]).reshape(shape)
             for name in ("level_db", "theta_deg", "phi_deg", "visible_count", "centre_visible")
         )
-    )
-
-
-def _one(states: Excitation, s: int) -> Excitation:
-    part = slice(s, s + 1)
-    return Excitation(
-        states.layout,
-        states.element,
-        states.wavenumbers[part],
-        states.theta_rad[part],
-        states.phi_rad[part],
-        states.rows[part],
-        states.columns[part],
-        states.row_shifts_m,
-        states.wavenumbers[part],
-        np.zeros(1, np.intp),
     )
 
 
@@ -258,7 +242,7 @@ def _highest_in_box(state: Excitation, centre: Floats, half_width: Floats) -> tu
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
     """Highest local maximum over the front outside the beam's own."""
-    phi = both_sides(half_grid(state.layout, state.wavenumbers))
+    phi = front_angles(state.layout, state.wavenumbers)
     theta = np.pi / 2 + phi[1:-1]
     mesh = np.meshgrid(theta, phi, indexing="ij")
     power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)

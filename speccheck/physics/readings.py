@@ -16,6 +16,12 @@ _NOISE = 1e-13
 """Rise [1] against the beam that is rounding, not a lobe."""
 
 
+_FOUR, _FIVE = np.arange(-1, 3)[:, None], np.arange(-2, 3)[:, None]
+_CUBIC = np.linalg.inv(np.vander(_FOUR[:, 0], increasing=True))
+_QUARTIC = np.linalg.inv(np.vander(_FIVE[:, 0], increasing=True))
+"""From samples around a point to the coefficients of the polynomial through them."""
+
+
 @dataclass(frozen=True, eq=False, slots=True)
 class CutFigures:
     """What each cut shows, shape (C,): width [rad], lobes [dB] against the beam; nan for none.
@@ -48,10 +54,10 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     at_peak = np.minimum(np.maximum(at_peak, 0), last)
     # one pass over both sides: the reversed cut below the plain one
     sides = np.concatenate([level, level[:, ::-1]])
-    index = np.arange(count)
+    index = np.arange(float(count))
     beyond = index > np.concatenate([at_peak, last - at_peak])[:, None]
     half = _half_power(sides, beyond)
-    minimum, lobe, has_lobe = _lobe_beside(sides, beyond)
+    minimum, lobe, has_lobe = _lobe_beside(sides, beyond, index[:-1])
     outside = (index >= minimum[:cuts, None]) | (index <= last - minimum[cuts:, None])
     best = np.where(outside, level, -1.0).argmax(1)
     some = minimum.reshape(2, cuts).min(0) < count
@@ -76,44 +82,43 @@ def _half_power(level: Floats, beyond: Flags) -> Floats:
     after = low.argmax(1)
     start = np.arange(rows) * count
     base = np.minimum(np.maximum(after - 1, 1), count - 3)
-    p0, p1, p2, p3 = level.ravel()[start + base + np.arange(-1, 3)[:, None]]
-    c1 = p2 - p0 / 3 - p1 / 2 - p3 / 6
-    c2 = (p0 + p2) / 2 - p1
-    c3 = (p3 - p0) / 6 + (p1 - p2) / 2
-    first, last = after - base - 1, after - base
-    at = first + (p1 - 0.5) / np.where(p1 > p2, p1 - p2, 1.0)
-    for _ in range(2):
-        slope = np.minimum(c1 + at * (2 * c2 + 3 * at * c3), -1e-12)
-        at = at - (p1 - 0.5 + at * (c1 + at * (c2 + at * c3))) / slope
+    c0, c1, c2, c3 = _CUBIC @ level.ravel()[start + base + _FOUR]
+    first, last = after - base - 1.0, after - base
+    at = first + 0.5
+    for _ in range(3):
+        slope = np.minimum(c1 + at * (2 * c2 + 3 * c3 * at), -1e-12)
+        at = at - (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / slope
         at = np.minimum(np.maximum(at, first), last)
     return np.where(low.ravel()[start + after], base + at, np.nan)
 
 
-def _lobe_beside(level: Floats, beyond: Flags) -> tuple[Indices, Indices, Flags]:
+def _lobe_beside(level: Floats, beyond: Flags, index: Floats) -> tuple[Floats, Indices, Flags]:
     """Index of the first minimum beside the beam (past the end: none), of the lobe after it, if any."""
     rows, count = level.shape
     start = np.arange(rows) * (count - 1)
-    rising = level[:, 1:] - level[:, :-1] > _NOISE
+    rising = level[:, 1:] > level[:, :-1] + _NOISE
     climbs = rising & beyond[:, :-1]
-    minimum = climbs.argmax(1)
-    minimum = np.where(climbs.ravel()[start + minimum], minimum, 2 * count)
-    falls = (np.arange(count - 1) > minimum[:, None]) > rising
+    first = climbs.argmax(1)
+    minimum = np.where(climbs.ravel()[start + first], first, 2.0 * count)
+    falls = (index > minimum[:, None]) > rising
     lobe = falls.argmax(1)
     return minimum, lobe, falls.ravel()[start + lobe]
 
 
 def _vertex(level: Floats, rows: Indices, at: Indices) -> tuple[Floats, Floats]:
-    """Height and offset (in samples) of lobes: Stirling's quartic at the vertex of the parabola.
+    """Height and offset (in samples) of lobes: the quartic through five samples, by two Newton steps.
 
     The outermost two samples of a cut stay as they are.
     """
     count = level.shape[1]
     base = np.minimum(np.maximum(at, 2), count - 3)
-    m2, m1, p0, p1, p2 = level.ravel()[rows * count + base + np.arange(-2, 3)[:, None]]
-    slope, bend = (p1 - m1) / 2, m1 - 2 * p0 + p1
-    third, fourth = (p2 - m2) / 2 - (p1 - m1), p2 + m2 - 4 * (p1 + m1) + 6 * p0
-    t = -slope / np.where(bend < 0, bend, -np.inf)
-    t = np.where(base == at, np.minimum(np.maximum(t, -0.5), 0.5), 0.0)
-    t2 = t * t
-    height = p0 + t * slope + t2 / 2 * bend + (t2 - 1) * (t / 6 * third + t2 / 24 * fourth)
-    return np.where(base == at, height, level.ravel()[rows * count + at]), t
+    c0, c1, c2, c3, c4 = _QUARTIC @ level.ravel()[rows * count + base + _FIVE]
+    t = np.zeros(len(rows))
+    for _ in range(2):
+        bend = 2 * c2 + t * (6 * c3 + 12 * c4 * t)
+        t = t - (c1 + t * (2 * c2 + t * (3 * c3 + 4 * c4 * t))) / np.where(bend < 0, bend, -np.inf)
+        t = np.minimum(np.maximum(t, -0.6), 0.6)
+    inner = base == at
+    t = np.where(inner, t, 0.0)
+    height = c0 + t * (c1 + t * (c2 + t * (c3 + t * c4)))
+    return np.where(inner, height, level.ravel()[rows * count + at]), t

@@ -9,7 +9,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from speccheck.physics.beam import find_beam
-from speccheck.physics.cuts import both_sides, half_grid, horizontal_cut, vertical_cut
+from speccheck.physics.cuts import front_angles, horizontal_cut, vertical_cut
 from speccheck.physics.decibels import Floats, db, floats
 from speccheck.physics.element import Element
 from speccheck.physics.field import excite
@@ -144,35 +144,20 @@ def _figures(
     keys = np.array(distinct).T
     states = excite(layout, element, *keys)
     beam = find_beam(states)
-    half = half_grid(layout, states.wavenumbers)
-    cuts = np.concatenate([horizontal_cut(states, beam, half), vertical_cut(states, beam, half)])
+    angles = front_angles(layout, states.wavenumbers)
+    cuts = np.concatenate([horizontal_cut(states, beam, angles), vertical_cut(states, beam, angles)])
     peaks = np.concatenate([beam.phi_rad, beam.theta_rad - np.pi / 2])
-    read = read_cuts(cuts, both_sides(half), peaks)
-    width, before, after, highest, where = (
-        figure.reshape(2, -1)
-        for figure in (
-            np.degrees(read.width_rad),
-            read.before_db,
-            read.after_db,
-            read.highest_db,
-            np.degrees(read.highest_rad),
-        )
-    )
-    first = np.fmax(before, after)
-    figures = np.stack(
-        [
-            *keys,
-            db(beam.intensity / radiated_power(states)),
-            np.degrees(beam.theta_rad),
-            np.degrees(beam.phi_rad),
-            *width,
-            *first,
-            before[1],
-            highest[0],
-            where[0],
-            highest[1],
-            90 + where[1],
-        ]
-    )
+    read = read_cuts(cuts, angles, peaks)
+    count = len(distinct)
+    figures = np.empty((15, count))
+    figures[:3] = keys
+    figures[3] = 10 * np.log10(beam.intensity / radiated_power(states))
+    figures[4], figures[5] = np.degrees(beam.theta_rad), np.degrees(beam.phi_rad)
+    figures[6:8] = np.degrees(read.width_rad).reshape(2, count)
+    figures[8:10] = np.fmax(read.before_db, read.after_db).reshape(2, count)
+    figures[10] = read.before_db[count:]
+    figures[11::2] = read.highest_db.reshape(2, count)
+    figures[12::2] = np.degrees(read.highest_rad).reshape(2, count)
+    figures[14] += 90
     figures.flags.writeable = False
     return figures

@@ -1,5 +1,5 @@
 """Array figures against the brute-force table tests/reference/arrays.csv (columns D_gauss_legendre and
-hpbw_step_diff_deg show its own accuracy); required here: directivity 0.01 dB, widths 0.05 deg, lobes 0.1 dB."""
+hpbw_step_diff_deg tell its accuracy); required here: directivity 0.01 dB, widths 0.05 deg, lobes 0.1 dB."""
 
 import numpy as np
 import pytest
