@@ -3,15 +3,20 @@
 from __future__ import annotations
 
 import base64
+import contextlib
 import functools
 import hashlib
+import sys
 from collections.abc import Iterable
 from pathlib import Path
 from typing import Any
 
 import jinja2
+from jinja2.bccache import Bucket
 from markupsafe import Markup
 
+from speccheck.atomic import write_bytes_atomic
+from speccheck.errors import OutputError
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
 from speccheck.report.exposure_lines import exposure_table, zone_table
 from speccheck.report.formats import Numbers, shown_unit
@@ -62,6 +67,32 @@ def templates_folder() -> Path:
     return installed if installed.is_dir() else package.parent / "templates"
 
 
+class _CompiledTemplates(jinja2.BytecodeCache):
+    """Compiled templates beside the package's own byte code, as Python keeps its own; compiling takes 0.1 s.
+
+    Where that folder cannot be written, or Python is told to write none, they are compiled each time.
+    """
+
+    folder = Path(__file__).parent / "__pycache__"
+
+    def load_bytecode(self, bucket: Bucket) -> None:
+        """Read a compiled template; jinja2 refuses one of another version or another source."""
+        try:
+            with self._file(bucket).open("rb") as stream:
+                bucket.load_bytecode(stream)
+        except (OSError, EOFError, ValueError, TypeError):
+            bucket.reset()
+
+    def dump_bytecode(self, bucket: Bucket) -> None:
+        """Keep a compiled template; a failure costs time only."""
+        if not sys.dont_write_bytecode:
+            with contextlib.suppress(OSError, OutputError):
+                write_bytes_atomic(self._file(bucket), bucket.bytecode_to_string())
+
+    def _file(self, bucket: Bucket) -> Path:
+        return self.folder / f"template-{bucket.key[:20]}.{sys.implementation.cache_tag}.bin"
+
+
 @functools.cache
 def _environment(decimal_comma: bool) -> jinja2.Environment:
     numbers = Numbers(decimal_comma)
@@ -73,6 +104,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         trim_blocks=True,
         lstrip_blocks=True,
         auto_reload=False,
+        bytecode_cache=_CompiledTemplates(),
     )
     environment.filters.update(
         label=label,
