@@ -163,6 +163,7 @@ def _one(model: Model, claims: Claims, columns: int) -> ExpectedGain:
     return _with_narrower_element(layout, claims, gain) if wide else gain
 
 
+@functools.lru_cache(maxsize=4096)
 def _with_narrower_element(layout: ArrayLayout, claims: Claims, gain: ExpectedGain) -> ExpectedGain:
     """Upper edges for the narrower element that widely spaced columns may have."""
     narrow, model = (

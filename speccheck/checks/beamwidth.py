@@ -175,14 +175,14 @@ def horizontal_beamwidth_fits_columns(
 
 def _single_column(width: Reading) -> Judgement:
     low, high = COLUMN_WIDTHS_DEG
-    fits = low - 12 <= width.nominal <= high
+    fits = low - 3 <= width.nominal <= high
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOUBTFUL,
         summary=f"{claim(width)} claimed for one column; single columns have {low:g}° to {high:g}°.",
         claimed=Amount(width.nominal, "deg"),
         expected=Interval(low, high, "deg"),
         working=(Step("Width of single columns", "common practice", f"{low:g} to {high:g}", "deg"),),
-        assumptions=("One column, or none stated; shaped reflectors reach about 33°.",),
+        assumptions=("One column, or none stated; shaped reflectors reach a little less.",),
         question="Please state the columns that form the beam and the level of the beamwidth.",
     )
 

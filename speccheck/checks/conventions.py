@@ -144,9 +144,13 @@ class _Trial:
         if not any(set(reading.parameters) & set(f.parameters) for f in self.misfits.values()):
             return None
         bands = tuple(dict.fromkeys(band for _, band, _ in self.misfits if band is not None))
-        for reach in (Reach(), Reach(bands)) if bands else (Reach(),):
+        seen = [self.panel]
+        for reach in (Reach(), Reach(bands)) if len(self.panel.bands) > 1 else (Reach(),):
             other = reading.reread(self.panel, reach)
-            candidate = None if other == self.panel else self._judged(rank, reading, other)
+            if other in seen:
+                continue
+            seen.append(other)
+            candidate = self._judged(rank, reading, other)
             if candidate:
                 return candidate
         return None

@@ -222,7 +222,7 @@ def _against_short_formula(model: Model, gain: Reading) -> Judgement:
     return Judgement(
         verdict=Fit.FITS if off <= SHORT_FORMULA_WITHIN_DB else Fit.DOES_NOT_FIT,
         summary=f"{claim(gain)} gain claimed; {element:g} dBi + 10·log10 {count} = {short:.1f} dBi.",
-        claimed=Amount(gain.nominal, "dBi"),
+        claimed=Amount(round(gain.nominal, 2), "dBi"),
         expected=Interval(short - SHORT_FORMULA_WITHIN_DB, short + SHORT_FORMULA_WITHIN_DB, "dBi"),
         working=(Step("Short formula", f"{element:g} + 10·log10 {count}", round(short, 2), "dBi"),),
         assumptions=(f"Class {panel_class(model).value}.",),
@@ -256,7 +256,7 @@ def gain_below_directivity(gain: Reading, directivity: Reading) -> Judgement:
         verdict=verdict,
         summary=f"{claim(gain)} gain beside {claim(directivity)} directivity: a loss of {loss:.1f} dB"
         + ("." if verdict is Fit.FITS else ", less than any feed and radome leave."),
-        claimed=Amount(gain.nominal, "dBi"),
+        claimed=Amount(round(gain.nominal, 2), "dBi"),
         expected=Interval(None, directivity.nominal, "dBi"),
         working=(
             Step(

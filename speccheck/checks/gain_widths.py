@@ -90,7 +90,7 @@ def gain_fits_beamwidths(
         f" {planar:.1f} dBi"
         f" (K = 32 400), {sphere:.1f} dBi at most (K = 41 253). The claim implies K = {implied:.0f}:"
         f" {meaning}.",
-        claimed=Amount(value, "dBi"),
+        claimed=Amount(round(value, 2), "dBi"),
         expected=Interval(round(least, 2), round(planar, 2), "dBi"),
         working=(
             Step("Upper edge", f"10·log10(32400 ÷ ({across:.4g} × {along:.4g}))", round(planar, 2), "dBi"),
@@ -122,7 +122,7 @@ def _of_the_short_formula(gain: Reading) -> Judgement:
     return Judgement(
         verdict=Fit.FITS,
         summary=f"{claim(gain)} read as element gain plus 10·log10 N is not the gain of a beam: not held.",
-        claimed=Amount(gain.nominal, "dBi"),
+        claimed=Amount(round(gain.nominal, 2), "dBi"),
         expected=Interval(gain.nominal, gain.nominal, "dBi"),
     )
 
@@ -183,7 +183,7 @@ def gain_fits_housing(*, case: Case, gain: Reading, height: Reading, width: Read
         " dBi at"
         f" {freq_mhz:.0f} MHz without losses."
         + (f" The claim is {gain.nominal - bound:.1f} dB more." if over > 0 else ""),
-        claimed=Amount(gain.nominal, "dBi"),
+        claimed=Amount(round(gain.nominal, 2), "dBi"),
         expected=Interval(None, round(bound + HOUSING_ALLOWANCE_DB, 2), "dBi"),
         working=(
             Step(

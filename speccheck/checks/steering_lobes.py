@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import functools
 import re
 from dataclasses import dataclass
 
@@ -10,8 +11,8 @@ import numpy as np
 from speccheck.checks.model import Model
 from speccheck.checks.saying import named
 from speccheck.physics import lobes
-from speccheck.physics.decibels import Floats
 from speccheck.physics.element import SectorElement
+from speccheck.physics.layout import ArrayLayout
 from speccheck.records import Fit, Reading, Step
 
 HARD_DB, SOFT_DB = -3.0, -8.0
@@ -50,11 +51,6 @@ class Steering:
     def ordered_deg(self) -> tuple[float, float]:
         """Both ends [deg], the upper one first."""
         return self.ends_deg[1], self.ends_deg[0]
-
-    def keys(self, tilt_deg: float) -> tuple[Floats, Floats]:
-        """Tilts and scans [deg] of both ends; the other plane at its rest position."""
-        ends = np.array(self.ordered_deg)
-        return (np.full(2, tilt_deg), ends) if self.horizontal else (ends, np.zeros(2))
 
 
 @dataclass(frozen=True, slots=True)
@@ -104,16 +100,22 @@ def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
     pitch_wl = _pitch_wl(model, steering, subarrays=subarrays)
     if pitch_wl > FAR_PITCH_WL:
         return _far(pitch_wl, steering)
-    tilt, scan = steering.keys(layout.subarray_tilt_deg)
+    return _searched(layout, model.high_hz, steering.ordered_deg, steering.horizontal, subarrays)
+
+
+@functools.lru_cache(maxsize=4096)
+def _searched(
+    layout: ArrayLayout, freq_hz: float, ends_deg: tuple[float, float], horizontal: bool, subarrays: bool
+) -> Lobe:
+    ends, rest = np.array(ends_deg), np.full(2, layout.subarray_tilt_deg)
+    tilt, scan = (rest, ends) if horizontal else (ends, np.zeros(2))
     search = lobes.subarray_lobes if subarrays else lobes.element_lobes
-    found = search(layout, SectorElement(), model.high_hz, tilt, scan)
+    found = search(layout, SectorElement(), freq_hz, tilt, scan)
     # of a lobe whose centre is hidden only the flank is seen: it counts behind any visible one
     rank = np.where(found.centre_visible, 0.0, -1e3) + np.nan_to_num(found.level_db, nan=-1e6)
     at = int(np.argmax(rank))
-    stands = found.phi_deg if steering.horizontal else found.theta_deg - 90
-    return Lobe(
-        float(found.level_db[at]), steering.ordered_deg[at], float(stands[at]), bool(found.centre_visible[at])
-    )
+    stands = found.phi_deg if horizontal else found.theta_deg - 90
+    return Lobe(float(found.level_db[at]), ends_deg[at], float(stands[at]), bool(found.centre_visible[at]))
 
 
 def _pitch_wl(model: Model, steering: Steering, *, subarrays: bool) -> float:
