@@ -5,10 +5,13 @@ A note without power, gain, band and limit has no distance: it is incomplete and
 
 from __future__ import annotations
 
+from dataclasses import replace
+
 from speccheck.checks.exposure_inputs import Radiated, active, lacking, radiated
 from speccheck.checks.exposure_rows import Frame, all_bands_rows, band_rows, distance_steps
 from speccheck.checks.exposure_words import CAUTIONS, VALIDITY
 from speccheck.checks.exposure_zone import zones
+from speccheck.checks.plausibility import impossible
 from speccheck.checks.saying import label, mhz
 from speccheck.records import Band, ExposureNote, Panel, Settings, Step
 from speccheck.standards import BASES, POPULATIONS, LimitSet, limit_set, limit_set_names
@@ -30,6 +33,7 @@ def exposure_note(panel: Panel, settings: Settings) -> ExposureNote:
 
     Source: OET Bulletin 65 equations 4 and 12 to 16; ITU-T K.52; IEC 62232 (scopes seen, clauses not read).
     """
+    panel = _possible(panel)
     missing = _missing(panel, settings)
     if missing:
         return _incomplete(settings, missing)
@@ -54,6 +58,12 @@ def exposure_note(panel: Panel, settings: Settings) -> ExposureNote:
         around=around,
         where=readings,
     )
+
+
+def _possible(panel: Panel) -> Panel:
+    """The panel without figures that no panel can have; those count as missing."""
+    ordered = [r for r in panel.readings if r.band is None or r.band[0] < r.band[1]]
+    return replace(panel, readings=tuple(r for r in ordered if not impossible(r)))
 
 
 def _missing(panel: Panel, settings: Settings) -> tuple[str, ...]:

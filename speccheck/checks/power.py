@@ -108,7 +108,7 @@ def _claimed_dbm(eirp: Reading | None, erp: Reading | None) -> tuple[float | Non
     if eirp is None:
         level += HALF_WAVE_DIPOLE_DBI
         notes.append("EIRP is the stated ERP plus 2.15 dB.")
-    if re.search(r"(per|each|/)\s*pol", words(stated)):
+    if re.search(r"(per|each|pro|je|par|por|na|/)\s*pol", words(stated)):
         level += 10 * math.log10(2)
         notes.append("The figure is stated per polarisation; 3.01 dB are added for both.")
     return level, tuple(notes)

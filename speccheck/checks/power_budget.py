@@ -150,10 +150,12 @@ def mains_power_covers_rf(
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("conducted_power",))
     strongest = max(powers, key=lambda p: p.nominal_w)
     duty = tdd_duty.nominal / 100 if tdd_duty else _usual_duty(case)
+    if power_consumption.high <= 0:
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("power_consumption",))
     share = float(rf_efficiency(strongest.low_w, power_consumption.high, duty))
     radiated_w = duty * strongest.nominal_w
     verdict = Fit.DOES_NOT_FIT if share > 1 else Fit.DOUBTFUL if share > _USUAL_EFFICIENCY else Fit.FITS
-    shown = float(rf_efficiency(strongest.nominal_w, power_consumption.nominal, duty))
+    shown = float(rf_efficiency(strongest.nominal_w, max(power_consumption.nominal, 1e-9), duty))
     return Judgement(
         verdict=verdict,
         summary=f"{strongest.nominal_w:.5g} W of radio power for {duty * 100:.3g} % of the time from "

@@ -8,9 +8,9 @@ from dataclasses import dataclass
 from speccheck.checks.cell_text import half_digit, words
 from speccheck.records import Band, Panel, Reading, Step
 
-_PER_POLARISATION = re.compile(r"(per|each|/)\s*pol")
-_PER_PORT = re.compile(r"(per|each|/)\s*(port|path|branch|trx|tx\b|transceiver|connector|channel)")
-_PER_CARRIER = re.compile(r"(per|each|/)\s*carrier")
+_PER_POLARISATION = re.compile(r"(per|each|pro|je|par|por|na|/)\s*pol")
+_PER_PORT = re.compile(r"(per|each|pro|je|par|por|na|/)\s*(port|path|branch|trx|tx\b|transceiver|connector|channel)")
+_PER_CARRIER = re.compile(r"(per|each|pro|je|par|por|na|/)\s*(carrier|träger|porteuse|portadora)")
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
