@@ -13,7 +13,7 @@ from speccheck.batch.work import Rules
 from speccheck.records import Settings, Tender
 from speccheck.records.evaluations import Bid, Evaluation
 from speccheck.report.comparison import write_comparison
-from speccheck.tender.ranking import standings, swings, weight_notes, weights
+from speccheck.tender.ranking import standings, swings, weight_notes, weight_table, weights
 
 __all__ = ["BidFile", "Evaluation", "assess_many", "find_bids"]
 
@@ -75,6 +75,7 @@ def evaluate(bids: Sequence[Bid], tender: Tender | None, settings: Settings, dig
         tender=tender,
         standings=placed,
         swings=swings(placed, bids, requirements),
+        weights=weight_table(requirements),
         points_possible=sum(weights(requirements).values()),
         weighted=any(r.weight is not None for r in requirements),
         rules_sha256=digest,

@@ -68,6 +68,14 @@ class Standing:
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
+class Weight:
+    """Weight of one desirable row of the tender and the requirements that must all pass to earn it."""
+
+    requirements: tuple[int, ...]
+    weight: float
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
 class Swing:
     """How far one weight must move for a neighbour to draw level, all other weights kept."""
 
@@ -87,6 +95,7 @@ class Evaluation:
     tender: Tender | None = None
     standings: tuple[Standing, ...] = ()
     swings: tuple[Swing, ...] = ()
+    weights: tuple[Weight, ...] = ()
     points_possible: float = 0.0
     weighted: bool = False
     rules_sha256: str = ""

@@ -210,17 +210,13 @@ def _ends(value: Value | None) -> tuple[Content, Content]:
 def _points(view: Comparison) -> Table:
     """Weights and shares of the offers with a place; the last row sums them by a live formula."""
     placed = [column for column in view.columns if column.place][:_MOST_MATRIX_COLUMNS]
-    weighted = [
-        (i, r) for i, r in enumerate(view.evaluation.tender.requirements if view.evaluation.tender else ())
-        if r.level is Level.DESIRABLE and r.operator not in ("rule", "after award", "information")
-    ]  # fmt: skip
+    requirements = view.evaluation.tender.requirements if view.evaluation.tender else ()
     rows: list[Sequence[Content]] = []
-    for index, requirement in weighted:
-        weight = (requirement.weight or 0.0) if view.evaluation.weighted else 1.0
-        shares = [float(_earns(column, index)) for column in placed]
-        rows.append(
-            (requirement.clause, _demand(view, requirement), Rich(value=weight, look="entry"), *shares)
-        )
+    for one in view.evaluation.weights:
+        demanded = [requirements[place] for place in one.requirements]
+        shares = [float(all(_earns(column, place) for place in one.requirements)) for column in placed]
+        demands = "; ".join(_demand(view, requirement) for requirement in demanded)
+        rows.append((demanded[0].clause, demands, Rich(value=one.weight, look="entry"), *shares))
     last = len(rows) + 1
     sums: list[Content] = [
         Rich(

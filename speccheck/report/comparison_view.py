@@ -13,7 +13,7 @@ from speccheck.report.formats import Numbers
 
 MOST_COLUMNS = 60
 """Offers a page can show; the workbook and the JSON always hold all of them."""
-COLUMNS_PER_TABLE = 6
+COLUMNS_PER_TABLE = 5
 MOST_SWINGS = 12
 
 _SEVERITY = (

@@ -1,6 +1,6 @@
 """Points of desirable requirements, the order they give, and how far a weight must move to change it.
 
-A requirement earns its whole weight when every one of its rows passes and nothing otherwise, so that
+A row of the tender earns its whole weight when every one of its rows passes and nothing otherwise, so that
 points can be redone by hand from the table. A rejected offer has no place; nothing averages a
 mandatory failure away.
 """
@@ -11,38 +11,58 @@ from collections.abc import Iterable, Iterator, Mapping, Sequence
 from itertools import pairwise
 
 from speccheck.records import Level, Outcome, Requirement
-from speccheck.records.evaluations import Bid, Offer, Standing, Swing
+from speccheck.records.evaluations import Bid, Offer, Standing, Swing, Weight
 from speccheck.tender.grading import PASSING
 
 _LEAST_GAIN = 1e-9
-_NO_POINTS = ("rule", "after award", "information")
+_NO_POINTS = ("rule", "after award", "information", "evidence", "baseline", "condition")
+
+
+def groups(requirements: Sequence[Requirement]) -> Mapping[int, tuple[int, ...]]:
+    """Desirable requirements that earn points, by the row of the tender they stand in.
+
+    One row can make several demands (height, width and depth); they share its weight, keyed by the
+    place of the first.
+    """
+    rows: dict[tuple[str, str], list[int]] = {}
+    for place, requirement in enumerate(requirements):
+        if requirement.level is Level.DESIRABLE and requirement.operator not in _NO_POINTS:
+            rows.setdefault((str(requirement.where), requirement.clause), []).append(place)
+    return {places[0]: tuple(places) for places in rows.values()}
 
 
 def weights(requirements: Sequence[Requirement]) -> Mapping[int, float]:
-    """Weight of each desirable requirement by its place; 1 each where the tender gives none."""
-    desirable = {
-        i: r.weight
-        for i, r in enumerate(requirements)
-        if r.level is Level.DESIRABLE and r.operator not in _NO_POINTS
-    }
-    if all(weight is None for weight in desirable.values()):
-        return dict.fromkeys(desirable, 1.0)
-    return {i: weight or 0.0 for i, weight in desirable.items()}
+    """Weight of each group; 1 each where the tender gives none."""
+    given = {first: requirements[first].weight for first in groups(requirements)}
+    if all(weight is None for weight in given.values()):
+        return dict.fromkeys(given, 1.0)
+    return {first: weight or 0.0 for first, weight in given.items()}
 
 
-def earned(offer: Offer, weighted: Mapping[int, float]) -> Mapping[int, float]:
-    """Share (0 or 1) of each weight that an offer earns."""
+def weight_table(requirements: Sequence[Requirement]) -> tuple[Weight, ...]:
+    """The weights as records, in tender order."""
+    weighted = weights(requirements)
+    return tuple(
+        Weight(requirements=places, weight=weighted[first]) for first, places in groups(requirements).items()
+    )
+
+
+def earned(offer: Offer, requirements: Sequence[Requirement]) -> Mapping[int, float]:
+    """Share (0 or 1) of each group's weight that an offer earns: 1 where every row of it passes."""
     rows: dict[int, list[bool]] = {}
     for cell in offer.cells:
         rows.setdefault(cell.requirement, []).append(cell.verdict in PASSING)
-    return {i: float(bool(rows.get(i)) and all(rows[i])) for i in weighted}
+    return {
+        first: float(all(rows.get(place) and all(rows[place]) for place in places))
+        for first, places in groups(requirements).items()
+    }
 
 
 def standings(bids: Sequence[Bid], requirements: Sequence[Requirement]) -> tuple[Standing, ...]:
     """Offers that are not rejected, most points first; equal points share a place."""
     weighted = weights(requirements)
     scored = [
-        (sum(weighted[i] * share for i, share in earned(offer, weighted).items()), b, o)
+        (sum(weighted[i] * share for i, share in earned(offer, requirements).items()), b, o)
         for b, o, offer in _offers(bids)
         if offer.outcome is not Outcome.REJECT
     ]
@@ -68,8 +88,8 @@ def swings(
         lead = ahead.points - behind.points
         if lead <= _LEAST_GAIN:
             continue
-        first = earned(bids[ahead.bid].offers[ahead.offer], weighted)
-        second = earned(bids[behind.bid].offers[behind.offer], weighted)
+        first = earned(bids[ahead.bid].offers[ahead.offer], requirements)
+        second = earned(bids[behind.bid].offers[behind.offer], requirements)
         for i, weight in weighted.items():
             difference = first[i] - second[i]
             if difference == 0:
@@ -85,14 +105,17 @@ def swings(
 
 def weight_notes(requirements: Sequence[Requirement]) -> tuple[str, ...]:
     """What a reader must know of the weights."""
-    given = [r.weight for r in requirements if r.level is Level.DESIRABLE and r.weight is not None]
-    if not given:
-        return ("The tender gives no weights; each desirable requirement counts one point.",)
-    notes = [f"The weights of desirable requirements add up to {sum(given):g}."]
-    ignored = [r.clause for r in requirements if r.level is not Level.DESIRABLE and r.weight]
-    if ignored:
-        listed = ", ".join(dict.fromkeys(ignored))
-        notes.append(f"Weights of clauses {listed} are not counted: only desirable requirements earn points.")
+    if all(requirements[first].weight is None for first in groups(requirements)):
+        return ("The tender gives no weights; each desirable row counts one point.",)
+    notes = [f"The weights of desirable rows add up to {sum(weights(requirements).values()):g}."]
+    counted = {place for places in groups(requirements).values() for place in places}
+    ignored = [r.clause for place, r in enumerate(requirements) if r.weight and place not in counted]
+    others = [
+        clause for clause in dict.fromkeys(ignored) if clause not in {requirements[p].clause for p in counted}
+    ]
+    if others:
+        listed = ", ".join(others)
+        notes.append(f"Weights of clauses {listed} are not counted: only desirable figures earn points.")
     return tuple(notes)
 
 

@@ -9,6 +9,7 @@ from speccheck.records.evaluations import Offer, OfferCell
 
 _MOST_REASONS = 8
 _LONGEST_TEXT = 200
+_NAMED = ("text", "any of", "all of", "evidence", "information")
 
 
 def summarise(assessment: Assessment) -> tuple[Offer, ...]:
@@ -50,6 +51,8 @@ def _cell(row: MatrixRow, place: int) -> OfferCell:
 
 
 def _value(row: MatrixRow, requirement: Requirement) -> Value | None:
+    if requirement.operator in _NAMED and not isinstance(row.offered_in_unit, tuple):
+        return None
     if row.offered_in_unit is not None:
         return row.offered_in_unit
     same = row.offered is not None and row.offered.unit == requirement.unit
