@@ -45,11 +45,12 @@ def page(browser: Browser, file: Path) -> Browser:
 def shown(page: Browser, selector: str) -> int:
     """How many elements of a selector take room on the screen."""
     return page.evaluate(
-        f"[...document.querySelectorAll({json.dumps(selector)})].filter(e => e.getClientRects().length).length"
+        f"[...document.querySelectorAll({json.dumps(selector)})]"
+        ".filter(element => element.getClientRects().length).length"
     )
 
 
-def test_no_request_leaves_the_page_and_its_policy_blocks_none_of_its_own(page: Browser, file: Path) -> None:
+def test_no_request_leaves_the_page_and_its_policy_blocks_nothing(page: Browser, file: Path) -> None:
     assert [url for url in page.requests if not url.startswith("data:font/")] == [file.as_uri()]
     assert not page.complaints
 
@@ -74,11 +75,11 @@ def test_filters_hide_and_show_by_verdict_and_level(page: Browser) -> None:
     assert shown(page, rows) == 12
     page.evaluate("document.querySelector('input[value=meets]').click()")
     assert shown(page, rows) == 8
-    assert "filtered out" in page.evaluate("document.querySelector('.tools [role=status]').textContent")
+    assert "filtered out" in page.evaluate("document.querySelector('[role=status]').textContent")
     page.evaluate("document.querySelector('input[value=desirable]').click()")
     assert shown(page, rows) == 7
     page.evaluate(
-        "for (const box of document.querySelectorAll('.tools input[type=checkbox]:not(:checked)')) box.click()"
+        "document.querySelectorAll('.tools input:not(:checked)[type=checkbox]').forEach(box => box.click())"
     )
     assert shown(page, rows) == 12
 
