@@ -17,12 +17,14 @@ from speccheck.report.review import review_bytes
 from speccheck.tender import judge, outcome
 
 SUFFIXES = {
-    "json": ".result.json",
-    "xlsx": ".review.xlsx",
     "html": ".report.html",
+    "xlsx": ".review.xlsx",
+    "json": ".result.json",
     "pdf": ".report.pdf",
 }
-"""Ending of each output, in the order of writing: the PDF carries what was written before it."""
+"""Ending of each output, in the order of writing: the PDF, which may be impossible, last."""
+
+FORMATS = tuple(SUFFIXES)
 
 
 def assess(path: str | Path, *, tender: Tender | None = None, settings: Settings | None = None) -> Assessment:

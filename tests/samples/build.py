@@ -15,7 +15,7 @@ from openpyxl.styles import Alignment, Font, PatternFill
 from openpyxl.worksheet.worksheet import Worksheet
 
 SAMPLES = Path(__file__).parents[2] / "sample_specs"
-WRITTEN = dt.datetime(2026, 3, 2, 9, 0)
+WRITTEN = dt.datetime(2026, 3, 2, 9, 0)  # noqa: DTZ001  a workbook stores local time
 HEAD = Font(bold=True)
 SHADE = PatternFill("solid", fgColor="E7E9EC")
 

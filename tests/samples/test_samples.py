@@ -48,9 +48,13 @@ def test_outcome_and_everything_that_does_not_fit(stem: str, name: str, expected
     panel = panel_of(stem, name)
     found = {f.check: f.verdict.value for f in panel.findings if f.verdict is not Fit.FITS}
     surprising = {
-        check: verdict for check, verdict in found.items() if expected["not_fitting"].get(check, "") not in (verdict, "any")
+        check: verdict
+        for check, verdict in found.items()
+        if expected["not_fitting"].get(check, "") not in (verdict, "any")
     }
-    vanished = {check for check, verdict in expected["not_fitting"].items() if verdict != "any" and check not in found}
+    vanished = {
+        check for check, verdict in expected["not_fitting"].items() if verdict != "any" and check not in found
+    }
     assert (surprising, vanished) == ({}, set())
     assert panel.outcome.value == expected["outcome"], panel.reasons
     assert panel.exposure is not None
@@ -87,4 +91,4 @@ def test_rejected_clauses_and_innocent_readings(stem: str, name: str, expected: 
     if "innocent_reading" in expected:
         misfits = [f for f in panel.findings if f.verdict is Fit.DOES_NOT_FIT]
         assert all(expected["innocent_reading"] in f.conventions[0].name for f in misfits)
-        assert all(f.question and "?" in f.question or "confirm" in f.question for f in misfits)
+        assert all((f.question and "?" in f.question) or "confirm" in f.question for f in misfits)

@@ -1,0 +1,211 @@
+"""Arguments, exit codes and what goes to the screen; no logic."""
+
+from __future__ import annotations
+
+import sys
+from enum import IntEnum
+from pathlib import Path
+
+import click
+
+from speccheck import __version__, screen
+from speccheck.atomic import write_bytes_atomic
+from speccheck.batch import assess_many
+from speccheck.batch.lone_tender import has_requirements, lone_tender
+from speccheck.checks.registry import CHECKS
+from speccheck.errors import OutputError, UnusableInputError
+from speccheck.intake import read_submission
+from speccheck.intake.tender_book import read_tender
+from speccheck.pipeline import FORMATS
+from speccheck.records import Assessment, Outcome, Tender
+from speccheck.records.evaluations import Bid, Evaluation
+from speccheck.report.form import write_form
+from speccheck.report.listing import listing
+from speccheck.report.machine import from_json
+from speccheck.report.readbook import read_json, write_read_book
+from speccheck.report.tender_listing import tender_listing
+from speccheck.revisions import compare as compare_results
+from speccheck.revisions import comparison_text
+
+
+class Exit(IntEnum):
+    """Exit codes of every command."""
+
+    ACCEPTABLE = 0
+    CLARIFY_OR_REJECT = 1
+    WRONG_USAGE = 2
+    UNUSABLE_INPUT = 3
+
+
+EXIT_CODES = """\b
+Exit codes:
+  0  everything is acceptable
+  1  something to clarify or to reject
+  2  wrong usage
+  3  an input could not be used (the rest was still done)"""
+
+_path = click.Path(path_type=Path)
+
+
+def parse_formats(_context: click.Context, _option: click.Parameter, text: str) -> tuple[str, ...]:
+    """The formats asked for, in the order of FORMATS; BadParameter names an unknown one."""
+    wanted = {part.strip().lower() for part in text.split(",") if part.strip()}
+    unknown = sorted(wanted - set(FORMATS))
+    if unknown or not wanted:
+        found = ", ".join(unknown) or text
+        raise click.BadParameter(f"found '{found}'; expected some of {', '.join(FORMATS)}")
+    return tuple(name for name in FORMATS if name in wanted)
+
+
+@click.group(epilog=EXIT_CODES, context_settings={"help_option_names": ["-h", "--help"]})
+@click.version_option(__version__, prog_name="speccheck")
+def cli() -> None:
+    """Vet antenna-panel bids on paper: read the workbooks, recompute what physics and arithmetic
+    allow, judge the tender's requirements, write the report."""
+
+
+def main() -> None:
+    """Run the command line; an input or output that cannot be used ends it with one message."""
+    try:
+        cli(standalone_mode=True)
+    except (UnusableInputError, OutputError) as error:
+        click.echo(f"speccheck: {error}", err=True)
+        sys.exit(Exit.UNUSABLE_INPUT)
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("bids", nargs=-1, required=True, type=_path)
+@click.option("--tender", "tender_file", type=_path, help="The buyer's workbook.")
+@click.option("--out", default="reports", show_default=True, type=_path, help="Folder for the outputs.")
+@click.option(
+    "--formats",
+    default=",".join(FORMATS),
+    show_default=True,
+    callback=parse_formats,
+    help="Which outputs to write, separated by commas.",
+)
+@click.option("--jobs", default=1, show_default=True, type=click.IntRange(1, 64), help="Processes to use.")
+@click.option("--resume", is_flag=True, help="Keep what is done of bids whose input and rules are unchanged.")
+def check(
+    *,
+    bids: tuple[Path, ...],
+    tender_file: Path | None,
+    out: Path,
+    formats: tuple[str, ...],
+    jobs: int,
+    resume: bool,
+) -> None:
+    """Vet the BIDS (files or folders) and write the reports.
+
+    More than one bid or panel adds the comparison of the offers. Where a folder of bids holds one
+    workbook with a sheet Requirements and no --tender is given, that workbook is the tender.
+    """
+    tender_file, tender = _tender(bids, tender_file)
+    evaluation = assess_many(
+        bids,
+        out=out,
+        tender=tender,
+        tender_file=tender_file,
+        formats=formats,
+        jobs=jobs,
+        resume=resume,
+        progress=_show_progress,
+    )
+    if not evaluation.bids:
+        raise click.UsageError(
+            f"no bid found in {', '.join(map(str, bids))}: name a workbook or a folder with some"
+        )
+    click.echo()
+    click.echo(screen.outcome_table(evaluation))
+    click.echo(f"\nOutputs in {out}")
+    sys.exit(_exit_code(evaluation))
+
+
+def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | None, Tender | None]:
+    if tender_file is None:
+        tender_file = lone_tender(bids)
+        if tender_file is None:
+            return None, None
+        click.echo(f"Tender: {tender_file} (found among the bids; name another with --tender)")
+    tender = read_tender(tender_file)
+    for finding in tender.findings:
+        click.echo(f"  {finding.summary}")
+    return tender_file, tender
+
+
+def _show_progress(done: int, total: int, bid: Bid) -> None:
+    click.echo(screen.progress_line(done, total, bid))
+
+
+def _exit_code(evaluation: Evaluation) -> Exit:
+    if any(bid.error for bid in evaluation.bids):
+        return Exit.UNUSABLE_INPUT
+    outcomes = {offer.outcome for bid in evaluation.bids for offer in bid.offers}
+    return Exit.ACCEPTABLE if outcomes <= {Outcome.ACCEPTABLE} else Exit.CLARIFY_OR_REJECT
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("bid", type=_path)
+@click.option("--out", type=_path, help="Folder for the same as workbook and JSON.")
+@click.option("--tender", "tender_file", type=_path, help="The buyer's workbook, for its Headings sheet.")
+def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
+    """Show how each cell of BID was understood; nothing is judged.
+
+    Of a tender workbook it shows each wording beside its reading.
+    """
+    if has_requirements(bid):
+        click.echo(tender_listing(read_tender(bid)))
+        return
+    headings = read_tender(tender_file).settings.headings if tender_file else {}
+    submission = read_submission(bid, headings=headings)
+    click.echo(listing(submission))
+    if out is not None:
+        out.mkdir(parents=True, exist_ok=True)
+        write_read_book(submission, out / f"{bid.stem}.reading.xlsx")
+        write_bytes_atomic(out / f"{bid.stem}.reading.json", read_json(submission).encode())
+        click.echo(f"\nWritten to {out}")
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("target", metavar="OUT.xlsx", type=_path)
+@click.option("--tender", "tender_file", type=_path, help="Ask for exactly what this tender requires.")
+def form(target: Path, tender_file: Path | None) -> None:
+    """Write a blank bid form to hand to bidders."""
+    write_form(target, read_tender(tender_file) if tender_file else None)
+    click.echo(f"Written: {target}")
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("slug", required=False)
+def explain(slug: str | None) -> None:
+    """Tell what a check does: formula, inputs, assumptions, source, worked example."""
+    if slug is None:
+        click.echo(screen.list_of_checks(CHECKS.values()))
+        return
+    if slug not in CHECKS:
+        raise click.UsageError(f"no check '{slug}'; speccheck explain lists them all")
+    click.echo(screen.explanation(CHECKS[slug]))
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("old", type=_path)
+@click.argument("new", type=_path)
+def compare(old: Path, new: Path) -> None:
+    """Show what changed between two results (JSON) of one bid."""
+    revision = compare_results(_stored(old), _stored(new))
+    click.echo(comparison_text(revision))
+    same = not revision.changes and revision.old_sha256 == revision.new_sha256
+    sys.exit(Exit.ACCEPTABLE if same else Exit.CLARIFY_OR_REJECT)
+
+
+def _stored(path: Path) -> Assessment:
+    try:
+        text = path.read_text(encoding="utf-8")
+    except (OSError, UnicodeDecodeError) as error:
+        raise UnusableInputError(
+            str(path),
+            found=f"a file that cannot be read as text ({error})",
+            expected="a .result.json file as written by speccheck check",
+            remedy="check the name and give the JSON, not the report",
+        ) from error
+    return from_json(text, str(path))

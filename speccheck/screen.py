@@ -1,0 +1,94 @@
+"""What the command line shows: a line a bid, a short table, the explanation of a check."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable, Sequence
+from textwrap import indent
+
+from speccheck.checks.registry import Check
+from speccheck.dictionary import parameters
+from speccheck.records import Outcome
+from speccheck.records.evaluations import Bid, Evaluation
+from speccheck.text import plain
+
+_SYMBOLS = {Outcome.ACCEPTABLE: "✓", Outcome.CLARIFY: "?", Outcome.REJECT: "×"}
+_WIDTH = 100
+
+
+def progress_line(done: int, total: int, bid: Bid) -> str:
+    """One line about a bid that has just been done."""
+    count = f"[{done:>{len(str(total))}}/{total}]"
+    name = plain(bid.file, 60)
+    if bid.error:
+        return f"{count} {name}: not used\n    {plain(bid.error, 600)}"
+    outcomes = ", ".join(f"{plain(o.panel, 40)} {o.outcome.value}" for o in bid.offers[:4])
+    more = f" and {len(bid.offers) - 4} more" if len(bid.offers) > 4 else ""
+    state = " (unchanged, kept)" if bid.resumed else ""
+    note = f"\n    {bid.note}" if bid.note else ""
+    return f"{count} {name}: {outcomes or 'no panel'}{more}{state}{note}"
+
+
+def outcome_table(evaluation: Evaluation) -> str:
+    """Panel, outcome and what blocks, one row a panel; unusable bids last."""
+    rows = [
+        (plain(offer.panel, 28), f"{_SYMBOLS[offer.outcome]} {offer.outcome.value}", _blocks(offer.reasons))
+        for bid in evaluation.bids
+        for offer in bid.offers
+    ]
+    rows += [
+        (plain(bid.file, 28), "! not used", "see the message above") for bid in evaluation.bids if bid.error
+    ]
+    return _table(("Panel", "Outcome", "What blocks"), rows)
+
+
+def _blocks(reasons: Sequence[str]) -> str:
+    if not reasons:
+        return "nothing"
+    more = f" (+{len(reasons) - 1} more)" if len(reasons) > 1 else ""
+    return plain(reasons[0], 200) + more
+
+
+def _table(head: tuple[str, ...], rows: list[tuple[str, ...]]) -> str:
+    widths = [max(len(row[i]) for row in [head, *rows]) for i in range(len(head) - 1)]
+    last = max(20, _WIDTH - sum(widths) - 2 * len(widths))
+
+    def line(row: Sequence[str]) -> str:
+        cells = [cell.ljust(width) for cell, width in zip(row, widths, strict=False)]
+        end = row[-1] if len(row[-1]) <= last else row[-1][: last - 1] + "…"
+        return "  ".join([*cells, end]).rstrip()
+
+    rule = "─" * min(_WIDTH, sum(widths) + 2 * len(widths) + last)
+    return "\n".join([line(head), rule, *(line(row) for row in rows)])
+
+
+def list_of_checks(checks: Iterable[Check]) -> str:
+    """Every check with its slug and title, by family."""
+    lines: list[str] = []
+    family = ""
+    for check in checks:
+        if check.family != family:
+            family = check.family
+            lines += ["", family.replace("_", " ")]
+        lines.append(f"  {check.slug:<34} {check.title}")
+    return "\n".join([*lines[1:], "", "speccheck explain SLUG tells more of one."])
+
+
+def explanation(check: Check) -> str:
+    """All there is to know about a check."""
+    names = parameters()
+
+    def labels(keys: Sequence[str]) -> str:
+        return ", ".join(names[key].label for key in keys) or "none"
+
+    scope = "each band of a panel" if check.scope == "band" else "the panel as a whole"
+    return "\n".join(
+        [
+            f"{check.title}  ({check.slug})",
+            f"Judges      {scope}",
+            f"Needs       {labels(check.needs)}",
+            f"Uses        {labels(check.optional)}",
+            f"Source      {check.source}",
+            "",
+            indent(check.explanation, "  "),
+        ]
+    )
