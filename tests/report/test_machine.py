@@ -3,62 +3,20 @@
 import dataclasses
 import json
 import math
-import typing
 from importlib import resources
 
 import jsonschema
 import pytest
 from hypothesis import HealthCheck, Phase, given, settings
-from hypothesis import strategies as st
+from report.strategies import assessments
 
 from speccheck import records
 from speccheck.errors import UnusableInputError
-from speccheck.records import Assessment, Curve, Drawing, MirrorSheet, PanelAssessment, Reading, Value
+from speccheck.records import Curve, Drawing, MirrorSheet, Reading
 from speccheck.report.machine import from_json, to_json
 
 SCHEMA = json.loads(resources.files("speccheck").joinpath("data/result.schema.json").read_text("utf-8"))
 VALIDATOR = jsonschema.Draft202012Validator(SCHEMA)
-
-numbers = st.floats(allow_nan=False, allow_infinity=False)
-values = st.one_of(numbers, st.tuples(numbers, numbers), st.text(max_size=8))
-LEAVES = {
-    str: st.text(max_size=8),
-    float: numbers,
-    int: st.integers(0, 2**53),
-    bool: st.booleans(),
-}
-
-
-def of(hint):  # noqa: PLR0911 - one line a kind of hint
-    """A strategy for one type hint of a record, few items a list."""
-    origin, arguments = typing.get_origin(hint), typing.get_args(hint)
-    if hint == Value:
-        return values
-    if hint in LEAVES:
-        return LEAVES[hint]
-    if origin is tuple and arguments[-1] is not Ellipsis:
-        return st.tuples(*map(of, arguments))
-    if origin is tuple:
-        return st.lists(of(arguments[0]), max_size=2).map(tuple)
-    if origin is not None and issubclass(origin, typing.Mapping):
-        return st.dictionaries(st.text(max_size=4), of(arguments[1]), max_size=2)
-    if arguments:
-        return st.one_of(*map(of, arguments))
-    if hint is type(None):
-        return st.none()
-    if dataclasses.is_dataclass(hint):
-        fields = {name: of(part) for name, part in typing.get_type_hints(hint).items()}
-        return st.builds(hint, **fields)
-    return st.sampled_from(list(hint))
-
-
-@st.composite
-def assessments(draw):
-    """Assessments whose submission holds the panels that were judged, as the pipeline makes them."""
-    judged = draw(st.lists(of(PanelAssessment), min_size=1, max_size=2))
-    one = draw(of(Assessment))
-    submission = dataclasses.replace(one.submission, panels=tuple(p.panel for p in judged), mirror=())
-    return dataclasses.replace(one, submission=submission, panels=tuple(judged))
 
 
 @settings(

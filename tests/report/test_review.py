@@ -7,6 +7,8 @@ import zipfile
 
 import openpyxl
 import pytest
+from hypothesis import HealthCheck, Phase, given, settings
+from report.strategies import assessments
 
 from speccheck.errors import OutputError
 from speccheck.records import Assessment, MirrorCell, MirrorSheet, Settings, Submission
@@ -254,3 +256,18 @@ def test_an_empty_submission_still_gives_a_workbook():
 def test_unwritable_place_is_one_message(bid, tmp_path):
     with pytest.raises(OutputError, match="could not be written"):
         write_review(bid, tmp_path / "absent" / "bid.review.xlsx")
+
+
+@settings(
+    max_examples=20,
+    deadline=None,
+    phases=[Phase.explicit, Phase.reuse, Phase.generate],  # shrinking a whole assessment takes minutes
+    suppress_health_check=list(HealthCheck),
+)
+@given(assessments(mirrored=True))
+def test_any_assessment_gives_a_workbook_that_opens_and_runs_nothing(one):
+    book = openpyxl.load_workbook(io.BytesIO(review_bytes(one)))
+    assert len(table(book["Findings"])) == sum(len(panel.findings) for panel in one.panels)
+    for sheet in book:
+        formulas = [cell for row in sheet.iter_rows() for cell in row if cell.data_type == "f"]
+        assert not formulas or sheet.title == "Recomputed"
