@@ -10,7 +10,7 @@ from __future__ import annotations
 
 import functools
 import re
-from collections.abc import Mapping
+from collections.abc import Iterable, Mapping
 from dataclasses import dataclass
 
 from speccheck.dictionary.composites import composite
@@ -80,14 +80,23 @@ def _match_known(text: str, suggest: bool) -> HeadingMatch:
 def _match(text: str, house: Mapping[str, str], suggest: bool) -> HeadingMatch:
     if not text or len(text) > _LONGEST_HEADING or not any(c.isalpha() for c in text):
         return HeadingMatch()
-    body = _NUMBERING.sub("", tidy(split_footnotes(text)[0])).strip(" :;.")
+    body = tidy(split_footnotes(text)[0]).strip(" :;.")
+    if body != (unnumbered := _NUMBERING.sub("", body)):
+        whole = _match_body([Cut(body)], body, house)
+        if whole:
+            return whole
+    found = _match_body(cuts(unnumbered), unnumbered, house)
+    return found or HeadingMatch(suggestions=suggestions(body) if suggest else ())
+
+
+def _match_body(forms: Iterable[Cut], body: str, house: Mapping[str, str]) -> HeadingMatch | None:
     words = fold(body)
     tolerance_of = bool(word_list("tolerance").intersection(words))
-    for cut in cuts(body):
+    for cut in forms:
         found = _look_up(cut.text, house, tolerance_of=tolerance_of)
         if found:
             return _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
-    return HeadingMatch(suggestions=suggestions(body) if suggest else ())
+    return None
 
 
 def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:

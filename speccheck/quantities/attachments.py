@@ -7,13 +7,21 @@ from datetime import date
 
 from speccheck.quantities.content import Quantity
 
+_GENDER = (
+    "female|male|long neck|buchse|stecker|kupplung|femelle|mâle|hembra|macho|femmina|maschio|fêmea|"
+    "żeńskie|męskie|vrouwelijk|mannelijk|socket|jack|plug|f\\b|m\\b"
+)
 # Interfaces by the names of IEC 61169 parts and of the trade; '4.3-10' is a name, not a range.
 _CONNECTOR = re.compile(
-    r"(?:(?<=[xX×*])|(?<![\w.]))(?:(?:din\s*)?(?P<name>4[.,]3\s?[-/]\s?10|7\s?[-/]\s?16|1[.,]5\s?[-/]\s?3[.,]5|2[.,]2\s?[-/]\s?5)(?![\d.])"
-    r"|(?P<letter>N|SMA|SMP|TNC|NEX\s?10|MQ4|MQ5|QMA|BNC|FME|EIA)(?=$|[\s,;)/.-]|-type)(?!\s*\d{2,}))"
-    r"(?:\s*-?\s*(?:din|type|typ))?(?:\s*[,(]?\s*(?P<gender>female|male|long neck|buchse|stecker|kupplung|femelle|mâle|hembra"
-    r"|macho|femmina|maschio|fêmea|żeńskie|męskie|vrouwelijk|mannelijk|socket|jack|plug|f\b|m\b)\)?)?",
-    re.IGNORECASE,
+    rf"""
+    (?:(?<=[xX×*]) | (?<![\w.]))
+    (?:(?:din\s*)?
+       (?P<name>4[.,]3\s?[-/]\s?10 | 7\s?[-/]\s?16 | 1[.,]5\s?[-/]\s?3[.,]5 | 2[.,]2\s?[-/]\s?5)(?![\d.])
+     | (?P<letter>N|SMA|SMP|TNC|NEX\s?10|MQ4|MQ5|QMA|BNC|FME|EIA)(?=$|[\s,;)/.-]|-type)(?!\s*\d{{2,}}))
+    (?:\s*-?\s*(?:din|type|typ))?
+    (?:\s*[,(]?\s*(?P<gender>{_GENDER})\)?)?
+    """,
+    re.IGNORECASE | re.VERBOSE,
 )
 _COUNT_BEFORE = re.compile(
     r"(\d{1,4})\s*(?:[x×*]|ports?|pcs\.?|stk\.?|pieces|connectors?|st\.?)?\s*(?:of\s+|,\s*|:\s*|\(\s*)?$",
@@ -22,32 +30,34 @@ _COUNT_BEFORE = re.compile(
 _COUNT_AFTER = re.compile(
     r"^\s*[(,:x×*]\s*(?:x\s*|×\s*)?(\d{1,4})\s*(?:[x×]|pcs\.?|ports?|off)?\s*\)?", re.IGNORECASE
 )
+_PLUS = r"(?:\+|plus|and|,|;)\s*(\d{1,2})?\s*(?:x|×)?\s*"
 _CALIBRATION = re.compile(
-    r"(?:\+|plus|and|,|;)\s*(\d{1,2})?\s*(?:x|×)?\s*(?:(?:4[.,]3-10|smp|n|mq4)\s*)?\(?(?:cal\b|cal\.|calibration|kalibr\w*)[^,;+]*",
-    re.IGNORECASE,
+    _PLUS + r"(?:(?:4[.,]3-10|smp|n|mq4)\s*)?\(?(?:cal\b|cal\.|calibration|kalibr\w*)[^,;+]*", re.IGNORECASE
 )
-_CONTROL = re.compile(
-    r"(?:\+|plus|and|,|;)\s*(\d{1,2})?\s*(?:x|×)?\s*(?:ret|control|aisg|steuer\w*|8-pin|din-8)[^,;+]*",
-    re.IGNORECASE,
-)
+_CONTROL = re.compile(_PLUS + r"(?:ret|control|aisg|steuer\w*|8-pin|din-8)[^,;+]*", re.IGNORECASE)
 _PORTS = re.compile(
-    r"(\d{1,4})\s*(?:ports?|connectors?|pcs|stk|anschlüsse|connecteurs|puertos|conectores|connettori|porte|portas|złącz\w*|poorten|[x×])?",
+    r"(\d{1,4})\s*(?:ports?|connectors?|pcs|stk|anschlüsse|connecteurs|puertos|conectores|connettori|porte|portas"
+    r"|złącz\w*|poorten|[x×])?",
     re.IGNORECASE,
 )
 _PRODUCT = re.compile(r"^(\d{1,3})\s*[x×*]\s*(\d{1,3})(?:\s*=\s*(\d{1,4}))?(?![\d.,-])")
 
 _TWO = re.compile(
-    r"±\s*45|\+\s*45|45\s*°?\s*/\s*-\s*45|x-?pol|cross-?pol|crossed|dual|slant|zwei|doppel|kreuz|double|croisée|doble|cruzada|doppia|incrociata"
-    r"|dupla|podwójna|krzyżowa|dubbel|kruis|two|±|h\s*[/+&]\s*v|v\s*[/+&]\s*h|horizontal\s*(?:and|&|/|\+)\s*vertical|vertical\s*(?:and|&|/|\+)\s*horizontal"
-    r"|rhcp\s*[/+&]\s*lhcp|lhcp\s*[/+&]\s*rhcp|orthogonal",
-    re.IGNORECASE,
+    r"""
+    ± | \+\s*45 | 45\s*°?\s*/\s*-\s*45 | x-?pol | cross-?pol | crossed | dual | slant | orthogonal | two
+    | zwei | doppel | kreuz | double | croisée | doble | cruzada | doppia | incrociata | dupla | podwójna
+    | krzyżowa | dubbel | kruis | h\s*[/+&]\s*v | v\s*[/+&]\s*h | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
+    | horizontal\s*(?:and|[&/+])\s*vertical | vertical\s*(?:and|[&/+])\s*horizontal
+    """,
+    re.IGNORECASE | re.VERBOSE,
 )
 _ONE = re.compile(
-    r"^(?:single|linear|vertical\w*|vertikal\w*|verticale|pionowa|verticaal|horizontal\w*|v|h|vp|hp|one|circular\w*|rhcp|lhcp|zirkular|einfach|simple)(?:[\s,-]+(?:linear|pol\w*|polari[sz]ed))?\.?$",
+    r"(?:single|linear|vertical\w*|vertikal\w*|verticale|pionowa|verticaal|horizontal\w*|v|h|vp|hp|one|circular\w*"
+    r"|rhcp|lhcp|zirkular|einfach|simple)(?:[\s,-]+(?:linear|pol\w*|polari[sz]ed))?\.?",
     re.IGNORECASE,
 )
 _LEADING_COUNT = re.compile(
-    r"^(\d{1,2})(?!\s*[\d.,°])\s*(?:$|[(x×,;:]|lin|pol|slant|orth|planes?)", re.IGNORECASE
+    r"(\d{1,2})(?!\s*[\d.,°])\s*(?:$|[(x×,;:]|lin|pol|slant|orth|planes?)", re.IGNORECASE
 )
 
 
@@ -95,7 +105,7 @@ def polarisations(text: str) -> float | None:
         return float(leading.group(1))
     if _TWO.search(plain):
         return 2.0
-    return 1.0 if _ONE.match(plain) else None
+    return 1.0 if _ONE.fullmatch(plain) else None
 
 
 def _typed(text: str) -> tuple[float | None, list[str], str]:
@@ -121,8 +131,10 @@ def _typed(text: str) -> tuple[float | None, list[str], str]:
 
 
 def _type_name(match: re.Match[str]) -> str:
-    name = match.group("name") or match.group("letter")
-    name = name.replace(" ", "").replace(",", ".").replace("/", "-") if match.group("name") else name.upper()
+    name = match.group("letter") or ""
+    if match.group("name"):
+        name = match.group("name").replace(" ", "").replace(",", ".").replace("/", "-")
+    name = name.upper()
     return f"{name} {match.group('gender')}" if match.group("gender") else name
 
 

@@ -63,9 +63,10 @@ def answers(unit: str, wanted: str) -> bool:
     return not unit or dimension(unit) in _COMPATIBLE.get(wanted, {wanted})
 
 
-def quantity(claim: Claim, unit: str, *, symmetric: bool = False) -> Quantity:
+def quantity(claim: Claim, unit: str, expected: str = "", *, symmetric: bool = False) -> Quantity:
     """The quantity of a claim; `unit` is the heading's, used where the cell has none.
 
+    `expected` is the unit of the parameter; with an angle beside a gain it says that a tilt is meant.
     `symmetric` reads '±60' as the range -60 to 60, otherwise it is the largest deviation 60.
     """
     amount = claim.amount
@@ -80,7 +81,7 @@ def quantity(claim: Claim, unit: str, *, symmetric: bool = False) -> Quantity:
         sense = "max"
     at: dict[str, float] = {"count": math.prod(claim.factors)} if claim.factors else {}
     for condition in claim.conditions:
-        at |= _at(condition, dimension(own))
+        at |= _at(condition, dimension(own or expected))
     return Quantity(
         value=value,
         unit=own,

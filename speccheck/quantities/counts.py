@@ -1,0 +1,49 @@
+"""Counts: '64T64R', '12x8x2', '192 elements (12x8x2)'."""
+
+from __future__ import annotations
+
+import math
+import re
+from dataclasses import replace
+
+from speccheck.quantities.content import CellContent, Quantity
+from speccheck.quantities.figures import Claim
+
+_TRANSCEIVERS = re.compile(r"(\d{1,4})\s?T\s?[/x-]?\s?(\d{1,4})\s?R(?![a-z])", re.IGNORECASE)
+_FACTORS = re.compile(r"\d{1,3}(?:\s?[×xX*]\s?\d{1,3}){1,2}(?:\s?=\s?(\d{1,5}))?")
+
+
+def special_count(text: str) -> CellContent | None:
+    """Count of a text that is a chain count or a bare product; None for any other text."""
+    chains = _TRANSCEIVERS.search(text)
+    if chains:
+        sent, received = float(chains.group(1)), float(chains.group(2))
+        if sent == received:
+            return CellContent(quantities=(Quantity(value=sent),))
+        pair = (Quantity(value=sent, condition="transmit"), Quantity(value=received, condition="receive"))
+        return CellContent(quantities=pair)
+    product = _FACTORS.fullmatch(text)
+    if not product:
+        return None
+    parts = [float(n) for n in re.findall(r"\d+", text.split("=", maxsplit=1)[0])]
+    stated = product.group(1)
+    total = float(stated) if stated else math.prod(parts)
+    notes = () if stated else (f"the product {text}",)
+    return CellContent(quantities=(Quantity(value=total, at=_factors(parts)),), notes=notes)
+
+
+def count_of_claims(read: list[Claim], quantities: list[Quantity]) -> list[Quantity]:
+    """'192 elements (12x8x2)' is 192; the factors in parentheses go into its conditions."""
+    if not quantities:
+        return quantities
+    first = quantities[0]
+    if len(read) == 2 and read[1].amount.role == "aside" and read[1].factors:
+        return [replace(first, at=_factors([*read[1].factors, read[1].amount.low]))]
+    if read[0].factors:
+        factors = [*read[0].factors, read[0].amount.low]
+        return [replace(first, value=math.prod(factors), at=_factors(factors))]
+    return [first] if all(c.amount.role == "aside" for c in read[1:]) else quantities
+
+
+def _factors(parts: list[float]) -> dict[str, float]:
+    return {f"factor_{i}": part for i, part in enumerate(parts, start=1)}
