@@ -2,8 +2,8 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Sequence
-from textwrap import indent
+from collections.abc import Iterable, Iterator, Sequence
+from textwrap import wrap
 
 from speccheck.checks.registry import Check
 from speccheck.dictionary import parameters
@@ -13,6 +13,7 @@ from speccheck.text import plain
 
 _SYMBOLS = {Outcome.ACCEPTABLE: "✓", Outcome.CLARIFY: "?", Outcome.REJECT: "×"}
 _WIDTH = 100
+_SECTIONS = ("Formula", "Assumptions", "Worked example")
 
 
 def progress_line(done: int, total: int, bid: Bid) -> str:
@@ -89,6 +90,17 @@ def explanation(check: Check) -> str:
             f"Uses        {labels(check.optional)}",
             f"Source      {check.source}",
             "",
-            indent(check.explanation, "  "),
+            *_filled(check.explanation),
         ]
     )
+
+
+def _filled(text: str) -> Iterator[str]:
+    """Paragraphs filled to the width of the screen; a section's name keeps its own line."""
+    for paragraph in text.split("\n\n"):
+        head, _, rest = paragraph.partition("\n")
+        if head.strip() in _SECTIONS:
+            yield f"  {head.strip()}"
+            paragraph = rest
+        yield from wrap(" ".join(paragraph.split()), _WIDTH, initial_indent="    ", subsequent_indent="    ")
+        yield ""
