@@ -20,7 +20,7 @@ VALIDATOR = jsonschema.Draft202012Validator(SCHEMA)
 
 
 @settings(
-    max_examples=25,
+    max_examples=12,
     deadline=None,
     phases=[Phase.explicit, Phase.reuse, Phase.generate],  # shrinking a whole assessment takes minutes
     suppress_health_check=list(HealthCheck),

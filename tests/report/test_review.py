@@ -259,7 +259,7 @@ def test_unwritable_place_is_one_message(bid, tmp_path):
 
 
 @settings(
-    max_examples=20,
+    max_examples=8,
     deadline=None,
     phases=[Phase.explicit, Phase.reuse, Phase.generate],  # shrinking a whole assessment takes minutes
     suppress_health_check=list(HealthCheck),
