@@ -99,8 +99,9 @@ def _filled(text: str) -> Iterator[str]:
     """Paragraphs filled to the width of the screen; a section's name keeps its own line."""
     for paragraph in text.split("\n\n"):
         head, _, rest = paragraph.partition("\n")
-        if head.strip() in _SECTIONS:
+        named = head.strip() in _SECTIONS
+        if named:
             yield f"  {head.strip()}"
-            paragraph = rest
-        yield from wrap(" ".join(paragraph.split()), _WIDTH, initial_indent="    ", subsequent_indent="    ")
+        words = " ".join((rest if named else paragraph).split())
+        yield from wrap(words, _WIDTH, initial_indent="    ", subsequent_indent="    ")
         yield ""
