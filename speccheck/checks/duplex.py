@@ -7,12 +7,13 @@ import re
 from speccheck.checks.bands import TABLES, shown
 from speccheck.checks.cell_text import words
 from speccheck.checks.registry import Case, Judgement, check
-from speccheck.records import Amount, Band, Fit, Reading, Step
+from speccheck.records import Amount, Band, Fit, Panel, Reading, Step
 from speccheck.standards import OperatingBand, operating_bands
 
 _SPAN = r"[^0-9]{0,20}(\d{3,5}(?:\.\d+)?)\s*(?:-|–|−|to|…|\.\.\.?)\s*(\d{3,5}(?:\.\d+)?)"
-_UPLINK = re.compile(r"(?:\bul\b|uplink|\brx\b|receive)" + _SPAN, re.IGNORECASE)
-_DOWNLINK = re.compile(r"(?:\bdl\b|downlink|\btx\b|transmit)" + _SPAN, re.IGNORECASE)
+_UP, _DOWN = r"(?:\bul\b|uplink|\brx\b|receive)", r"(?:\bdl\b|downlink|\btx\b|transmit)"
+_UPLINK_WORD, _DOWNLINK_WORD = re.compile(_UP, re.IGNORECASE), re.compile(_DOWN, re.IGNORECASE)
+_UPLINK, _DOWNLINK = re.compile(_UP + _SPAN, re.IGNORECASE), re.compile(_DOWN + _SPAN, re.IGNORECASE)
 
 
 @check(
@@ -40,20 +41,30 @@ def duplex_order(case: Case) -> Judgement | None:
     for reading in case.panel.readings:
         up, down = _UPLINK.search(words(reading)), _DOWNLINK.search(words(reading))
         if up and down:
-            return _duplex_judgement(_ends(up), _ends(down), reading)
-    return None
+            return _duplex_judgement(_ends(up), _ends(down), (reading,))
+    up_cell, down_cell = _cell(case.panel, _UPLINK_WORD), _cell(case.panel, _DOWNLINK_WORD)
+    if up_cell is None or down_cell is None or up_cell.where == down_cell.where:
+        return None
+    cells = (up_cell, down_cell)
+    return _duplex_judgement((up_cell.low, up_cell.high), (down_cell.low, down_cell.high), cells)
+
+
+def _cell(panel: Panel, word: re.Pattern[str]) -> Reading | None:
+    """The frequency cell whose words name one direction."""
+    cells = (*panel.all("frequency_range"), *panel.all("operating_bands"))
+    return next((r for r in cells if isinstance(r.value, tuple) and word.search(words(r))), None)
 
 
 def _ends(found: re.Match[str]) -> Band:
     return (float(found[1]), float(found[2]))
 
 
-def _duplex_judgement(up: Band, down: Band, reading: Reading) -> Judgement | None:
+def _duplex_judgement(up: Band, down: Band, cells: tuple[Reading, ...]) -> Judgement | None:
     right, turned = _pairs(up, down), _pairs(down, up)
     if not right and not turned:
         return None
     band = (right or turned)[0]
-    from_terminal = reading.at.get("seen_from_terminal") == 1
+    from_terminal = any(cell.at.get("seen_from_terminal") == 1 for cell in cells)
     fits = bool(turned) if from_terminal else bool(right)
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOES_NOT_FIT,
@@ -67,7 +78,7 @@ def _duplex_judgement(up: Band, down: Band, reading: Reading) -> Judgement | Non
         ),
         assumptions=("Uplink is towards the panel, downlink from it.",),
         question="Please confirm which range the panel transmits in and which it receives in.",
-        used=(reading,),
+        used=cells,
     )
 
 

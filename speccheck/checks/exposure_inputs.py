@@ -16,7 +16,7 @@ _ACTIVE = ("transceivers", "conducted_power", "power_per_transceiver", "power_co
 class Radiated:
     """A band at its strongest: power over all ports [W], gain [dBi], EIRP [dBm], and how they were reached.
 
-    `whole_panel` where the power is stated once for a panel of several bands.
+    `whole_panel` where power or ports are stated once for a panel of several bands.
     """
 
     band: Band

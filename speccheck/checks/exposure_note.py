@@ -154,7 +154,8 @@ def _assumptions(panel: Panel, sources: tuple[Radiated, ...], frame: Frame) -> l
         said.append("All bands together: Σ S/S_lim = 1 with every band at its full power on one axis.")
     if any(s.whole_panel for s in sources):
         said.append(
-            "Power is stated once for several bands; each band is taken at that power, which is cautious."
+            "Power or ports are stated once for several bands; each band is taken with all of it, which is "
+            "cautious."
         )
     if len(limits.bases) == 1:
         said.append(f"{limits.title} has no separate level of local power density.")

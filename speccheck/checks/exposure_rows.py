@@ -179,7 +179,7 @@ def distance_steps(sources: tuple[Radiated, ...], frame: Frame) -> tuple[Step, .
             formula = "√(" + " + ".join(f"{r:.2f}²" for r in each) + ")"
             steps.append(Step(f"{population}, {basis}, all bands", formula, round(together, 3), "m"))
             if all(s.whole_panel for s in sources):
-                words = "power stated once, all of it in the band with the longest distance"
+                words = "power and ports stated once, all of it in the band with the longest distance"
                 steps.append(
                     Step(f"{population}, {basis}, if the bands share it", words, round(max(each), 3), "m")
                 )

@@ -43,6 +43,7 @@ class _Cuts:
     top: Floats
     tilts_deg: tuple[float, ...]
     scans_deg: tuple[float, ...]
+    mechanical_deg: tuple[float, ...]
     floor_db: float
 
 
@@ -100,6 +101,7 @@ def _cuts(panel: Panel, source: Radiated, model: Model) -> _Cuts:
         top=np.maximum(ratio(top - top.max()), floor),
         tilts_deg=tilts,
         scans_deg=scans,
+        mechanical_deg=_ends(panel, source, ("mechanical_tilt",)),
         floor_db=floor_db,
     )
 
@@ -140,7 +142,8 @@ def _circle(beams_deg: tuple[float, ...]) -> Floats:
 def _zone(source: Radiated, cuts: _Cuts, population: str, basis: str, front_m: float) -> ExposureZone:
     elevation, azimuth = np.radians(cuts.elevation_deg), np.radians(cuts.azimuth_deg)
     side, top = front_m * np.sqrt(cuts.side), front_m * np.sqrt(cuts.top)
-    ahead, up = side * np.cos(elevation), side * np.sin(elevation)
+    leant = [elevation - np.radians(tilt) for tilt in cuts.mechanical_deg]
+    ahead, up = np.array([[side * np.cos(e), side * np.sin(e)] for e in leant]).swapaxes(0, 1)
     outline = population == PUBLIC and basis == WHOLE_BODY
     return ExposureZone(
         band=source.band,
@@ -153,7 +156,7 @@ def _zone(source: Radiated, cuts: _Cuts, population: str, basis: str, front_m: f
         behind_m=_up(max(-ahead.min(), -(top * np.cos(azimuth)).min())),
         tilts_deg=cuts.tilts_deg,
         scans_deg=cuts.scans_deg,
-        side_view=_outline(ahead, up) if outline else (),
+        side_view=_outline(ahead[0], up[0]) if outline else (),
         top_view=_outline(top * np.cos(azimuth), top * np.sin(azimuth)) if outline else (),
     )
 
@@ -169,9 +172,10 @@ def _up(distance: float) -> float:
 def _words(source: Radiated, cuts: _Cuts) -> str:
     tilts = " to ".join(f"{t:g}°" for t in cuts.tilts_deg)
     scans = " to ".join(f"{s:g}°" for s in cuts.scans_deg)
+    mechanical = " to ".join(f"{m:g}°" for m in cuts.mechanical_deg)
     return (
         f"Around the panel, {mhz(source.band)}: pattern expected of the stated array at mid band, not "
         f"measured; strongest "
         f"direction at the highest EIRP; tilt {tilts}, azimuth {scans}; no direction lower than "
-        f"{cuts.floor_db:g} dB under the beam; panel upright, without mechanical tilt; principal cuts."
+        f"{cuts.floor_db:g} dB under the beam; mechanical tilt {mechanical}; principal cuts."
     )

@@ -33,6 +33,21 @@ def one_port_in_use(panel: Panel, reach: Reach) -> Panel:
     return reread(panel, reach, ("max_power_per_port",), marked(one_port=1))
 
 
+def _less_decibels(offset_db: float) -> Transform:
+    def change(panel: Panel, reach: Reach) -> Panel:
+        return reread(panel, reach, ("eirp",), shifted(-offset_db))
+
+    return change
+
+
+for _over_db in (8, 10):
+    innocent(
+        f"EIRP of the envelope peak, {_over_db} dB above the average",
+        "the EIRP is the average or the envelope peak",
+        "eirp",
+    )(_less_decibels(float(_over_db)))
+
+
 @innocent("VSWR is typical", "the VSWR is typical or guaranteed", "vswr")
 def vswr_typical(panel: Panel, reach: Reach) -> Panel:
     """VSWR marked typical: the guaranteed return loss may be lower than it gives."""

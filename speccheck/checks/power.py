@@ -3,11 +3,10 @@
 from __future__ import annotations
 
 import math
-import re
 
-from speccheck.checks.cell_text import half_digit, words
+from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Case, Judgement, check
-from speccheck.checks.transmit_power import TransmitPower, transmit_power
+from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
 from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, trp_dbm
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
@@ -108,7 +107,7 @@ def _claimed_dbm(eirp: Reading | None, erp: Reading | None) -> tuple[float | Non
     if eirp is None:
         level += HALF_WAVE_DIPOLE_DBI
         notes.append("EIRP is the stated ERP plus 2.15 dB.")
-    if re.search(r"(per|each|pro|je|par|por|na|/)\s*pol", words(stated)):
+    if per_polarisation(stated):
         level += 10 * math.log10(2)
         notes.append("The figure is stated per polarisation; 3.01 dB are added for both.")
     return level, tuple(notes)

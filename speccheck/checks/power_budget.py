@@ -179,8 +179,10 @@ def mains_power_covers_rf(
 
 
 def _usual_duty(case: Case) -> float:
-    """75 % where any band of the panel lies inside a time-division band, else 1."""
-    spans = [b.downlink for b in operating_bands().values() if b.duplex == "TDD" and b.downlink]
+    """75 % where any band of the panel lies inside a time-division band of NR, else 1."""
+    spans = [
+        b.downlink for b in operating_bands().values() if (b.rat, b.duplex) == ("NR", "TDD") and b.downlink
+    ]
     inside = any(low <= b[0] and b[1] <= high for b in case.panel.bands for low, high in spans)
     return _USUAL_TDD_DUTY if inside else 1.0
 
@@ -188,27 +190,32 @@ def _usual_duty(case: Case) -> float:
 @check(
     "power-within-station-class",
     "Power lies within the base-station class named",
-    needs=("panel_type",),
-    about=("panel_type",),
+    needs=(),
+    optional=("panel_type", "standards", "remarks"),
+    about=("panel_type", "standards", "remarks"),
     source="3GPP TS 38.104 Tables 6.2.1-1 and 6.2.1-2 (from memory)",
 )
-def power_within_station_class(case: Case, panel_type: Reading) -> Judgement | None:
+def power_within_station_class(
+    case: Case,
+    panel_type: Reading | None,
+    standards: Reading | None,
+    remarks: Reading | None,
+) -> Judgement | None:
     """Holds the rated power against the limit of the base-station class the bid names.
 
     Formula
     medium range: P per transmitter ≤ 38 dBm; local area: P per transmitter ≤ 24 dBm; wide area: no limit
 
     Assumptions
-    The class is read from the words of the panel type. The limit holds for one carrier; all transmitters are
-    taken as equal. Half a decibel is allowed for rounding.
+    The class is read from the words on type, standards and remarks. The limit holds for one carrier; all
+    transmitters are taken as equal. Half a decibel is allowed for rounding.
 
     Worked example
     A medium-range station of 8 transmitters and 100 W has 12.5 W, 40.97 dBm, each: above 38 dBm, it does
     not fit.
     """
-    limits = [
-        c for c in power_classes() if "per antenna connector" in c.quantity and c.name in words(panel_type)
-    ]
+    said = words(panel_type, standards, remarks)
+    limits = [c for c in power_classes() if "per antenna connector" in c.quantity and c.name in said]
     power = transmit_power(case.panel, case.band)
     count = case.panel.get("transceivers", case.band) or case.panel.get("rf_ports", case.band)
     if not limits or power is None or power.input_rating or count is None or count.nominal < 1:

@@ -8,17 +8,23 @@ from dataclasses import dataclass
 from speccheck.checks.cell_text import half_digit, words
 from speccheck.records import Band, Panel, Reading, Step
 
-_PER_POLARISATION = re.compile(r"(per|each|pro|je|par|por|na|/)\s*pol")
-_PER_PORT = re.compile(r"(per|each|pro|je|par|por|na|/)\s*(port|path|branch|trx|tx\b|transceiver|connector|channel)")
-_PER_CARRIER = re.compile(r"(per|each|pro|je|par|por|na|/)\s*(carrier|träger|porteuse|portadora)")
+_PER = r"(?:\b(?:per|each|pro|je|par|por|na)\b|/)\s*"
+_PER_POLARISATION = re.compile(_PER + r"pol")
+_PER_PORT = re.compile(_PER + r"(?:port|path|branch|trx|tx\b|transceiver|connector|channel)")
+_PER_CARRIER = re.compile(_PER + r"(?:carrier|träger|porteuse|portadora)")
+
+
+def per_polarisation(reading: Reading) -> bool:
+    """Whether the words beside a figure say that it holds for one polarisation."""
+    return bool(_PER_POLARISATION.search(words(reading)))
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class TransmitPower:
     """Power over all ports and both polarisations [W]; `input_rating` where it is what ports accept.
 
-    `low_w` and `high_w` span tolerance and rounding. `whole_panel` where the figure is stated once for a
-    panel that has several bands.
+    `low_w` and `high_w` span tolerance and rounding. `whole_panel` where power or ports are stated once for
+    a panel that has several bands.
     """
 
     nominal_w: float
@@ -51,7 +57,7 @@ def _stated_total(panel: Panel, band: Band | None, key: str) -> TransmitPower | 
     if power is None:
         return None
     said = words(power)
-    if _PER_POLARISATION.search(said):
+    if per_polarisation(power):
         return _times(panel, power, 2, "polarisations", ())
     if _PER_PORT.search(said):
         count = panel.get("transceivers", band) or panel.get("rf_ports", band)
@@ -83,7 +89,7 @@ def _times(
         assumptions=tuple(_assumed(power, of, rating)),
         readings=(power, *counted),
         input_rating=rating,
-        whole_panel=power.band is None and len(panel.bands) > 1,
+        whole_panel=len(panel.bands) > 1 and any(r.band is None for r in (power, *counted)),
     )
 
 

@@ -245,6 +245,15 @@ def test_beside_a_65_degree_sector():
     assert zone.beside_m == pytest.approx(0.384 * zone.front_m, rel=0.03)
 
 
+def test_mechanical_tilt_lowers_the_zone():
+    """Leaning by 10° more takes the beam to 20° below: r·sin 20° by hand."""
+    upright = note_of(COLUMN).around[0]
+    leaning = note_of({**COLUMN, "mechanical_tilt": [0, 10]}).around[0]
+    assert leaning.front_m == upright.front_m
+    assert leaning.below_m >= upright.front_m * math.sin(math.radians(20)) - 0.1
+    assert leaning.above_m == upright.above_m
+
+
 def test_no_zone_without_an_array_and_the_note_says_so():
     note = note_of({key: v for key, v in COLUMN.items() if key != "vertical_element_spacing"})
     assert note.complete
