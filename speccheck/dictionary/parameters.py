@@ -84,12 +84,10 @@ def _toml(name: str) -> dict[str, Any]:
 
 def _parameter(key: str, table: dict[str, Any]) -> Parameter:
     pairs = {name: tuple(table[name]) for name in ("plausible", "possible", "keep") if name in table}
-    examples = tuple(
-        Example(**{**e, "value": tuple(e["value"]) if isinstance(e["value"], list) else e["value"]})
-        for e in table["examples"]
-    )
+    examples = tuple(_example(example) for example in table["examples"])
+    fields: dict[str, Any] = {**table, **pairs, "key": key, "examples": examples}
     try:
-        parameter = Parameter(**{**table, **pairs, "key": key, "examples": examples})
+        parameter = Parameter(**fields)
     except TypeError as error:
         raise ValueError(f"parameter '{key}': {error}") from None
     closed: dict[str, Any] = {"scope": Scope, "direction": Direction, "kind": Kind, "sign": Sign}
@@ -97,3 +95,13 @@ def _parameter(key: str, table: dict[str, Any]) -> Parameter:
         if getattr(parameter, field) not in get_args(allowed):
             raise ValueError(f"parameter '{key}': {field} is {getattr(parameter, field)!r}")
     return parameter
+
+
+def _example(table: dict[str, Any]) -> Example:
+    value = table["value"]
+    return Example(
+        cell=table["cell"],
+        value=tuple(value) if isinstance(value, list) else value,
+        tolerance=table.get("tolerance"),
+        sense=table.get("sense", "nominal"),
+    )

@@ -102,6 +102,8 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
     content = _read_figures(text, wanted)
+    if not content.quantities and not content.rest:
+        content = replace(content, rest=text)
     return replace(content, footnotes=marks, status="declared" if declares(text) else None)
 
 
@@ -131,10 +133,7 @@ def _parse(text: str, wanted: Expected, *, comma: bool) -> CellContent:
     if wanted.kind == "bands":
         quantities = bands(found, names, wanted.unit)
         return CellContent(quantities=tuple(quantities), rest="" if quantities else text)
-    if wanted.kind == "size":
-        quantities = _sizes(found, wanted.unit)
-    else:
-        quantities = _figures(found, wanted)
+    quantities = _sizes(found, wanted.unit) if wanted.kind == "size" else _figures(found, wanted)
     return CellContent(quantities=tuple(quantities), rest=unread_words(found, stray))
 
 

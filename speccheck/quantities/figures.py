@@ -9,7 +9,7 @@ from dataclasses import dataclass, field, replace
 from speccheck.quantities.amounts import Amount
 from speccheck.quantities.content import Quantity, SenseWord
 from speccheck.quantities.units import UnknownUnitError, convert, dimension
-from speccheck.quantities.words import understood
+from speccheck.quantities.words import word_set
 
 _COMPATIBLE = {
     "gain": {"gain", "level"},
@@ -20,9 +20,6 @@ _COMPATIBLE = {
 }
 _RESTATED_WITHIN = 0.02
 _MOST_IN_PRODUCT = 512
-_TILT_WORDS = frozenset(
-    "tilt downtilt tilts dt et edt neigung inclinaison inclinación inclinazione pochylenie".split()
-)
 
 
 @dataclass(slots=True)
@@ -96,7 +93,7 @@ def quantity(claim: Claim, unit: str, expected: str = "", *, symmetric: bool = F
 def unread_words(found: list[Amount], stray: list[str]) -> str:
     """Words of the cell that are not known to qualify a figure."""
     words = itertools.chain(stray, *((*a.before, *a.words) for a in found))
-    return " ".join(w for w in words if w.casefold().rstrip(".") not in understood())
+    return " ".join(w for w in words if w.casefold().rstrip(".") not in word_set("understood"))
 
 
 def _wanted(found: list[Amount], unit: str, expected: str | None) -> str:
@@ -143,8 +140,8 @@ def _plain_claims(values: list[Amount], wanted: str) -> list[Claim]:
             continue
         carriers = bool(factors) and wanted == "carrier level"
         if carriers or amount.role == "at" or not answers(amount.unit, wanted):
-            amount = replace(amount, before=[*amount.before, *(f"{factor:g} ×" for factor in factors)])
-            (result[-1].conditions if result else waiting).append(amount)
+            condition = replace(amount, before=[*amount.before, *(f"{factor:g} ×" for factor in factors)])
+            (result[-1].conditions if result else waiting).append(condition)
         else:
             result.append(Claim(amount, factors, waiting))
             waiting = []
@@ -231,7 +228,7 @@ def _at(condition: Amount, claim_dimension: str) -> dict[str, float]:
         return {"frequency_low_mhz": min(low, high), "frequency_high_mhz": max(low, high)}
     if kind == "angle" and condition.high is None:
         tilt = claim_dimension in ("gain", "angle") or any(
-            w.casefold() in _TILT_WORDS for w in (*condition.words, *condition.before)
+            w.casefold() in word_set("tilt") for w in (*condition.words, *condition.before)
         )
         named = {"tilt_deg" if tilt and not condition.plusminus else "angle_deg": condition.low}
         return named if condition.tolerance is None else {**named, "angle_span_deg": condition.tolerance}

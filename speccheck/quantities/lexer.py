@@ -38,7 +38,6 @@ _TOKEN = re.compile(
     re.VERBOSE,
 )
 _AMOUNT_END = ("num", "unit", "close")
-_SIGNED = {"more": "min", "less": "max"}
 
 
 def tokens(text: str) -> list[Token]:
@@ -70,20 +69,21 @@ def tokens(text: str) -> list[Token]:
 def _token(match: re.Match[str], found: list[Token], text: str) -> Token | None:
     kind, piece = match.lastgroup or "other", match.group()
     before = found[-1].kind if found else ""
-    digit_follows = text[match.end() : match.end() + 2].strip()[:1].isdigit()
-    if kind == "hyphen":
-        if before in ("num", "unit"):
-            return Token("range", piece)
-        return Token("minus" if digit_follows or text[match.end() :][:1] in ".," else "sep", piece)
-    if kind == "about":
-        return Token("range", piece) if before in _AMOUNT_END else Token("statistic", piece, "approximate")
-    if kind in _SIGNED:
-        return Token("min" if kind == "more" else "max", piece)
     if kind == "equal":
         return None
-    if kind == "other":
-        return Token("word", piece)
-    return Token(kind, piece)  # type: ignore[arg-type]
+    if kind == "hyphen":
+        return Token(_hyphen(before, text[match.end() : match.end() + 2]), piece)
+    if kind == "about" and before not in _AMOUNT_END:
+        return Token("statistic", piece, "approximate")
+    plain = {"about": "range", "more": "min", "less": "max", "other": "word"}
+    return Token(plain.get(kind, kind), piece)  # type: ignore[arg-type]
+
+
+def _hyphen(before: str, after: str) -> TokenKind:
+    """A hyphen behind a figure joins a range, before one it is a minus sign, else it separates."""
+    if before in ("num", "unit"):
+        return "range"
+    return "minus" if after.strip()[:1].isdigit() or after[:1] in (".", ",") else "sep"
 
 
 def _phrases(found: list[Token]) -> list[Token]:

@@ -8,7 +8,10 @@ from dataclasses import dataclass
 
 from speccheck.quantities.tidy import tidy
 
-NUMERAL_PATTERN = r"(?:[1-9]\d{0,2}(?:[ ']\d{3})+(?!\d)(?:[.,]\d+)?|\d+(?:[.,']\d+)*|(?<![\w.,])[.,]\d+)(?:[eE][+-]?\d{1,3}(?!\w))?"
+NUMERAL_PATTERN = (
+    r"(?:[1-9]\d{0,2}(?:[ ']\d{3})+(?!\d)(?:[.,]\d+)?|\d+(?:[.,']\d+)*|(?<![\w.,])[.,]\d+)"
+    r"(?:[eE][+-]?\d{1,3}(?!\w))?"
+)
 """Regular expression for an unsigned numeral with any separators."""
 
 _PLAIN = {

@@ -5,7 +5,7 @@ from __future__ import annotations
 import re
 
 from speccheck.quantities.content import StatusWord
-from speccheck.quantities.words import ERROR_VALUES, referrals, statuses
+from speccheck.quantities.words import ERROR_VALUES, referrals, statuses, word_set
 
 _OUTER = re.compile(r"^[\s('\"\[]+|[\s)'\"\],;!]+$")
 _NUMBERED_NOTE = re.compile(
@@ -14,7 +14,6 @@ _NUMBERED_NOTE = re.compile(
 _DECLARATION = re.compile(
     r"\b(?:fully )?(?:compl(?:y|ies|iant)|konform|erfüllt|conforme|cumple|zgodn[ye]|voldoet)\b", re.IGNORECASE
 )
-_ANSWERS = frozenset("yes y no n ja j nein oui o non sí si sì sim não tak t nie nee ok okay c x".split())
 
 
 def status_of(text: str, *, answers_count: bool = True) -> StatusWord | None:
@@ -28,7 +27,7 @@ def status_of(text: str, *, answers_count: bool = True) -> StatusWord | None:
     folded = _OUTER.sub("", text).casefold()
     if folded in ("", "-", "--"):
         return "missing"
-    if not answers_count and folded in _ANSWERS:
+    if not answers_count and folded in word_set("answers"):
         return None
     found = statuses().get(folded) or statuses().get(folded.rstrip("."))
     if found:

@@ -45,8 +45,9 @@ _REPLACEMENTS: tuple[tuple[re.Pattern[str], str], ...] = (
 )
 _POWER_OF_TEN = re.compile(r"\s?[x×·*]\s?10\^?([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+|(?<=\^)-?\d+)")
 _RAISED = re.compile(r"(?<![mM])([⁰¹²³⁴⁵⁶⁷⁸⁹]+)\)?|(?<=[mM])([⁰¹⁴⁵⁶⁷⁸⁹]+)\)?")
+_TRAILING_SIGN = re.compile(r"(?<=\S)\s?(\*{1,3}|†|‡|§|#)\)?$")
 _TRAILING_MARK = re.compile(
-    r"(?<=\S)\s?(\*{1,3}|†|‡|§|#)\)?$|(?<=\S)\s(\d|[a-e])\)$|(?<=\S)\s?[\[(](\d|[a-e])[\])]$"
+    _TRAILING_SIGN.pattern + r"|(?<=\S)\s(\d|[a-e])\)$|(?<=\S)\s?[\[(](\d)[\])]$|(?<=\S)\s[\[(]([a-e])[\])]$"
 )
 _NOTE = re.compile(r"[,;]?\s?[\[(]\s?(?:see )?(?:foot)?note:?\s?(\w{1,3})\s?[\])]$", re.IGNORECASE)
 
@@ -70,6 +71,8 @@ def tidy(text: str) -> str:
 def split_footnotes(text: str, *, bracketed: bool = True) -> tuple[str, tuple[str, ...]]:
     """Raw text without its footnote markers, and the markers.
 
+    With `bracketed` false, '(2)' and '2)' are part of the text, as in '4.3-10 (2)'.
+
     >>> split_footnotes("17.5¹"), split_footnotes("17.5 1)"), split_footnotes("0.5 m²")
     (('17.5', ('1',)), ('17.5', ('1',)), ('0.5 m²', ()))
     """
@@ -84,5 +87,5 @@ def split_footnotes(text: str, *, bracketed: bool = True) -> tuple[str, tuple[st
         body = _POWER_OF_TEN.sub(lambda m: "e" + m.group(1).translate(_POWERS), body)
         body = _RAISED.sub(keep, body)
     body = _NOTE.sub(keep, body)
-    without = _TRAILING_MARK.sub(keep, body)
+    without = (_TRAILING_MARK if bracketed else _TRAILING_SIGN).sub(keep, body)
     return (without.strip(), tuple(marks)) if without.strip() else (text.strip(), ())

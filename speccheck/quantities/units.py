@@ -118,8 +118,8 @@ _SPELLINGS: dict[str, str] = {
     "dBd": "dbd db(d)",
     "dBm": "dbm db(m) dbmw db(mw)",
     "dBW": "dbw db(w)",
-    "pcs": "pcs pc pcs. pieces piece pce stk stk. stück stueck szt szt. sztuk pz pzi pz. uds uds. unidades unités"
-    " stuks st. each ea off qty nos nr unit units",
+    "pcs": "pcs pc pcs. pieces piece pce stk stk. stück stueck szt szt. sztuk pz pzi pz. uds uds. unidades"
+    " unités stuks st. each ea off qty nos nr unit units",
     "λ": "λ lambda lambdas wavelength wavelengths wl λ0",
 }
 
@@ -141,9 +141,15 @@ def unit_name(text: str) -> str:
     >>> unit_name("Degrees"), unit_name("km/hr"), unit_name("parsec")
     ('deg', 'km/h', '')
     """
-    word = text.strip().strip("[]()").strip()
-    word = word.replace("º", "°").replace("Ω", "Ω").casefold()
-    return _NAMES.get(word) or _NAMES.get(word.rstrip(".")) or ""
+    word = text.strip()
+    if word in _LINEAR or word in _OTHER:
+        return word
+    for form in (word, word.strip("[]()").strip()):
+        folded = form.replace("º", "°").replace("\u2126", "Ω").casefold()
+        name = _NAMES.get(folded) or _NAMES.get(folded.rstrip("."))
+        if name:
+            return name
+    return ""
 
 
 def dimension(unit: str) -> str:
@@ -168,8 +174,8 @@ def convert(value: float, unit: str, to_unit: str, *, freq_mhz: float | None = N
     ------
     UnknownUnitError : the units are not of one dimension, or wavelengths come without a frequency
 
-    >>> convert(15, "dBd", "dBi"), convert(12, "in", "mm")
-    (17.15, 304.8)
+    >>> convert(15, "dBd", "dBi"), convert(2, "in", "mm")
+    (17.15, 50.8)
     """
     have, want = _known(unit), _known(to_unit)
     if not have or not want or have == want:

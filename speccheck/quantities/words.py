@@ -53,6 +53,6 @@ def referrals() -> tuple[str, ...]:
 
 
 @functools.cache
-def understood() -> frozenset[str]:
-    """Words that qualify a figure."""
-    return frozenset(_tables()["understood"]["words"])
+def word_set(name: str) -> frozenset[str]:
+    """A plain list of the file: ``understood``, ``tilt``, ``answers``."""
+    return frozenset(_tables()[name]["words"])

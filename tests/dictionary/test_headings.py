@@ -7,7 +7,6 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from speccheck.dictionary import match_heading, parameters, synonyms
-from speccheck.dictionary.folding import fold
 from speccheck.dictionary.index import _claim, index
 
 KNOWN = [

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from datetime import datetime
+from datetime import date
 
 import pytest
 
@@ -136,7 +136,8 @@ def test_bands_are_ranges_or_names(text: str, values: list[object]) -> None:
 
 @pytest.mark.parametrize(
     ("text", "values"),
-    [("1998 x 356 x 115 mm", [1998, 356, 115]), ("1\u202f390 × 160 × 92", [1390, 160, 92]), ("12 × 1", [12, 1]),
+    [("1998 x 356 x 115 mm", [1998, 356, 115]), ("1\u202f390 × 160 × 92", [1390, 160, 92]),
+     ("12 × 1", [12, 1]),
      ("65° x 7°", [65, 7]), ("12 × 2, both columns on one feed", [12, 2]), ("770/260/118", [770, 260, 118])],
 )  # fmt: skip
 def test_sizes_keep_their_order(text: str, values: list[float]) -> None:
@@ -212,7 +213,8 @@ def test_a_tolerance_in_decibels_of_a_power_in_watts() -> None:
         ("TBD", "to be advised"), ("t.b.c.", "to be advised"), ("auf Anfrage", "to be advised"),
         ("à définir", "to be advised"), ("por definir", "to be advised"), ("do ustalenia", "to be advised"),
         ("see note 3", "referred"), ("s. Datenblatt", "referred"), ("voir annexe", "referred"),
-        ("ver anexo 2", "referred"), ("vedi allegato", "referred"), ("patrz karta", "referred"), ("Note 3", "referred"),
+        ("ver anexo 2", "referred"), ("vedi allegato", "referred"), ("patrz karta", "referred"),
+        ("Note 3", "referred"),
         ("comply", "declared"), ("Yes", "declared"), ("erfüllt", "declared"), ("conforme", "declared"),
         ("cumple", "declared"), ("spełnia", "declared"), ("voldoet", "declared"), ("noted", "declared"),
     ],
@@ -269,20 +271,20 @@ def test_a_plausible_range_settles_an_ambiguous_figure_and_says_so() -> None:
 
 
 def test_a_date_in_a_connector_cell_is_undone() -> None:
-    content = read_cell(datetime(2026, 7, 16), kind="connectors")
+    content = read_cell(date(2026, 7, 16), kind="connectors")
     assert content.quantities[0].value == "7-16"
     assert "likely original '7-16'" in content.notes[0]
 
 
 def test_a_date_in_a_tilt_cell_is_never_certain() -> None:
-    content = read_cell(datetime(2026, 2, 12), kind="range")
+    content = read_cell(date(2026, 2, 12), kind="range")
     assert content.quantities[0].value == (2.0, 12.0)
     assert content.quantities[0].alternatives
     assert "likely original '2-12'" in content.notes[0]
 
 
 def test_a_date_in_a_gain_cell_offers_the_plausible_decimal() -> None:
-    (found,) = read_cell(datetime(2026, 5, 17), kind="number", plausible=(5, 28)).quantities
+    (found,) = read_cell(date(2026, 5, 17), kind="number", plausible=(5, 28)).quantities
     assert found.alternatives == (17.5, 5.17)
 
 
