@@ -202,7 +202,8 @@ def _links(rows: Mapping[int, Row]) -> list[tuple[str, Rich]]:
 
 def _footer(imprint: Imprint) -> str:
     """File, revision, page and time of printing; an ampersand of the text is doubled."""
-    return f"&L{plain(imprint.footer, 120).replace('&', '&&')}&C&A, page &P of &N&R&F, printed &D &T"
+    said = plain(imprint.footer, 120).replace("&", "&&")
+    return f"&L&F\n{said}&C&A, page &P of &N&Rprinted &D &T"
 
 
 def _row_heights(table: Table) -> dict[int, float]:

@@ -147,9 +147,8 @@ def test_conveniences_of_every_table(book, name):
     assert sheet.print_title_rows == "$1:$1"
     assert sheet.print_area
     assert sheet.oddFooter.center.text == "&A, page &P of &N"
-    assert sheet.oddFooter.left.text == "DRAFT, bid.xlsx, revision B && 1"
-    assert "&F" in sheet.oddFooter.right.text
-    assert "&T" in sheet.oddFooter.right.text
+    assert sheet.oddFooter.left.text == "&F\nDRAFT, bid.xlsx, revision B && 1"
+    assert sheet.oddFooter.right.text == "printed &D &T"
     assert sheet["A1"].protection.locked
     assert not sheet["A2"].protection.locked
     assert sheet.protection.sheet
