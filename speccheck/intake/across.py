@@ -7,7 +7,7 @@ from dataclasses import dataclass
 
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
-from speccheck.intake.columns import Column, describe, heading_stack
+from speccheck.intake.columns import PLANE_LETTERS, Column, describe, heading_stack
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label, Labels, is_unit, statistic_of
 from speccheck.intake.marks import Marks
@@ -17,6 +17,7 @@ from speccheck.intake.words import column_role
 from speccheck.records import Band
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
+_BRACKETS = re.compile(r"[(\[][^()\[\]]*[)\]]")
 _NAME_KEYS = ("model", "panel_type", "part_number")
 _EXAMPLE = re.compile(r"\s*example\b", re.IGNORECASE)
 _SILENT_ROLES = {"remark": "note", "number": "label", "group": "label", "level": "label", "required": "label"}
@@ -247,7 +248,8 @@ def compose(index: int, stack: list[Cell], labels: Labels) -> tuple[Label, Colum
     words = [
         " ".join(c.text.split())
         for c in stack
-        if not (is_unit(c.text) or is_band_label(c.text) or statistic_of(c.text))
+        if c.text.strip() in PLANE_LETTERS
+        or not (is_unit(c.text) or is_band_label(c.text) or statistic_of(c.text))
     ]
     for text in _combinations(words):
         label = labels.of(text)
@@ -263,5 +265,11 @@ def compose(index: int, stack: list[Cell], labels: Labels) -> tuple[Label, Colum
 def _combinations(words: list[str]) -> list[str]:
     if not words:
         return []
-    joined = [" ".join(words), ", ".join(words), " ".join(reversed(words))] if len(words) > 1 else []
-    return [*joined, *reversed(words)]
+    tails = [words[start:] for start in range(len(words) - 1)]
+    joined = [text for tail in tails for text in (" ".join(tail), ", ".join(tail), _upper_bare(tail))]
+    return [*joined, " ".join(reversed(words)), *reversed(words)]
+
+
+def _upper_bare(words: list[str]) -> str:
+    """Words joined without the brackets of the upper ones: 'HPBW (°)' over 'H' is HPBW H."""
+    return " ".join([*(_BRACKETS.sub("", word).strip() for word in words[:-1]), words[-1]])

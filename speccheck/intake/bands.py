@@ -15,9 +15,7 @@ _DASH = (
     r"\s*(MHz|GHz)?\s*(?:-|–|—|−|‐|‑|~|…|\.{2,3}|÷|\bto\b|\bbis\b|\bà\b|\ba\b|\btot\b|\bdo\b|\baté\b|/)\s*"
 )
 _RANGE = re.compile(_NUMBER + _DASH + _NUMBER + r"(?:\s*(MHz|GHz))?(?![\d°%λ])", re.IGNORECASE)
-_NAME = re.compile(
-    r"(?<![A-Za-z0-9])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])\s?(\d{1,3})(?![\d.A-Za-z])"
-)
+_NAME = re.compile(r"(?<![\w-])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])(\d{1,3})(?![\w.-])")
 _LOWEST_MHZ, _HIGHEST_MHZ = 60.0, 110_000.0
 
 
@@ -92,12 +90,19 @@ def _number(text: str, unit: str) -> float:
     return float(plain.replace(",", "."))
 
 
+_BAND_WORDS = re.compile(
+    r"(?:(?:sub-?)?band|teilband|bande|banda|pasmo|range|frequency|frequenz\w*|fr[ée]quence|frecuencia|frequenza|"
+    r"uplink|downlink|ul|dl|tx|rx|nr|lte|gsm|umts|5g|4g|fdd|tdd|array|cluster|port|ports|[ryblmh]\d{1,2}|[lmh]b\d?|"
+    r"low(?:er)?|mid(?:dle)?|high|upper|and|&|\d{1,2}|[a-h])$",
+    re.IGNORECASE,
+)
+
+
+@lru_cache(maxsize=20_000)
 def is_band_label(text: str) -> bool:
     """Whether a whole text labels a band: only a range or band name, or a band's nickname."""
     found = find_bands(text)
-    if found.spans:
-        rest = re.sub(r"[\s()\[\],;:/&+.–-]+", " ", found.rest).strip()
-        return (len(rest) <= 25 and not any(letter.isdigit() for letter in rest.replace("2", "", 0))) or (
-            is_band_nickname(rest)
-        )
-    return is_band_nickname(text)
+    if not found.spans:
+        return is_band_nickname(text)
+    words = re.sub(r"[\s()\[\],;:/+.–-]+", " ", found.rest).split()
+    return all(_BAND_WORDS.match(word) for word in words) or is_band_nickname(" ".join(words))

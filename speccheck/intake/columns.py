@@ -11,7 +11,9 @@ from speccheck.intake.labels import Label, Labels, is_unit, statistic_of
 from speccheck.intake.words import column_role
 from speccheck.records import Band
 
-VALUE_ROLES = frozenset({"", "offered", "panel", "typical", "minimum", "maximum", "band", "parameter"})
+PLANE_LETTERS = ("H", "V")
+"""Over a column they mean horizontal and vertical, not hours and volts."""
+VALUE_ROLES = frozenset({"", "offered", "panel", "typical", "minimum", "maximum", "parameter"})
 """Roles of columns whose cells may be claims; an empty role is a column named after a panel or band."""
 
 
@@ -69,6 +71,8 @@ def describe(index: int, stack: list[Cell], labels: Labels) -> Column:
     column = Column(index, stack)
     for cell in stack:
         _take(column, cell, labels)
+    if column.role == "band" and (column.band or column.band_name):
+        column.role = ""
     if column.frequency is not None and column.band is None:
         column.band, column.band_cell = labels.of(column.frequency.text).bands.hull, column.frequency
         column.frequency = None
@@ -79,12 +83,14 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
     text = " ".join(cell.text.split())
     statistic = statistic_of(text)
     role = column_role(text) or _leaning(text)
-    if is_unit(text):
+    if text in PLANE_LETTERS:
+        column.words.append(text)
+    elif is_unit(text):
         column.unit = text
     elif statistic:
         column.statistic = statistic
         column.role = column.role or {"min": "minimum", "typ": "typical", "max": "maximum"}[statistic]
-    elif role and role != "band":
+    elif role:
         column.role = role
         bands = find_bands(text)
         if bands.spans and bands.proved:
@@ -127,23 +133,12 @@ def _is_frequency_heading(label: Label) -> bool:
 
 
 _LEANINGS = (
-    (
-        "offered",
-        re.compile(
-            r"\boffer|\bbidder|\btenderer|\bsupplier|\bvendor|angebot|\bofert|\bpropos|aangebod|oferow", re.I
-        ),
-    ),
+    ("remark", r"\bremark|\bcomment|bemerkung|anmerkung|remarque|observa[cç]|uwagi|opmerking|justification"),
+    ("compliance", r"\bcompl(?:y|ies|iance|iant)\b|konformit|conformit"),
+    ("offered", r"\boffer|\bbidder|\btenderer|\bsupplier|\bvendor|angebot|\bofert|\bpropos|aangebod|oferow"),
     (
         "required",
-        re.compile(
-            r"requir|gefordert|anforderung|\bsoll|\bexig|richiest|requerid|wymag|vereist|supersed|\bold\b|previous",
-            re.I,
-        ),
-    ),
-    ("compliance", re.compile(r"\bcompl(?:y|ies|iance|iant)\b|konformit|conformit", re.I)),
-    (
-        "remark",
-        re.compile(r"\bremark|\bcomment|bemerkung|anmerkung|remarque|observa[cç]|uwagi|opmerking", re.I),
+        r"requir|gefordert|anforderung|\bsoll|\bexig|richiest|requerid|wymag|vereist|supersed|previous",
     ),
 )
 
@@ -151,4 +146,4 @@ _LEANINGS = (
 def _leaning(text: str) -> str:
     if any(letter.isdigit() for letter in text):
         return ""
-    return next((role for role, pattern in _LEANINGS if pattern.search(text)), "")
+    return next((role for role, pattern in _LEANINGS if re.search(pattern, text, re.IGNORECASE)), "")

@@ -9,6 +9,7 @@ from speccheck.intake.claims import Claim, Context, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
 from speccheck.intake.down_headings import describe_columns, extend, find_headings
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
+from speccheck.intake.down_row import RowCells, joined_label, row_cells
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
@@ -51,6 +52,7 @@ class DownReader:
         self._columns = describe_columns(self._marks, self._table, self._heading_rows, self._result)
         self._panels = DownPanels(self._marks, self._table, self._columns, self._result)
         self._panels.open(self._names, self._heading_rows)
+        self._section_above()
         first = (self._heading_rows[-1] + 1) if self._heading_rows else self._table.top
         for row in range(min(first, self._table.top), self._table.bottom + 1):
             cells = [
@@ -79,6 +81,16 @@ class DownReader:
         elif not beside:
             return
         self._values(row, label_cell, beside)
+
+    def _section_above(self) -> None:
+        """A band named by the sheet, or alone in the row above the table, holds for all rows."""
+        state, top = self._state, min([*self._heading_rows, self._table.top])
+        above = [c for row in (top - 1, top - 2) for c in self._marks.rows.get(row, ())]
+        title = above[0] if len(above) == 1 and self._grid.name != above[0].text else None
+        if title is not None and is_band_label(title.text) and isinstance(title.raw, str):
+            self._section(title)
+        elif is_band_label(self._grid.name):
+            state.section_band, state.section_name = find_bands(self._grid.name).hull, self._grid.name
 
     def _repeats_heading(self, cells: list[Cell]) -> bool:
         if not self._heading_rows:
@@ -128,85 +140,53 @@ class DownReader:
 
     def _values(self, row: int, label_cell: Cell | None, beside: list[Cell]) -> None:
         state = self._state
-        extra = {role: self._cell_with_role(row, role) for role in ("unit", "condition", "tolerance", "band")}
-        if label_cell is None and row > state.label_bottom and not (extra["condition"] or extra["band"]):
+        extra = row_cells(self._grid, self._columns, row)
+        if label_cell is None and row > state.label_bottom and not (extra.condition or extra.band):
             state.label = None
-        label = state.label
-        if label is not None and not label and extra["condition"] is None:
-            self._unknown_row(label, beside)
-            return
-        if label is None:
-            self._unknown_row(Label(""), beside)
+        label = joined_label(self._marks.labels, state.label, extra.condition)
+        if not label:
+            self._unknown_row(label if state.label is None else state.label, beside)
             return
         self._maybe_new_panel()
         if label.parameters[0] in NAME_KEYS:
             self._name_panel(label, beside)
-        condition = extra["condition"].text if extra["condition"] else ""
-        merged = self._with_condition(label, condition)
-        if not merged:
-            self._unknown_row(label, beside)
-            return
         for cell in beside:
             column = self._columns.get(cell.column)
             if column is None:
                 continue
-            if column.role in VALUE_ROLES and cell is not extra["band"]:
-                self._claim(cell, column, merged, extra)
+            if column.role in VALUE_ROLES and cell is not extra.band:
+                self._claim(cell, column, label, extra)
             else:
                 self._result.mark(cell, "note" if column.role == "remark" else "label")
         self._answers(row)
 
-    def _cell_with_role(self, row: int, role: str) -> Cell | None:
-        for index, column in self._columns.items():
-            if column.role == role and (role != "band" or column.band is None):
-                cell = self._grid.cells.get((row, index))
-                if cell is None and role in ("unit", "band"):
-                    cell = self._grid.covering(row, index)
-                if cell is not None:
-                    return cell
-        return None
-
-    def _with_condition(self, label: Label, condition: str) -> Label:
-        if not condition or is_band_label(condition):
-            return label
-        joined = self._marks.labels.of(f"{label.text} {condition}")
-        if not joined:
-            joined = self._marks.labels.of(f"{label.text}, {condition}")
-        return joined or label
-
-    def _claim(self, cell: Cell, column: Column, label: Label, extra: dict[str, Cell | None]) -> None:
+    def _claim(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> None:
         state = self._state
         draft = self._panels.of(column)
-        condition_cell, band_cell = extra["condition"], extra["band"]
-        condition = condition_cell.text if condition_cell else ""
-        band, name = self._band_of(cell, column, label, condition, band_cell)
+        condition = extra.condition_text
+        band, name = self._band_of(cell, column, label, extra)
         if cell.row == self._panels.model_row and label.parameters[0] in NAME_KEYS:
             self._result.mark(cell, "heading")
             return
         context = Context(
             label=label,
-            unit=extra["unit"].text if extra["unit"] else column.unit,
+            unit=extra.unit(column),
             condition=condition if not find_bands(condition).proved else find_bands(condition).rest,
             statistic=column.statistic,
-            heading=state.label.text if state.label else "",
-            band_name=name,
+            heading=state.label.text if state.label and state.label.text else label.text,
+            band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )
-        claim = Claim(
-            cell, context, band, banded=band is not None or bool(name), tolerance=extra["tolerance"]
-        )
+        claim = Claim(cell, context, band, banded=band is not None or bool(name), tolerance=extra.tolerance)
         draft.claims.append(claim)
         if band is not None and band not in draft.bands:
             draft.bands.append(band)
 
-    def _band_of(
-        self, cell: Cell, column: Column, label: Label, condition: str, band_cell: Cell | None
-    ) -> tuple[Band | None, str]:
+    def _band_of(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> tuple[Band | None, str]:
         if label.bands.spans:
             return label.bands.hull, ""
-        for text in filter(None, (band_cell.text if band_cell else "", condition)):
-            bands = find_bands(text)
-            if bands.proved or is_band_label(text):
-                return bands.hull, "" if bands.hull else text
+        said = _band_said(extra)
+        if said is not None:
+            return said
         span = self._grid.span(cell)
         others = [
             c for i, c in self._columns.items() if span.left < i <= span.right and c.role in VALUE_ROLES
@@ -217,13 +197,16 @@ class DownReader:
             if self._said_once(cell, column):
                 return None, ""
             return column.band, column.band_name if column.band is None else ""
+        return self._of_section()
+
+    def _of_section(self) -> tuple[Band | None, str]:
         state = self._state
         if state.side_name:
-            return state.side_band, state.side_name if state.side_band is None else ""
-        return state.section_band, state.section_name if state.section_band is None else ""
+            return state.side_band, "" if state.side_band else state.side_name
+        return state.section_band, "" if state.section_band else state.section_name
 
     def _said_once(self, cell: Cell, column: Column) -> bool:
-        """A figure in the first of a panel's band columns, the others empty, is said of all: merges get lost."""
+        """A figure in the first of a panel's band columns only is said of all: merges get lost."""
         mine = [c for c in self._columns.values() if c.role in VALUE_ROLES and (c.band or c.band_name)]
         mine = [c for c in mine if self._panels.of(c) is self._panels.of(column)]
         filled = [c for c in mine if self._grid.covering(cell.row, c.index) is not None]
@@ -290,3 +273,12 @@ class DownReader:
                 draft = self._panels.first
                 context = Context(self._state.label, heading=self._state.label.text)
                 draft.claims.append(Claim(said, context, None))
+
+
+def _band_said(extra: RowCells) -> tuple[Band | None, str] | None:
+    """The band a row's own band or condition cell names, if any."""
+    for text in filter(None, (extra.band.text if extra.band else "", extra.condition_text)):
+        bands = find_bands(text)
+        if bands.proved or is_band_label(text):
+            return bands.hull, "" if bands.hull else text
+    return None

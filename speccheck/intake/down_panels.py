@@ -82,7 +82,7 @@ class DownPanels:
             cell = self._marks.grid.covering(self.model_row, column.index)
             if cell is not None:
                 return cell
-        return column.name_cell if column.role in ("", "panel") else None
+        return column.name_cell
 
     def _rows_of(self, keys: frozenset[str]) -> list[int]:
         rows = range(self._table.top, self._table.bottom + 1)

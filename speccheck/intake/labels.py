@@ -7,7 +7,7 @@ from collections.abc import Mapping
 from dataclasses import dataclass, replace
 from functools import cache, lru_cache
 
-from speccheck.dictionary import match_heading, synonyms
+from speccheck.dictionary import match_heading, parameters, synonyms
 from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.words import column_role, fold, is_counting_unit
 from speccheck.quantities.units import unit_name
@@ -16,6 +16,13 @@ FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
 _MOST_MISSES = 10_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
+_NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
+_TILTS = re.compile(
+    r"[,(]?\s*(?:at|@|bei|for|für|à|a|przy|bij|vs\.?)?\s*(?:electrical\s+|el\.\s*)?(?:down-?)?(?:tilts?|neigung|inclinaison)"
+    r"\s*(?:of|=|:)?\s*((?:\d+(?:[.,]\d+)?\s*°?\s*/\s*)+\d+(?:[.,]\d+)?\s*°?)\s*[)]?\s*$",
+    re.IGNORECASE,
+)
+_SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
@@ -34,6 +41,7 @@ class Label:
     statistic: str = ""
     tolerance: bool = False
     how: str = ""
+    tilts: tuple[float, ...] = ()
 
     def __bool__(self) -> bool:
         return bool(self.parameters)
@@ -61,27 +69,39 @@ class Labels:
         if match is None:
             return None
         label = self.of(match[1])
-        return (label, match[2].strip()) if label else None
+        return (label, match[2].strip()) if label and label.parameters != ("remarks",) else None
 
     def _understand(self, text: str) -> Label:
-        words = _runs(text)
-        if len(text) > _LONGEST or not any(_stem(word) in self._vocabulary for word in words):
-            return Label(text)
-        if max(map(len, words)) < 2 and "/" not in text:
-            return Label(text)
-        if self._misses > _MOST_MISSES:
+        if not self._could_be_heading(text):
             return Label(text)
         cleaned = text.strip().rstrip(":").strip()
-        whole = self._match(cleaned)
-        if whole:
-            return whole
-        bands = find_bands(cleaned)
-        if (bands.spans and bands.proved) or (bands.spans and bands.rest):
-            inner = self._match(_tidy(bands.rest))
-            if inner:
-                return replace(inner, text=text, bands=bands)
+        for found in (self._match(cleaned), self._with_tilts(cleaned), self._with_bands(cleaned)):
+            if found:
+                return replace(found, text=text)
         self._misses += 1
-        return replace(whole, text=text)
+        return Label(text)
+
+    def _could_be_heading(self, text: str) -> bool:
+        words = _runs(text)
+        if len(text) > _LONGEST or self._misses > _MOST_MISSES:
+            return False
+        if not any(_stem(word) in self._vocabulary for word in words):
+            return False
+        return max(map(len, words)) > 1 or (len(words) > 1 and _SEVERAL.search(text) is not None)
+
+    def _with_tilts(self, text: str) -> Label:
+        """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""
+        listed = _TILTS.search(text)
+        inner = self._match(text[: listed.start()].strip(" ,;")) if listed else Label(text)
+        if listed is None or not inner:
+            return inner
+        tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1]))
+        return replace(inner, tilts=tilts)
+
+    def _with_bands(self, text: str) -> Label:
+        bands = find_bands(text)
+        inner = self._match(_tidy(bands.rest)) if bands.spans and bands.rest else Label(text)
+        return replace(inner, bands=bands) if inner else inner
 
     def letter(self, text: str) -> Label:
         """A single letter as a heading, such as H for the height; only its neighbours can prove it one."""
@@ -95,6 +115,8 @@ class Labels:
         found = match_heading(text, self._synonyms, suggest=False)
         if not found.exact or not found.parameters:
             return Label(text)
+        if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
+            return Label(text)  # 'RAL 7035' and 'Model 12' are answers
         condition = found.condition
         bands = find_bands(condition) if condition else NO_BANDS
         return Label(
@@ -141,6 +163,16 @@ def looks_like_line(text: str) -> bool:
     return len(text) < 200 and _LINE.match(text) is not None
 
 
+def split_lines(text: str) -> list[str]:
+    """The lines of a cell; pieces between semicolons count as lines when each has a label."""
+    lines = [line.strip() for line in text.splitlines() if line.strip()]
+    split = []
+    for line in lines:
+        pieces = [piece.strip() for piece in re.split(r"\s*[;|]\s*", line) if piece.strip()]
+        split += pieces if len(pieces) > 1 and all(map(looks_like_line, pieces)) else [line]
+    return split
+
+
 def statistic_of(text: str) -> str:
     """``min``, ``typ`` or ``max`` when a heading cell says only that."""
     return _STATISTIC.get(column_role(text), "")
@@ -148,4 +180,4 @@ def statistic_of(text: str) -> str:
 
 def is_heading_filler(text: str) -> bool:
     """Whether a cell under a heading still belongs to the heading: a unit, band or statistic."""
-    return is_unit(text) or is_band_label(text) or bool(statistic_of(text))
+    return is_unit(text) or is_band_label(text) or bool(statistic_of(text)) or text.strip() in ("H", "V")

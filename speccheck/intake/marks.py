@@ -5,10 +5,10 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from speccheck.intake.grid import Cell, Grid
-from speccheck.intake.labels import Label, Labels, is_unit
+from speccheck.intake.labels import Label, Labels, is_unit, split_lines, statistic_of
 from speccheck.intake.words import column_role
 
-_LONGEST = 400
+_LONGEST = 2000
 _SIZES = ("H", "W", "D", "B", "T", "L")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
@@ -48,16 +48,23 @@ def mark(grid: Grid, labels: Labels) -> Marks:
 
 
 def _unmark_column_words(marks: Marks) -> None:
-    """Words over the columns of a table with headings down the side are no headings: 'Parameter | Typ | Max'."""
+    """Words over the columns of a table with headings down the side head no values: 'Parameter | Typ'."""
     for row, cells in marks.rows.items():
         headings = marks.heading_columns(row)
         if not 0 < len(headings) <= 2:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
         statistics = sum(role in ("minimum", "typical", "maximum") for role in roles)
-        if "parameter" in roles or statistics > 1:
-            for column in headings:
+        for column in headings:
+            said = statistic_of(marks.grid.cells[row, column].text)
+            detail = bool(said) and _follows_heading(marks, row, column)
+            if "parameter" in roles or statistics > 1 or detail:
                 del marks.headings[row, column]
+
+
+def _follows_heading(marks: Marks, row: int, column: int) -> bool:
+    before = marks.grid.covering(row, column - 1) if column > 1 else None
+    return before is not None and (before.row, before.column) in marks.headings
 
 
 def _mark_letters(marks: Marks) -> None:
@@ -81,9 +88,9 @@ def _mark_text(marks: Marks, place: tuple[int, int], text: str, following: Cell 
     """A label with its value behind a colon is a line, unless the value stands in the next cell."""
     alone = following is None or (following.row, following.column) in marks.lines
     if (alone or "\n" in text) and any(mark in text for mark in _LINE_MARKS):
-        line = marks.labels.parse_line(text)
-        if line is not None:
-            marks.lines[place] = line
+        known = [line for line in map(marks.labels.parse_line, split_lines(text)) if line is not None]
+        if known:
+            marks.lines[place] = known[0]
             return
     label = marks.labels.of(text)
     if label:

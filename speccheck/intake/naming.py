@@ -13,12 +13,14 @@ from speccheck.intake.words import fold, is_generic_sheet_name, title_prefixes
 
 _CODE = re.compile(r"(?<![\w.])(?=[\w./+-]*\d)(?=[\w./+-]*[A-Za-z])[A-Za-z0-9][\w./+-]{2,}(?![\w])")
 _NOT_A_CODE = re.compile(
-    r"^(?:\d+(?:[.,]\d+)?(?:mhz|ghz|dbi|dbd|db|mm|cm|m|kg|w|kw|n|v|deg|port|ports|x\d.*)|[nb]\d{1,3}|\d+t\d+r|ip\d\d|rev\.?\w*|v\d.*|[245]g|ts\d+.*|\d{4}-\d\d-\d\d|\d+x\d+\w*|q[1-4])$",
+    r"^(?:\d+(?:[.,]\d+)?(?:mhz|ghz|dbi|dbd|db|mm|cm|m|kg|w|kw|n|v|deg|ports?|x\d.*)|[nb]\d{1,3}|\d+t\d+r|"
+    r"ip\d\d|rev\.?\w*|v\d(?:\.\d+)*|[245]g|ts\d+.*|\d{4}-\d\d-\d\d|\d+x\d+\w*|q[1-4])$",
     re.IGNORECASE,
 )
 _PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—]\s+")
 _DESCRIBES = re.compile(
-    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|"
+    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|annex|"
+    r"appendix|form|response|schedule|questionnaire|page|values?|all|valid|"
     r"datenblatt|fiche|ficha|scheda|hoja|karta|donnees|datos|dati|dados|dane|gegevens|technische)\b"
 )
 _LONG_TITLE = 90
@@ -80,6 +82,11 @@ def _score(text: str, sheet: str) -> int:
     return 1 if stripped != words and len(stripped.split()) <= 3 else 0
 
 
+def _may_name(text: str) -> bool:
+    parts = _PARTS.split(" ".join(text.split()))
+    return not is_generic_sheet_name(text) and not all(_DESCRIBES.search(fold(part)) for part in parts)
+
+
 class Names:
     """Finds names on one sheet, with the file's name to fall back on."""
 
@@ -113,7 +120,7 @@ class Names:
             return self._taken(candidates[scores.index(max(scores))], result)
         if not is_generic_sheet_name(sheet):
             return Title(model_name(sheet), first, True)
-        short = [c for c in candidates if len(c.text) <= _LONG_NAME and not is_generic_sheet_name(c.text)]
+        short = [c for c in candidates if len(c.text) <= _LONG_NAME and _may_name(c.text)]
         short = short if len(candidates) <= 3 else []
         if short:
             result.mark(short[-1], "heading")

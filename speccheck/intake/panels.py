@@ -49,62 +49,6 @@ PER_BAND_IF_SAID = GEOMETRY | {
     "panel_type",
     "connector_type",
 }
-_TITLE_KEYS = frozenset(
-    {"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"}
-)
-
-
-def joined(drafts: list[Draft]) -> list[Draft]:
-    """Drafts of one panel put together: by name, or because a piece has no name of its own."""
-    kept: list[Draft] = []
-    by_name: dict[str, list[Draft]] = {}
-    for draft in drafts:
-        if not draft.claims:
-            continue
-        home = _home(draft, kept, by_name.get(draft.name.casefold(), []))
-        if home is None:
-            kept.append(draft)
-            by_name.setdefault(draft.name.casefold(), []).append(draft)
-            continue
-        if draft.named and not home.named:
-            home.name, home.named = draft.name, True
-            by_name.setdefault(draft.name.casefold(), []).append(home)
-        home.joined.append(draft)
-        home.bands += [band for band in draft.bands if band not in home.bands]
-    return kept
-
-
-def _home(draft: Draft, kept: list[Draft], namesakes: list[Draft]) -> Draft | None:
-    for other in reversed(namesakes):
-        if not _clashes(draft, other):
-            return other
-    if not kept:
-        return None
-    last = kept[-1]
-    if not draft.named and last.grid is draft.grid and last.keys() <= _TITLE_KEYS:
-        return last
-    if draft.named and (last.named or last.grid is draft.grid):
-        return None
-    alone = len(kept) == 1 or last.grid is draft.grid
-    return last if alone and not _clashes(draft, last) else None
-
-
-def _clashes(draft: Draft, other: Draft) -> bool:
-    """Whether two drafts state the same things and so are two panels."""
-    mine = {(key, c.band, c.context.band_name) for c in _claims(draft) for key in c.context.label.parameters}
-    theirs = {
-        (key, c.band, c.context.band_name) for c in _claims(other) for key in c.context.label.parameters
-    }
-    shared = {entry for entry in mine & theirs if entry[0] not in _TITLE_KEYS}
-    return len(shared) >= 2 and len(shared) * 3 >= min(len(mine), len(theirs))
-
-
-def _stated(draft: Draft) -> set[tuple[str, Band | None, str]]:
-    return {(key, c.band, c.context.band_name) for c in _claims(draft) for key in c.context.label.parameters}
-
-
-def _claims(draft: Draft) -> list[Claim]:
-    return [claim for piece in draft.pieces() for claim in piece.claims]
 
 
 @dataclass(slots=True)
@@ -174,7 +118,11 @@ class Builder:
                 draft.bands += [s for s in spans if s not in draft.bands]
             elif len(spans) == 1 and not claim.banded:
                 overall.append(spans[0])
-        named = any(claim.context.band_name for claim, _ in outcomes)
+        for _, outcome in outcomes:
+            for found in outcome.found:
+                if found.band is not None and found.band not in draft.bands:
+                    draft.bands.append(found.band)
+        named = any(claim.banded and claim.band is None for claim, _ in outcomes)
         if not draft.bands and overall and not named:
             draft.bands = [overall[0]] if len(set(overall)) == 1 else list(dict.fromkeys(overall))
         if len(draft.bands) == 1 and overall and draft.bands[0] not in overall:
@@ -219,6 +167,11 @@ def _shared_out(
     plain = len(alike) > 1 and not any(f.figure.quantity.at for f in alike)
     plain = plain and len({(f.figure.condition, f.figure.sense) for f in alike}) == 1
     if not plain or parameters()[first.parameter].kind not in ("number", "range", "count"):
+        return found, None
+    tilts = claim.context.label.tilts
+    if tilts and len(alike) == len(tilts):
+        for one, tilt in zip(alike, tilts, strict=True):
+            one.at = {"tilt_deg": tilt}
         return found, None
     if len(alike) == len(bands):
         for one, band in zip(alike, bands, strict=True):

@@ -2,11 +2,13 @@
 
 from __future__ import annotations
 
+import re
 from collections import defaultdict
+from dataclasses import replace
 
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.grid import Cell
-from speccheck.intake.labels import Label, looks_like_line
+from speccheck.intake.labels import looks_like_line, split_lines
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
 
@@ -26,6 +28,11 @@ def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
         _Column(marks, result, names, column).read(cells[0].row, last)
 
 
+_SUPERSEDED = re.compile(
+    r"supersed|previous|formerly|no longer|obsolete|withdrawn|ungültig|überholt|ersetzt durch", re.I
+)
+
+
 class _Column:
     def __init__(self, marks: Marks, result: SheetResult, names: Names, column: int) -> None:
         self._marks, self._result, self._names, self._index = marks, result, names, column
@@ -36,43 +43,48 @@ class _Column:
             cell = self._marks.grid.cells.get((row, self._index))
             if cell is None or (row, self._index) in self._result.roles:
                 continue
-            lines = [piece.strip() for piece in cell.text.splitlines() if piece.strip()]
+            lines = split_lines(cell.text)
             if (row, self._index) in self._marks.lines:
-                for line in lines:
-                    self._line(cell, line)
+                taken = [self._line(cell, line) for line in lines]
+                if not any(taken):
+                    self._result.mark(cell, "unread")
             elif looks_like_line(cell.text):
                 self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
                 self._result.mark(cell, "unread")
             elif self._names.is_title(cell.text):
-                self._title(cell)
+                self._title(cell, cell.text)
 
-    def _line(self, cell: Cell, text: str) -> None:
+    def _line(self, cell: Cell, text: str) -> bool:
+        """Take one line in; False when it says nothing that was understood."""
         parsed = self._marks.labels.parse_line(text)
-        if parsed is None:
-            self._result.unread.append((cell, f"line '{text[:80]}' has no known label", ""))
-            self._result.mark(cell, "unread")
-            return
+        if parsed is None and self._names.is_title(text) and not looks_like_line(text):
+            self._title(cell, text)
+            return True
+        if parsed is None or _SUPERSEDED.search(text):
+            reason = "quotes a superseded figure" if parsed else "has no known label"
+            self._result.unread.append((cell, f"line '{text[:80]}' {reason}", ""))
+            return False
         label, value = parsed
         if label.parameters[0] in _NAME_KEYS:
-            name = model_name(value)
             if self._draft is None or self._draft.claims:
-                self._open(name, cell, named=True)
+                self._open(model_name(value), cell, named=True)
             self._result.mark(cell, "heading")
-            return
+            return True
         draft = self._draft or self._untitled(cell)
-        context = Context(
-            Label("", label.parameters, label.unit, label.condition, label.bands), heading=label.text
-        )
+        inherited = replace(label, text="")
         band = label.bands.hull
-        draft.claims.append(Claim(cell, context, band, text=value, banded=band is not None))
+        draft.claims.append(
+            Claim(cell, Context(inherited, heading=label.text), band, text=value, banded=band is not None)
+        )
+        return True
 
     def _untitled(self, cell: Cell) -> Draft:
         title = self._names.above(cell.row, cell.column, cell.column + 3, self._marks, self._result)
         return self._open(title.name, title.cell, named=title.certain)
 
-    def _title(self, cell: Cell) -> None:
+    def _title(self, cell: Cell, text: str) -> None:
         self._result.mark(cell, "heading")
-        self._open(model_name(cell.text), cell, named=True)
+        self._open(model_name(text), cell, named=True)
 
     def _open(self, name: str, cell: Cell, *, named: bool) -> Draft:
         self._draft = Draft(name, self._marks.grid, cell, named=named)

@@ -4,12 +4,13 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterator, Mapping
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 from functools import lru_cache
 
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.claims import Claim, Context
 from speccheck.intake.grid import Raw
+from speccheck.intake.unitless import with_unit
 from speccheck.quantities import CellContent, DecimalHabit, Quantity, UnknownUnitError, read_cell, settle
 from speccheck.records import Band, CellRef, Reading, Sense, Statement, Status, Unread, Value
 from speccheck.text import plain
@@ -20,6 +21,7 @@ _MAX_WORDS = re.compile(
 _MIN_WORDS = re.compile(
     r"(?<![a-z])(?:min(?:imum|imal\w*|\.)?|m[íi]nim\w+|at least|mindest\w*)(?![a-z])", re.IGNORECASE
 )
+_UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
 _IDENTITY_UNITS = ("", "–", "-", "—")
 
@@ -52,6 +54,7 @@ class Found:
     tolerance: float | None
     remark: str = ""
     recognised: str = ""
+    at: Mapping[str, float] = field(default_factory=dict)
 
     def reading(self) -> Reading:
         """The finished reading."""
@@ -72,7 +75,7 @@ class Found:
             stated_value=quantity.stated_value,
             stated_unit=quantity.stated_unit,
             condition=condition,
-            at=figure.at,
+            at={**figure.at, **self.at} if self.at else figure.at,
             heading=self.heading,
             recognised=self.recognised or figure.recognised,
             alternatives=quantity.alternatives,
@@ -139,8 +142,24 @@ class Reader:
                 sheet, unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
             )
         found = [_found(where, claim, figure) for figure in figures]
+        if claim.tolerance is not None:
+            self._add_tolerance(found, claim)
         unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
         return Outcome(sheet, found, unread=unread, footnotes=content.footnotes)
+
+    def _add_tolerance(self, found: list[Found], claim: Claim) -> None:
+        """A tolerance in a column of its own holds for the figure of its row."""
+        if claim.tolerance is None or claim.tolerance.fault:
+            return
+        key = claim.context.label.parameters[0]
+        content = read_cell(
+            claim.tolerance.raw, kind="number", unit=_unit(claim.context)[0], expected=parameters()[key].unit
+        )
+        for quantity in content.quantities[:1]:
+            amount = quantity.tolerance if quantity.tolerance is not None else quantity.value
+            for one in found:
+                if one.tolerance is None and isinstance(amount, float) and isinstance(one.value, float):
+                    one.tolerance = abs(amount)
 
     def _understand(self, raw: Raw, context: Context, number_format: str) -> _Understood:
         label = context.label
@@ -181,29 +200,33 @@ class Reader:
 
 def _found(where: CellRef, claim: Claim, figure: Figure) -> Found:
     value, tolerance = figure.quantity.value, figure.quantity.tolerance
-    text, heading = claim.cell.text, claim.context.heading
-    return Found(where, text, heading, figure, figure.parameter, value, claim.band, tolerance)
+    text, heading, band = claim.cell.text, claim.context.heading, claim.band
+    if "frequency_high_mhz" in figure.at and band is None:
+        band = (figure.at["frequency_low_mhz"], figure.at["frequency_high_mhz"])
+    return Found(where, text, heading, figure, figure.parameter, value, band, tolerance)
 
 
 def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: str) -> Figure:
+    quantity, supplied = with_unit(quantity, parameter)
     settled = settle(
         quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
     )
     label = context.label
     said = set(re.findall(r"\w+", context.condition))
     of_label = "" if set(re.findall(r"\w+", label.condition)) <= said else label.condition
-    conditions = (context.band_name, of_label, context.condition, settled.condition)
+    of_unit = next(iter(_UNIT_CONDITION.findall(context.unit)), "")
+    conditions = (context.band_name, of_label, context.condition, settled.condition, of_unit)
     how = label.how or f"heading '{context.heading or label.text}'"
     if quantity.unit or parameter.unit:
-        how += f"; {_unit_told(quantity, _unit(context)[1], parameter)}"
+        how += f"; {supplied or _unit_told(quantity, _unit(context)[1], parameter)}"
     return Figure(
         parameter=parameter.key,
-        quantity=settled,
+        quantity=replace(settled, alternatives=quantity.alternatives) if supplied else settled,
         unit=settled.unit or parameter.unit,
         sense=_sense(settled, context),
-        statistic=settled.statistic or label.statistic or _column_statistic(context, parameter),
+        statistic=settled.statistic or _statistic(context, parameter),
         recognised=how + tail,
-        at=_at(" ".join(filter(None, conditions[1:3])), parameter.unit) | dict(settled.at),
+        at=_at(" ".join(filter(None, (*conditions[1:3], of_unit))), parameter.unit) | dict(settled.at),
         condition="; ".join(dict.fromkeys(filter(None, conditions))),
     )
 
@@ -220,7 +243,7 @@ def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator
 def _unit(context: Context) -> tuple[str, str]:
     for unit, source in ((context.unit, "unit column"), (context.label.unit, "heading")):
         if unit.strip() not in _IDENTITY_UNITS:
-            return unit, source
+            return _UNIT_CONDITION.sub("", unit), source
     return "", ""
 
 
@@ -245,8 +268,10 @@ def _sense(settled: Quantity, context: Context) -> Sense:
     return Sense.NOMINAL
 
 
-def _column_statistic(context: Context, parameter: Parameter) -> str:
-    return "typical" if context.statistic == "typ" and parameter.kind == "number" else ""
+def _statistic(context: Context, parameter: Parameter) -> str:
+    if parameter.kind != "number":
+        return ""
+    return context.label.statistic or ("typical" if context.statistic == "typ" else "")
 
 
 @lru_cache(maxsize=2000)

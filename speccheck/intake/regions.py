@@ -60,13 +60,19 @@ def _is_heading_row(marks: Marks, row: int, numbers: list[int], position: int) -
     values = [
         c for c in cells if not marks.is_heading(c) and looks_like_value(c) and not is_heading_filler(c.text)
     ]
-    if len(values) > len(columns) // 3:
+    if len(values) > len(columns) // 3 or (len(columns) < 4 and _stacked(marks, row, columns) > 1):
         return False
     if len(columns) == 2 and not any(says_column_role(c) or column_role(c.text) for c in cells):
         others = [c for c in cells if not marks.is_heading(c)]
         if values or len(others) > 2:
             return False
     return _values_below(marks, columns, numbers[position + 1 : position + 1 + _LOOK_BELOW])
+
+
+def _stacked(marks: Marks, row: int, columns: list[int]) -> int:
+    """Headings just above and below those of a row: many of them speak for headings down the side."""
+    near = (row - 2, row - 1, row + 1, row + 2)
+    return max(sum((other, column) in marks.headings for other in near) for column in columns)
 
 
 def _values_below(marks: Marks, columns: list[int], rows: list[int]) -> bool:
@@ -171,9 +177,10 @@ def find_down(marks: Marks, taken: set[int]) -> list[Down]:
         if row not in taken:
             by_column[column].append(row)
     columns = _label_columns(marks, {c: sorted(rows) for c, rows in by_column.items()})
+    columns = {c: rows for c, rows in columns.items() if not _is_second_label(marks, columns, c)}
     tables: list[Down] = []
     for column, rows in sorted(columns.items()):
-        for top, bottom in _runs(rows, taken):
+        for top, bottom in _runs(marks, column, rows, taken):
             right = _right_bound(columns, column, top, bottom)
             left = _left_bound(columns, column, top, bottom)
             tables.append(Down(column, top, bottom, left, right))
@@ -202,16 +209,42 @@ def _has_value_right(marks: Marks, row: int, column: int) -> bool:
     )
 
 
-def _runs(rows: list[int], taken: set[int]) -> list[tuple[int, int]]:
-    """Rows cut where a table of another kind lies between them."""
+def _is_second_label(marks: Marks, columns: dict[int, list[int]], column: int) -> bool:
+    """Whether a column of headings only details the labels of a column before it, values following both."""
+    for other, rows in columns.items():
+        if other < column and rows[0] <= columns[column][-1] and columns[column][0] <= rows[-1] + _LOOK_BELOW:
+            near = [row for row in rows if columns[column][0] - 6 <= row <= columns[column][-1] + 6]
+            beyond = [row for row in near if _first_value_column(marks, row, other) > column]
+            if near and len(beyond) * 2 > len(near):
+                return True
+    return False
+
+
+def _first_value_column(marks: Marks, row: int, label_column: int) -> int:
+    for cell in marks.rows[row]:
+        if cell.column > label_column and looks_like_value(cell) and not marks.is_heading(cell):
+            return cell.column
+    return 0
+
+
+def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[tuple[int, int]]:
+    """Rows cut where a table of another kind, or a new row of headings, lies between them."""
     runs: list[tuple[int, int]] = []
     start = previous = rows[0]
     for row in rows[1:]:
-        if any(between in taken for between in range(previous + 1, row)):
+        between = range(previous + 1, row)
+        if any(r in taken or _heads_columns(marks, r, column) for r in between):
             runs.append((start, previous))
             start = row
         previous = row
     return [*runs, (start, previous)]
+
+
+def _heads_columns(marks: Marks, row: int, column: int) -> bool:
+    cell = marks.grid.cells.get((row, column))
+    if cell is None or column_role(cell.text) != "parameter":
+        return False
+    return any(other.column > column for other in marks.rows[row])
 
 
 def _right_bound(columns: dict[int, list[int]], column: int, top: int, bottom: int) -> int:

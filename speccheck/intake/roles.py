@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from speccheck.intake.columns import Column
+from speccheck.intake.columns import VALUE_ROLES, Column
 from speccheck.intake.grid import Cell
 from speccheck.intake.labels import is_unit
 from speccheck.intake.words import answer
@@ -15,10 +15,11 @@ def settle_roles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> No
             column.role = _by_content(column, cells.get(index, []))
     _band_columns(columns, cells)
     _conditions_before_units(columns, cells)
+    _details_before_values(columns, cells)
     _offer_beside_requirement(columns)
     if not any(c.role in ("", "offered", "panel", "typical", "minimum", "maximum") for c in columns.values()):
         for column in columns.values():
-            if column.role in ("condition", "compliance", "group"):
+            if column.role in ("condition", "compliance", "group", "band"):
                 column.role = ""
                 break
 
@@ -60,6 +61,23 @@ def _conditions_before_units(columns: dict[int, Column], cells: dict[int, list[C
         texts = [c for c in cells[index] if isinstance(c.raw, str)]
         if not columns[index].words and len(texts) == len(cells[index]):
             columns[index].role = "condition"
+
+
+def _details_before_values(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
+    """Words such as 'horizontal' and 'vertical' between the labels and the first column of figures."""
+    plain = [i for i, c in columns.items() if c.role == "" and not c.words and not c.band and not c.band_name]
+    figures = [
+        i for i, c in columns.items() if c.role in VALUE_ROLES and _share_of_figures(cells.get(i, [])) > 0.5
+    ]
+    for index in plain:
+        texts = cells.get(index, [])
+        if figures and index < figures[0] and texts and _share_of_figures(texts) < 0.3:
+            columns[index].role = "condition"
+
+
+def _share_of_figures(cells: list[Cell]) -> float:
+    figures = sum(not isinstance(c.raw, str) or any(letter.isdigit() for letter in c.text) for c in cells)
+    return figures / len(cells) if cells else 0.0
 
 
 def _offer_beside_requirement(columns: dict[int, Column]) -> None:

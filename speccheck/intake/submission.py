@@ -12,12 +12,13 @@ from pathlib import Path
 from speccheck.errors import UnusableInputError
 from speccheck.intake.claims import SheetResult
 from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.joining import joined
 from speccheck.intake.labels import Labels
 from speccheck.intake.layout import read_layout
 from speccheck.intake.limits import Limits
 from speccheck.intake.notices import book_notices, footnotes, grid_notices, note_notices
 from speccheck.intake.opening import Book, open_book
-from speccheck.intake.panels import Builder, joined
+from speccheck.intake.panels import Builder
 from speccheck.intake.reading import Reader
 from speccheck.intake.tender_given_as_bid import refuse_tender
 from speccheck.quantities import decimal_habit
@@ -76,7 +77,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     labels = Labels(headings)
     visible = [grid for grid in book.grids if not grid.hidden]
     results = [read_layout(grid, labels, stem) for grid in visible]
-    drafts = joined([draft for result in results for draft in result.drafts])
+    drafts, titles = joined([draft for result in results for draft in result.drafts])
     if not drafts:
         raise _no_table(book)
     texts = (cell.raw for grid in visible for cell in grid.cells.values() if isinstance(cell.raw, str))
@@ -87,7 +88,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     for grid in book.grids:
         notices += grid_notices(grid, reader.where)
     unread: list[Unread] = []
-    roles: dict[tuple[str, int, int], str] = {}
+    roles = {(t.grid.name, c.cell.row, c.cell.column): "heading" for t in titles for c in t.claims}
     for result in results:
         notices += note_notices(result, labels, reader.where)
         notices += [

@@ -6,6 +6,7 @@ from collections.abc import Iterable, Sequence
 from pathlib import Path
 
 from openpyxl import Workbook
+
 from speccheck.intake.submission import Account, read_account
 from speccheck.records import Reading
 
@@ -34,7 +35,13 @@ def read(path: Path, rows: Rows, merges: Iterable[str] = (), **options: object) 
 def line(panel: str, reading: Reading) -> str:
     """A reading as ``panel: C4 gain ≥17.5±0.5 dBi @1710-2170``."""
     value = reading.value
-    shown = f"{value[0]:g}..{value[1]:g}" if isinstance(value, tuple) else value if isinstance(value, str) else f"{value:g}"
+    shown = (
+        f"{value[0]:g}..{value[1]:g}"
+        if isinstance(value, tuple)
+        else value
+        if isinstance(value, str)
+        else f"{value:g}"
+    )
     sign = {"min": "≥", "max": "≤", "nominal": ""}[reading.sense]
     tolerance = f"±{reading.tolerance:g}" if reading.tolerance is not None else ""
     unit = f" {reading.unit}" if reading.unit else ""

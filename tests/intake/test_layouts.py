@@ -6,13 +6,20 @@ from pathlib import Path
 
 import pytest
 from intake.sheets import Rows, lines, read, save
+
 from speccheck.intake.submission import read_account
 
 _ = None
 
 LAYOUTS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
     "parameters down, one panel": (
-        [["Type QX-22"], [], ["Parameter", "Value"], ["Frequency range", "1710 – 2170 MHz"], ["Gain", "17.5 ± 0.5 dBi"]],
+        [
+            ["Type QX-22"],
+            [],
+            ["Parameter", "Value"],
+            ["Frequency range", "1710 – 2170 MHz"],
+            ["Gain", "17.5 ± 0.5 dBi"],
+        ],
         (),
         """QX-22: B4 frequency_range 1710..2170 MHz
         QX-22: B4 operating_bands 1710..2170 MHz @1710-2170
@@ -92,7 +99,11 @@ LAYOUTS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         VD-1: C4 gain 17.5 dBi @1920-2170""",
     ),
     "two-level headings across": (
-        [["Model", "Gain (dBi)", _, "Height (mm)"], [_, "1710-1880", "1920-2170", _], ["VD-1", 17.1, 17.6, 1300]],
+        [
+            ["Model", "Gain (dBi)", _, "Height (mm)"],
+            [_, "1710-1880", "1920-2170", _],
+            ["VD-1", 17.1, 17.6, 1300],
+        ],
         ("B1:C1", "A1:A2", "D1:D2"),
         """VD-1: B3 gain 17.1 dBi @1710-1880
         VD-1: C3 gain 17.6 dBi @1920-2170
@@ -143,7 +154,12 @@ LAYOUTS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         bid: D3 vswr 1.4""",
     ),
     "pasted lines": (
-        [["Antenna type: ZZ-77"], ["Frequency range: 1710-2170 MHz"], ["Gain: 17.5 ± 0.5 dBi"], ["VSWR: < 1.5:1"]],
+        [
+            ["Antenna type: ZZ-77"],
+            ["Frequency range: 1710-2170 MHz"],
+            ["Gain: 17.5 ± 0.5 dBi"],
+            ["VSWR: < 1.5:1"],
+        ],
         (),
         """ZZ-77: A2 frequency_range 1710..2170 MHz
         ZZ-77: A2 operating_bands 1710..2170 MHz @1710-2170
@@ -198,7 +214,11 @@ LAYOUTS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         KB-9: B7 gain 18 dBi @2300-2690""",
     ),
     "a list of figures for a list of bands": (
-        [["Parameter", "KB-9"], ["Frequency range", "1695-1880 / 1850-1990 / 2300-2690 MHz"], ["Gain", "16.2 / 16.8 / 17.1 dBi"]],
+        [
+            ["Parameter", "KB-9"],
+            ["Frequency range", "1695-1880 / 1850-1990 / 2300-2690 MHz"],
+            ["Gain", "16.2 / 16.8 / 17.1 dBi"],
+        ],
         (),
         """KB-9: B2 operating_bands 1695..1880 MHz @1695-1880
         KB-9: B2 operating_bands 1850..1990 MHz @1850-1990
@@ -293,8 +313,19 @@ def test_panel_spread_over_sheets_with_cover_and_note(tmp_path: Path) -> None:
     path = save(
         tmp_path / "bid.xlsx",
         {
-            "Cover": [["Tender response"], ["Bidder", "Foo"], ["Model", "MM-17"], ["Gain 16 dBi of revision A is superseded."]],
-            "Electrical": [["Parameter", "Value"], ["Gain", "17 dBi 1)"], ["VSWR", "1.4"], [], ["1) at mid band"]],
+            "Cover": [
+                ["Tender response"],
+                ["Bidder", "Foo"],
+                ["Model", "MM-17"],
+                ["Gain 16 dBi of revision A is superseded."],
+            ],
+            "Electrical": [
+                ["Parameter", "Value"],
+                ["Gain", "17 dBi 1)"],
+                ["VSWR", "1.4"],
+                [],
+                ["1) at mid band"],
+            ],
             "Mechanical": [["Parameter", "Value"], ["Height", "1300 mm"]],
         },
     )

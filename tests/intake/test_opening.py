@@ -10,15 +10,18 @@ from hypothesis import HealthCheck, given, settings
 from hypothesis import strategies as st
 from openpyxl import Workbook, load_workbook
 from openpyxl.cell.cell import ILLEGAL_CHARACTERS_RE
+
 from speccheck.intake.grid import Cell, text_of
 from speccheck.intake.opening import open_book
 
+EARLIEST = datetime.datetime.fromisoformat("1990-01-01")
+LATEST = datetime.datetime.fromisoformat("2040-01-01")
 CELLS = st.one_of(
     st.text(max_size=30).filter(lambda t: not ILLEGAL_CHARACTERS_RE.search(t) and "\r" not in t),
     st.floats(allow_nan=False, allow_infinity=False, width=32),
     st.integers(-(10**9), 10**9),
     st.booleans(),
-    st.datetimes(datetime.datetime(1990, 1, 1), datetime.datetime(2040, 1, 1)).map(
+    st.datetimes(min_value=EARLIEST, max_value=LATEST).map(
         lambda d: d.replace(microsecond=0)
     ),
     st.none(),

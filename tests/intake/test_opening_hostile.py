@@ -12,6 +12,7 @@ from pathlib import Path
 
 import pytest
 from openpyxl import Workbook
+
 from speccheck.errors import UnusableInputError
 from speccheck.intake.limits import Limits
 from speccheck.intake.opening import open_book
@@ -79,7 +80,7 @@ HOSTILE: dict[str, tuple[Callable[[], bytes], str]] = {
     "locked-zip.xlsx": (encrypted_zip, "password"),
     "truncated.xlsx": (lambda: workbook_bytes()[:-300], "truncated or damaged"),
     "half.xlsx": (lambda: workbook_bytes()[:900], "truncated or damaged"),
-    "not-a-workbook.xlsx": (lambda: _plain_zip(), "without a worksheet"),
+    "not-a-workbook.xlsx": (lambda: _plain_zip("readme.txt"), "without a worksheet"),
     "document.xlsx": (lambda: _plain_zip("word/document.xml"), "word-processor"),
     "sheet.ods": (lambda: _plain_zip("mimetype", "content.xml"), "save it as .xlsx"),
     "binary.xlsb": (lambda: _plain_zip("xl/workbook.bin"), "save it as .xlsx"),
@@ -123,7 +124,7 @@ def _stored(name: str, content: bytes) -> bytes:
 def _plain_zip(*names: str) -> bytes:
     out = io.BytesIO()
     with zipfile.ZipFile(out, "w") as archive:
-        for name in names or ("readme.txt",):
+        for name in names:
             archive.writestr(name, "x")
     return out.getvalue()
 
@@ -200,7 +201,8 @@ def test_a_million_claimed_rows_with_three_cells_is_quick(tmp_path: Path) -> Non
 def test_odd_addresses_do_not_crash(tmp_path: Path) -> None:
     body = (
         '<sheetData><row r="x"><c r="ZZZZ9"><v>1</v></c><c r="A0"><v>2</v></c><c><v>3</v></c>'
-        '<c r="B99999999999"><v>4</v></c><c t="s"><v>999</v></c><c t="s"><v>-1</v></c><c t="d"><v>x</v></c></row></sheetData>'
+        '<c r="B99999999999"><v>4</v></c><c t="s"><v>999</v></c><c t="s"><v>-1</v></c>'
+        '<c t="d"><v>x</v></c></row></sheetData>'
     )
     path = tmp_path / "odd.xlsx"
     path.write_bytes(sheet(body))

@@ -1,0 +1,67 @@
+"""The cells of one row that qualify its values: units, condition, tolerance, band."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass, field
+
+from speccheck.intake.bands import is_band_label
+from speccheck.intake.columns import Column
+from speccheck.intake.grid import Cell, Grid
+from speccheck.intake.labels import Label, Labels
+
+
+@dataclass(slots=True)
+class RowCells:
+    """Qualifying cells of a row; `units` by column, as a table may have several unit columns."""
+
+    condition: Cell | None = None
+    tolerance: Cell | None = None
+    band: Cell | None = None
+    units: dict[int, Cell] = field(default_factory=dict)
+
+    @property
+    def condition_text(self) -> str:
+        """Text of the condition cell."""
+        return self.condition.text if self.condition else ""
+
+    def unit(self, column: Column) -> str:
+        """The unit that holds for a column: of several the nearest, after it rather than before it."""
+        if not self.units:
+            return column.unit
+        nearest = min(self.units, key=lambda index: (abs(index - column.index), index < column.index))
+        return self.units[nearest].text
+
+
+def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
+    """Find the qualifying cells of a row; a merged unit or band holds for all rows it covers."""
+    found = RowCells()
+    conditions: list[Cell] = []
+    for index, column in columns.items():
+        if column.role in ("unit", "band") and (column.role != "band" or column.band is None):
+            cell = grid.covering(row, index)
+            if cell is not None and column.role == "unit":
+                found.units[index] = cell
+            elif cell is not None:
+                found.band = found.band or cell
+        elif column.role in ("condition", "tolerance"):
+            cell = grid.cells.get((row, index))
+            if cell is not None and column.role == "condition":
+                conditions.append(cell)
+            elif cell is not None:
+                found.tolerance = found.tolerance or cell
+    found.condition = conditions[0] if conditions else None
+    return found
+
+
+def joined_label(labels: Labels, label: Label | None, condition: Cell | None) -> Label:
+    """A label with its condition: 'Radiator pitch' and 'horizontal' name a parameter together."""
+    if condition is None or is_band_label(condition.text):
+        return label or Label("")
+    if label is not None and label.text:
+        for text in (f"{label.text} {condition.text}", f"{label.text}, {condition.text}"):
+            joined = labels.of(text)
+            if joined:
+                return joined
+        if label:
+            return label
+    return labels.of(condition.text)
