@@ -227,22 +227,24 @@ def _lists(keys: Sequence[str]) -> Table:
 
 
 def _clauses(tender: Tender) -> Table:
+    """One sentence a clause, in one cell: wording beside an answer would read as label and figure."""
+    sentences = dict.fromkeys(
+        f"{r.clause} ({r.level.value}): {r.wording} — answer {_where_to_answer(r)}"
+        for r in tender.requirements
+    )
     return Table(
         name="Clauses",
         columns=(
-            Column(heading="Clause", width=10),
-            Column(heading="Level", width=12),
-            Column(heading="Wording of the buyer", width=70, look="wrap"),
-            Column(heading="Where to answer", width=34, look="wrap"),
+            Column(heading="Clauses of the buyer", width=100, look="wrap"),
             Column(heading="Your words, if a figure is not enough", width=50, look="entry-text"),
         ),
-        rows=[[r.clause, r.level.value, r.wording, _where_to_answer(r), None] for r in tender.requirements],
+        rows=[[sentence, None] for sentence in sentences],
     )
 
 
 def _where_to_answer(requirement: Requirement) -> str:
     parameter = parameters().get(requirement.parameter)
-    return f"sheet {SHEET}, column {form_heading(parameter)}" if parameter else "here, in words"
+    return f"on sheet {SHEET}, column {form_heading(parameter)}" if parameter else "here, in words"
 
 
 def _read_me(tender: Tender | None) -> Table:
