@@ -10,6 +10,8 @@ from speccheck.report.canvas import Canvas, Figure
 from speccheck.report.formats import Numbers
 
 WIDTH, HEIGHT = 316, 160
+TOP_WIDTH, TOP_HEIGHT = 640, 220
+_ARC_BEYOND_DEG = 4.0
 _PUBLIC_STYLE, _WORKER_STYLE = "first", "second"
 
 
@@ -43,13 +45,13 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
     extent = max(reach, far if far is not None and shown_far else 0.0) * 1.08
     outline = next((z for z in note.around if z.side_view), None)
     depth = max(
-        extent * math.sin(math.radians(max(abs(t) for t in tilts))) + 1.5,
+        reach * math.sin(math.radians(max(tilts) + _ARC_BEYOND_DEG)) + 0.5,
         max((-y for _, y in outline.side_view), default=0.0) + 1 if outline else 0.0,
         2.5,
     )
     rise = max(1.5, max((y for _, y in outline.side_view), default=0.0) + 0.5 if outline else 0.0)
     px = min(256 / extent, (HEIGHT - 60) / (depth + rise))
-    canvas = Canvas(WIDTH, round((depth + rise) * px + 62), numbers)
+    canvas = Canvas(WIDTH, round((depth + rise) * px + 68), numbers)
     x0, y0 = 24.0, 24 + rise * px
     height = panel.get("height")
     tall = height.nominal if height is not None and not isinstance(height.value, str) else 1.0
@@ -95,7 +97,7 @@ def _arcs(
     origin: tuple[float, float],
     px: float,
 ) -> None:
-    low, high = min(tilts) - 4, max(tilts) + 4
+    low, high = min(tilts) - _ARC_BEYOND_DEG, max(tilts) + _ARC_BEYOND_DEG
     angles = [low + (high - low) * i / 24 for i in range(25)]
     for row, style in zip(rows, (_PUBLIC_STYLE, _WORKER_STYLE, "third"), strict=False):
         canvas.line((_at(row.distance_m, a, origin, px) for a in angles), style)
@@ -111,17 +113,22 @@ def _at(distance: float, tilt_deg: float, origin: tuple[float, float], px: float
 
 def _top_view(zone: ExposureZone, numbers: Numbers) -> Figure:
     aside = max(abs(y) for _, y in zone.top_view)
+    widest = max(zone.top_view, key=lambda point: point[1])[0]
     front, behind = max(x for x, _ in zone.top_view), -min(0.0, *(x for x, _ in zone.top_view))
-    px = min(230 / (front + behind or 1), 100 / (2 * aside or 1))
-    canvas = Canvas(WIDTH, round(2 * aside * px + 62), numbers)
-    x0, y0 = 20 + behind * px, 18 + aside * px
+    px = min(520 / (front + behind or 1), TOP_HEIGHT / (2 * aside or 1))
+    canvas = Canvas(TOP_WIDTH, round(2 * aside * px + 74), numbers)
+    x0, y0 = 20 + behind * px, 28 + aside * px
     canvas.line(((x0 + x * px, y0 - y * px) for x, y in zone.top_view), "shade", close=True)
     canvas.line(((x0 + x * px, y0 - y * px) for x, y in zone.top_view), "first", close=True)
     canvas.line(((x0, y0), (x0 + front * px, y0)), "guide")
     canvas.box(x0 - 3, y0 - max(0.2 * px, 4), 4, 2 * max(0.2 * px, 4), "panel")
     canvas.write(x0 + front * px + 6, y0 + 4, numbers.rounded_up(zone.front_m), style="strong")
     canvas.write(
-        x0 + 6, y0 - aside * px + 2, f"{numbers.rounded_up(zone.beside_m)} to each side", style="small"
+        x0 + widest * px,
+        y0 - aside * px - 6,
+        f"{numbers.rounded_up(zone.beside_m)} to each side",
+        "middle",
+        "small",
     )
     _ruler(canvas, x0, px, front)
     front_said, beside_said = numbers.rounded_up(zone.front_m), numbers.rounded_up(zone.beside_m)
@@ -136,7 +143,8 @@ def _top_view(zone: ExposureZone, numbers: Numbers) -> Figure:
 
 
 def _ruler(canvas: Canvas, x0: float, px: float, extent: float) -> None:
-    step = next(s for s in (0.5, 1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 1e9) if s >= extent / 7)
+    fits = max(extent / 7, 34 / px)
+    step = next(s for s in (0.1, 0.2, 0.5, 1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 1e12) if s >= fits)
     y = canvas.height - 24
     count = int(extent / step)
     canvas.line(((x0, y), (x0 + count * step * px, y)), "axis")

@@ -33,7 +33,7 @@ class Browser:
     def __init__(self) -> None:
         if CHROMIUM is None:
             raise RuntimeError("no Chromium on this machine")
-        self._profile = tempfile.TemporaryDirectory()
+        self._profile = tempfile.TemporaryDirectory(ignore_cleanup_errors=True)
         ours_read, theirs_write = os.pipe()
         theirs_read, ours_write = os.pipe()
         # Chromium reads commands from descriptor 3 and answers on descriptor 4
