@@ -24,6 +24,7 @@ from speccheck.report.listing import listing
 from speccheck.report.machine import from_json
 from speccheck.report.readbook import read_json, write_read_book
 from speccheck.report.tender_listing import tender_listing
+from speccheck.tender import vetted
 from speccheck.revisions import compare as compare_results
 from speccheck.revisions import comparison_text
 
@@ -127,7 +128,7 @@ def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | No
         if tender_file is None:
             return None, None
         click.echo(f"Tender: {tender_file} (found among the bids; name another with --tender)")
-    tender = read_tender(tender_file)
+    tender = vetted(read_tender(tender_file))
     for finding in tender.findings:
         click.echo(f"  {finding.summary}")
     return tender_file, tender
@@ -154,7 +155,7 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
     Of a tender workbook it shows each wording beside its reading.
     """
     if has_requirements(bid):
-        click.echo(tender_listing(read_tender(bid)))
+        click.echo(tender_listing(vetted(read_tender(bid))))
         return
     headings = read_tender(tender_file).settings.headings if tender_file else {}
     submission = read_submission(bid, headings=headings)

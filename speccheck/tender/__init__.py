@@ -2,5 +2,6 @@
 
 from speccheck.tender.judging import judge
 from speccheck.tender.outcome import outcome
+from speccheck.tender.vetting import vet, vetted
 
-__all__ = ["judge", "outcome"]
+__all__ = ["judge", "outcome", "vet", "vetted"]
