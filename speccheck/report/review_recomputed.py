@@ -219,7 +219,7 @@ def _exposure(ledger: Ledger, one: PanelAssessment, settings: Settings) -> None:
     for row in one.exposure.rows:
         if row.band is not None:
             ledger.band = row.band
-            _distance(ledger, row, k, one.exposure.limit_set)
+            _distance(ledger, row, k, f"{one.exposure.limit_set} {one.exposure.edition}".strip())
 
 
 def _distance(ledger: Ledger, row: ExposureRow, k: Figure, limit_set: str) -> None:
