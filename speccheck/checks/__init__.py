@@ -14,7 +14,7 @@ from speccheck.checks import housing, ports, layers
 from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
 from speccheck.checks import bands, duplex, directions
 from speccheck.checks import wind, mechanics, exposure, wording
-from speccheck.checks import innocent_gain, innocent_geometry, innocent_statements
+from speccheck.checks import innocent_gain, innocent_beams, innocent_geometry, innocent_statements
 from speccheck.checks.curves import panel_drawings
 from speccheck.checks.exposure_note import exposure_note
 from speccheck.checks.runner import examine
@@ -26,6 +26,6 @@ FAMILIES = (
     power, power_array, power_budget, losses, matching, intermodulation,
     bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip
-INNOCENT = (innocent_gain, innocent_geometry, innocent_statements)
+INNOCENT = (innocent_gain, innocent_beams, innocent_geometry, innocent_statements)
 
 __all__ = ["FAMILIES", "INNOCENT", "examine", "exposure_note", "panel_drawings"]

@@ -107,8 +107,13 @@ def uniform_widths_deg(
 
 
 def shares(model: Model) -> tuple[int, ...]:
-    """Numbers of columns that may form a beam: all of them, then every whole share down to one."""
+    """Numbers of columns that may form a beam: all of them, then every whole share down to one.
+
+    Columns of several panel groups count together too.
+    """
     columns = model.layout.columns
+    if model.groups > 1 and columns > 1:
+        columns *= model.groups
     return tuple(c for c in range(columns, 0, -1) if columns % c == 0)
 
 

@@ -23,6 +23,9 @@ REJECT, QUESTION, WIDE = 0.92, 0.95, 1.22
 """Ratios to the uniform width: narrower does not fit, needs a question, wider needs a question. On simulated
 honest panels 0.95 questions 3 % and 0.92 rejects under 0.5 %; 1.17 is a -20 dB taper."""
 
+ALL_ROUND_DEG = 300.0
+"""Width [deg] from which an antenna serves all directions and is no sector panel."""
+
 RATIO_SOURCE = "uniform array pattern (any antenna handbook); ratios set on a simulated population of panels"
 
 
@@ -173,8 +176,10 @@ def horizontal_beamwidth_fits_columns(
     return _of_fewer(model, horizontal_beamwidth, own, uniform, theirs=theirs)
 
 
-def _single_column(width: Reading) -> Judgement:
+def _single_column(width: Reading) -> Judgement | None:
     low, high = COLUMN_WIDTHS_DEG
+    if width.nominal >= ALL_ROUND_DEG:
+        return None
     fits = low - 3 <= width.nominal <= high
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOUBTFUL,

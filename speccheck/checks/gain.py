@@ -4,7 +4,7 @@ models."""
 from __future__ import annotations
 
 import math
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from speccheck.checks.beams import (
     BeamGain,
@@ -96,8 +96,12 @@ def gain_fits_geometry(
         loss_db=declared_loss_db(gain, feed_loss, efficiency),
         beam_columns=None if stated_columns is None else round(stated_columns),
     )
-    beams = beam_gains(model, claims)
-    return _judged(model, gain, claims, beams)
+    held = [(claims, beam) for beam in beam_gains(model, claims)]
+    if claims.freq_hz == model.high_hz and "frequency_mhz" not in gain.at:
+        # a best value may stand anywhere in the band, and the widths are usually those of mid band
+        middle = replace(claims, freq_hz=model.centre_hz)
+        held += [(middle, beam) for beam in beam_gains(model, middle)]
+    return _judged(model, gain, held)
 
 
 @dataclass(frozen=True, slots=True)
@@ -126,12 +130,12 @@ def _edges(model: Model, claims: Claims, beam: BeamGain) -> _Edges:
     )
 
 
-def _judged(model: Model, gain: Reading, claims: Claims, beams: tuple[BeamGain, ...]) -> Judgement:
+def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) -> Judgement:
     slack, value = last_digit_slack(gain), gain.nominal
-    ranked = [(beam, _edges(model, claims, beam)) for beam in beams]
+    ranked = [(claims, beam, _edges(model, claims, beam)) for claims, beam in held]
     order = [GainZone.PLAUSIBLE, GainZone.LOW, GainZone.QUESTION, GainZone.IMPOSSIBLE]
-    beam, edges = min(
-        ranked, key=lambda pair: (order.index(pair[1].zone(value, slack)), abs(value - pair[1].question))
+    claims, beam, edges = min(
+        ranked, key=lambda r: (order.index(r[2].zone(value, slack)), abs(value - r[2].question))
     )
     zone = edges.zone(value, slack)
     expected = beam.expected

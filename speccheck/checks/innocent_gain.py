@@ -90,38 +90,6 @@ def gain_at_best_frequency(panel: Panel, reach: Reach) -> Panel:
 
 
 @innocent(
-    "widths at the upper band edge",
-    "the beamwidths hold over the whole band or at one frequency",
-    "vertical_beamwidth",
-    "horizontal_beamwidth",
-)
-def widths_at_top(panel: Panel, reach: Reach) -> Panel:
-    """The widths held against the upper band edge."""
-
-    def at_top(reading: Reading) -> Reading:
-        band = reading.band or (panel.bands[-1] if panel.bands else None)
-        return reading if band is None else replace(reading, at={**reading.at, "frequency_mhz": band[1]})
-
-    return reread(panel, reach, ("vertical_beamwidth", "horizontal_beamwidth"), at_top)
-
-
-@innocent(
-    "widths at the lower band edge",
-    "the beamwidths hold over the whole band or at one frequency",
-    "vertical_beamwidth",
-    "horizontal_beamwidth",
-)
-def widths_at_bottom(panel: Panel, reach: Reach) -> Panel:
-    """The widths held against the lower band edge."""
-
-    def at_bottom(reading: Reading) -> Reading:
-        band = reading.band or (panel.bands[0] if panel.bands else None)
-        return reading if band is None else replace(reading, at={**reading.at, "frequency_mhz": band[0]})
-
-    return reread(panel, reach, ("vertical_beamwidth", "horizontal_beamwidth"), at_bottom)
-
-
-@innocent(
     "system-model figure: element gain + 10·log10 N",
     "the gain is computed as element gain plus 10·log10 of the elements",
     "gain",

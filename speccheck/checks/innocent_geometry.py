@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from dataclasses import replace
 
-from speccheck.checks.conventions import Reach, innocent, marked, reread, scaled, shifted
+from speccheck.checks.conventions import Reach, innocent, reread, scaled, shifted
 from speccheck.checks.model import WAVELENGTHS
 from speccheck.dictionary import parameters
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
@@ -263,44 +263,3 @@ def range_about_fixed_tilt(panel: Panel, reach: Reach) -> Panel:
         return replace(reading, value=(reading.nominal - half, reading.nominal + half))
 
     return reread(panel, reach, ("electrical_tilt", "vertical_scan"), centred)
-
-
-@innocent(
-    "horizontal width of a broadcast beam or single column",
-    "the horizontal beamwidth is that of the beam the gain belongs to",
-    "horizontal_beamwidth",
-)
-def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
-    """The width belongs to one column, whatever the gain belongs to."""
-    return reread(panel, reach, ("horizontal_beamwidth",), marked(beam_columns=1))
-
-
-@innocent(
-    "horizontal width taken at -10 dB",
-    "the horizontal beamwidth is taken at half power",
-    "horizontal_beamwidth",
-)
-def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
-    """Width divided by √(10/3), the ratio of a parabola in decibels."""
-    return reread(panel, reach, ("horizontal_beamwidth",), scaled((3 / 10) ** 0.5))
-
-
-@innocent(
-    "vertical width taken at -10 dB", "the vertical beamwidth is taken at half power", "vertical_beamwidth"
-)
-def vertical_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
-    """Width divided by 1.67, the ratio of a uniform line."""
-    return reread(panel, reach, ("vertical_beamwidth",), scaled(1 / 1.67))
-
-
-@innocent("sector width, not beamwidth", "the width is that of the sector served", "horizontal_beamwidth")
-def sector_width(panel: Panel, reach: Reach) -> Panel:
-    """A sector of 120° is served by a beam of 65° (common practice); 90° and 60° by 65° and 33°."""
-    beams = {120.0: 65.0, 90.0: 65.0, 60.0: 33.0}
-
-    def beam(reading: Reading) -> Reading:
-        return replace(
-            reading, value=beams.get(reading.nominal, reading.nominal), tolerance=reading.tolerance
-        )
-
-    return reread(panel, reach, ("horizontal_beamwidth",), beam)

@@ -23,8 +23,9 @@ _TRIANGULAR = re.compile(
 SECTOR_COLUMN_AZ_DEG = 65.0
 """Azimuth width [deg] taken for one column when the bid states none (TR 38.901 Table 7.3-1)."""
 
+MOST_GROUPS = 8
 MOST_COUNTED = 256
-"""Rows or columns beyond which a count is no count of elements."""
+"""Panel groups, and rows or columns, beyond which a count is no count of those."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -35,6 +36,7 @@ class Model:
     layout: ArrayLayout
     used: tuple[Reading, ...]
     assumptions: tuple[str, ...]
+    groups: int = 1
 
     @property
     def low_hz(self) -> float:
@@ -62,9 +64,10 @@ class Model:
     def with_columns(self, columns: int) -> Model:
         """The same array with so many columns forming the beam."""
         grouped = self.layout.subarray_columns if columns % self.layout.subarray_columns == 0 else 1
-        groups = self.layout.panel_columns if columns == self.layout.columns else 1
-        layout = replace(self.layout, columns=columns, subarray_columns=grouped, panel_columns=groups)
-        return replace(self, layout=layout)
+        pitch = self.layout.horizontal_pitch_m
+        if columns > 1 and pitch <= 0:
+            return self
+        return replace(self, layout=replace(self.layout, columns=columns, subarray_columns=grouped))
 
 
 @dataclass(frozen=True, slots=True)
@@ -151,7 +154,8 @@ def model_of(case: Case) -> Model | Lacking:
         subarray_tilt_deg=tilt,
         lattice=_lattice(maker),
     )
-    return Model(case.band, layout, _unique(maker.used), tuple(dict.fromkeys(maker.assumptions)))
+    groups = _groups(maker)
+    return Model(case.band, layout, _unique(maker.used), tuple(dict.fromkeys(maker.assumptions)), groups)
 
 
 def _unique(readings: list[Reading]) -> tuple[Reading, ...]:
@@ -164,6 +168,16 @@ def _counts(maker: _Maker) -> tuple[int | None, int]:
         maker.assumptions.append("One column: the bid states no number of columns.")
         columns = 1
     return rows, columns
+
+
+def _groups(maker: _Maker) -> int:
+    """Panel groups side by side; their columns may form one beam or one each."""
+    counts = [int(n) for n in re.findall(r"\d+", maker.text("panel_groups"))][:2]
+    groups = math.prod(counts) if counts else 1
+    if not 1 < groups <= MOST_GROUPS:
+        return 1
+    maker.assumptions.append(f"{groups} panel groups may form one beam each or one beam together.")
+    return groups
 
 
 def _lattice(maker: _Maker) -> Lattice:

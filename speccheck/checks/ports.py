@@ -183,7 +183,14 @@ def _any_subarray(
     "connectors-fit-columns",
     "RF connectors fit the columns",
     needs=("rf_ports", "array_columns"),
-    optional=("polarisations", "array_rows", "subarray_rows", "calibration_ports", "panel_groups"),
+    optional=(
+        "polarisations",
+        "array_rows",
+        "subarray_rows",
+        "transceivers",
+        "calibration_ports",
+        "panel_groups",
+    ),
     about=("rf_ports",),
     source="arithmetic; two polarisations a column (common practice)",
     scope="panel",
@@ -195,13 +202,15 @@ def connectors_fit_columns(
     polarisations: Reading | None,
     array_rows: Reading | None,
     subarray_rows: Reading | None,
+    transceivers: Reading | None,
     calibration_ports: Reading | None,
     panel_groups: Reading | None,
 ) -> Judgement:
     """Counts what the radio-frequency connectors can feed: one for each column and polarisation at most.
 
     Columns fed together need fewer connectors, never more. Columns stated by band belong to arrays of
-    their own and are added; a column divided into stated sub-arrays counts once for each of them.
+    their own and are added; a column divided into stated sub-arrays counts once for each of them, and one of
+    an active panel that states none may be divided down to its elements.
     Connectors for control and calibration are not counted.
 
     Formula
@@ -215,7 +224,8 @@ def connectors_fit_columns(
     """
     each, assumed = polarisation_count(polarisations)
     by_band = {r.band: r for r in case.panel.all("array_columns")}
-    along = max(1, whole(array_rows) // whole(subarray_rows, whole(array_rows)))
+    undivided = 1 if transceivers is not None else whole(array_rows)
+    along = max(1, whole(array_rows) // whole(subarray_rows, undivided))
     arrays = sum(whole(r) for r in by_band.values()) * group_count(panel_groups) * along
     claimed, most = whole(rf_ports), arrays * each
     fits = claimed <= most and claimed % each == 0
