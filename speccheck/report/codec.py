@@ -59,7 +59,12 @@ def _encode_scalar(item: str | float | None) -> Json:
 
 def encode_fields(item: object, home: str, leave_out: frozenset[str] = frozenset()) -> dict[str, Json]:
     """Return the fields of a record by name, without those in `leave_out`."""
-    return {name: encode(getattr(item, name), home) for name in _names(type(item)) if name not in leave_out}
+    record: type = type(item)
+    return {
+        name: value if type(value := getattr(item, name)) in _AS_THEY_ARE else encode(value, home)
+        for name in _names(record)
+        if name not in leave_out
+    }
 
 
 def decode(hint: Any, data: Json, home: str) -> Any:

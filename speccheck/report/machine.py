@@ -23,6 +23,7 @@ from speccheck.report.codec import Json, decode, decode_fields, encode, encode_f
 
 SCHEMA = "speccheck-result/1"
 
+_ENCODER = json.JSONEncoder(ensure_ascii=False, allow_nan=False, separators=(",", ":"))
 _OWN_PLACE = frozenset({"requirement", "verdict", "margin", "offered_in_unit", "offered"})
 
 
@@ -161,4 +162,4 @@ def _items(value: Json) -> str:
 
 
 def _compact(value: Json) -> str:
-    return json.dumps(value, ensure_ascii=False, allow_nan=False, separators=(",", ":"))
+    return _ENCODER.encode(value)
