@@ -10,7 +10,9 @@ from speccheck.errors import OutputError
 
 
 def write_bytes_atomic(path: Path | str, data: bytes) -> None:
-    """Write `data` to `path` so that no reader ever sees half of it.
+    """Write `data` to `path` so that no reader ever sees half of it, whatever ends the program.
+
+    It does not wait for the disk: after a power cut the file may be missing or empty.
 
     Raises
     ------
@@ -23,8 +25,6 @@ def write_bytes_atomic(path: Path | str, data: bytes) -> None:
         unfinished = Path(name)
         with os.fdopen(handle, "wb") as stream:
             stream.write(data)
-            stream.flush()
-            os.fsync(stream.fileno())
         unfinished.chmod(0o666 & ~_umask())
         unfinished.replace(target)
     except OSError as error:
