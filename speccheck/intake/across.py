@@ -151,11 +151,11 @@ class AcrossReader:
                 self._at = _Row(known[0], name)
             else:
                 self._start_panel(row, name_cell)
-        elif self._at.draft is None or not self._named:
+        elif self._at.draft is None or not (self._named or self._banded):
             self._start_panel(row, cells[0])
         self._at.band, self._at.band_name = band, band_name
         if self._at.draft is not None and (band or band_name):
-            self._by_name[self._at.name][1].add(band or band_name)
+            self._by_name[self._at.draft.name][1].add(band or band_name)
             if band and band not in self._at.draft.bands:
                 self._at.draft.bands.append(band)
 
@@ -165,7 +165,7 @@ class AcrossReader:
         else:
             top = self._table.heading_rows[0]
             title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
-            several = len(self._table.data_rows) > 1
+            several = len(self._table.data_rows) > 1 and not self._banded
             draft = Draft(
                 f"{title.name} row {row}" if several else title.name, self._grid, cell, named=title.certain
             )

@@ -66,6 +66,12 @@ class SheetResult:
     unread: list[tuple[Cell, str, str]] = field(default_factory=list)
     notices: list[tuple[Cell, str]] = field(default_factory=list)
 
+    def mark_claims(self) -> None:
+        """Say of every claim made so far that its cell is taken; reading it gives the final word."""
+        for draft in self.drafts:
+            for claim in draft.claims:
+                self.roles.setdefault((claim.cell.row, claim.cell.column), "claimed")
+
     def mark(self, cell: Cell, role: str) -> None:
         """Say what a cell was taken for; the first word stands."""
         self.roles.setdefault((cell.row, cell.column), role)

@@ -22,6 +22,8 @@ _TILTS = re.compile(
     r"\s*(?:of|=|:)?\s*((?:\d+(?:[.,]\d+)?\s*°?\s*/\s*)+\d+(?:[.,]\d+)?\s*°?)\s*[)]?\s*$",
     re.IGNORECASE,
 )
+_UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
+_LISTED = re.compile(r"^(.{3,}?)[\s(\[]+([^\W\d]+(?:\s*/\s*[^\W\d]+){1,2})[)\]]*(.*)$")
 _SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
@@ -75,7 +77,8 @@ class Labels:
         if not self._could_be_heading(text):
             return Label(text)
         cleaned = text.strip().rstrip(":").strip()
-        for found in (self._match(cleaned), self._with_tilts(cleaned), self._with_bands(cleaned)):
+        attempts = (self._with_list, self._with_unit, self._match, self._with_tilts, self._with_bands)
+        for found in (attempt(cleaned) for attempt in attempts):
             if found:
                 return replace(found, text=text)
         self._misses += 1
@@ -88,6 +91,27 @@ class Labels:
         if not any(_stem(word) in self._vocabulary for word in words):
             return False
         return max(map(len, words)) > 1 or (len(words) > 1 and _SEVERAL.search(text) is not None)
+
+    def _with_unit(self, text: str) -> Label:
+        """'Total power, W': the letter behind the comma is a unit before it is a word."""
+        cut = _UNIT_BEHIND.match(text)
+        if cut is None or not unit_name(cut[2]):
+            return Label(text)
+        found = self._match(f"{cut[1]} {cut[3]}".strip())
+        return replace(found, unit=found.unit or cut[2]) if len(found.parameters) == 1 else Label(text)
+
+    def _with_list(self, text: str) -> Label:
+        """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
+        cut = _LISTED.match(text)
+        if cut is None:
+            return Label(text)
+        found = []
+        for word in re.split(r"\s*/\s*", cut[2]):
+            single = f"{cut[1]} ({word}) {cut[3]}".strip()
+            found.append(self._with_unit(single) or self._match(single))
+        keys = tuple(key for label in found for key in label.parameters)
+        several = len(set(keys)) == len(found) and all(len(label.parameters) == 1 for label in found)
+        return replace(found[0], parameters=keys) if several else Label(text)
 
     def _with_tilts(self, text: str) -> Label:
         """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""

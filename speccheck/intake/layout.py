@@ -27,8 +27,10 @@ def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
         taken.update(table.heading_rows, table.data_rows, table.repeated)
         for part in _side_by_side(marks, table):
             AcrossReader(marks, part, result, names).read()
+    result.mark_claims()
     for down in sorted(find_down(marks, taken), key=lambda t: (t.top, t.label_column)):
         DownReader(marks, down, result, names).read()
+        result.mark_claims()
     read_lines(marks, result, names)
     _leftovers(marks, result)
     return result
@@ -62,9 +64,9 @@ def _with_own_rows(marks: Marks, table: Across) -> Across:
 
 def _leftovers(marks: Marks, result: SheetResult) -> None:
     """Cells outside every table: notes, unless a figure stands beside a word as if it were a claim."""
-    claimed = {(c.cell.row, c.cell.column) for draft in result.drafts for c in draft.claims}
+    result.mark_claims()
     for row, cells in marks.rows.items():
-        free = [c for c in cells if (row, c.column) not in result.roles and (row, c.column) not in claimed]
+        free = [c for c in cells if (row, c.column) not in result.roles]
         for position, cell in enumerate(free):
             if cell.fault:
                 result.mark(cell, "unread")

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import re
 from collections.abc import Mapping
 from dataclasses import dataclass, field, replace
 
@@ -10,6 +9,7 @@ from speccheck.dictionary import parameters
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Draft
 from speccheck.intake.reading import Found, Outcome, Reader
+from speccheck.quantities import split_footnotes
 from speccheck.records import Band, Panel, Statement, Unread
 
 FREQUENCY = frozenset({"frequency_range", "operating_bands"})
@@ -150,8 +150,7 @@ def _name_to_span(found: Found) -> None:
 
 
 def _markers(heading: str) -> tuple[str, ...]:
-    found = re.findall(r"(?<=[\w)])\s?((?:\*+|[¹²³⁴⁵⁶⁷⁸⁹]|\d\)))\s*$", heading)
-    return tuple(m.translate(str.maketrans("¹²³⁴⁵⁶⁷⁸⁹", "123456789")).strip(") ") for m in found)
+    return split_footnotes(heading)[1] if heading else ()
 
 
 def _shared_out(
@@ -161,7 +160,7 @@ def _shared_out(
     first = found[0]
     if first.parameter in FREQUENCY:
         return _frequencies(claim, found, several), None
-    if len(found) == 1 or claim.band is not None:
+    if len(found) == 1:
         return found, None
     alike = [f for f in found if f.parameter == first.parameter]
     plain = len(alike) > 1 and not any(f.figure.quantity.at for f in alike)
@@ -173,11 +172,14 @@ def _shared_out(
         for one, tilt in zip(alike, tilts, strict=True):
             one.at = {"tilt_deg": tilt}
         return found, None
-    if len(alike) == len(bands):
+    if len(alike) == len(bands) and claim.band is None:
         for one, band in zip(alike, bands, strict=True):
             one.band = band
         return found, None
-    reason = f"{len(alike)} figures in one cell, but {len(bands)} known bands to give them to"
+    if any(f.band != claim.band for f in alike):
+        return found, None
+    reason = f"{len(alike)} figures in one cell"
+    reason += f", but {len(bands)} known bands to give them to" if claim.band is None else " for one band"
     ask = "ask which figure holds for which band"
     return [], Unread(where=first.where, text=first.raw, reason=reason, suggestion=ask)
 

@@ -107,9 +107,17 @@ def _grow(marks: Marks, row: int, numbers: list[int], position: int, floor: int)
                 left = cell.column
             if span.right > right and span.left <= right + 1:
                 right = min(span.right, right + 60)
+    left = _with_names(marks, left, numbers[below : below + 6])
     table = Across(heading_rows, [], left, right)
     _collect_rows(marks, table, row, numbers[below:])
     return table if table.data_rows else None
+
+
+def _with_names(marks: Marks, left: int, rows: list[int]) -> int:
+    """The first column, one further left where rows begin with a word that has no heading."""
+    before = [c for row in rows if (c := marks.grid.cells.get((row, left - 1))) is not None]
+    words = [c for c in before if isinstance(c.raw, str) and not marks.is_heading(c)]
+    return left - 1 if words and len(words) == len(before) and len(words) * 2 >= len(rows) else left
 
 
 def _is_subheading(marks: Marks, row: int, above: int) -> bool:
@@ -149,7 +157,9 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         if not cells:
             continue
         headings = [c for c in cells if marks.is_heading(c) and c.column in texts]
-        if headings and sum(texts[c.column] == c.text for c in headings) * 2 > len(headings):
+        if len(headings) > 1 and all(texts[c.column] == c.text for c in headings):
+            if sum(marks.is_heading(c) for c in marks.rows[row]) > len(headings):
+                break
             table.repeated.append(row)
             continue
         if table.repeated and table.repeated[-1] == row - 1 and all(is_heading_filler(c.text) for c in cells):

@@ -88,7 +88,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     for grid in book.grids:
         notices += grid_notices(grid, reader.where)
     unread: list[Unread] = []
-    roles = {(t.grid.name, c.cell.row, c.cell.column): "heading" for t in titles for c in t.claims}
+    roles: dict[tuple[str, int, int], str] = {}
     for result in results:
         notices += note_notices(result, labels, reader.where)
         notices += [
@@ -96,6 +96,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
         ]
         unread += _layout_unread(result, reader)
         roles.update({(result.grid.name, row, column): role for (row, column), role in result.roles.items()})
+    roles.update({(t.grid.name, c.cell.row, c.cell.column): "heading" for t in titles for c in t.claims})
     for piece in built:
         unread += piece.unread
         roles.update(piece.roles)

@@ -21,9 +21,7 @@ CELLS = st.one_of(
     st.floats(allow_nan=False, allow_infinity=False, width=32),
     st.integers(-(10**9), 10**9),
     st.booleans(),
-    st.datetimes(min_value=EARLIEST, max_value=LATEST).map(
-        lambda d: d.replace(microsecond=0)
-    ),
+    st.datetimes(min_value=EARLIEST, max_value=LATEST).map(lambda d: d.replace(microsecond=0)),
     st.none(),
 )
 
