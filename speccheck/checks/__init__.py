@@ -12,7 +12,7 @@ from speccheck.checks import beamwidth, beamwidth_box
 from speccheck.checks import sidelobes, scan
 from speccheck.checks import housing, ports, layers
 from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
-from speccheck.checks import bands, duplex, directions
+from speccheck.checks import frequency_unit, bands, duplex, directions
 from speccheck.checks import wind, mechanics, exposure, wording
 from speccheck.checks import innocent_gain, innocent_beams, innocent_geometry, innocent_statements
 from speccheck.checks.curves import panel_drawings
@@ -24,7 +24,7 @@ FAMILIES = (
     plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box, sidelobes, scan,
     housing, ports, layers,
     power, power_array, power_budget, losses, matching, intermodulation,
-    bands, duplex, directions, wind, mechanics, exposure, wording,
+    frequency_unit, bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip
 INNOCENT = (innocent_gain, innocent_beams, innocent_geometry, innocent_statements)
 

@@ -35,15 +35,16 @@ def named_bands_inside_range(case: Case) -> Judgement | None:
     Assumptions
     A named band means all of it, both directions, as the standard prints its edges; half a megahertz is
     allowed for. A band outside the headline range does not fit; one
-    inside the headline but outside every sub-band with figures is doubtful.
+    inside the headline but outside every sub-band with figures is doubtful, as is a name the tables lack.
 
     Worked example
     n78 is 3300 to 3800 MHz. A panel for 3400 to 3600 MHz misses 300 MHz of it: it does not fit. n78 lies
     inside n77 (3300 to 4200 MHz): a panel for n77 has n78 as well, not the reverse.
     """
+    unknown = tuple(name for name in named_bands(case.panel) if operating_band(name) is None)
     named = _named(case.panel)
     ranges = stated_ranges(case.panel, "frequency_range") or stated_ranges(case.panel, "operating_bands")
-    if not named or not ranges:
+    if not ranges or not (named or unknown):
         return None
     headline, table = union(ranges), union(case.panel.bands) or union(ranges)
     outside = _not_covered(named, headline)
@@ -58,14 +59,14 @@ def named_bands_inside_range(case: Case) -> Judgement | None:
         for b, _ in named
     )
     return Judgement(
-        verdict=Fit.DOES_NOT_FIT if outside else Fit.DOUBTFUL if untold else Fit.FITS,
-        summary=_bands_summary(outside, untold, headline),
-        claimed=Amount(", ".join(b.name for b, _ in named), ""),
+        verdict=Fit.DOES_NOT_FIT if outside else Fit.DOUBTFUL if untold or unknown else Fit.FITS,
+        summary=_bands_summary(outside, untold, headline) + _not_in_tables(unknown),
+        claimed=Amount(", ".join((*(b.name for b, _ in named), *unknown)), ""),
         expected=Interval(headline[0][0], headline[-1][1], "MHz"),
         working=steps,
-        assumptions=(f"A named band means both directions in full. {listed(tuple(_editions(named)))}.",),
+        assumptions=("A named band means both directions in full.", *_editions(named)),
         question="Please state which part of each named band is covered, in MHz, for both directions.",
-        used=tuple({r.where: r for _, r in named}.values()),
+        used=tuple({r.where: r for r in named_bands(case.panel).values()}.values()),
     )
 
 
@@ -86,8 +87,12 @@ def _not_covered(named: list[tuple[OperatingBand, Reading]], offered: tuple[Band
     return found
 
 
+def _not_in_tables(unknown: tuple[str, ...]) -> str:
+    return f" The tables have no band {listed(unknown)}." if unknown else ""
+
+
 def _editions(named: list[tuple[OperatingBand, Reading]]) -> list[str]:
-    return list(dict.fromkeys(f"{b.source} {b.edition}".strip() + f", {b.confidence}" for b, _ in named))
+    return list(dict.fromkeys(f"{b.source} {b.edition}".strip() + f", {b.confidence}." for b, _ in named))
 
 
 def shown(spans: tuple[Band, ...]) -> str:

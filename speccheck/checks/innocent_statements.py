@@ -100,6 +100,23 @@ def tested_at_rating(panel: Panel, reach: Reach) -> Panel:
     return reread(panel, reach, ("passive_intermodulation",), marked(tested_at_rating=1))
 
 
+def _frequencies_times(factor: float) -> Transform:
+    def change(panel: Panel, reach: Reach) -> Panel:
+        keys = ("frequency_range", "operating_bands")
+        return reread(panel, reach, keys, lambda r: marked(unit_reread=1)(scaled(factor)(r)))
+
+    return change
+
+
+for _unit, _factor in (("gigahertz", 1000.0), ("kilohertz", 0.001)):
+    innocent(
+        f"frequencies in {_unit}",
+        f"the frequencies are in megahertz or {_unit}",
+        "frequency_range",
+        "operating_bands",
+    )(_frequencies_times(_factor))
+
+
 @innocent(
     "only part of the named band is offered",
     "the named band is offered in full or in part, in both directions",
@@ -239,11 +256,11 @@ def _with_time_factor(factor: float) -> Transform:
     return change
 
 
-for _factor, _name in (
+for _share, _name in (
     (0.75, "distance at a downlink share of 75 %"),
     (0.25, "distance at an actual-maximum factor of 0.25"),
     (0.1875, "distance at 75 % downlink share and an actual-maximum factor of 0.25"),
 ):
     innocent(
         _name, "the stated distance holds a time factor or an actual-maximum factor", "compliance_distance"
-    )(_with_time_factor(_factor))
+    )(_with_time_factor(_share))
