@@ -56,6 +56,16 @@ class Draft:
         }
 
 
+@dataclass(frozen=True, slots=True)
+class Declared:
+    """One row of a form: what is asked, offered and declared."""
+
+    required: Cell
+    offered: Cell
+    said: Cell
+    context: Context
+
+
 @dataclass(slots=True)
 class SheetResult:
     """What the layout stage hands over for one sheet: drafts, and the role of each cell it placed."""
@@ -64,7 +74,7 @@ class SheetResult:
     drafts: list[Draft] = field(default_factory=list)
     roles: dict[tuple[int, int], str] = field(default_factory=dict)
     unread: list[tuple[Cell, str, str]] = field(default_factory=list)
-    notices: list[tuple[Cell, str]] = field(default_factory=list)
+    declared: list[Declared] = field(default_factory=list)
 
     def mark_claims(self) -> None:
         """Say of every claim made so far that its cell is taken; reading it gives the final word."""

@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from speccheck.intake.bands import find_bands, is_band_label
-from speccheck.intake.claims import Claim, Context, SheetResult
+from speccheck.intake.claims import Claim, Context, Declared, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
 from speccheck.intake.down_headings import describe_columns, extend, find_headings
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
@@ -17,6 +17,13 @@ from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Down
 from speccheck.intake.words import answer
 from speccheck.records import Band
+
+_FORM = {
+    "said": frozenset({"compliance"}),
+    "required": frozenset({"required"}),
+    "offered": VALUE_ROLES,
+    "unit": frozenset({"unit"}),
+}
 
 
 @dataclass(slots=True)
@@ -265,14 +272,22 @@ class DownReader:
                 self._result.mark(cell, "label")
 
     def _answers(self, row: int) -> None:
-        """A declaration of compliance beside an offer is shown, never used as a figure."""
-        answers = [self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role == "compliance"]
-        offers = [self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role in VALUE_ROLES]
-        for said in filter(None, answers):
-            if not any(offers) and self._state.label and answer(said.text):
-                draft = self._panels.first
-                context = Context(self._state.label, heading=self._state.label.text)
-                draft.claims.append(Claim(said, context, None))
+        """A declaration of compliance stands for an offer only where there is none."""
+        cells = {role: self._cells_of(row, roles) for role, roles in _FORM.items()}
+        label = self._state.label
+        for said in cells["said"]:
+            if label is None or answer(said.text) != "comply":
+                continue
+            context = Context(label, cells["unit"][0].text if cells["unit"] else "", heading=label.text)
+            if not cells["offered"]:
+                self._panels.first.claims.append(Claim(said, context, None))
+            elif cells["required"]:
+                row_said = Declared(cells["required"][0], cells["offered"][0], said, context)
+                self._result.declared.append(row_said)
+
+    def _cells_of(self, row: int, roles: frozenset[str]) -> list[Cell]:
+        found = (self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role in roles)
+        return [cell for cell in found if cell is not None]
 
 
 def _band_said(extra: RowCells) -> tuple[Band | None, str] | None:

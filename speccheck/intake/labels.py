@@ -23,7 +23,7 @@ _TILTS = re.compile(
     re.IGNORECASE,
 )
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
-_LISTED = re.compile(r"^(.{3,}?)[\s(\[]+([^\W\d]+(?:\s*/\s*[^\W\d]+){1,2})[)\]]*(.*)$")
+_LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
@@ -102,12 +102,12 @@ class Labels:
 
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
-        cut = _LISTED.match(text)
-        if cut is None:
+        lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0]) and cut.start() > 3]
+        if not lists:
             return Label(text)
-        found = []
-        for word in re.split(r"\s*/\s*", cut[2]):
-            single = f"{cut[1]} ({word}) {cut[3]}".strip()
+        found, cut = [], lists[-1]
+        for word in re.split(r"\s*/\s*", cut[0]):
+            single = f"{text[: cut.start()].rstrip(' ([')} ({word}) {text[cut.end() :].lstrip(' )]')}".strip()
             found.append(self._with_unit(single) or self._match(single))
         keys = tuple(key for label in found for key in label.parameters)
         several = len(set(keys)) == len(found) and all(len(label.parameters) == 1 for label in found)

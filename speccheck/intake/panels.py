@@ -8,7 +8,8 @@ from dataclasses import dataclass, field, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Draft
-from speccheck.intake.reading import Found, Outcome, Reader
+from speccheck.intake.found import Found, Outcome
+from speccheck.intake.reading import Reader
 from speccheck.quantities import split_footnotes
 from speccheck.records import Band, Panel, Statement, Unread
 

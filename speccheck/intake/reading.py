@@ -3,16 +3,17 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Iterator, Mapping
-from dataclasses import dataclass, field, replace
+from collections.abc import Iterator
+from dataclasses import replace
 from functools import lru_cache
 
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.claims import Claim, Context
-from speccheck.intake.grid import Raw
+from speccheck.intake.found import Figure, Found, Outcome
+from speccheck.intake.grid import Cell, Raw
 from speccheck.intake.unitless import with_unit
 from speccheck.quantities import CellContent, DecimalHabit, Quantity, UnknownUnitError, read_cell, settle
-from speccheck.records import Band, CellRef, Reading, Sense, Statement, Status, Unread, Value
+from speccheck.records import CellRef, Sense, Statement, Status, Unread
 from speccheck.text import plain
 
 _MAX_WORDS = re.compile(
@@ -24,73 +25,6 @@ _MIN_WORDS = re.compile(
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
 _IDENTITY_UNITS = ("", "–", "-", "—")
-
-
-@dataclass(frozen=True, slots=True)
-class Figure:
-    """A quantity settled in its parameter's unit: all of a reading that does not depend on place and band."""
-
-    parameter: str
-    quantity: Quantity
-    unit: str
-    sense: Sense
-    statistic: str
-    recognised: str
-    condition: str
-    at: Mapping[str, float]
-
-
-@dataclass(slots=True)
-class Found:
-    """A reading in the making: band, tolerance and notes may still change."""
-
-    where: CellRef
-    raw: str
-    heading: str
-    figure: Figure
-    parameter: str
-    value: Value
-    band: Band | None
-    tolerance: float | None
-    remark: str = ""
-    recognised: str = ""
-    at: Mapping[str, float] = field(default_factory=dict)
-
-    def reading(self) -> Reading:
-        """The finished reading."""
-        figure, quantity = self.figure, self.figure.quantity
-        condition = figure.condition
-        if self.remark:
-            condition = f"{condition}; {self.remark}" if condition else self.remark
-        return Reading(
-            where=self.where,
-            parameter=self.parameter,
-            raw=self.raw,
-            value=self.value,
-            unit=figure.unit,
-            band=self.band,
-            tolerance=self.tolerance,
-            sense=figure.sense,
-            statistic=figure.statistic,
-            stated_value=quantity.stated_value,
-            stated_unit=quantity.stated_unit,
-            condition=condition,
-            at={**figure.at, **self.at} if self.at else figure.at,
-            heading=self.heading,
-            recognised=self.recognised or figure.recognised,
-            alternatives=quantity.alternatives,
-        )
-
-
-@dataclass(slots=True)
-class Outcome:
-    """What became of one claim."""
-
-    sheet: str
-    found: list[Found] = field(default_factory=list)
-    statement: Statement | None = None
-    unread: Unread | None = None
-    footnotes: tuple[str, ...] = ()
 
 
 _Understood = tuple[CellContent, tuple[Figure, ...], str]
@@ -109,6 +43,10 @@ class Reader:
     def where(self, sheet: str, address: str) -> CellRef:
         """The reference of a cell."""
         return CellRef(self._file, sheet, address)
+
+    def figures(self, cell: Cell, context: Context) -> tuple[Figure, ...]:
+        """What a cell would say under a heading, claimed or not."""
+        return () if cell.fault else self._understand(cell.raw, context, cell.number_format)[1]
 
     def read(self, claim: Claim, sheet: str) -> Outcome:
         """Readings of one claim, or its statement, or why it was not read."""

@@ -11,6 +11,7 @@ from pathlib import Path
 
 from speccheck.errors import UnusableInputError
 from speccheck.intake.claims import SheetResult
+from speccheck.intake.declared import contrary_notices
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.joining import joined
 from speccheck.intake.labels import Labels
@@ -91,9 +92,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     roles: dict[tuple[str, int, int], str] = {}
     for result in results:
         notices += note_notices(result, labels, reader.where)
-        notices += [
-            Notice(where=reader.where(result.grid.name, c.address), text=t) for c, t in result.notices
-        ]
+        notices += contrary_notices(result.declared, result.grid.name, reader)
         unread += _layout_unread(result, reader)
         roles.update({(result.grid.name, row, column): role for (row, column), role in result.roles.items()})
     roles.update({(t.grid.name, c.cell.row, c.cell.column): "heading" for t in titles for c in t.claims})

@@ -1,0 +1,76 @@
+"""Readings in the making: what a cell says, before the whole panel has settled band and tolerance."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import dataclass, field
+
+from speccheck.quantities import Quantity
+from speccheck.records import Band, CellRef, Reading, Sense, Statement, Unread, Value
+
+
+@dataclass(frozen=True, slots=True)
+class Figure:
+    """A quantity settled in its parameter's unit: all of a reading that does not depend on place and band."""
+
+    parameter: str
+    quantity: Quantity
+    unit: str
+    sense: Sense
+    statistic: str
+    recognised: str
+    condition: str
+    at: Mapping[str, float]
+
+
+@dataclass(slots=True)
+class Found:
+    """A reading in the making: band, tolerance and notes may still change."""
+
+    where: CellRef
+    raw: str
+    heading: str
+    figure: Figure
+    parameter: str
+    value: Value
+    band: Band | None
+    tolerance: float | None
+    remark: str = ""
+    recognised: str = ""
+    at: Mapping[str, float] = field(default_factory=dict)
+
+    def reading(self) -> Reading:
+        """The finished reading."""
+        figure, quantity = self.figure, self.figure.quantity
+        condition = figure.condition
+        if self.remark:
+            condition = f"{condition}; {self.remark}" if condition else self.remark
+        return Reading(
+            where=self.where,
+            parameter=self.parameter,
+            raw=self.raw,
+            value=self.value,
+            unit=figure.unit,
+            band=self.band,
+            tolerance=self.tolerance,
+            sense=figure.sense,
+            statistic=figure.statistic,
+            stated_value=quantity.stated_value,
+            stated_unit=quantity.stated_unit,
+            condition=condition,
+            at={**figure.at, **self.at} if self.at else figure.at,
+            heading=self.heading,
+            recognised=self.recognised or figure.recognised,
+            alternatives=quantity.alternatives,
+        )
+
+
+@dataclass(slots=True)
+class Outcome:
+    """What became of one claim."""
+
+    sheet: str
+    found: list[Found] = field(default_factory=list)
+    statement: Statement | None = None
+    unread: Unread | None = None
+    footnotes: tuple[str, ...] = ()
