@@ -6,6 +6,7 @@ import re
 
 from speccheck.checks.cell_text import words
 from speccheck.checks.registry import Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 _TOTAL = re.compile(r"total|co\s*\+|sum|±\s*30|\+/-\s*30|150\s*°|210\s*°")
@@ -56,7 +57,8 @@ def front_to_back_defined(
     kind = "total power within 180° ± 30°" if total else "co-polar at 180°" if milder else "no definition"
     return Judgement(
         verdict=Fit.DOUBTFUL if doubtful else Fit.FITS,
-        summary=f"A front-to-back ratio of {claimed:g} dB, {kind}, is {'high' if doubtful else 'usual'}"
+        summary=f"A front-to-back ratio of {claim(front_to_back_ratio)}, {kind}, is "
+        f"{'high' if doubtful else 'usual'}"
         + ("; it compares only with others of the same definition." if not total else "."),
         claimed=Amount(claimed, "dB"),
         expected=Interval(None, bound, "dB"),
@@ -106,7 +108,7 @@ def cross_polar_defined(
     trouble = " The figure over the sector is above the one on axis." if crossed else ""
     return Judgement(
         verdict=Fit.DOUBTFUL if crossed or high else Fit.FITS,
-        summary=f"A cross-polar discrimination of {claimed:g} dB, {kind}, is "
+        summary=f"A cross-polar discrimination of {claim(stated)}, {kind}, is "
         f"{'high' if high else 'usual'}.{trouble}",
         claimed=Amount(claimed, "dB"),
         expected=Interval(None, bound, "dB"),

@@ -10,6 +10,7 @@ from itertools import product
 from speccheck.checks.cell_text import half_digit, listed, words
 from speccheck.checks.exposure_inputs import Radiated, lacking, radiated
 from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.physics.exposure import (
     REFLECTION_FULL,
     REFLECTION_GROUND,
@@ -123,8 +124,8 @@ def _judged(cell: Reading, reach: _Reach, plain: float) -> Judgement:
     needed = 4 * math.pi * stated**2 / total_w
     return Judgement(
         verdict=verdict,
-        summary=f"A compliance distance of {stated:g} m is stated; {plain:.1f} m follows from power and gain "
-        f"for the {reach.population} at full power{'' if enough else said}.",
+        summary=f"A compliance distance of {claim(cell)} is stated; {plain:.1f} m follows from power and "
+        f"gain for the {reach.population} at full power{'' if enough else said}.",
         claimed=Amount(stated, "m"),
         expected=Interval(round(plain, 2), None, "m"),
         working=(

@@ -6,6 +6,7 @@ import re
 
 from speccheck.checks.cell_text import words
 from speccheck.checks.registry import Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.checks.stated_conditions import carrier_dbm
 from speccheck.physics.intermodulation import at_carrier_dbc, relative_dbc
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -59,7 +60,7 @@ def intermodulation_comparable(
         notes.append("Written without its minus sign; read as a negative level.")
     return Judgement(
         verdict=verdict,
-        summary=f"The figure is {span} at two carriers of 43 dBm"
+        summary=f"Intermodulation {claim(passive_intermodulation)} is {span} at two carriers of 43 dBm"
         + (f": {trouble}." if trouble else ", as panels usually show."),
         claimed=Amount(round(dbc, 3), "dBc"),
         expected=Interval(*_USUAL_DBC, "dBc"),

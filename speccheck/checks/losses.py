@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.physics.decibels import db
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
@@ -46,7 +47,7 @@ def gain_is_directivity_less_loss(
     return Judgement(
         verdict=Fit.DOUBTFUL if outside else Fit.FITS,
         summary=f"A directivity of {directivity.nominal:.2f} dBi less a loss of {low_db:g} to {high_db:g} dB "
-        f"gives {low:.2f} to {high:.2f} dBi; the gain is {gain.nominal:.2f} dBi.",
+        f"gives {low:.2f} to {high:.2f} dBi; the gain is {claim(gain)}.",
         claimed=Amount(gain.nominal, "dBi"),
         expected=Interval(round(low, 3), round(high, 3), "dBi"),
         working=(

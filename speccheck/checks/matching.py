@@ -6,6 +6,7 @@ import re
 
 from speccheck.checks.cell_text import half_digit, words
 from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.physics.decibels import wavelength_m
 from speccheck.physics.matching import mismatch_loss_db, return_loss_db
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -56,7 +57,7 @@ def vswr_matches_return_loss(
     typical = "; one of the two is typical" if _typical(vswr) != _typical(return_loss) else ""
     return Judgement(
         verdict=verdict,
-        summary=f"Return loss {claimed:g} dB {off} the {exact:.2f} dB of VSWR {vswr.nominal:g}{typical}.",
+        summary=f"Return loss {claim(return_loss)} {off} the {exact:.2f} dB of VSWR {claim(vswr)}{typical}.",
         claimed=Amount(claimed, "dB"),
         expected=Interval(round(low, 3), round(high, 3), "dB"),
         working=(
@@ -146,7 +147,7 @@ def isolation_plausible(
     )
     return Judgement(
         verdict=Fit.DOUBTFUL if doubtful else Fit.FITS,
-        summary=f"An isolation of {claimed:g} dB is {'high' if doubtful else 'usual'} {about}.",
+        summary=f"An isolation of {claim(port_isolation)} is {'high' if doubtful else 'usual'} {about}.",
         claimed=Amount(claimed, "dB"),
         expected=Interval(None, highest, "dB"),
         working=_isolation_steps(ports, pitch_wl),

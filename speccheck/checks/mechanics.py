@@ -6,7 +6,7 @@ import math
 
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Judgement, check
-from speccheck.checks.saying import label
+from speccheck.checks.saying import claim, label
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 _USUAL_DENSITY = (100.0, 1200.0)
@@ -57,7 +57,7 @@ def weight_fits_size(
     kind = "an active panel" if radio else "a passive panel"
     return Judgement(
         verdict=Fit.DOES_NOT_FIT if density > _SOLID_ALUMINIUM else verdict,
-        summary=f"{weight.nominal:.4g} kg in {volume * 1000:.1f} litres is {density:.0f} kg/m³, "
+        summary=f"{claim(weight)} in {volume * 1000:.1f} litres is {density:.0f} kg/m³, "
         f"{'usual' if verdict is Fit.FITS else 'unusual'} for {kind}.",
         claimed=Amount(weight.nominal, "kg"),
         expected=Interval(round(low * volume, 2), round(high * volume, 2), "kg"),

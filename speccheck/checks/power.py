@@ -6,6 +6,7 @@ import math
 
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
 from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, trp_dbm
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -64,7 +65,7 @@ def eirp_fits_power_and_gain(
     middle = float(dbm(power.nominal_w)) + gain.nominal
     return Judgement(
         verdict=_eirp_verdict(stated, excess, short),
-        summary=_eirp_summary(claimed, low, high, excess, short),
+        summary=_eirp_summary(f"{claimed:.2f} dBm ({stated.where})", low, high, excess, short),
         claimed=Amount(round(claimed, 3), "dBm"),
         expected=Interval(round(low, 3), round(high, 3), "dBm"),
         working=(
@@ -129,8 +130,8 @@ def _eirp_verdict(stated: Reading, excess: float, short: float) -> Fit:
     return Fit.DOUBTFUL if excess > _DOUBT_DB or short > allowed_short else Fit.FITS
 
 
-def _eirp_summary(claimed: float, low: float, high: float, excess: float, short: float) -> str:
-    stands = f"The EIRP of {claimed:.2f} dBm"
+def _eirp_summary(claimed: str, low: float, high: float, excess: float, short: float) -> str:
+    stands = f"The EIRP of {claimed}"
     span = f"{low:.2f} to {high:.2f} dBm that power and gain give"
     if excess > _DOUBT_DB:
         return f"{stands} lies {excess:.2f} dB above the {span}."
@@ -170,7 +171,7 @@ def erp_agrees_with_eirp(erp: Reading, eirp: Reading | None) -> Judgement | None
     fits = abs(off) <= slack
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOES_NOT_FIT,
-        summary=f"EIRP {eirp.nominal:.2f} dBm and ERP {erp.nominal:.2f} dBm differ by "
+        summary=f"EIRP {claim(eirp)} and ERP {claim(erp)} differ by "
         f"{eirp.nominal - erp.nominal:.2f} dB; the two references differ by 2.15 dB.",
         claimed=Amount(eirp.nominal, "dBm"),
         expected=Interval(_r(expected - slack), _r(expected + slack), "dBm"),
@@ -217,7 +218,7 @@ def radiated_power_below_conducted(case: Case, trp: Reading, feed_loss: Reading 
     )
     return Judgement(
         verdict=verdict,
-        summary=f"A total radiated power of {trp.nominal:.2f} dBm "
+        summary=f"A total radiated power of {claim(trp)} "
         + (f"lies {where}." if where else f"agrees with {dbm(power.nominal_w):.2f} dBm fed in.")
         + f" Expected {low:.2f} to {high:.2f} dBm.",
         claimed=Amount(trp.nominal, "dBm"),

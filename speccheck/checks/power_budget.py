@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from speccheck.checks.cell_text import half_digit, words
 from speccheck.checks.registry import Case, Judgement, check
+from speccheck.checks.saying import claim
 from speccheck.checks.transmit_power import transmit_power
 from speccheck.physics.power import dbm, rf_efficiency, total_power_w
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -52,7 +53,8 @@ def port_power_adds_up(
     said = "exceeds" if too_much else "is a small share of" if little else "stays within"
     return Judgement(
         verdict=Fit.DOES_NOT_FIT if too_much else Fit.DOUBTFUL if little else Fit.FITS,
-        summary=f"A panel limit of {claimed:g} W {said} the {together:.5g} W its ports accept together.",
+        summary=f"A panel limit of {claim(max_power_total)} {said} the {together:.5g} W its ports "
+        "accept together.",
         claimed=Amount(claimed, "W"),
         expected=Interval(round(_LEAST_SHARE * together, 2), round(together, 2), "W"),
         working=(
@@ -103,7 +105,7 @@ def transceiver_power_adds_up(
     return Judgement(
         verdict=verdict,
         summary=f"{count:g} transceivers of {power_per_transceiver.nominal:g} W give {total:.5g} W; "
-        f"{claimed:.5g} W is stated.",
+        f"{claim(conducted_power)} is stated.",
         claimed=Amount(claimed, "W"),
         expected=Interval(round(low, 3), round(high, 3), "W"),
         working=(
@@ -159,7 +161,7 @@ def mains_power_covers_rf(
     return Judgement(
         verdict=verdict,
         summary=f"{strongest.nominal_w:.5g} W of radio power for {duty * 100:.3g} % of the time from "
-        f"{power_consumption.nominal:g} W is an efficiency of {shown * 100:.3g} %.",
+        f"{claim(power_consumption)} is an efficiency of {shown * 100:.3g} %.",
         claimed=Amount(power_consumption.nominal, "W"),
         expected=Interval(round(radiated_w / _USUAL_EFFICIENCY, 2), None, "W"),
         working=(

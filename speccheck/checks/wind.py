@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Case, Judgement, check
-from speccheck.checks.saying import label
+from speccheck.checks.saying import claim, label
 from speccheck.checks.stated_conditions import wind_speed_mps
 from speccheck.physics.wind import drag_coefficient, dynamic_pressure_pa, force_n, scaled_force_n
 from speccheck.records import WIND_CAUTIONS, Amount, Fit, Interval, Panel, Reading, Step
@@ -68,7 +68,7 @@ def wind_load_fits_area(
     verdict = _drag_verdict(drag, load)
     return Judgement(
         verdict=verdict,
-        summary=f"The {name} load of {load.nominal:g} N at {speed * 3.6:.0f} km/h implies "
+        summary=f"The {name} load of {claim(load)} at {speed * 3.6:.0f} km/h implies "
         f"a drag coefficient of {drag:.2f}"
         + (", as panels usually show." if verdict is Fit.FITS else "; panels show 0.65 to 2.1."),
         claimed=Amount(load.nominal, "N"),
