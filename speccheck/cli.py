@@ -24,9 +24,9 @@ from speccheck.report.listing import listing
 from speccheck.report.machine import from_json
 from speccheck.report.readbook import read_json, write_read_book
 from speccheck.report.tender_listing import tender_listing
-from speccheck.tender import vetted
 from speccheck.revisions import compare as compare_results
 from speccheck.revisions import comparison_text
+from speccheck.tender import vetted
 
 
 class Exit(IntEnum):

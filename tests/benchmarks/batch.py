@@ -1,9 +1,11 @@
 """How a batch scales: 200 bids of five panels and two bands through one process and through two.
 
-Printed: bids per second, the ratio of two processes to one, the peak memory of each process after a tenth
-and after all of the bids, and the time per bid over openpyxl's own load of the same file (the floor,
-measured in the same run). Run: ``python tests/benchmarks/batch.py [bids]``.
+Floors measured in the same run: openpyxl's own load of one bid; the same work in a bare loop without the
+batch (what one bid costs whoever runs it); two bare loops on half the bids each in processes of their own
+(what this machine gives two processes at the moment). Run: ``python tests/benchmarks/batch.py [bids]``.
 """
+
+# ruff: noqa: E501 - rows of a bid are read as tables
 
 from __future__ import annotations
 
@@ -13,10 +15,13 @@ import statistics
 import sys
 import tempfile
 import time
+from collections.abc import Callable, Sequence
+from multiprocessing.connection import Connection
 from pathlib import Path
 
 from openpyxl import Workbook, load_workbook
 
+from speccheck import pipeline
 from speccheck.batch import assess_many
 from speccheck.intake.tender_book import read_tender
 
@@ -69,31 +74,52 @@ def write_bids(folder: Path, count: int) -> Path:
     return folder / "tender.xlsx"
 
 
-def run(folder: Path, tender_file: Path, bids: list[Path], jobs: int) -> tuple[float, float]:
-    """Wall time [s] of one batch in a fresh process, and the peak memory of any process of it [MB]."""
+def timed(work: Callable[..., None], *arguments: object) -> tuple[float, float]:
+    """Wall time [s] of some work in a fresh process, and the peak memory of any process of it [MB]."""
+    (result,) = timed_together([(work, arguments)])
+    return result
+
+
+def timed_together(
+    parts: Sequence[tuple[Callable[..., None], tuple[object, ...]]],
+) -> list[tuple[float, float]]:
+    """As `timed` for several pieces of work at the same time."""
     context = multiprocessing.get_context("spawn")
-    parent, child = context.Pipe()
-    process = context.Process(
-        target=_batch, args=(child, folder / f"out{jobs}-{len(bids)}", tender_file, bids, jobs)
-    )
-    process.start()
-    seconds, peak = parent.recv()
-    process.join()
-    return seconds, peak
+    pipes, processes = [], []
+    for work, arguments in parts:
+        parent, child = context.Pipe()
+        processes.append(context.Process(target=_measured, args=(child, work, arguments)))
+        processes[-1].start()
+        pipes.append(parent)
+    results = [pipe.recv() for pipe in pipes]
+    for process in processes:
+        process.join()
+    return results
 
 
-def _batch(pipe: object, out: Path, tender_file: Path, bids: list[Path], jobs: int) -> None:
-    tender = read_tender(tender_file)
+def _measured(pipe: Connection, work: Callable[..., None], arguments: tuple[object, ...]) -> None:
     started = time.perf_counter()
-    evaluation = assess_many(bids, out=out, tender=tender, formats=FORMATS, jobs=jobs)
+    work(*arguments)
     seconds = time.perf_counter() - started
-    bad = [bid.error for bid in evaluation.bids if bid.error]
-    if bad or len(evaluation.bids) != len(bids):
-        raise SystemExit(f"{len(bad)} of {len(bids)} bids failed: {bad[:1]}")
     usage = [
         resource.getrusage(who).ru_maxrss / 1024 for who in (resource.RUSAGE_SELF, resource.RUSAGE_CHILDREN)
     ]
-    pipe.send((seconds, max(usage)))  # type: ignore[attr-defined]
+    pipe.send((seconds, max(usage)))
+
+
+def batch(out: Path, tender_file: Path, bids: list[Path], jobs: int) -> None:
+    """The work as the program does it."""
+    evaluation = assess_many(bids, out=out, tender=read_tender(tender_file), formats=FORMATS, jobs=jobs)
+    bad = [bid.error for bid in evaluation.bids if bid.error]
+    if bad or len(evaluation.bids) != len(bids):
+        raise SystemExit(f"{len(bad)} of {len(bids)} bids failed: {bad[:1]}")
+
+
+def bare(out: Path, tender_file: Path, bids: list[Path]) -> None:
+    """The same work in a plain loop."""
+    tender = read_tender(tender_file)
+    for path in bids:
+        pipeline.write_outputs(pipeline.assess(path, tender=tender), path, out, FORMATS)
 
 
 def load_floor(bids: list[Path]) -> float:
@@ -118,17 +144,22 @@ def main() -> None:
         print(
             f"{count} bids of 5 panels x 2 bands to {', '.join(FORMATS)}; openpyxl loads one in {floor * 1e3:.1f} ms"
         )
-        single, _ = run(folder, tender_file, bids, 1)
-        print(f"one process   {single:7.1f} s  {count / single:5.1f} bids/s")
-        _, early = run(folder, tender_file, tenth, 2)
-        double, late = run(folder, tender_file, bids, 2)
+        loop, _ = timed(bare, folder / "bare", tender_file, bids)
+        single, _ = timed(batch, folder / "one", tender_file, bids, 1)
+        print(f"bare loop     {loop:7.1f} s  {loop / count * 1e3:.0f} ms a bid")
         print(
-            f"two processes {double:7.1f} s  {count / double:5.1f} bids/s  speed-up {single / double:.2f} (aim 1.8)"
+            f"one process   {single:7.1f} s  overhead a bid {(single - loop) / count * 1e3:.1f} ms (aim below {2 * floor * 1e3:.1f})"
+        )
+        halves = [(bare, (folder / f"half{i}", tender_file, bids[i::2])) for i in range(2)]
+        possible = max(seconds for seconds, _ in timed_together(halves))
+        _, early = timed(batch, folder / "tenth", tender_file, tenth, 2)
+        double, late = timed(batch, folder / "two", tender_file, bids, 2)
+        print(
+            f"two processes {double:7.1f} s  speed-up {single / double:.2f} (aim 1.8); two bare loops on half each {loop / possible:.2f}"
         )
         print(
-            f"peak memory per process {early:.0f} MB after {len(tenth)} bids, {late:.0f} MB after {count} (aim below 250, flat)"
+            f"peak memory a process {early:.0f} MB after {len(tenth)} bids, {late:.0f} MB after {count} (aim below 250, flat)"
         )
-        print(f"time per bid {single / count * 1e3:.0f} ms = {single / count / floor:.1f} x openpyxl's load")
 
 
 if __name__ == "__main__":
