@@ -39,14 +39,14 @@ def horizontal_cut(states: Excitation, beam: Beam, angle: Floats) -> Floats:
     Returns [1]: level against the beam, shape (S, P).
     Source: azimuth cut through the beam peak (a cone at constant theta).
     """
-    u_y = np.sin(beam.theta_rad)[:, None] * np.sin(angle)
-    level = _column_power(states, u_y)
+    sine, profile = np.sin(beam.theta_rad)[:, None], np.sin(angle)
+    level = _column_power(states, sine, profile)
     level *= states.element.power(beam.theta_rad[:, None], angle)
     if states.row_shifts_m is None:  # the row factor is the same all along the cut
         level /= (beam.column_power * beam.element_power)[:, None]
         return level
-    u_z = np.broadcast_to(np.cos(beam.theta_rad)[:, None], u_y.shape)
-    return level * squared(row_factor(states, u_y, u_z)) / beam.intensity[:, None]
+    u_z = np.broadcast_to(np.cos(beam.theta_rad)[:, None], level.shape)
+    return level * squared(row_factor(states, sine * profile, u_z)) / beam.intensity[:, None]
 
 
 def vertical_cut(states: Excitation, beam: Beam, angle: Floats) -> Floats:
@@ -59,29 +59,32 @@ def vertical_cut(states: Excitation, beam: Beam, angle: Floats) -> Floats:
     Source: elevation cut through the beam peak.
     """
     sin_phi, cosine = np.sin(beam.phi_rad)[:, None], np.cos(angle)
-    level = _row_power(states, cosine * sin_phi, -np.sin(angle))
+    level = _row_power(states, sin_phi, angle)
     level *= states.element.power(np.pi / 2 + angle, beam.phi_rad[:, None])
     level /= (beam.row_power * beam.element_power)[:, None]
     if np.abs(sin_phi).max() > 1e-6:
-        half = cosine[len(angle) // 2 :]
-        across = _column_power(states, half * sin_phi)
+        across = _column_power(states, sin_phi, cosine[len(angle) // 2 :])
         across /= beam.column_power[:, None]
         level *= np.concatenate([across[:, :0:-1], across], axis=1)
     return level
 
 
-def _column_power(states: Excitation, u_y: Floats) -> Floats:
+def _column_power(states: Excitation, share: Floats, profile: Floats) -> Floats:
+    """Power of the column factor over u_y = share (S, 1) times profile (P,)."""
     columns = lines(states.layout)[1]
     if not columns.factors:
-        return squared(column_factor(states, u_y))
+        return squared(column_factor(states, share * profile))
     k = states.wavenumbers[:, None]
-    return line_power(columns, k * u_y, k * states.steer_y[:, None], 0.0 * k)
+    return line_power(columns, k * share, profile, k * states.steer_y[:, None], 0.0)
 
 
-def _row_power(states: Excitation, u_y: Floats, u_z: Floats) -> Floats:
+def _row_power(states: Excitation, sin_phi: Floats, angle: Floats) -> Floats:
+    """Power of the row factor of a vertical cut."""
     rows = lines(states.layout)[0]
-    k = states.wavenumbers[:, None]
+    profile = -np.sin(angle)
     if not rows.factors or states.row_shifts_m is not None:
-        return squared(row_factor(states, u_y, np.broadcast_to(u_z, u_y.shape)))
+        u_y = sin_phi * np.cos(angle)
+        return squared(row_factor(states, u_y, np.broadcast_to(profile, u_y.shape)))
+    k = states.wavenumbers[:, None]
     fixed = -k * np.sin(np.radians(states.layout.subarray_tilt_deg))
-    return line_power(rows, k * u_z, k * states.steer_z[:, None], fixed)
+    return line_power(rows, k, profile, k * states.steer_z[:, None], fixed)

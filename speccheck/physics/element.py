@@ -15,8 +15,6 @@ from numpy.typing import ArrayLike
 
 from speccheck.physics.decibels import Floats, db, floats, ratio
 
-_FEW = 400
-"""Angles [1] below which a recurrence costs more than the cosines it saves."""
 _PER_DB = np.log(10) / 10
 """Nepers of power [1] in a decibel."""
 
@@ -84,8 +82,9 @@ class SectorElement:
         elevation = (np.degrees(theta_rad) - 90) / self.el_hpbw_deg
         azimuth = np.degrees(phi_rad) / self.az_hpbw_deg
         vertical = np.minimum(12 * elevation * elevation, self.el_floor_db)
-        total = np.minimum(vertical + 12 * azimuth * azimuth, self.floor_db)
-        return np.asarray(np.exp(-_PER_DB * total))
+        # the exponentials run over each angle alone, not over all pairs
+        product = np.exp(-_PER_DB * vertical) * np.exp(-12 * _PER_DB * azimuth * azimuth)
+        return np.asarray(np.maximum(product, 10 ** (-self.floor_db / 10)))
 
     def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
         """Slopes and curvatures of the logarithm of the power, of the parabolas before clamping.
@@ -112,11 +111,8 @@ class SectorElement:
         reach = np.radians(min(180.0, self.az_hpbw_deg * (self.floor_db / 12) ** 0.5))
         orders = _order(np.pi / 4 * float(np.hypot(y_phase, z_phase))), _order(reach / 2 * y_phase)
         sines, u_z, weights = _nodes(self, *orders)
-        weighted = _cosines(wavenumbers[:, None, None] * sines, y_m, weights)
-        over_phi = (weighted.reshape(-1, sines.shape[1]) @ np.ones(sines.shape[1])).reshape(
-            weighted.shape[:3]
-        )
-        over_theta: Floats = over_phi @ _cosines(wavenumbers[:, None] * u_z, z_m).transpose(0, 2, 1)
+        over_phi = _cosine_sums(wavenumbers[:, None, None] * sines, y_m, weights)
+        over_theta: Floats = over_phi @ np.cos((wavenumbers[:, None] * u_z)[:, :, None] * z_m)
         return over_theta + ratio(-self.floor_db) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
@@ -223,32 +219,28 @@ class IsotropicElement:
         return (0.5 if self.front_only else 1.0) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
-def _cosines(angles: Floats, lags: Floats, weights: Floats | float = 1.0) -> Floats:
-    """Cosines of lag times angle, by recurrence where the lags are whole multiples of one step.
+def _cosine_sums(angles: Floats, lags: Floats, weights: Floats) -> Floats:
+    """Sums over the last axis of weights (T, P) times cos(lag angle), angles (F, T, P): shape (F, L, T).
 
-    angles [rad/m]: shape (F, ...).
-    lags [m]: shape (L,), ascending.
-    weights [1]: factor of each angle, shape (...).
-    Returns [1]: weight cos(lag angle), shape (F, L, ...).
-    Source: cos((n + 1) x) = 2 cos x cos(n x) - cos((n - 1) x).
+    By recurrence where the lags are whole multiples of one step: cos(n + 1)x = 2 cos x cos nx - cos(n - 1)x.
     """
+    ones = np.ones(angles.shape[-1])
+    out = np.empty((len(lags), *angles.shape[:2]))
     steps = lags[1:] - lags[:-1]
-    if (
-        len(lags) < 3
-        or angles.size < _FEW
-        or abs(lags[0]) > 1e-12
-        or steps.max() - steps.min() > 1e-9 * steps[0]
-    ):
-        return weights * np.cos(angles[:, None] * lags.reshape((1, -1) + (1,) * (angles.ndim - 1)))
-    out = np.empty((len(lags), *angles.shape))  # one slab a lag, so that each step runs over adjacent memory
-    out[0] = weights
-    twice = np.cos(angles * steps[0])
-    np.multiply(weights, twice, out=out[1])
+    if len(lags) < 3 or abs(lags[0]) > 1e-12 or steps.max() - steps.min() > 1e-9 * steps[0]:
+        for n, lag in enumerate(lags):
+            out[n] = (weights * np.cos(lag * angles)) @ ones
+        return out.transpose(1, 0, 2)
+    twice = np.cos(steps[0] * angles)
+    before, last = np.broadcast_to(weights, angles.shape), weights * twice
     twice += twice
+    out[0], out[1] = before @ ones, last @ ones
     for n in range(2, len(lags)):
-        np.multiply(twice, out[n - 1], out=out[n])
-        out[n] -= out[n - 2]
-    return np.moveaxis(out, 0, 1)
+        following = twice * last
+        following -= before
+        before, last = last, following
+        out[n] = last @ ones
+    return out.transpose(1, 0, 2)
 
 
 def _isotropic_kernel(wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:

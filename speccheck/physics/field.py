@@ -126,36 +126,62 @@ def column_factor(states: Excitation, u_y: Floats) -> Complex:
     return np.asarray((states.columns[:, None] @ table)[:, 0])
 
 
-def line_power(line: Line, path_phase: Floats, steered_phase: Floats, fixed_phase: Floats) -> Floats:
+def line_power(line: Line, scale: Floats, profile: Floats, steered: Floats, fixed: Floats | float) -> Floats:
     """Power of a line that is a product of uniform lines: a cosine series in the phase between neighbours.
 
     line [Line]: with factors.
-    path_phase [rad/m]: wavenumber times direction cosine, shape (S, P).
-    steered_phase [rad/m]: the same for the steering direction, shape (S, 1).
-    fixed_phase [rad/m]: the same for the fixed direction of the sub-arrays, shape (S, 1).
+    scale [rad/m]: wavenumber times what of the direction cosine is the same all along a cut, shape (S, 1).
+    profile [1]: the rest of the direction cosine, shape (P,).
+    steered [rad/m]: wavenumber times the direction cosine of the steering, shape (S, 1).
+    fixed [rad/m]: the same for the fixed direction of the sub-arrays, shape (S, 1).
     Returns [1]: squared magnitude of the line factor, shape (S, P).
-    Source: power spectrum as the transform of the autocorrelation; Clenshaw's summation.
+    Source: array polynomial, C. A. Balanis, "Antenna Theory", ch. 6; summed by Clenshaw's recurrence.
     """
     power: Floats | None = None
     for factor in line.factors:
-        series = factor.autocorrelation
-        phase = path_phase - (steered_phase if factor.steered else fixed_phase)
-        phase *= factor.pitch_m
-        cosine = np.cos(phase, out=phase)
-        twice = cosine + cosine
-        last, before = np.full_like(twice, series[-1]), np.zeros_like(twice)
-        for coefficient in series[-2:0:-1]:
-            following = twice * last
-            following -= before
-            following += coefficient
-            last, before = following, last
-        if len(series) > 1:
-            last *= cosine
-            last -= before
-            last += last
-            last += series[0]
-        power = last if power is None else power * last
-    return np.ones_like(path_phase) if power is None else power
+        phase = (scale * factor.pitch_m) * profile
+        phase -= factor.pitch_m * (steered if factor.steered else fixed)
+        one = _series_power(np.cos(phase, out=phase), factor.amplitudes)
+        power = one if power is None else np.multiply(power, one, out=power)
+    return np.ones((len(scale), len(profile))) if power is None else power
+
+
+def _series_power(cosine: Floats, amplitudes: tuple[float, ...]) -> Floats:
+    """|sum a_n e^(j n x)|^2 from cos x.
+
+    A symmetric line is real about its middle: cos(x/2) times a series of Chebyshev polynomials of the third
+    kind for an even number, a plain cosine series for an odd one. Others: the series of autocorrelations.
+    """
+    count = len(amplitudes)
+    symmetric = amplitudes == amplitudes[::-1]
+    if symmetric:
+        terms = [2 * a for a in amplitudes[count // 2 :]]
+        if count % 2:
+            terms[0] /= 2
+    else:
+        lags = np.correlate(amplitudes, amplitudes, "full")[count - 1 :]
+        terms = [float(lags[0]), *(2 * lags[1:]).tolist()]
+    if len(terms) == 1:
+        terms.append(0.0)
+    twice = cosine + cosine
+    before: Floats | float = terms[-1]
+    last = twice * terms[-1]
+    last += terms[-2]
+    for term in terms[-3::-1]:
+        following = twice * last
+        following -= before
+        following += term
+        before, last = last, following
+    third_kind = symmetric and count % 2 == 0
+    last -= before if third_kind else before * cosine
+    if not symmetric:
+        return last
+    last *= last
+    if third_kind:
+        twice += 2
+        twice *= 0.25
+        last *= twice
+    return last
 
 
 def squared(factor: Complex) -> Floats:

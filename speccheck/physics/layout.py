@@ -114,11 +114,11 @@ class ArrayLayout:
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Factor:
-    """A uniform line that is one factor of another: its pitch [m], the autocorrelation of its amplitudes [1],
-    and whether its phase follows the steering (ports) or is fixed (inside a sub-array)."""
+    """A uniform line that is one factor of another: its pitch [m], its amplitudes [1], and whether its phase
+    follows the steering (ports) or is fixed (inside a sub-array)."""
 
     pitch_m: float
-    autocorrelation: tuple[float, ...]
+    amplitudes: tuple[float, ...]
     steered: bool
 
 
@@ -193,10 +193,11 @@ def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[
     amplitudes = np.ones(len(positions))
     if taper:
         amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
-    share = amplitudes / amplitudes.sum()
-    spread = float(share @ positions**2 - (share @ positions) ** 2)
-    along = 1j * positions
-    moments = np.array([amplitudes**0, along, along * along]).T
+    total = float(amplitudes.sum())
+    spread = float(amplitudes @ positions**2) / total - (float(amplitudes @ positions) / total) ** 2
+    moments = np.ones((len(positions), 3), complex)
+    moments[:, 1] = 1j * positions
+    moments[:, 2] = -positions * positions
     return Line(positions, centres, amplitudes, pitch, spread, moments, _factors(inner, outer, taper, pitch))
 
 
@@ -209,19 +210,14 @@ def _factors(
         if taper:
             return ()
         inside = _factors(inner, (1, 0.0), (), inner[1])
-        return (*inside, Factor(group_pitch, _autocorrelation((1.0,) * groups), True))
+        return (*inside, Factor(group_pitch, (1.0,) * groups, True))
     ports = groups * count // grouped
     if len(taper) not in (0, ports):
         return ()
-    of_ports = Factor(grouped * pitch, _autocorrelation(taper or (1.0,) * ports), True)
+    of_ports = Factor(grouped * pitch, taper or (1.0,) * ports, True)
     if grouped == 1:
         return (of_ports,)
-    return of_ports, Factor(pitch, _autocorrelation((1.0,) * grouped), False)
-
-
-@lru_cache(maxsize=256)
-def _autocorrelation(amplitudes: tuple[float, ...]) -> tuple[float, ...]:
-    return tuple(np.correlate(amplitudes, amplitudes, "full")[len(amplitudes) - 1 :].tolist())
+    return of_ports, Factor(pitch, (1.0,) * grouped, False)
 
 
 def wavenumber(freq_hz: Floats) -> Floats:

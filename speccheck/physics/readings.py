@@ -11,9 +11,8 @@ from speccheck.physics.decibels import Floats
 
 Indices = NDArray[np.intp]
 Flags = NDArray[np.bool_]
-
-_NOISE = 1e-13
-"""Rise [1] against the beam that is rounding, not a lobe."""
+Places = NDArray[np.int16]
+Singles = NDArray[np.float32]
 
 
 _FOUR, _FIVE = np.arange(-1, 3)[:, None], np.arange(-2, 3)[:, None]
@@ -51,23 +50,21 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     last = count - 1
     step = (angle_rad[-1] - angle_rad[0]) / last
     at_peak = np.rint((peak_rad - angle_rad[0]) / step)
-    at_peak = np.minimum(np.maximum(at_peak, 0), last)
-    # one pass over both sides: the reversed cut below the plain one
-    sides = np.concatenate([level, level[:, ::-1]])
-    index = np.arange(float(count))
-    beyond = index > np.concatenate([at_peak, last - at_peak])[:, None]
-    half = _half_power(sides, beyond)
-    minimum, lobe, has_lobe = _lobe_beside(sides, beyond, index[:-1])
-    outside = (index >= minimum[:cuts, None]) | (index <= last - minimum[cuts:, None])
-    best = np.where(outside, level, -1.0).argmax(1)
-    some = minimum.reshape(2, cuts).min(0) < count
-    rows = np.concatenate([np.arange(2 * cuts), np.arange(cuts)])
-    height, offset = _vertex(sides, rows, np.concatenate([lobe, best]))
+    at_peak = np.minimum(np.maximum(at_peak, 0), last).astype(np.int16)[:, None]
+    index = np.arange(count, dtype=np.int16)
+    # single precision hides the rounding of a flat cut and halves the work of comparing
+    coarse = level.astype(np.float32)
+    sides = index > at_peak, index < at_peak
+    half = _half_power(level, coarse, sides)
+    minima, lobes, found = _lobes_beside(coarse, sides, index)
+    outside = (index >= minima[0][:, None]) | (index <= minima[1][:, None])
+    best = np.where(outside, coarse, np.float32(-1)).argmax(1)
+    some = outside.any(1)
+    height, offset = _vertex(level, np.arange(3 * cuts) % cuts, np.concatenate([*lobes, best]))
     height_db = 10 * np.log10(np.maximum(height, 1e-30))
-    height_db[: 2 * cuts][~has_lobe] = np.nan
-    height_db[2 * cuts :][~some] = np.nan
+    height_db[~np.concatenate([*found, some])] = np.nan
     return CutFigures(
-        (half[:cuts] + half[cuts:] - last) * step,
+        (half[:cuts] - half[cuts:]) * step,
         height_db[cuts : 2 * cuts],
         height_db[:cuts],
         height_db[2 * cuts :],
@@ -75,49 +72,64 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     )
 
 
-def _half_power(level: Floats, beyond: Flags) -> Floats:
-    """Fractional index of the first half-power crossing, by the cubic through four samples; nan: none."""
-    rows, count = level.shape
-    low = (level < 0.5) & beyond
-    after = low.argmax(1)
-    start = np.arange(rows) * count
-    base = np.minimum(np.maximum(after - 1, 1), count - 3)
-    c0, c1, c2, c3 = _CUBIC @ level.ravel()[start + base + _FOUR]
-    first, last = after - base - 1.0, after - base
-    at = first + 0.5
-    for _ in range(3):
-        slope = np.minimum(c1 + at * (2 * c2 + 3 * c3 * at), -1e-12)
-        at = at - (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / slope
-        at = np.minimum(np.maximum(at, first), last)
-    return np.where(low.ravel()[start + after], base + at, np.nan)
+def _half_power(level: Floats, coarse: Singles, sides: tuple[Flags, Flags]) -> Floats:
+    """Fractional index of the half-power crossings, after the beam and then before it; nan: none.
+
+    By the cubic through four samples: a secant, then one step of Newton's method.
+    """
+    cuts, count = level.shape
+    low = coarse < np.float32(0.5)
+    after, before = low & sides[0], low & sides[1]
+    right = after.argmax(1)
+    left = count - 1 - before[:, ::-1].argmax(1)
+    between = np.concatenate([np.maximum(right - 1, 0), np.minimum(left, count - 2)])
+    rows = np.arange(2 * cuts) % cuts * count
+    base = np.minimum(np.maximum(between, 1), count - 3)
+    flat = level.ravel()
+    c0, c1, c2, c3 = _CUBIC @ flat[rows + base + _FOUR]
+    here, there = flat[rows + between], flat[rows + between + 1]
+    at = (between - base) + (here - 0.5) / np.where(here == there, 1.0, here - there)
+    slope = c1 + at * (2 * c2 + 3 * c3 * at)
+    at = at - (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / np.where(slope == 0, 1.0, slope)
+    return np.where(np.concatenate([after.any(1), before.any(1)]), base + at, np.nan)
 
 
-def _lobe_beside(level: Floats, beyond: Flags, index: Floats) -> tuple[Floats, Indices, Flags]:
-    """Index of the first minimum beside the beam (past the end: none), of the lobe after it, if any."""
-    rows, count = level.shape
-    start = np.arange(rows) * (count - 1)
-    rising = level[:, 1:] > level[:, :-1] + _NOISE
-    climbs = rising & beyond[:, :-1]
+def _lobes_beside(
+    coarse: Singles, sides: tuple[Flags, Flags], index: Places
+) -> tuple[tuple[Places, Places], tuple[Indices, Indices], tuple[Flags, Flags]]:
+    """After the beam and before it: index of the first minimum (off the cut: none), of the lobe, if any.
+
+    A lobe needs a fall beyond it: a rise up to the end of the cut is none.
+    """
+    cuts, count = coarse.shape
+    each = np.arange(cuts)
+    up, down = coarse[:, 1:] > coarse[:, :-1], coarse[:, 1:] < coarse[:, :-1]
+    climbs = up & sides[0][:, :-1]
     first = climbs.argmax(1)
-    minimum = np.where(climbs.ravel()[start + first], first, 2.0 * count)
-    falls = (index > minimum[:, None]) > rising
+    after = np.where(climbs[each, first], first, 2 * count).astype(np.int16)
+    falls = (index[:-1] > after[:, None]) > up
     lobe = falls.argmax(1)
-    return minimum, lobe, falls.ravel()[start + lobe]
+    drops = (down & sides[1][:, 1:])[:, ::-1]
+    first = drops.argmax(1)
+    before = np.where(drops[each, first], count - 1 - first, -1 - count).astype(np.int16)
+    rises = ((index[1:] < before[:, None]) > down)[:, ::-1]
+    other = rises.argmax(1)
+    return (after, before), (lobe, count - 1 - other), (falls[each, lobe], rises[each, other])
 
 
 def _vertex(level: Floats, rows: Indices, at: Indices) -> tuple[Floats, Floats]:
-    """Height and offset (in samples) of lobes: the quartic through five samples, by two Newton steps.
+    """Height and offset (in samples) of lobes: the quartic through five samples, the vertex of its parabola
+    refined by one Newton step.
 
     The outermost two samples of a cut stay as they are.
     """
     count = level.shape[1]
     base = np.minimum(np.maximum(at, 2), count - 3)
     c0, c1, c2, c3, c4 = _QUARTIC @ level.ravel()[rows * count + base + _FIVE]
-    t = np.zeros(len(rows))
-    for _ in range(2):
-        bend = 2 * c2 + t * (6 * c3 + 12 * c4 * t)
-        t = t - (c1 + t * (2 * c2 + t * (3 * c3 + 4 * c4 * t))) / np.where(bend < 0, bend, -np.inf)
-        t = np.minimum(np.maximum(t, -0.6), 0.6)
+    t = np.minimum(np.maximum(-c1 / np.where(c2 < 0, 2 * c2, -np.inf), -0.6), 0.6)
+    bend = 2 * c2 + t * (6 * c3 + 12 * c4 * t)
+    t = t - (c1 + t * (2 * c2 + t * (3 * c3 + 4 * c4 * t))) / np.where(bend < 0, bend, -np.inf)
+    t = np.minimum(np.maximum(t, -0.6), 0.6)
     inner = base == at
     t = np.where(inner, t, 0.0)
     height = c0 + t * (c1 + t * (c2 + t * (c3 + t * c4)))
