@@ -1,7 +1,7 @@
 """The dictionary: what a parameter is, what bidders call it, and how a heading is recognised."""
 
 from speccheck.dictionary.folding import fold
-from speccheck.dictionary.matching import HeadingMatch, match_heading
+from speccheck.dictionary.matching import HeadingMatch, match_heading, specified
 from speccheck.dictionary.parameters import LANGUAGES, Example, Parameter, parameters, synonyms
 
 __all__ = [
@@ -12,5 +12,6 @@ __all__ = [
     "fold",
     "match_heading",
     "parameters",
+    "specified",
     "synonyms",
 ]

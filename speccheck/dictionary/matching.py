@@ -67,6 +67,22 @@ def match_heading(text: str, extra: Mapping[str, str] | None = None, *, suggest:
     return _match(text, house, suggest) if house else _match_known(text, suggest)
 
 
+@functools.lru_cache(maxsize=1024)
+def specified(key: str, condition: str) -> str:
+    """The parameter that a remark beside a figure makes of another.
+
+    >>> specified("weight", "with brackets"), specified("wind_load", "lateral"), specified("gain", "typ")
+    ('weight_with_brackets', 'wind_load_lateral', 'gain')
+    """
+    words = " ".join(word for word in condition.split(", ")[0].split() if not any(c.isdigit() for c in word))
+    if not words or not word_list("vital").intersection(fold(words)):
+        return key
+    name = parameters()[key].label.split(",")[0]
+    found = match_heading(f"{name} {words}", suggest=False).parameters
+    same_unit = len(found) == 1 and parameters()[found[0]].unit == parameters()[key].unit
+    return found[0] if same_unit else key
+
+
 @functools.lru_cache(maxsize=8)
 def _house(extra: tuple[tuple[str, str], ...]) -> dict[str, str]:
     return {key_of(fold(text)): key for text, key in extra if all(k in parameters() for k in key.split("+"))}

@@ -83,7 +83,9 @@ def _toml(name: str) -> dict[str, Any]:
 
 
 def _parameter(key: str, table: dict[str, Any]) -> Parameter:
-    pairs = {name: tuple(table[name]) for name in ("plausible", "possible", "keep") if name in table}
+    pairs: dict[str, Any] = {
+        name: tuple(table[name]) for name in ("plausible", "possible", "keep") if name in table
+    }
     examples = tuple(_example(example) for example in table["examples"])
     fields: dict[str, Any] = {**table, **pairs, "key": key, "examples": examples}
     try:

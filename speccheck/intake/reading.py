@@ -7,7 +7,7 @@ from collections.abc import Iterator
 from dataclasses import replace
 from functools import lru_cache
 
-from speccheck.dictionary import Parameter, parameters
+from speccheck.dictionary import Parameter, parameters, specified
 from speccheck.intake.claims import Claim, Context
 from speccheck.intake.found import Figure, Found, Outcome
 from speccheck.intake.grid import Cell, Raw
@@ -58,12 +58,15 @@ class Reader:
                 unread=Unread(where=where, text=cell.text, reason=cell.fault, suggestion=_remedy(cell.fault)),
             )
         raw: Raw = cell.raw if claim.text is None else claim.text
+        if isinstance(raw, str) and raw.startswith("'"):
+            raw = raw[1:]  # the sign that a spreadsheet shall keep a cell as text
         key = (id(context), type(raw), raw, cell.number_format)
         known = self._known.get(key)
         if known is None:
             known = self._known[key] = self._understand(raw, context, cell.number_format)
         content, figures, trouble = known
         first = context.label.parameters[0]
+        statement = None
         if content.status is not None:
             statement = Statement(
                 where=where,
@@ -73,6 +76,7 @@ class Reader:
                 band=claim.band,
                 heading=context.heading,
             )
+        if statement and not figures:
             return Outcome(sheet, statement=statement, footnotes=content.footnotes)
         if not figures:
             reason = trouble or f"no {parameters()[first].label} could be read from it"
@@ -83,7 +87,7 @@ class Reader:
         if claim.tolerance is not None:
             self._add_tolerance(found, claim)
         unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
-        return Outcome(sheet, found, unread=unread, footnotes=content.footnotes)
+        return Outcome(sheet, found, statement=statement, unread=unread, footnotes=content.footnotes)
 
     def _add_tolerance(self, found: list[Found], claim: Claim) -> None:
         """A tolerance in a column of its own holds for the figure of its row."""
@@ -173,9 +177,10 @@ def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator
     table = parameters()
     if len(keys) == 1:
         for quantity in quantities:
-            yield (quantity.parameter if quantity.parameter in table else keys[0]), quantity
-    elif len(quantities) == len(keys):
-        yield from zip(keys, quantities, strict=True)
+            own = quantity.parameter if quantity.parameter in table else keys[0]
+            yield specified(own, quantity.condition), quantity
+    elif len(quantities) == len(keys) or (keys[0] == "array_rows" and 2 <= len(quantities) < len(keys)):
+        yield from zip(keys, quantities, strict=False)
 
 
 def _unit(context: Context) -> tuple[str, str]:

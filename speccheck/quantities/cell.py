@@ -103,7 +103,7 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
     content = _read_figures(text, wanted)
     if not content.quantities and not content.rest:
-        content = replace(content, rest=text)
+        content = replace(content, rest=text or raw.strip())
     return replace(content, footnotes=marks, status="declared" if declares(text) else None)
 
 

@@ -43,6 +43,7 @@ _REPLACEMENTS: tuple[tuple[re.Pattern[str], str], ...] = (
     (re.compile(r"''"), '"'),
     (re.compile(r"[ \r\f\v]+"), " "),
 )
+_TEXT_MARK = re.compile(r"^'(?=[\d+±≥≤<>-])")
 _POWER_OF_TEN = re.compile(r"\s?[x×·*]\s?10\^?([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+|(?<=\^)-?\d+)")
 _RAISED = re.compile(r"(?<![mM])([⁰¹²³⁴⁵⁶⁷⁸⁹]+)\)?|(?<=[mM])([⁰¹⁴⁵⁶⁷⁸⁹]+)\)?")
 _TRAILING_SIGN = re.compile(r"(?<=\S)\s?(\*{1,3}|†|‡|§|#)\)?$")
@@ -65,7 +66,7 @@ def tidy(text: str) -> str:
         clean = unicodedata.normalize("NFKC", clean).translate(_SIGNS)
     for pattern, replacement in _REPLACEMENTS:
         clean = pattern.sub(replacement, clean)
-    return clean.strip()
+    return _TEXT_MARK.sub("", clean.strip())
 
 
 def split_footnotes(text: str, *, bracketed: bool = True) -> tuple[str, tuple[str, ...]]:
