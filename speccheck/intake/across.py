@@ -118,9 +118,9 @@ class AcrossReader:
 
     def _row(self, row: int, cells: list[Cell]) -> None:
         if _EXAMPLE.match(cells[0].text):
-            for cell in cells:
+            self._result.mark(cells[0], "example")
+            for cell in cells[1:]:
                 self._result.mark(cell, "label")
-            self._result.notices.append((cells[0], "an example row of the form, not read as a claim"))
             return
         if len(cells) == 1 and len(self._fields) > 2:
             cell = cells[0]

@@ -76,6 +76,9 @@ def note_notices(result: SheetResult, labels: Labels, where: Where) -> list[Noti
     found = []
     for place, role in result.roles.items():
         cell = result.grid.cells[place]
+        if role == "example":
+            text = "an example row of the form, not read as a claim"
+            found.append(Notice(where=where(result.grid.name, cell.address), text=text))
         if role == "note" and any(letter.isdigit() for letter in cell.text) and len(cell.text) < 500:
             words = re.split(r"[\d:;,.()]", cell.text)
             if any(labels.of(word.strip()) for word in words if 3 < len(word.strip()) < 60):

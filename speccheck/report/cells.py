@@ -116,6 +116,8 @@ def _cell(address: str, item: Content, look: str) -> str:
             f'<is><t xml:space="preserve">{xml_text(item)}</t></is></c>'
         )
     style = style_number(look)
+    if isinstance(item, bool):
+        return f'<c r="{address}" s="{style}" t="b"><v>{int(item)}</v></c>'
     stored = f"<f>{xml_text(formula)}</f>" if formula else ""
     if item is None or not math.isfinite(item):
         return f'<c r="{address}" s="{style}">{stored}</c>'

@@ -24,6 +24,8 @@ from speccheck.text import plain
 LAST_COLUMN = 16_384
 LINE_POINTS = 15.0
 TALLEST_POINTS = 409.0
+LONGEST_FOOTER = 90
+"""Letters of our own in a footer, which holds 255 with its codes and doubled ampersands."""
 WIDE_LETTERS = 1.05
 """Room a letter takes, against the digit that column widths are counted in."""
 
@@ -202,7 +204,7 @@ def _links(rows: Mapping[int, Row]) -> list[tuple[str, Rich]]:
 
 def _footer(imprint: Imprint) -> str:
     """File, revision, page and time of printing; an ampersand of the text is doubled."""
-    said = plain(imprint.footer, 120).replace("&", "&&")
+    said = plain(imprint.footer, LONGEST_FOOTER).replace("&", "&&")
     return f"&L&F\n{said}&C&A, page &P of &N&Rprinted &D &T"
 
 

@@ -11,10 +11,14 @@ LONGEST_NOTE = 600
 WIDTH_POINTS = 200
 LETTERS_A_LINE = 38
 
+SHAPES_A_BLOCK = 1024
+"""Shape numbers come in blocks that the drawing lists."""
+
 _HEAD = (
     '<xml xmlns:v="urn:schemas-microsoft-com:vml" xmlns:o="urn:schemas-microsoft-com:office:office"'
     ' xmlns:x="urn:schemas-microsoft-com:office:excel">'
-    '<o:shapelayout v:ext="edit"><o:idmap v:ext="edit" data="1"/></o:shapelayout>'
+)
+_BOX = (
     '<v:shapetype id="_x0000_t202" coordsize="21600,21600" o:spt="202" path="m,l,21600r21600,l21600,xe">'
     '<v:stroke joinstyle="miter"/><v:path gradientshapeok="t" o:connecttype="rect"/></v:shapetype>'
 )
@@ -37,9 +41,11 @@ def drawing_xml(notes: Mapping[tuple[int, int], str]) -> str:
     """Return the drawing part that gives each note a hidden box big enough for its text."""
     shapes = "".join(
         _shape(number, row, column, text)
-        for number, ((row, column), text) in enumerate(notes.items(), start=1025)
+        for number, ((row, column), text) in enumerate(notes.items(), start=SHAPES_A_BLOCK + 1)
     )
-    return f"{_HEAD}{shapes}</xml>"
+    blocks = ",".join(str(1 + n) for n in range(1 + len(notes) // SHAPES_A_BLOCK))
+    numbered = f'<o:shapelayout v:ext="edit"><o:idmap v:ext="edit" data="{blocks}"/></o:shapelayout>'
+    return f"{_HEAD}{numbered}{_BOX}{shapes}</xml>"
 
 
 def _shape(number: int, row: int, column: int, text: str) -> str:

@@ -12,6 +12,7 @@ from speccheck.report.inputs import InputRow, input_rows
 FINDINGS = "Findings"
 INPUTS = "Inputs as read"
 FIRST_ROW = 2
+LAST_ROW, LAST_COLUMN = 1_048_576, 16_384
 
 _ADDRESS = re.compile(r"\$?([A-Z]{1,3})\$?([1-9][0-9]{0,6})")
 
@@ -84,11 +85,12 @@ def _numbered(assessment: Assessment) -> Iterable[NumberedFinding]:
 
 
 def row_and_column(address: str) -> tuple[int, int] | None:
-    """Row and column number of a cell address; None for what is not one."""
+    """Row and column number of a cell address; None for what is not one, or off the sheet."""
     match = _ADDRESS.match(address)
     if match is None:
         return None
     column = 0
     for letter in match[1]:
         column = column * 26 + ord(letter) - ord("A") + 1
-    return int(match[2]), column
+    row = int(match[2])
+    return (row, column) if row <= LAST_ROW and column <= LAST_COLUMN else None
