@@ -2,11 +2,12 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from speccheck.checks.saying import claim, mhz
-from speccheck.checks.transmit_power import TransmitPower, transmit_power
-from speccheck.physics.power import dbm, eirp_dbm, implied_gain_dbi, watts
+from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
+from speccheck.physics.decibels import db
+from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, eirp_dbm, implied_gain_dbi, watts
 from speccheck.records import Band, Panel, Reading, Step
 
 _ACTIVE = ("transceivers", "conducted_power", "power_per_transceiver", "power_consumption")
@@ -48,43 +49,9 @@ def radiated(panel: Panel, band: Band) -> Radiated | None:
     if power is not None and gain is not None:
         return _from_power(band, power, gain, stated)
     if stated is not None and gain is not None:
-        power_w = float(watts(stated.level_dbm - gain.high))
-        implied = Step(
-            f"Power implied, {mhz(band)}",
-            f"{stated.level_dbm:.2f} dBm − {gain.high:g} dBi",
-            round(power_w, 3),
-            "W",
-        )
-        note = f"The power follows from EIRP {claim(stated.reading)} and gain {claim(gain)}; none is stated."
-        return Radiated(
-            band=band,
-            power_w=power_w,
-            gain_dbi=gain.high,
-            eirp_dbm=stated.level_dbm,
-            whole_panel=False,
-            steps=(implied,),
-            assumptions=(*stated.notes, note),
-            readings=(stated.reading, gain),
-        )
+        return _without_power(band, gain, stated)
     if stated is not None and power is not None:
-        implied_dbi = float(implied_gain_dbi(stated.level_dbm, power.nominal_w))
-        implied = Step(
-            f"Gain implied, {mhz(band)}",
-            f"{stated.level_dbm:.2f} dBm − {dbm(power.nominal_w):.2f} dBm",
-            round(implied_dbi, 3),
-            "dBi",
-        )
-        note = f"The gain follows from EIRP {claim(stated.reading)} and the power; none is stated."
-        return Radiated(
-            band=band,
-            power_w=power.nominal_w,
-            gain_dbi=implied_dbi,
-            eirp_dbm=stated.level_dbm,
-            whole_panel=power.whole_panel,
-            steps=(power.step, implied),
-            assumptions=(*power.assumptions, *stated.notes, note),
-            readings=(*power.readings, stated.reading),
-        )
+        return _without_gain(band, power, stated)
     return None
 
 
@@ -106,47 +73,85 @@ class _StatedEirp:
 
 def _eirp(panel: Panel, band: Band) -> _StatedEirp | None:
     eirp, erp = _highest(panel, "eirp", band), _highest(panel, "erp", band)
-    if eirp is not None:
-        return _StatedEirp(eirp.high, eirp, ())
-    if erp is not None:
-        return _StatedEirp(erp.high + 2.15, erp, ("The stated ERP is raised by 2.15 dB to EIRP.",))
-    return None
+    reading = eirp or erp
+    if reading is None:
+        return None
+    level, notes = reading.high, []
+    if eirp is None:
+        level += HALF_WAVE_DIPOLE_DBI
+        notes.append("The stated ERP is raised by 2.15 dB to EIRP.")
+    if per_polarisation(reading):
+        level += float(db(2))
+        notes.append(f"EIRP {claim(reading)} is that of one polarisation; 3.01 dB are added for both.")
+    return _StatedEirp(level, reading, tuple(notes))
 
 
 def _from_power(band: Band, power: TransmitPower, gain: Reading, stated: _StatedEirp | None) -> Radiated:
     level = float(eirp_dbm(power.nominal_w, gain.high))
-    computed = Step(
-        f"EIRP, {mhz(band)}", f"10·log10({power.nominal_w:.5g}) + 30 + {gain.high:g}", round(level, 3), "dBm"
-    )
+    formula = f"10·log10({power.nominal_w:.5g}) + 30 + {gain.high:g}"
     cells = ", ".join(str(r.where) for r in power.readings)
-    notes = [
-        *power.assumptions,
-        f"Power of {mhz(band)}: {power.nominal_w:.5g} W, {power.step.formula} ({cells}).",
-    ]
-    notes.append(f"Gain of {mhz(band)}: highest stated, {gain.high:g} dBi ({gain.where}); no loss taken off.")
-    steps, readings = [power.step, computed], [*power.readings, gain]
-    if stated is not None:
-        readings.append(stated.reading)
-        higher = stated.level_dbm > level
-        used = "used, being the higher" if higher else "not used, being the lower"
-        notes.append(
-            f"EIRP stated as {stated.level_dbm:g} dBm ({stated.reading.where}) beside {level:.2f} dBm: "
-            f"the stated one is {used}."
-        )
-        if higher:
-            steps.append(
-                Step(f"EIRP as stated, {mhz(band)}", str(stated.reading.where), stated.level_dbm, "dBm")
-            )
-            level = stated.level_dbm
-    return Radiated(
+    computed = Radiated(
         band=band,
         power_w=power.nominal_w,
         gain_dbi=gain.high,
         eirp_dbm=level,
         whole_panel=power.whole_panel,
-        steps=tuple(steps),
-        assumptions=tuple(notes),
-        readings=tuple(readings),
+        steps=(power.step, Step(f"EIRP, {mhz(band)}", formula, round(level, 3), "dBm")),
+        assumptions=(
+            *power.assumptions,
+            f"Power of {mhz(band)}: {power.nominal_w:.5g} W, {power.step.formula} ({cells}).",
+            f"Gain of {mhz(band)}: highest stated, {gain.high:g} dBi ({gain.where}); no loss taken off.",
+        ),
+        readings=(*power.readings, gain),
+    )
+    return computed if stated is None else _with_stated(computed, stated)
+
+
+def _with_stated(computed: Radiated, stated: _StatedEirp) -> Radiated:
+    """The higher of computed and stated EIRP, and a word on the other."""
+    higher = stated.level_dbm > computed.eirp_dbm
+    used = "used, being the higher" if higher else "not used, being the lower"
+    note = f"EIRP stated as {claim(stated.reading)} beside {computed.eirp_dbm:.2f} dBm: the stated is {used}."
+    label = f"EIRP as stated, {mhz(computed.band)}"
+    step = Step(label, str(stated.reading.where), round(stated.level_dbm, 3), "dBm")
+    return replace(
+        computed,
+        eirp_dbm=max(stated.level_dbm, computed.eirp_dbm),
+        steps=(*computed.steps, step) if higher else computed.steps,
+        assumptions=(*computed.assumptions, *stated.notes, note),
+        readings=(*computed.readings, stated.reading),
+    )
+
+
+def _without_power(band: Band, gain: Reading, stated: _StatedEirp) -> Radiated:
+    power_w = float(watts(stated.level_dbm - gain.high))
+    formula = f"{stated.level_dbm:.2f} dBm − {gain.high:g} dBi"
+    note = f"The power follows from EIRP {claim(stated.reading)} and gain {claim(gain)}; none is stated."
+    return Radiated(
+        band=band,
+        power_w=power_w,
+        gain_dbi=gain.high,
+        eirp_dbm=stated.level_dbm,
+        whole_panel=False,
+        steps=(Step(f"Power implied, {mhz(band)}", formula, round(power_w, 3), "W"),),
+        assumptions=(*stated.notes, note),
+        readings=(stated.reading, gain),
+    )
+
+
+def _without_gain(band: Band, power: TransmitPower, stated: _StatedEirp) -> Radiated:
+    gain_dbi = float(implied_gain_dbi(stated.level_dbm, power.nominal_w))
+    formula = f"{stated.level_dbm:.2f} dBm − {dbm(power.nominal_w):.2f} dBm"
+    note = f"The gain follows from EIRP {claim(stated.reading)} and the power; none is stated."
+    return Radiated(
+        band=band,
+        power_w=power.nominal_w,
+        gain_dbi=gain_dbi,
+        eirp_dbm=stated.level_dbm,
+        whole_panel=power.whole_panel,
+        steps=(power.step, Step(f"Gain implied, {mhz(band)}", formula, round(gain_dbi, 3), "dBi")),
+        assumptions=(*power.assumptions, *stated.notes, note),
+        readings=(*power.readings, stated.reading),
     )
 
 

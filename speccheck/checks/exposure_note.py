@@ -8,7 +8,7 @@ from __future__ import annotations
 from dataclasses import replace
 
 from speccheck.checks.exposure_inputs import Radiated, active, lacking, radiated
-from speccheck.checks.exposure_rows import Frame, all_bands_rows, band_rows, distance_steps
+from speccheck.checks.exposure_rows import Frame, all_bands_rows, band_rows, cylinder_steps, distance_steps
 from speccheck.checks.exposure_words import CAUTIONS, VALIDITY
 from speccheck.checks.exposure_zone import zones
 from speccheck.checks.plausibility import impossible
@@ -54,7 +54,8 @@ def exposure_note(panel: Panel, settings: Settings) -> ExposureNote:
         validity=VALIDITY,
         factors=_factors(frame),
         working=tuple(dict.fromkeys(step for s in sources for step in s.steps))
-        + distance_steps(sources, frame),
+        + distance_steps(sources, frame)
+        + cylinder_steps(panel, sources, frame),
         around=around,
         where=readings,
     )

@@ -11,6 +11,7 @@ from speccheck.physics.decibels import ratio
 from speccheck.physics.exposure import (
     combined_distance_m,
     cylindrical_crossover_m,
+    cylindrical_iec62232_wm2,
     cylindrical_oet65_wm2,
     distance_m,
     far_field_exposure_m,
@@ -159,6 +160,30 @@ def all_bands_rows(sources: tuple[Radiated, ...], frame: Frame) -> tuple[Exposur
             )
         )
     return tuple(rows)
+
+
+def cylinder_steps(panel: Panel, sources: tuple[Radiated, ...], frame: Frame) -> tuple[Step, ...]:
+    """Peak density at the public distance by the IEC 62232 cylindrical formula, where its inputs are stated.
+
+    The formula is from memory (medium confidence); its peak is twice the spatial average.
+    """
+    steps = []
+    for source in sources:
+        level = frame.level(source, POPULATIONS[0], BASES[0])
+        height, width = panel.get("height"), panel.get("horizontal_beamwidth", source.band)
+        if level is None or height is None or width is None or not 0 < width.nominal <= 360:
+            continue
+        r = float(distance_m(source.eirp_w, level[1].value_w_m2, frame.reflection))
+        gain, high = float(ratio(source.gain_dbi)), height.nominal
+        average = float(
+            cylindrical_iec62232_wm2(
+                source.power_w, r, height_m=high, az_hpbw_deg=width.nominal, directivity=gain
+            )
+        )
+        label = f"Cylindrical formula of IEC 62232 at {r:.1f} m, {mhz(source.band)}, peak 2·S_avg"
+        formula = f"P {source.power_w:.4g} W, L {high:g} m, φ₃ {width.nominal:g}°, D {gain:.4g}"
+        steps.append(Step(label, formula, round(2 * frame.reflection * average, 4), "W/m²"))
+    return tuple(steps)
 
 
 def distance_steps(sources: tuple[Radiated, ...], frame: Frame) -> tuple[Step, ...]:

@@ -9,11 +9,12 @@ from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
 from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
 from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, trp_dbm
-from speccheck.records import Amount, Fit, Interval, Reading, Step
+from speccheck.records import Amount, Fit, Interval, Reading, Sense, Step
+from speccheck.standards import power_classes
 
 _DOUBT_DB = 0.3
 _MISFIT_DB = 1.0
-_EIRP_ACCURACY_DB = 2.2
+_MILLIMETRE_WAVE_MHZ = 24_250.0
 _LARGEST_LOSS_DB = 3.0
 
 
@@ -44,8 +45,8 @@ def eirp_fits_power_and_gain(
     Assumptions
     Average power, not peak. The lowest and highest gain stated for the band with its tolerance, half of the
     last printed digit of every figure, and a stated feed loss span the interval. More than 0.3 dB outside is
-    doubtful, more than 1 dB above does not fit. An EIRP stated as a minimum may lie 2.2 dB lower (accuracy
-    of declared beams, 3GPP TS 38.104 clause 9.2, from memory).
+    doubtful, more than 1 dB above does not fit. An EIRP stated as a minimum may lie 2.2 dB lower, 3.4 dB
+    from 24.25 GHz (accuracy of declared beams, 3GPP TS 38.104 clause 9.2, from memory).
 
     Worked example
     320 W is 55.05 dBm; with 24.5 dBi the EIRP is 79.55 dBm. A claim of 82.5 dBm needs 27.45 dBi: it does not
@@ -64,7 +65,7 @@ def eirp_fits_power_and_gain(
     short = low - claimed - slack
     middle = float(dbm(power.nominal_w)) + gain.nominal
     return Judgement(
-        verdict=_eirp_verdict(stated, excess, short),
+        verdict=_eirp_verdict(case, stated, excess, short),
         summary=_eirp_summary(f"{claimed:.2f} dBm ({stated.where})", low, high, excess, short),
         claimed=Amount(round(claimed, 3), "dBm"),
         expected=Interval(round(low, 3), round(high, 3), "dBm"),
@@ -123,8 +124,15 @@ def _eirp_span(case: Case, power: TransmitPower, feed_loss: Reading | None) -> t
     return float(dbm(floor_w)) + lowest - loss_db, float(dbm(power.high_w)) + highest
 
 
-def _eirp_verdict(stated: Reading, excess: float, short: float) -> Fit:
-    allowed_short = _EIRP_ACCURACY_DB if stated.sense == "min" else _DOUBT_DB
+def _declared_accuracy_db(case: Case) -> float:
+    """How far a declared minimum may lie below the rated EIRP [dB]: accuracy of TS 38.104 clause 9.2."""
+    kind = "2-O" if case.band is not None and case.band[0] >= _MILLIMETRE_WAVE_MHZ else "1-O"
+    rows = (c for c in power_classes() if "EIRP accuracy" in c.quantity and kind in c.equipment)
+    return next((c.limit for c in rows if c.limit is not None), _DOUBT_DB)
+
+
+def _eirp_verdict(case: Case, stated: Reading, excess: float, short: float) -> Fit:
+    allowed_short = _declared_accuracy_db(case) if stated.sense is Sense.MIN else _DOUBT_DB
     if excess > _MISFIT_DB:
         return Fit.DOES_NOT_FIT
     return Fit.DOUBTFUL if excess > _DOUBT_DB or short > allowed_short else Fit.FITS

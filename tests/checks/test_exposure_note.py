@@ -211,6 +211,20 @@ def test_cylindrical_model_only_where_it_holds():
     assert strong.cylindrical_distance_m is None
 
 
+def test_iec_cylindrical_formula_nears_the_spherical_one_far_out():
+    """IEC 62232 (from memory): far out 2·S_avg is P·D/(12·r²) against P·D/(4π·r²), 4.7 % more."""
+    note = note_of({**COLUMN, "max_power_per_port": 5000, "height": "300 mm"})
+    step = next(s for s in note.working if s.label.startswith("Cylindrical formula of IEC 62232"))
+    assert step.value == pytest.approx(8.55 * 4 * math.pi / 12, rel=0.01)
+
+
+def test_stated_eirp_of_one_polarisation_is_doubled():
+    """80 + 3.01 dBm by hand; without it the distance would be short by 1.41."""
+    one = {"value": 80.0, "raw": "80 dBm per polarisation"}
+    note = note_of({"frequency_range": [3300, 3800], "eirp": one, "gain": "25.0 dBi"})
+    assert row(note).eirp_dbm == pytest.approx(83.01, abs=0.005)
+
+
 COLUMN: dict[str, Any] = {
     "frequency_range": [1710, 2170],
     "array_rows": 10,
