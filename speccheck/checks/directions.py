@@ -9,13 +9,15 @@ from speccheck.checks.registry import Judgement, check
 from speccheck.checks.saying import claim
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
-_TOTAL = re.compile(r"total|co\s*\+|sum|±\s*30|\+/-\s*30|150\s*°|210\s*°")
-_CO_POLAR_ONLY = re.compile(r"co-?\s?pol")
+_TOTAL = re.compile(r"total|gesamtleistung|potenza tot|co\s*\+|sum|±\s*30|\+/-\s*30|150\s*°|210\s*°")
+_CO_POLAR_ONLY = re.compile(r"[ck]o-?\s?pol")
 _USUAL_TOTAL_DB = 32.0
 _USUAL_CO_POLAR_DB = 40.0
 _UNDEFINED_DB = 30.0
-_SECTOR = re.compile(r"sector|±\s*60|\+/-\s*60|over .*beam|60\s*°")
-_ON_AXIS = re.compile(r"axis|boresight|(?<!\d)0\s*°|main direction|peak")
+_SECTOR = re.compile(r"se[ck]t[oe]u?r|settore|±\s*60|\+/-\s*60|over .*beam|60\s*°")
+_ON_AXIS = re.compile(
+    r"\b(?:axis|achse|axe|asse|eje)\b|boresight|hauptstrahl|(?<!\d)0\s*°|main direction|peak"
+)
 _USUAL_SECTOR_DB = 15.0
 _USUAL_AXIS_DB = 35.0
 _UNDEFINED_CROSS_DB = 25.0
