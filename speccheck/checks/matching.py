@@ -11,7 +11,7 @@ from speccheck.physics.decibels import wavelength_m
 from speccheck.physics.matching import mismatch_loss_db, return_loss_db
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
-_TYPICAL = re.compile(r"\bt[yi]p")
+_TYPICAL = re.compile(r"\bt[yi]p(?:\.|ic|isch|\b)")
 _PAIR_NAMED = re.compile(
     r"cross|intra|inter|pol|\+\s*45|between (bands|columns|arrays)|same (band|column)|co-"
 )

@@ -23,7 +23,7 @@ _KEY_FIGURES = (
     "cross_polar_discrimination",
     *_GUARANTEED,
 )
-_TYPICAL = re.compile(r"\bt[yi]p")
+_TYPICAL = re.compile(r"\bt[yi]p(?:\.|ic|isch|\b)")
 _STATISTICS = (
     "industry recommendation on base-station antennas: tolerance is 1.5 standard deviations (from memory)"
 )
