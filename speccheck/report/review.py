@@ -36,11 +36,11 @@ def review_bytes(assessment: Assessment) -> bytes:
     """Return the review workbook as an .xlsx file; the same assessment gives the same bytes."""
     places = place_everything(assessment)
     questions = collect_questions(assessment, label)
+    judged = (findings(places), requirements(assessment, places))
     sheets: list[Table | Grid] = [
         read_me(assessment, places),
-        summary(assessment, questions),
-        findings(places),
-        requirements(assessment, places),
+        summary(assessment, questions, judged),
+        *judged,
         question_list(questions, places),
         inputs_as_read(assessment.submission, places),
         *mirror_grids(assessment, places),

@@ -2,22 +2,22 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable
+from collections.abc import Iterable, Sequence
 
 from speccheck.records import Assessment, Compliance, Fit, Level, Outcome, PanelAssessment
-from speccheck.report.cells import Content, Rich
+from speccheck.report.cells import Content, Rich, column_letter
 from speccheck.report.questions import Question
-from speccheck.report.review_parts import linked_cells
+from speccheck.report.review_parts import PEOPLE, linked_cells
 from speccheck.report.review_places import Places
 from speccheck.report.sheets import Column, Table
 from speccheck.report.summary import tally
 
 
-def summary(assessment: Assessment, questions: Iterable[Question]) -> Table:
-    """One row a panel: outcome, counts, what decided it."""
+def summary(assessment: Assessment, questions: Iterable[Question], judged: Sequence[Table]) -> Table:
+    """One row a panel: outcome, counts, what decided it; `judged` are the sheets that people review."""
     asked = [question.panel_number for question in questions]
     rows = [
-        _summary_row(number, one, asked.count(number))
+        _summary_row(number, one, asked.count(number), _overrides(number + 1, judged))
         for number, one in enumerate(assessment.panels, start=1)
     ]
     counts = ("Fits", "Doubtful", "Does not fit", "Checks not judged")
@@ -30,6 +30,12 @@ def summary(assessment: Assessment, questions: Iterable[Question]) -> Table:
             *(Column(heading=name, width=11, look="number0", note="Number of checks.") for name in counts),
             *(Column(heading=name, width=13, look="number0", note="Number of rows.") for name in required),
             Column(heading="Questions", width=11, look="number0"),
+            Column(
+                heading="Reviewed",
+                width=11,
+                look="number0",
+                note="Rows with a reviewer's verdict; counts live.",
+            ),
             Column(heading="Reasons", width=70, look="wrap"),
         ),
         rows=rows,
@@ -41,7 +47,7 @@ _MISSED = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
 _OPEN = (Compliance.DECLARED_ONLY, Compliance.NOT_STATED, Compliance.NOT_JUDGED)
 
 
-def _summary_row(number: int, one: PanelAssessment, questions: int) -> list[Content]:
+def _summary_row(number: int, one: PanelAssessment, questions: int, reviewed: Rich) -> list[Content]:
     counted = tally(one)
     return [
         Rich(value=one.panel.name or f"Panel {number}", look="text"),
@@ -51,8 +57,23 @@ def _summary_row(number: int, one: PanelAssessment, questions: int) -> list[Cont
         counted.of(Level.DESIRABLE, *_MET),
         counted.of(Level.DESIRABLE, *_MISSED, *_OPEN),
         questions,
+        reviewed,
         "; ".join(one.reasons),
     ]
+
+
+def _overrides(row: int, judged: Sequence[Table]) -> Rich:
+    """A live count of the rows of the panel named in column A that carry a reviewer's verdict."""
+    counts = []
+    for table in judged:
+        headings = [column.heading for column in table.columns]
+        last = len(table.rows) + 1
+        panel, verdict = (
+            f"'{table.name}'!${letter}$2:${letter}${max(last, 2)}"
+            for letter in (column_letter(1 + headings.index(name)) for name in ("Panel", PEOPLE[0].heading))
+        )
+        counts.append(f'SUMPRODUCT(({panel}=$A{row})*({verdict}<>""))')
+    return Rich(value=0, formula="+".join(counts))
 
 
 def question_list(questions: Iterable[Question], places: Places) -> Table:

@@ -53,6 +53,10 @@ def recalculated(data, folder):
     return openpyxl.load_workbook(folder / "out" / "review.xlsx", data_only=True)
 
 
+def reviewed(book):
+    return [row[-2] for row in book["Summary"].iter_rows(min_row=2, values_only=True)]
+
+
 def figures(book):
     return {row[0]: row[5] for row in book["Recomputed"].iter_rows(min_row=2, values_only=True)}
 
@@ -89,3 +93,15 @@ def test_recomputed_distances_are_those_of_the_exposure_note(sample):
     found = [row[5] for row in sheet.iter_rows(values_only=True) if row[4].startswith("The same, rounded up")]
     notes = [one.exposure for one in assessment.panels if one.exposure and one.exposure.complete]
     assert found == [row.distance_m for note in notes for row in note.rows if row.band is not None]
+
+
+@needs_soffice
+def test_summary_counts_the_verdicts_of_reviewers(bid, tmp_path):
+    book = openpyxl.load_workbook(io.BytesIO(review_bytes(bid)))
+    assert reviewed(openpyxl.load_workbook(io.BytesIO(review_bytes(bid)), data_only=True)) == [0]
+    for sheet, row in (("Findings", 2), ("Findings", 3), ("Requirements", 3)):
+        headings = [cell.value for cell in book[sheet][1]]
+        book[sheet].cell(row, 1 + headings.index("Reviewer's verdict")).value = "fits"
+    saved = io.BytesIO()
+    book.save(saved)
+    assert reviewed(recalculated(saved.getvalue(), tmp_path)) == [3]

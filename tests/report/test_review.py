@@ -27,6 +27,9 @@ HOSTILE = [
     "x" * 10_000,
 ]
 
+LIVE = ("Summary", "Recomputed")
+"""Sheets with formulas of our own."""
+
 
 @pytest.fixture
 def book(bid):
@@ -209,7 +212,7 @@ def test_text_never_becomes_a_formula(bid):
     book = openpyxl.load_workbook(io.BytesIO(data))
     for sheet in book:
         formulas = [cell for row in sheet.iter_rows() for cell in row if cell.data_type == "f"]
-        assert not formulas or sheet.title == "Recomputed"
+        assert not formulas or sheet.title in LIVE
     for number, text in enumerate(HOSTILE, 2):
         cell = book["Input 1"][f"B{number}"]
         assert cell.data_type == "s"
@@ -269,4 +272,4 @@ def test_any_assessment_gives_a_workbook_that_opens_and_runs_nothing(one):
     assert len(table(book["Findings"])) == sum(len(panel.findings) for panel in one.panels)
     for sheet in book:
         formulas = [cell for row in sheet.iter_rows() for cell in row if cell.data_type == "f"]
-        assert not formulas or sheet.title == "Recomputed"
+        assert not formulas or sheet.title in LIVE
