@@ -14,7 +14,9 @@ _NUMBER = r"(\d{1,3}(?:[ ,.'\u00a0\u2009\u202f]\d{3})(?!\d)|\d+(?:[.,]\d+)?)"
 _DASH = (
     r"\s*(MHz|GHz)?\s*(?:-|–|—|−|‐|‑|~|…|\.{2,3}|÷|\bto\b|\bbis\b|\bà\b|\ba\b|\btot\b|\bdo\b|\baté\b|/)\s*"
 )
-_RANGE = re.compile(_NUMBER + _DASH + _NUMBER + r"(?:\s*(MHz|GHz))?(?![\d°%λ])", re.IGNORECASE)
+_RANGE = re.compile(
+    r"(?<![\w.,])" + _NUMBER + _DASH + _NUMBER + r"(?:\s*(MHz|GHz))?(?![\d°%λ])", re.IGNORECASE
+)
 _NAME = re.compile(r"(?<![\w-])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])(\d{1,3})(?![\w.-])")
 _LOWEST_MHZ, _HIGHEST_MHZ = 60.0, 110_000.0
 

@@ -7,6 +7,7 @@ from dataclasses import dataclass, field
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, Declared, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
+from speccheck.intake.down_bands import NamedBand, band_of_row, bands_of_columns
 from speccheck.intake.down_headings import describe_columns, extend, find_headings
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.down_row import RowCells, joined_label, row_cells
@@ -162,62 +163,58 @@ class DownReader:
             if column is None:
                 continue
             if column.role in VALUE_ROLES and cell is not extra.band:
-                self._claim(cell, column, label, extra)
+                self._claim(cell, label, extra)
             else:
                 self._result.mark(cell, "note" if column.role == "remark" else "label")
         self._answers(row)
 
-    def _claim(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> None:
-        state = self._state
-        draft = self._panels.of(column)
-        condition = extra.condition_text
-        band, name = self._band_of(cell, column, label, extra)
+    def _claim(self, cell: Cell, label: Label, extra: RowCells) -> None:
         if cell.row == self._panels.model_row and label.parameters[0] in NAME_KEYS:
             self._result.mark(cell, "heading")
             return
+        span = self._grid.span(cell)
+        covered = [c for c in self._columns.values() if span.left <= c.index <= span.right]
+        firsts = {id(self._panels.of(c)): c for c in reversed(covered) if c.role in VALUE_ROLES}
+        for first in reversed(firsts.values()):
+            for band in self._bands_of(cell, first, label, extra):
+                self._add_claim(cell, first, label, extra, band)
+
+    def _add_claim(
+        self, cell: Cell, column: Column, label: Label, extra: RowCells, said_of: NamedBand
+    ) -> None:
+        band, name = said_of
+        heading = self._state.label.text if self._state.label else ""
+        condition = extra.condition_text
         context = Context(
             label=label,
             unit=extra.unit(column),
             condition=condition if not find_bands(condition).proved else find_bands(condition).rest,
             statistic=column.statistic,
-            heading=state.label.text if state.label and state.label.text else label.text,
+            heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )
-        claim = Claim(cell, context, band, banded=band is not None or bool(name), tolerance=extra.tolerance)
-        draft.claims.append(claim)
+        draft = self._panels.of(column)
+        banded = band is not None or bool(name)
+        draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance))
         if band is not None and band not in draft.bands:
             draft.bands.append(band)
 
-    def _band_of(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> tuple[Band | None, str]:
+    def _bands_of(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> list[NamedBand]:
         if label.bands.spans:
-            return label.bands.hull, ""
-        said = _band_said(extra)
+            return [(label.bands.hull, "")]
+        said = band_of_row(extra)
         if said is not None:
-            return said
-        span = self._grid.span(cell)
-        others = [
-            c for i, c in self._columns.items() if span.left < i <= span.right and c.role in VALUE_ROLES
-        ]
-        if any(c.band != column.band or c.band_name != column.band_name for c in others):
-            return None, ""
-        if column.band or column.band_name:
-            if self._said_once(cell, column):
-                return None, ""
-            return column.band, column.band_name if column.band is None else ""
-        return self._of_section()
+            return [said]
+        draft = self._panels.of(column)
+        values = [c for c in self._columns.values() if c.role in VALUE_ROLES]
+        mine = [c for c in values if self._panels.of(c) is draft]
+        return bands_of_columns(self._grid, mine, cell, column) or [self._of_section()]
 
-    def _of_section(self) -> tuple[Band | None, str]:
+    def _of_section(self) -> NamedBand:
         state = self._state
         if state.side_name:
             return state.side_band, "" if state.side_band else state.side_name
         return state.section_band, "" if state.section_band else state.section_name
-
-    def _said_once(self, cell: Cell, column: Column) -> bool:
-        """A figure in the first of a panel's band columns only is said of all: merges get lost."""
-        mine = [c for c in self._columns.values() if c.role in VALUE_ROLES and (c.band or c.band_name)]
-        mine = [c for c in mine if self._panels.of(c) is self._panels.of(column)]
-        filled = [c for c in mine if self._grid.covering(cell.row, c.index) is not None]
-        return len(mine) > 1 and mine[0] is column and filled == [column]
 
     def _maybe_new_panel(self) -> None:
         """A title inside the table, over parameters the panel above already has, starts the next panel."""
@@ -288,12 +285,3 @@ class DownReader:
     def _cells_of(self, row: int, roles: frozenset[str]) -> list[Cell]:
         found = (self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role in roles)
         return [cell for cell in found if cell is not None]
-
-
-def _band_said(extra: RowCells) -> tuple[Band | None, str] | None:
-    """The band a row's own band or condition cell names, if any."""
-    for text in filter(None, (extra.band.text if extra.band else "", extra.condition_text)):
-        bands = find_bands(text)
-        if bands.proved or is_band_label(text):
-            return bands.hull, "" if bands.hull else text
-    return None

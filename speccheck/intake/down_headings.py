@@ -7,7 +7,7 @@ from speccheck.intake.claims import SheetResult
 from speccheck.intake.columns import Column, describe, heading_stack
 from speccheck.intake.grid import Cell
 from speccheck.intake.marks import Marks
-from speccheck.intake.regions import Down, cells_between
+from speccheck.intake.regions import Down, cells_between, heads_columns
 from speccheck.intake.roles import settle_roles
 from speccheck.intake.words import column_role
 
@@ -52,6 +52,8 @@ def extend(marks: Marks, table: Down, result: SheetResult) -> None:
     while True:
         cells = cells_between(marks, row + 1, table.label_column, table.right)
         if len(cells) < 2 or any((c.row, c.column) in result.roles for c in cells):
+            break
+        if heads_columns(marks, row + 1, table.label_column):
             break
         if cells[0].column == table.label_column and len(cells[0].text) > _LONG_NOTE:
             break

@@ -19,9 +19,13 @@ _NOT_A_CODE = re.compile(
 )
 _PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—]\s+")
 _DESCRIBES = re.compile(
-    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|annex|"
-    r"appendix|form|response|schedule|questionnaire|page|values?|all|valid|"
+    r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|"
+    r"annex|appendix|form|response|schedule|questionnaire|page|values?|all|valid|"
     r"datenblatt|fiche|ficha|scheda|hoja|karta|donnees|datos|dati|dados|dane|gegevens|technische)\b"
+)
+_OF = re.compile(r"^(?:of|for|de|du|del|di|da|für|von|van|dla)\s+", re.IGNORECASE)
+_INSIDE = re.compile(
+    r"\b(?:panel|antenna|type|model|Antenne|antenne|antena|Typ)\s+([A-Z][\w-]*(?:\s+[A-Z0-9][\w./-]*){0,3})$"
 )
 _LONG_TITLE = 90
 _LONG_NAME = 40
@@ -43,7 +47,10 @@ def model_name(text: str) -> str:
     """
     words = " ".join(text.split())
     stripped = _without_prefix(words, "prefix")
-    plain = _without_prefix(stripped, "weak")
+    plain = _OF.sub("", _without_prefix(stripped, "weak"))
+    inside = _INSIDE.search(plain)
+    if stripped == words and inside is not None:
+        stripped = plain = inside[1]
     parts = [part for part in _PARTS.split(plain) if part and not _DESCRIBES.search(fold(part))]
     name = parts[0] if parts else plain
     codes = _codes(name)
@@ -75,7 +82,10 @@ def _score(text: str, sheet: str) -> int:
     if len(sheet) > 2 and not is_generic_sheet_name(sheet) and fold(sheet) in fold(words):
         return 4
     stripped = _without_prefix(words, "prefix")
-    if stripped != words and len(stripped) <= _LONG_NAME and _codes(stripped):
+    inside = _INSIDE.search(words)
+    if stripped != words and len(stripped) <= _LONG_NAME and (_codes(stripped) or stripped[-1:].isdigit()):
+        return 3
+    if inside is not None and any(letter.isdigit() for letter in inside[1]):
         return 3
     if _codes(words):
         return 2
@@ -109,11 +119,9 @@ class Names:
         candidates: list[Cell] = []
         for row in range(top - 1, max(0, top - 25), -1):
             cells = [c for c in marks.rows.get(row, ()) if c.column <= right]
-            if any(
-                (c.row, c.column) in result.roles and result.roles[c.row, c.column] != "note" for c in cells
-            ):
-                break
             near = [c for c in cells if c.column >= left - 2] or cells
+            if any(result.roles.get((c.row, c.column), "note") != "note" for c in near):
+                break
             candidates += [c for c in near if isinstance(c.raw, str) and not marks.is_heading(c)]
         scores = [_score(c.text, sheet) for c in candidates]
         if any(scores):

@@ -243,14 +243,15 @@ def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[t
     start = previous = rows[0]
     for row in rows[1:]:
         between = range(previous + 1, row)
-        if any(r in taken or _heads_columns(marks, r, column) for r in between):
+        if any(r in taken or heads_columns(marks, r, column) for r in between):
             runs.append((start, previous))
             start = row
         previous = row
     return [*runs, (start, previous)]
 
 
-def _heads_columns(marks: Marks, row: int, column: int) -> bool:
+def heads_columns(marks: Marks, row: int, column: int) -> bool:
+    """Whether a row is the heading row of a table with its labels in this column."""
     cell = marks.grid.cells.get((row, column))
     if cell is None or column_role(cell.text) != "parameter":
         return False
