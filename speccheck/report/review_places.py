@@ -7,6 +7,7 @@ from collections.abc import Iterable
 from dataclasses import dataclass, field
 
 from speccheck.records import Assessment, CellRef, Finding
+from speccheck.report.cells import column_letter
 from speccheck.report.inputs import InputRow, input_rows
 
 FINDINGS = "Findings"
@@ -40,6 +41,7 @@ class NumberedFinding:
 class Places:
     """The map from the bidder's cells to places inside the workbook."""
 
+    file: str
     mirrors: dict[str, str]
     findings: tuple[NumberedFinding, ...]
     inputs: tuple[InputRow, ...]
@@ -49,16 +51,14 @@ class Places:
     def mirror(self, where: CellRef) -> str:
         """Place of the mirrored cell, such as ``'Input 1'!D12``; empty where it is not mirrored."""
         place = row_and_column(where.cell)
-        sheet = self.mirrors.get(where.sheet)
-        return f"'{sheet}'!{_ADDRESS.match(where.cell)[0].replace('$', '')}" if sheet and place else ""  # type: ignore[index]
+        if place is None or where.file != self.file or where.sheet not in self.mirrors:
+            return ""
+        row, column = place
+        return f"'{self.mirrors[where.sheet]}'!{column_letter(column)}{row}"
 
     def reading_row(self, reading: object) -> int | None:
         """Row on the sheet Inputs as read of this very reading or statement."""
         return self.input_rows.get(id(reading))
-
-    def of_finding(self, finding: Finding) -> str:
-        """Link to the first mirrored cell of a finding."""
-        return next(filter(None, map(self.mirror, finding.where)), "")
 
 
 def place_everything(assessment: Assessment) -> Places:
@@ -66,14 +66,15 @@ def place_everything(assessment: Assessment) -> Places:
     submission = assessment.submission
     mirrors = {sheet.name: f"Input {n}" for n, sheet in enumerate(submission.mirror, start=1)}
     rows, _ = input_rows(submission)
+    read = {(row.where.sheet, row.where.cell) for row in rows}
     numbers = {
         CellRef(submission.file, sheet.name, cell.cell): float(cell.value)
         for sheet in submission.mirror
         for cell in sheet.cells
-        if isinstance(cell.value, int | float) and not isinstance(cell.value, bool)
+        if isinstance(cell.value, int | float) and (sheet.name, cell.cell) in read
     }
     by_identity = {id(row.reading or row.statement): n for n, row in enumerate(rows, start=FIRST_ROW)}
-    return Places(mirrors, tuple(_numbered(assessment)), rows, by_identity, numbers)
+    return Places(submission.file, mirrors, tuple(_numbered(assessment)), rows, by_identity, numbers)
 
 
 def _numbered(assessment: Assessment) -> Iterable[NumberedFinding]:

@@ -56,7 +56,8 @@ def findings(places: Places) -> Table:
 def _finding_row(one: NumberedFinding, places: Places) -> list[Content]:
     finding = one.finding
     claimed, expected = finding.claimed, finding.expected
-    unit = (expected or claimed).unit if expected or claimed else ""  # type: ignore[union-attr]
+    held = expected or claimed
+    unit = held.unit if held else ""
     low, high, words = spread(claimed.value if claimed else None)
     return [
         one.number,
