@@ -11,7 +11,7 @@ from speccheck.records import (
     Step,
 )
 from speccheck.report.cells import Content
-from speccheck.report.formats import shown_unit
+from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.review_parts import PEOPLE, UNFILLED, band_edges, linked_cells, number_cell, spread
 from speccheck.report.review_places import FINDINGS, NumberedFinding, Places
 from speccheck.report.sheets import Column, Table
@@ -59,6 +59,8 @@ def _finding_row(one: NumberedFinding, places: Places) -> list[Content]:
     held = expected or claimed
     unit = held.unit if held else ""
     low, high, words = spread(claimed.value if claimed else None)
+    if claimed and claimed.unit != unit and not words:
+        low, high, words = None, None, Numbers().amount(claimed)
     return [
         one.number,
         one.panel,

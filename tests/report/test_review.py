@@ -11,7 +11,7 @@ from hypothesis import HealthCheck, Phase, given, settings
 from report.strategies import assessments
 
 from speccheck.errors import OutputError
-from speccheck.records import Assessment, MirrorCell, MirrorSheet, Settings, Submission
+from speccheck.records import Amount, Assessment, MirrorCell, MirrorSheet, Settings, Submission
 from speccheck.report.machine import from_json, to_json
 from speccheck.report.review import review_bytes, write_review
 
@@ -273,3 +273,11 @@ def test_any_assessment_gives_a_workbook_that_opens_and_runs_nothing(one):
     for sheet in book:
         formulas = [cell for row in sheet.iter_rows() for cell in row if cell.data_type == "f"]
         assert not formulas or sheet.title in LIVE
+
+
+def test_claim_in_another_unit_than_the_expected_is_given_in_words(bid):
+    odd = dataclasses.replace(bid.panels[0].findings[0], claimed=Amount(24.65, "dBd"))
+    judged = dataclasses.replace(bid.panels[0], findings=(odd,))
+    book = openpyxl.load_workbook(io.BytesIO(review_bytes(dataclasses.replace(bid, panels=(judged,)))))
+    (row,) = table(book["Findings"])
+    assert (row["Claimed"], row["Claimed in words"], row["Unit"]) == (None, "24.65\u00a0dBd", "dBi")
