@@ -15,10 +15,12 @@ from speccheck.batch.lone_tender import has_requirements, lone_tender
 from speccheck.checks.registry import CHECKS
 from speccheck.errors import OutputError, UnusableInputError
 from speccheck.intake import read_submission
+from speccheck.intake.answers import read_answers
 from speccheck.intake.tender_book import read_tender
-from speccheck.pipeline import FORMATS
+from speccheck.pipeline import FORMATS, assess
 from speccheck.records import Assessment, Outcome, Tender
 from speccheck.records.evaluations import Bid, Evaluation
+from speccheck.report.clarification import write_answers
 from speccheck.report.form import write_form
 from speccheck.report.listing import listing
 from speccheck.report.machine import from_json
@@ -27,6 +29,7 @@ from speccheck.report.tender_listing import tender_listing
 from speccheck.revisions import compare as compare_results
 from speccheck.revisions import comparison_text
 from speccheck.tender import vetted
+from speccheck.tender.answers import take_in
 
 
 class Exit(IntEnum):
@@ -174,6 +177,25 @@ def form(target: Path, tender_file: Path | None) -> None:
     """Write a blank bid form to hand to bidders."""
     write_form(target, read_tender(tender_file) if tender_file else None)
     click.echo(f"Written: {target}")
+
+
+@cli.command(epilog=EXIT_CODES)
+@click.argument("bid", type=_path)
+@click.argument("answered", type=_path)
+@click.option("--tender", "tender_file", type=_path, help="The buyer's workbook.")
+@click.option("--out", default="reports", show_default=True, type=_path, help="Folder for the outputs.")
+def answers(bid: Path, answered: Path, tender_file: Path | None, out: Path) -> None:
+    """Set the answers of BID's clarification list (ANSWERED.xlsx) beside the figures first stated.
+
+    A changed figure is named as a change of substance; the offer itself stays as it was opened.
+    """
+    assessment = assess(bid, tender=read_tender(tender_file) if tender_file else None)
+    taken = take_in(assessment, read_answers(answered))
+    out.mkdir(parents=True, exist_ok=True)
+    for path in write_answers(assessment, taken, out, bid.stem):
+        click.echo(f"Written: {path}")
+    for one in taken:
+        click.echo(f"  {one.answer.number}: {one.kind.value}")
 
 
 @cli.command(epilog=EXIT_CODES)

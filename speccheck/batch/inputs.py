@@ -12,7 +12,10 @@ _BID_SUFFIXES = (
     ".xlsx", ".xlsm", ".csv", ".tsv", ".txt", ".xls", ".xlsb", ".ods", ".pdf", ".docx", ".doc", ".zip",
 )  # fmt: skip
 """What bidders send; those that cannot be read are named in the comparison, not passed over."""
-_OWN_OUTPUTS = (".report.html", ".report.pdf", ".review.xlsx", ".result.json", ".questions.xlsx")
+_OWN_OUTPUTS = (
+    ".report.html", ".report.pdf", ".review.xlsx", ".result.json", ".questions.html", ".questions.xlsx",
+    ".answers.html", ".answers.xlsx", ".reading.xlsx", ".reading.json",
+)  # fmt: skip
 _NEVER = ("readme", "license", "comparison.")
 
 

@@ -16,6 +16,7 @@ from speccheck.batch.inputs import BidFile
 from speccheck.errors import OutputError, UnusableInputError
 from speccheck.records import Assessment, Settings, Tender
 from speccheck.records.evaluations import Bid
+from speccheck.report.clarification import write_clarification
 from speccheck.report.pdf import PdfUnavailableError
 from speccheck.tender.summaries import summarise
 
@@ -69,10 +70,11 @@ def _outputs(
 ) -> tuple[Sequence[Path], str]:
     """Outputs written; without the PDF and with a note where the system cannot make one."""
     try:
-        return pipeline.write_outputs(assessment, path, out, formats), ""
+        made, note = pipeline.write_outputs(assessment, path, out, formats), ""
     except PdfUnavailableError as error:
-        made = [out / f"{path.stem}{pipeline.SUFFIXES[name]}" for name in formats if name != "pdf"]
-        return [output for output in made if output.is_file()], str(error)
+        expected = [out / f"{path.stem}{pipeline.SUFFIXES[name]}" for name in formats if name != "pdf"]
+        made, note = [output for output in expected if output.is_file()], str(error)
+    return [*made, *write_clarification(assessment, out, path.stem, formats)], note
 
 
 def failed(bid: BidFile, message: str) -> Bid:

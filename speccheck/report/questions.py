@@ -6,6 +6,7 @@ from collections.abc import Callable, Iterator
 from dataclasses import dataclass, replace
 
 from speccheck.records import Assessment, Band, CellRef, Compliance, Fit, Level, MatrixRow, PanelAssessment
+from speccheck.records.demands import blocked
 
 UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
 
@@ -18,6 +19,7 @@ _ASKED = {
     "Please state the figure, with its unit and conditions.",
 }
 
+_REWORD = "{what} cannot be judged as it is worded. The buyer settles the wording; no figure is asked yet."
 _PAPERS = "The offer declares {what}. Please supply the papers that show it."
 
 
@@ -72,6 +74,8 @@ def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str],
         what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name
         papers = row.requirement.operator == "evidence" and row.verdict is Compliance.DECLARED_ONLY
         asked = _PAPERS if papers else _ASKED[row.verdict]
+        if blocked(row.requirement.doubts):
+            asked = _REWORD
         yield Question(
             panel_number=panel_number,
             panel=panel.panel.name,
