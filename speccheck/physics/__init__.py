@@ -87,6 +87,8 @@ expected         PanelClass (PASSIVE, MASSIVE_MIMO, MMWAVE), panel_class(freq_hz
                  assumptions, .zone(gain_dbi) -> GainZone (IMPOSSIBLE, QUESTION, PLAUSIBLE, LOW);
                  expected_beamwidths(layout, freq_hz, *, tilt_deg=0, scan_deg=0): .horizontal and .vertical
                  = WidthEdges(uniform_deg, reject_deg, question_deg, wide_deg) or None
+influences       gain_influences(layout, freq_hz, gain, *, tilt_deg=0, scan_deg=0) -> Influence (name, over,
+                 low_db, high_db, span_db), strongest first: each input of an ExpectedGain varied alone
 
 Inner workings, in the order of a calculation: layout (lines, row_shifts, wavenumber, row_weights,
 column_weights) places and drives the elements, field gives the far field, beam finds where it points,

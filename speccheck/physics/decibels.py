@@ -26,14 +26,14 @@ def floats(values: ArrayLike) -> Floats:
 def db(ratio: ArrayLike) -> Floats:
     """Power ratio in decibels.
 
-    ratio [1]: power ratio, any shape; zero gives minus infinity.
+    ratio [1]: power ratio, any shape; zero gives minus infinity, a negative one nan.
     Returns [dB]: 10 log10(ratio).
     Source: ISO 80000-3, level of a power quantity.
 
     >>> float(db(2).round(4))
     3.0103
     """
-    with np.errstate(divide="ignore"):
+    with np.errstate(divide="ignore", invalid="ignore"):
         return 10 * np.log10(floats(ratio))
 
 

@@ -164,11 +164,11 @@ def _element_points(layout: ArrayLayout, wavelength: float) -> Floats:
 
 
 def _subarray_points(layout: ArrayLayout, wavelength: float) -> Floats:
-    """Reciprocal points of the sub-array lattice that are no points of the element lattice."""
+    """Reciprocal points of the lattice of two or more sub-arrays, points of the element lattice left out."""
     across, along = layout.subarray_columns, layout.subarray_rows
     y_pitch, z_pitch = across * layout.horizontal_pitch_m, along * layout.vertical_pitch_m
-    y_step = wavelength / y_pitch if layout.columns > across or across > 1 else np.inf
-    z_step = wavelength / z_pitch if layout.rows > along or along > 1 else np.inf
+    y_step = wavelength / y_pitch if layout.columns > across else np.inf
+    z_step = wavelength / z_pitch if layout.rows > along else np.inf
     y, z = _orders(y_step, z_step)
     points = floats(np.stack([y * _finite(y_step), z * _finite(z_step)], 1))
     return floats(points[(y % across != 0) | (z % along != 0)])

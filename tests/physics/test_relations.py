@@ -9,7 +9,7 @@ from physics import tables
 from speccheck.physics import bounds, errors, grating, intermodulation, matching, power, wind
 from speccheck.physics.element import IsotropicElement, SectorElement
 from speccheck.physics.layout import ArrayLayout, Lattice
-from speccheck.physics.lobes import element_lobes
+from speccheck.physics.lobes import element_lobes, subarray_lobes
 from speccheck.physics.states import array_states, directivity_dbi
 
 HZ = tables.ONE_METRE_HZ
@@ -122,6 +122,27 @@ def test_narrow_apertures_are_not_bound_by_their_box():
     """1.3 m x 0.15 m at 800 MHz: 12.4 dBi by the plain formula, an honest column 15.7 dBi lossless."""
     assert not bounds.aperture_is_hard(0.15, 1.3, 800e6)
     assert bounds.aperture_directivity_dbi(0.15, 1.3, 800e6) > 15.7
+
+
+def test_one_sub_array_alone_has_no_quantisation_lobe():
+    """A passive column tied to one port: its sub-array lattice has a single point."""
+    column = ArrayLayout(10, 1, 0.8, 0.5, subarray_rows=10, subarray_tilt_deg=4)
+    assert np.isnan(subarray_lobes(column, SectorElement(), HZ, 4).level_db)
+
+
+def test_states_refuse_what_is_no_frequency():
+    with pytest.raises(ValueError, match="frequencies must be positive"):
+        array_states(ArrayLayout(2, 2, 0.5, 0.5), SectorElement(), [HZ, 0.0])
+    with pytest.raises(ValueError, match="angles finite"):
+        array_states(ArrayLayout(2, 2, 0.5, 0.5), SectorElement(), HZ, np.nan)
+
+
+def test_a_single_element_is_its_own_pattern():
+    """TR 38.901 element: 9.826 dBi integrated, half power at 65.1 deg (-3.01 dB of a -3 dB width)."""
+    found = array_states(ArrayLayout(1, 1, 0.0, 0.0), SectorElement(), HZ)
+    assert found.directivity_dbi == pytest.approx(9.826, abs=0.001)
+    assert found.horizontal_beamwidth_deg == pytest.approx(65.11, abs=0.02)
+    assert np.isnan(found.highest_sidelobe_vertical_db)
 
 
 def test_layout_refuses_what_cannot_be():
