@@ -10,21 +10,21 @@ from collections.abc import Iterator, Sequence
 import numpy as np
 
 from speccheck.checks.cut_curves import cut_drawings
+from speccheck.checks.feed_curves import eirp_ladder, port_grid, port_map
 from speccheck.checks.model import Model, model_of
 from speccheck.checks.registry import Case
 from speccheck.checks.saying import mhz
-from speccheck.checks.transmit_power import transmit_power
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.physics.grating import entry_freq_hz, pitch_limit_wl
 from speccheck.physics.layout import Lattice
-from speccheck.physics.power import dbm
 from speccheck.records import Band, CellRef, Curve, Drawing, Finding, Panel, Reading, Settings
 
 _EDGE_POINTS = 13
 _DECIMALS = 4
-_TOP_MHZ = 300e3
+_BOTTOM_MHZ, _TOP_MHZ = 10.0, 300e3
 _MOST_ROWS = 512
-_WIDEST_WL = 20.0
+_NARROWEST_WL, _WIDEST_WL = 0.01, 20.0
+_STEEPEST_DEG = 89.0
 """Beyond these a figure shows a slip of the pen, which the checks report, and no array."""
 
 
@@ -39,14 +39,13 @@ def panel_drawings(panel: Panel, settings: Settings, findings: Sequence[Finding]
     """
     drawings: list[Drawing] = []
     for band in panel.bands:
-        model = _model(Case(panel, band, settings))
-        if model is not None:
-            steering = Steering(panel, band)
+        model, steering = _model(Case(panel, band, settings)), Steering(panel, band)
+        if model is not None and steering.possible:
             drawings += [*_spacing(model, steering), *_steering_map(model, steering)]
             drawings += cut_drawings(panel, model, steering.tilts_deg, steering.scan_deg, findings)
-            drawings += _port_grid(panel, model)
-        drawings += _ladder(panel, band)
-    return (*drawings, *_port_map(panel))
+            drawings += port_grid(panel, model)
+        drawings += eirp_ladder(panel, band)
+    return (*drawings, *port_map(panel))
 
 
 def _model(case: Case) -> Model | None:
@@ -55,11 +54,17 @@ def _model(case: Case) -> Model | None:
         model = model_of(case)
     except ValueError:
         return None
-    if not isinstance(model, Model) or not 0 < model.band[0] <= model.band[1] <= _TOP_MHZ:
+    if not isinstance(model, Model) or not _BOTTOM_MHZ <= model.band[0] <= model.band[1] <= _TOP_MHZ:
         return None
     layout = model.layout
-    pitches = (model.vertical_pitch_wl(model.high_hz), model.horizontal_pitch_wl(model.high_hz))
-    return model if max(layout.rows, layout.columns) <= _MOST_ROWS and max(pitches) <= _WIDEST_WL else None
+    planes = (
+        (layout.rows, model.vertical_pitch_wl(model.high_hz)),
+        (layout.columns, model.horizontal_pitch_wl(model.high_hz)),
+    )
+    drawable = all(
+        n == 1 or (n <= _MOST_ROWS and _NARROWEST_WL <= pitch <= _WIDEST_WL) for n, pitch in planes
+    )
+    return model if drawable else None
 
 
 class Steering:
@@ -78,6 +83,11 @@ class Steering:
         if reading is not None:
             self.readings.append(reading)
         return reading
+
+    @property
+    def possible(self) -> bool:
+        """Whether the angles are ones that a panel can steer to."""
+        return self.largest_tilt_deg <= _STEEPEST_DEG and self.scan_deg <= _STEEPEST_DEG
 
     @property
     def where(self) -> tuple[CellRef, ...]:
@@ -200,80 +210,6 @@ def _range_points(steering: Steering) -> tuple[np.ndarray, np.ndarray]:
     scans = np.radians(np.linspace(-steering.scan_deg, steering.scan_deg, 2 * _EDGE_POINTS + 1))[None, :]
     u = np.cos(tilts) * np.sin(scans)
     return u.ravel(), np.broadcast_to(-np.sin(tilts), u.shape).ravel()
-
-
-def _ladder(panel: Panel, band: Band) -> Iterator[Drawing]:
-    """Power, gain and their sum beside the claimed EIRP."""
-    power, gain, claim = transmit_power(panel, band), panel.get("gain", band), panel.get("eirp", band)
-    if power is None or power.nominal_w <= 0 or gain is None or isinstance(gain.value, str):
-        return
-    level, highest = float(dbm(power.nominal_w)), gain.high
-    marks = {"power_w": power.nominal_w, "power_dbm": level, "gain_dbi": highest, "sum_dbm": level + highest}
-    title = f"Power {level:.1f} dBm and gain {highest:.1f} dBi add up to {level + highest:.1f} dBm EIRP"
-    where = [*(r.where for r in power.readings), gain.where]
-    if claim is not None and not isinstance(claim.value, str):
-        marks["claimed_dbm"] = claim.high
-        difference = claim.high - level - highest
-        title += f"; {claim.high:.1f} dBm is claimed ({difference:+.1f} dB)".replace("-", "−")
-        where.append(claim.where)
-    kind = "input rating of the ports" if power.input_rating else "transmit power"
-    yield Drawing(
-        kind="eirp-ladder",
-        title=title,
-        text=f"{mhz(band)}: {kind} {power.nominal_w:.4g} W over both polarisations, highest gain, no losses "
-        "taken off.",
-        band=band,
-        marks=marks,
-        where=tuple(dict.fromkeys(where)),
-    )
-
-
-def _port_grid(panel: Panel, model: Model) -> Iterator[Drawing]:
-    """Ports of an active array as a grid of sub-arrays, two polarisations each."""
-    stated = panel.get("transceivers", model.band)
-    if stated is None or isinstance(stated.value, str):
-        return
-    rows, columns = model.layout.port_rows, model.layout.port_columns
-    ports = rows * columns * 2
-    same = "as" if ports == round(stated.nominal) else "while"
-    yield Drawing(
-        kind="port-map",
-        title=f"{rows} × {columns} sub-arrays in two polarisations make {ports} ports, "
-        f"{same} {stated.nominal:.0f} transceivers are stated",
-        text=f"Grid of {rows} rows and {columns} columns of sub-arrays with {model.layout.subarray_rows} × "
-        f"{model.layout.subarray_columns} element positions each, both polarisations.",
-        band=model.band,
-        marks={"grid_rows": rows, "grid_columns": columns, "stated_ports": stated.nominal},
-        where=tuple(dict.fromkeys((*(r.where for r in model.used), stated.where))),
-    )
-
-
-def _port_map(panel: Panel) -> Iterator[Drawing]:
-    """Ports by band of a passive panel, where they are stated by band."""
-    found = [(band, panel.get("ports_per_band", band)) for band in panel.bands]
-    stated = [(b, r) for b, r in found if r is not None and not isinstance(r.value, str)]
-    if not stated or len(stated) != len(found):
-        return
-    total = panel.get("rf_ports")
-    marks: dict[str, float] = {}
-    together = 0.0
-    for i, (band, reading) in enumerate(stated, start=1):
-        marks |= {
-            f"band_{i}_low_mhz": band[0],
-            f"band_{i}_high_mhz": band[1],
-            f"band_{i}_ports": reading.nominal,
-        }
-        together += reading.nominal
-    title = f"{together:.0f} ports over {len(stated)} band{'s' if len(stated) > 1 else ''}"
-    where = [reading.where for _, reading in stated]
-    if total is not None and not isinstance(total.value, str):
-        marks["stated_ports"] = total.nominal
-        title += f"; {total.nominal:.0f} are stated for the panel"
-        where.append(total.where)
-    text = "; ".join(f"{mhz(band)}: {reading.nominal:.0f} ports" for band, reading in stated)
-    yield Drawing(
-        kind="port-map", title=title, text=f"{text}.", marks=marks, where=tuple(dict.fromkeys(where))
-    )
 
 
 def _curve(

@@ -19,6 +19,7 @@ FLOOR_DB = -30.0
 
 _STEP_DEG = 0.5
 _WIDEST_COLUMN_DEG = 120.0
+_FULL_CIRCLE_DEG = 360.0
 
 
 def cut_drawings(
@@ -178,7 +179,7 @@ def _claims(panel: Panel, band: Band, plane: str, findings: Sequence[Finding]) -
         (f"{plane}_beamwidth_10db", "claimed_10db_deg"),
     ):
         claimed = _figure(panel, key, band)
-        if claimed is not None:
+        if claimed is not None and 0 < claimed.nominal <= _FULL_CIRCLE_DEG:
             marks[name] = claimed.nominal
     for finding in findings:
         interval = finding.expected

@@ -131,7 +131,7 @@ class Scale:
 
     def __call__(self, value: float) -> float:
         """Place on the page; the ends of the scale are the ends of the axis."""
-        share = (value - self.low) / (self.high - self.low)
+        share = (value - self.low) / (self.high - self.low) if self.high > self.low else 0.5
         return self.start + share * (self.end - self.start)
 
     def clipped(self, value: float) -> float:
@@ -139,7 +139,9 @@ class Scale:
         return self(min(max(value, self.low), self.high))
 
     def ticks(self, wanted: int = 5) -> tuple[float, ...]:
-        """Round numbers inside the scale."""
+        """Round numbers inside the scale; its one value where it has no extent."""
+        if not self.high > self.low:
+            return (self.low,)
         step = _round_step((self.high - self.low) / max(wanted, 1))
         first = math.ceil(self.low / step - 1e-9)
         last = math.floor(self.high / step + 1e-9)
