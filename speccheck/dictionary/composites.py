@@ -4,14 +4,15 @@ from __future__ import annotations
 
 import re
 
-from speccheck.dictionary.folding import fold, heading_words, word_list
-from speccheck.dictionary.index import find
+from speccheck.dictionary.folding import fold, heading_words, without_neutral, word_list
+from speccheck.dictionary.index import find, listed
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
-_PARTS = re.compile(
-    r"\s*[×*]\s*|\s+x\s+|\s*/\s*|\s+by\s+|\s*&\s*|\s*\+\s*|\s+(?:and|und|et|y|e|i|en)\s+|\s*,\s+|(?<=\b\w)x(?=\w\b)",
-    re.IGNORECASE,
+_BETWEEN = (
+    r"\s*[×*]\s*|\s+x\s+|\s*/\s*|\s+by\s+|\s*&\s*|\s*\+\s*|\s+(?:and|und|et|y|e|i|en)\s+|(?<=\b\w)x(?=\w\b)"
 )
+_PARTS = re.compile(_BETWEEN, re.IGNORECASE)
+_COMMA_PARTS = re.compile(_BETWEEN + r"|\s*,\s+", re.IGNORECASE)
 _LETTERS = re.compile(r"\b([a-z])\s*[x×*/,]\s*([a-z])(?:\s*[x×*/,]\s*([a-z]))?\b", re.IGNORECASE)
 _DIMENSIONS = {"high": "height", "wide": "width", "deep": "depth"}
 _ARRAY = {
@@ -35,20 +36,26 @@ def _letters(text: str) -> str:
         return ""
     order = heading_words()["letters"].get("".join(found.groups()).casefold())
     rest = fold(text[: found.start()] + " " + text[found.end() :])
-    if not order or (rest and find(rest) not in ("height+width+depth", "")) or (rest and not find(rest)):
+    housing = word_list("housing").issuperset(without_neutral(rest))
+    if not order or not (housing or find(rest) == "height+width+depth"):
         return ""
     names = {"h": "height", "w": "width", "d": "depth"}
     return "+".join(names[letter] for letter in order)
 
 
 def _parts(text: str) -> str:
-    pieces = [fold(p) for p in _PARTS.split(_BRACKETS.sub(r" \1 ", text)) if p.strip()]
+    plain = _BRACKETS.sub(r" \1 ", text)
+    return _split(_PARTS.split(plain)) or _split(_COMMA_PARTS.split(plain))
+
+
+def _split(parts: list[str]) -> str:
+    pieces = [fold(part) for part in parts if part.strip()]
     if not 2 <= len(pieces) <= 3:
         return ""
     together = _same_kind(pieces)
     if together:
         return together
-    keys = [find(piece) for piece in pieces]
+    keys = [listed(piece) for piece in pieces]
     if all(keys) and len(set(keys)) == len(keys) and not any("+" in key for key in keys):
         return "+".join(keys)
     return ""
@@ -56,7 +63,11 @@ def _parts(text: str) -> str:
 
 def _same_kind(pieces: list[tuple[str, ...]]) -> str:
     """Parts that differ in one word each, such as 'HPBW H' and 'V', share the rest."""
-    for names in (("horizontal", "vertical"), ("rows", "columns", "poles"), ("high", "wide", "deep")):
+    for names in (
+        ("horizontal", "vertical", "poles"),
+        ("rows", "columns", "poles"),
+        ("high", "wide", "deep"),
+    ):
         parts = [next((n for n in names if word_list(n).intersection(p)), "") for p in pieces]
         if not all(parts) or len(set(parts)) != len(parts):
             continue
@@ -70,7 +81,7 @@ def _same_kind(pieces: list[tuple[str, ...]]) -> str:
 def _with_part(base: tuple[str, ...], part: str) -> str:
     if part in _DIMENSIONS and (not base or find(base).startswith("height")):
         return _DIMENSIONS[part]
-    if part in _ARRAY and (not base or find(base).startswith(("array_", "element_count"))):
+    if part in _ARRAY and (not base or find(base).startswith(("array_", "element_count", "lattice"))):
         return _ARRAY[part]
     named = {"rows": "row", "columns": "column", "poles": "pol"}.get(part, part)
     for form in (named, {"horizontal": "azimuth", "vertical": "elevation"}.get(part, "")):

@@ -17,7 +17,8 @@ _AT_WORDS = (
 )
 _FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{UNIT_PATTERN}|1(?=\W|$))?"
 _CONDITION = re.compile(
-    rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])",
+    rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])"
+    r"(?:\s(?:tilt|downtilt|edt|carriers|tones)\b)?",
     re.IGNORECASE,
 )
 _TRAILING_UNIT = re.compile(rf"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?({UNIT_PATTERN})\s*$")

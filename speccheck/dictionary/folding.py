@@ -21,14 +21,14 @@ def fold(text: str) -> tuple[str, ...]:
     >>> fold("Side-lobes of the main beam"), fold("Öffnungswinkel")
     (('sidelobe', 'main', 'beam'), ('offnungswinkel',))
     """
-    raw = [word for word in _NOT_WORDS.sub(" ", _unaccented(text)).split() if word != "the"]
+    raw = [word for word in _NOT_WORDS.sub(" ", _unaccented(text)).split() if word not in ("the", "a")]
     same, articles = _same(), _articles()
     words: list[str] = []
     index = 0
     while index < len(raw):
         pair = same.get(" ".join(raw[index : index + 2]))
         if pair and index + 1 < len(raw):
-            words.append(pair)
+            words.extend(pair.split())
             index += 2
             continue
         word = same.get(raw[index]) or _singular(raw[index])
@@ -70,6 +70,8 @@ def _unaccented(text: str) -> str:
 
 
 def _singular(word: str) -> str:
+    if word.endswith("sses"):
+        return word[:-2]
     return word[:-1] if len(word) > 3 and word.endswith("s") and not word.endswith("ss") else word
 
 

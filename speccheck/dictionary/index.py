@@ -5,6 +5,7 @@ from __future__ import annotations
 import difflib
 import functools
 
+from speccheck.dictionary.concepts import by_concepts
 from speccheck.dictionary.folding import fold, key_of, without_neutral
 from speccheck.dictionary.parameters import parameters, synonyms
 
@@ -33,16 +34,19 @@ def index() -> dict[str, str]:
     return table
 
 
-def find(words: tuple[str, ...]) -> str:
-    """Parameter key of a heading's words, as they stand or without neutral ones; empty if unknown."""
-    if not words:
-        return ""
+def listed(words: tuple[str, ...]) -> str:
+    """Parameter key of a listed heading's words, as they stand or without neutral ones; empty if unknown."""
     table = index()
-    found = table.get(key_of(words)) or table.get("".join(words))
-    if found:
-        return found
-    fewer = without_neutral(words)
-    return (table.get(key_of(fewer)) or table.get("".join(fewer)) or "") if fewer else ""
+    for form in (words, without_neutral(words)):
+        key = table.get(key_of(form)) or table.get("".join(form)) if form else None
+        if key:
+            return key
+    return ""
+
+
+def find(words: tuple[str, ...]) -> str:
+    """Parameter key of a heading's words, listed or put together from known concepts; empty if unknown."""
+    return listed(words) or by_concepts(words)
 
 
 def suggestions(text: str) -> tuple[str, ...]:

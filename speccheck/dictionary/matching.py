@@ -14,9 +14,10 @@ from collections.abc import Iterable, Mapping
 from dataclasses import dataclass
 
 from speccheck.dictionary.composites import composite
+from speccheck.dictionary.concepts import by_concepts
 from speccheck.dictionary.cuts import Cut, conditions_of, cuts
 from speccheck.dictionary.folding import fold, key_of, word_list
-from speccheck.dictionary.index import find, suggestions
+from speccheck.dictionary.index import listed, suggestions
 from speccheck.dictionary.parameters import parameters
 from speccheck.quantities import split_footnotes, tidy
 
@@ -74,7 +75,9 @@ def specified(key: str, condition: str) -> str:
     >>> specified("weight", "with brackets"), specified("wind_load", "lateral"), specified("gain", "typ")
     ('weight_with_brackets', 'wind_load_lateral', 'gain')
     """
-    words = " ".join(word for word in condition.split(", ")[0].split() if not any(c.isdigit() for c in word))
+    words = " ".join(
+        word for word in condition.split(", ", maxsplit=1)[0].split() if not any(c.isdigit() for c in word)
+    )
     if not words or not word_list("vital").intersection(fold(words)):
         return key
     name = parameters()[key].label.split(",")[0]
@@ -120,12 +123,13 @@ def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:
     if tolerance_of:
         words = tuple(word for word in words if word not in word_list("tolerance"))
     bare = tuple(word for word in words if word not in _STATISTICS)
-    return house.get(key_of(words), "") or find(words) or find(bare) or composite(text)
+    known = house.get(key_of(words)) or listed(words) or listed(bare) or composite(text)
+    return known or by_concepts(bare)
 
 
 def _result(found: str, cut: Cut, words: tuple[str, ...], *, tolerance_of: bool) -> HeadingMatch:
     keys = tuple(found.split("+"))
-    statistic = next((s for s in _STATISTICS if s in words), "")
+    statistic = "max" if "pmax" in words else next((s for s in _STATISTICS if s in words), "")
     bounds = statistic in ("min", "max") and not keys[0].endswith("_max")
     plane = next((p for p in ("horizontal", "vertical") if keys[0].startswith(p)), "")
     condition = ", ".join(cut.conditions)

@@ -7,6 +7,7 @@ from hypothesis import given
 from hypothesis import strategies as st
 
 from speccheck.dictionary import match_heading, parameters, synonyms
+from speccheck.dictionary.concepts import rules
 from speccheck.dictionary.index import _claim, index
 
 KNOWN = [
@@ -171,3 +172,38 @@ def test_case_and_trimmings_do_not_matter(entry: tuple[str, str], form: str) -> 
 @given(st.text(max_size=200))
 def test_any_text_is_a_heading_or_none(text: str) -> None:
     assert all(key in parameters() for key in match_heading(text).parameters)
+
+
+@pytest.mark.parametrize(
+    ("heading", "key"),
+    [
+        ("Vertical inter-element spacing", "vertical_element_spacing"),
+        ("Pitch between columns", "horizontal_element_spacing"),
+        ("Number of radiating elements, vertical", "array_rows"),
+        ("Azimuth pattern width (3 dB)", "horizontal_beamwidth"),
+        ("Elec. downtilt range", "electrical_tilt"),
+        ("Steering range (az)", "horizontal_scan"),
+        ("Sidelobe suppression above the beam", "upper_sidelobe_suppression"),
+        ("Back radiation suppression", "front_to_back_ratio"),
+        ("Intra-band port isolation", "port_isolation"),
+        ("Permissible input power per port", "max_power_per_port"),
+        ("Total power handling capacity", "max_power_total"),
+        ("Conducted output power (all TRX)", "conducted_power"),
+        ("Wind pressure load front", "wind_load"),
+    ],
+)
+def test_a_heading_nobody_listed_is_put_together_from_its_words(heading: str, key: str) -> None:
+    assert match_heading(heading).parameters == (key,)
+
+
+@pytest.mark.parametrize(
+    "heading",
+    ["Gain margin", "Return loss of cable", "Antenna height above ground", "Wind load on tower", "Noise level",
+     "Power", "Element of surprise", "Distance to site", "Weight of the radio", "Storage temperature"],
+)  # fmt: skip
+def test_one_word_that_is_not_understood_is_enough_to_refuse(heading: str) -> None:
+    assert match_heading(heading).parameters == ()
+
+
+def test_every_rule_names_known_parameters_and_concepts() -> None:
+    assert all(part in parameters() for rule in rules() for part in rule.parameter.split("+"))
