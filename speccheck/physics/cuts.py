@@ -13,8 +13,23 @@ from speccheck.physics.decibels import Floats
 from speccheck.physics.field import Excitation, column_factor, line_power, row_factor, squared
 from speccheck.physics.layout import ArrayLayout, lines
 
-_SAMPLES_PER_WAVELENGTH = 11.0
-_FEWEST, _MOST = 72, 1500
+_CLOSEST = 0.68
+"""Step at broadside [1] over that of equal steps."""
+_SAMPLES_PER_WAVELENGTH = 11.0 * _CLOSEST
+"""On either side of broadside; seven to a null width there."""
+_FEWEST, _MOST = 60, 1500
+
+
+def angle_at(index: Floats, count: int) -> Floats:
+    """Angle of a sample of a cut: lobes widen away from broadside, and so do the steps.
+
+    index [1]: place of the sample, whole or between, 0 to count - 1.
+    count [1]: samples of the cut.
+    Returns [rad]: -pi/2 to pi/2, odd about the middle.
+    Source: a cubic whose steps are closest at broadside (own choice).
+    """
+    s = index * (2 / (count - 1)) - 1
+    return np.pi / 2 * s * (_CLOSEST + (1 - _CLOSEST) * s * s)
 
 
 def front_angles(layout: ArrayLayout, wavenumbers: Floats) -> Floats:
@@ -22,12 +37,12 @@ def front_angles(layout: ArrayLayout, wavenumbers: Floats) -> Floats:
 
     layout [ArrayLayout]: the panel.
     wavenumbers [rad/m]: of all states.
-    Returns [rad]: -pi/2 to pi/2, an odd number of equal steps, seven to a null width.
+    Returns [rad]: -pi/2 to pi/2, an odd number of samples, seven or more to a null width.
     Source: sampling of a pattern whose null width is wavelength over aperture.
     """
     in_wavelengths = max(layout.height_m, layout.width_m) * float(wavenumbers.max()) / (2 * np.pi)
     count = min(max(int(np.ceil(_SAMPLES_PER_WAVELENGTH * in_wavelengths)), _FEWEST), _MOST)
-    return np.arange(-float(count), count + 1) * (np.pi / 2 / count)
+    return angle_at(np.arange(2 * count + 1.0), 2 * count + 1)
 
 
 def horizontal_cut(states: Excitation, beam: Beam, angle: Floats) -> Floats:

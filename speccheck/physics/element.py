@@ -232,7 +232,7 @@ def _cosine_sums(angles: Floats, lags: Floats, weights: Floats) -> Floats:
             out[n] = (weights * np.cos(lag * angles)) @ ones
         return out.transpose(1, 0, 2)
     twice = np.cos(steps[0] * angles)
-    before, last = np.broadcast_to(weights, angles.shape), weights * twice
+    before, last = weights, weights * twice
     twice += twice
     out[0], out[1] = before @ ones, last @ ones
     for n in range(2, len(lags)):

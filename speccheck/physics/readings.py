@@ -7,6 +7,7 @@ from dataclasses import dataclass
 import numpy as np
 from numpy.typing import NDArray
 
+from speccheck.physics.cuts import angle_at
 from speccheck.physics.decibels import Floats
 
 Indices = NDArray[np.intp]
@@ -41,21 +42,18 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     A lobe is what follows the first minimum beside the beam; the highest one includes grating and
     sub-array lobes and the value at the end of the cut.
     level [1]: power against the beam, shape (C, P).
-    angle_rad [rad]: equally spaced angles, shape (P,).
+    angle_rad [rad]: the angles of `cuts.front_angles`, shape (P,).
     peak_rad [rad]: angle of the beam, shape (C,).
     Returns [CutFigures]: width [rad], lobes [dB], angle of the highest lobe [rad].
     Source: half power at -3.0103 dB of the beam; side lobes as in IEEE Std 145.
     """
     cuts, count = level.shape
-    last = count - 1
-    step = (angle_rad[-1] - angle_rad[0]) / last
-    at_peak = np.rint((peak_rad - angle_rad[0]) / step)
-    at_peak = np.minimum(np.maximum(at_peak, 0), last).astype(np.int16)[:, None]
     index = np.arange(count, dtype=np.int16)
+    at_peak = np.rint(np.interp(peak_rad, angle_rad, index)).astype(np.int16)[:, None]
     # single precision hides the rounding of a flat cut and halves the work of comparing
     coarse = level.astype(np.float32)
     sides = index > at_peak, index < at_peak
-    half = _half_power(level, coarse, sides)
+    edges = angle_at(_half_power(level, coarse, sides), count)
     minima, lobes, found = _lobes_beside(coarse, sides, index)
     outside = (index >= minima[0][:, None]) | (index <= minima[1][:, None])
     best = np.where(outside, coarse, np.float32(-1)).argmax(1)
@@ -64,11 +62,11 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     height_db = 10 * np.log10(np.maximum(height, 1e-30))
     height_db[~np.concatenate([*found, some])] = np.nan
     return CutFigures(
-        (half[:cuts] - half[cuts:]) * step,
+        edges[:cuts] - edges[cuts:],
         height_db[cuts : 2 * cuts],
         height_db[:cuts],
         height_db[2 * cuts :],
-        np.where(some, angle_rad[best] + offset[2 * cuts :] * step, np.nan),
+        np.where(some, angle_at(best + offset[2 * cuts :], count), np.nan),
     )
 
 
