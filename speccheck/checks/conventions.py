@@ -19,6 +19,9 @@ _Key = tuple[str, Band | None, tuple[CellRef, ...]]
 
 MISFIT = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 LISTED = 5
+SLIPS = "figure-plausible"
+"""The one check that says nothing of a figure that is possible."""
+
 NONE_FITS = "None of the readings tried fits."
 
 
@@ -160,11 +163,17 @@ class _Trial:
         if any(f.verdict is Fit.DOES_NOT_FIT for key, f in after.items() if key not in self.misfits):
             return None
         repaired = {k: after[k] for k in self.misfits if k in after and after[k].verdict is Fit.FITS}
+        repaired |= {k: _settled(f) for k, f in self.misfits.items() if k not in after and f.check == SLIPS}
         if not repaired:
             return None
         still = [key[0] for key in self.misfits if key not in repaired]
         doubted = [k[0] for k in after if k in self.fitted and after[k].verdict is Fit.DOUBTFUL]
         return _Candidate(reading, rank, repaired, tuple(dict.fromkeys([*still, *doubted])))
+
+
+def _settled(finding: Finding) -> Finding:
+    """An impossible figure that is possible when read so: nothing is left to compare."""
+    return replace(finding, verdict=Fit.FITS, claimed=None, expected=None)
 
 
 def _key(finding: Finding) -> _Key:

@@ -7,6 +7,9 @@ from dataclasses import replace
 from speccheck.checks.conventions import Reach, innocent, marked, reread, scaled
 from speccheck.records import Panel, Reading
 
+ARRAY_BEAM_DEG = 50.0
+"""Width [deg] at -10 dB below which a beam is that of an array of columns and not of an element."""
+
 
 @innocent(
     "horizontal width of a broadcast beam or single column",
@@ -24,8 +27,12 @@ def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
     "horizontal_beamwidth",
 )
 def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
-    """Width divided by √(10/3), the ratio of a parabola in decibels."""
-    return reread(panel, reach, ("horizontal_beamwidth",), scaled((3 / 10) ** 0.5))
+    """Width divided by √(10/3), the ratio of a parabola in decibels; a narrow array beam by 1.67."""
+
+    def half_power(reading: Reading) -> Reading:
+        return scaled((3 / 10) ** 0.5 if reading.nominal > ARRAY_BEAM_DEG else 1 / 1.67)(reading)
+
+    return reread(panel, reach, ("horizontal_beamwidth",), half_power)
 
 
 @innocent(

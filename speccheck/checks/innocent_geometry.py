@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Callable
 from dataclasses import replace
 
@@ -20,10 +21,13 @@ def _halved(reading: Reading) -> Reading:
 
 
 def _rescaled(factor: float) -> Callable[[Reading], Reading]:
-    """Scaled where the result is a plausible figure; left alone elsewhere."""
+    """Scaled where the result is a length that panels have; left alone elsewhere."""
 
     def change(reading: Reading) -> Reading:
-        low, high = parameters()[reading.parameter].plausible or (0.0, float("inf"))
+        parameter = parameters()[reading.parameter]
+        usual = parameter.plausible or (0.0, math.inf)
+        # enlarged millimetre-wave lengths stay below what the dictionary calls usual
+        low, high = (parameter.possible or usual)[0] if factor > 1 else usual[0], usual[1]
         return scaled(factor)(reading) if low <= reading.nominal * factor <= high else reading
 
     return change
@@ -263,3 +267,17 @@ def range_about_fixed_tilt(panel: Panel, reach: Reach) -> Panel:
         return replace(reading, value=(reading.nominal - half, reading.nominal + half))
 
     return reread(panel, reach, ("electrical_tilt", "vertical_scan"), centred)
+
+
+_POSITIVE = tuple(key for key, p in parameters().items() if p.possible is not None and p.possible[0] >= 0)
+
+
+@innocent("a dash read as a minus sign", "the sign before the figure is a dash", *_POSITIVE)
+def dash_for_minus(panel: Panel, reach: Reach) -> Panel:
+    """Negative figures of what is positive by its nature, without the sign."""
+
+    def positive(reading: Reading) -> Reading:
+        negative = not isinstance(reading.value, tuple) and reading.nominal < 0
+        return scaled(-1)(reading) if negative else reading
+
+    return reread(panel, reach, _POSITIVE, positive)

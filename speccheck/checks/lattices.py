@@ -60,7 +60,7 @@ def triangular_lattice(
     stated = tilt_span_deg(electrical_tilt, vertical_scan)
     along = Steering(stated[0] if stated else (0.0, 0.0), False, stated[1] if stated else None)
     found = [(strongest(model, s, subarrays=False), s) for s in (across, along)]
-    lobe, steering = max(found, key=lambda f: (f[0].visible, f[0].level_db))
+    lobe, steering = max(found, key=lambda f: (f[0].visible, f[0].present, f[0].level_db))
     broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=(sidelobe_suppression,))
     top_h, top_v = model.horizontal_pitch_wl(model.high_hz), model.vertical_pitch_wl(model.high_hz)
     radius = ((1 / top_h) ** 2 + (0.5 / top_v) ** 2) ** 0.5
@@ -130,12 +130,13 @@ def subarray_spacing(
     layout = model.layout
     pitch_wl = layout.subarray_rows * model.vertical_pitch_wl(model.high_hz)
     free = float(grating.pitch_limit_wl(max(abs(e) for e in stated[0])))
+    seen = f"their lobe is {lobe.level_db:.1f} dB against the beam" if lobe.present else "no lobe is seen"
     return Judgement(
         verdict=Fit.DOES_NOT_FIT if broken else lobe.verdict,
         summary=f"Sub-arrays of {layout.subarray_rows} rows stand {pitch_wl:.2f} λ apart at {model.band[1]:g}"
-        f" MHz, built for {layout.subarray_tilt_deg:g}°. Steered to {lobe.scan_deg:g}° their lobe is"
-        f" {lobe.level_db:.1f} dB against the beam.{broken_said(broken)}",
-        claimed=Amount(round(lobe.level_db, 1), "dB"),
+        f" MHz, built for {layout.subarray_tilt_deg:g}°. Steered to {lobe.scan_deg:g}° {seen}."
+        f"{broken_said(broken)}",
+        claimed=Amount(round(lobe.level_db, 1), "dB") if lobe.present else None,
         expected=Interval(None, -8.0, "dB"),
         working=(
             Step(

@@ -195,6 +195,8 @@ def sidelobes_over_tilt(
     if stated is None or model.layout.subarray_rows < 2 or "tilt_deg" in suppression.at:
         return None
     lobe = strongest(model, Steering(stated[0], False, stated[1]), subarrays=True)
+    if not lobe.present:
+        return None
     short = suppression.low + lobe.level_db
     return Judgement(
         verdict=Fit.FITS if not short > 0.5 else Fit.DOUBTFUL,

@@ -63,9 +63,14 @@ class Lobe:
     visible: bool
 
     @property
+    def present(self) -> bool:
+        """Whether there is any lobe, or flank of one, in front."""
+        return not np.isnan(self.level_db)
+
+    @property
     def verdict(self) -> Fit:
         """By the -3 and -8 dB rule; the flank of a hidden lobe fits."""
-        if not self.visible or np.isnan(self.level_db):
+        if not self.visible or not self.present:
             return Fit.FITS
         return (
             Fit.DOES_NOT_FIT
@@ -149,7 +154,7 @@ def broken_claims(
     lobe: Lobe, *, grating_lobes: Reading | None, suppressions: tuple[Reading | None, ...]
 ) -> list[str]:
     """The bid's own claims that the lobe breaks, in words."""
-    if not lobe.visible or np.isnan(lobe.level_db):
+    if not lobe.visible or not lobe.present:
         return []
     broken: list[str] = []
     freedom = claimed_freedom(grating_lobes)
@@ -178,7 +183,7 @@ ELEMENT_ASSUMED = "Element pattern of TR 38.901 form, 65° × 65°; a wider elem
 
 def lobe_steps(lobe: Lobe) -> tuple[Step, ...]:
     """The line of working for a lobe; none where there is no lobe."""
-    if np.isnan(lobe.level_db):
+    if not lobe.present:
         return ()
     seen = "lobe" if lobe.visible else "flank of a hidden lobe"
     formula = (
@@ -189,7 +194,7 @@ def lobe_steps(lobe: Lobe) -> tuple[Step, ...]:
 
 def lobe_said(lobe: Lobe, enters_at_deg: float) -> str:
     """A sentence on the lobe."""
-    if not lobe.visible or np.isnan(lobe.level_db):
+    if not lobe.visible or not lobe.present:
         return "No lobe enters within the range."
     return (
         f"Steered to {lobe.scan_deg:g}° a lobe of {lobe.level_db:.1f} dB stands at {lobe.stands_deg:.0f}°;"
