@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import math
+import re
 from dataclasses import dataclass
 
 from speccheck.records import Amount, Band, Interval, Value
@@ -29,6 +30,14 @@ _DECIMALS = {
 _SHOWN_IN_MM = 2.0
 
 _SHOWN_UNITS = {"deg": "°", "ohm": "Ω", "wl": "λ", "W/m2": "W/m²", "m2": "m²", "kg/m3": "kg/m³", "1": ""}
+
+
+_UNITS = r"(?:dB[idmc]?|°|λ|mm|cm|m/s|m²|m|kg|km/h|N|kW|W/m²|W|[kMG]Hz|%|Ω)(?!\w)"
+_DECIMAL_IN_PROSE = re.compile(
+    r"'[^']*'|“[^”]*”|"  # what a bidder wrote is quoted as it stands
+    rf"(?<![\w.,])\d+\.\d+(?=(?:\s?(?:to|and|–|…|±|×)\s?[+−-]?\d+(?:\.\d+)?)*\s?{_UNITS})"
+)
+_DECIMAL_IN_FORMULA = re.compile(r"(?<=\d)\.(?=\d)")
 
 
 @dataclass(frozen=True, slots=True)
@@ -104,6 +113,18 @@ class Numbers:
         if interval.low == interval.high:
             return self.figure(interval.low, interval.unit)
         return self.figure((interval.low, interval.high), interval.unit)
+
+    def prose(self, text: str) -> str:
+        """A sentence of the program: its figures with units in the page's decimal sign, quotes untouched."""
+        if not self.decimal_comma:
+            return text
+        return _DECIMAL_IN_PROSE.sub(lambda m: m[0] if m[0][0] in "'“" else m[0].replace(".", ","), text)
+
+    def formula(self, text: str) -> str:
+        """A formula with its numbers; beside a decimal comma its arguments are parted by semicolons."""
+        if not self.decimal_comma:
+            return text
+        return _DECIMAL_IN_FORMULA.sub(",", text.replace(", ", "; "))
 
     def band(self, band: Band | None) -> str:
         """A frequency range in MHz, or the words for a figure of the whole panel."""

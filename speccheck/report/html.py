@@ -117,6 +117,8 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         interval=numbers.interval,
         band=numbers.band,
         number=numbers.plain,
+        prose=numbers.prose,
+        formula=numbers.formula,
         metres_up=numbers.rounded_up,
         capitalize_first=_capitalize_first,
         by_weight=_by_weight,

@@ -33,7 +33,6 @@ from speccheck.report.summary import Tally, decisions, sentence, tally
 
 MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 MISSES = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
-TOP_REASONS = 5
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -96,10 +95,9 @@ class PanelView:
         rows = (row for row in self.source.requirements if row.requirement.level is level)
         return tuple(row for row in rows if not verdicts or row.verdict in verdicts)
 
-    @property
-    def top_reasons(self) -> tuple[str, ...]:
-        """What decided the outcome, the weightiest first, at most five."""
-        return self.source.reasons[:TOP_REASONS]
+    def top_reasons(self, most: int) -> tuple[str, ...]:
+        """What decided the outcome, the weightiest first."""
+        return self.source.reasons[:most]
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

@@ -40,6 +40,24 @@ def test_the_decimal_sign_is_one_setting() -> None:
     assert COMMA.interval(Interval(1.5, 2.5, "dB")).startswith("1,5 to 2,5")
 
 
+@pytest.mark.parametrize(
+    ("sentence", "written"),
+    [
+        ("21.0 dBi claimed; 18.1 to 19.8 dBi expected", "21,0 dBi claimed; 18,1 to 19,8 dBi expected"),
+        ("clause 4.1 and TR 38.901 stay", "clause 4.1 and TR 38.901 stay"),
+        ("the cell says '15.2 dBi'", "the cell says '15.2 dBi'"),
+        ("0.85λ at 2.5°", "0,85λ at 2,5°"),
+    ],
+)
+def test_sentences_follow_the_decimal_sign_and_quotes_do_not(sentence: str, written: str) -> None:
+    assert COMMA.prose(sentence) == written
+    assert POINT.prose(sentence) == sentence
+
+
+def test_formulas_part_their_arguments_by_semicolons_beside_a_decimal_comma() -> None:
+    assert COMMA.formula("10·log10(max(8.02, 0.8) × 1.10)") == "10·log10(max(8,02; 0,8) × 1,10)"
+
+
 def test_open_intervals_say_which_side_binds() -> None:
     assert POINT.interval(Interval(None, 3.0, "dB")).startswith("at most 3.0")
     assert POINT.interval(Interval(3.0, None, "dB")).startswith("at least 3.0")
