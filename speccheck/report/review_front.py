@@ -138,10 +138,8 @@ def _settings(assessment: Assessment) -> list[list[Content]]:
         **{f"House heading: {name}": label(key) for name, key in rules.headings.items()},
     }
     source = rules.tender or "built in"
-    return [
-        *(["setting", name, value, "", source] for name, value in numbers.items()),
-        *(["setting", name, None, text, source] for name, text in words.items()),
-    ]
+    rows: list[list[Content]] = [["setting", name, value, "", source] for name, value in numbers.items()]
+    return rows + [["setting", name, None, text, source] for name, text in words.items()]
 
 
 def _checks(assessment: Assessment) -> list[list[Content]]:

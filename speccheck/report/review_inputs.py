@@ -10,6 +10,7 @@ from speccheck.report.cells import Content, Rich
 from speccheck.report.formats import shown_unit
 from speccheck.report.inputs import InputRow
 from speccheck.report.marks import mark_for
+from speccheck.report.review_parts import spread
 from speccheck.report.review_places import INPUTS, NumberedFinding, Places, row_and_column
 from speccheck.report.sheets import Column, Grid, Table
 from speccheck.report.view import label
@@ -64,10 +65,7 @@ def _input_row(row: InputRow, places: Places) -> list[Content]:
 
 
 def _reading_row(panel: str, reading: Reading, places: Places) -> list[Content]:
-    value = reading.value
-    low, high, words = (None, None, value) if isinstance(value, str) else (value, None, "")
-    if isinstance(value, tuple):
-        low, high = value
+    low, high, words = spread(reading.value)
     kind = "ambiguous" if not reading.certain else ("text" if words else "figure")
     return [
         _cell(reading.where, places),
@@ -76,7 +74,7 @@ def _reading_row(panel: str, reading: Reading, places: Places) -> list[Content]:
         *(reading.band or (None, None)),
         reading.raw,
         kind,
-        low if isinstance(low, float | int) else None,
+        low,
         high,
         words,
         shown_unit(reading.unit),
