@@ -15,7 +15,8 @@ from speccheck.quantities.counts import count_of_claims, special_count
 from speccheck.quantities.dates import undo_date
 from speccheck.quantities.decimals import Expected, Span, choose
 from speccheck.quantities.figures import Claim, claims, quantity, unread_words
-from speccheck.quantities.lexer import tokens
+from speccheck.quantities.lexer import Token, tokens
+from speccheck.quantities.numerals import numeral
 from speccheck.quantities.spectrum import band_names, bands
 from speccheck.quantities.statuses import declares, is_error_value, status_of
 from speccheck.quantities.tidy import split_footnotes, tidy
@@ -25,6 +26,7 @@ Raw = str | float | int | bool | datetime | date | time | timedelta | None
 
 _LONGEST_TEXT = 1000
 _WIDEST_HALF_SCAN_DEG = 90.0
+_PLAIN = re.compile(r"-?[0-9]{1,4}(?:[.,][0-9]{1,2})?")
 _FORMAT_UNIT = re.compile(r'["\[ \\]([^"\]\\;]+?)["\]\\;]*$')
 
 
@@ -92,6 +94,8 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     if len(raw) > _LONGEST_TEXT and wanted.kind != "text":
         note = f"longer than {_LONGEST_TEXT} characters: not read as a figure"
         return CellContent(rest=raw[:_LONGEST_TEXT], notes=(note,))
+    if wanted.kind == "number" and _PLAIN.fullmatch(raw):
+        return CellContent(quantities=(Quantity(value=float(raw.replace(",", ".")), unit=wanted.unit),))
     if is_error_value(raw):
         return CellContent(rest=raw.strip(), notes=("an error value of the spreadsheet",))
     status = status_of(tidy(raw), answers_count=wanted.kind != "text")
@@ -114,25 +118,28 @@ def _read_figures(text: str, wanted: Expected) -> CellContent:
     if wanted.kind == "polarisation":
         number = polarisations(text)
         return CellContent(rest=text) if number is None else CellContent(quantities=(Quantity(value=number),))
-    point = _parse(text, wanted, comma=False)
-    if "," not in text and "." not in text:
-        return point
-    comma = _parse(text, wanted, comma=True)
-    return point if point == comma else choose(point, comma, wanted)
-
-
-def _parse(text: str, wanted: Expected, *, comma: bool) -> CellContent:
     if wanted.kind == "count":
         special = special_count(text)
         if special:
             return special
     names, body = band_names(text) if wanted.kind == "bands" else ((), text)
-    found, stray = amounts(tokens(body), comma=comma)
+    parts = tokens(body)
+    point = _parse(text, parts, names, wanted, comma=False)
+    if all(numeral(t.text, comma=False) == numeral(t.text, comma=True) for t in parts if t.kind == "num"):
+        return point
+    comma = _parse(text, parts, names, wanted, comma=True)
+    return point if point == comma else choose(point, comma, wanted)
+
+
+def _parse(
+    text: str, parts: list[Token], names: tuple[str, ...], wanted: Expected, *, comma: bool
+) -> CellContent:
+    found, stray = amounts(parts, comma=comma)
     if any(math.isnan(a.low) or (a.high is not None and math.isnan(a.high)) for a in found):
         return CellContent(rest=text)
     if wanted.kind == "bands":
-        quantities = bands(found, names, wanted.unit)
-        return CellContent(quantities=tuple(quantities), rest="" if quantities else text)
+        ranges = bands(found, names, wanted.unit)
+        return CellContent(quantities=tuple(ranges), rest="" if ranges else text)
     quantities = _sizes(found, wanted.unit) if wanted.kind == "size" else _figures(found, wanted)
     return CellContent(quantities=tuple(quantities), rest=unread_words(found, stray))
 

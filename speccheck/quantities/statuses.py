@@ -48,7 +48,7 @@ def is_error_value(text: str) -> bool:
 
 
 def _refers(folded: str) -> bool:
-    if len(folded) > 120:
+    if len(folded) > 120 or not folded[0].isalpha():
         return False
     if _NUMBERED_NOTE.fullmatch(folded):
         return True

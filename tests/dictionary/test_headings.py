@@ -199,7 +199,8 @@ def test_a_heading_nobody_listed_is_put_together_from_its_words(heading: str, ke
 @pytest.mark.parametrize(
     "heading",
     ["Gain margin", "Return loss of cable", "Antenna height above ground", "Wind load on tower",
-     "Noise level", "Power", "Element of surprise", "Distance to site", "Weight of the radio", "Storage temperature"],
+     "Noise level", "Power", "Element of surprise", "Distance to site", "Weight of the radio",
+     "Storage temperature"],
 )  # fmt: skip
 def test_one_word_that_is_not_understood_is_enough_to_refuse(heading: str) -> None:
     assert match_heading(heading).parameters == ()

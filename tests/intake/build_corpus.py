@@ -429,7 +429,13 @@ def dates_and_formats(book: Workbook) -> None:
         ["Weight", 11.5],
         ["Height", 1310],
     ])  # fmt: skip
-    for cell, number_format in (("B4", '0.0" dBi"'), ("B5", '0"°"'), ("B8", "0%"), ("B9", '0.0 "kg"'), ("B10", '0" mm"')):
+    for cell, number_format in (
+        ("B4", '0.0" dBi"'),
+        ("B5", '0"°"'),
+        ("B8", "0%"),
+        ("B9", '0.0 "kg"'),
+        ("B10", '0" mm"'),
+    ):
         made[cell].number_format = number_format
     made["B6"].number_format = made["B7"].number_format = "d-mmm"
 
@@ -488,7 +494,15 @@ def minimum_typical_maximum(book: Workbook) -> None:
 
 def repeated_headings(book: Workbook) -> None:
     """A catalogue with its heading row repeated, group rows, a spacer column and an empty row."""
-    head = ["Type", None, "Freq. range (MHz)", "Gain (dBi)", "Az. beamwidth (°)", "El. beamwidth (°)", "Mass (kg)"]
+    head = [
+        "Type",
+        None,
+        "Freq. range (MHz)",
+        "Gain (dBi)",
+        "Az. beamwidth (°)",
+        "El. beamwidth (°)",
+        "Mass (kg)",
+    ]
     sheet(book, "All", [
         ["Sector panels 65°"],
         head,

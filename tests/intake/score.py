@@ -167,7 +167,8 @@ def _value(item: Expected, reading: Reading) -> bool:
     wanted = item.value if isinstance(item.value, tuple) else (item.value,)
     found = reading.value if isinstance(reading.value, tuple) else (reading.value,)
     return len(wanted) == len(found) and all(
-        w is not None and abs(w - f) <= RELATIVE * max(abs(w), 1e-9) for w, f in zip(wanted, found, strict=True)
+        w is not None and abs(w - f) <= RELATIVE * max(abs(w), 1e-9)
+        for w, f in zip(wanted, found, strict=True)
     )
 
 
@@ -179,7 +180,9 @@ def _tolerance(item: Expected, reading: Reading) -> bool:
 
 def _contradicts(panel: Panel, reading: Reading, expected: list[Expected]) -> bool:
     """A certain reading of a parameter and cell that the expectation names with another value."""
-    rivals = [e for e in expected if (e.panel, e.cell, e.key) == (panel.name, reading.where.cell, reading.parameter)]
+    rivals = [
+        e for e in expected if (e.panel, e.cell, e.key) == (panel.name, reading.where.cell, reading.parameter)
+    ]
     return bool(rivals) and not any(_same(e, reading) for e in rivals)
 
 
@@ -205,7 +208,9 @@ def main(arguments: list[str]) -> int:
     results = [score(source, expectations(expected)) for source, expected in corpus(names)]
     for result in results:
         share = 100 * result.right / result.total
-        print(f"{result.file:36} {result.right:4} of {result.total:4}  {share:5.1f} %  wrong {len(result.wrong)}")
+        print(
+            f"{result.file:36} {result.right:4} of {result.total:4}  {share:5.1f} %  wrong {len(result.wrong)}"
+        )
         if "-v" in arguments:
             for line in (*result.missed, *(f"WRONG {w}" for w in result.wrong)):
                 print(f"    {line}")
