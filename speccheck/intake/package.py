@@ -4,13 +4,11 @@ from __future__ import annotations
 
 import posixpath
 from dataclasses import dataclass, field
-from functools import lru_cache
-
-from openpyxl.styles.numbers import BUILTIN_FORMATS, is_date_format
 
 from speccheck.errors import UnusableInputError
 from speccheck.intake.archive import Archive
 from speccheck.intake.limits import Limits
+from speccheck.intake.number_formats import BUILT_IN
 from speccheck.intake.xml_parts import End, Start, Text, stream
 
 
@@ -37,12 +35,6 @@ class Package:
         """Number format of a cell's style index; empty for the general format."""
         index = int(style) if style.isdigit() else -1
         return self.formats[index] if 0 <= index < len(self.formats) else ""
-
-
-@lru_cache(maxsize=500)
-def shows_date(number_format: str) -> bool:
-    """Whether a number format shows a date or time."""
-    return bool(number_format) and bool(is_date_format(number_format))
 
 
 def read_package(archive: Archive, limits: Limits) -> Package:
@@ -178,7 +170,7 @@ class _PartReader:
                 inside[0] = True
             elif tag == "xf" and inside[0]:
                 number = _whole(at.get("numFmtId", "0"))
-                code = own.get(number) or BUILTIN_FORMATS.get(number, "")
+                code = own.get(number) or BUILT_IN.get(number, "")
                 found.append("" if code == "General" else code)
 
         def end(tag: str) -> None:

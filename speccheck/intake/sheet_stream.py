@@ -8,12 +8,11 @@ from __future__ import annotations
 import re
 from dataclasses import dataclass, field
 
-from openpyxl.utils.datetime import CALENDAR_MAC_1904, CALENDAR_WINDOWS_1900, from_excel, from_ISO8601
-
 from speccheck.intake.archive import Archive
 from speccheck.intake.grid import Cell, Grid, Raw, Span, text_of
 from speccheck.intake.limits import Limits
-from speccheck.intake.package import Package, SheetEntry, shows_date
+from speccheck.intake.number_formats import date_of_serial, date_of_text, shows_date
+from speccheck.intake.package import Package, SheetEntry
 from speccheck.intake.xml_parts import stream
 
 _ADDRESS = re.compile(r"([A-Z]{1,3})([0-9]{1,7})")
@@ -78,7 +77,6 @@ class _SheetReader:
         self._has_formula = False
         self._pieces: list[str] = []
         self._listening = False
-        self._epoch = CALENDAR_MAC_1904 if package.counts_from_1904 else CALENDAR_WINDOWS_1900
 
     def start(self, tag: str, at: dict[str, str]) -> None:
         if tag == "c":
@@ -194,10 +192,10 @@ class _SheetReader:
     def _number_or_date(self, stored: str, number_format: str) -> tuple[Raw, str]:
         try:
             if self._kind == "d":
-                return from_ISO8601(stored), ""
+                return date_of_text(stored), ""
             number = float(stored)
             if number_format and shows_date(number_format):
-                return from_excel(number, self._epoch), ""
+                return date_of_serial(number, counts_from_1904=self._package.counts_from_1904), ""
         except (ValueError, OverflowError):
             return stored, ""
         if number.is_integer() and abs(number) < 1e15:

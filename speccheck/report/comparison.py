@@ -29,7 +29,7 @@ def write_comparison(evaluation: Evaluation, out: str | Path, formats: Sequence[
         written.append(folder / "comparison.json")
         write_text_atomic(written[-1], comparison_json(evaluation))
     if "xlsx" in formats:
-        from speccheck.report.comparison_book import comparison_bytes  # noqa: PLC0415 - openpyxl only if asked for
+        from speccheck.report.comparison_book import comparison_bytes  # noqa: PLC0415 - only if asked for
 
         written.append(folder / "comparison.xlsx")
         write_bytes_atomic(written[-1], comparison_bytes(evaluation))

@@ -5,12 +5,10 @@ from __future__ import annotations
 from collections.abc import Iterator, Sequence
 from datetime import date, datetime
 
-from openpyxl.utils import get_column_letter
-
 from speccheck.records import Compliance, Level, Outcome, Requirement, Value
 from speccheck.records.evaluations import Evaluation, OfferCell
 from speccheck.report.book import book_bytes
-from speccheck.report.cells import Content, Rich
+from speccheck.report.cells import Content, Rich, column_letter
 from speccheck.report.comparison_view import Column as OfferColumn
 from speccheck.report.comparison_view import Comparison, compare, lines
 from speccheck.report.formats import shown_unit
@@ -221,7 +219,7 @@ def _points(view: Comparison) -> Table:
     sums: list[Content] = [
         Rich(
             value=column.points,
-            formula=f"SUMPRODUCT($C$2:$C${last},{get_column_letter(n)}2:{get_column_letter(n)}{last})",
+            formula=f"SUMPRODUCT($C$2:$C${last},{column_letter(n)}2:{column_letter(n)}{last})",
         )
         for n, column in enumerate(placed, start=4)
     ]
