@@ -157,8 +157,8 @@ def decimals_for(value: float, unit: str) -> int:
         return 1
     if unit in _DECIMALS:
         return _DECIMALS[unit]
-    if not unit and value == round(value):
-        return 0
+    if not unit and abs(value) < 100:
+        return 0 if value == round(value) else 2
     if value == 0 or not math.isfinite(value):
         return 0
     return max(0, 2 - math.floor(math.log10(abs(value))))
