@@ -8,7 +8,7 @@ export DEBIAN_FRONTEND = noninteractive
 
 # Pango draws the PDF; the rest opens and checks what the tests produce.
 PANGO := libpango-1.0-0 libpangoft2-1.0-0 libharfbuzz-subset0 fonts-dejavu-core
-SYSTEM := $(PANGO) chromium poppler-utils qpdf
+SYSTEM := $(PANGO) chromium poppler-utils qpdf libreoffice-calc-nogui
 
 .PHONY: demo test system pango benchmarks clean
 

@@ -11,6 +11,7 @@ import click
 from speccheck import __version__, screen
 from speccheck.atomic import write_bytes_atomic
 from speccheck.batch import assess_many
+from speccheck.batch.copying import write_copy
 from speccheck.batch.lone_tender import has_requirements, lone_tender
 from speccheck.checks.registry import CHECKS
 from speccheck.errors import OutputError, UnusableInputError
@@ -90,6 +91,9 @@ def main() -> None:
 )
 @click.option("--jobs", default=1, show_default=True, type=click.IntRange(1, 64), help="Processes to use.")
 @click.option("--resume", is_flag=True, help="Keep what is done of bids whose input and rules are unchanged.")
+@click.option(
+    "--copy-for", "copies", multiple=True, metavar="BIDDER", help="Write this bidder's own copy too."
+)
 def check(
     *,
     bids: tuple[Path, ...],
@@ -98,6 +102,7 @@ def check(
     formats: tuple[str, ...],
     jobs: int,
     resume: bool,
+    copies: tuple[str, ...],
 ) -> None:
     """Vet the BIDS (files or folders) and write the reports.
 
@@ -122,6 +127,9 @@ def check(
     click.echo()
     click.echo(screen.outcome_table(evaluation))
     click.echo(f"\nOutputs in {out}")
+    for bidder in copies:
+        written = write_copy(bidder, evaluation.bids, out=out, tender=tender, formats=formats)
+        click.echo(f"Copy for {bidder} in {written[0].parent}")
     sys.exit(_exit_code(evaluation))
 
 

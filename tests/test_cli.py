@@ -51,6 +51,16 @@ def test_every_format_is_written_whole(tmp_path: Path) -> None:
     assert {".report.html", ".report.pdf", ".review.xlsx", ".result.json"} <= names
 
 
+def test_copy_for_a_bidder_holds_no_trace_of_the_others(tmp_path: Path) -> None:
+    run("check", SAMPLES, "--out", tmp_path, "--formats", "html,json", "--copy-for", "brackwater-active")
+    copies = list((tmp_path / "copy-for-brackwater-active").iterdir())
+    assert {path.suffix for path in copies} == {".html", ".json"}
+    for path in copies:
+        text = path.read_text(encoding="utf-8")
+        assert "Brack 64" in text
+        assert not any(name in text for name in ("Cinder", "Dunlyre", "Eskerfold", "Aldervane"))
+
+
 def test_damaged_bid_is_named_and_the_others_are_done(tmp_path: Path) -> None:
     broken = tmp_path / "broken.xlsx"
     broken.write_bytes(SOUND.read_bytes()[:2000])
