@@ -12,9 +12,15 @@ from dataclasses import dataclass, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.wording import names
 from speccheck.intake.wording.clauses import Clause
-from speccheck.intake.wording.families import belongs
 from speccheck.intake.wording.lexicon import Kind
-from speccheck.intake.wording.segments import demands, own_level, scope_of, segments
+from speccheck.intake.wording.segments import (
+    demands,
+    fitting_parameter,
+    general_statistics,
+    own_level,
+    scope_of,
+    segments,
+)
 from speccheck.intake.wording.tokens import Token, tokens
 from speccheck.intake.wording.whole_phrases import whole_phrase
 from speccheck.intake.wording.zipping import zipped
@@ -22,7 +28,7 @@ from speccheck.records import Level
 
 _STATISTICAL_UNITS = ("dBi", "dB", "dBc", "deg", "dBm")
 _CONTENT = (Kind.QUANTITY, Kind.VERSION)
-_WITH_KIT = ("incl", "with mounting", "with brackets")
+_WITH_KIT = ("incl", "with mounting", "with brackets", "with the mounting")
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -54,18 +60,16 @@ def read_wording(
         return (replace(whole, level=whole.level or level or Level.MANDATORY),)
     found = tokens(wording, house=habits.house, decimal_comma=habits.decimal_comma)
     key = parameter or _parameter(found)
-    clauses = _named(found, key) or _figures(found, key) or (_without_figure(found, key),)
+    clauses = (
+        _named(found, key) or _figures(found, key, fixed=bool(parameter)) or (_without_figure(found, key),)
+    )
     return tuple(_completed(clause, found, level, habits) for clause in clauses)
 
 
 def _parameter(found: Sequence[Token]) -> str:
     """Key of the parameter named, the first that a figure's unit fits; several keys joined by '+'."""
     named = names.of_kind(found, Kind.PARAMETER)
-    units = {t.figure.unit for t in found if t.figure is not None and t.figure.unit}
-    fitting = [t for t in named if any(belongs(u, parameters()[t.said.split("+")[0]]) for u in units)]
-    key = (fitting or named)[0].said if named else ""
-    with_kit = any(t.text.casefold().startswith(_WITH_KIT) for t in names.of_kind(found, Kind.SCOPE))
-    return "weight_with_brackets" if key == "weight" and with_kit else key
+    return fitting_parameter(found) or (named[0].said if named else "")
 
 
 _NAMED = (
@@ -86,10 +90,10 @@ def _named(found: Sequence[Token], key: str) -> tuple[Clause, ...]:
     return names.polarisations(found) if key == "polarisations" else ()
 
 
-def _figures(found: Sequence[Token], key: str) -> tuple[Clause, ...]:
+def _figures(found: Sequence[Token], key: str, *, fixed: bool) -> tuple[Clause, ...]:
     if not key:
         return ()
-    read = tuple(clause for demand in demands(found, key) for clause in zipped(demand, key))
+    read = tuple(clause for demand in demands(found, key, fixed=fixed) for clause in zipped(demand))
     if not read:
         return ()
     more = names.connectors(found) if key == "rf_ports" and names.of_kind(found, Kind.CONNECTOR) else ()
@@ -117,6 +121,8 @@ def _completed(clause: Clause, found: Sequence[Token], level: Level | None, habi
     clause = _with_statistic(clause, found, habits.statistic)
     scope = scope_of(found)
     clause = replace(clause, scope="; ".join(dict.fromkeys(filter(None, (clause.scope, *scope)))))
+    if clause.parameter == "weight" and any(text.casefold().startswith(_WITH_KIT) for text in scope):
+        clause = replace(clause, parameter="weight_with_brackets")
     unread = " ".join(t.text for t in names.of_kind(found, Kind.UNREAD) if t.text not in clause.scope.split())
     clause = replace(clause, unread=unread)
     return clause.doubting(*_usual_doubts(clause))
@@ -163,7 +169,7 @@ def _with_statistic(clause: Clause, found: Sequence[Token], default: str) -> Cla
     known = parameters().get(clause.parameter)
     if known is None or known.unit not in (*_STATISTICAL_UNITS, "") or known.kind != "number":
         return clause
-    said = [t.said for t in names.of_kind(found, Kind.STATISTIC)]
+    said = general_statistics(found)
     if clause.statistic:
         return clause
     if not said:

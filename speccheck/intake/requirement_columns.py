@@ -13,7 +13,7 @@ from speccheck.intake.wording.families import belongs
 from speccheck.intake.wording.figures import Figure, Form, match_figure
 from speccheck.intake.wording.lexicon import Kind, general_vocabularies, parameter_vocabulary, words
 from speccheck.intake.wording.limits import clashes, settle
-from speccheck.intake.wording.segments import MHZ_PER_UNIT
+from speccheck.intake.wording.places import MHZ_PER_UNIT
 from speccheck.intake.wording.tokens import normalise
 from speccheck.quantities import unit_name
 from speccheck.records import Band, Level

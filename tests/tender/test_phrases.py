@@ -127,3 +127,34 @@ def test_any_wording_gives_a_clause_and_never_fails(words: str) -> None:
 def test_any_gain_reads_back_to_itself(gain: float, words: str) -> None:
     clause = read_wording(f"Gain {words.format(gain)}")[0]
     assert (clause.operator, clause.limit, clause.unit) == ("≥", gain, "dBi")
+
+
+@pytest.mark.parametrize(
+    ("words", "readings"),
+    [
+        (
+            "Gain not less than 16.5 dBi in the band 1710-2170 MHz and 17.5 dBi in the band 2300-2690 MHz",
+            [("gain", "≥", 16.5, ((1710, 2170),)), ("gain", "≥", 17.5, ((2300, 2690),))],
+        ),
+        ("Height ≤ 1500 mm, width ≤ 300 mm", [("height", "≤", 1500, ()), ("width", "≤", 300, ())]),
+        ("Gain ≥ 16 dBi, at 10° tilt", [("gain", "≥", 16, ())]),
+        ("VSWR shall be less than or equal to 1.5", [("vswr", "≤", 1.5, ())]),
+        ("Shall survive wind speeds of 55 m/s", [("survival_wind_speed", "≥", 55, ())]),
+        (
+            "Max size (W x H x D): 300 x 1500 x 150 mm",
+            [("width", "≤", 300, ()), ("height", "≤", 1500, ()), ("depth", "≤", 150, ())],
+        ),
+        ("A panel with at least 64 transceivers", [("transceivers", "≥", 64, ())]),
+        ("Gewinn mindestens 17 dBi", [("gain", "≥", 17, ())]),
+        ("Le gain doit être au moins 17 dBi", [("gain", "≥", 17, ())]),
+    ],
+)  # fmt: skip
+def test_other_ways_to_say_it(words: str, readings: list[tuple[Any, ...]]) -> None:
+    """Common practice: kinds of wording met in schedules beyond the numbered ones."""
+    read = [(c.parameter, c.operator, c.limit, c.bands) for c in read_wording(words)]
+    assert read == readings
+
+
+def test_a_typical_value_beside_a_guaranteed_one_keeps_its_own_statistic() -> None:
+    guaranteed, typical = read_wording("Gain: 17 dBi min, 18 dBi typ")
+    assert (guaranteed.statistic, typical.statistic) == ("each", "typ")

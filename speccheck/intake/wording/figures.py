@@ -44,7 +44,7 @@ _NUMBER = r"\d{1,3}(?:[ ']\d{3})+(?![\d])(?:[.,]\d+)?|\d+(?:[.,]\d+)?"
 _SIGNED = rf"(?:[-+](?=\d))?(?:{_NUMBER})"
 _UNIT = (
     r"dBi|dBd|dBc|dBm|dBW|dB|°\s?C|degrees?\s?C|deg\.?\s?C|°|degrees?|deg\b\.?|Grad\b|GHz|MHz|kHz|mm|cm|m/s|mph|km/h|kmh|kph"
-    r"|kN|N\b|lbf|(?-i:lbs?\b)|kg|kW|W\b|watts?\b|ohms?\b|Ω|λ|lambda\b|inch(?:es)?\b|in\b(?=\s*(?:$|[,;)]))|ft\b|m\b|g\b|%|:\s?1(?![\d.])"
+    r"|kN|N\b|lbf|(?-i:lbs?\b)|kg|kW|W\b|watts?\b|ohms?\b|Ω|λ|lambda\b|inch(?:es)?\b|in\b(?=\s*(?:$|[,;)]))|ft\b|m\b|g\b|%|years?\b|hours?\b|h\b|V\b|VDC|:\s?1(?![\d.])"
 )
 _TO = r"\s*(?:-|–|\.{2,3}|÷|~|\bto\b|\bbis\b|\bà\b|\bhasta\b|\ba\b)\s*"
 _TIMES = r"\s*[x×*]\s*"

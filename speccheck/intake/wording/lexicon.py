@@ -14,7 +14,7 @@ from dataclasses import dataclass
 from enum import StrEnum
 from importlib import resources
 
-from speccheck.dictionary import parameters
+from speccheck.dictionary import parameters, synonyms
 
 
 class Kind(StrEnum):
@@ -32,6 +32,7 @@ class Kind(StrEnum):
     LEVEL = "level"
     STATISTIC = "statistic"
     SCOPE = "scope"
+    ORDER = "order"
     PLANE = "plane"
     JOIN = "join"
     MARK = "mark"
@@ -100,13 +101,23 @@ def parameter_vocabulary(house: Mapping[str, str]) -> Vocabulary:
     return _parameter_vocabulary(tuple(sorted(house.items())))
 
 
+_IDENTITIES = ("model", "part_number", "manufacturer", "revision", "remarks", "panel_type")
+"""Headings such as 'panel' or 'antenna' that in a clause are no parameter."""
+
+
 @functools.lru_cache(maxsize=8)
 def _parameter_vocabulary(house: tuple[tuple[str, str], ...]) -> Vocabulary:
     meaning: dict[str, str] = {}
     for key, parameter in parameters().items():
+        if key in _IDENTITIES:
+            continue
         for terms in parameter.headings.values():
             meaning.update(_new(terms, key, meaning))
         meaning.setdefault(fold(parameter.label), key)
+    for table in synonyms().values():
+        for key, terms in table.items():
+            if "+" in key and set(key.split("+")) <= parameters().keys():
+                meaning.update(_new(terms, key, meaning))
     for key, listed in words()["parameter"].items():
         meaning.update({fold(term): key for term in listed})
     meaning.update({fold(term): key for term, key in house})

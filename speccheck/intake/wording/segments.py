@@ -1,37 +1,19 @@
-"""The parts of a clause: which figures are limits, which are places (band, angle, wind speed, test power)."""
+"""The parts of a clause: which figures are limits of which parameter, and under which comparator."""
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Mapping, Sequence
+from collections.abc import Iterable, Sequence
 from dataclasses import dataclass, field, replace
 
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.wording.families import belongs
 from speccheck.intake.wording.figures import Figure, Form
 from speccheck.intake.wording.lexicon import Kind, general_vocabularies
+from speccheck.intake.wording.places import Place, bare_band, place_of
 from speccheck.intake.wording.tokens import Token
-from speccheck.quantities import convert, dimension
-from speccheck.records import Band, Level
+from speccheck.records import Level
 
-_LOWEST_BARE_BAND_MHZ = 300.0
-_OPEN_END_MHZ = 1e6
-MHZ_PER_UNIT = {"MHz": 1.0, "GHz": 1000.0, "kHz": 0.001, "": 1.0}
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Place:
-    """Conditions a limit holds under; `texts` in the wording's own words."""
-
-    bands: tuple[Band, ...] = ()
-    at: Mapping[str, float] = field(default_factory=dict)
-    texts: tuple[str, ...] = ()
-
-    def __add__(self, other: Place) -> Place:
-        return Place(
-            bands=self.bands or other.bands,
-            at={**other.at, **self.at},
-            texts=tuple(dict.fromkeys((*self.texts, *other.texts))),
-        )
+_PLACE_WORDS = ("at", "@", "for", "over", "in", "with", "on")
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -46,41 +28,104 @@ class Demand:
     statistic: str = ""
     parts: tuple[float, ...] = ()
     bracket: str = ""
+    key: str = ""
+    order: str = ""
 
 
 def segments(found: Sequence[Token]) -> tuple[tuple[Token, ...], ...]:
-    """A clause cut at commas and semicolons outside brackets."""
+    """A clause cut at commas and semicolons outside brackets, and at an 'and' between two figures' parts."""
     cut: list[list[Token]] = [[]]
     depth = 0
-    for token in found:
+    for place, token in enumerate(found):
         depth += {"(": 1, "[": 1, ")": -1, "]": -1}.get(token.text, 0)
-        if depth <= 0 and token.kind is Kind.MARK and token.text in ",;":
+        mark = token.kind is Kind.MARK and token.text in ",;"
+        if depth <= 0 and (mark or _joins_demands(cut[-1], token, found[place + 1 :])):
             cut.append([])
         else:
             cut[-1].append(token)
     return tuple(tuple(part) for part in cut if part)
 
 
-def demands(found: Sequence[Token], key: str) -> tuple[Demand, ...]:
-    """The demands of a clause on the parameter `key` (several keys joined by '+')."""
-    parameter = parameters()[key.split("+", maxsplit=1)[0]]
-    parts = [_part(segment, parameter) for segment in segments(found)]
+def _joins_demands(before: Sequence[Token], token: Token, after: Sequence[Token]) -> bool:
+    """Whether an 'and' stands between two figures of one unit, so that each side is a demand."""
+    if token.kind is not Kind.JOIN or token.said != "and":
+        return False
+    first, second = (
+        [t.figure.unit for t in part if t.figure is not None and t.figure.unit] for part in (before, after)
+    )
+    return bool(first) and first[0] in second
+
+
+def demands(found: Sequence[Token], key: str, *, fixed: bool = False) -> tuple[Demand, ...]:
+    """The demands of a clause on the parameter `key` (several keys joined by '+').
+
+    A part that names a parameter of its own demands that one, unless the tender's column fixed it.
+    """
+    cut = segments(found)
+    keys = [key if fixed else _own_key(segment, key) for segment in cut]
+    parts = [
+        replace(_part(segment, parameters()[own.split("+", maxsplit=1)[0]]), key=own)
+        for segment, own in zip(cut, keys, strict=True)
+    ]
+    order = "".join(
+        c for t in found if t.kind is Kind.ORDER for c in t.text.casefold() if c.isalpha() and c != "x"
+    )
     general = Place()
     for part in parts:
         if not part.figures:
             general = general + part.place
+    several = sum(bool(part.figures) for part in parts) > 1
     read: list[Demand] = []
     level: Level | None = None
     said = next((part.said for part in parts if not part.figures and part.said != "best"), "")
-    for part in parts:
+    for part, segment in zip(parts, cut, strict=True):
         level = part.level or level
         if part.figures:
             said = part.said or said
-            read.append(replace(part, said=said, level=level, place=part.place + general))
+            statistic = part.statistic or (_own_statistic(segment) if several else "")
+            place = part.place + general
+            read.append(replace(part, said=said, level=level, place=place, statistic=statistic, order=order))
     last = parts[-1] if parts else None
     if last is not None and not last.figures and last.level is not None:
         read = [replace(demand, level=demand.level or last.level) for demand in read]
     return tuple(read)
+
+
+def general_statistics(found: Sequence[Token]) -> tuple[str, ...]:
+    """Statistics that hold for the whole clause: of its only demand, or said apart from any figure."""
+    cut = segments(found)
+    figured = [any(t.figure is not None for t in segment) for segment in cut]
+    parts = [s for s, own in zip(cut, figured, strict=True) if sum(figured) < 2 or not own]
+    return tuple(t.said for segment in parts for t in segment if t.kind is Kind.STATISTIC)
+
+
+def _own_statistic(segment: Sequence[Token]) -> str:
+    return next((t.said for t in segment if t.kind is Kind.STATISTIC), "")
+
+
+def _own_key(segment: Sequence[Token], key: str) -> str:
+    """Parameter that a part names itself and has a figure for, else `key`.
+
+    'at 10° tilt' says a place, and so does 'in the band 2300-2690 MHz' beside a figure of `key`.
+    """
+    own = fitting_parameter(segment)
+    if not own or (segment[0].kind is Kind.FILLER and segment[0].text.casefold() in _PLACE_WORDS):
+        return key
+    general = parameters()[key.split("+", maxsplit=1)[0]]
+    figures = [t.figure for t in segment if t.figure is not None and t.figure.unit]
+    is_place = parameters()[own.split("+", maxsplit=1)[0]].kind == "bands"
+    return key if is_place and any(belongs(f.unit, general) for f in figures) else own
+
+
+def fitting_parameter(segment: Sequence[Token]) -> str:
+    """Key of the first parameter named that a figure's unit fits, '' if there is none."""
+    units = {t.figure.unit for t in segment if t.figure is not None and t.figure.unit}
+    for token in segment:
+        if token.kind is Kind.PARAMETER:
+            first = parameters()[token.said.split("+", maxsplit=1)[0]]
+            if any(belongs(unit, first) for unit in units):
+                return token.said
+    return ""
 
 
 def own_level(segment: Iterable[Token]) -> Level | None:
@@ -118,7 +163,7 @@ def _part(segment: Sequence[Token], parameter: Parameter) -> Demand:
         elif _is_limit(token.figure, inside[index], parameter, limits):
             limits.append(index)
         else:
-            place = place + _place(segment, index, parameter)
+            place = place + place_of(segment, index, parameter)
     said, statistic = _comparator(segment, limits, parameter)
     return Demand(
         figures=tuple(f for i in limits if (f := segment[i].figure) is not None),
@@ -161,63 +206,9 @@ def _is_part_count(figure: Figure, inside: bool, parameter: Parameter, limits: S
 def _is_limit(figure: Figure, inside: bool, parameter: Parameter, limits: Sequence[int]) -> bool:
     if figure.form is Form.CARRIERS or not belongs(figure.unit, parameter):
         return False
-    if _bare_band(figure, parameter):
+    if bare_band(figure, parameter):
         return False
     return not (inside and limits)
-
-
-def _bare_band(figure: Figure, parameter: Parameter) -> bool:
-    bare = figure.form is Form.RANGE and not figure.unit and min(figure.numbers) >= _LOWEST_BARE_BAND_MHZ
-    return bare and parameter.direction != "contains" and parameter.unit in ("dBi", "dB", "dBc", "", "deg")
-
-
-def _place(segment: Sequence[Token], index: int, parameter: Parameter) -> Place:
-    """What a figure that is no limit says about where the limit holds."""
-    token = segment[index]
-    figure = token.figure
-    if figure is None:
-        return Place()
-    kind = dimension(figure.unit)
-    if kind == "frequency" or _bare_band(figure, parameter):
-        return _frequency_place(segment, index, figure)
-    if figure.form is Form.CARRIERS:
-        return Place(at={"carrier_dbm": convert(figure.numbers[1], figure.unit, "dBm")}, texts=(token.text,))
-    if kind == "angle":
-        following = segment[index + 1 : index + 2]
-        tilt = any(t.said in ("electrical_tilt", "tilt_steps") for t in following)
-        return Place(at={"tilt_deg" if tilt else "angle_deg": figure.numbers[0]}, texts=(token.text,))
-    if kind == "speed":
-        speed = convert(figure.numbers[0], figure.unit, "m/s")
-        return Place(at={"wind_speed_mps": speed}, texts=(token.text,))
-    return Place(texts=(token.text,))
-
-
-def _frequency_place(segment: Sequence[Token], index: int, figure: Figure) -> Place:
-    factor = MHZ_PER_UNIT[figure.unit]
-    numbers = [number * factor for number in figure.numbers]
-    if figure.form is Form.RANGE:
-        return Place(bands=((min(numbers), max(numbers)), *_listed_bands(segment, index)))
-    before = segment[index - 1].said if index else ""
-    if before in ("<", "≤", "up_to"):
-        return Place(bands=((0.0, numbers[0]),))
-    if before in (">", "≥"):
-        return Place(bands=((numbers[0], _OPEN_END_MHZ),))
-    return Place(at={"frequency_mhz": numbers[0]}, texts=(segment[index].text,))
-
-
-def _listed_bands(segment: Sequence[Token], index: int) -> tuple[Band, ...]:
-    """Further ranges of a list 'a/b/c MHz' that starts at `index`."""
-    bands: list[Band] = []
-    while index + 2 < len(segment) and (
-        segment[index + 1].text in "/,;&" or segment[index + 1].kind is Kind.JOIN
-    ):
-        figure = segment[index + 2].figure
-        if figure is None or figure.form is not Form.RANGE:
-            break
-        numbers = [number * MHZ_PER_UNIT.get(figure.unit, 1.0) for number in figure.numbers]
-        bands.append((min(numbers), max(numbers)))
-        index += 2
-    return tuple(bands)
 
 
 def _comparator(segment: Sequence[Token], limits: Sequence[int], parameter: Parameter) -> tuple[str, str]:

@@ -43,6 +43,7 @@ _CODES: tuple[tuple[Kind, re.Pattern[str]], ...] = (
         ),
     ),
     (Kind.VERSION, re.compile(r"(?<!\w)(?:v|version\s*|rev\.?\s*)\d+(?:\.\d+)*(?!\w)", re.IGNORECASE)),
+    (Kind.ORDER, re.compile(r"(?<!\w)[HLWDT]\s*x\s*[HLWDT](?:\s*x\s*[HLWDT])?(?!\w)", re.IGNORECASE)),
     (Kind.UNREAD, re.compile(r"(?<!\w)(?:n/a|n\.a\.|t\.b\.[ad]\.)(?!\w)", re.IGNORECASE)),
     (Kind.MARK, re.compile(r"[,;:/()\[\].]")),
 )

@@ -11,11 +11,13 @@ from speccheck.intake.wording.limits import settle
 from speccheck.intake.wording.segments import Demand
 from speccheck.records import Band
 
+_SIDES = {"h": "height", "l": "height", "w": "width", "d": "depth", "t": "depth"}
 
-def zipped(demand: Demand, key: str) -> tuple[Clause, ...]:
-    """The clauses of a demand on `key` (several keys joined by '+')."""
-    keys = key.split("+")
-    clauses = _of_several(demand, keys) if len(keys) > 1 else _of_one(demand, parameters()[key])
+
+def zipped(demand: Demand) -> tuple[Clause, ...]:
+    """The clauses of a demand."""
+    keys = demand.key.split("+")
+    clauses = _of_several(demand, keys) if len(keys) > 1 else _of_one(demand, parameters()[demand.key])
     return tuple(_placed(clause, demand) for clause in clauses)
 
 
@@ -38,10 +40,7 @@ def _of_several(demand: Demand, keys: list[str]) -> tuple[Clause, ...]:
     known = [parameters()[key] for key in keys]
     figures = demand.figures
     if len(figures) == 1 and figures[0].form is Form.SIZE and len(figures[0].numbers) == len(keys):
-        return tuple(
-            settle(parameter, demand.said, Figure(Form.PLAIN, (number,), figures[0].unit)).doubting("ORDER")
-            for parameter, number in zip(known, figures[0].numbers, strict=True)
-        )
+        return _sized(demand, known, figures[0])
     if len(figures) <= len(keys) and all(demand.planes):
         chosen = [_in_plane(known, plane) for plane in demand.planes]
         return tuple(settle(p, demand.said, f) for p, f in zip(chosen, figures, strict=True))
@@ -52,6 +51,18 @@ def _of_several(demand: Demand, keys: list[str]) -> tuple[Clause, ...]:
     return (
         Clause(parameter=keys[0]).doubting("LIST", detail=f"{len(figures)} figures for {len(keys)} limits"),
     )
+
+
+def _sized(demand: Demand, known: list[Parameter], size: Figure) -> tuple[Clause, ...]:
+    """A size in the order the wording names ('H x W x D'), or in the usual one with a doubt."""
+    sides = [_SIDES.get(letter, "") for letter in demand.order]
+    named = sorted(sides) == sorted(parameter.key for parameter in known)
+    ordered = [parameters()[side] for side in sides] if named else known
+    clauses = tuple(
+        settle(parameter, demand.said, Figure(Form.PLAIN, (number,), size.unit))
+        for parameter, number in zip(ordered, size.numbers, strict=True)
+    )
+    return clauses if named else tuple(clause.doubting("ORDER") for clause in clauses)
 
 
 def _in_plane(known: list[Parameter], plane: str) -> Parameter:
