@@ -3,8 +3,9 @@
 from __future__ import annotations
 
 import re
-from dataclasses import dataclass
+from dataclasses import dataclass, field, replace
 
+from speccheck.intake.across_bands import RowBand, band_of, holds_nicknames, holds_spans
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.columns import PLANE_LETTERS, Column, describe, heading_stack
@@ -14,7 +15,6 @@ from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Across
 from speccheck.intake.words import column_role
-from speccheck.records import Band
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _BRACKETS = re.compile(r"[(\[][^()\[\]]*[)\]]")
@@ -39,9 +39,7 @@ class _Row:
     """The panel and band the walk stands at."""
 
     draft: Draft | None = None
-    name: str = ""
-    band: Band | None = None
-    band_name: str = ""
+    said: RowBand = field(default_factory=RowBand)
 
 
 class AcrossReader:
@@ -53,6 +51,8 @@ class AcrossReader:
         self._fields: dict[int, _Field] = {}
         self._named: int = 0
         self._banded: int = 0
+        self._nicknamed: int = 0
+        self._contexts: dict[tuple[int, str], Context] = {}
         self._by_name: dict[str, tuple[Draft, set[object]]] = {}
         self._at = _Row()
 
@@ -96,16 +96,26 @@ class AcrossReader:
         else:
             roles = [i for i, f in fields.items() if f.role == "panel"]
             self._named = roles[0] if roles else self._unlabelled_text_column()
+        columns = {i: self._column_cells(i) for i in fields if i != self._named}
         frequencies = [
-            i
-            for i, f in fields.items()
-            if f.role == "band"
-            or (f.label and set(f.label.parameters) <= _FREQUENCY_KEYS and not f.context.statistic)
+            i for i in columns if self._is_frequency(fields[i]) and holds_spans(columns[i], self._unit_of(i))
         ]
         if len(frequencies) > 1:
             narrow = [i for i in frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
             frequencies = narrow or frequencies
         self._banded = frequencies[0] if frequencies else 0
+        nicknames = [i for i in columns if holds_nicknames(columns[i])]
+        self._nicknamed = nicknames[0] if nicknames else 0
+
+    def _is_frequency(self, found: _Field) -> bool:
+        of_label = bool(found.label) and set(found.label.parameters) <= _FREQUENCY_KEYS
+        return found.role == "band" or (of_label and not found.context.statistic)
+
+    def _unit_of(self, index: int) -> str:
+        return self._fields[index].label.unit or self._fields[index].column.unit or "MHz"
+
+    def _column_cells(self, index: int) -> list[Cell]:
+        return [c for r in self._table.data_rows[:40] if (c := self._grid.cells.get((r, index))) is not None]
 
     def _unlabelled_text_column(self) -> int:
         for index, found in self._fields.items():
@@ -141,23 +151,28 @@ class AcrossReader:
 
     def _place(self, row: int, cells: list[Cell]) -> None:
         name_cell = self._grid.cells.get((row, self._named)) if self._named else None
-        band_cell = self._grid.covering(row, self._banded) if self._banded else None
-        band, band_name = self._band(band_cell)
+        said = band_of(
+            self._grid.covering(row, self._banded) if self._banded else None,
+            self._grid.covering(row, self._nicknamed) if self._nicknamed else None,
+            self._unit_of(self._banded) if self._banded else "",
+        )
+        key = (said.band, said.name)
         if name_cell is not None:
             self._result.mark(name_cell, "heading")
             name = model_name(name_cell.text)
             known = self._by_name.get(name)
-            if known and (band or band_name) and (band or band_name) not in known[1]:
-                self._at = _Row(known[0], name)
+            if known and said.name + str(said.band or "") and key not in known[1]:
+                self._at = _Row(known[0])
             else:
                 self._start_panel(row, name_cell)
-        elif self._at.draft is None or not (self._named or self._banded):
+        elif self._at.draft is None or not (self._named or self._banded or self._nicknamed):
             self._start_panel(row, cells[0])
-        self._at.band, self._at.band_name = band, band_name
-        if self._at.draft is not None and (band or band_name):
-            self._by_name[self._at.draft.name][1].add(band or band_name)
-            if band and band not in self._at.draft.bands:
-                self._at.draft.bands.append(band)
+        self._at.said = said
+        draft = self._at.draft
+        if draft is not None:
+            self._by_name[draft.name][1].add(key)
+            if said.band and said.band not in draft.bands:
+                draft.bands.append(said.band)
 
     def _start_panel(self, row: int, cell: Cell) -> None:
         if self._named and cell.column == self._named:
@@ -165,40 +180,27 @@ class AcrossReader:
         else:
             top = self._table.heading_rows[0]
             title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
-            several = len(self._table.data_rows) > 1 and not self._banded
+            several = len(self._table.data_rows) > 1 and not (self._banded or self._nicknamed)
             draft = Draft(
                 f"{title.name} row {row}" if several else title.name, self._grid, cell, named=title.certain
             )
         self._result.drafts.append(draft)
         self._by_name[draft.name] = (draft, set())
-        self._at = _Row(draft, draft.name)
-
-    def _band(self, cell: Cell | None) -> tuple[Band | None, str]:
-        if cell is None:
-            return None, ""
-        unit = self._fields[self._banded].label.unit or self._fields[self._banded].column.unit
-        text = cell.text
-        if unit and not any(word in text.lower() for word in ("mhz", "ghz")):
-            text = f"{text} {unit}"
-        found = find_bands(text)
-        if len(found.spans) > 1 and not found.names:
-            return None, ""
-        return found.hull, "" if found.hull else " ".join(cell.text.split())
+        self._at = _Row(draft)
 
     def _claim(self, cell: Cell, draft: Draft) -> None:
         found = self._fields.get(cell.column)
         if found is None:
             return
-        at, column = self._at, found.column
-        if found.label:
-            band, banded, context = (
-                column.band,
-                column.band is not None or bool(column.band_name),
-                found.context,
-            )
+        said, column = self._at.said, found.column
+        if cell.column == self._nicknamed or (cell.column == self._banded and said.point):
+            self._result.mark(cell, "label")
+        elif found.label:
+            band, banded = column.band, column.band is not None or bool(column.band_name)
             of_row = column.index == self._banded or not set(found.label.parameters) <= _FREQUENCY_KEYS
-            if not banded and of_row and (at.band or at.band_name):
-                band, banded = at.band, True
+            context = self._noted(found.context, said.name) if of_row else found.context
+            if not banded and of_row and said.known:
+                band, banded = said.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)
@@ -206,7 +208,7 @@ class AcrossReader:
             label = Label(column.heading, ("operating_bands",), column.unit or "MHz")
             if find_bands(cell.text).spans:
                 context = Context(label, heading=column.heading)
-                draft.claims.append(Claim(cell, context, at.band, banded=at.band is not None))
+                draft.claims.append(Claim(cell, context, said.band, banded=said.band is not None))
             else:
                 self._result.mark(cell, "label")
         elif found.role in _SILENT_ROLES:
@@ -217,6 +219,15 @@ class AcrossReader:
         else:
             found.misses += 1
             self._result.mark(cell, "unread")
+
+    def _noted(self, context: Context, name: str) -> Context:
+        """A context with the nickname of the row's band, made once for each."""
+        if not name:
+            return context
+        key = (id(context), name)
+        if key not in self._contexts:
+            self._contexts[key] = replace(context, condition=name)
+        return self._contexts[key]
 
     def _report_unknown(self) -> None:
         """One line for a column that was not read, not one a cell."""

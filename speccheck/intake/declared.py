@@ -16,9 +16,10 @@ def contrary_notices(rows: list[Declared], sheet: str, reader: Reader) -> list[N
     for row in rows:
         asked, offered = reader.figures(row.required, row.context), reader.figures(row.offered, row.context)
         if len(asked) == len(offered) == 1 and _misses(asked[0], offered[0]):
+            offer, asked_for = plain(row.offered.text, 60), plain(row.required.text, 60)
             text = (
-                f"declares '{plain(row.said.text, 40)}' beside an offer of '{plain(row.offered.text, 60)}' "
-                f"({row.offered.address}) where '{plain(row.required.text, 60)}' ({row.required.address}) is asked; "
+                f"declares '{plain(row.said.text, 40)}' beside an offer of '{offer}' ({row.offered.address}) "
+                f"where '{asked_for}' ({row.required.address}) is asked; "
                 "the offer is read, the declaration is not"
             )
             found.append(Notice(where=reader.where(sheet, row.said.address), text=text))

@@ -10,13 +10,13 @@ from speccheck.intake.columns import VALUE_ROLES, Column
 from speccheck.intake.down_bands import NamedBand, band_of_row, bands_of_columns
 from speccheck.intake.down_headings import describe_columns, extend, find_headings
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
+from speccheck.intake.down_regions import Down, cells_between
 from speccheck.intake.down_row import RowCells, joined_label, row_cells
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
-from speccheck.intake.regions import Down
-from speccheck.intake.words import answer
+from speccheck.intake.words import answer, is_generic_sheet_name
 from speccheck.records import Band
 
 _FORM = {
@@ -73,7 +73,10 @@ class DownReader:
         state, table = self._state, self._table
         beside = [c for c in cells if c.column > table.label_column]
         label_cell = self._grid.cells.get((row, table.label_column))
-        self._left_cells(row, [c for c in cells if c.column < table.label_column])
+        left = [c for c in cells if c.column < table.label_column]
+        if label_cell is None and beside and (own := [c for c in left if self._marks.is_heading(c)]):
+            label_cell = own[-1]
+        self._left_cells(row, [c for c in left if c is not label_cell])
         if label_cell is not None and not beside:
             self._section(label_cell)
             return
@@ -93,7 +96,10 @@ class DownReader:
     def _section_above(self) -> None:
         """A band named by the sheet, or alone in the row above the table, holds for all rows."""
         state, top = self._state, min([*self._heading_rows, self._table.top])
-        above = [c for row in (top - 1, top - 2) for c in self._marks.rows.get(row, ())]
+        first, last = self._table.label_column, min(self._table.right, self._table.label_column + 40)
+        above = [c for row in (top - 1, top - 2) for c in cells_between(self._marks, row, first, last)]
+        above = [c for c in above if (c.row, c.column) not in self._result.roles]
+        above = above[:1] if above and is_band_label(above[0].text) else above
         title = above[0] if len(above) == 1 and self._grid.name != above[0].text else None
         if title is not None and is_band_label(title.text) and isinstance(title.raw, str):
             self._section(title)
@@ -143,7 +149,7 @@ class DownReader:
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""
-        if self._names.is_title(cell.text):
+        if self._names.is_title(cell.text) or not is_generic_sheet_name(cell.text):
             state.pending_title = cell
 
     def _values(self, row: int, label_cell: Cell | None, beside: list[Cell]) -> None:
@@ -225,7 +231,7 @@ class DownReader:
         if self._panels.several:
             return
         current = self._panels.first
-        if not current.claims:
+        if not current.claims and self._names.is_title(title.text):
             current.name, current.where, current.named = model_name(title.text), title, True
             return
         below = {
@@ -234,7 +240,8 @@ class DownReader:
             if (found := self._marks.headings.get((row, self._table.label_column)))
             for key in found.parameters
         }
-        if len(below & current.keys()) >= 2:
+        needed = 2 if self._names.is_title(title.text) else 4
+        if len(below & current.keys()) >= needed:
             name = model_name(title.text)
             self._panels.start(name, title)
             state.section_band, state.section_name = None, ""

@@ -5,9 +5,9 @@ from __future__ import annotations
 from speccheck.intake.bands import is_band_label
 from speccheck.intake.claims import SheetResult
 from speccheck.intake.columns import Column, describe, heading_stack
+from speccheck.intake.down_regions import Down, cells_between, heads_columns
 from speccheck.intake.grid import Cell
 from speccheck.intake.marks import Marks
-from speccheck.intake.regions import Down, cells_between, heads_columns
 from speccheck.intake.roles import settle_roles
 from speccheck.intake.words import column_role
 

@@ -5,11 +5,11 @@ from __future__ import annotations
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
+from speccheck.intake.down_regions import Down
 from speccheck.intake.grid import Cell
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
-from speccheck.intake.regions import Down
 from speccheck.records import Band
 
 NAME_KEYS = frozenset({"model", "panel_type"})

@@ -37,7 +37,7 @@ class Found:
     tolerance: float | None
     remark: str = ""
     recognised: str = ""
-    at: Mapping[str, float] = field(default_factory=dict)
+    at: Mapping[str, float] | None = None
 
     def reading(self) -> Reading:
         """The finished reading."""
@@ -74,3 +74,4 @@ class Outcome:
     statement: Statement | None = None
     unread: Unread | None = None
     footnotes: tuple[str, ...] = ()
+    joined: bool = False

@@ -16,9 +16,10 @@ def joined(drafts: list[Draft]) -> tuple[list[Draft], list[Draft]]:
     A piece that only names a model or maker heads the table that follows it, or the only panel there is.
     """
     joiner = _Joiner()
-    for position, draft in enumerate(drafts):
-        if draft.claims:
-            joiner.take(draft, [d for d in drafts[position + 1 :] if d.grid is draft.grid and d.claims])
+    pieces = [draft for draft in drafts if draft.claims]
+    last_of_sheet = {id(draft.grid): draft for draft in pieces}
+    for draft in pieces:
+        joiner.take(draft, last=draft is last_of_sheet[id(draft.grid)])
     return joiner.finish()
 
 
@@ -28,13 +29,13 @@ class _Joiner:
         self._by_name: dict[str, list[Draft]] = {}
         self._titles: list[Draft] = []
 
-    def take(self, draft: Draft, following: list[Draft]) -> None:
-        """Keep a draft, or join it to one kept before."""
+    def take(self, draft: Draft, *, last: bool) -> None:
+        """Keep a draft, or join it to one kept before; `last` says that no other follows on its sheet."""
         if draft.keys() <= _TITLE_KEYS:
             self._titles.append(draft)
             return
         title = self._titles[-1] if self._titles and self._titles[-1].grid is draft.grid else None
-        if title is not None and not following:
+        if title is not None and last:
             self._titles.pop()
             if title.named:
                 draft.name, draft.where, draft.named = title.name, title.where, True

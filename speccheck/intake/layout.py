@@ -8,12 +8,13 @@ from itertools import pairwise
 from speccheck.intake.across import AcrossReader
 from speccheck.intake.claims import SheetResult
 from speccheck.intake.down import DownReader
+from speccheck.intake.down_regions import find_down
 from speccheck.intake.grid import Grid
 from speccheck.intake.labels import Labels
 from speccheck.intake.marks import Marks, mark
 from speccheck.intake.naming import Names
 from speccheck.intake.pasted import read_lines
-from speccheck.intake.regions import Across, find_across, find_down
+from speccheck.intake.regions import Across, find_across
 from speccheck.intake.words import column_role
 
 

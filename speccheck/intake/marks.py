@@ -35,12 +35,16 @@ class Marks:
 def mark(grid: Grid, labels: Labels) -> Marks:
     """Look at every visible cell once."""
     marks = Marks(grid, labels, grid.rows())
+    wordless: set[str] = set()
     for row, cells in marks.rows.items():
         following: Cell | None = None
         for cell in reversed(cells):
             raw = cell.raw
-            if isinstance(raw, str) and not cell.fault and _might_be_heading(raw):
-                _mark_text(marks, (row, cell.column), raw, following)
+            if isinstance(raw, str) and raw not in wordless and not cell.fault:
+                if _might_be_heading(raw):
+                    _mark_text(marks, (row, cell.column), raw, following)
+                else:
+                    wordless.add(raw)
             following = cell
     _mark_letters(marks)
     _unmark_column_words(marks)

@@ -5,10 +5,11 @@ from __future__ import annotations
 import re
 from dataclasses import dataclass
 
+from speccheck.intake.bands import is_band_label
 from speccheck.intake.claims import SheetResult
+from speccheck.intake.down_regions import Down
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.marks import Marks
-from speccheck.intake.regions import Down
 from speccheck.intake.words import fold, is_generic_sheet_name, title_prefixes
 
 _CODE = re.compile(r"(?<![\w.])(?=[\w./+-]*\d)(?=[\w./+-]*[A-Za-z])[A-Za-z0-9][\w./+-]{2,}(?![\w])")
@@ -27,6 +28,11 @@ _OF = re.compile(r"^(?:of|for|de|du|del|di|da|für|von|van|dla)\s+", re.IGNORECA
 _INSIDE = re.compile(
     r"\b(?:panel|antenna|type|model|Antenne|antenne|antena|Typ)\s+([A-Z][\w-]*(?:\s+[A-Z0-9][\w./-]*){0,3})$"
 )
+_ASIDE = re.compile(
+    r"\s*[(\[][^()\[\]]*\b(?:rev|issue|draft|offer\w*|bid|proposed|version|date|standard|option)\b[^()\[\]]*[)\]]\s*$",
+    re.IGNORECASE,
+)
+_PAPERS = re.compile(r"\b(?:tender|rf[qpi]|project|contract|order|document|doc|ref|lot|annex|clause)\b")
 _LONG_TITLE = 90
 _LONG_NAME = 40
 
@@ -51,6 +57,9 @@ def model_name(text: str) -> str:
     inside = _INSIDE.search(plain)
     if stripped == words and inside is not None:
         stripped = plain = inside[1]
+    plain = _ASIDE.sub("", plain)
+    if re.fullmatch(r"\d{1,2}|[A-Za-z]", plain):
+        return words
     parts = [part for part in _PARTS.split(plain) if part and not _DESCRIBES.search(fold(part))]
     name = parts[0] if parts else plain
     codes = _codes(name)
@@ -87,7 +96,7 @@ def _score(text: str, sheet: str) -> int:
         return 3
     if inside is not None and any(letter.isdigit() for letter in inside[1]):
         return 3
-    if _codes(words):
+    if _codes(words) and not _PAPERS.search(fold(words)):
         return 2
     return 1 if stripped != words and len(stripped.split()) <= 3 else 0
 
@@ -122,7 +131,8 @@ class Names:
             near = [c for c in cells if c.column >= left - 2] or cells
             if any(result.roles.get((c.row, c.column), "note") != "note" for c in near):
                 break
-            candidates += [c for c in near if isinstance(c.raw, str) and not marks.is_heading(c)]
+            titles = [c for c in near if isinstance(c.raw, str) and not is_band_label(c.text)]
+            candidates += [c for c in titles if not marks.is_heading(c)]
         scores = [_score(c.text, sheet) for c in candidates]
         if any(scores):
             return self._taken(candidates[scores.index(max(scores))], result)

@@ -8,6 +8,7 @@ from dataclasses import dataclass, field, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Draft
+from speccheck.intake.ends import join_ends
 from speccheck.intake.found import Found, Outcome
 from speccheck.intake.reading import Reader
 from speccheck.quantities import split_footnotes
@@ -79,9 +80,10 @@ class Builder:
             for piece in draft.pieces()
             for claim in piece.claims
         ]
+        join_ends(outcomes)
         several = self._bands(draft, outcomes)
         for claim, outcome in outcomes:
-            role = "unread"
+            role = "reading" if outcome.joined else "unread"
             if claim.context.label.tolerance:
                 tolerances.append((claim, outcome))
                 role = "label"
@@ -161,28 +163,31 @@ def _shared_out(
     first = found[0]
     if first.parameter in FREQUENCY:
         return _frequencies(claim, found, several), None
-    if len(found) == 1:
-        return found, None
-    alike = [f for f in found if f.parameter == first.parameter]
-    plain = len(alike) > 1 and not any(f.figure.quantity.at for f in alike)
-    plain = plain and len({(f.figure.condition, f.figure.sense) for f in alike}) == 1
-    if not plain or parameters()[first.parameter].kind not in ("number", "range", "count"):
-        return found, None
+    alike = _plain_list(found)
     tilts = claim.context.label.tilts
     if tilts and len(alike) == len(tilts):
         for one, tilt in zip(alike, tilts, strict=True):
             one.at = {"tilt_deg": tilt}
-        return found, None
-    if len(alike) == len(bands) and claim.band is None:
+    elif len(alike) == len(bands) and claim.band is None:
         for one, band in zip(alike, bands, strict=True):
             one.band = band
-        return found, None
-    if any(f.band != claim.band for f in alike):
-        return found, None
-    reason = f"{len(alike)} figures in one cell"
-    reason += f", but {len(bands)} known bands to give them to" if claim.band is None else " for one band"
-    ask = "ask which figure holds for which band"
-    return [], Unread(where=first.where, text=first.raw, reason=reason, suggestion=ask)
+    elif alike and all(f.band == claim.band for f in alike):
+        reason = f"{len(alike)} figures in one cell"
+        reason += f", but {len(bands)} known bands to give them to" if claim.band is None else " for one band"
+        ask = "ask which figure holds for which band"
+        return [], Unread(where=first.where, text=first.raw, reason=reason, suggestion=ask)
+    return found, None
+
+
+def _plain_list(found: list[Found]) -> list[Found]:
+    """Several figures of one parameter that nothing in their cell tells apart; empty when there are none."""
+    first = found[0]
+    alike = [f for f in found if f.parameter == first.parameter]
+    if len(alike) < 2 or parameters()[first.parameter].kind not in ("number", "range", "count"):
+        return []
+    told_apart = any(f.figure.quantity.at for f in alike)
+    told_apart = told_apart or len({(f.figure.condition, f.figure.sense) for f in alike}) > 1
+    return [] if told_apart else alike
 
 
 def _frequencies(claim: Claim, found: list[Found], several: bool) -> list[Found]:

@@ -65,10 +65,22 @@ class Reader:
         if known is None:
             known = self._known[key] = self._understand(raw, context, cell.number_format)
         content, figures, trouble = known
+        if not figures or content.status is not None or trouble or claim.tolerance is not None:
+            return self._read_with_care(claim, sheet, where, known)
+        return Outcome(
+            sheet, [_found(where, claim, figure) for figure in figures], None, None, content.footnotes
+        )
+
+    def _read_with_care(self, claim: Claim, sheet: str, where: CellRef, understood: _Understood) -> Outcome:
+        """A claim whose cell says no figure, or more than one."""
+        cell, context = claim.cell, claim.context
+        content, figures, trouble = understood
         first = context.label.parameters[0]
-        statement = None
+        outcome = Outcome(
+            sheet, [_found(where, claim, figure) for figure in figures], footnotes=content.footnotes
+        )
         if content.status is not None:
-            statement = Statement(
+            outcome.statement = Statement(
                 where=where,
                 parameter=first,
                 raw=cell.text,
@@ -76,18 +88,13 @@ class Reader:
                 band=claim.band,
                 heading=context.heading,
             )
-        if statement and not figures:
-            return Outcome(sheet, statement=statement, footnotes=content.footnotes)
-        if not figures:
-            reason = trouble or f"no {parameters()[first].label} could be read from it"
-            return Outcome(
-                sheet, unread=Unread(where=where, text=cell.text, reason=reason, suggestion=_example(first))
-            )
-        found = [_found(where, claim, figure) for figure in figures]
-        if claim.tolerance is not None:
-            self._add_tolerance(found, claim)
-        unread = Unread(where=where, text=cell.text, reason=trouble) if trouble else None
-        return Outcome(sheet, found, statement=statement, unread=unread, footnotes=content.footnotes)
+        elif not figures:
+            trouble = trouble or f"no {parameters()[first].label} could be read from it"
+        if trouble:
+            hint = "" if figures else _example(first)
+            outcome.unread = Unread(where=where, text=cell.text, reason=trouble, suggestion=hint)
+        self._add_tolerance(outcome.found, claim)
+        return outcome
 
     def _add_tolerance(self, found: list[Found], claim: Claim) -> None:
         """A tolerance in a column of its own holds for the figure of its row."""

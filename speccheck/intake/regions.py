@@ -1,11 +1,9 @@
-"""Where the tables of a sheet lie: headings across the top, headings down the side, pasted lines."""
+"""Where the tables of a sheet with headings across the top lie."""
 
 from __future__ import annotations
 
-from collections import defaultdict
 from dataclasses import dataclass, field
 
-from speccheck.intake.grid import Cell
 from speccheck.intake.labels import is_heading_filler
 from speccheck.intake.marks import Marks, looks_like_value, says_column_role
 from speccheck.intake.words import column_role
@@ -24,17 +22,6 @@ class Across:
     left: int
     right: int
     repeated: list[int] = field(default_factory=list)
-
-
-@dataclass(slots=True)
-class Down:
-    """A table with headings down one column."""
-
-    label_column: int
-    top: int
-    bottom: int
-    left: int
-    right: int
 
 
 def find_across(marks: Marks) -> list[Across]:
@@ -72,7 +59,8 @@ def _is_heading_row(marks: Marks, row: int, numbers: list[int], position: int) -
 def _stacked(marks: Marks, row: int, columns: list[int]) -> int:
     """Headings just above and below those of a row: many of them speak for headings down the side."""
     near = (row - 2, row - 1, row + 1, row + 2)
-    return max(sum((other, column) in marks.headings for other in near) for column in columns)
+    most = max(sum((other, column) in marks.headings for other in near) for column in columns)
+    return most + any((row + 1, column) in marks.headings for column in columns)
 
 
 def _values_below(marks: Marks, columns: list[int], rows: list[int]) -> bool:
@@ -178,104 +166,3 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
 def _is_data(marks: Marks, table: Across, row: int) -> bool:
     cells = [c for c in marks.rows[row] if table.left <= c.column <= table.right]
     return len(cells) > 1
-
-
-def find_down(marks: Marks, taken: set[int]) -> list[Down]:
-    """Tables with a column of headings, values beside it; `taken` rows belong to other tables."""
-    by_column: dict[int, list[int]] = defaultdict(list)
-    for row, column in marks.headings:
-        if row not in taken:
-            by_column[column].append(row)
-    columns = _label_columns(marks, {c: sorted(rows) for c, rows in by_column.items()})
-    columns = {c: rows for c, rows in columns.items() if not _is_second_label(marks, columns, c)}
-    tables: list[Down] = []
-    for column, rows in sorted(columns.items()):
-        for top, bottom in _runs(marks, column, rows, taken):
-            right = _right_bound(columns, column, top, bottom)
-            left = _left_bound(columns, column, top, bottom)
-            tables.append(Down(column, top, bottom, left, right))
-    return tables
-
-
-def _label_columns(marks: Marks, by_column: dict[int, list[int]]) -> dict[int, list[int]]:
-    """Columns of headings that have something beside them; the right one of two adjacent ones."""
-    kept: dict[int, list[int]] = {}
-    for column, rows in by_column.items():
-        usable = [row for row in rows if _has_value_right(marks, row, column)]
-        if usable:
-            kept[column] = usable
-    return kept
-
-
-def _has_value_right(marks: Marks, row: int, column: int) -> bool:
-    for cell in marks.rows[row]:
-        if cell.column > column:
-            return not marks.is_heading(cell)
-    span = marks.grid.span(marks.grid.cells[row, column])
-    return any(
-        c.column > span.right
-        for r in range(row + 1, min(span.bottom, row + 60) + 1)
-        for c in marks.rows.get(r, ())
-    )
-
-
-def _is_second_label(marks: Marks, columns: dict[int, list[int]], column: int) -> bool:
-    """Whether a column of headings only details the labels of a column before it, values following both."""
-    for other, rows in columns.items():
-        if other < column and rows[0] <= columns[column][-1] and columns[column][0] <= rows[-1] + _LOOK_BELOW:
-            near = [row for row in rows if columns[column][0] - 6 <= row <= columns[column][-1] + 6]
-            beyond = [row for row in near if _first_value_column(marks, row, other) > column]
-            if near and len(beyond) * 2 > len(near):
-                return True
-    return False
-
-
-def _first_value_column(marks: Marks, row: int, label_column: int) -> int:
-    for cell in marks.rows[row]:
-        if cell.column > label_column and looks_like_value(cell) and not marks.is_heading(cell):
-            return cell.column
-    return 0
-
-
-def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[tuple[int, int]]:
-    """Rows cut where a table of another kind, or a new row of headings, lies between them."""
-    runs: list[tuple[int, int]] = []
-    start = previous = rows[0]
-    for row in rows[1:]:
-        between = range(previous + 1, row)
-        if any(r in taken or heads_columns(marks, r, column) for r in between):
-            runs.append((start, previous))
-            start = row
-        previous = row
-    return [*runs, (start, previous)]
-
-
-def heads_columns(marks: Marks, row: int, column: int) -> bool:
-    """Whether a row is the heading row of a table with its labels in this column."""
-    cell = marks.grid.cells.get((row, column))
-    if cell is None or column_role(cell.text) != "parameter":
-        return False
-    return any(other.column > column for other in marks.rows[row])
-
-
-def _right_bound(columns: dict[int, list[int]], column: int, top: int, bottom: int) -> int:
-    """The last column before the next table beside this one."""
-    for other in sorted(columns):
-        inside = [row for row in columns[other] if top <= row <= bottom]
-        if other > column and len(inside) >= 2:
-            return other - 1
-    return 16_384
-
-
-def _left_bound(columns: dict[int, list[int]], column: int, top: int, bottom: int) -> int:
-    """The first column that may carry numbers or group words of this table."""
-    left = 1
-    for other, rows in columns.items():
-        if other < column and sum(top <= row <= bottom for row in rows) >= 2:
-            left = max(left, column)
-    return left
-
-
-def cells_between(marks: Marks, row: int, left: int, right: int) -> list[Cell]:
-    """Cells of a row between two columns, ends included."""
-    return [cell for cell in marks.rows.get(row, ()) if left <= cell.column <= right]

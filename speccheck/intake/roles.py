@@ -17,6 +17,7 @@ def settle_roles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> No
     _conditions_before_units(columns, cells)
     _details_before_values(columns, cells)
     _offer_beside_requirement(columns)
+    _several_offers(columns)
     if not any(c.role in ("", "offered", "panel", "typical", "minimum", "maximum") for c in columns.values()):
         for column in columns.values():
             if column.role in ("condition", "compliance", "group", "band"):
@@ -61,6 +62,14 @@ def _conditions_before_units(columns: dict[int, Column], cells: dict[int, list[C
         texts = [c for c in cells[index] if isinstance(c.raw, str)]
         if not columns[index].words and len(texts) == len(cells[index]):
             columns[index].role = "condition"
+
+
+def _several_offers(columns: dict[int, Column]) -> None:
+    """Columns 'Bidder A' and 'Bidder B' are two offers, each with its own name."""
+    offers = [c for c in columns.values() if c.role == "offered" and c.cells and not (c.band or c.band_name)]
+    if len({c.heading for c in offers}) > 1 and not any(c.words for c in offers):
+        for column in offers:
+            column.words, column.name_cell = [column.heading], column.cells[-1]
 
 
 def _details_before_values(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:

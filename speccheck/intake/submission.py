@@ -6,7 +6,6 @@ import gc
 from collections.abc import Iterator, Mapping
 from contextlib import contextmanager
 from dataclasses import dataclass
-from datetime import date, time
 from pathlib import Path
 
 from speccheck.errors import UnusableInputError
@@ -82,7 +81,7 @@ def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     if not drafts:
         raise _no_table(book)
     texts = (cell.raw for grid in visible for cell in grid.cells.values() if isinstance(cell.raw, str))
-    reader = Reader(book.file, decimal_habit(texts))
+    reader = Reader(book.file, decimal_habit(dict.fromkeys(texts)))
     builder = Builder(reader, {result.grid.name: footnotes(result) for result in results})
     built = [builder.build(draft) for draft in drafts]
     notices: list[Notice] = book_notices(book, reader.where)
@@ -128,20 +127,18 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
 
 
 def _mirror(grid: Grid) -> MirrorSheet:
-    cells = {**grid.cells, **grid.hidden_cells}
+    cells = {**grid.cells, **grid.hidden_cells} if grid.hidden_cells else grid.cells
+    ordered = (cells[place] for place in sorted(cells))
     return MirrorSheet(
         name=grid.name,
         hidden=grid.hidden,
-        cells=tuple(
-            MirrorCell(c.address, _plain_value(c), c.formula) for c in map(cells.__getitem__, sorted(cells))
-        ),
+        cells=tuple(MirrorCell(cell.address, _plain_value(cell), cell.formula) for cell in ordered),
     )
 
 
 def _plain_value(cell: Cell) -> str | float | None:
-    if isinstance(cell.raw, date | time | bool) or cell.raw is None:
-        return cell.text
-    return cell.raw
+    raw = cell.raw
+    return raw if isinstance(raw, str | float | int) and not isinstance(raw, bool) else cell.text
 
 
 def _no_table(book: Book) -> UnusableInputError:
