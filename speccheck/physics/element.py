@@ -60,6 +60,7 @@ class SectorElement:
     el_hpbw_deg [deg]: elevation half-power beamwidth.
     floor_db [dB]: greatest attenuation of the horizontal cut and of the whole pattern (A_max).
     el_floor_db [dB]: greatest attenuation of the vertical cut (SLA_V).
+    Raises ValueError for a width or floor that is not positive.
     Source: 3GPP TR 38.901 Table 7.3-1; ITU-R M.2101 Table 4.
     """
 
@@ -67,6 +68,10 @@ class SectorElement:
     el_hpbw_deg: float = 65.0
     floor_db: float = 30.0
     el_floor_db: float = 30.0
+
+    def __post_init__(self) -> None:
+        if not min(self.az_hpbw_deg, self.el_hpbw_deg, self.floor_db, self.el_floor_db) > 0:
+            raise ValueError("beamwidths [deg] and floors [dB] of an element must be positive")
 
     def power(self, theta_rad: ArrayLike, phi_rad: ArrayLike) -> Floats:
         """Power pattern, peak 1.
@@ -262,7 +267,7 @@ def _legendre(order: int) -> tuple[Floats, Floats]:
     return nodes, weights
 
 
-@lru_cache(maxsize=256)
+@lru_cache(maxsize=64)
 def _nodes(element: SectorElement, elevations: int, azimuths: int) -> tuple[Floats, Floats, Floats]:
     """Nodes over the quarter sphere above the floor: sin theta sin phi, cos theta, weights."""
     floor, flat = element.floor_db, min(element.el_floor_db, element.floor_db)

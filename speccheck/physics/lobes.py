@@ -186,7 +186,7 @@ def _finite(step: float) -> float:
 
 
 def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats) -> _Lobe:
-    """Highest level within a null width of any of the points; the box is searched three times, ever finer."""
+    """Highest level within a null width of any of the points: all boxes coarsely, the best three finely."""
     layout = state.layout
     tilt, phi = state.theta_rad[0] - np.pi / 2, state.phi_rad[0]
     centres = np.array([np.cos(tilt) * np.sin(phi), -np.sin(tilt)]) + points
@@ -196,48 +196,61 @@ def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats
             wavelength / (layout.rows * layout.vertical_pitch_m) if layout.rows > 1 else 0.0,
         ]
     )
-    near = (np.abs(centres) < 1 + half_width).all(1)
-    centres = centres[near]
-    radius = np.hypot(*centres.T)
-    best: tuple[float, Floats, int] | None = None
-    for at, centre in enumerate(centres):
-        found = _highest_in_box(state, centre, half_width)
+    visible = int((np.hypot(*centres.T) <= 1 + 1e-9).sum())
+    centres = centres[(np.abs(centres) < 1 + half_width).all(1)]
+    if len(centres) == 0:
+        return _Lobe(visible_count=visible)
+    offsets = _box(half_width)
+    power = _seen_power(state, centres[:, None] + offsets)
+    best: tuple[float, Floats, Floats] | None = None
+    for at in np.argsort(power.max(1))[:-4:-1]:
+        found = _refined(state, centres[at], half_width, offsets[power[at].argmax()])
         if found is not None and (best is None or found[0] > best[0]):
-            best = (*found, at)
+            best = (*found, centres[at])
     if best is None or best[0] <= 0:
-        return _Lobe(visible_count=int((radius <= 1 + 1e-9).sum()))
-    level, (u_y, u_z), at = best
+        return _Lobe(visible_count=visible)
+    level, (u_y, u_z), centre = best
     theta = np.arccos(u_z)
     phi = np.arcsin(np.clip(u_y / max(np.sin(theta), 1e-12), -1, 1))
     return _Lobe(
         float(db(level / beam)),
         float(np.degrees(theta)),
         float(np.degrees(phi)),
-        int((radius <= 1 + 1e-9).sum()),
-        bool(radius[at] <= 1 + 1e-9),
+        visible,
+        bool(np.hypot(*centre) <= 1 + 1e-9),
     )
 
 
-def _highest_in_box(state: Excitation, centre: Floats, half_width: Floats) -> tuple[float, Floats] | None:
-    best, at = -1.0, centre
-    span = half_width
-    for _ in range(3):
-        steps = np.linspace(-1, 1, _ACROSS)
-        y, z = ((at[axis] + span[axis] * steps if span[axis] > 0 else at[axis : axis + 1]) for axis in (0, 1))
-        y = y[np.abs(y - centre[0]) <= half_width[0] + 1e-12]
-        z = z[np.abs(z - centre[1]) <= half_width[1] + 1e-12]
-        u_y, u_z = (grid.ravel() for grid in np.meshgrid(y, z, indexing="ij"))
-        seen = u_y**2 + u_z**2 <= 1 - 1e-9
-        if not seen.any():
-            return None if best < 0 else (best, at)
-        u_y, u_z = u_y[seen], u_z[seen]
-        theta = np.arccos(u_z)
-        phi = np.arcsin(np.clip(u_y / np.sin(theta), -1, 1))
-        power = intensity(state, theta[None], phi[None])[0]
-        highest = int(power.argmax())
-        best, at = float(power[highest]), np.array([u_y[highest], u_z[highest]])
-        span = span * 2 / (_ACROSS - 1)
-    return best, at
+def _box(half_width: Floats) -> Floats:
+    """Offsets (K, 2) over a box, one line of them where the array has no width that way."""
+    steps = np.linspace(-1, 1, _ACROSS)
+    y, z = (width * steps if width > 0 else np.zeros(1) for width in half_width)
+    return floats(np.stack(np.meshgrid(y, z, indexing="ij"), -1).reshape(-1, 2))
+
+
+def _seen_power(state: Excitation, u: Floats) -> Floats:
+    """Intensity at direction cosines (..., 2); -1 outside visible space."""
+    power = np.full(u.shape[:-1], -1.0)
+    seen = u[..., 0] ** 2 + u[..., 1] ** 2 <= 1 - 1e-9
+    u_y, u_z = u[seen].T
+    theta = np.arccos(u_z)
+    phi = np.arcsin(np.clip(u_y / np.sin(theta), -1, 1))
+    if len(u_y):
+        power[seen] = intensity(state, theta[None], phi[None])[0]
+    return power
+
+
+def _refined(
+    state: Excitation, centre: Floats, half_width: Floats, offset: Floats
+) -> tuple[float, Floats] | None:
+    """Highest level around an offset in the box of a lattice point, by two finer grids; None: not seen."""
+    level = -1.0
+    for finer in (1, 2):
+        near = offset + _box(half_width * (2 / (_ACROSS - 1)) ** finer)
+        near = near[(np.abs(near) <= half_width + 1e-12).all(1)]
+        power = _seen_power(state, centre + near)
+        level, offset = float(power.max()), near[power.argmax()]
+    return (level, centre + offset) if level >= 0 else None
 
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:

@@ -55,7 +55,7 @@ def _kernels(states: Excitation, y_m: Floats, z_m: Floats) -> Floats:
     return _kernel(states.element, *keys)[states.which]
 
 
-@lru_cache(maxsize=512)
+@lru_cache(maxsize=128)
 def _kernel(
     element: Element, wavenumbers: tuple[float, ...], y_m: tuple[float, ...], z_m: tuple[float, ...]
 ) -> Floats:

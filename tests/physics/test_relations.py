@@ -137,6 +137,11 @@ def test_states_refuse_what_is_no_frequency():
         array_states(ArrayLayout(2, 2, 0.5, 0.5), SectorElement(), HZ, np.nan)
 
 
+def test_element_refuses_what_is_no_width():
+    with pytest.raises(ValueError, match="must be positive"):
+        SectorElement(0.0)
+
+
 def test_a_single_element_is_its_own_pattern():
     """TR 38.901 element: 9.826 dBi integrated, half power at 65.1 deg (-3.01 dB of a -3 dB width)."""
     found = array_states(ArrayLayout(1, 1, 0.0, 0.0), SectorElement(), HZ)
