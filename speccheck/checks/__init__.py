@@ -10,7 +10,7 @@ from speccheck.checks import spacing, lattices
 from speccheck.checks import gain, gain_widths, gain_runs
 from speccheck.checks import beamwidth, beamwidth_box
 from speccheck.checks import sidelobes, scan
-from speccheck.checks import housing, ports, layers
+from speccheck.checks import housing, ports, connectors, layers
 from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
 from speccheck.checks import frequency_unit, bands, duplex, directions
 from speccheck.checks import wind, mechanics, exposure, wording
@@ -22,7 +22,7 @@ from speccheck.checks.runner import examine
 
 FAMILIES = (
     plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box, sidelobes, scan,
-    housing, ports, layers,
+    housing, ports, connectors, layers,
     power, power_array, power_budget, losses, matching, intermodulation,
     frequency_unit, bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip

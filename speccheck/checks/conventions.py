@@ -212,6 +212,11 @@ def _convention(candidate: _Candidate, after: Finding) -> Convention:
     )
 
 
+def _of_difference(unit: str) -> str:
+    """Unit of the difference of two figures: levels differ by decibels."""
+    return "dB" if unit in ("dBi", "dBd", "dBm", "dBc") else unit
+
+
 def _off_middle(after: Finding) -> float:
     """Distance of the re-read claim from the middle of what is expected, in half widths of that interval."""
     value = after.claimed.value if after.claimed else None
@@ -230,4 +235,11 @@ def _left_over(candidate: _Candidate, after: Finding) -> tuple[Step, ...]:
         return ()
     middle = (span.low + span.high) / 2
     formula = f"{value:.4g} − {middle:.4g} (middle of {span.low:.4g} to {span.high:.4g})"
-    return (Step(f"Left over if {candidate.reading.name}", formula, round(value - middle, 3), span.unit),)
+    return (
+        Step(
+            f"Left over if {candidate.reading.name}",
+            formula,
+            round(value - middle, 3),
+            _of_difference(span.unit),
+        ),
+    )

@@ -28,6 +28,9 @@ VERDICTS = {
     GainZone.PLAUSIBLE: Fit.FITS,
     GainZone.LOW: Fit.DOUBTFUL,
 }
+COLUMN_PRODUCT = 35_000.0
+"""Directivity × width × width [deg²] of a uniform column: 8 at 0.8 λ, 18.3 dBi, 65° × 8° (computed)."""
+
 SHORT_FORMULA_WITHIN_DB = 0.3
 """A system-model figure is computed to 0.1 dB; rounding of element gain and count stays within this [dB]."""
 
@@ -181,6 +184,11 @@ def _working(model: Model, gain: Reading, claims: Claims, beam: BeamGain) -> tup
     steps = [
         Step("Wavelength", f"c ÷ {claims.freq_hz / 1e6:.1f} MHz", round(wavelength_m * 1000, 2), "mm"),
     ]
+    widths = claims.horizontal_deg, claims.vertical_deg
+    if beam.columns == 1 and widths[0] and widths[1]:
+        by_hand = 10 * math.log10(COLUMN_PRODUCT / (widths[0] * widths[1]))
+        formula = f"10·log10(35000 ÷ ({widths[0]:g} × {widths[1]:g}))"
+        steps.append(Step("Lossless column by hand, for comparison", formula, round(by_hand, 2), "dBi"))
     if beam.columns > 1:
         width = beam.columns * layout.horizontal_pitch_m
         area = 10 * math.log10(4 * math.pi * width * height / wavelength_m**2)
