@@ -41,17 +41,17 @@ def find_beam(states: Excitation) -> Beam:
     Returns [Beam]: direction and power factors, shape (S,) each.
     Source: definition of the beam peak; analytic derivatives of the array factor.
     """
-    reach = [_reach(states, axis) for axis in (0, 1)]
+    reach_t, reach_p = (_reach(states, axis) for axis in (0, 1))
     theta, phi = _pulled(states)
     for _ in range(_STEPS):
         g_t, g_p, h_t, h_p, h_tp = _derivatives(states, theta, phi)
         determinant = h_t * h_p - h_tp * h_tp
-        if (h_t < -_FLAT).all() and (h_p < -_FLAT).all() and (determinant > 1e-9).all():
+        if h_t.max() < -_FLAT and h_p.max() < -_FLAT and determinant.min() > 1e-9:
             d_theta, d_phi = (h_tp * g_p - h_p * g_t) / determinant, (h_tp * g_t - h_t * g_p) / determinant
         else:  # each axis on its own
             d_theta, d_phi = _uphill(g_t, h_t), _uphill(g_p, h_p)
-        d_theta = np.minimum(np.maximum(d_theta, -reach[0]), reach[0])
-        d_phi = np.minimum(np.maximum(d_phi, -reach[1]), reach[1])
+        d_theta = np.minimum(np.maximum(d_theta, -reach_t), reach_t)
+        d_phi = np.minimum(np.maximum(d_phi, -reach_p), reach_p)
         theta, phi = theta + d_theta, phi + d_phi
         if max(np.abs(d_theta).max(), np.abs(d_phi).max()) < _SETTLED_RAD:
             break
@@ -74,11 +74,11 @@ def _pulled(states: Excitation) -> tuple[Floats, Floats]:
     return angle[0] + np.pi / 2, angle[1]
 
 
-def _reach(states: Excitation, axis: int) -> Floats:
+def _reach(states: Excitation, axis: int) -> float:
     """Longest step [rad]: about a third of a null width of the aperture, and never more than a sixth."""
     positions = lines(states.layout)[axis].positions
     extent = float(positions[-1] - positions[0])
-    return np.minimum(2.0 / (states.wavenumbers * (extent + 1e-9)), 0.17)
+    return min(2.0 / (float(states.distinct.max()) * (extent + 1e-9)), 0.17)
 
 
 def _uphill(gradient: Floats, curvature: Floats) -> Floats:

@@ -63,7 +63,7 @@ def excite(
     Raises ValueError for a frequency that is not positive, or an angle that is no number.
     Source: 3GPP TR 37.840 clause 5.4.4, with theta = 90 + tilt.
     """
-    if not (np.all(freq_hz > 0) and np.isfinite(freq_hz + tilt_deg + scan_deg).all()):
+    if not (freq_hz.min() > 0 and np.isfinite((freq_hz + tilt_deg + scan_deg).sum())):
         raise ValueError("frequencies must be positive [Hz] and steering angles finite [deg]")
     k = wavenumber(freq_hz)
     tilt, phi = np.radians(tilt_deg), np.radians(scan_deg)

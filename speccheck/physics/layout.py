@@ -178,7 +178,7 @@ def row_shifts(layout: ArrayLayout) -> Floats | None:
 
 def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...]) -> Line:
     (count, pitch, grouped), (groups, group_pitch) = inner, outer
-    positions = floats(np.arange(count) - (count - 1) / 2) * pitch
+    positions = _centred(count) * pitch
     if groups > 1:
         middles = (np.arange(groups) - (groups - 1) / 2) * group_pitch
         positions = floats(middles[:, None] + positions).ravel()
@@ -193,12 +193,17 @@ def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[
     amplitudes = np.ones(len(positions))
     if taper:
         amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
+    squares = positions * positions
     total = float(amplitudes.sum())
-    spread = float(amplitudes @ positions**2) / total - (float(amplitudes @ positions) / total) ** 2
+    spread = float(amplitudes @ squares) / total - (float(amplitudes @ positions) / total) ** 2
     moments = np.ones((len(positions), 3), complex)
-    moments[:, 1] = 1j * positions
-    moments[:, 2] = -positions * positions
+    moments.imag[:, 1], moments.real[:, 1], moments.real[:, 2] = positions, 0, -squares
     return Line(positions, centres, amplitudes, pitch, spread, moments, _factors(inner, outer, taper, pitch))
+
+
+@lru_cache(maxsize=128)
+def _centred(count: int) -> Floats:
+    return floats(np.arange(count) - (count - 1) / 2)
 
 
 def _factors(

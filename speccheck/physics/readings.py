@@ -16,7 +16,7 @@ Places = NDArray[np.int16]
 Singles = NDArray[np.float32]
 
 
-_FOUR, _FIVE = np.arange(-1, 3)[:, None], np.arange(-2, 3)[:, None]
+_TWO, _FOUR, _FIVE = (np.arange(*span)[:, None] for span in ((0, 2), (-1, 3), (-2, 3)))
 _CUBIC = np.linalg.inv(np.vander(_FOUR[:, 0], increasing=True))
 _QUARTIC = np.linalg.inv(np.vander(_FIVE[:, 0], increasing=True))
 """From samples around a point to the coefficients of the polynomial through them."""
@@ -85,11 +85,14 @@ def _half_power(level: Floats, coarse: Singles, sides: tuple[Flags, Flags]) -> F
     base = np.minimum(np.maximum(between, 1), count - 3)
     flat = level.ravel()
     c0, c1, c2, c3 = _CUBIC @ flat[rows + base + _FOUR]
-    here, there = flat[rows + between], flat[rows + between + 1]
-    at = (between - base) + (here - 0.5) / np.where(here == there, 1.0, here - there)
+    here, there = flat[rows + between + _TWO]
+    fall = here - there
+    at = (between - base) + (here - 0.5) / np.where(fall == 0, 1.0, fall)
     slope = c1 + at * (2 * c2 + 3 * c3 * at)
     at = at - (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / np.where(slope == 0, 1.0, slope)
-    return np.where(np.concatenate([after.any(1), before.any(1)]), base + at, np.nan)
+    each = np.arange(cuts)
+    crossed = np.concatenate([after[each, right], before[each, left]])
+    return np.where(crossed, base + at, np.nan)
 
 
 def _lobes_beside(
