@@ -91,7 +91,7 @@ class AcrossReader:
         for key in _NAME_KEYS:
             named = [i for i, f in fields.items() if f.label.parameters[:1] == (key,)]
             if named:
-                self._named = named[0]
+                self._named = next((i for i in named if self._holds_words(i)), named[0])
                 break
         else:
             roles = [i for i, f in fields.items() if f.role == "panel"]
@@ -116,6 +116,10 @@ class AcrossReader:
 
     def _column_cells(self, index: int) -> list[Cell]:
         return [c for r in self._table.data_rows[:40] if (c := self._grid.cells.get((r, index))) is not None]
+
+    def _holds_words(self, index: int) -> bool:
+        cells = self._column_cells(index)
+        return bool(cells) and all(isinstance(c.raw, str) for c in cells)
 
     def _unlabelled_text_column(self) -> int:
         for index, found in self._fields.items():

@@ -39,6 +39,7 @@ class _State:
     side_band: Band | None = None
     side_name: str = ""
     side_bottom: int = 0
+    group: str = ""
     pending_title: Cell | None = None
     seen: set[tuple[object, ...]] = field(default_factory=set)
 
@@ -130,7 +131,8 @@ class DownReader:
                     draft = self._panels.first
                     draft.bands.append(bands.hull)
                     self._panels.claim_band(draft, cell, bands.hull, "row group")
-            elif state.side_name and isinstance(cell.raw, str):
+            elif isinstance(cell.raw, str):
+                state.group = cell.text
                 state.side_band, state.side_name = None, ""
         if state.side_name and row > state.side_bottom:
             state.side_band, state.side_name = None, ""
@@ -157,7 +159,7 @@ class DownReader:
         extra = row_cells(self._grid, self._columns, row)
         if label_cell is None and row > state.label_bottom and not (extra.condition or extra.band):
             state.label = None
-        label = joined_label(self._marks.labels, state.label, extra.condition)
+        label = joined_label(self._marks.labels, state.label, extra.condition, state.group)
         if not label:
             self._unknown_row(label if state.label is None else state.label, beside)
             return

@@ -30,8 +30,8 @@ def find_down(marks: Marks, taken: set[int]) -> list[Down]:
         if row not in taken:
             by_column[column].append(row)
     columns = _label_columns(marks, {c: sorted(rows) for c, rows in by_column.items()})
-    columns = {c: rows for c, rows in columns.items() if not _is_second_label(marks, columns, c)}
     columns = {c: rows for c, rows in columns.items() if not _is_group_column(marks, columns, c)}
+    columns = {c: rows for c, rows in columns.items() if not _is_second_label(marks, columns, c)}
     tables: list[Down] = []
     for column, rows in sorted(columns.items()):
         for top, bottom in _runs(marks, column, rows, taken):

@@ -53,8 +53,13 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
     return found
 
 
-def joined_label(labels: Labels, label: Label | None, condition: Cell | None) -> Label:
-    """A label with its condition: 'Radiator pitch' and 'horizontal' name a parameter together."""
+def joined_label(labels: Labels, label: Label | None, condition: Cell | None, group: str = "") -> Label:
+    """A label with its condition: 'Radiator pitch' and 'horizontal' name a parameter together.
+
+    A label that says nothing alone may do so behind its group: 'Beamwidth' and 'Horizontal'.
+    """
+    if label is not None and not label and group and (grouped := labels.of(f"{group} {label.text}")):
+        label = grouped
     if condition is None or is_band_label(condition.text):
         return label or Label("")
     if label is not None and label.text:

@@ -22,7 +22,7 @@ _TILTS = re.compile(
     r"\s*(?:of|=|:)?\s*((?:\d+(?:[.,]\d+)?\s*°?\s*/\s*)+\d+(?:[.,]\d+)?\s*°?)\s*[)]?\s*$",
     re.IGNORECASE,
 )
-_UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
+_UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")

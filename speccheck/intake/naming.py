@@ -35,6 +35,7 @@ _ASIDE = re.compile(
 _PAPERS = re.compile(r"\b(?:tender|rf[qpi]|project|contract|order|document|doc|ref|lot|annex|clause)\b")
 _LONG_TITLE = 90
 _LONG_NAME = 40
+_LONGEST_NAME = 120
 
 
 @dataclass(frozen=True, slots=True)
@@ -51,7 +52,7 @@ def model_name(text: str) -> str:
 
     Without a word such as 'Type', a title of several words is named by the code in it.
     """
-    words = " ".join(text.split())
+    words = " ".join(text.split())[:_LONGEST_NAME]
     stripped = _without_prefix(words, "prefix")
     plain = _OF.sub("", _without_prefix(stripped, "weak"))
     inside = _INSIDE.search(plain)

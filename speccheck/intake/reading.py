@@ -24,6 +24,8 @@ _MIN_WORDS = re.compile(
 )
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
+_MOST_DIFFERENT = 40_000
+"""A catalogue repeats its figures; more different ones than this are no bid, and understanding takes time."""
 _IDENTITY_UNITS = ("", "–", "-", "—")
 
 
@@ -62,6 +64,10 @@ class Reader:
             raw = raw[1:]  # the sign that a spreadsheet shall keep a cell as text
         key = (id(context), type(raw), raw, cell.number_format)
         known = self._known.get(key)
+        if known is None and len(self._known) > _MOST_DIFFERENT:
+            reason = f"more than {_MOST_DIFFERENT} different cells in one file; it was not read"
+            unread = Unread(where=where, text=plain(cell.text, 80), reason=reason, suggestion="split the file")
+            return Outcome(sheet, unread=unread)
         if known is None:
             known = self._known[key] = self._understand(raw, context, cell.number_format)
         content, figures, trouble = known
