@@ -14,7 +14,7 @@ from speccheck.report.comparison_view import Comparison, compare, lines
 from speccheck.report.formats import shown_unit
 from speccheck.report.marks import mark_for
 from speccheck.report.sheets import UNDATED, Column, Imprint, Table
-from speccheck.report.view import label
+from speccheck.report.view import label, rules_fingerprint
 
 _MOST_MATRIX_COLUMNS = 250
 _PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
@@ -56,7 +56,10 @@ def _read_me(view: Comparison) -> Table:
         ("What this is", view.sentence),
         ("Tender", evaluation.settings.tender or "none given"),
         ("Program", f"speccheck {evaluation.program_version}"),
-        ("Rules fingerprint", evaluation.rules_sha256),
+        (
+            "Rules fingerprint",
+            rules_fingerprint(evaluation.settings, evaluation.tender, evaluation.program_version),
+        ),
         (
             "Sheet Offers",
             "One row an offer: outcome, counts, points, what blocks it. Knocked-out offers first.",

@@ -21,7 +21,7 @@ from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Comp
 from speccheck.report.exposure_lines import exposure_table, zone_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
-from speccheck.report.view import build_view, label
+from speccheck.report.view import build_view, label, rules_fingerprint
 from speccheck.text import plain
 
 PAPERS = {"a4": "A4", "letter": "letter"}
@@ -132,6 +132,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         Fit=Fit,
         Level=Level,
         exposure_table=exposure_table,
+        rules_fingerprint=rules_fingerprint,
         zone_table=zone_table,
         WIND_CAUTIONS=WIND_CAUTIONS,
         MOUNTING_CAUTIONS=MOUNTING_CAUTIONS,

@@ -22,6 +22,7 @@ from speccheck.records import (
     MatrixRow,
     PanelAssessment,
     Settings,
+    Tender,
 )
 from speccheck.report.canvas import Figure
 from speccheck.report.figures import panel_figures
@@ -166,12 +167,17 @@ def label(key: str) -> str:
 
 
 def fingerprint(assessment: Assessment) -> str:
-    """SHA-256 over the rules: settings, tender and program version; the same rules give the same one."""
-    rules = asdict(assessment.settings)
+    """Fingerprint of the rules an assessment was made by."""
+    return rules_fingerprint(assessment.settings, assessment.tender, assessment.program_version)
+
+
+def rules_fingerprint(settings: Settings, tender: Tender | None, program_version: str) -> str:
+    """SHA-256 over settings, tender and program version: the same rules give the same one in every output."""
+    rules = asdict(settings)
     for not_a_rule in ("today", "report_number", "revision", "issued", "paper", "decimal_comma"):
         rules.pop(not_a_rule, None)
-    rules["program"] = assessment.program_version
-    rules["tender_file"] = assessment.tender.sha256 if assessment.tender else ""
+    rules["program"] = program_version
+    rules["tender_file"] = tender.sha256 if tender else ""
     return hashlib.sha256(json.dumps(rules, sort_keys=True, default=str).encode()).hexdigest()
 
 
