@@ -1,36 +1,25 @@
-"""Arguments, exit codes and what goes to the screen; no logic."""
+"""Arguments, exit codes and what goes to the screen; no logic.
+
+Each command imports what it needs when it runs: importing all of it would take a bid's time again.
+"""
 
 from __future__ import annotations
 
 import sys
 from enum import IntEnum
 from pathlib import Path
+from typing import TYPE_CHECKING
 
 import click
 
-from speccheck import __version__, screen
-from speccheck.atomic import write_bytes_atomic
-from speccheck.batch import assess_many
-from speccheck.batch.copying import write_copy
-from speccheck.batch.lone_tender import has_requirements, lone_tender
-from speccheck.checks.registry import CHECKS
+from speccheck import __version__
 from speccheck.errors import OutputError, UnusableInputError
-from speccheck.intake import read_submission
-from speccheck.intake.answers import read_answers
-from speccheck.intake.tender_book import read_tender
-from speccheck.pipeline import FORMATS, assess
-from speccheck.records import Assessment, Outcome, Tender
-from speccheck.records.evaluations import Bid, Evaluation
-from speccheck.report.clarification import write_answers
-from speccheck.report.form import write_form
-from speccheck.report.listing import listing
-from speccheck.report.machine import from_json
-from speccheck.report.readbook import read_json, write_read_book
-from speccheck.report.tender_listing import tender_listing
-from speccheck.revisions import compare as compare_results
-from speccheck.revisions import comparison_text
-from speccheck.tender import vetted
-from speccheck.tender.answers import take_in
+from speccheck.records import Outcome
+from speccheck.records.outputs import FORMATS
+
+if TYPE_CHECKING:
+    from speccheck.records import Assessment, Tender
+    from speccheck.records.evaluations import Bid, Evaluation
 
 
 class Exit(IntEnum):
@@ -109,6 +98,9 @@ def check(
     More than one bid or panel adds the comparison of the offers. Where a folder of bids holds one
     workbook with a sheet Requirements and no --tender is given, that workbook is the tender.
     """
+    from speccheck import screen
+    from speccheck.batch import assess_many
+
     tender_file, tender = _tender(bids, tender_file)
     evaluation = assess_many(
         bids,
@@ -128,6 +120,8 @@ def check(
     click.echo(screen.outcome_table(evaluation))
     click.echo(f"\nOutputs in {out}")
     for bidder in copies:
+        from speccheck.batch.copying import write_copy
+
         written = write_copy(bidder, evaluation.bids, out=out, tender=tender, formats=formats)
         click.echo(f"Copy for {bidder} in {written[0].parent}")
     sys.exit(_exit_code(evaluation))
@@ -135,17 +129,36 @@ def check(
 
 def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | None, Tender | None]:
     if tender_file is None:
+        from speccheck.batch.lone_tender import lone_tender
+
         tender_file = lone_tender(bids)
         if tender_file is None:
             return None, None
         click.echo(f"Tender: {tender_file} (found among the bids; name another with --tender)")
-    tender = vetted(read_tender(tender_file))
+    tender = _read_vetted(tender_file)
     for finding in tender.findings:
         click.echo(f"  {finding.summary}")
     return tender_file, tender
 
 
+def _read_vetted(path: Path) -> Tender:
+    from speccheck.intake.tender_book import read_tender
+    from speccheck.tender import vetted
+
+    return vetted(read_tender(path))
+
+
+def _read_tender(path: Path | None) -> Tender | None:
+    if path is None:
+        return None
+    from speccheck.intake.tender_book import read_tender
+
+    return read_tender(path)
+
+
 def _show_progress(done: int, total: int, bid: Bid) -> None:
+    from speccheck import screen
+
     click.echo(screen.progress_line(done, total, bid))
 
 
@@ -165,13 +178,22 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
 
     Of a tender workbook it shows each wording beside its reading.
     """
+    from speccheck.batch.lone_tender import has_requirements
+    from speccheck.intake import read_submission
+    from speccheck.report.listing import listing
+
     if has_requirements(bid):
-        click.echo(tender_listing(vetted(read_tender(bid))))
+        from speccheck.report.tender_listing import tender_listing
+
+        click.echo(tender_listing(_read_vetted(bid)))
         return
-    headings = read_tender(tender_file).settings.headings if tender_file else {}
-    submission = read_submission(bid, headings=headings)
+    tender = _read_tender(tender_file)
+    submission = read_submission(bid, headings=tender.settings.headings if tender else {})
     click.echo(listing(submission))
     if out is not None:
+        from speccheck.atomic import write_bytes_atomic
+        from speccheck.report.readbook import read_json, write_read_book
+
         out.mkdir(parents=True, exist_ok=True)
         write_read_book(submission, out / f"{bid.stem}.reading.xlsx")
         write_bytes_atomic(out / f"{bid.stem}.reading.json", read_json(submission).encode())
@@ -183,7 +205,9 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
 @click.option("--tender", "tender_file", type=_path, help="Ask for exactly what this tender requires.")
 def form(target: Path, tender_file: Path | None) -> None:
     """Write a blank bid form to hand to bidders."""
-    write_form(target, read_tender(tender_file) if tender_file else None)
+    from speccheck.report.form import write_form
+
+    write_form(target, _read_tender(tender_file))
     click.echo(f"Written: {target}")
 
 
@@ -197,7 +221,12 @@ def answers(bid: Path, answered: Path, tender_file: Path | None, out: Path) -> N
 
     A changed figure is named as a change of substance; the offer itself stays as it was opened.
     """
-    assessment = assess(bid, tender=read_tender(tender_file) if tender_file else None)
+    from speccheck.intake.answers import read_answers
+    from speccheck.pipeline import assess
+    from speccheck.report.clarification import write_answers
+    from speccheck.tender.answers import take_in
+
+    assessment = assess(bid, tender=_read_tender(tender_file))
     taken = take_in(assessment, read_answers(answered))
     out.mkdir(parents=True, exist_ok=True)
     for path in write_answers(assessment, taken, out, bid.stem):
@@ -210,6 +239,9 @@ def answers(bid: Path, answered: Path, tender_file: Path | None, out: Path) -> N
 @click.argument("slug", required=False)
 def explain(slug: str | None) -> None:
     """Tell what a check does: formula, inputs, assumptions, source, worked example."""
+    from speccheck import screen
+    from speccheck.checks.registry import CHECKS
+
     if slug is None:
         click.echo(screen.list_of_checks(CHECKS.values()))
         return
@@ -223,13 +255,17 @@ def explain(slug: str | None) -> None:
 @click.argument("new", type=_path)
 def compare(old: Path, new: Path) -> None:
     """Show what changed between two results (JSON) of one bid."""
-    revision = compare_results(_stored(old), _stored(new))
-    click.echo(comparison_text(revision))
+    from speccheck import revisions
+
+    revision = revisions.compare(_stored(old), _stored(new))
+    click.echo(revisions.comparison_text(revision))
     same = not revision.changes and revision.old_sha256 == revision.new_sha256
     sys.exit(Exit.ACCEPTABLE if same else Exit.CLARIFY_OR_REJECT)
 
 
 def _stored(path: Path) -> Assessment:
+    from speccheck.report.machine import from_json
+
     try:
         text = path.read_text(encoding="utf-8")
     except (OSError, UnicodeDecodeError) as error:

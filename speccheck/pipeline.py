@@ -10,21 +10,12 @@ from speccheck.atomic import write_bytes_atomic
 from speccheck.checks import examine, exposure_note, panel_drawings
 from speccheck.intake import read_submission
 from speccheck.records import Assessment, Panel, PanelAssessment, Settings, Tender
+from speccheck.records.outputs import SUFFIXES
 from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
 from speccheck.report.pdf import Attachment, pdf_bytes
 from speccheck.report.review import review_bytes
 from speccheck.tender import judge, outcome
-
-SUFFIXES = {
-    "html": ".report.html",
-    "xlsx": ".review.xlsx",
-    "json": ".result.json",
-    "pdf": ".report.pdf",
-}
-"""Ending of each output, in the order of writing: the PDF, which may be impossible, last."""
-
-FORMATS = tuple(SUFFIXES)
 
 
 def assess(path: str | Path, *, tender: Tender | None = None, settings: Settings | None = None) -> Assessment:

@@ -12,6 +12,7 @@ from speccheck.batch.pool import run
 from speccheck.batch.work import Rules
 from speccheck.records import Settings, Tender
 from speccheck.records.evaluations import Bid, Evaluation
+from speccheck.records.outputs import FORMATS
 from speccheck.report.comparison import write_comparison
 from speccheck.tender.ranking import standings, swings, weight_notes, weight_table, weights
 
@@ -19,8 +20,6 @@ __all__ = ["BidFile", "Evaluation", "assess_many", "find_bids"]
 
 Progress = Callable[[int, int, Bid], None]
 """Called after each bid with the number done, the number of all, and its result."""
-
-FORMATS = ("html", "pdf", "xlsx", "json")
 
 
 def assess_many(

@@ -16,6 +16,7 @@ from speccheck.batch.inputs import BidFile
 from speccheck.errors import OutputError, UnusableInputError
 from speccheck.records import Assessment, Settings, Tender
 from speccheck.records.evaluations import Bid
+from speccheck.records.outputs import SUFFIXES
 from speccheck.report.clarification import write_clarification
 from speccheck.report.pdf import PdfUnavailableError
 from speccheck.tender.summaries import summarise
@@ -72,7 +73,7 @@ def _outputs(
     try:
         made, note = pipeline.write_outputs(assessment, path, out, formats), ""
     except PdfUnavailableError as error:
-        expected = [out / f"{path.stem}{pipeline.SUFFIXES[name]}" for name in formats if name != "pdf"]
+        expected = [out / f"{path.stem}{SUFFIXES[name]}" for name in formats if name != "pdf"]
         made, note = [output for output in expected if output.is_file()], str(error)
     return [*made, *write_clarification(assessment, out, path.stem, formats)], note
 
