@@ -15,7 +15,9 @@ def refuse_tender(book: Book) -> None:
     grid = sheets.get("requirements")
     if grid is None or not _BUYERS_SHEETS & set(sheets):
         return
-    heads = [cell for _, cell in sorted(grid.cells.items()) if cell.text.strip().casefold() in _BUYERS_HEADINGS]
+    heads = [
+        cell for _, cell in sorted(grid.cells.items()) if cell.text.strip().casefold() in _BUYERS_HEADINGS
+    ]
     if heads:
         raise UnusableInputError(
             book.file,

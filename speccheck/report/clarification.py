@@ -77,12 +77,14 @@ def clarification_bytes(assessment: Assessment) -> bytes:
 def render_clarification(assessment: Assessment, taken: Sequence[TakenAnswer] = ()) -> str:
     """The clarification list as a page to send, or with the answers that came back."""
     numbers = Numbers(assessment.settings.decimal_comma)
+    questions = questions_of(assessment)
     return render(
         "clarification.html",
         assessment.settings.paper,
         numbers,
         assessment=assessment,
-        questions=questions_of(assessment),
+        questions=questions,
+        stated={question.number: _stated(assessment, question) for question in questions},
         taken=taken,
         tones=_KINDS,
         changed=sum(one.kind is AnswerKind.CHANGED for one in taken),
@@ -113,15 +115,25 @@ def _read_me(assessment: Assessment) -> Table:
     return Table(name="Read me", columns=columns, rows=rows)
 
 
+def _stated(assessment: Assessment, question: Question) -> tuple[str, ...]:
+    """What stood in the cells asked about: parameter and text, each once."""
+    panel = assessment.panels[question.panel_number - 1].panel
+    said = [(r.where, r.parameter, r.raw) for r in panel.readings]
+    said += [(s.where, s.parameter, s.raw) for s in panel.statements]
+    asked = [
+        f"{label(parameter)} ({where}): {raw.strip()}"
+        for cell in question.where
+        for where, parameter, raw in said
+        if where == cell
+    ]
+    return tuple(dict.fromkeys(asked))
+
+
 def _questions(assessment: Assessment) -> Table:
     numbers = Numbers(assessment.settings.decimal_comma)
-    read = {str(r.where): r for one in assessment.panels for r in one.panel.readings}
     rows = []
     for question in questions_of(assessment):
         cells = [str(where) for where in question.where]
-        stated = [
-            f"{label(r.parameter)}: {r.raw.strip()}" for cell in cells if (r := read.get(cell)) is not None
-        ]
         rows.append(
             (
                 question.number,
@@ -129,7 +141,7 @@ def _questions(assessment: Assessment) -> Table:
                 ", ".join(question.clauses),
                 ", ".join(numbers.band(band) for band in question.bands),
                 ", ".join(cells),
-                "; ".join(stated),
+                "; ".join(_stated(assessment, question)),
                 question.problem,
                 question.asked,
                 None,
