@@ -51,7 +51,7 @@ def tokens(text: str) -> list[Token]:
     while position < len(text):
         if found and found[-1].kind == "num":
             unit = _UNIT.match(text, position)
-            if unit:
+            if unit and unit_name(unit.group()):
                 found.append(Token("unit", unit.group().strip(), unit_name(unit.group())))
                 position = unit.end()
                 continue

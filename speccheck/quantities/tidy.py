@@ -45,7 +45,7 @@ _REPLACEMENTS: tuple[tuple[re.Pattern[str], str], ...] = (
 )
 _TEXT_MARK = re.compile(r"^'(?=[\d+±≥≤<>-])")
 _POWER_OF_TEN = re.compile(r"\s?[x×·*]\s?10\^?([⁻⁰¹²³⁴⁵⁶⁷⁸⁹]+|(?<=\^)-?\d+)")
-_RAISED = re.compile(r"(?<![mM])([⁰¹²³⁴⁵⁶⁷⁸⁹]+)\)?|(?<=[mM])([⁰¹⁴⁵⁶⁷⁸⁹]+)\)?")
+_RAISED = re.compile(r"(?<![mM])(?<!ft)([⁰¹²³⁴⁵⁶⁷⁸⁹]+)\)?|(?<=[mM])([⁰¹⁴⁵⁶⁷⁸⁹]+)\)?")
 _TRAILING_SIGN = re.compile(r"(?<=\S)\s?(\*{1,3}|†|‡|§|#)\)?$")
 _TRAILING_MARK = re.compile(
     _TRAILING_SIGN.pattern + r"|(?<=\S)\s(\d|[a-e])\)$|(?<=\S)\s?[\[(](\d)[\])]$|(?<=\S)\s[\[(]([a-e])[\])]$"

@@ -81,7 +81,7 @@ _SPELLINGS: dict[str, str] = {
     "kg": "kg kgs kilo kilos kilogram kilograms kilogramm kilogrammes",
     "g": "g gram grams gramm",
     "lb": "lb lbs lbm pound pounds",
-    "N": "n newton newtons",
+    "N": "N newton newtons",
     "daN": "dan",
     "kN": "kn kilonewton",
     "kgf": "kgf kp",
@@ -91,7 +91,7 @@ _SPELLINGS: dict[str, str] = {
     "mph": "mph mi/h miles/h mi/hr",
     "kt": "kt kts knot knots knoten nœuds nudos nodi nós",
     "ft/s": "ft/s ft/sec fps",
-    "W": "w watt watts wat watów vatios wrms",
+    "W": "W w watt watts wat watów vatios wrms",
     "kW": "kw kilowatt kilowatts",
     "mW": "mw milliwatt",
     "deg": "° deg degs deg. degree degrees grad degré degrés degre degres grado grados gradi grau graus"
@@ -100,9 +100,9 @@ _SPELLINGS: dict[str, str] = {
     "°C": "°c degc deg.c celsius",
     "°F": "°f degf fahrenheit",
     "K": "kelvin",
-    "ohm": "ω ohm ohms ohmios om omów",
+    "ohm": "Ω ω ohm ohms ohmios om omów",
     "%": "% percent per-cent prozent pourcent procent",
-    "V": "v volt volts vdc vac v-dc",
+    "V": "V volt volts vdc vac v-dc",
     "kV": "kv",
     "h": "h hr hrs hour hours std stunden heures horas ore godz godzin uur",
     "years": "year years yr yrs jahr jahre an ans année années año años anno anni ano anos rok lat lata jaar",
@@ -138,6 +138,8 @@ class UnknownUnitError(ValueError):
 def unit_name(text: str) -> str:
     """The program's name of a unit as somebody wrote it; empty when it is not a unit.
 
+    Case counts for single letters only: h is an hour, H stands for horizontal or height.
+
     >>> unit_name("Degrees"), unit_name("km/hr"), unit_name("parsec")
     ('deg', 'km/h', '')
     """
@@ -145,7 +147,8 @@ def unit_name(text: str) -> str:
     if word in _LINEAR or word in _OTHER:
         return word
     for form in (word, word.strip("[]()").strip()):
-        folded = form.replace("º", "°").replace("\u2126", "Ω").casefold()
+        plain = form.replace("º", "°").replace("\u2126", "Ω")
+        folded = plain if len(plain) == 1 else plain.casefold()
         name = _NAMES.get(folded) or _NAMES.get(folded.rstrip("."))
         if name:
             return name
