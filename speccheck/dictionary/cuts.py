@@ -59,7 +59,7 @@ def cuts(body: str) -> Iterator[Cut]:
 
 
 def _without_unit(cut: Cut) -> Cut:
-    for bracket in _BRACKETS.finditer(cut.text):
+    for bracket in reversed(list(_BRACKETS.finditer(cut.text))):
         name = unit_name(bracket.group(1))
         if name:
             rest = cut.text[: bracket.start()] + " " + cut.text[bracket.end() :]
