@@ -57,7 +57,7 @@ def vertical_beamwidth_fits_rows(
     """
     if round(array_rows.nominal) < 2:
         return None
-    model = model_of(case)
+    model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     freq_hz = claim_freq_hz(vertical_beamwidth, model)
@@ -152,7 +152,7 @@ def horizontal_beamwidth_fits_columns(
     """
     if array_columns is None or round(array_columns.nominal) < 2:
         return _single_column(horizontal_beamwidth)
-    model = model_of(case)
+    model = model_of(case, "horizontal")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     freq_hz = claim_freq_hz(horizontal_beamwidth, model)

@@ -51,7 +51,7 @@ def _against_side(width: Reading, side: Reading, band: Band, word: str) -> Judge
     "vertical-beamwidth-fits-height",
     "Vertical beamwidth fits the height",
     needs=("vertical_beamwidth", "height"),
-    about=("vertical_beamwidth",),
+    about=("height",),
     source="uniform line source: C. A. Balanis, Antenna Theory, ch. 12",
 )
 def vertical_beamwidth_fits_height(
@@ -77,7 +77,7 @@ def vertical_beamwidth_fits_height(
     "horizontal-beamwidth-fits-width",
     "Horizontal beamwidth fits the width",
     needs=("horizontal_beamwidth", "width"),
-    about=("horizontal_beamwidth",),
+    about=("width",),
     source="uniform line source: C. A. Balanis, Antenna Theory, ch. 12",
 )
 def horizontal_beamwidth_fits_width(

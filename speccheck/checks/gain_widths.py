@@ -150,7 +150,7 @@ def _of_two_beams(gain: Reading, width: Reading, all_deg: float, model: Model) -
     "gain-fits-housing",
     "Gain fits the housing",
     needs=("gain", "height", "width"),
-    about=("gain",),
+    about=("height", "width"),
     source="aperture theorem G ≤ 4πA/λ²: C. A. Balanis, Antenna Theory, ch. 12",
 )
 def gain_fits_housing(*, case: Case, gain: Reading, height: Reading, width: Reading) -> Judgement:

@@ -87,6 +87,10 @@ def array_fits_housing(
     12 rows at 140 mm take 1680 mm; a height of 1400 mm is 280 mm short and does not fit.
     """
     model = model_of(case)
+    if isinstance(model, Lacking) and height is not None:
+        model = model_of(case, "vertical")
+    if isinstance(model, Lacking) and width is not None:
+        model = model_of(case, "horizontal")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     sides = _sides(model, height, width, group_count(panel_groups))

@@ -6,6 +6,7 @@ from speccheck.checks.model import Lacking, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.steering_lobes import (
     ELEMENT_ASSUMED,
+    SOFT_DB,
     Steering,
     broken_claims,
     broken_said,
@@ -61,7 +62,12 @@ def triangular_lattice(
     along = Steering(stated[0] if stated else (0.0, 0.0), False, stated[1] if stated else None)
     found = [(strongest(model, s, subarrays=False), s) for s in (across, along)]
     lobe, steering = max(found, key=lambda f: (f[0].visible, f[0].present, f[0].level_db))
-    broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=(sidelobe_suppression,))
+    broken = broken_claims(
+        lobe,
+        grating_lobes=grating_lobes,
+        suppressions=(sidelobe_suppression,),
+        horizontal=steering.horizontal,
+    )
     top_h, top_v = model.horizontal_pitch_wl(model.high_hz), model.vertical_pitch_wl(model.high_hz)
     radius = ((1 / top_h) ** 2 + (0.5 / top_v) ** 2) ** 0.5
     return Judgement(
@@ -104,7 +110,8 @@ def subarray_spacing(
     """Computes the lobe that sub-arrays of fixed tilt raise at both ends of the tilt range.
 
     A sub-array pitch of two wavelengths is ordinary: at its fixed tilt the lobe lies in a null of the
-    sub-array and grows as the ports steer away. From -3 dB it does not fit, from -8 dB it is doubtful.
+    sub-array and grows as the ports steer away. From -3 dB it does not fit, from -8 dB it is doubtful,
+    and against a claim of no grating lobes it does not fit.
 
     Formula
     lobe at sin θ' = sin θ − λ/(K·d), weighted by the sub-array and element patterns there
@@ -117,7 +124,7 @@ def subarray_spacing(
     Sub-arrays of 3 at 0.7 λ built for 0° and steered to 12°: the lobe is 1.8 dB below the beam and does not
     fit. Built for 3° and steered to 10° it is -7.9 dB: doubtful, and inside ±4° it fits.
     """
-    model = model_of(case)
+    model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     if model.layout.subarray_rows < 2:
@@ -126,7 +133,13 @@ def subarray_spacing(
     if stated is None:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("electrical_tilt",), used=model.used)
     lobe = strongest(model, Steering(stated[0], False, stated[1]), subarrays=True)
-    broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=(sidelobe_suppression,))
+    broken = broken_claims(
+        lobe,
+        grating_lobes=grating_lobes,
+        suppressions=(sidelobe_suppression,),
+        horizontal=False,
+        distinct_db=SOFT_DB,
+    )
     layout = model.layout
     pitch_wl = layout.subarray_rows * model.vertical_pitch_wl(model.high_hz)
     free = float(grating.pitch_limit_wl(max(abs(e) for e in stated[0])))

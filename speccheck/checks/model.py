@@ -9,6 +9,7 @@ from __future__ import annotations
 import math
 import re
 from dataclasses import dataclass, replace
+from typing import Literal
 
 from speccheck.checks.registry import Case
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
@@ -22,6 +23,11 @@ _TRIANGULAR = re.compile(
 
 SECTOR_COLUMN_AZ_DEG = 65.0
 """Azimuth width [deg] taken for one column when the bid states none (TR 38.901 Table 7.3-1)."""
+
+Plane = Literal["both", "vertical", "horizontal"]
+
+FEW_BRANCHES = 4
+"""Transceivers that one column of two polarisations may have; more mean several columns (common practice)."""
 
 MOST_GROUPS = 8
 MOST_COUNTED = 256
@@ -85,7 +91,6 @@ class _Maker:
         self.panel, self.band = panel, band
         self.used: list[Reading] = []
         self.assumptions: list[str] = []
-        self.missing: list[str] = []
 
     def count(self, key: str) -> int | None:
         reading = self.reading(key)
@@ -127,22 +132,32 @@ def pitch_m(reading: Reading, band: Band) -> float:
     return reading.nominal * SPEED_OF_LIGHT_MPS / (at_mhz * 1e6)
 
 
-def model_of(case: Case) -> Model | Lacking:
-    """The array of one band of a panel, or what is missing for it."""
+def model_of(case: Case, plane: Plane = "both") -> Model | Lacking:
+    """The array of one band of a panel, or what is missing for it.
+
+    A check that looks at one plane only names it: what the bid leaves out of the other plane is then
+    replaced by a single row or column.
+    """
     if case.band is None:
         return Lacking(("frequency_range",))
     maker = _Maker(case.panel, case.band)
-    rows, columns = _counts(maker)
-    vertical = maker.pitch_m("vertical_element_spacing") if rows and rows > 1 else 0.0
-    horizontal = maker.pitch_m("horizontal_element_spacing") if columns > 1 else 0.0
-    if rows is None:
-        maker.missing.append("array_rows")
-    if vertical is None:
-        maker.missing.append("vertical_element_spacing")
-    if horizontal is None:
-        maker.missing.append("horizontal_element_spacing")
-    if rows is None or vertical is None or horizontal is None:
-        return Lacking(tuple(maker.missing), _unique(maker.used))
+    rows, columns = maker.count("array_rows"), _columns(maker)
+    vertical = maker.pitch_m("vertical_element_spacing") if rows != 1 else 0.0
+    horizontal = maker.pitch_m("horizontal_element_spacing") if columns != 1 else 0.0
+    if plane == "vertical" and (columns is None or horizontal is None):
+        columns, horizontal = 1, 0.0
+        maker.assumptions.append("Computed as one column: columns or their spacing are not stated.")
+    if plane == "horizontal" and (rows is None or vertical is None):
+        rows, vertical = 1, 0.0
+        maker.assumptions.append("Computed as one row: rows or their spacing are not stated.")
+    if rows is None or columns is None or vertical is None or horizontal is None:
+        named = {
+            "array_rows": rows,
+            "array_columns": columns,
+            "vertical_element_spacing": vertical if rows else 0.0,
+            "horizontal_element_spacing": horizontal if columns else 0.0,
+        }
+        return Lacking(tuple(key for key, value in named.items() if value is None), _unique(maker.used))
     grouped_rows, grouped_columns, tilt = _subarrays(maker, rows, columns)
     layout = ArrayLayout(
         rows=rows,
@@ -162,12 +177,16 @@ def _unique(readings: list[Reading]) -> tuple[Reading, ...]:
     return tuple({r.where: r for r in readings}.values())
 
 
-def _counts(maker: _Maker) -> tuple[int | None, int]:
-    rows, columns = maker.count("array_rows"), maker.count("array_columns")
-    if columns is None:
-        maker.assumptions.append("One column: the bid states no number of columns.")
-        columns = 1
-    return rows, columns
+def _columns(maker: _Maker) -> int | None:
+    """Columns as stated; one for a panel of few branches that states none."""
+    columns = maker.count("array_columns")
+    if columns is not None:
+        return columns
+    branches = maker.panel.get("transceivers", maker.band)
+    if branches is not None and not isinstance(branches.value, str) and branches.nominal > FEW_BRANCHES:
+        return None
+    maker.assumptions.append("One column: the bid states no number of columns.")
+    return 1
 
 
 def _groups(maker: _Maker) -> int:

@@ -68,7 +68,7 @@ def sidelobes_fit_beamwidth(
     rows = round(array_rows.nominal)
     if suppression is None or rows < 3 or suppression.low <= LEAST_CLAIM_DB:
         return None
-    model = model_of(case)
+    model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     freq_hz = claim_freq_hz(vertical_beamwidth, model)
@@ -188,7 +188,7 @@ def sidelobes_over_tilt(
     suppression = strictest(sidelobe_suppression, upper_sidelobe_peak_to_20, upper_sidelobe_suppression)
     if suppression is None:
         return None
-    model = model_of(case)
+    model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     stated = tilt_span_deg(electrical_tilt, vertical_scan)

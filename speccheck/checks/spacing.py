@@ -73,7 +73,7 @@ def horizontal_spacing(
     """
     if round(array_columns.nominal) < 2:
         return None
-    model = model_of(case)
+    model = model_of(case, "horizontal")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     ends = span_deg(horizontal_scan)
@@ -84,7 +84,9 @@ def horizontal_spacing(
         return None
     steering = Steering(ends or (0.0, 0.0), True, horizontal_scan)
     lobe = strongest(model, steering, subarrays=False)
-    broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=(sidelobe_suppression,))
+    broken = broken_claims(
+        lobe, grating_lobes=grating_lobes, suppressions=(sidelobe_suppression,), horizontal=True
+    )
     return _judged(model, steering, pitch, broken, lobe)
 
 
@@ -130,7 +132,7 @@ def vertical_spacing(
     """
     if round(array_rows.nominal) < 2:
         return None
-    model = model_of(case)
+    model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
     pitch = _pitch(case, "vertical_element_spacing")
@@ -140,7 +142,7 @@ def vertical_spacing(
     steering = Steering(stated[0] if stated else (0.0, 0.0), False, stated[1] if stated else None)
     lobe = strongest(model, steering, subarrays=False)
     suppressions = (sidelobe_suppression, every_lobe(upper_sidelobe_suppression))
-    broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=suppressions)
+    broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=suppressions, horizontal=False)
     return _judged(model, steering, pitch, broken, lobe)
 
 

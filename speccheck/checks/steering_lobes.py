@@ -21,6 +21,9 @@ HARD_DB, SOFT_DB = -3.0, -8.0
 ORDINARY_SIDELOBE_DB = -13.3
 """First side lobe of a uniform line [dB]: a lobe below it is not distinct (any antenna handbook)."""
 
+WIDEST_TILT_DEG = 30.0
+"""Angles beyond it in a claim are angles of azimuth: no panel is tilted so far (common practice)."""
+
 FAR_PITCH_WL = 6.0
 """Pitch [wavelengths] from which the next lobe is within ten degrees of the beam: no search needed."""
 
@@ -151,20 +154,23 @@ def claimed_freedom(grating_lobes: Reading | None) -> tuple[float | None, float 
 
 
 def broken_claims(
-    lobe: Lobe, *, grating_lobes: Reading | None, suppressions: tuple[Reading | None, ...]
+    lobe: Lobe,
+    *,
+    grating_lobes: Reading | None,
+    suppressions: tuple[Reading | None, ...],
+    horizontal: bool,
+    distinct_db: float = ORDINARY_SIDELOBE_DB,
 ) -> list[str]:
-    """The bid's own claims that the lobe breaks, in words."""
+    """The bid's own claims that the lobe breaks, in words; from `distinct_db` [dB] on it counts as one."""
     if not lobe.visible or not lobe.present:
         return []
     broken: list[str] = []
     freedom = claimed_freedom(grating_lobes)
-    if (
-        freedom is not None
-        and grating_lobes is not None
-        and (freedom[0] is None or abs(lobe.scan_deg) <= freedom[0])
-    ):
-        allowed = freedom[1] if freedom[1] is not None else ORDINARY_SIDELOBE_DB
-        if lobe.level_db > allowed:
+    if freedom is not None and grating_lobes is not None:
+        angle_deg, allowed_db = freedom
+        in_azimuth = angle_deg is not None and angle_deg > WIDEST_TILT_DEG
+        meant = angle_deg is None or (abs(lobe.scan_deg) <= angle_deg and (horizontal or not in_azimuth))
+        if meant and lobe.level_db > (distinct_db if allowed_db is None else allowed_db):
             broken.append(f"the claim '{grating_lobes.value}' ({grating_lobes.where})")
     broken += [named(s) for s in suppressions if s is not None and -lobe.level_db < s.low - 0.5]
     return broken
