@@ -102,7 +102,7 @@ def _attachments(assessment: Assessment, bid: Path) -> tuple[Attachment, ...]:
             name=f"{stem}{SUFFIXES['xlsx']}",
             content=review_bytes(assessment),
             description="Review workbook",
-            relationship="Alternative",
+            relationship="Supplement",
         ),
         Attachment(
             name=bid.name,

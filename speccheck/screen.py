@@ -49,7 +49,7 @@ def _blocks(reasons: Sequence[str]) -> str:
     return plain(reasons[0], 200) + more
 
 
-def _table(head: tuple[str, ...], rows: list[tuple[str, ...]]) -> str:
+def _table(head: tuple[str, ...], rows: Sequence[tuple[str, ...]]) -> str:
     widths = [max(len(row[i]) for row in [head, *rows]) for i in range(len(head) - 1)]
     last = max(20, _WIDTH - sum(widths) - 2 * len(widths))
 
