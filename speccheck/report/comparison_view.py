@@ -163,12 +163,14 @@ def _counts(evaluation: Evaluation, offer: Offer) -> tuple[int, int, int, int, i
 
 
 def lines(evaluation: Evaluation, columns: Sequence[Column], level: Level) -> Iterator[Line]:
-    """Lines of one level, in tender order; requirements that set rules have no line."""
+    """Lines of one level, in tender order; rules that judge no row have no line."""
     requirements = evaluation.tender.requirements if evaluation.tender else ()
     grouped = [_by_requirement(column.offer) for column in columns]
     for index, requirement in enumerate(requirements):
-        if requirement.level is level and requirement.operator not in ("rule", "after award"):
-            entries = tuple(_entry(cells.get(index, ())) for cells in grouped)
+        entries = tuple(_entry(cells.get(index, ())) for cells in grouped)
+        if requirement.level is level and (
+            requirement.operator not in ("rule", "after award") or any(entries)
+        ):
             yield Line(index=index, requirement=requirement, entries=entries)
 
 

@@ -18,6 +18,7 @@ from speccheck.records import (
 )
 from speccheck.records.demands import blocked
 from speccheck.tender.capabilities import covers_bands, covers_range
+from speccheck.tender.caps import capped
 from speccheck.tender.conditions import at_demanded_tilt, comparable
 from speccheck.tender.deviations import with_deviation
 from speccheck.tender.doubts import marked
@@ -46,7 +47,7 @@ def judge(tender: Tender, panel: Panel, findings: Sequence[Finding]) -> tuple[Ma
             continue
         for row in _rows(requirement, panel, tender.settings):
             rows.append(with_deviation(marked(row, findings), tender, panel))
-    return tuple(rows)
+    return (*rows, *capped(tender.requirements, rows))
 
 
 def _rows(requirement: Requirement, panel: Panel, settings: Settings) -> Iterator[MatrixRow]:

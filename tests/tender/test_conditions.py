@@ -16,11 +16,13 @@ from speccheck.records import (
     Finding,
     Fit,
     Interval,
+    Level,
     MatrixRow,
+    Outcome,
     Reading,
     Requirement,
 )
-from speccheck.tender import judge
+from speccheck.tender import judge, outcome
 from tender.panels import demand, panel, says, tender
 
 LOW, HIGH = (694.0, 960.0), (1695.0, 2690.0)
@@ -142,3 +144,29 @@ def test_a_level_in_dbm_is_held_against_a_limit_in_dbc_at_the_test_power() -> No
 def test_maximum_power_names_a_capability_and_bounds_nothing() -> None:
     row = _row(demand("max_power_per_port", "≥", 200.0), says("max_power_per_port", 250.0, sense="max"))
     assert row.verdict is Compliance.MEETS
+
+
+@pytest.mark.parametrize(
+    ("weights", "verdict", "rejected"),
+    [
+        ((24.0, 24.0), "meets", False),
+        ((26.0, 24.0), "meets", False),
+        ((26.0, 31.0), "fails", True),
+        ((26.0, None), "not judged", False),
+    ],
+)
+def test_a_cap_on_negative_deviations_counts_missed_wishes(
+    weights: tuple[float, float | None], verdict: str, rejected: bool
+) -> None:
+    """'★ marked items: any negative deviation rejects; others at most 1', two wishes of 25 and 30 kg."""
+    rule = demand("gain", "rule", "negative deviations ≤ 1", "", clause="9")
+    wishes = [
+        demand(key, "≤", limit, level=Level.DESIRABLE, clause=key)
+        for key, limit in (("weight", 25.0), ("mounting_kit_weight", 30.0))
+    ]
+    keys = ("weight", "mounting_kit_weight")
+    said = [says(key, w) for key, w in zip(keys, weights, strict=True) if w is not None]
+    rows = judge(tender(rule, *wishes), panel(*said), ())
+    assert rows[-1].requirement is rule
+    assert rows[-1].verdict.value == verdict
+    assert (outcome((), rows)[0] is Outcome.REJECT) is rejected

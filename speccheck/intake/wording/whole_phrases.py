@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import re
+from dataclasses import replace
 
 from speccheck.intake.wording.clauses import Clause
 from speccheck.records import Level
@@ -59,6 +60,8 @@ def _knock_out(text: str) -> Clause | None:
         return None
     cap = _CAP.search(text)
     clause = _rule(text, limit=f"negative deviations ≤ {cap[1]}" if cap else "negative deviations")
+    if cap:
+        clause = replace(clause, level=Level.MANDATORY)
     return clause.doubting("LEVEL", detail="whether the cap counts per panel or per bid is not stated")
 
 
