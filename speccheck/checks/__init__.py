@@ -9,7 +9,7 @@ from speccheck.checks import plausibility
 from speccheck.checks import spacing, lattices
 from speccheck.checks import gain, gain_widths, gain_runs
 from speccheck.checks import beamwidth, beamwidth_box
-from speccheck.checks import sidelobes, scan
+from speccheck.checks import sidelobes, tapers, scan
 from speccheck.checks import housing, ports, connectors, layers
 from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
 from speccheck.checks import frequency_unit, bands, duplex, directions
@@ -21,7 +21,8 @@ from speccheck.checks.runner import examine
 # isort: on
 
 FAMILIES = (
-    plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box, sidelobes, scan,
+    plausibility, spacing, lattices, gain, gain_widths, gain_runs, beamwidth, beamwidth_box,
+    sidelobes, tapers, scan,
     housing, ports, connectors, layers,
     power, power_array, power_budget, losses, matching, intermodulation,
     frequency_unit, bands, duplex, directions, wind, mechanics, exposure, wording,
