@@ -10,6 +10,14 @@ from speccheck.records import Requirement, Tender, Value
 from speccheck.text import plain
 
 _WIDTH = 100
+_WITHOUT_PARAMETER = {
+    "rule": "rule for other rows:",
+    "baseline": "as good as another offer's figures:",
+    "condition": "under a condition:",
+    "after award": "test after award:",
+    "information": "to be stated by the bidder",
+}
+_SPOKEN = {"evidence": "papers or statement:", "text": "named:", "information": "for information"}
 
 
 def tender_listing(tender: Tender) -> str:
@@ -56,8 +64,8 @@ def reading_of(requirement: Requirement) -> str:
     """The requirement as understood: parameter, operator, limit with unit, statistic, bands, scope."""
     known = parameters().get(requirement.parameter)
     parts = [
-        known.label if known else requirement.parameter or "parameter not understood",
-        requirement.operator,
+        known.label if known else _WITHOUT_PARAMETER.get(requirement.operator, "parameter not understood"),
+        _SPOKEN.get(requirement.operator, requirement.operator) if known else "",
         _limit(requirement.limit),
         requirement.unit,
         f"({requirement.statistic})" if requirement.statistic else "",
