@@ -22,6 +22,7 @@ from speccheck.dictionary.parameters import parameters
 from speccheck.quantities import split_footnotes, tidy
 
 _LONGEST_HEADING = 160
+_SIDES = frozenset({"f", "l", "s", "r"})
 _STATISTICS = ("max", "min", "typical", "mean")
 _NUMBERING = re.compile(r"^\s*(?:(?:\d{1,2}\.)+\d{0,2}\.?\s+|\(?\d{1,2}[.)]\s+|\(?[a-zA-Z]\)\s+|[-•*·▪–]\s+)")
 
@@ -78,9 +79,9 @@ def specified(key: str, condition: str) -> str:
     words = " ".join(
         word for word in condition.split(", ", maxsplit=1)[0].split() if not any(c.isdigit() for c in word)
     )
-    if not words or not word_list("vital").intersection(fold(words)):
+    if not words or not (word_list("vital") | _SIDES).intersection(fold(words)):
         return key
-    name = parameters()[key].label.split(",")[0]
+    name = parameters()[key].label.split(",")[0].replace(" per port", "")
     found = match_heading(f"{name} {words}", suggest=False).parameters
     same_unit = len(found) == 1 and parameters()[found[0]].unit == parameters()[key].unit
     return found[0] if same_unit else key

@@ -115,6 +115,8 @@ class _Reader:
                 pending.joined = _JOINING[kind]
         elif kind == "word":
             pending.words.append(token.text)
+        elif kind == "unit" and self._found and not self._found[-1].unit:
+            self._found[-1].unit = token.value
 
     def _settle_words(self, keep: bool = False) -> None:
         """Words up to a comma or a closing bracket belong to the amount before them."""
@@ -175,7 +177,7 @@ class _Reader:
 
     def _range(self, found: Amount) -> None:
         signed = 1 + (self._kind(1) in ("minus", "plus"))
-        if self._kind() == "range" and self._kind(signed) == "num":
+        if self._kind() == "range" and self._kind(signed) == "num" and self._same_kind(found, signed + 1):
             self._at += 1
             found.high, spelled = self._number()
             found.spelled += "-" + spelled
@@ -185,6 +187,11 @@ class _Reader:
             self._at += 1
             found.high, _ = self._number()
             found.unit = self._unit() or found.unit
+
+    def _same_kind(self, found: Amount, ahead: int) -> bool:
+        """'65° -3 dB' is no range: the ends are of two kinds."""
+        upper = self._tokens[self._at + ahead].value if self._kind(ahead) == "unit" else ""
+        return not upper or not found.unit or dimension(upper) == dimension(found.unit)
 
     def _between(self) -> bool:
         return any(token.kind == "from" for token in self._tokens[: self._at])
@@ -212,8 +219,13 @@ class _Reader:
 
     def _tolerance_fits(self, found: Amount, bracket: bool) -> bool:
         """'> 10 dB (±60°)' names a place; '300 W ± 1 dB' and '65 ± 5 %' are tolerances."""
+        if self._kind(bracket) != "pm" or self._kind(1 + bracket) != "num":
+            return True
         index = self._at + 2 + bracket
         unit = self._tokens[index].value if self._kind(2 + bracket) == "unit" else ""
+        size = numeral(self._tokens[self._at + 1 + bracket].text, comma=self._comma) if bracket else None
+        if size is not None and not found.unit and size > abs(found.low):
+            return False
         same = dimension(unit) == dimension(found.unit)
         return not unit or not found.unit or same or unit in ("%", "dB")
 

@@ -8,8 +8,8 @@ from datetime import date
 from speccheck.quantities.content import Quantity
 
 _GENDER = (
-    "female|male|long neck|buchse|stecker|kupplung|femelle|mâle|hembra|macho|femmina|maschio|fêmea|"
-    "żeńskie|męskie|vrouwelijk|mannelijk|socket|jack|plug|f\\b|m\\b"
+    r"long\s?neck\s?female|female\s?long\s?neck|female|male|long\s?neck|buchse|stecker|kupplung|femelle|mâle"
+    r"|hembra|macho|femmina|maschio|fêmea|żeńskie|męskie|vrouwelijk|mannelijk|socket|jack|plug|f\b|m\b"
 )
 # Interfaces by the names of IEC 61169 parts and of the trade; '4.3-10' is a name, not a range.
 _CONNECTOR = re.compile(
@@ -36,15 +36,17 @@ _CALIBRATION = re.compile(
 )
 _CONTROL = re.compile(_PLUS + r"(?:ret|control|aisg|steuer\w*|8-pin|din-8)[^,;+]*", re.IGNORECASE)
 _PORTS = re.compile(
-    r"(\d{1,4})\s*(?:ports?|connectors?|pcs|stk|anschlüsse|connecteurs|puertos|conectores|connettori|porte|portas"
+    r"(\d{1,4})(?![.,\d])\s*(?:ports?|connectors?|pcs|stk|anschlüsse|connecteurs|puertos|conectores|connettori|porte|portas"
     r"|złącz\w*|poorten|[x×])?",
     re.IGNORECASE,
 )
+_SUM = re.compile(r"\d{1,3}(?:\s*[^\W\d]{1,8})?(?:\s*\+\s*\d{1,3}(?:\s*[^\W\d]{1,8})?)+")
+_CHAINS = re.compile(r"(\d{1,3})\s?T\s?/?\s?(\d{1,3})\s?R", re.IGNORECASE)
 _PRODUCT = re.compile(r"^(\d{1,3})\s*[x×*]\s*(\d{1,3})(?:\s*=\s*(\d{1,4}))?(?![\d.,-])")
 
 _TWO = re.compile(
     r"""
-    ± | \+\s*45 | 45\s*°?\s*/\s*-\s*45 | x-?pol | cross-?pol | crossed | dual | slant | orthogonal | two
+    ± | ^x$ | \+\s*45 | 45\s*°?\s*/\s*-\s*45 | x-?pol | cross-?pol | crossed | dual | slant | orthogonal | two
     | zwei | doppel | kreuz | double | croisée | doble | cruzada | doppia | incrociata | dupla | podwójna
     | krzyżowa | dubbel | kruis | h\s*[/+&]\s*v | v\s*[/+&]\s*h | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
     | horizontal\s*(?:and|[&/+])\s*vertical | vertical\s*(?:and|[&/+])\s*horizontal
@@ -57,7 +59,7 @@ _ONE = re.compile(
     re.IGNORECASE,
 )
 _LEADING_COUNT = re.compile(
-    r"(\d{1,2})(?!\s*[\d.,°])\s*(?:$|[(x×,;:]|lin|pol|slant|orth|planes?)", re.IGNORECASE
+    r"([1-4])(?!\s*[\d.,°])\s*(?:$|[(x×,;:]|lin|pol|slant|orth|planes?)", re.IGNORECASE
 )
 
 
@@ -139,6 +141,12 @@ def _type_name(match: re.Match[str]) -> str:
 
 
 def _untyped(text: str) -> tuple[float | None, str]:
+    summands = _SUM.fullmatch(text.split("(", maxsplit=1)[0].strip())
+    if summands:
+        return float(sum(int(n) for n in re.findall(r"(?<![\w.])\d{1,3}(?![\w.])", summands.group()))), ""
+    chains = _CHAINS.fullmatch(text.strip())
+    if chains and chains.group(1) == chains.group(2):
+        return float(chains.group(1)), ""
     product = _PRODUCT.match(text)
     if product:
         first, second, stated = product.groups()

@@ -9,6 +9,7 @@ from dataclasses import replace
 from datetime import date, datetime, time, timedelta
 
 from speccheck.quantities.amounts import Amount, amounts
+from speccheck.quantities.assumptions import time_share, with_usual_unit
 from speccheck.quantities.attachments import connectors, polarisations
 from speccheck.quantities.content import CellContent, Quantity
 from speccheck.quantities.counts import count_of_claims, special_count
@@ -17,6 +18,7 @@ from speccheck.quantities.decimals import Expected, Span, choose
 from speccheck.quantities.figures import Claim, claims, quantity, unread_words
 from speccheck.quantities.lexer import Token, tokens
 from speccheck.quantities.numerals import numeral
+from speccheck.quantities.ranges import one_range, scan_range
 from speccheck.quantities.spectrum import band_names, bands
 from speccheck.quantities.statuses import declares, is_error_value, status_of
 from speccheck.quantities.tidy import split_footnotes, tidy
@@ -25,7 +27,7 @@ from speccheck.quantities.units import unit_name
 Raw = str | float | int | bool | datetime | date | time | timedelta | None
 
 _LONGEST_TEXT = 1000
-_WIDEST_HALF_SCAN_DEG = 90.0
+_POLARISATIONS = (1, 2, 3, 4)
 _PLAIN = re.compile(r"-?[0-9]{1,4}(?:[.,][0-9]{1,2})?")
 _FORMAT_UNIT = re.compile(r'["\[ \\]([^"\]\\;]+?)["\]\\;]*$')
 
@@ -67,7 +69,7 @@ def read_cell(
     if isinstance(raw, datetime | date):
         return undo_date(raw, kind, wanted.unit, plausible)
     if isinstance(raw, int | float):
-        return _read_number(float(raw), wanted, number_format)
+        return with_usual_unit(_read_number(float(raw), wanted, number_format), wanted)
     return CellContent(rest=str(raw), notes=("a time of day, not a figure",))
 
 
@@ -78,6 +80,8 @@ def _read_number(number: float, wanted: Expected, number_format: str) -> CellCon
         return CellContent(quantities=(Quantity(value=f"{number:.15g}"),))
     if wanted.kind == "connectors":
         return CellContent(quantities=(Quantity(value=number, parameter="rf_ports"),))
+    if wanted.kind == "polarisation" and number not in _POLARISATIONS:
+        return CellContent(rest=f"{number:g}", notes=("not a number of polarisations",))
     unit = wanted.unit
     if number_format and number_format != "General":
         if "%" in number_format and '"' not in number_format:
@@ -95,7 +99,8 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
         note = f"longer than {_LONGEST_TEXT} characters: not read as a figure"
         return CellContent(rest=raw[:_LONGEST_TEXT], notes=(note,))
     if wanted.kind == "number" and _PLAIN.fullmatch(raw):
-        return CellContent(quantities=(Quantity(value=float(raw.replace(",", ".")), unit=wanted.unit),))
+        plain = Quantity(value=float(raw.replace(",", ".")), unit=wanted.unit)
+        return with_usual_unit(CellContent(quantities=(plain,)), wanted)
     if is_error_value(raw):
         return CellContent(rest=raw.strip(), notes=("an error value of the spreadsheet",))
     status = status_of(tidy(raw), answers_count=wanted.kind != "text")
@@ -105,7 +110,7 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     text = tidy(body)
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
-    content = _read_figures(text, wanted)
+    content = time_share(text, wanted) or with_usual_unit(_read_figures(text, wanted), wanted)
     if not content.quantities and not content.rest:
         content = replace(content, rest=text or raw.strip())
     return replace(content, footnotes=marks, status="declared" if declares(text) else None)
@@ -148,8 +153,10 @@ def _figures(found: list[Amount], wanted: Expected) -> list[Quantity]:
     read = claims(found, wanted.unit, wanted.parameter_unit)
     symmetric = wanted.kind in ("range", "scan")
     result = [quantity(c, wanted.unit, wanted.parameter_unit or "", symmetric=symmetric) for c in read]
+    if symmetric:
+        result = one_range(result)
     if wanted.kind == "scan":
-        return [_scan(q) for q in result]
+        return [scan_range(q) for q in result]
     return count_of_claims(read, result) if wanted.kind == "count" else result
 
 
@@ -157,14 +164,3 @@ def _sizes(found: list[Amount], unit: str) -> list[Quantity]:
     """One quantity a factor of '1998 × 356 × 115 mm', in order; figures in parentheses are left out."""
     plain = [a for a in found if a.role == ""] or found
     return [quantity(Claim(a), unit) for a in plain]
-
-
-def _scan(found: Quantity) -> Quantity:
-    """A scan range without its ends: over 90° it can only be the total, else both readings stand."""
-    if not isinstance(found.value, float) or found.sense != "nominal" or found.value <= 0:
-        return found
-    half = (-found.value / 2, found.value / 2)
-    if found.value > _WIDEST_HALF_SCAN_DEG:
-        return replace(found, value=half, condition=found.condition or "total")
-    whole = (-found.value, found.value)
-    return replace(found, value=whole, alternatives=(whole, half))

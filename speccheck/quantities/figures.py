@@ -20,6 +20,9 @@ _COMPATIBLE = {
 }
 _RESTATED_WITHIN = 0.02
 _MOST_IN_PRODUCT = 512
+_NEVER_IN_HUNDREDS = ("gain", "level", "carrier level", "angle", "")
+_LOWEST_BAND_MHZ, _HIGHEST_BAND_MHZ = 400.0, 7125.0
+_CARRIER_DBM = 43.0
 
 
 @dataclass(slots=True)
@@ -41,6 +44,10 @@ def claims(found: list[Amount], unit: str, expected: str | None) -> list[Claim]:
     expected : unit of the parameter, "" for a pure number, None where it is not known
     """
     wanted = _wanted(found, unit, expected)
+    if wanted in _NEVER_IN_HUNDREDS:
+        for amount in found:
+            if not amount.unit and amount.high is not None and _looks_like_band(amount.low, amount.high):
+                amount.unit = "MHz"
     result: list[Claim] = []
     for labels, values in _labelled(found):
         here = _plain_claims(values, wanted)
@@ -133,10 +140,14 @@ def _plain_claims(values: list[Amount], wanted: str) -> list[Claim]:
     result: list[Claim] = []
     waiting: list[Amount] = []
     factors: tuple[float, ...] = ()
+    own_units = len({id(a) for a in values if a.joined == "" and a.role == ""}) <= 2
     for index, amount in enumerate(values):
         following = values[index + 1] if index + 1 < len(values) else None
         if following is not None and following.joined == "×" and _is_count(amount):
             factors = (*factors, amount.low)
+            continue
+        if result and _stands_apart(amount, own_units=own_units):
+            result[-1].conditions.append(amount)
             continue
         carriers = bool(factors) and wanted == "carrier level"
         if carriers or amount.role == "at" or not answers(amount.unit, wanted):
@@ -151,19 +162,31 @@ def _plain_claims(values: list[Amount], wanted: str) -> list[Claim]:
     return result
 
 
+def _stands_apart(amount: Amount, *, own_units: bool) -> bool:
+    """A bare number in parentheses or simply beside the figure is no figure of the parameter."""
+    if amount.unit or amount.sense or amount.statistic or amount.high is not None or amount.plusminus:
+        return False
+    if amount.role == "aside":
+        return not amount.joined and not word_set("extent").intersection(w.casefold() for w in amount.words)
+    return own_units and amount.joined == "" and amount.role == "" and not amount.before
+
+
+def _looks_like_band(low: float, high: float) -> bool:
+    return _LOWEST_BAND_MHZ <= low < high <= _HIGHEST_BAND_MHZ
+
+
 def _is_count(amount: Amount) -> bool:
     return amount.high is None and amount.low.is_integer() and 0 < amount.low <= _MOST_IN_PRODUCT
 
 
 def _share_conditions(result: list[Claim]) -> None:
     """'16.5/17.0 dBi for 1710-1880/1850-1990 MHz' zips; '300/200 N at 150 km/h' holds for both."""
-    if (
-        len(result) < 2
-        or any(c.conditions for c in result[:-1])
-        or any(c.amount.joined != "/" for c in result[1:])
-    ):
+    if len(result) < 2 or any(c.conditions for c in result[:-1]):
         return
     shared = result[-1].conditions
+    slashes = all(c.amount.joined == "/" for c in result[1:])
+    if not slashes and not (len(shared) == 1 and dimension(shared[0].unit) == "speed"):
+        return
     if len(shared) == len(result):
         for claim, condition in zip(result, list(shared), strict=True):
             claim.conditions = [condition]
@@ -185,6 +208,10 @@ def _without_restatements(result: list[Claim]) -> list[Claim]:
 def _restates(first: Amount, second: Amount) -> bool:
     if not second.unit or first.unit == second.unit or first.high is not None or second.high is not None:
         return False
+    if (first.unit, second.unit) == ("dBc", "dBm"):
+        return math.isclose(second.low - first.low, _CARRIER_DBM, abs_tol=0.1)
+    if second.unit == "λ" and second.role == "aside":
+        return True
     try:
         again = convert(second.low, second.unit, first.unit)
     except UnknownUnitError:

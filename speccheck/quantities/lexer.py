@@ -49,9 +49,10 @@ def tokens(text: str) -> list[Token]:
     found: list[Token] = []
     position = 0
     while position < len(text):
-        if found and found[-1].kind == "num":
+        if found and found[-1].kind in ("num", "close", "open"):
             unit = _UNIT.match(text, position)
-            if unit and unit_name(unit.group()):
+            alone = found[-1].kind != "open" or (unit and text[unit.end() : unit.end() + 1] in ("]", ")"))
+            if unit and alone and unit_name(unit.group()):
                 found.append(Token("unit", unit.group().strip(), unit_name(unit.group())))
                 position = unit.end()
                 continue

@@ -41,6 +41,7 @@ _REPLACEMENTS: tuple[tuple[re.Pattern[str], str], ...] = (
     (re.compile(r"<\s?=|=\s?<"), "≤"),
     (re.compile(r"\+\s?/\s?-|-\s?/\s?\+|\+-"), "±"),
     (re.compile(r"''"), '"'),
+    (re.compile(r"(?<=\s)--(?=\s)"), "-"),
     (re.compile(r"[ \r\f\v]+"), " "),
 )
 _TEXT_MARK = re.compile(r"^'(?=[\d+±≥≤<>-])")
