@@ -39,11 +39,18 @@ def examine(panel: Panel, settings: Settings) -> tuple[Finding, ...]:
 def run_checks(panel: Panel, settings: Settings) -> tuple[Finding, ...]:
     """The findings of a panel as it stands, without trying any other reading of it."""
     usable = replace(panel, readings=tuple(r for r in panel.readings if not impossible(r)))
+    spoken_of = _spoken_of(panel)
     found: list[Finding] = []
     for check in CHECKS.values():
+        if check.about and not any(key in spoken_of for key in check.about):
+            continue
         seen = panel if check.sees_impossible else usable
         bands: tuple[Band | None, ...] = (seen.bands or (None,)) if check.scope == "band" else (None,)
-        by_band = [list(_findings(check, Case(seen, band, settings), panel)) for band in bands]
+        by_band = [
+            list(_findings(check, Case(seen, band, settings), panel))
+            for band in bands
+            if not check.about or any(_in_band(spoken_of.get(key), band) for key in check.about)
+        ]
         found += _joined(list(itertools.chain.from_iterable(by_band)), len(bands))
     return tuple(found)
 
@@ -56,8 +63,6 @@ def _joined(findings: list[Finding], bands: int) -> list[Finding]:
 
 
 def _findings(check: Check, case: Case, panel: Panel) -> Iterator[Finding]:
-    if not any(_mentioned(panel, key, case.band) for key in check.about) and check.about:
-        return
     needed = {key: case.panel.get(key, case.band) for key in check.needs}
     extra = {key: case.panel.get(key, case.band) for key in check.optional}
     lacking = tuple(key for key, reading in needed.items() if reading is None)
@@ -149,10 +154,18 @@ def _reason(key: str, case: Case, panel: Panel) -> str:
     return f"{_label(key)} not stated"
 
 
-def _mentioned(panel: Panel, key: str, band: Band | None) -> bool:
-    entries: list[tuple[str, Band | None]] = [(r.parameter, r.band) for r in panel.readings]
-    entries += [(s.parameter, s.band) for s in panel.statements]
-    return any(name == key and (band is None or at in (band, None)) for name, at in entries)
+def _spoken_of(panel: Panel) -> dict[str, set[Band | None]]:
+    """The bands in which each parameter is stated, with or without a figure."""
+    bands: dict[str, set[Band | None]] = {}
+    for reading in panel.readings:
+        bands.setdefault(reading.parameter, set()).add(reading.band)
+    for statement in panel.statements:
+        bands.setdefault(statement.parameter, set()).add(statement.band)
+    return bands
+
+
+def _in_band(bands: set[Band | None] | None, band: Band | None) -> bool:
+    return bands is not None and (band is None or None in bands or band in bands)
 
 
 def _places(used: tuple[Reading, ...], panel: Panel) -> tuple[CellRef, ...]:
