@@ -4,9 +4,10 @@ models."""
 from __future__ import annotations
 
 import math
-from dataclasses import dataclass, replace
+from dataclasses import dataclass
 
 from speccheck.checks.beams import (
+    COLUMN_WIDTHS_DEG,
     BeamGain,
     Claims,
     beam_gains,
@@ -17,7 +18,7 @@ from speccheck.checks.beams import (
 )
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
-from speccheck.checks.saying import claim, figure, last_digit_slack
+from speccheck.checks.saying import claim, last_digit_slack
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.physics.expected import GainZone
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -87,24 +88,62 @@ def gain_fits_geometry(
     model = model_of(case)
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
-    if "element_gain_dbi" in gain.at:
-        return _against_short_formula(model, gain)
-    stated_columns = gain.at.get("beam_columns")
-    other_beam = horizontal_beamwidth is not None and "beam_columns" in horizontal_beamwidth.at
+    widths = _Widths(horizontal_beamwidth, vertical_beamwidth)
+    stated = [g for g in case.panel.all("gain", case.band) if not isinstance(g.value, str)] or [gain]
+    judged = [
+        _judged(
+            model,
+            one,
+            _beams_of(model, one, widths, electrical_tilt, declared_loss_db(one, feed_loss, efficiency)),
+        )
+        for one in stated
+    ]
+    return max(judged, key=lambda j: _SEVERITY[j.verdict])
+
+
+_SEVERITY = {Fit.FITS: 0, Fit.NOT_JUDGED: 0, Fit.DOUBTFUL: 1, Fit.DOES_NOT_FIT: 2}
+
+
+@dataclass(frozen=True, slots=True)
+class _Widths:
+    """The claimed half-power widths; figures [deg] as they are at another frequency of the band."""
+
+    horizontal: Reading | None
+    vertical: Reading | None
+
+    def horizontal_deg(self, model: Model, freq_hz: float) -> float | None:
+        """Width of an array beam falls with frequency, that of a single column stays."""
+        if self.horizontal is None or "beam_columns" in self.horizontal.at:
+            return None
+        width = number(self.horizontal)
+        fixed = model.layout.columns == 1 or (width is not None and width >= COLUMN_WIDTHS_DEG[0])
+        return width if fixed else self._at(model, self.horizontal, freq_hz)
+
+    def vertical_deg(self, model: Model, freq_hz: float) -> float | None:
+        """Width of the rows at a frequency [Hz]."""
+        return None if self.vertical is None else self._at(model, self.vertical, freq_hz)
+
+    @staticmethod
+    def _at(model: Model, width: Reading, freq_hz: float) -> float | None:
+        stated = number(width)
+        return None if stated is None else stated * claim_freq_hz(width, model) / freq_hz
+
+
+def _beams_of(
+    model: Model, gain: Reading, widths: _Widths, tilt: Reading | None, loss_db: float | None
+) -> list[tuple[Claims, BeamGain]]:
+    """The beams a gain may belong to, under the conditions it states."""
+    freq_hz = claim_freq_hz(gain, model)
+    columns = gain.at.get("beam_columns")
     claims = Claims(
-        freq_hz=claim_freq_hz(gain, model),
-        tilt_deg=rest_tilt_deg(gain, model, electrical_tilt),
-        horizontal_deg=None if other_beam else number(horizontal_beamwidth),
-        vertical_deg=number(vertical_beamwidth),
-        loss_db=declared_loss_db(gain, feed_loss, efficiency),
-        beam_columns=None if stated_columns is None else round(stated_columns),
+        freq_hz=freq_hz,
+        tilt_deg=rest_tilt_deg(gain, model, tilt),
+        horizontal_deg=widths.horizontal_deg(model, freq_hz),
+        vertical_deg=widths.vertical_deg(model, freq_hz),
+        loss_db=loss_db,
+        beam_columns=None if columns is None else round(columns),
     )
-    held = [(claims, beam) for beam in beam_gains(model, claims)]
-    if claims.freq_hz == model.high_hz and "frequency_mhz" not in gain.at:
-        # a best value may stand anywhere in the band, and the widths are usually those of mid band
-        middle = replace(claims, freq_hz=model.centre_hz)
-        held += [(middle, beam) for beam in beam_gains(model, middle)]
-    return _judged(model, gain, held)
+    return [(claims, beam) for beam in beam_gains(model, claims)]
 
 
 @dataclass(frozen=True, slots=True)
@@ -134,6 +173,8 @@ def _edges(model: Model, claims: Claims, beam: BeamGain) -> _Edges:
 
 
 def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) -> Judgement:
+    if "element_gain_dbi" in gain.at:
+        return _against_short_formula(model, gain)
     slack, value = last_digit_slack(gain), gain.nominal
     ranked = [(claims, beam, _edges(model, claims, beam)) for claims, beam in held]
     order = [GainZone.PLAUSIBLE, GainZone.LOW, GainZone.QUESTION, GainZone.IMPOSSIBLE]
@@ -167,7 +208,7 @@ def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) ->
         ),
         question="Please state the frequency, tilt and beam of the gain figure, whether it is measured at the"
         " connector, and the loss inside the panel.",
-        used=model.used,
+        used=(gain, *model.used),
     )
 
 
@@ -239,45 +280,4 @@ def _against_short_formula(model: Model, gain: Reading) -> Judgement:
         working=(Step("Short formula", f"{element:g} + 10·log10 {count}", round(short, 2), "dBi"),),
         assumptions=(f"Class {panel_class(model).value}.",),
         used=model.used,
-    )
-
-
-@check(
-    "gain-below-directivity",
-    "Gain stays below directivity",
-    needs=("gain", "directivity"),
-    about=("directivity",),
-    source="gain = efficiency × directivity (IEEE Std 145)",
-)
-def gain_below_directivity(gain: Reading, directivity: Reading) -> Judgement:
-    """Takes the gain off the stated directivity: what is left is the loss, and a loss is positive.
-
-    Formula
-    loss = D − G ≥ 0; a passive panel loses at least about 0.3 dB
-
-    Assumptions
-    Both figures are of the same beam, frequency and tilt.
-
-    Worked example
-    18.5 dBi gain beside 18.3 dBi directivity: a loss of -0.2 dB, does not fit.
-    """
-    loss = directivity.nominal - gain.nominal
-    slack = last_digit_slack(gain) + last_digit_slack(directivity)
-    verdict = Fit.DOES_NOT_FIT if loss < -slack else Fit.DOUBTFUL if loss < 0.2 else Fit.FITS
-    return Judgement(
-        verdict=verdict,
-        summary=f"{claim(gain)} gain beside {claim(directivity)} directivity: a loss of {loss:.1f} dB"
-        + ("." if verdict is Fit.FITS else ", less than any feed and radome leave."),
-        claimed=Amount(round(gain.nominal, 2), "dBi"),
-        expected=Interval(None, directivity.nominal, "dBi"),
-        working=(
-            Step(
-                "Loss",
-                f"{figure(directivity.nominal, 'dBi')} − {figure(gain.nominal, 'dBi')}",
-                round(loss, 2),
-                "dB",
-            ),
-        ),
-        assumptions=("Both figures are of the same beam, frequency and tilt.",),
-        question="Please state the loss between connector and radiated beam.",
     )

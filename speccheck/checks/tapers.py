@@ -1,4 +1,4 @@
-"""What low side lobes cost in gain."""
+"""What low side lobes and losses cost in gain."""
 
 from __future__ import annotations
 
@@ -7,7 +7,7 @@ from dataclasses import replace
 from speccheck.checks.beams import Claims, beam_gains, claim_freq_hz, declared_loss_db, rest_tilt_deg
 from speccheck.checks.model import Lacking, model_of
 from speccheck.checks.registry import Case, Judgement, check
-from speccheck.checks.saying import claim, last_digit_slack
+from speccheck.checks.saying import claim, figure, last_digit_slack
 from speccheck.checks.sidelobes import CLAIMS, LEAST_CLAIM_DB, strictest
 from speccheck.physics.taper import chebyshev, efficiency_db
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -102,4 +102,45 @@ def sidelobes_fit_gain(
         assumptions=("Gain and side lobes belong to one beam.", *model.assumptions),
         question="Please state gain and side lobes of the same beam: frequency, tilt and taper.",
         used=(suppression, *model.used),
+    )
+
+
+@check(
+    "gain-below-directivity",
+    "Gain stays below directivity",
+    needs=("gain", "directivity"),
+    about=("directivity",),
+    source="gain = efficiency × directivity (IEEE Std 145)",
+)
+def gain_below_directivity(gain: Reading, directivity: Reading) -> Judgement:
+    """Takes the gain off the stated directivity: what is left is the loss, and a loss is positive.
+
+    Formula
+    loss = D − G ≥ 0; a passive panel loses at least about 0.3 dB
+
+    Assumptions
+    Both figures are of the same beam, frequency and tilt.
+
+    Worked example
+    18.5 dBi gain beside 18.3 dBi directivity: a loss of -0.2 dB, does not fit.
+    """
+    loss = directivity.nominal - gain.nominal
+    slack = last_digit_slack(gain) + last_digit_slack(directivity)
+    verdict = Fit.DOES_NOT_FIT if loss < -slack else Fit.DOUBTFUL if loss < 0.2 else Fit.FITS
+    return Judgement(
+        verdict=verdict,
+        summary=f"{claim(gain)} gain beside {claim(directivity)} directivity: a loss of {loss:.1f} dB"
+        + ("." if verdict is Fit.FITS else ", less than any feed and radome leave."),
+        claimed=Amount(round(gain.nominal, 2), "dBi"),
+        expected=Interval(None, directivity.nominal, "dBi"),
+        working=(
+            Step(
+                "Loss",
+                f"{figure(directivity.nominal, 'dBi')} − {figure(gain.nominal, 'dBi')}",
+                round(loss, 2),
+                "dB",
+            ),
+        ),
+        assumptions=("Both figures are of the same beam, frequency and tilt.",),
+        question="Please state the loss between connector and radiated beam.",
     )
