@@ -8,6 +8,7 @@ from __future__ import annotations
 
 import multiprocessing
 import os
+import signal
 from collections.abc import Iterator, Sequence
 from concurrent.futures import FIRST_COMPLETED, Future, ProcessPoolExecutor, wait
 from concurrent.futures.process import BrokenProcessPool
@@ -93,6 +94,8 @@ def _pool(jobs: int, rules: Rules) -> Iterator[ProcessPoolExecutor]:
 
 
 def _start(rules: Rules) -> None:
+    """An interrupt is for the parent: bids under way are finished, none is begun."""
+    signal.signal(signal.SIGINT, signal.SIG_IGN)
     _rules[:] = [rules]
 
 

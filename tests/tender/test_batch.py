@@ -101,17 +101,19 @@ def test_a_resumed_evaluation_compares_like_a_fresh_one(evaluation: Path, rules:
 
 
 @pytest.mark.slow
-def test_kill_9_leaves_whole_files_and_resume_finishes(evaluation: Path) -> None:
+@pytest.mark.parametrize("how", [signal.SIGKILL, signal.SIGINT])
+def test_a_killed_run_leaves_whole_files_and_resume_finishes(evaluation: Path, how: signal.Signals) -> None:
     script = evaluation / "run.py"
     script.write_text(RUN, encoding="utf-8")
     command = [sys.executable, str(script), str(evaluation)]
     with subprocess.Popen(
-        [*command, "2"], stdout=subprocess.PIPE, text=True, start_new_session=True
+        [*command, "2"], stdout=subprocess.PIPE, stderr=subprocess.DEVNULL, text=True, start_new_session=True
     ) as first:
         assert first.stdout is not None
         for _ in range(2):
             first.stdout.readline()
-        os.killpg(first.pid, signal.SIGKILL)
+        os.killpg(first.pid, how)
+    assert first.returncode != 0
     before = _whole(evaluation / "out")
     assert 0 < len([name for name in before if name.endswith(".json")]) < len(BIDS) + 1
     again = subprocess.run([*command, "1", "resume"], stdout=subprocess.PIPE, text=True, check=True)
