@@ -7,9 +7,8 @@ A term is matched whole, in any case and with any spacing; the longest match at 
 from __future__ import annotations
 
 import functools
-import re
 import tomllib
-from collections.abc import Iterable, Mapping
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from enum import StrEnum
 from importlib import resources
@@ -42,16 +41,34 @@ class Kind(StrEnum):
 
 @dataclass(frozen=True, slots=True)
 class Vocabulary:
-    """Terms of one kind: folded term to what it says, and the pattern that finds any of them."""
+    """Terms of one kind: folded term to what it says, and the lengths to try by first letter, longest first.
+
+    Looked up, not searched: a pattern of all names of parameters takes longer to compile than a bid to judge.
+    """
 
     kind: Kind
     meaning: Mapping[str, str]
-    pattern: re.Pattern[str]
+    lengths: Mapping[str, tuple[int, ...]]
 
     def match(self, text: str, start: int) -> tuple[str, str] | None:
         """Longest term beginning at `start`, with its meaning."""
-        found = self.pattern.match(text, start)
-        return (found.group(), self.meaning[fold(found.group())]) if found else None
+        folded, at, origin = _folded_text(text)
+        first = at[start]
+        for length in self.lengths.get(folded[first : first + 1], ()):
+            last = first + length
+            said = self.meaning.get(folded[first:last]) if last < len(origin) else None
+            if said is not None and _stands_alone(text, start, origin[last]):
+                return text[start : origin[last]], said
+        return None
+
+    def finditer(self, text: str) -> Iterator[tuple[int, str]]:
+        """Place and text of each term, from left to right, none within another."""
+        place = 0
+        while place < len(text):
+            found = None if text[place].isspace() else self.match(text, place)
+            if found:
+                yield place, found[0]
+            place += len(found[0]) if found else 1
 
 
 def fold(term: str) -> str:
@@ -60,18 +77,51 @@ def fold(term: str) -> str:
 
 
 def vocabulary(kind: Kind, meaning: Mapping[str, str]) -> Vocabulary:
-    """Compile terms so that the longest alternative is tried first."""
+    """Terms made ready to be found in any case and spacing."""
     folded = {fold(term): said for term, said in meaning.items() if term.strip()}
-    ordered = sorted(folded, key=len, reverse=True)
-    pattern = "|".join(_as_pattern(term) for term in ordered) or r"(?!)"
-    return Vocabulary(kind, folded, re.compile(pattern, re.IGNORECASE))
+    lengths: dict[str, set[int]] = {}
+    for term in folded:
+        lengths.setdefault(term[0], set()).add(len(term))
+    ordered = {first: tuple(sorted(found, reverse=True)) for first, found in lengths.items()}
+    return Vocabulary(kind, folded, ordered)
 
 
-def _as_pattern(term: str) -> str:
-    body = r"\s+".join(re.escape(word) for word in term.split())
-    before = r"(?<!\w)" if term[0].isalnum() else ""
-    after = r"(?!\w)" if term[-1].isalnum() else ""
-    return f"{before}{body}{after}"
+@functools.lru_cache(maxsize=8)
+def _folded_text(text: str) -> tuple[str, tuple[int, ...], tuple[int, ...]]:
+    """A text folded, the folded place of each letter, and the letter of each folded place.
+
+    A letter that folds to two, such as ß, is never cut: no letter stands at its second place (-1).
+    """
+    folded: list[str] = []
+    at: list[int] = []
+    origin: list[int] = []
+    for place, letter in enumerate(text):
+        at.append(len(folded))
+        if letter.isspace():
+            if folded and folded[-1] == " ":
+                at[-1] -= 1
+                continue
+            folded.append(" ")
+            origin.append(place)
+        else:
+            folds = letter.casefold()
+            folded.extend(folds)
+            origin.extend((place, *(-1 for _ in folds[1:])))
+    at.append(len(folded))
+    origin.append(len(text))
+    return "".join(folded), tuple(at), tuple(origin)
+
+
+def _stands_alone(text: str, start: int, end: int) -> bool:
+    """Whether neither end of a term lies inside a word."""
+    if end <= start:
+        return False
+    runs_on = end < len(text) and _of_word(text[end]) and text[end - 1].isalnum()
+    return not runs_on and not (start and _of_word(text[start - 1]) and text[start].isalnum())
+
+
+def _of_word(letter: str) -> bool:
+    return letter.isalnum() or letter == "_"
 
 
 @functools.cache
@@ -112,20 +162,22 @@ def _parameter_vocabulary(house: tuple[tuple[str, str], ...]) -> Vocabulary:
         if key in _IDENTITIES:
             continue
         for terms in parameter.headings.values():
-            meaning.update(_new(terms, key, meaning))
+            _add(meaning, terms, key)
         meaning.setdefault(fold(parameter.label), key)
     for table in synonyms().values():
         for key, terms in table.items():
             if "+" in key and set(key.split("+")) <= parameters().keys():
-                meaning.update(_new(terms, key, meaning))
+                _add(meaning, terms, key)
     for key, listed in words()["parameter"].items():
         meaning.update({fold(term): key for term in listed})
     meaning.update({fold(term): key for term, key in house})
     return vocabulary(Kind.PARAMETER, meaning)
 
 
-def _new(terms: Iterable[str], key: str, known: Mapping[str, str]) -> dict[str, str]:
-    return {fold(term): key for term in terms if len(term) > 1 and fold(term) not in known}
+def _add(meaning: dict[str, str], terms: Iterable[str], key: str) -> None:
+    for term in terms:
+        if len(term) > 1:
+            meaning.setdefault(fold(term), key)
 
 
 def _inverted(lists: Mapping[str, list[str]]) -> dict[str, str]:

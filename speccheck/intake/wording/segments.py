@@ -143,8 +143,8 @@ def scope_of(found: Sequence[Token]) -> tuple[str, ...]:
         if token.kind is Kind.SCOPE or (token.kind is Kind.COMPARATOR and token.said == "best"):
             texts.append(token.text)
         elif token.kind is Kind.PARAMETER:
-            inside = scopes.pattern.finditer(token.text)
-            texts.extend(match.group() for match in inside if match.start() or named)
+            inside = scopes.finditer(token.text)
+            texts.extend(text for start, text in inside if start or named)
             named = True
     return tuple(texts)
 
