@@ -6,6 +6,7 @@ import re
 
 from speccheck.dictionary.folding import fold, heading_words, without_neutral, word_list
 from speccheck.dictionary.index import find, listed
+from speccheck.dictionary.parameters import parameters
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
 _BETWEEN = (
@@ -56,9 +57,9 @@ def _split(parts: list[str]) -> str:
     if together:
         return together
     keys = [listed(piece) for piece in pieces]
-    if all(keys) and len(set(keys)) == len(keys) and not any("+" in key for key in keys):
-        return "+".join(keys)
-    return ""
+    if not all(keys) or len(set(keys)) < len(keys) or any("+" in key for key in keys):
+        return ""
+    return "+".join(keys) if len({parameters()[key].unit for key in keys}) == 1 else ""
 
 
 def _same_kind(pieces: list[tuple[str, ...]]) -> str:

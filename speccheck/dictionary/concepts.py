@@ -18,6 +18,21 @@ from speccheck.dictionary.folding import fold, without_neutral
 
 _MOST_WORDS = 12
 _FILLER = "filler"
+_TELLING = frozenset(
+    {
+        "horizontal",
+        "vertical",
+        "upper",
+        "lateral",
+        "rear",
+        "element",
+        "subarray",
+        "column",
+        "row",
+        "percolumn",
+    }
+    | {"mechanical", "interband", "allports", "pertrx", "withbracket", "consumption", "tilt", "sector"}
+)
 
 
 @dataclass(frozen=True, slots=True)
@@ -90,6 +105,13 @@ def _phrases() -> dict[tuple[str, ...], tuple[str, ...]]:
             if words and concept not in table.get(words, ()):
                 table[words] = (*table.get(words, ()), concept)
     return table
+
+
+@functools.cache
+def telling_words() -> frozenset[str]:
+    """Single words of the concepts that tell one parameter from another."""
+    phrases = (phrase for phrase, concepts in _phrases().items() if _TELLING.intersection(concepts))
+    return frozenset(phrase[0] for phrase in phrases if len(phrase) == 1 and not phrase[0].isdigit())
 
 
 @functools.cache

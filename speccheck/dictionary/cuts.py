@@ -8,6 +8,7 @@ import re
 from collections.abc import Iterator
 from dataclasses import dataclass, replace
 
+from speccheck.dictionary.concepts import telling_words
 from speccheck.dictionary.folding import fold, heading_words, word_list
 from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN, unit_name
 
@@ -106,6 +107,12 @@ def _without_figures(cut: Cut) -> Cut:
 
 
 @functools.cache
+def vital_words() -> frozenset[str]:
+    """Words that may make another parameter of a heading: never left out."""
+    return word_list("vital").union(word_list("horizontal"), word_list("vertical"), telling_words())
+
+
+@functools.cache
 def _remarks() -> re.Pattern[str]:
     longest_first = sorted(heading_words()["remarks"], key=len, reverse=True)
     return re.compile(
@@ -130,7 +137,7 @@ def _without_notes(cut: Cut) -> Iterator[Cut]:
     brackets = [b.group(1).strip() for b in _BRACKETS.finditer(cut.text)]
     main, *others = [s.strip() for s in _SPLIT_NOTES.split(_BRACKETS.sub(" ", cut.text)) if s.strip()] or [""]
     notes = [n for n in (*others, *brackets) if n][:5]
-    droppable = [n for n in notes if not word_list("vital").intersection(fold(n))]
+    droppable = [n for n in notes if not vital_words().intersection(fold(n))]
     for size in range(1, len(droppable) + 1):
         for left_out in itertools.combinations(droppable, size):
             kept = [n for n in notes if n not in left_out]

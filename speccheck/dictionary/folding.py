@@ -12,6 +12,7 @@ from typing import Any
 _SPECIAL_LETTERS = str.maketrans(
     {"ł": "l", "ø": "o", "đ": "d", "œ": "oe", "æ": "ae", "ı": "i", "φ": "phi", "θ": "theta"}
 )
+_ELIDED = re.compile(r"\b(?:d|l|dell|all|dall|nell|sull|qu)['’]")
 _NOT_WORDS = re.compile(r"[^\w°±λ&]+|_")
 
 
@@ -62,7 +63,7 @@ def without_neutral(words: tuple[str, ...]) -> tuple[str, ...]:
 
 
 def _unaccented(text: str) -> str:
-    plain = text.replace("ß", "sz").casefold()
+    plain = _ELIDED.sub(" ", text.replace("ß", "sz").casefold())
     if plain.isascii():
         return plain
     plain = unicodedata.normalize("NFKD", plain.translate(_SPECIAL_LETTERS))
