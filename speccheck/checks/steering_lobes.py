@@ -94,12 +94,19 @@ def span_deg(reading: Reading | None) -> tuple[float, float] | None:
 
 
 def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[float, float], Reading] | None:
-    """Both ends [deg] of the claimed steering in the vertical plane, positive downwards."""
+    """Both ends [deg] of the claimed steering in the vertical plane, positive downwards, and the wider claim.
+
+    A tilt range and a vertical scan range are both claims: a lobe inside either counts.
+    """
+    claims: list[tuple[tuple[float, float], Reading]] = []
     if tilt is not None and not isinstance(tilt.value, str):
-        return (tilt.low, tilt.high), tilt
+        claims.append(((tilt.low, tilt.high), tilt))
     if scan is not None and (ends := span_deg(scan)):
-        return (-ends[1], -ends[0]), scan
-    return None
+        claims.append(((-ends[1], -ends[0]), scan))
+    if not claims:
+        return None
+    widest = max(claims, key=lambda claim: claim[0][1] - claim[0][0])
+    return (min(c[0][0] for c in claims), max(c[0][1] for c in claims)), widest[1]
 
 
 def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
