@@ -21,6 +21,8 @@ HARD_DB, SOFT_DB = -3.0, -8.0
 ORDINARY_SIDELOBE_DB = -13.3
 """First side lobe of a uniform line [dB]: a lobe below it is not distinct (any antenna handbook)."""
 
+PANEL_PLANE_DEG = 90.0
+
 WIDEST_TILT_DEG = 30.0
 """Angles beyond it in a claim are angles of azimuth: no panel is tilted so far (common practice)."""
 
@@ -85,12 +87,18 @@ class Lobe:
 
 
 def span_deg(reading: Reading | None) -> tuple[float, float] | None:
-    """Both ends [deg] of a steering range; a single figure is the end of a range to either side."""
+    """Both ends [deg] of a steering range; a single figure is the end of a range to either side.
+
+    An end beyond the panel plane can only be the whole width of the range, half of it to either side.
+    """
     if reading is None or isinstance(reading.value, str):
         return None
     if isinstance(reading.value, tuple):
-        return min(reading.value), max(reading.value)
-    return -abs(reading.value), abs(reading.value)
+        low, high = min(reading.value), max(reading.value)
+    else:
+        low, high = -abs(reading.value), abs(reading.value)
+    beyond = max(abs(low), abs(high)) > PANEL_PLANE_DEG
+    return (low / 2, high / 2) if beyond else (low, high)
 
 
 def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[float, float], Reading] | None:
