@@ -87,7 +87,11 @@ def assert_words(finding: Finding, case: CheckCase, said: str) -> None:
 def test_check_has_cases_and_a_worked_example(slug: str) -> None:
     mine = [case for case in CASES if case.check == slug]
     assert mine, f"tests/checks/{slug}.toml is missing"
-    assert any(case.worked_example for case in mine), f"{slug} has no case marked worked_example"
+    examples = [case for case in mine if case.worked_example]
+    assert examples, f"{slug} has no case marked worked_example"
+    assert all(case.expect.get("says") for case in examples), (
+        f"{slug}: its example ties no text to the docstring"
+    )
     verdicts = {case.expect["verdict"] for case in mine}
     assert len(verdicts) > 1, f"{slug}: its cases know one verdict only"
 
