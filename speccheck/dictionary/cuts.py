@@ -65,16 +65,10 @@ def _without_unit(cut: Cut) -> Cut:
         if name:
             rest = cut.text[: bracket.start()] + " " + cut.text[bracket.end() :]
             return replace(cut, text=rest.strip(" ,;:/"), unit=name)
-        inner = bracket.group(1).split(" @ ")[0].split(" at ")[0].split(",")[0]
-        if inner != bracket.group(1) and unit_name(inner):
-            rest = (
-                cut.text[: bracket.start()]
-                + " ("
-                + bracket.group(1)[len(inner) :]
-                + ") "
-                + cut.text[bracket.end() :]
-            )
-            return replace(cut, text=rest, unit=unit_name(inner))
+        unit, others = _unit_among_notes(bracket.group(1))
+        if unit:
+            rest = f"{cut.text[: bracket.start()]} ({others}) {cut.text[bracket.end() :]}"
+            return replace(cut, text=rest, unit=unit)
     trailing = _TRAILING_UNIT.search(cut.text)
     if (
         trailing
@@ -87,6 +81,15 @@ def _without_unit(cut: Cut) -> Cut:
                 cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=unit_name(trailing.group(1))
             )
     return cut
+
+
+def _unit_among_notes(inner: str) -> tuple[str, str]:
+    """The unit that begins or ends the words in brackets, 'N at 150 km/h' and 'H x W x D, mm', and the rest."""
+    first = inner.split(" @ ")[0].split(" at ")[0].split(",")[0]
+    if first != inner and unit_name(first):
+        return unit_name(first), inner[len(first) :]
+    before, comma, last = inner.rpartition(",")
+    return (unit_name(last), before) if comma else ("", inner)
 
 
 def _without_figures(cut: Cut) -> Cut:

@@ -32,12 +32,20 @@ def with_usual_unit(content: CellContent, expected: Expected) -> CellContent:
     """
     if not expected.possible or not expected.plausible or expected.unit or not expected.parameter_unit:
         return content
-    found = [_usual(q, expected) for q in content.quantities]
+    found = _one_unit([_usual(q, expected) for q in content.quantities], expected)
     changed = [q.unit for q, old in zip(found, content.quantities, strict=True) if q != old]
     if not changed:
         return content
     note = f"no unit stated: read as {changed[0]}"
     return replace(content, quantities=tuple(found), notes=(*content.notes, note))
+
+
+def _one_unit(found: list[Quantity], expected: Expected) -> list[Quantity]:
+    """The sizes of one body have one unit, that of the largest; `expected` speaks of the first only."""
+    if expected.kind != "size" or len(found) < 2:
+        return found
+    largest = max(found, key=lambda q: q.value if isinstance(q.value, float) else 0.0)
+    return [replace(q, unit=largest.unit) if not q.parameter else q for q in found]
 
 
 def _usual(found: Quantity, expected: Expected) -> Quantity:
