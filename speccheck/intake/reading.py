@@ -12,7 +12,15 @@ from speccheck.intake.claims import Claim, Context
 from speccheck.intake.found import Figure, Found, Outcome
 from speccheck.intake.grid import Cell, Raw
 from speccheck.intake.unitless import with_unit
-from speccheck.quantities import CellContent, DecimalHabit, Quantity, UnknownUnitError, read_cell, settle
+from speccheck.quantities import (
+    CellContent,
+    DecimalHabit,
+    Quantity,
+    UnknownUnitError,
+    array_of,
+    read_cell,
+    settle,
+)
 from speccheck.records import CellRef, Sense, Statement, Status, Unread
 from speccheck.text import plain
 
@@ -26,6 +34,7 @@ _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
 _MOST_DIFFERENT = 40_000
 """A catalogue repeats its figures; more different ones than this are no bid, and understanding takes time."""
+_FEWEST_OF_SEVERAL = {"array_rows": 2, "subarray_rows": 1}  # a plain number of rows may stand alone
 _IDENTITY_UNITS = ("", "–", "-", "—")
 
 
@@ -66,7 +75,9 @@ class Reader:
         known = self._known.get(key)
         if known is None and len(self._known) > _MOST_DIFFERENT:
             reason = f"more than {_MOST_DIFFERENT} different cells in one file; it was not read"
-            unread = Unread(where=where, text=plain(cell.text, 80), reason=reason, suggestion="split the file")
+            unread = Unread(
+                where=where, text=plain(cell.text, 80), reason=reason, suggestion="split the file"
+            )
             return Outcome(sheet, unread=unread)
         if known is None:
             known = self._known[key] = self._understand(raw, context, cell.number_format)
@@ -192,7 +203,9 @@ def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator
         for quantity in quantities:
             own = quantity.parameter if quantity.parameter in table else keys[0]
             yield specified(own, quantity.condition), quantity
-    elif len(quantities) == len(keys) or (keys[0] == "array_rows" and 2 <= len(quantities) < len(keys)):
+            if own == "element_count":
+                yield from ((part.parameter, part) for part in array_of(quantity))
+    elif len(quantities) == len(keys) or len(keys) > len(quantities) >= _FEWEST_OF_SEVERAL.get(keys[0], 9):
         yield from zip(keys, quantities, strict=False)
 
 

@@ -7,6 +7,7 @@ units of one dimension, `settle` brings a figure into a parameter's unit and sig
 from speccheck.quantities.attachments import connector_of_date
 from speccheck.quantities.cell import read_cell
 from speccheck.quantities.content import CellContent, Quantity
+from speccheck.quantities.counts import array_of
 from speccheck.quantities.numerals import NUMERAL_PATTERN, DecimalHabit, decimal_habit, numeral
 from speccheck.quantities.settling import settle
 from speccheck.quantities.spectrum import band_names
@@ -21,6 +22,7 @@ __all__ = [
     "DecimalHabit",
     "Quantity",
     "UnknownUnitError",
+    "array_of",
     "band_names",
     "connector_of_date",
     "convert",

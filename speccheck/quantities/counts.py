@@ -32,6 +32,22 @@ def special_count(text: str) -> CellContent | None:
     return CellContent(quantities=(Quantity(value=total, at=_factors(parts)),), notes=notes)
 
 
+def array_of(found: Quantity) -> tuple[Quantity, ...]:
+    """Rows, columns and polarisations of an element count that names its factors.
+
+    The order is that of TR 38.901, rows × columns × polarisations. Nothing comes back when the factors do
+    not make up the count, or the third is not one or two.
+
+    >>> [(q.parameter, q.value) for q in array_of(special_count("12x8x2").quantities[0])]
+    [('array_rows', 12.0), ('array_columns', 8.0), ('polarisations', 2.0)]
+    """
+    factors = [found.at[f"factor_{i}"] for i in range(1, 4) if f"factor_{i}" in found.at]
+    if len(factors) < 2 or math.prod(factors) != found.value or (len(factors) == 3 and factors[2] > 2):
+        return ()
+    names = ("array_rows", "array_columns", "polarisations")
+    return tuple(Quantity(value=f, parameter=n) for f, n in zip(factors, names, strict=False))
+
+
 def count_of_claims(read: list[Claim], quantities: list[Quantity]) -> list[Quantity]:
     """'192 elements (12x8x2)' is 192; the factors in parentheses go into its conditions."""
     if not quantities:

@@ -61,7 +61,7 @@ def tidy(text: str) -> str:
     ('1 390 × 160 mm', '-40…+60 °C', '± 45')
     """
     if text.isascii():
-        clean = _INVISIBLE.sub("", text)
+        clean = _INVISIBLE.sub("", text).replace("`", "'")
     else:
         clean = _INVISIBLE.sub("", text.translate(_BEFORE_FOLDING))
         clean = unicodedata.normalize("NFKC", clean).translate(_SIGNS)

@@ -7,7 +7,7 @@ import importlib
 
 import pytest
 
-MODULES = ["attachments", "cell", "lexer", "numerals", "settling", "spectrum", "statuses", "tidy", "units"]
+MODULES = ["attachments", "cell", "counts", "lexer", "numerals", "settling", "spectrum", "statuses", "tidy", "units"]
 
 
 @pytest.mark.parametrize(
