@@ -5,6 +5,7 @@ Each command imports what it needs when it runs: importing all of it would take 
 
 from __future__ import annotations
 
+import os
 import sys
 from enum import IntEnum
 from pathlib import Path
@@ -60,6 +61,8 @@ def cli() -> None:
 
 def main() -> None:
     """Run the command line; an input or output that cannot be used ends it with one message."""
+    # A panel's matrices are small: more threads would cost more than they save. Read by numpy when imported.
+    os.environ.setdefault("OPENBLAS_NUM_THREADS", "1")
     try:
         cli(standalone_mode=True)
     except (UnusableInputError, OutputError) as error:
@@ -143,7 +146,7 @@ def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | No
 
 def _read_vetted(path: Path) -> Tender:
     from speccheck.intake.tender_book import read_tender
-    from speccheck.tender import vetted
+    from speccheck.tender.vetting import vetted
 
     return vetted(read_tender(path))
 

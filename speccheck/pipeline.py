@@ -9,13 +9,13 @@ from speccheck import __version__
 from speccheck.atomic import write_bytes_atomic
 from speccheck.checks import examine, exposure_note, panel_drawings
 from speccheck.intake import read_submission
-from speccheck.records import Assessment, Panel, PanelAssessment, Settings, Tender
+from speccheck.records import Assessment, Finding, MatrixRow, Panel, PanelAssessment, Settings, Tender
 from speccheck.records.outputs import SUFFIXES
 from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
 from speccheck.report.pdf import Attachment, pdf_bytes
 from speccheck.report.review import review_bytes
-from speccheck.tender import judge, outcome
+from speccheck.tender.outcome import outcome
 
 
 def assess(path: str | Path, *, tender: Tender | None = None, settings: Settings | None = None) -> Assessment:
@@ -41,7 +41,7 @@ def assess(path: str | Path, *, tender: Tender | None = None, settings: Settings
 
 def _assess_panel(panel: Panel, tender: Tender | None, rules: Settings) -> PanelAssessment:
     findings = examine(panel, rules)
-    rows = judge(tender, panel, findings) if tender else ()
+    rows = _rows(panel, tender, findings) if tender else ()
     verdict, reasons = outcome(findings, rows)
     return PanelAssessment(
         panel=panel,
@@ -52,6 +52,12 @@ def _assess_panel(panel: Panel, tender: Tender | None, rules: Settings) -> Panel
         drawings=panel_drawings(panel, rules, findings),
         reasons=reasons,
     )
+
+
+def _rows(panel: Panel, tender: Tender, findings: tuple[Finding, ...]) -> tuple[MatrixRow, ...]:
+    from speccheck.tender.judging import judge  # noqa: PLC0415 - twelve modules that only a tender needs
+
+    return judge(tender, panel, findings)
 
 
 def write_outputs(assessment: Assessment, bid: Path, out: Path, formats: Sequence[str]) -> list[Path]:

@@ -25,10 +25,6 @@ _rules: list[Rules] = []
 
 def run(bids: Sequence[BidFile], rules: Rules, jobs: int) -> Iterator[tuple[int, Bid]]:
     """Place in `bids` and result of each bid, in the order they are finished."""
-    if jobs <= 1 or len(bids) <= 1:
-        for place, bid in enumerate(bids):
-            yield place, do_bid(bid, rules)
-        return
     waiting = list(range(len(bids)))
     while waiting:
         done: set[int] = set()

@@ -135,7 +135,8 @@ def _circle(beams_deg: tuple[float, ...]) -> Floats:
     low, high = min(beams_deg) - _BESIDE_BEAM_DEG, max(beams_deg) + _BESIDE_BEAM_DEG
     coarse = np.arange(-180.0, 180.0 + _COARSE_DEG, _COARSE_DEG)
     fine = np.arange(np.floor(low), np.ceil(high) + _FINE_DEG, _FINE_DEG)
-    angles = np.unique(np.concatenate([coarse, fine, np.array(beams_deg)]))
+    # sorted here: numpy's `unique` would load the masked arrays, which takes as long as both zones
+    angles = np.array(sorted({*coarse.tolist(), *fine.tolist(), *beams_deg}))
     return angles[(angles >= -180) & (angles <= 180)]
 
 

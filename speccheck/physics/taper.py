@@ -143,7 +143,12 @@ def beamwidth_ratio(weights: ArrayLike) -> float:
     1.1
     """
     a = floats(weights)
-    return half_power_phase_rad(a) / half_power_phase_rad(np.ones(a.size))
+    return half_power_phase_rad(a) / _uniform_half_power_rad(a.size)
+
+
+@lru_cache(maxsize=128)
+def _uniform_half_power_rad(count: int) -> float:
+    return half_power_phase_rad(np.ones(count))
 
 
 def sidelobe_db(weights: ArrayLike) -> float:

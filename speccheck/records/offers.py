@@ -5,6 +5,7 @@ Location is born with the record. Missing is not a value: what was not stated ha
 
 from __future__ import annotations
 
+import functools
 from collections.abc import Mapping
 from dataclasses import dataclass, field
 
@@ -123,9 +124,9 @@ class Notice:
     text: str
 
 
-@dataclass(frozen=True, slots=True, kw_only=True)
+@dataclass(frozen=True, kw_only=True)
 class Panel:
-    """One offered panel with everything its bidder says of it."""
+    """One offered panel with everything its bidder says of it; without slots, to keep its index."""
 
     name: str
     where: CellRef
@@ -149,7 +150,7 @@ class Panel:
 
     def all(self, parameter: str, band: Band | None = None) -> tuple[Reading, ...]:
         """Certain readings of a parameter; with a band, those of that band or else of the whole panel."""
-        mine = tuple(r for r in self.readings if r.parameter == parameter and r.certain)
+        mine = self._certain.get(parameter, ())
         if band is None:
             return mine
         return tuple(r for r in mine if r.band == band) or tuple(r for r in mine if r.band is None)
@@ -160,6 +161,15 @@ class Panel:
         if band is None:
             found = tuple(r for r in found if r.band is None) or found
         return found[0] if found else None
+
+    @functools.cached_property
+    def _certain(self) -> Mapping[str, tuple[Reading, ...]]:
+        """Certain readings by parameter: the checks ask some hundred times for each reading of a panel."""
+        found: dict[str, list[Reading]] = {}
+        for reading in self.readings:
+            if reading.certain:
+                found.setdefault(reading.parameter, []).append(reading)
+        return {parameter: tuple(readings) for parameter, readings in found.items()}
 
 
 @dataclass(frozen=True, slots=True)

@@ -22,7 +22,8 @@ from speccheck.records import (
     Reading,
     Requirement,
 )
-from speccheck.tender import judge, outcome
+from speccheck.tender.judging import judge
+from speccheck.tender.outcome import outcome
 from tender.panels import demand, panel, says, tender
 
 LOW, HIGH = (694.0, 960.0), (1695.0, 2690.0)

@@ -14,7 +14,7 @@ from speccheck.records import (
     Requirement,
     Status,
 )
-from speccheck.tender import judge
+from speccheck.tender.judging import judge
 from tender.panels import answers, demand, panel, says, tender
 
 LOW, HIGH = (694.0, 960.0), (1695.0, 2690.0)

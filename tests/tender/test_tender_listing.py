@@ -6,7 +6,7 @@ from pathlib import Path
 
 from speccheck.intake.tender_book import read_tender
 from speccheck.report.tender_listing import tender_listing
-from speccheck.tender import vetted
+from speccheck.tender.vetting import vetted
 from tender.books import write_tender
 
 ROWS = [

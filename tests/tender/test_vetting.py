@@ -7,7 +7,7 @@ import pytest
 
 from speccheck.intake.phrases import read_wording
 from speccheck.records import CellRef, Fit, Level, Requirement, Tender
-from speccheck.tender import vet, vetted
+from speccheck.tender.vetting import vet, vetted
 
 
 def _tender(*rows: tuple[str, str]) -> Tender:
