@@ -2,13 +2,16 @@
 
 from __future__ import annotations
 
-import math
-
 from speccheck.checks.beams import SAME_BEAM, claim_freq_hz, flat, rest_tilt_deg, uniform_widths_deg
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim, last_digit_slack, mhz
-from speccheck.physics.bounds import aperture_directivity_dbi, aperture_is_hard
+from speccheck.physics.bounds import (
+    aperture_directivity_dbi,
+    aperture_is_hard,
+    gain_from_beamwidths_dbi,
+    implied_beamwidth_constant,
+)
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 SOLID_ANGLE = 41_253.0
@@ -65,9 +68,10 @@ def gain_fits_beamwidths(
         return None
     rounding = last_digit_slack(horizontal_beamwidth) / across + last_digit_slack(vertical_beamwidth) / along
     slack = last_digit_slack(gain) + 4.343 * rounding
-    product = across * along
     upper = LOSSLESS if gain.at.get("loss_db") == 0 else PLANAR
-    sphere, planar, least = (10 * math.log10(k / product) for k in (SOLID_ANGLE, upper, LOSSY))
+    sphere, planar, least = (
+        float(gain_from_beamwidths_dbi(across, along, k)) for k in (SOLID_ANGLE, upper, LOSSY)
+    )
     value = gain.nominal
     verdict = (
         Fit.DOES_NOT_FIT
@@ -76,7 +80,7 @@ def gain_fits_beamwidths(
         if value - slack > planar or value + slack < least
         else Fit.FITS
     )
-    implied = 10 ** (value / 10) * product
+    implied = float(implied_beamwidth_constant(value, across, along))
     if verdict is not Fit.FITS and other is not None and not note and isinstance(model, Model):
         return _of_two_beams(gain, horizontal_beamwidth, other, model)
     meaning = {

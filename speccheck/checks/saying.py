@@ -2,8 +2,14 @@
 
 from __future__ import annotations
 
+import re
+
 from speccheck.dictionary import parameters
 from speccheck.records import Band, Reading
+
+_NUMBER = re.compile(r"\d+(?:[.,](\d+))?")
+
+MOST_LEVEL_SLACK_DB = 0.25
 
 SHOWN_IN_MM = 2.0
 """Lengths [m] below this are printed in millimetres, as drawings do."""
@@ -52,9 +58,18 @@ def mhz(band: Band | None) -> str:
 def last_digit_slack(reading: Reading) -> float:
     """Half of the last digit the bidder printed [the reading's unit]: 17.5 may be 17.45 to 17.55.
 
-    Figures in another unit than they were written in, and texts, carry no slack.
+    Levels carry a quarter of a decibel at most, since spreadsheets drop the zero of 18.0. Figures in another
+    unit than they were written in, and texts, carry no slack.
     """
     if reading.stated_unit not in ("", reading.unit) or not isinstance(reading.stated_value, int | float):
         return 0.0
-    decimals = f"{reading.stated_value:.6f}".rstrip("0").partition(".")[2]
-    return min(0.5 * 10.0 ** -len(decimals), 0.05)
+    half = 0.5 * 10.0 ** -_printed_decimals(reading.raw, float(reading.stated_value))
+    return min(half, MOST_LEVEL_SLACK_DB) if reading.unit.startswith("dB") else half
+
+
+def _printed_decimals(raw: str, value: float) -> int:
+    """Decimals of a figure as printed in its cell; those of the value where the text has another form."""
+    for match in _NUMBER.finditer(raw):
+        if float(match[0].replace(",", ".")) == abs(value):
+            return len(match[1] or "")
+    return len(f"{value:.6f}".rstrip("0").partition(".")[2])
