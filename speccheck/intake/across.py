@@ -123,9 +123,9 @@ class AcrossReader:
 
     def _unlabelled_text_column(self) -> int:
         for index, found in self._fields.items():
-            if not found.label and found.role in ("", "parameter", "offered"):
+            if not found.label and found.role in ("", "parameter", "offered", "typical"):
                 cells = [c for r in self._table.data_rows[:50] if (c := self._grid.cells.get((r, index)))]
-                if cells and all(isinstance(c.raw, str) for c in cells):
+                if cells and all(isinstance(c.raw, str) and any(map(str.isalpha, c.raw)) for c in cells):
                     return index
         numbers = [i for i, f in self._fields.items() if f.role == "number"]
         return numbers[0] if numbers else 0

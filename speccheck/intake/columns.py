@@ -8,7 +8,7 @@ from dataclasses import dataclass, field
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label, Labels, is_unit, statistic_of
-from speccheck.intake.words import column_role
+from speccheck.intake.words import column_leaning, column_role
 from speccheck.records import Band
 
 PLANE_LETTERS = ("H", "V")
@@ -82,7 +82,7 @@ def describe(index: int, stack: list[Cell], labels: Labels) -> Column:
 def _take(column: Column, cell: Cell, labels: Labels) -> None:
     text = " ".join(cell.text.split())
     statistic = statistic_of(text)
-    role = column_role(text) or _leaning(text)
+    role = column_role(text) or column_leaning(text)
     if text in PLANE_LETTERS:
         column.words.append(text)
     elif is_unit(text):
@@ -130,20 +130,3 @@ def _is_frequency_heading(label: Label) -> bool:
         and set(label.parameters) <= {"frequency_range", "operating_bands"}
         and bool(label)
     )
-
-
-_LEANINGS = (
-    ("remark", r"\bremark|\bcomment|bemerkung|anmerkung|remarque|observa[cç]|uwagi|opmerking|justification"),
-    ("compliance", r"\bcompl(?:y|ies|iance|iant)\b|konformit|conformit"),
-    ("offered", r"\boffer|\bbidder|\btenderer|\bsupplier|\bvendor|angebot|\bofert|\bpropos|aangebod|oferow"),
-    (
-        "required",
-        r"requir|gefordert|anforderung|\bsoll|\bexig|richiest|requerid|wymag|vereist|supersed|previous",
-    ),
-)
-
-
-def _leaning(text: str) -> str:
-    if any(letter.isdigit() for letter in text):
-        return ""
-    return next((role for role, pattern in _LEANINGS if re.search(pattern, text, re.IGNORECASE)), "")

@@ -2,9 +2,10 @@
 
 from __future__ import annotations
 
+from speccheck.intake.answering import labelled, share_answering
 from speccheck.intake.bands import is_band_label
 from speccheck.intake.claims import SheetResult
-from speccheck.intake.columns import Column, describe, heading_stack
+from speccheck.intake.columns import VALUE_ROLES, Column, describe, heading_stack
 from speccheck.intake.down_regions import Down, cells_between, heads_columns
 from speccheck.intake.grid import Cell
 from speccheck.intake.marks import Marks
@@ -78,5 +79,16 @@ def describe_columns(
     for index in sorted(used):
         stack = heading_stack(marks.grid, heading_rows, index, table.label_column + 1)
         columns[index] = describe(index, stack, marks.labels)
-    settle_roles(columns, used)
+    settle_roles(columns, used, _shares(marks, table, columns, used))
     return columns
+
+
+def _shares(
+    marks: Marks, table: Down, columns: dict[int, Column], cells: dict[int, list[Cell]]
+) -> dict[int, float | None]:
+    """How far the cells of each column answer for the labels; not asked where its heading tells."""
+    return {
+        index: share_answering(labelled(marks.grid, marks.headings, table.label_column, cells.get(index, [])))
+        for index, column in columns.items()
+        if column.role in VALUE_ROLES and not (column.band or column.band_name)
+    }

@@ -55,15 +55,29 @@ def _unmark_column_words(marks: Marks) -> None:
     """Words over the columns of a table with headings down the side head no values: 'Parameter | Typ'."""
     for row, cells in marks.rows.items():
         headings = marks.heading_columns(row)
-        if not 0 < len(headings) <= 2:
+        if not 0 < len(headings) <= 4:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
+        if _is_form_heading(roles):
+            for column in headings:
+                if column_role(marks.grid.cells[row, column].text):
+                    del marks.headings[row, column]
+            continue
+        if len(headings) > 2:
+            continue
         statistics = sum(role in ("minimum", "typical", "maximum") for role in roles)
         for column in headings:
             said = statistic_of(marks.grid.cells[row, column].text)
             detail = bool(said) and _follows_heading(marks, row, column)
             if "parameter" in roles or statistics > 1 or detail:
                 del marks.headings[row, column]
+
+
+def _is_form_heading(roles: list[str]) -> bool:
+    """Whether a row says for each column of a form or table what it is for: 'Requirement | Offered | Comply'."""
+    labels = {"parameter", "required"} & set(roles)
+    answers = {"offered", "compliance"} & set(roles)
+    return bool(labels and answers) and sum(map(bool, roles)) * 4 >= 3 * len(roles)
 
 
 def _follows_heading(marks: Marks, row: int, column: int) -> bool:

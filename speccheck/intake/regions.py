@@ -9,6 +9,7 @@ from speccheck.intake.marks import Marks, looks_like_value, says_column_role
 from speccheck.intake.words import column_role
 
 _LOOK_BELOW = 4
+_LONGEST_DETAIL = 30
 _REACH_BELOW = 400
 """Empty rows after which a table is over; catalogues are continuous."""
 
@@ -77,7 +78,10 @@ def _values_below(marks: Marks, columns: list[int], rows: list[int]) -> bool:
 def _grow(marks: Marks, row: int, numbers: list[int], position: int, floor: int) -> Across | None:
     heading_rows = [row]
     below = position + 1
-    while below < len(numbers) and _is_subheading(marks, numbers[below], heading_rows[-1]):
+    while below < len(numbers) and (
+        _is_subheading(marks, numbers[below], heading_rows[-1])
+        or _details_heading(marks, numbers[below], heading_rows[-1], numbers[below + 1 : below + 3])
+    ):
         heading_rows.append(numbers[below])
         below += 1
     above = position - 1
@@ -114,6 +118,17 @@ def _is_subheading(marks: Marks, row: int, above: int) -> bool:
         return False
     fillers = [c for c in cells if is_heading_filler(c.text) or (marks.is_heading(c) and len(cells) > 1)]
     return len(fillers) == len(cells) and (len(cells) > 1 or is_heading_filler(cells[0].text))
+
+
+def _details_heading(marks: Marks, row: int, above: int, following: list[int]) -> bool:
+    """Whether a row of short words under a heading row details it: nothing under its first heading, no figures."""
+    first, cells = marks.rows[above][0], marks.rows[row]
+    if row != above + 1 or not following or cells[0].column <= first.column:
+        return False
+    words = [c for c in cells if isinstance(c.raw, str) and len(c.text) <= _LONGEST_DETAIL and not c.fault]
+    figures = sum(looks_like_value(c) and not is_heading_filler(c.text) for c in cells)
+    below = max(sum(looks_like_value(c) for c in marks.rows[r]) for r in following)
+    return len(words) == len(cells) > 1 and not figures and below > 1
 
 
 def _is_upper_heading(marks: Marks, row: int, heading_row: int) -> bool:

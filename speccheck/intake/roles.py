@@ -7,12 +7,24 @@ from speccheck.intake.grid import Cell
 from speccheck.intake.labels import is_unit
 from speccheck.intake.words import answer
 
+_ANSWERS, _SILENT = 0.6, 0.4
+"""Shares of cells from which on, and up to which, a column is surely one of values, or of none."""
 
-def settle_roles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
-    """Give each column without a role the one its cells speak for; `cells` holds them by column."""
+
+def settle_roles(
+    columns: dict[int, Column], cells: dict[int, list[Cell]], shares: dict[int, float | None]
+) -> None:
+    """Give each column without a role the one its cells speak for.
+
+    Parameters
+    ----------
+    columns, cells : headings and cells by column
+    shares : share of the cells that could be values of their rows' labels, where that can be told
+    """
     for index, column in columns.items():
         if not column.role and not column.band and not column.band_name:
             column.role = _by_content(column, cells.get(index, []))
+    _beside_the_values(columns, cells, shares)
     _band_columns(columns, cells)
     _conditions_before_units(columns, cells)
     _details_before_values(columns, cells)
@@ -31,7 +43,7 @@ def _by_content(column: Column, cells: list[Cell]) -> str:
     texts = [c.text for c in cells if isinstance(c.raw, str)]
     units = sum(is_unit(text) for text in texts)
     dashes = sum(text.strip() in ("-", "–", "—") for text in texts)
-    if units - dashes >= 1 and units >= 0.6 * len(cells) and not column.words:
+    if units - dashes >= 1 and units >= (0.9 if column.words else 0.6) * len(cells):
         return "unit"
     answers = sum(bool(answer(text)) for text in texts)
     if answers >= 2 and answers >= 0.7 * len(cells) and not column.words:
@@ -40,6 +52,19 @@ def _by_content(column: Column, cells: list[Cell]) -> str:
     if wordy >= 0.6 * len(cells) and not column.words:
         return "remark"
     return ""
+
+
+def _beside_the_values(
+    columns: dict[int, Column], cells: dict[int, list[Cell]], shares: dict[int, float | None]
+) -> None:
+    """A column whose cells do not answer for the labels details them, or remarks on the values before it."""
+    values = [
+        i for i, share in shares.items() if (share or 0.0) >= _ANSWERS and columns[i].role in VALUE_ROLES
+    ]
+    for index, share in shares.items():
+        if not columns[index].role and share is not None and share < _SILENT and values:
+            texts = all(isinstance(cell.raw, str) for cell in cells.get(index, []))
+            columns[index].role = "condition" if index < values[0] and texts else "remark"
 
 
 def _band_columns(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:

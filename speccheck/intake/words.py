@@ -46,6 +46,45 @@ def column_role(text: str) -> str:
     return roles.get(folded) or roles.get(_BRACKETED.sub("", folded).strip(" :"), "")
 
 
+_LEANINGS = (
+    ("remark", r"\bremark|\bcomment|bemerkung|anmerkung|remarque|observa[cç]|uwagi|opmerking|justification"),
+    ("compliance", r"\bcompl(?:y|ies|iance|iant)\b|konformit|conformit"),
+    ("offered", r"\boffer|\bbidder|\btenderer|\bsupplier|\bvendor|angebot|\bofert|\bpropos|aangebod|oferow"),
+    (
+        "required",
+        r"requir|gefordert|anforderung|\bsoll|\bexig|richiest|requerid|wymag|vereist|supersed|previous",
+    ),
+)
+_SPECIFIC = ("required", "compliance", "remark", "tolerance", "condition", "unit", "offered", "parameter")
+
+
+@lru_cache(maxsize=2000)
+def column_leaning(text: str) -> str:
+    """The role of a column heading that only leans on a role word, or is put together from such words."""
+    if any(letter.isdigit() for letter in text) or len(text) > 60:
+        return ""
+    leaning = next((role for role, pattern in _LEANINGS if re.search(pattern, text, re.IGNORECASE)), "")
+    if leaning:
+        return leaning
+    words = [word for word in re.findall(r"[^\W\d_]+", fold(text)) if len(word) > 3]
+    roles = [_roles_of_words().get(word, frozenset()) for word in words]
+    if not roles or not all(roles):
+        return ""
+    shared = frozenset.intersection(*roles) or frozenset.union(*roles)
+    return next((role for role in _SPECIFIC if role in shared), "")
+
+
+@cache
+def _roles_of_words() -> dict[str, frozenset[str]]:
+    """Single words of the column headings to the roles they occur in."""
+    found: dict[str, set[str]] = {}
+    for role in _SPECIFIC:
+        for phrase in _table()["column"][role]:
+            for word in re.findall(r"[^\W\d_]+", phrase):
+                found.setdefault(word, set()).add(role)
+    return {word: frozenset(roles) for word, roles in found.items()}
+
+
 def is_generic_sheet_name(name: str) -> bool:
     """Whether a sheet name says nothing of the panel on it."""
     return fold(name).rstrip("0123456789 -_.()") in _table()["sheet"]["generic"] | {""}
