@@ -38,18 +38,29 @@ class Reach:
 
 @dataclass(frozen=True, slots=True)
 class InnocentReading:
-    """A named convention: the question that names it, the parameters it re-reads, the transform."""
+    """A named convention: the question that names it, the parameters it re-reads, the transform.
+
+    `likely` tells of a panel whether its figures themselves point to this reading; it then goes before
+    others that repair as much.
+    """
 
     name: str
     ask: str
     parameters: tuple[str, ...]
     reread: Transform
+    likely: Callable[[Panel], bool]
 
 
 INNOCENT_READINGS: dict[str, InnocentReading] = {}
 
 
-def innocent(name: str, ask: str, *parameters: str) -> Callable[[Transform], Transform]:
+def _never(panel: Panel) -> bool:  # noqa: ARG001
+    return False
+
+
+def innocent(
+    name: str, ask: str, *parameters: str, likely: Callable[[Panel], bool] = _never
+) -> Callable[[Transform], Transform]:
     """Register a convention; `ask` completes 'Please confirm whether …'.
 
     Raises
@@ -60,7 +71,7 @@ def innocent(name: str, ask: str, *parameters: str) -> Callable[[Transform], Tra
     def register(reread: Transform) -> Transform:
         if name in INNOCENT_READINGS:
             raise ValueError(f"innocent reading '{name}' is registered twice")
-        INNOCENT_READINGS[name] = InnocentReading(name, ask, parameters, reread)
+        INNOCENT_READINGS[name] = InnocentReading(name, ask, parameters, reread, likely)
         return reread
 
     return register
@@ -103,13 +114,15 @@ class _Candidate:
     rank: int
     repaired: dict[_Key, Finding]
     leaves: tuple[str, ...]
+    likely: bool
 
     @property
-    def order(self) -> tuple[bool, int, float, int]:
-        """Repairs everything, repairs most, leaves least over, listed first."""
+    def order(self) -> tuple[bool, int, bool, float, int]:
+        """Repairs everything, repairs most, pointed to by the figures, leaves least over, listed first."""
         return (
             bool(self.leaves),
             -len(self.repaired),
+            not self.likely,
             max(map(_off_middle, self.repaired.values())),
             self.rank,
         )
@@ -168,7 +181,9 @@ class _Trial:
             return None
         still = [key[0] for key in self.misfits if key not in repaired]
         doubted = [k[0] for k in after if k in self.fitted and after[k].verdict is Fit.DOUBTFUL]
-        return _Candidate(reading, rank, repaired, tuple(dict.fromkeys([*still, *doubted])))
+        return _Candidate(
+            reading, rank, repaired, tuple(dict.fromkeys([*still, *doubted])), reading.likely(self.panel)
+        )
 
 
 def _settled(finding: Finding) -> Finding:
@@ -177,7 +192,8 @@ def _settled(finding: Finding) -> Finding:
 
 
 def _key(finding: Finding) -> _Key:
-    return (finding.check, finding.band, finding.where)
+    """What a finding is about; its cells count in any order, since exchanged parameters exchange them."""
+    return (finding.check, finding.band, tuple(sorted(finding.where, key=str)))
 
 
 def _completed(finding: Finding, candidates: list[_Candidate]) -> Finding:

@@ -7,8 +7,17 @@ from dataclasses import replace
 from speccheck.checks.conventions import Reach, innocent, marked, reread, scaled
 from speccheck.records import Panel, Reading
 
+WIDE_BEAM_DEG = 100.0
+"""Horizontal width [deg] from which few panels are that wide at half power: most are 60 to 90 (common
+practice), and 65 at half power is 111 to 119 at -10 dB."""
+
 ARRAY_BEAM_DEG = 50.0
 """Width [deg] at -10 dB below which a beam is that of an array of columns and not of an element."""
+
+
+def _wide_beam(panel: Panel) -> bool:
+    widths = [r for r in panel.all("horizontal_beamwidth") if not isinstance(r.value, str)]
+    return any(WIDE_BEAM_DEG <= r.nominal <= 2 * WIDE_BEAM_DEG for r in widths)
 
 
 @innocent(
@@ -25,6 +34,7 @@ def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
     "horizontal width taken at -10 dB",
     "the horizontal beamwidth is taken at half power",
     "horizontal_beamwidth",
+    likely=_wide_beam,
 )
 def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
     """Width divided by √(10/3), the ratio of a parabola in decibels; a narrow array beam by 1.67."""
@@ -43,7 +53,12 @@ def vertical_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
     return reread(panel, reach, ("vertical_beamwidth",), scaled(1 / 1.67))
 
 
-@innocent("sector width, not beamwidth", "the width is that of the sector served", "horizontal_beamwidth")
+@innocent(
+    "sector width, not beamwidth",
+    "the width is that of the sector served",
+    "horizontal_beamwidth",
+    likely=_wide_beam,
+)
 def sector_width(panel: Panel, reach: Reach) -> Panel:
     """A sector of 120° is served by a beam of 65° (common practice); 90° and 60° by 65° and 33°."""
     beams = {120.0: 65.0, 90.0: 65.0, 60.0: 33.0}

@@ -95,7 +95,10 @@ def gain_at_best_frequency(panel: Panel, reach: Reach) -> Panel:
     "gain",
 )
 def system_model_gain(panel: Panel, reach: Reach) -> Panel:
-    """The figure held against the short formula of system models, where it is that formula's result."""
+    """The figure held against the short formula of system models, where it is that formula's result.
+
+    The models are of planar arrays: a single column meets the formula of 8 dBi by chance only.
+    """
     element = panel.get("element_gain")
     gain = SYSTEM_MODEL_ELEMENT_DBI if element is None or isinstance(element.value, str) else element.nominal
 
@@ -103,7 +106,10 @@ def system_model_gain(panel: Panel, reach: Reach) -> Panel:
         rows, columns = (panel.get(key, reading.band) for key in ("array_rows", "array_columns"))
         if rows is None or isinstance(rows.value, str):
             return reading
-        count = rows.nominal * (1 if columns is None or isinstance(columns.value, str) else columns.nominal)
+        across = 1 if columns is None or isinstance(columns.value, str) else columns.nominal
+        if across < 2 and element is None:
+            return reading
+        count = rows.nominal * across
         short = gain + 10 * math.log10(max(1.0, count))
         equal = abs(reading.nominal - short) <= SHORT_FORMULA_WITHIN_DB
         return marked(element_gain_dbi=gain)(reading) if equal else reading
