@@ -11,6 +11,7 @@ from speccheck.records import (
     Finding,
     MatrixRow,
     Panel,
+    Reading,
     Requirement,
     Settings,
     Status,
@@ -149,6 +150,9 @@ def _figure_row(requirement: Requirement, offer: Offer, panel: Panel, settings: 
     ]
     governing = min(compared, key=_weight)
     grade = _over_tilts(requirement, offer, settings) or governing.grade
+    if grade.verdict in FAILING and _counted_by_band(requirement, readings):
+        note = "stated band by band; the number for the whole panel is not stated"
+        grade = replace(grade, verdict=Compliance.NOT_JUDGED, note=note)
     notes = [
         comparable(requirement, governing.reading, panel).note,
         offer.note,
@@ -157,6 +161,15 @@ def _figure_row(requirement: Requirement, offer: Offer, panel: Panel, settings: 
     notes.append(_declared_beside(offer, grade))
     row = _row(requirement, grade.verdict, note="; ".join(filter(None, (grade.note, *notes))), offer=offer)
     return replace(row, offered=governing.reading, offered_in_unit=_in_unit(governing), margin=grade.margin)
+
+
+def _counted_by_band(requirement: Requirement, readings: Sequence[Reading]) -> bool:
+    """Whether ports of a whole panel were stated for each band and their sum could meet the number."""
+    parameter = parameters()[requirement.parameter]
+    by_band = {r.band: r.nominal for r in readings if r.band is not None}
+    counted = parameter.scope == "panel" and parameter.kind in ("connectors", "count")
+    limit = requirement.limit
+    return counted and len(by_band) > 1 and isinstance(limit, float | int) and sum(by_band.values()) >= limit
 
 
 def _weight(comparison: Comparison) -> tuple[int, float]:

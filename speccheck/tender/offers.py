@@ -69,7 +69,7 @@ class Offer:
 def offers(requirement: Requirement, panel: Panel) -> tuple[Offer, ...]:
     """The offers of a panel, one a band in scope, or one for the panel where bands don't matter."""
     parameter = parameters()[requirement.parameter]
-    if parameter.scope != "band" or parameter.kind == "bands":
+    if parameter.scope == "panel" or parameter.kind == "bands":
         return (_offer(requirement, panel, None),)
     bands = [band for band in panel.bands if in_scope(band, requirement.bands)]
     if not bands:

@@ -244,3 +244,15 @@ def test_return_loss_is_judged_from_vswr(vswr: float, verdict: str) -> None:
 def test_better_than_at_equality_follows_the_rule(equality: bool, verdict: str) -> None:
     requirement = demand("vswr", "<", 1.5, doubts=("EQUAL: better than",))
     assert _row(requirement, says("vswr", 1.5), equality_meets=equality).verdict.value == verdict
+
+
+def test_power_per_port_is_judged_in_the_band_demanded() -> None:
+    said = (says("max_power_per_port", 150.0, band=LOW), says("max_power_per_port", 250.0, band=HIGH))
+    rows = judge(tender(demand("max_power_per_port", "≥", 200.0, bands=(HIGH,))), panel(*said), ())
+    assert [(row.band, row.verdict) for row in rows] == [(HIGH, Compliance.MEETS)]
+
+
+def test_ports_counted_band_by_band_are_asked_about() -> None:
+    said = (says("rf_ports", 2.0, band=LOW), says("rf_ports", 4.0, band=HIGH))
+    assert _row(demand("rf_ports", "≥", 6.0), *said).verdict is Compliance.NOT_JUDGED
+    assert _row(demand("rf_ports", "≥", 8.0), *said).verdict is Compliance.FAILS
