@@ -12,6 +12,9 @@ from speccheck.report.formats import Numbers
 WIDTH, HEIGHT = 316, 160
 TOP_WIDTH, TOP_HEIGHT = 640, 220
 _ARC_BEYOND_DEG = 4.0
+_STEEPEST_DEG = 60.0
+_TALLEST_M = 6.0
+_NEAREST_M, _FARTHEST_M = 0.01, 1e5
 _PUBLIC_STYLE, _WORKER_STYLE = "first", "second"
 
 
@@ -20,12 +23,18 @@ def exposure_figures(panel: Panel, note: ExposureNote | None, numbers: Numbers) 
     if note is None or not note.complete or not note.rows:
         return ()
     together = [row for row in note.rows if row.band is None] or list(note.rows)
-    farthest = _farthest_by_population(together)
-    figures = [_side_view(panel, note, farthest, numbers)]
-    outlines = [zone for zone in note.around if zone.top_view]
+    farthest = _farthest_by_population(row for row in together if _NEAREST_M <= row.distance_m <= _FARTHEST_M)
+    figures = [_side_view(panel, note, farthest, numbers)] if farthest else []
+    outlines = [zone for zone in note.around if _drawable(zone.top_view)]
     if outlines:
         figures.append(_top_view(max(outlines, key=lambda zone: zone.front_m), numbers))
     return tuple(figures)
+
+
+def _drawable(outline: Sequence[tuple[float, float]]) -> bool:
+    """Whether an outline has an extent that a scale can hold."""
+    reach = max((max(abs(x), abs(y)) for x, y in outline), default=0.0)
+    return _NEAREST_M <= reach <= _FARTHEST_M
 
 
 def _farthest_by_population(rows: Iterable[ExposureRow]) -> list[ExposureRow]:
@@ -39,11 +48,12 @@ def _farthest_by_population(rows: Iterable[ExposureRow]) -> list[ExposureRow]:
 
 def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], numbers: Numbers) -> Figure:
     tilts = _tilts(panel, note.around)
-    far = max((row.far_field_m for row in note.rows if row.far_field_m is not None), default=None)
+    known = (row.far_field_m for row in note.rows if row.far_field_m is not None)
+    far = max((d for d in known if 0 < d <= _FARTHEST_M), default=None)
     reach = max(row.distance_m for row in rows)
     shown_far = far is not None and far <= 1.6 * reach
     extent = max(reach, far if far is not None and shown_far else 0.0) * 1.08
-    outline = next((z for z in note.around if z.side_view), None)
+    outline = next((z for z in note.around if _drawable(z.side_view)), None)
     depth = max(
         reach * math.sin(math.radians(max(tilts) + _ARC_BEYOND_DEG)) + 0.5,
         max((-y for _, y in outline.side_view), default=0.0) + 1 if outline else 0.0,
@@ -54,7 +64,8 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
     canvas = Canvas(WIDTH, round((depth + rise) * px + 68), numbers)
     x0, y0 = 24.0, 24 + rise * px
     height = panel.get("height")
-    tall = height.nominal if height is not None and not isinstance(height.value, str) else 1.0
+    stated = height.nominal if height is not None and not isinstance(height.value, str) else 1.0
+    tall = min(max(stated, 0.0), _TALLEST_M)
     if outline:
         canvas.line(((x0 + x * px, y0 - y * px) for x, y in outline.side_view), "shade", close=True)
     _arcs(canvas, rows, tilts, (x0, y0), px)
@@ -168,4 +179,4 @@ def _tilts(panel: Panel, zones: Iterable[ExposureZone]) -> tuple[float, ...]:
         if not isinstance(r.value, str)
     ]
     ends = swept or [end for r in stated for end in (r.low, r.high)] or [0.0]
-    return min(ends), max(ends)
+    return max(min(ends), -_STEEPEST_DEG), min(max(ends), _STEEPEST_DEG)

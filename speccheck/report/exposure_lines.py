@@ -35,17 +35,20 @@ def exposure_table(note: ExposureNote) -> ExposureTable:
     """Fold the rows of a note; no row is left out."""
     populations = {row.population: row.category or row.population for row in note.rows}
     places = {name: i for i, name in enumerate(populations)}
-    folded: dict[tuple[Band | None, str, float], list[ExposureRow | None]] = {}
+    folded: list[tuple[tuple[Band | None, str, float], list[ExposureRow | None]]] = []
     for row in note.rows:
-        line = folded.setdefault((row.band, row.basis, row.averaging_min), [None] * len(places))
-        if line[places[row.population]] is not None:
-            raise ValueError(f"two exposure rows for {row.band}, {row.basis}, {row.population}")
-        line[places[row.population]] = row
+        key, place = (row.band, row.basis, row.averaging_min), places[row.population]
+        free = (line for known, line in folded if known == key and line[place] is None)
+        line = next(free, None)
+        if line is None:
+            line = [None] * len(places)
+            folded.append((key, line))
+        line[place] = row
     return ExposureTable(
         populations=tuple(populations.items()),
         lines=tuple(
             ExposureLine(band=band, basis=basis, averaging_min=minutes, rows=tuple(rows))
-            for (band, basis, minutes), rows in folded.items()
+            for (band, basis, minutes), rows in folded
         ),
         factored=any(row.factored_distance_m is not None for row in note.rows),
     )

@@ -28,6 +28,7 @@ _DECIMALS = {
 """Decimals a figure carries by unit; the rest is written with three significant digits."""
 
 _SHOWN_IN_MM = 2.0
+_FARTHEST_M = 1e9
 
 _SHOWN_UNITS = {"deg": "°", "ohm": "Ω", "wl": "λ", "W/m2": "W/m²", "m2": "m²", "kg/m3": "kg/m³", "1": ""}
 
@@ -134,6 +135,8 @@ class Numbers:
 
     def rounded_up(self, metres: float) -> str:
         """A compliance distance: upwards to 0.1 m, never down."""
+        if not abs(metres) < _FARTHEST_M:
+            return self._with_unit(self.plain(metres), "m")
         return self._with_unit(self.plain(math.ceil(round(metres * 10, 6)) / 10, 1), "m")
 
     @staticmethod

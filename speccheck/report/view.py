@@ -21,6 +21,7 @@ from speccheck.records import (
     Level,
     MatrixRow,
     PanelAssessment,
+    Requirement,
     Settings,
     Tender,
 )
@@ -105,7 +106,7 @@ class PanelView:
 class MatrixLine:
     """One line of the offer matrix: a requirement in one band, and each panel's row or None."""
 
-    requirement_index: int
+    requirement: Requirement
     band: Band | None
     rows: tuple[MatrixRow | None, ...]
 
@@ -229,18 +230,20 @@ def _matrix(assessment: Assessment) -> tuple[MatrixLine, ...]:
     """Requirements in tender order; the panels' rows side by side."""
     if assessment.tender is None:
         return ()
-    place = {id(r): i for i, r in enumerate(assessment.tender.requirements)}
-    equal = {(r.where, r.clause): i for i, r in enumerate(assessment.tender.requirements)}
+    known = list(assessment.tender.requirements)
+    places = {id(requirement): i for i, requirement in enumerate(known)}
     lines: dict[tuple[int, Band | None], list[MatrixRow | None]] = {}
     for column, panel in enumerate(assessment.panels):
         for row in panel.requirements:
-            index = place.get(id(row.requirement), equal.get((row.requirement.where, row.requirement.clause)))
-            if index is None:
-                raise ValueError(f"requirement {row.requirement.clause!r} is not in the tender")
+            index = places.get(id(row.requirement))
+            if index is None:  # a result read back from JSON holds equal requirements, not the same ones
+                if row.requirement not in known:
+                    known.append(row.requirement)
+                index = known.index(row.requirement)
             line = lines.setdefault((index, row.band), [None] * len(assessment.panels))
             line[column] = row
     return tuple(
-        MatrixLine(requirement_index=index, band=band, rows=tuple(rows))
+        MatrixLine(requirement=known[index], band=band, rows=tuple(rows))
         for (index, band), rows in sorted(lines.items(), key=lambda item: item[0][0])
     )
 

@@ -9,7 +9,9 @@ from itertools import pairwise
 
 import jinja2
 import pytest
+from hypothesis import HealthCheck, given, settings
 from report.sample import OUTLINE, PANEL, SUBMISSION, sample
+from report.strategies import assessments
 
 from speccheck.records import Assessment, Compliance, ExposureNote, Fit, Level, Panel, Unread
 from speccheck.report.html import _environment, render_html
@@ -273,6 +275,14 @@ def test_a_panel_without_any_figure_gives_a_page() -> None:
         OUTLINE, panel=Panel(name="bare", where=PANEL.where), findings=(), exposure=None, drawings=()
     )
     assert "bare" in render_html(replace(sample(), panels=(bare,), tender=None))
+
+
+@settings(max_examples=12, deadline=None, suppress_health_check=list(HealthCheck))
+@given(assessment=assessments())
+def test_no_assessment_stops_the_page(assessment: Assessment) -> None:
+    page = render_html(assessment)
+    assert page.rstrip().endswith("</html>")
+    assert not re.search(r' d="[^"]*(nan|inf)', page)
 
 
 def test_a_page_stays_below_the_weight_limit() -> None:
