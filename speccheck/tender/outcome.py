@@ -44,7 +44,9 @@ def _mandatory(rows: Sequence[MatrixRow]) -> Iterator[MatrixRow]:
 def _failed(rows: Sequence[MatrixRow]) -> Iterator[str]:
     for row in _mandatory(rows):
         if row.verdict in FAILING:
-            margin = f" by {abs(row.margin):.3g} {row.requirement.unit}".rstrip() if row.margin else ""
+            unit = row.requirement.unit
+            shown = "°" if unit == "deg" else f" {unit}".rstrip()
+            margin = f" by {abs(row.margin):.3g}{shown}" if row.margin else ""
             yield f"{label(row)}: mandatory, {row.verdict.value}{margin}"
 
 
