@@ -59,7 +59,8 @@ def _split(parts: list[str]) -> str:
     keys = [listed(piece) for piece in pieces]
     if not all(keys) or len(set(keys)) < len(keys) or any("+" in key for key in keys):
         return ""
-    return "+".join(keys) if len({parameters()[key].unit for key in keys}) == 1 else ""
+    per_port = keys[-1] == "rf_ports" and parameters()[keys[0]].unit != ""  # 'puissance max./port'
+    return "" if per_port else "+".join(keys)
 
 
 def _same_kind(pieces: list[tuple[str, ...]]) -> str:

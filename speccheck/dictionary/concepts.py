@@ -32,6 +32,7 @@ _TELLING = frozenset(
         "percolumn",
     }
     | {"mechanical", "interband", "allports", "pertrx", "withbracket", "consumption", "tilt", "sector"}
+    | {"returnloss", "vswr", "isolation", "pim", "loss", "tenwidth"}
 )
 
 

@@ -36,27 +36,27 @@ class Cut:
 
 
 def cuts(body: str) -> Iterator[Cut]:
-    """The heading as it stands, then with its unit, its conditions and its remarks set aside."""
+    """The heading as it stands, then with its unit, its conditions and its remarks set aside.
+
+    What looks like a unit may be none, so the heading with it comes again at the end.
+    """
     whole = Cut(body)
-    yield whole
-    unit = _without_unit(whole)
-    if unit != whole:
-        yield unit
-    figures = _without_figures(unit)
-    if figures != unit:
-        yield figures
-        trimmed = _without_unit(figures)
-        if trimmed != figures:
-            yield trimmed
+    seen: set[Cut] = set()
+    for cut in itertools.chain([whole], _stages(_without_unit(whole)), _stages(whole)):
+        if cut not in seen:
+            seen.add(cut)
+            yield cut
+
+
+def _stages(start: Cut) -> Iterator[Cut]:
+    yield start
+    figures = _without_figures(start)
+    yield figures
+    yield _without_unit(figures)
     remarks = _without_remarks(figures)
-    if remarks != figures:
-        yield remarks
-    seen = {whole, unit, figures, remarks}
-    for base in dict.fromkeys((unit, figures, remarks)):
-        for cut in _without_notes(base):
-            if cut not in seen:
-                seen.add(cut)
-                yield cut
+    yield remarks
+    for base in dict.fromkeys((start, figures, remarks)):
+        yield from _without_notes(base)
 
 
 def _without_unit(cut: Cut) -> Cut:
@@ -70,22 +70,18 @@ def _without_unit(cut: Cut) -> Cut:
             rest = f"{cut.text[: bracket.start()]} ({others}) {cut.text[bracket.end() :]}"
             return replace(cut, text=rest, unit=unit)
     trailing = _TRAILING_UNIT.search(cut.text)
-    if (
-        trailing
-        and unit_name(trailing.group(1))
-        and not cut.text[trailing.start() - 1 : trailing.start()].isdigit()
-    ):
-        bare = trailing.group()[0].isspace() and len(trailing.group(1)) < 2 and trailing.group(1) not in "°%Ω"
-        if not bare:
-            return replace(
-                cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=unit_name(trailing.group(1))
-            )
-    return cut
+    if not trailing or cut.text[trailing.start() - 1 : trailing.start()].isdigit():
+        return cut
+    letter_alone = trailing.group()[0].isspace() and len(trailing.group(1)) < 2
+    name = unit_name(trailing.group(1))
+    if not name or (letter_alone and trailing.group(1) not in "°%Ω"):
+        return cut
+    return replace(cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=name)
 
 
 def _unit_among_notes(inner: str) -> tuple[str, str]:
-    """The unit that begins or ends the words in brackets, 'N at 150 km/h' and 'H x W x D, mm', and the rest."""
-    first = inner.split(" @ ")[0].split(" at ")[0].split(",")[0]
+    """The unit that begins or ends the words in brackets, 'N at 150 km/h' or 'H x W x D, mm'; the rest."""
+    first = re.split(r" @ | at |,", inner, maxsplit=1)[0]
     if first != inner and unit_name(first):
         return unit_name(first), inner[len(first) :]
     before, comma, last = inner.rpartition(",")

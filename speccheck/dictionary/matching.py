@@ -19,7 +19,7 @@ from speccheck.dictionary.cuts import Cut, conditions_of, cuts
 from speccheck.dictionary.folding import fold, key_of, word_list
 from speccheck.dictionary.index import listed, suggestions
 from speccheck.dictionary.parameters import parameters
-from speccheck.quantities import split_footnotes, tidy
+from speccheck.quantities import answers, dimension, split_footnotes, tidy
 
 _LONGEST_HEADING = 160
 _SIDES = frozenset({"f", "l", "s", "r"})
@@ -114,9 +114,15 @@ def _match_body(forms: Iterable[Cut], body: str, house: Mapping[str, str]) -> He
     tolerance_of = bool(word_list("tolerance").intersection(words))
     for cut in forms:
         found = _look_up(cut.text, house, tolerance_of=tolerance_of)
-        if found:
+        if found and _unit_fits(cut.unit, found):
             return _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
     return None
+
+
+def _unit_fits(unit: str, keys: str) -> bool:
+    """Whether what was taken for a unit can be one of the parameter's: 'Gain (LB)' is not in pounds."""
+    own = parameters()[keys.split("+", maxsplit=1)[0]]
+    return own.kind in ("text", "connectors", "polarisation") or answers(unit, dimension(own.unit))
 
 
 def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:

@@ -8,6 +8,7 @@ from speccheck.quantities.attachments import connector_of_date
 from speccheck.quantities.cell import read_cell
 from speccheck.quantities.content import CellContent, Quantity
 from speccheck.quantities.counts import array_of
+from speccheck.quantities.figures import answers
 from speccheck.quantities.numerals import NUMERAL_PATTERN, DecimalHabit, decimal_habit, numeral
 from speccheck.quantities.settling import settle
 from speccheck.quantities.spectrum import band_names
@@ -22,6 +23,7 @@ __all__ = [
     "DecimalHabit",
     "Quantity",
     "UnknownUnitError",
+    "answers",
     "array_of",
     "band_names",
     "connector_of_date",

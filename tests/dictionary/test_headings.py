@@ -163,7 +163,7 @@ def test_every_heading_of_the_dictionary_is_recognised_as_its_parameter() -> Non
     assert wrong == []
 
 
-@given(st.sampled_from(ALL), st.sampled_from(["{} [mm]", "{}:", "  {}  ", "{} (see remark)", "3.2 {}"]))
+@given(st.sampled_from(ALL), st.sampled_from(["{} *", "{}:", "  {}  ", "{} (see remark)", "3.2 {}"]))
 def test_case_and_trimmings_do_not_matter(entry: tuple[str, str], form: str) -> None:
     key, text = entry
     assert "+".join(match_heading(form.format(text.upper() if "ß" not in text else text)).parameters) == key
