@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import math
+
 from speccheck.checks.beams import SAME_BEAM, claim_freq_hz, flat, rest_tilt_deg, uniform_widths_deg
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
@@ -16,14 +18,26 @@ from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 SOLID_ANGLE = 41_253.0
 PLANAR = 32_400.0
-LOSSLESS = 35_000.0
+LOSSLESS = 36_407.0
 LOSSY = 17_000.0
-"""Products gain × width × width [deg²]: the sphere; arrays with side lobes (Balanis ch. 6); the
-lossless directivity of a uniform column (8 at 0.8 λ, computed); a lossy or heavily shaped
+"""Products gain × width × width [deg²] of narrow beams: the sphere; arrays with side lobes (Balanis ch. 6);
+a Gaussian beam without side lobes or losses, 16·ln 2·(180/π)²; a lossy or heavily shaped
 beam (the 14 dBi, 70° × 10° panel of 3GPP TR 36.814 Table A.2.1.1-2 gives 17 600)."""
 
 HOUSING_ALLOWANCE_DB = 0.5
 """Uniform arrays exceed 4πA/λ² by up to 0.4 dB (brute force on published arrays); rounded up [dB]."""
+
+
+def crowding(vertical_deg: float) -> float:
+    """What the products grow by for a beam that is wide [deg] in elevation.
+
+    The area of a strip of the sphere shrinks with the cosine of its elevation. Averaged over a Gaussian
+    beam the cosine is exp(−θ²/(16·ln 2)), θ in radians.
+
+    >>> round(crowding(8), 3), round(crowding(65), 3)
+    (1.002, 1.123)
+    """
+    return math.exp(math.radians(min(vertical_deg, 180.0)) ** 2 / (16 * math.log(2)))
 
 
 @check(
@@ -47,14 +61,16 @@ def gain_fits_beamwidths(
 
     Formula
     G ≤ 10·log10(K ÷ (θh·θv)), K = 32 400 for arrays with side lobes; 41 253 is the sphere itself. A gain
-    between them is questioned, one above does not fit, one under K = 17 000 is questioned as low.
+    between them is questioned, one above does not fit, one under K = 17 000 is questioned as low. The upper
+    two are for beams narrow in elevation; for a wide one they grow by exp(θv² ÷ (16·ln 2)), θv in radians.
 
     Assumptions
     Gain and both widths belong to one beam at one frequency. Widths may be half of their last printed digit
     smaller. Horizontal widths to about 130°.
 
     Worked example
-    65° × 7°: 18.5 dBi with 32 400 and 19.6 dBi with 41 253; 20.5 dBi does not fit.
+    65° × 7°: 18.5 dBi with 32 400 and 19.6 dBi with 41 253; 20.5 dBi does not fit. 65° × 65°: K grows by
+    1.12, so 9.3 dBi and 10.4 dBi.
     """
     if "element_gain_dbi" in gain.at:
         return _of_the_short_formula(gain)
@@ -68,9 +84,11 @@ def gain_fits_beamwidths(
         return None
     rounding = last_digit_slack(horizontal_beamwidth) / across + last_digit_slack(vertical_beamwidth) / along
     slack = last_digit_slack(gain) + 4.343 * rounding
-    upper = LOSSLESS if gain.at.get("loss_db") == 0 else PLANAR
+    grown = crowding(along)
+    k_upper = (LOSSLESS if gain.at.get("loss_db") == 0 else PLANAR) * grown
+    k_sphere = SOLID_ANGLE * grown
     sphere, planar, least = (
-        float(gain_from_beamwidths_dbi(across, along, k)) for k in (SOLID_ANGLE, upper, LOSSY)
+        float(gain_from_beamwidths_dbi(across, along, k)) for k in (k_sphere, k_upper, LOSSY)
     )
     value = gain.nominal
     verdict = (
@@ -85,20 +103,20 @@ def gain_fits_beamwidths(
         return _of_two_beams(gain, horizontal_beamwidth, other, model)
     meaning = {
         Fit.FITS: "in the ordinary range",
-        Fit.DOUBTFUL: f"{value - planar:+.1f} dB against 32 400",
+        Fit.DOUBTFUL: f"{value - planar:+.1f} dB against {_thousands(k_upper)}",
         Fit.DOES_NOT_FIT: "more than a sphere holds",
     }[verdict]
     return Judgement(
         verdict=verdict,
         summary=f"{claim(gain)} gain claimed with {across:.4g}° × {along:.4g}°; such a beam has up to"
         f" {planar:.1f} dBi"
-        f" (K = 32 400), {sphere:.1f} dBi at most (K = 41 253). The claim implies K = {implied:.0f}:"
+        f" (K = {_thousands(k_upper)}), {sphere:.1f} dBi at most (K = {_thousands(k_sphere)}). The claim"
+        f" implies K = {_thousands(implied)}:"
         f" {meaning}.",
         claimed=Amount(round(value, 2), "dBi"),
         expected=Interval(round(least, 2), round(planar, 2), "dBi"),
         working=(
-            Step("Upper edge", f"10·log10(32400 ÷ ({across:.4g} × {along:.4g}))", round(planar, 2), "dBi"),
-            Step("Sphere", f"10·log10(41253 ÷ ({across:.4g} × {along:.4g}))", round(sphere, 2), "dBi"),
+            *_edge_steps((across, along), grown, (k_upper, planar), (k_sphere, sphere)),
             Step(
                 "Implied constant",
                 f"10^({value:g} ÷ 10) × {across:.4g} × {along:.4g}",
@@ -109,6 +127,30 @@ def gain_fits_beamwidths(
         assumptions=("Gain and both widths belong to one beam at one frequency, widths at -3 dB.", *note),
         question="Please state frequency, tilt and level (-3 dB) of the gain and of each beamwidth.",
     )
+
+
+def _edge_steps(
+    widths_deg: tuple[float, float], grown: float, upper: tuple[float, float], sphere: tuple[float, float]
+) -> tuple[Step, ...]:
+    across, along = widths_deg
+    cosine = f"exp(({along:.4g}° × π ÷ 180)² ÷ (16·ln 2))"
+    named = (("Upper edge", upper), ("Sphere", sphere))
+    return (
+        Step("Growth of K with the width in elevation", cosine, round(grown, 3)),
+        *(
+            Step(
+                name,
+                f"10·log10({k / grown:.0f} × {grown:.3f} ÷ ({across:.4g} × {along:.4g}))",
+                round(edge, 2),
+                "dBi",
+            )
+            for name, (k, edge) in named
+        ),
+    )
+
+
+def _thousands(product: float) -> str:
+    return f"{product:,.0f}".replace(",", " ")
 
 
 def _width_of_another_beam(
