@@ -33,7 +33,7 @@ _WITH_KIT = ("incl", "with mounting", "with brackets", "with the mounting")
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Habits:
-    """What a tender settles for all its rows: house names, statistic, decimal comma, level of a row."""
+    """What a tender settles for all its rows: house names, default statistic, decimal comma."""
 
     house: Mapping[str, str]
     statistic: str = "each"
@@ -41,6 +41,7 @@ class Habits:
 
 
 PLAIN_HABITS = Habits(house={})
+CONTRADICTING_LEVELS = "words of two levels in one demand"
 
 
 def read_wording(
@@ -112,7 +113,7 @@ def _without_figure(found: Sequence[Token], key: str) -> Clause:
     if key in parameters() and parameters()[key].kind == "text":
         rest = " ".join(t.text for t in found if t.kind in (Kind.UNREAD, Kind.SCOPE))
         return Clause(parameter=key, operator="evidence", limit=rest or None)
-    return Clause(parameter=key).doubting("VALUE")
+    return Clause(parameter=key.split("+", maxsplit=1)[0]).doubting("VALUE")
 
 
 def _completed(clause: Clause, found: Sequence[Token], level: Level | None, habits: Habits) -> Clause:
@@ -148,6 +149,8 @@ def _with_level(clause: Clause, found: Sequence[Token], column: Level | None) ->
     Where one wording holds two levels, the demand of the weaker part keeps its own.
     """
     said = [t.said for t in names.of_kind(found, Kind.LEVEL)]
+    if len({word.removesuffix("_by_will") for word in said}) > 1 and not _two_levels(found):
+        clause = clause.doubting("LEVEL", detail=CONTRADICTING_LEVELS)
     verb = clause.level or (own_level(found) if clause.parameter == "" or not _two_levels(found) else None)
     if column is None:
         plain = verb is not None and said[0] != "mandatory_by_will"

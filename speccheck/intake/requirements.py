@@ -103,6 +103,11 @@ def _clauses(
     said = read_wording(wording, level=level, parameter=parameter, habits=habits) if wording else ()
     if row.text("must") or row.text("should"):
         return tuple(_two_values(row, said, parameter, habits))
+    key = parameter or (said[0].parameter if said else "")
+    if row.text("value") and "+" in key:
+        spoken = " ".join(row.text(name) for name in ("operator", "value", "unit"))
+        several = read_wording(spoken, level=level, parameter=key, habits=habits)
+        return tuple(_with_columns(clause, row) for clause in several)
     if row.text("value"):
         context = said[0] if said else Clause(level=level or Level.MANDATORY)
         stated = stated_clause(row, row.text("value"), context, parameter or context.parameter, habits)

@@ -11,7 +11,7 @@ from pathlib import Path
 from speccheck.errors import UnusableInputError
 from speccheck.intake.grid import Grid
 from speccheck.intake.opening import Book, open_book
-from speccheck.intake.phrases import Habits
+from speccheck.intake.phrases import CONTRADICTING_LEVELS, Habits
 from speccheck.intake.requirements import COLUMNS, ReadRow, read_requirements
 from speccheck.intake.tender_settings import read_deviations, read_headings, read_settings
 from speccheck.intake.tender_tables import Table, fold, table, trouble
@@ -136,12 +136,21 @@ def _row_troubles(rows: Iterable[ReadRow]) -> Iterator[Finding]:
             yield trouble(
                 "tender-requirement-rows", "Requirement rows", where, summary, ask, verdict=Fit.NOT_JUDGED
             )
-        level = row.row.text("level")
-        if level and any(doubt_code(text) == "LEVEL" for r in row.requirements for text in r.doubts):
-            clause = row.requirements[0].clause
-            summary = f"clause {clause}: level '{level}' beside the words of the row; the column counts"
-            ask = "Use one level in the column and in the wording."
-            yield trouble("tender-levels", "Levels of requirements", row.row.where("level"), summary, ask)
+        yield from _level_troubles(row)
+
+
+def _level_troubles(row: ReadRow) -> Iterator[Finding]:
+    doubts = [text for r in row.requirements for text in r.doubts if doubt_code(text) == "LEVEL"]
+    title, level = "Levels of requirements", row.row.text("level")
+    if any(CONTRADICTING_LEVELS in text for text in doubts):
+        first = row.requirements[0]
+        summary = f"clause {first.clause}: {CONTRADICTING_LEVELS}; read as {first.level.value}"
+        yield trouble("tender-levels", title, first.where, summary, "Use words of one level.")
+    elif level and doubts:
+        clause = row.requirements[0].clause
+        summary = f"clause {clause}: level '{level}' beside the words of the row; the column counts"
+        ask = "Use one level in the column and in the wording."
+        yield trouble("tender-levels", title, row.row.where("level"), summary, ask)
 
 
 def _duplicates(rows: Iterable[ReadRow]) -> Iterator[Finding]:

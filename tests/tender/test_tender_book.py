@@ -137,6 +137,7 @@ def test_two_columns_of_values_and_weights(tmp_path: Path) -> None:
         (["1", "VSWR not less than 1.3", "M"], "B2", "direction that is worse"),
         (["1", "Gain should be ≥ 17 dBi", "M"], "C2", "level 'M' beside"),
         (["1", "Gain ≥ 17 dBi", "maybe"], "C2", "level 'maybe'"),
+        (["1", "Gain shall preferably be ≥ 17 dBi", "M"], "B2", "words of two levels"),
         (["1", "Gain ≥ 16 dBi", "M", "gain", "≥", 17, "dBi"], "B2", "columns and the wording"),
     ],
 )
@@ -210,3 +211,9 @@ def test_a_tender_given_as_bid_is_refused_by_name(tmp_path: Path) -> None:
         UnusableInputError, match=r"'Requirements', cell B1: found a tender workbook.*--tender"
     ):
         read_submission(path)
+
+
+def test_a_size_in_the_value_column_gives_three_limits(tmp_path: Path) -> None:
+    row = ["1", None, "M", "Dimensions", "≤", "2000 x 450 x 220", "mm"]
+    demands = [(r.parameter, r.operator, r.limit, r.unit) for r in _tender(tmp_path, row).requirements]
+    assert demands == [("height", "≤", 2000, "mm"), ("width", "≤", 450, "mm"), ("depth", "≤", 220, "mm")]

@@ -33,7 +33,6 @@ class Figure:
     unit: str
     slack_unit: str = ""
     ambiguous: bool = False
-    digits: str = ""
 
     def with_unit(self, unit: str) -> Figure:
         """The same figure under a unit printed once for a list of them."""
@@ -110,7 +109,6 @@ def _figure(form: Form, found: re.Match[str], decimal_comma: bool | None) -> Fig
         unit=first or last,
         slack_unit=last or first if form is Form.TOLERANCE else "",
         ambiguous=any(doubtful for _, doubtful in read),
-        digits=parts["a"],
     )
 
 
