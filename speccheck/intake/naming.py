@@ -10,15 +10,9 @@ from speccheck.intake.claims import SheetResult
 from speccheck.intake.down_regions import Down
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.marks import Marks
+from speccheck.intake.titles import PARTS, announced, codes, name_in_title
 from speccheck.intake.words import fold, is_generic_sheet_name, title_prefixes
 
-_CODE = re.compile(r"(?<![\w.])(?=[\w./+-]*\d)(?=[\w./+-]*[A-Za-z])[A-Za-z0-9][\w./+-]{2,}(?![\w])")
-_NOT_A_CODE = re.compile(
-    r"^(?:\d+(?:[.,]\d+)?(?:mhz|ghz|dbi|dbd|db|mm|cm|m|kg|w|kw|n|v|deg|ports?|x\d.*)|[nb]\d{1,3}|\d+t\d+r|"
-    r"ip\d\d|rev\.?\w*|v\d(?:\.\d+)*|[245]g|ts\d+.*|\d{4}-\d\d-\d\d|\d+x\d+\w*|q[1-4])$",
-    re.IGNORECASE,
-)
-_PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—]\s+")
 _DESCRIBES = re.compile(
     r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|"
     r"annex|appendix|form|response|schedule|questionnaire|page|values?|all|valid|"
@@ -50,27 +44,24 @@ class Title:
 def model_name(text: str) -> str:
     """The panel's name in a title or model cell: 'Type Kaldora 12S' is Kaldora 12S.
 
-    Without a word such as 'Type', a title of several words is named by the code in it.
+    A longer title is named by the code in it, together with the capitalised words beside the code.
     """
     words = " ".join(text.split())[:_LONGEST_NAME]
     stripped = _without_prefix(words, "prefix")
     plain = _OF.sub("", _without_prefix(stripped, "weak"))
-    inside = _INSIDE.search(plain)
-    if stripped == words and inside is not None:
-        stripped = plain = inside[1]
-    plain = _ASIDE.sub("", plain)
     if re.fullmatch(r"\d{1,2}|[A-Za-z]", plain):
         return words
-    parts = [part for part in _PARTS.split(plain) if part and not _DESCRIBES.search(fold(part))]
+    titled = name_in_title(words)
+    if titled:
+        return titled
+    inside = _INSIDE.search(plain)
+    plain = _ASIDE.sub("", inside[1] if stripped == words and inside is not None else plain)
+    parts = [part for part in PARTS.split(plain) if part and not _DESCRIBES.search(fold(part))]
     name = parts[0] if parts else plain
-    codes = _codes(name)
-    if stripped == words and codes and len(name.split()) > 2:
-        return codes[-1]
+    found = codes(name)
+    if stripped == words and inside is None and found and len(name.split()) > 2:
+        return found[-1]
     return name
-
-
-def _codes(text: str) -> list[str]:
-    return [m for m in _CODE.findall(text) if not _NOT_A_CODE.match(m)]
 
 
 def _without_prefix(words: str, strength: str) -> str:
@@ -93,17 +84,19 @@ def _score(text: str, sheet: str) -> int:
         return 4
     stripped = _without_prefix(words, "prefix")
     inside = _INSIDE.search(words)
-    if stripped != words and len(stripped) <= _LONG_NAME and (_codes(stripped) or stripped[-1:].isdigit()):
+    if announced(words):
+        return 3
+    if stripped != words and len(stripped) <= _LONG_NAME and (codes(stripped) or stripped[-1:].isdigit()):
         return 3
     if inside is not None and any(letter.isdigit() for letter in inside[1]):
         return 3
-    if _codes(words) and not _PAPERS.search(fold(words)):
+    if codes(words) and not _PAPERS.search(fold(words)):
         return 2
     return 1 if stripped != words and len(stripped.split()) <= 3 else 0
 
 
 def _may_name(text: str) -> bool:
-    parts = _PARTS.split(" ".join(text.split()))
+    parts = PARTS.split(" ".join(text.split()))
     return not is_generic_sheet_name(text) and not all(_DESCRIBES.search(fold(part)) for part in parts)
 
 

@@ -95,6 +95,13 @@ def title_prefixes(strength: str = "prefix") -> frozenset[str]:
     return _table()["title"][strength]
 
 
+@cache
+def generic_title_words() -> frozenset[str]:
+    """Single words that occur in titles and sheet names without being part of a panel's name."""
+    phrases = title_prefixes("prefix") | title_prefixes("weak") | _table()["sheet"]["generic"]
+    return frozenset(word for phrase in phrases for word in phrase.split())
+
+
 def is_band_nickname(text: str) -> bool:
     """Whether a text names a band without saying its frequencies, such as ``Low band`` or ``Sub-band 2``."""
     folded = _BRACKETED.sub("", fold(text))
