@@ -207,7 +207,7 @@ def main(arguments: list[str]) -> int:
     names = [a for a in arguments if not a.startswith("-")]
     results = [score(source, expectations(expected)) for source, expected in corpus(names)]
     for result in results:
-        share = 100 * result.right / result.total
+        share, wrong = 100 * result.right / result.total, len(result.wrong)
         print(
             f"{result.file:36} {result.right:4} of {result.total:4}  {share:5.1f} %  wrong {len(result.wrong)}"
         )

@@ -7,11 +7,18 @@ import importlib
 
 import pytest
 
-MODULES = ["attachments", "cell", "counts", "lexer", "numerals", "settling", "spectrum", "statuses", "tidy", "units"]
+READERS = "attachments cell counts lexer numerals settling spectrum statuses tidy units"
+MODULES = READERS.split()
 
 
 @pytest.mark.parametrize(
-    "module", [*(f"quantities.{m}" for m in MODULES), "dictionary.folding", "dictionary.matching"]
+    "module",
+    [
+        *(f"quantities.{m}" for m in MODULES),
+        "dictionary.concepts",
+        "dictionary.folding",
+        "dictionary.matching",
+    ],
 )
 def test_examples(module: str) -> None:
     found = doctest.testmod(importlib.import_module(f"speccheck.{module}"))
