@@ -208,15 +208,13 @@ def main(arguments: list[str]) -> int:
     results = [score(source, expectations(expected)) for source, expected in corpus(names)]
     for result in results:
         share, wrong = 100 * result.right / result.total, len(result.wrong)
-        print(
-            f"{result.file:36} {result.right:4} of {result.total:4}  {share:5.1f} %  wrong {len(result.wrong)}"
-        )
+        print(f"{result.file:38} {result.right:4} of {result.total:4} {share:6.1f} %, wrong {wrong}")
         if "-v" in arguments:
             for line in (*result.missed, *(f"WRONG {w}" for w in result.wrong)):
                 print(f"    {line}")
     right, total = sum(r.right for r in results), sum(r.total for r in results)
     wrong = sum(len(r.wrong) for r in results)
-    print(f"{'all':36} {right:4} of {total:4}  {100 * right / total:5.1f} %  wrong {wrong}")
+    print(f"{'all':38} {right:4} of {total:4} {100 * right / total:6.1f} %, wrong {wrong}")
     return 0 if right >= 0.97 * total and not wrong else 1
 
 

@@ -11,15 +11,10 @@ READERS = "attachments cell counts lexer numerals settling spectrum statuses tid
 MODULES = READERS.split()
 
 
-@pytest.mark.parametrize(
-    "module",
-    [
-        *(f"quantities.{m}" for m in MODULES),
-        "dictionary.concepts",
-        "dictionary.folding",
-        "dictionary.matching",
-    ],
-)
+PATHS = [*(f"quantities.{m}" for m in MODULES), *(f"dictionary.{m}" for m in ("concepts", "folding", "matching"))]
+
+
+@pytest.mark.parametrize("module", PATHS)
 def test_examples(module: str) -> None:
     found = doctest.testmod(importlib.import_module(f"speccheck.{module}"))
     assert found.failed == 0
