@@ -174,7 +174,7 @@ def _stem(word: str) -> str:
 def _vocabulary() -> frozenset[str]:
     """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
     texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
-    return frozenset(_stem(word) for text in texts for word in _runs(text) if not unit_name(word))
+    return frozenset(_stem(word) for word in set(_runs("\n".join(texts))) if not unit_name(word))
 
 
 def is_unit(text: str) -> bool:
