@@ -10,19 +10,21 @@ from dataclasses import dataclass, replace
 
 from speccheck.dictionary.concepts import telling_words
 from speccheck.dictionary.folding import fold, heading_words, word_list
-from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN, unit_name
+from speccheck.quantities import NUMERAL_PATTERN, unit_name
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
 _AT_WORDS = (
     r"(?:@|\b(?:at|bei|for|für|à|pour|a|para|per|przy|dla|bij|voor|with|mit|avec|con|com|z|met|in|within)\b)"
 )
-_FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{UNIT_PATTERN}|1(?=\W|$))?"
+# units that conditions of a heading come in; a short list keeps the expression small
+_CONDITION_UNIT = r"(?:[GMk]?Hz|km/hr?|kmh|kph|m/s|mph|kn|kts?|°\s?C|°|deg(?:rees?)?|dBm|dBW|k?W|V|mm|m|%|λ|Grad|years?)(?!\w)"
+_FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{_CONDITION_UNIT}|1(?=\W|$))?"
 _CONDITION = re.compile(
     rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])"
     r"(?:\s(?:tilt|downtilt|edt|carriers|tones)\b)?",
     re.IGNORECASE,
 )
-_TRAILING_UNIT = re.compile(rf"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?({UNIT_PATTERN})\s*$")
+_TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
 _SPLIT_NOTES = re.compile(r"\s*[,;]\s+|\s+[-–:]\s+|:\s*|\s*@\s*|\s+/\s+")
 
 

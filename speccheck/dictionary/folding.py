@@ -13,6 +13,7 @@ _SPECIAL_LETTERS = str.maketrans(
     {"ł": "l", "ø": "o", "đ": "d", "œ": "oe", "æ": "ae", "ı": "i", "φ": "phi", "θ": "theta"}
 )
 _ELIDED = re.compile(r"\b(?:d|l|dell|all|dall|nell|sull|qu)['’]")
+_COMBINING = re.compile(r"[\u0300-\u036f]")
 _NOT_WORDS = re.compile(r"[^\w°±λ&]+|_")
 
 
@@ -23,19 +24,20 @@ def fold(text: str) -> tuple[str, ...]:
     (('sidelobe', 'main', 'beam'), ('offnungswinkel',))
     """
     raw = [word for word in _NOT_WORDS.sub(" ", _unaccented(text)).split() if word not in ("the", "a")]
-    same, articles = _same(), _articles()
+    same, pairs, articles = _same(), _pairs(), _articles()
     words: list[str] = []
-    index = 0
-    while index < len(raw):
-        pair = same.get(" ".join(raw[index : index + 2]))
-        if pair and index + 1 < len(raw):
-            words.extend(pair.split())
-            index += 2
+    follows_pair = False
+    for index, plain in enumerate(raw):
+        if follows_pair:
+            follows_pair = False
             continue
-        word = same.get(raw[index]) or _singular(raw[index])
+        if plain in pairs and index + 1 < len(raw) and (pair := pairs[plain].get(raw[index + 1])):
+            words.extend(pair.split())
+            follows_pair = True
+            continue
+        word = same.get(plain) or _singular(plain)
         if word not in articles:
             words.append(word)
-        index += 1
     return tuple(words)
 
 
@@ -67,7 +69,7 @@ def _unaccented(text: str) -> str:
     if plain.isascii():
         return plain
     plain = unicodedata.normalize("NFKD", plain.translate(_SPECIAL_LETTERS))
-    return "".join(c for c in plain if not unicodedata.combining(c))
+    return _COMBINING.sub("", plain)
 
 
 def _singular(word: str) -> str:
@@ -83,4 +85,20 @@ def _articles() -> frozenset[str]:
 
 @functools.cache
 def _same() -> dict[str, str]:
-    return {_unaccented(form): word for word, forms in heading_words()["same"].items() for form in forms}
+    """Spelling to the word it counts as."""
+    return {form: word for form, word in _spellings() if " " not in form}
+
+
+@functools.cache
+def _pairs() -> dict[str, dict[str, str]]:
+    """First and second word of two-word spellings to the word, or words, they count as."""
+    table: dict[str, dict[str, str]] = {}
+    for form, word in _spellings():
+        first, _, second = form.partition(" ")
+        if second:
+            table.setdefault(first, {})[second] = word
+    return table
+
+
+def _spellings() -> list[tuple[str, str]]:
+    return [(_unaccented(form), word) for word, forms in heading_words()["same"].items() for form in forms]

@@ -11,7 +11,10 @@ READERS = "attachments cell counts lexer numerals settling spectrum statuses tid
 MODULES = READERS.split()
 
 
-PATHS = [*(f"quantities.{m}" for m in MODULES), *(f"dictionary.{m}" for m in ("concepts", "folding", "matching"))]
+PATHS = [
+    *(f"quantities.{m}" for m in MODULES),
+    *(f"dictionary.{m}" for m in ("concepts", "folding", "matching")),
+]
 
 
 @pytest.mark.parametrize("module", PATHS)
