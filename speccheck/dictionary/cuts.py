@@ -17,7 +17,10 @@ _AT_WORDS = (
     r"(?:@|\b(?:at|bei|for|für|à|pour|a|para|per|przy|dla|bij|voor|with|mit|avec|con|com|z|met|in|within)\b)"
 )
 # units that conditions of a heading come in; a short list keeps the expression small
-_CONDITION_UNIT = r"(?:[GMk]?Hz|km/hr?|kmh|kph|m/s|mph|kn|kts?|°\s?C|°|deg(?:rees?)?|dBm|dBW|k?W|V|mm|m|%|λ|Grad|years?)(?!\w)"
+_CONDITION_UNIT = (
+    r"(?:[GMk]?Hz|km/hr?|kmh|kph|m/s|mph|kn|kts?|°\s?C|°|deg(?:rees?)?|Grad"
+    r"|dBm|dBW|k?W|V|mm|m|%|λ|years?)(?!\w)"
+)
 _FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{_CONDITION_UNIT}|1(?=\W|$))?"
 _CONDITION = re.compile(
     rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])"
