@@ -18,8 +18,10 @@ _DASHES = str.maketrans(
 @lru_cache(maxsize=20_000)
 def fold(text: str) -> str:
     """A text in lower case without accents, with plain dashes and single spaces, without a closing colon."""
-    plain = unicodedata.normalize("NFKD", text.casefold().translate(_DASHES))
-    plain = "".join(letter for letter in plain if not unicodedata.combining(letter))
+    plain = text.casefold()
+    if not plain.isascii():
+        plain = unicodedata.normalize("NFKD", plain.translate(_DASHES))
+        plain = "".join(letter for letter in plain if not unicodedata.combining(letter))
     return _SPACES.sub(" ", plain).strip(" :*\t\n")
 
 
