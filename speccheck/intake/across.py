@@ -5,19 +5,18 @@ from __future__ import annotations
 import re
 from dataclasses import dataclass, field, replace
 
-from speccheck.intake.across_bands import RowBand, band_of, holds_nicknames, holds_spans
-from speccheck.intake.bands import find_bands, is_band_label
+from speccheck.intake.across_bands import RowBand, band_of, gives_frequencies, holds_nicknames, holds_spans
+from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
-from speccheck.intake.columns import PLANE_LETTERS, Column, describe, heading_stack
+from speccheck.intake.columns import Column, heading_stack
+from speccheck.intake.composing import compose
 from speccheck.intake.grid import Cell, Grid
-from speccheck.intake.labels import Label, Labels, is_unit, statistic_of
+from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Across
-from speccheck.intake.words import column_role
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
-_BRACKETS = re.compile(r"[(\[][^()\[\]]*[)\]]")
 _NAME_KEYS = ("model", "panel_type", "part_number")
 _EXAMPLE = re.compile(r"\s*example\b", re.IGNORECASE)
 _SILENT_ROLES = {"remark": "note", "number": "label", "group": "label", "level": "label", "required": "label"}
@@ -52,6 +51,7 @@ class AcrossReader:
         self._named: int = 0
         self._banded: int = 0
         self._nicknamed: int = 0
+        self._names_of_bands: set[int] = set()
         self._contexts: dict[tuple[int, str], Context] = {}
         self._by_name: dict[str, tuple[Draft, set[object]]] = {}
         self._at = _Row()
@@ -76,6 +76,8 @@ class AcrossReader:
         for index in sorted(used):
             stack = heading_stack(self._grid, rows, index, self._table.left)
             label, column = compose(index, stack, labels)
+            letters = [c for c in stack if len(c.text.strip()) == 1 and self._marks.is_heading(c)]
+            label = self._marks.headings[letters[-1].row, letters[-1].column] if letters else label
             role = "" if label else column.role
             context = Context(
                 label=label,
@@ -100,10 +102,10 @@ class AcrossReader:
         frequencies = [
             i for i in columns if self._is_frequency(fields[i]) and holds_spans(columns[i], self._unit_of(i))
         ]
-        if len(frequencies) > 1:
-            narrow = [i for i in frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
-            frequencies = narrow or frequencies
-        self._banded = frequencies[0] if frequencies else 0
+        given = [i for i in frequencies if gives_frequencies(columns[i])]
+        self._names_of_bands = {i for i in frequencies if given and i not in given}
+        narrow = [i for i in given or frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
+        self._banded = next(iter(narrow or given or frequencies), 0)
         nicknames = [i for i in columns if holds_nicknames(columns[i])]
         self._nicknamed = nicknames[0] if nicknames else 0
 
@@ -197,7 +199,8 @@ class AcrossReader:
         if found is None:
             return
         said, column = self._at.said, found.column
-        if cell.column == self._nicknamed or (cell.column == self._banded and said.point):
+        silent = cell.column == self._nicknamed or cell.column in self._names_of_bands
+        if silent or (cell.column == self._banded and said.point):
             self._result.mark(cell, "label")
         elif found.label:
             band, banded = column.band, column.band is not None or bool(column.band_name)
@@ -255,36 +258,3 @@ class AcrossReader:
                     self._marks.labels.suggestion(found.label.text),
                 )
             )
-
-
-def compose(index: int, stack: list[Cell], labels: Labels) -> tuple[Label, Column]:
-    """The parameter a stack of heading cells names, and what else the stack says."""
-    column = describe(index, stack, labels)
-    words = [
-        " ".join(c.text.split())
-        for c in stack
-        if c.text.strip() in PLANE_LETTERS
-        or not (is_unit(c.text) or is_band_label(c.text) or statistic_of(c.text))
-    ]
-    for text in _combinations(words):
-        label = labels.of(text)
-        if label:
-            if column.band is None and label.bands.spans:
-                column.band = label.bands.hull
-            return label, column
-    if words and column_role(words[-1]):
-        column.role = column_role(words[-1])
-    return Label(" ".join(words)), column
-
-
-def _combinations(words: list[str]) -> list[str]:
-    if not words:
-        return []
-    tails = [words[start:] for start in range(len(words) - 1)]
-    joined = [text for tail in tails for text in (" ".join(tail), ", ".join(tail), _upper_bare(tail))]
-    return [*joined, " ".join(reversed(words)), *reversed(words)]
-
-
-def _upper_bare(words: list[str]) -> str:
-    """Words joined without the brackets of the upper ones: 'HPBW (°)' over 'H' is HPBW H."""
-    return " ".join([*(_BRACKETS.sub("", word).strip() for word in words[:-1]), words[-1]])

@@ -50,6 +50,11 @@ def holds_spans(cells: list[Cell], unit: str) -> bool:
     return bool(first) and len(spans) * 2 > len(first)
 
 
+def gives_frequencies(cells: list[Cell]) -> bool:
+    """Whether a column of bands gives them as frequencies, not by names such as 'n78'."""
+    return not any(find_bands(cell.text).names for cell in cells[:_LOOKED_AT])
+
+
 def holds_nicknames(cells: list[Cell]) -> bool:
     """Whether all cells of a column are nicknames of bands or arrays."""
     first = cells[:_LOOKED_AT]

@@ -52,7 +52,8 @@ def heading_stack(grid: Grid, rows: list[int], column: int, left: int) -> list[C
     stack: list[Cell] = []
     for row in rows:
         cell = grid.covering(row, column)
-        if cell is None and row != rows[-1] and (grid.covering(rows[-1], column) is not None):
+        own = any(above.column == column for above in stack)
+        if cell is None and not own and row != rows[-1] and grid.covering(rows[-1], column) is not None:
             for before in range(column - 1, max(left, column - 12) - 1, -1):
                 cell = grid.cells.get((row, before))
                 if cell is not None:

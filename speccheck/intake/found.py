@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Mapping
 from dataclasses import dataclass, field
 
-from speccheck.quantities import Quantity
+from speccheck.quantities import Quantity, UnknownUnitError, convert
 from speccheck.records import Band, CellRef, Reading, Sense, Statement, Unread, Value
 
 
@@ -75,3 +75,18 @@ class Outcome:
     unread: Unread | None = None
     footnotes: tuple[str, ...] = ()
     joined: bool = False
+
+
+def spread(stated: Quantity, of: Found) -> float | None:
+    """A tolerance stated apart from its figure, in the figure's unit; None when it cannot be one."""
+    amount = stated.tolerance if stated.tolerance is not None else stated.value
+    if not isinstance(amount, float) or not isinstance(of.value, float):
+        return None
+    if stated.unit == "%" and of.figure.unit != "%":
+        return abs(of.value * amount / 100)
+    if stated.unit in ("", "dB", of.figure.unit):
+        return abs(amount)
+    try:
+        return abs(convert(amount, stated.unit, of.figure.unit) - convert(0.0, stated.unit, of.figure.unit))
+    except UnknownUnitError:
+        return None

@@ -9,7 +9,7 @@ from speccheck.intake.labels import Label, Labels, is_unit, split_lines, statist
 from speccheck.intake.words import column_role
 
 _LONGEST = 2000
-_SIZES = ("H", "W", "D", "B", "T", "L")
+_SIZES = frozenset("HWDBTLPAGS")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -74,7 +74,7 @@ def _unmark_column_words(marks: Marks) -> None:
 
 
 def _is_form_heading(roles: list[str]) -> bool:
-    """Whether a row says for each column of a form or table what it is for: 'Requirement | Offered | Comply'."""
+    """Whether a row says of each column of a form what it is for: 'Requirement | Offered | Comply'."""
     labels = {"parameter", "required"} & set(roles)
     answers = {"offered", "compliance"} & set(roles)
     return bool(labels and answers) and sum(map(bool, roles)) * 4 >= 3 * len(roles)
@@ -88,14 +88,28 @@ def _follows_heading(marks: Marks, row: int, column: int) -> bool:
 def _mark_letters(marks: Marks) -> None:
     """H, W and D beside or below one another head the three sizes."""
     letters = {
-        place: marks.labels.letter(cell.text)
+        place: cell.text.strip()
         for place, cell in marks.grid.cells.items()
         if isinstance(cell.raw, str) and cell.text.strip().upper() in _SIZES
     }
-    for (row, column), label in letters.items():
+    for row, column in letters:
+        for step in ((0, 1), (1, 0)):
+            places = [(row + n * step[0], column + n * step[1]) for n in range(3)]
+            if all(place in letters for place in places):
+                _mark_three(marks, places, " x ".join(letters[place] for place in places))
+    for (row, column), letter in letters.items():
         around = ((row - 1, column), (row + 1, column), (row, column - 1), (row, column + 1))
-        if label and any(place in letters and letters[place] != label for place in around):
+        pair = any(place in letters and letters[place] != letter for place in around)
+        if pair and (row, column) not in marks.headings and (label := marks.labels.letter(letter)):
             marks.headings[row, column] = label
+
+
+def _mark_three(marks: Marks, places: list[tuple[int, int]], letters: str) -> None:
+    """'H x L x P' and 'L x W x H': what a letter stands for depends on the other two."""
+    sizes = marks.labels.of(letters).parameters
+    for place, size in zip(places, sizes, strict=False):
+        text = marks.grid.cells[place].text
+        marks.headings[place] = Label(text, (size,), how=f"heading '{text}' of '{letters}'")
 
 
 def _might_be_heading(text: str) -> bool:

@@ -84,11 +84,10 @@ def _score(text: str, sheet: str) -> int:
         return 4
     stripped = _without_prefix(words, "prefix")
     inside = _INSIDE.search(words)
-    if announced(words):
-        return 3
-    if stripped != words and len(stripped) <= _LONG_NAME and (codes(stripped) or stripped[-1:].isdigit()):
-        return 3
-    if inside is not None and any(letter.isdigit() for letter in inside[1]):
+    prefixed = (
+        stripped != words and len(stripped) <= _LONG_NAME and (codes(stripped) or stripped[-1:].isdigit())
+    )
+    if prefixed or announced(words) or (inside is not None and any(map(str.isdigit, inside[1]))):
         return 3
     if codes(words) and not _PAPERS.search(fold(words)):
         return 2

@@ -202,8 +202,8 @@ def _frequencies(claim: Claim, found: list[Found], several: bool) -> list[Found]
         return [whole, *found]
     else:
         for one in found:
-            if one.parameter == "frequency_range":
-                one.band = None
+            if one.parameter == "frequency_range" or (not claim.banded and claim.band is None and spans):
+                one.parameter, one.band = "frequency_range", None
     return found
 
 

@@ -9,7 +9,7 @@ from functools import lru_cache
 
 from speccheck.dictionary import Parameter, parameters, specified
 from speccheck.intake.claims import Claim, Context
-from speccheck.intake.found import Figure, Found, Outcome
+from speccheck.intake.found import Figure, Found, Outcome, spread
 from speccheck.intake.grid import Cell, Raw
 from speccheck.intake.unitless import with_unit
 from speccheck.quantities import (
@@ -32,7 +32,7 @@ _MIN_WORDS = re.compile(
 )
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
-_MOST_DIFFERENT = 40_000
+_MOST_DIFFERENT = 20_000
 """A catalogue repeats its figures; more different ones than this are no bid, and understanding takes time."""
 _FEWEST_OF_SEVERAL = {"array_rows": 2, "subarray_rows": 1}  # a plain number of rows may stand alone
 _IDENTITY_UNITS = ("", "–", "-", "—")
@@ -122,10 +122,9 @@ class Reader:
             claim.tolerance.raw, kind="number", unit=_unit(claim.context)[0], expected=parameters()[key].unit
         )
         for quantity in content.quantities[:1]:
-            amount = quantity.tolerance if quantity.tolerance is not None else quantity.value
             for one in found:
-                if one.tolerance is None and isinstance(amount, float) and isinstance(one.value, float):
-                    one.tolerance = abs(amount)
+                if one.tolerance is None and isinstance(one.value, float):
+                    one.tolerance = spread(quantity, one)
 
     def _understand(self, raw: Raw, context: Context, number_format: str) -> _Understood:
         label = context.label

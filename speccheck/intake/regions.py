@@ -121,7 +121,7 @@ def _is_subheading(marks: Marks, row: int, above: int) -> bool:
 
 
 def _details_heading(marks: Marks, row: int, above: int, following: list[int]) -> bool:
-    """Whether a row of short words under a heading row details it: nothing under its first heading, no figures."""
+    """Whether a row of short words details the heading row above: no figures, nothing under the first."""
     first, cells = marks.rows[above][0], marks.rows[row]
     if row != above + 1 or not following or cells[0].column <= first.column:
         return False

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 from functools import cache
+from itertools import pairwise
 
 from speccheck.intake.words import fold, generic_title_words, title_prefixes
 
@@ -30,7 +31,7 @@ def codes(text: str) -> list[str]:
 def announced(text: str) -> str:
     """The part of a title behind 'offered antenna' and the like; empty when nothing announces one."""
     parts = PARTS.split(text)
-    for before, part in zip(parts, parts[1:], strict=False):
+    for before, part in pairwise(parts):
         if fold(before) in title_prefixes() and any(letter.isdigit() for letter in part):
             return part
     return ""
