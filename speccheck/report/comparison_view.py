@@ -103,7 +103,7 @@ class Comparison:
         outcomes = [column.offer.outcome for column in self.columns]
         parts = [f"{outcomes.count(word)} {word.value}" for word in Outcome if outcomes.count(word)]
         bids = len(self.evaluation.bids)
-        unusable = f"; {len(self.unusable)} file(s) could not be used" if self.unusable else ""
+        unusable = f"; {len(self.unusable)} of them could not be used" if self.unusable else ""
         offers = f"{len(outcomes)} offer{'' if len(outcomes) == 1 else 's'}"
         return f"{offers} from {bids} file{'' if bids == 1 else 's'}: {', '.join(parts) or 'none'}{unusable}."
 
