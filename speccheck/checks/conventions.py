@@ -7,7 +7,7 @@ breaks a claim which fitted is dropped. Nothing here names a culprit: candidates
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Collection
 from dataclasses import dataclass, replace
 
 from speccheck.records import Band, CellRef, Convention, Finding, Fit, Panel, Reading, Step
@@ -123,7 +123,7 @@ class _Candidate:
             bool(self.leaves),
             -len(self.repaired),
             not self.likely,
-            max(map(_off_middle, self.repaired.values())),
+            max(map(_off_middle, _most_telling(self.repaired.values()))),
             self.rank,
         )
 
@@ -231,6 +231,19 @@ def _convention(candidate: _Candidate, after: Finding) -> Convention:
 def _of_difference(unit: str) -> str:
     """Unit of the difference of two figures: levels differ by decibels."""
     return "dB" if unit in ("dBi", "dBd", "dBm", "dBc") else unit
+
+
+def _most_telling(findings: Collection[Finding]) -> Collection[Finding]:
+    """Of the findings that expect an interval in one unit the one with the narrowest; else all of them."""
+    narrowest: dict[str, tuple[float, Finding]] = {}
+    for finding in findings:
+        span = finding.expected
+        if span is None or span.low is None or span.high is None:
+            continue
+        width = span.high - span.low
+        if span.unit not in narrowest or width < narrowest[span.unit][0]:
+            narrowest[span.unit] = width, finding
+    return [finding for _, finding in narrowest.values()] or findings
 
 
 def _off_middle(after: Finding) -> float:

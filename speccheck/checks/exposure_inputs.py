@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, replace
 
 from speccheck.checks.saying import claim, mhz
-from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
+from speccheck.checks.transmit_power import TransmitPower, parts_of_total, transmit_power
 from speccheck.physics.decibels import db
 from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, eirp_dbm, implied_gain_dbi, watts
 from speccheck.records import Band, Panel, Reading, Step
@@ -80,9 +80,13 @@ def _eirp(panel: Panel, band: Band) -> _StatedEirp | None:
     if eirp is None:
         level += HALF_WAVE_DIPOLE_DBI
         notes.append("The stated ERP is raised by 2.15 dB to EIRP.")
-    if per_polarisation(reading):
-        level += float(db(2))
-        notes.append(f"EIRP {claim(reading)} is that of one polarisation; 3.01 dB are added for both.")
+    parts = parts_of_total(reading)
+    if parts is None:
+        return None
+    count, of = parts
+    if count > 1:
+        level += float(db(count))
+        notes.append(f"EIRP {claim(reading)} is one of {count:g} {of}; {db(count):.2f} dB are added for all.")
     return _StatedEirp(level, reading, tuple(notes))
 
 

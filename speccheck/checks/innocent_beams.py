@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from dataclasses import replace
 
+from speccheck.checks.beams import COLUMN_WIDTHS_DEG
 from speccheck.checks.conventions import Reach, innocent, marked, reread, scaled
 from speccheck.records import Panel, Reading
 
@@ -37,10 +38,16 @@ def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
     likely=_wide_beam,
 )
 def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
-    """Width divided by √(10/3), the ratio of a parabola in decibels; a narrow array beam by 1.67."""
+    """Width divided by √(10/3), the ratio of a parabola in decibels; a narrow array beam by 1.67.
+
+    A width that would leave less than a single column can have is not re-read.
+    """
 
     def half_power(reading: Reading) -> Reading:
-        return scaled((3 / 10) ** 0.5 if reading.nominal > ARRAY_BEAM_DEG else 1 / 1.67)(reading)
+        columns = panel.get("array_columns", reading.band)
+        other = scaled((3 / 10) ** 0.5 if reading.nominal > ARRAY_BEAM_DEG else 1 / 1.67)(reading)
+        single = columns is not None and columns.value == 1
+        return reading if single and other.nominal < COLUMN_WIDTHS_DEG[0] else other
 
     return reread(panel, reach, ("horizontal_beamwidth",), half_power)
 

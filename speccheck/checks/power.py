@@ -7,7 +7,7 @@ import math
 from speccheck.checks.cell_text import half_digit
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
-from speccheck.checks.transmit_power import TransmitPower, per_polarisation, transmit_power
+from speccheck.checks.transmit_power import TransmitPower, parts_of_total, transmit_power
 from speccheck.physics.power import HALF_WAVE_DIPOLE_DBI, dbm, trp_dbm
 from speccheck.records import Amount, Fit, Interval, Reading, Sense, Step
 from speccheck.standards import power_classes
@@ -54,8 +54,10 @@ def eirp_fits_power_and_gain(
     """
     claimed, notes = _claimed_dbm(eirp, erp)
     stated = eirp or erp
-    if stated is None or claimed is None:
+    if stated is None:
         return None
+    if claimed is None:
+        return _of_a_part(stated)
     power = transmit_power(case.panel, case.band)
     if power is None:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("conducted_power",))
@@ -109,10 +111,26 @@ def _claimed_dbm(eirp: Reading | None, erp: Reading | None) -> tuple[float | Non
     if eirp is None:
         level += HALF_WAVE_DIPOLE_DBI
         notes.append("EIRP is the stated ERP plus 2.15 dB.")
-    if per_polarisation(stated):
-        level += 10 * math.log10(2)
-        notes.append("The figure is stated per polarisation; 3.01 dB are added for both.")
+    parts = parts_of_total(stated)
+    if parts is None:
+        return None, ()
+    count, of = parts
+    if count > 1:
+        level += 10 * math.log10(count)
+        notes.append(f"The figure is for one of {count:g} {of}; {10 * math.log10(count):.2f} dB are added.")
     return level, tuple(notes)
+
+
+def _of_a_part(stated: Reading) -> Judgement:
+    """Where the words say that the figure is no total, and not how many parts make one."""
+    return Judgement(
+        verdict=Fit.NOT_JUDGED,
+        summary=f"The EIRP of {claim(stated)} is stated for a part of the panel's power, not for all carriers"
+        " and ports together: not held against the total power, and not used for exposure.",
+        question="Please state the EIRP of all carriers, ports and both polarisations together"
+        f" ({stated.where}).",
+        used=(stated,),
+    )
 
 
 def _eirp_span(case: Case, power: TransmitPower, feed_loss: Reading | None) -> tuple[float, float]:

@@ -11,12 +11,31 @@ from speccheck.records import Band, Panel, Reading, Step
 _PER = r"(?:\b(?:per|each|pro|je|par|por|na)\b|/)\s*"
 _PER_POLARISATION = re.compile(_PER + r"pol")
 _PER_PORT = re.compile(_PER + r"(?:port|path|branch|trx|tx\b|transceiver|connector|channel)")
+_MOST_CARRIERS = 32
 _PER_CARRIER = re.compile(_PER + r"(?:carrier|träger|porteuse|portadora)")
+
+
+_CARRIERS = re.compile(r"(\d+)\s*(?:carriers|träger|porteuses|portadoras)")
 
 
 def per_polarisation(reading: Reading) -> bool:
     """Whether the words beside a figure say that it holds for one polarisation."""
     return bool(_PER_POLARISATION.search(words(reading)))
+
+
+def parts_of_total(reading: Reading) -> tuple[float, str] | None:
+    """How many such parts make the total, and of what; None where the words leave that open.
+
+    A figure per carrier needs the number of carriers; one per port is no share of a total EIRP, because the
+    ports add in phase.
+    """
+    said = words(reading)
+    if _PER_PORT.search(said):
+        return None
+    if _PER_CARRIER.search(said):
+        counted = _CARRIERS.search(said)
+        return (float(counted[1]), "carriers") if counted and 1 <= int(counted[1]) <= _MOST_CARRIERS else None
+    return (2.0, "polarisations") if per_polarisation(reading) else (1.0, "")
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -57,12 +76,11 @@ def _stated_total(panel: Panel, band: Band | None, key: str) -> TransmitPower | 
     if power is None:
         return None
     said = words(power)
-    if per_polarisation(power):
-        return _times(panel, power, 2, "polarisations", ())
     if _PER_PORT.search(said):
         count = panel.get("transceivers", band) or panel.get("rf_ports", band)
         return None if count is None else _times(panel, power, count.nominal, "ports", (count,))
-    return _times(panel, power, 1, "", ())
+    parts = parts_of_total(power)
+    return None if parts is None else _times(panel, power, *parts, ())
 
 
 def _product(panel: Panel, band: Band | None, key: str, counts: tuple[str, ...]) -> TransmitPower | None:
