@@ -29,9 +29,17 @@ class Column:
     band: Band | None = None
     band_name: str = ""
     band_cell: Cell | None = None
+    wider: Band | None = None
     statistic: str = ""
     unit: str = ""
     frequency: Cell | None = None
+
+    def take_band(self, band: Band | None, cell: Cell) -> None:
+        """Take in the band of a heading cell; one above that contains it stays as the wider band."""
+        above = self.band
+        if above and band and above != band and above[0] <= band[0] and band[1] <= above[1]:
+            self.wider = above
+        self.band, self.band_cell = band, cell
 
     @property
     def name(self) -> str:
@@ -107,7 +115,7 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
 def _take_band(column: Column, cell: Cell, text: str) -> None:
     bands = find_bands(text)
     if bands.spans:
-        column.band, column.band_cell = bands.hull, cell
+        column.take_band(bands.hull, cell)
         text = bands.rest if not bands.names else text
     column.band_name = " ".join(filter(None, (column.band_name, text.strip(" ()[]:,-–"))))
 
@@ -116,7 +124,7 @@ def _take_name(column: Column, cell: Cell, text: str) -> None:
     bands = find_bands(text)
     unit = re.search(r"\s*[(\[]([^()\[\]]+)[)\]]\s*$", text)
     if bands.spans and bands.proved:
-        column.band, column.band_cell = bands.hull, cell
+        column.take_band(bands.hull, cell)
         text = bands.rest.strip(" ()[]:,-–")
     elif unit and is_unit(unit[1]):
         column.unit, text = unit[1], text[: unit.start()]

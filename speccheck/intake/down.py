@@ -7,8 +7,8 @@ from dataclasses import dataclass, field
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, Declared, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
-from speccheck.intake.down_bands import NamedBand, band_of_row, bands_of_columns
-from speccheck.intake.down_headings import describe_columns, extend, find_headings
+from speccheck.intake.down_bands import NamedBand, band_of_row
+from speccheck.intake.down_headings import describe_columns, extend, find_headings, find_name_column
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.down_regions import Down, cells_between
 from speccheck.intake.down_row import RowCells, joined_label, row_cells
@@ -19,6 +19,7 @@ from speccheck.intake.naming import Names, model_name
 from speccheck.intake.words import answer, is_generic_sheet_name
 from speccheck.records import Band
 
+_LOOK_AHEAD = 60
 _FORM = {
     "said": frozenset({"compliance"}),
     "required": frozenset({"required"}),
@@ -61,6 +62,7 @@ class DownReader:
         self._columns = describe_columns(self._marks, self._table, self._heading_rows, self._result)
         self._panels = DownPanels(self._marks, self._table, self._columns, self._result)
         self._panels.open(self._names, self._heading_rows)
+        self._panels.name_column = find_name_column(self._marks, self._table, self._heading_rows)
         self._section_above()
         first = (self._heading_rows[-1] + 1) if self._heading_rows else self._table.top
         for row in range(min(first, self._table.top), self._table.bottom + 1):
@@ -78,6 +80,7 @@ class DownReader:
         if label_cell is None and beside and (own := [c for c in left if self._marks.is_heading(c)]):
             label_cell = own[-1]
         self._left_cells(row, [c for c in left if c is not label_cell])
+        self._panels.follow(row)
         if label_cell is not None and not beside:
             self._section(label_cell)
             return
@@ -181,7 +184,9 @@ class DownReader:
             self._result.mark(cell, "heading")
             return
         span = self._grid.span(cell)
-        covered = [c for c in self._columns.values() if span.left <= c.index <= span.right]
+        covered = [self._columns[cell.column]]
+        if span.right > span.left:
+            covered = [c for c in self._columns.values() if span.left <= c.index <= span.right]
         firsts = {id(self._panels.of(c)): c for c in reversed(covered) if c.role in VALUE_ROLES}
         for first in reversed(firsts.values()):
             for band in self._bands_of(cell, first, label, extra):
@@ -204,6 +209,7 @@ class DownReader:
         draft = self._panels.of(column)
         banded = band is not None or bool(name)
         draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance))
+        self._panels.note(draft, label)
         if band is not None and band not in draft.bands:
             draft.bands.append(band)
 
@@ -213,10 +219,8 @@ class DownReader:
         said = band_of_row(extra)
         if said is not None:
             return [said]
-        draft = self._panels.of(column)
-        values = [c for c in self._columns.values() if c.role in VALUE_ROLES]
-        mine = [c for c in values if self._panels.of(c) is draft]
-        return bands_of_columns(self._grid, mine, cell, column) or [self._of_section()]
+        bands = self._panels.bands_of(column)
+        return bands.of(self._grid, cell, column) or [self._of_section()]
 
     def _of_section(self) -> NamedBand:
         state = self._state
@@ -238,7 +242,7 @@ class DownReader:
             return
         below = {
             key
-            for row in range(title.row + 1, self._table.bottom + 1)
+            for row in range(title.row + 1, min(title.row + _LOOK_AHEAD, self._table.bottom + 1))
             if (found := self._marks.headings.get((row, self._table.label_column)))
             for key in found.parameters
         }
@@ -256,9 +260,9 @@ class DownReader:
         if panels.several or panels.model_row or len(texts) != 1 or label.parameters[0] != "model":
             return
         name = model_name(texts[0].text)
-        if panels.first.keys() - {"model", "manufacturer", "part_number", "revision"} and panels.named_by_row:
+        if panels.first_is_technical and panels.named_by_row:
             panels.start(name, texts[0])
-        elif panels.first.keys() <= {"manufacturer", "part_number", "revision"} or not panels.first.named:
+        elif not panels.first_is_technical or not panels.first.named:
             panels.first.name, panels.first.where, panels.first.named = name, texts[0], True
         panels.named_by_row = True
 

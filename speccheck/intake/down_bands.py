@@ -22,20 +22,46 @@ def band_of_row(extra: RowCells) -> NamedBand | None:
     return None
 
 
-def bands_of_columns(grid: Grid, mine: list[Column], cell: Cell, column: Column) -> list[NamedBand]:
-    """The bands one panel's columns give a figure; empty when they name none.
+class ColumnBands:
+    """The bands that the columns of one panel stand for."""
 
-    A figure merged over some of the bands is said of each of them, one merged over all, or standing in
-    the first column only, of the whole panel: merges get lost on the way through other formats.
-    """
-    named = {c.index: (c.band, "" if c.band else c.band_name) for c in mine if c.band or c.band_name}
-    if not named:
-        return []
-    span = grid.span(cell)
-    covered = list(dict.fromkeys(band for index, band in named.items() if span.left <= index <= span.right))
-    if len(covered) > 1:
-        return covered if len(covered) < len(set(named.values())) else [WHOLE]
-    filled = [index for index in named if grid.covering(cell.row, index) is not None]
-    if len(named) > 1 and filled == [column.index] == [min(named)]:
-        return [WHOLE]
-    return covered
+    def __init__(self, columns: list[Column]) -> None:
+        named = {c.index: (c.band, "" if c.band else c.band_name) for c in columns if c.band or c.band_name}
+        self._named: dict[int, NamedBand] = named
+        self._different = len(set(named.values()))
+        self._wider = {c.index: c.wider for c in columns if c.wider}
+        self._first = min(named, default=0)
+
+    def of(self, grid: Grid, cell: Cell, column: Column) -> list[NamedBand]:
+        """The bands a figure is said of; empty when the columns name none.
+
+        A figure merged over some of the bands is said of each of them, one merged over all, or standing in
+        the first column only, of the whole panel: merges get lost on the way through other formats.
+        """
+        span = grid.span(cell)
+        if span.left == span.right:
+            covered = [self._named[column.index]] if column.index in self._named else []
+        else:
+            inside = (band for index, band in self._named.items() if span.left <= index <= span.right)
+            covered = list(dict.fromkeys(inside))
+        if len(covered) > 1 and (wider := self._wider_band(span.left, span.right)):
+            return [(wider, "")]
+        if len(covered) > 1:
+            return covered if len(covered) < self._different else [WHOLE]
+        if len(self._named) > 1 and column.index == self._first and self._alone(grid, cell):
+            return [WHOLE]
+        return covered
+
+    def _wider_band(self, left: int, right: int) -> Band | None:
+        """The wider band whose sub-bands, all of them and no other, stand in these columns."""
+        inside = {self._wider.get(index) for index in self._named if left <= index <= right}
+        wider = next(iter(inside)) if len(inside) == 1 else None
+        beyond = any(band == wider for i, band in self._wider.items() if not left <= i <= right)
+        return wider if wider and not beyond and len(self._named) > len(self._wider_columns(wider)) else None
+
+    def _wider_columns(self, wider: Band) -> list[int]:
+        return [index for index, band in self._wider.items() if band == wider]
+
+    def _alone(self, grid: Grid, cell: Cell) -> bool:
+        filled = (grid.covering(cell.row, index) is not None for index in self._named)
+        return sum(filled) == 1

@@ -46,6 +46,16 @@ def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], besi
     return len(beside) > 1 and all(isinstance(c.raw, str) for c in beside)
 
 
+def find_name_column(marks: Marks, table: Down, heading_rows: list[int]) -> int:
+    """The column before the labels that names the panel of each row, under a word such as 'Panel'; else 0."""
+    for row in heading_rows:
+        for cell in cells_between(marks, row, table.left, table.label_column - 1):
+            label = marks.labels.of(cell.text)
+            if column_role(cell.text) == "panel" or label.parameters[:1] in (("model",), ("part_number",)):
+                return cell.column
+    return 0
+
+
 def extend(marks: Marks, table: Down, result: SheetResult) -> None:
     """Take in rows below the last known heading that continue the table."""
     span = marks.grid.span(marks.grid.cells[table.bottom, table.label_column])

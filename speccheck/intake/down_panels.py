@@ -5,14 +5,17 @@ from __future__ import annotations
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
+from speccheck.intake.down_bands import ColumnBands
 from speccheck.intake.down_regions import Down
 from speccheck.intake.grid import Cell
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
+from speccheck.intake.titles import codes
 from speccheck.records import Band
 
 NAME_KEYS = frozenset({"model", "panel_type"})
+_NAMING_KEYS = frozenset({"model", "panel_type", "manufacturer", "part_number", "revision"})
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 
 
@@ -22,13 +25,27 @@ class DownPanels:
     def __init__(self, marks: Marks, table: Down, columns: dict[int, Column], result: SheetResult) -> None:
         self._marks, self._table, self._columns, self._result = marks, table, columns, result
         self._drafts: dict[str, Draft] = {}
+        self._column_bands: dict[int, ColumnBands] = {}
+        self._technical: set[int] = set()
+        self._seen: dict[str, Draft] = {}
         self.model_row = 0
+        self.name_column = 0
         self.named_by_row = False
 
     @property
     def first(self) -> Draft:
         """The only draft, or the first of several."""
         return next(iter(self._drafts.values()))
+
+    @property
+    def first_is_technical(self) -> bool:
+        """Whether the first panel already has figures, not only names."""
+        return id(self.first) in self._technical
+
+    def note(self, draft: Draft, label: Label) -> None:
+        """Remember that a panel has been given a claim."""
+        if label.parameters[0] not in _NAMING_KEYS:
+            self._technical.add(id(draft))
 
     @property
     def several(self) -> bool:
@@ -39,12 +56,16 @@ class DownPanels:
         """Make a draft for each panel named over the columns, or one named by the title."""
         values = self._value_columns()
         self.model_row = self._find_model_row(values)
+        title = None
+        if not self.model_row and self._name_groups_of_bands(values):
+            title = names.title_for(self._table, heading_rows, self._marks, self._result)
+            self._unname(values if title.certain else [])
         for column in values:
             cell = self._name_cell(column)
             if cell is not None and model_name(cell.text) not in self._drafts:
                 self._add(model_name(cell.text), cell, named=True)
         if not self._drafts:
-            title = names.title_for(self._table, heading_rows, self._marks, self._result)
+            title = title or names.title_for(self._table, heading_rows, self._marks, self._result)
             self._add("", title.cell, named=title.certain).name = title.name
         self._bands_from_row(values)
         self._claims_of_headings(values)
@@ -54,12 +75,49 @@ class DownPanels:
         self._drafts = {}
         self._add(name, cell, named=True)
 
+    def follow(self, row: int) -> None:
+        """Go to the panel that a column of names beside the labels gives for a row."""
+        cell = self._marks.grid.covering(row, self.name_column) if self.name_column else None
+        name = model_name(cell.text) if cell is not None else ""
+        if cell is None or not name or name in self._drafts:
+            return
+        if not self._seen:
+            self._result.drafts.remove(self.first)
+        if name not in self._seen:
+            self.start(name, cell)
+            self._seen[name] = self.first
+        self._drafts = {name: self._seen[name]}
+
+    @staticmethod
+    def _name_groups_of_bands(values: list[Column]) -> bool:
+        """Whether the words over the columns part one panel's bands: no type codes, no band under two of them."""
+        bands: dict[str, set[Band]] = {}
+        for column in values:
+            if column.words:
+                bands.setdefault(column.name, set()).update([column.band] if column.band else [])
+        groups = list(bands.values())
+        apart = sum(map(len, groups)) == len(set().union(*groups))
+        return len(groups) > 1 and all(groups) and apart and not any(map(codes, bands))
+
+    @staticmethod
+    def _unname(values: list[Column]) -> None:
+        for column in values:
+            column.words, column.name_cell = [], None
+
     def of(self, column: Column) -> Draft:
         """The draft a column speaks of."""
         if len(self._drafts) == 1:
             return self.first
         cell = self._name_cell(column)
         return self._drafts.get(model_name(cell.text) if cell else "") or self.first
+
+    def bands_of(self, column: Column) -> ColumnBands:
+        """The bands of the panel a column speaks of."""
+        draft = self.of(column)
+        if id(draft) not in self._column_bands:
+            mine = [c for c in self._value_columns() if self.of(c) is draft]
+            self._column_bands[id(draft)] = ColumnBands(mine)
+        return self._column_bands[id(draft)]
 
     def claim_band(self, draft: Draft, cell: Cell, band: Band, heading: str) -> None:
         """A heading that gives the frequencies of a band is itself a claim."""
@@ -99,19 +157,28 @@ class DownPanels:
         return 0
 
     def _bands_from_row(self, values: list[Column]) -> None:
-        """A row of frequency ranges that differ across one panel's columns gives the columns their bands."""
-        for row in self._rows_of(_FREQUENCY_KEYS):
-            unit = self._marks.headings[row, self._table.label_column].unit or "MHz"
-            for draft in self._drafts.values():
-                mine = [c for c in values if self.of(c) is draft and c.role in ("", "offered", "panel")]
-                cells = {c.index: self._marks.grid.cells.get((row, c.index)) for c in mine}
-                spans = {i: _only_band(cell.text, unit) for i, cell in cells.items() if cell is not None}
-                if len({span for span in spans.values() if span}) < 2 or any(c.band for c in mine):
-                    continue
-                for column in mine:
-                    column.band = spans.get(column.index)
-                    if column.band is not None and column.band not in draft.bands:
-                        draft.bands.append(column.band)
+        """A row of frequency ranges that differ across one panel's columns gives the columns their bands.
+
+        Of several such rows the one with the most ranges; ranges of another row that contain them are wider bands.
+        """
+        rows = self._rows_of(_FREQUENCY_KEYS)
+        for draft in self._drafts.values():
+            mine = [c for c in values if self.of(c) is draft and c.role in ("", "offered", "panel")]
+            spans = [self._spans_of_row(row, mine) for row in rows]
+            best = max(spans, key=lambda found: len(set(found.values())), default={})
+            if len(set(best.values())) < 2 or any(c.band for c in mine):
+                continue
+            for column in mine:
+                column.band = best.get(column.index)
+                if column.band is not None and column.band not in draft.bands:
+                    draft.bands.append(column.band)
+                column.wider = next((w for s in spans if _holds(w := s.get(column.index), column.band)), None)
+
+    def _spans_of_row(self, row: int, columns: list[Column]) -> dict[int, Band]:
+        unit = self._marks.headings[row, self._table.label_column].unit or "MHz"
+        cells = {c.index: self._marks.grid.covering(row, c.index) for c in columns}
+        found = {i: _only_band(cell.text, unit) for i, cell in cells.items() if cell is not None}
+        return {index: span for index, span in found.items() if span is not None}
 
     def _claims_of_headings(self, values: list[Column]) -> None:
         done: set[tuple[int, int]] = set()
@@ -138,3 +205,7 @@ class DownPanels:
 def _only_band(text: str, unit: str) -> Band | None:
     spans = find_bands(text if "hz" in text.lower() else f"{text} {unit}").spans
     return spans[0] if len(spans) == 1 else None
+
+
+def _holds(wider: Band | None, band: Band | None) -> bool:
+    return bool(wider and band and wider != band and wider[0] <= band[0] and band[1] <= wider[1])

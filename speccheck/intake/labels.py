@@ -10,11 +10,13 @@ from functools import cache, lru_cache
 from speccheck.dictionary import match_heading, parameters, synonyms
 from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.words import column_role, fold, is_counting_unit
+from speccheck.kept import kept
 from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
-_MOST_MISSES = 10_000
+_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
+_MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
 _NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
 _TILTS = re.compile(
@@ -23,6 +25,7 @@ _TILTS = re.compile(
     re.IGNORECASE,
 )
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
+_UNIT_BRACKET = re.compile(r"\s*[(\[][^()\[\]\d]{1,8}[)\]]\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")
@@ -115,8 +118,10 @@ class Labels:
 
     def _with_tilts(self, text: str) -> Label:
         """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""
-        listed = _TILTS.search(text)
-        inner = self._match(text[: listed.start()].strip(" ,;")) if listed else Label(text)
+        bare = _UNIT_BRACKET.sub("", text)
+        listed = _TILTS.search(bare)
+        unit = text[len(bare) :]
+        inner = self._match(bare[: listed.start()].strip(" ,;") + unit) if listed else Label(text)
         if listed is None or not inner:
             return inner
         tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1]))
@@ -173,6 +178,10 @@ def _stem(word: str) -> str:
 @cache
 def _vocabulary() -> frozenset[str]:
     """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
+    return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
+
+
+def _first_letters() -> frozenset[str]:
     texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
     return frozenset(_stem(word) for word in set(_runs("\n".join(texts))) if not unit_name(word))
 
