@@ -10,7 +10,7 @@ import pytest
 PACKAGE = Path(__file__).parents[1] / "speccheck"
 
 LAYERS: tuple[frozenset[str], ...] = (
-    frozenset({"errors", "text", "physics"}),
+    frozenset({"errors", "text", "kept", "physics"}),
     frozenset({"quantities", "atomic"}),
     frozenset({"records"}),
     frozenset({"dictionary", "headings", "standards"}),

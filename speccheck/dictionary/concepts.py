@@ -8,13 +8,12 @@ from __future__ import annotations
 
 import functools
 import itertools
-import tomllib
 from collections.abc import Iterator
 from dataclasses import dataclass
-from importlib import resources
 from typing import Any
 
 from speccheck.dictionary.folding import fold, without_neutral
+from speccheck.kept import kept, toml
 
 _MOST_WORDS = 12
 _FILLER = "filler"
@@ -92,13 +91,16 @@ def rules() -> tuple[Rule, ...]:
 
 @functools.cache
 def _tables() -> dict[str, Any]:
-    path = resources.files("speccheck").joinpath("data", "headings", "concepts.toml")
-    return tomllib.loads(path.read_text(encoding="utf-8"))
+    return toml("headings/concepts.toml")
 
 
 @functools.cache
 def _phrases() -> dict[tuple[str, ...], tuple[str, ...]]:
     """Folded phrase to the concepts it may stand for."""
+    return kept("concepts", ("data/headings/*.toml", "dictionary/*.py"), _folded_phrases)
+
+
+def _folded_phrases() -> dict[tuple[str, ...], tuple[str, ...]]:
     table: dict[tuple[str, ...], tuple[str, ...]] = {}
     for concept, phrases in _tables()["words"].items():
         for phrase in phrases:

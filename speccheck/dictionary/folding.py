@@ -4,10 +4,10 @@ from __future__ import annotations
 
 import functools
 import re
-import tomllib
 import unicodedata
-from importlib import resources
 from typing import Any
+
+from speccheck.kept import toml
 
 _SPECIAL_LETTERS = str.maketrans(
     {"ł": "l", "ø": "o", "đ": "d", "œ": "oe", "æ": "ae", "ı": "i", "φ": "phi", "θ": "theta"}
@@ -55,8 +55,7 @@ def word_list(name: str) -> frozenset[str]:
 @functools.cache
 def heading_words() -> dict[str, Any]:
     """The tables of ``data/headings/words.toml``."""
-    path = resources.files("speccheck").joinpath("data", "headings", "words.toml")
-    return tomllib.loads(path.read_text(encoding="utf-8"))
+    return toml("headings/words.toml")
 
 
 def without_neutral(words: tuple[str, ...]) -> tuple[str, ...]:

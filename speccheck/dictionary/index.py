@@ -8,8 +8,10 @@ import functools
 from speccheck.dictionary.concepts import by_concepts
 from speccheck.dictionary.folding import fold, key_of, without_neutral
 from speccheck.dictionary.parameters import parameters, synonyms
+from speccheck.kept import kept
 
 _LONGEST_SUGGESTED = 80
+_SOURCES = ("data/parameters.toml", "data/headings/*.toml", "dictionary/*.py")
 _TRANSCRIBED = str.maketrans({"ä": "ae", "ö": "oe", "ü": "ue", "Ä": "Ae", "Ö": "Oe", "Ü": "Ue"})
 
 
@@ -21,6 +23,10 @@ def index() -> dict[str, str]:
     ------
     ValueError : a heading claimed by two parameters, or one for an unknown parameter
     """
+    return kept("headings", _SOURCES, _index)
+
+
+def _index() -> dict[str, str]:
     table: dict[str, str] = {}
     for language, headings in synonyms().items():
         for key, texts in headings.items():
@@ -74,6 +80,10 @@ def _claim(table: dict[str, str], text: str, key: str, language: str) -> None:
 @functools.cache
 def _by_stem() -> dict[str, list[tuple[str, str]]]:
     """First five letters of a word to the headings that hold it."""
+    return kept("stems", _SOURCES, _stems)
+
+
+def _stems() -> dict[str, list[tuple[str, str]]]:
     table: dict[str, list[tuple[str, str]]] = {}
     for headings in synonyms().values():
         for key, texts in headings.items():

@@ -7,12 +7,12 @@
 from __future__ import annotations
 
 import functools
-import tomllib
 from collections.abc import Mapping
 from dataclasses import dataclass
-from importlib import resources
 from types import MappingProxyType
 from typing import Any, Literal, get_args
+
+from speccheck.kept import toml
 
 Scope = Literal["panel", "band", "port"]
 Direction = Literal["higher", "lower", "window", "contains", "none"]
@@ -64,7 +64,7 @@ def parameters() -> Mapping[str, Parameter]:
     ------
     ValueError : a definition with an unknown or missing entry, naming the parameter
     """
-    return MappingProxyType({key: _parameter(key, table) for key, table in _toml("parameters.toml").items()})
+    return MappingProxyType({key: _parameter(key, table) for key, table in toml("parameters.toml").items()})
 
 
 @functools.cache
@@ -72,14 +72,10 @@ def synonyms() -> Mapping[str, Mapping[str, tuple[str, ...]]]:
     """Headings by language and parameter key; composite headings under keys joined by ``+``."""
     return MappingProxyType(
         {
-            language: {key: tuple(words) for key, words in _toml(f"headings/{language}.toml").items()}
+            language: {key: tuple(words) for key, words in toml(f"headings/{language}.toml").items()}
             for language in LANGUAGES
         }
     )
-
-
-def _toml(name: str) -> dict[str, Any]:
-    return tomllib.loads(resources.files("speccheck").joinpath("data", name).read_text(encoding="utf-8"))
 
 
 def _parameter(key: str, table: dict[str, Any]) -> Parameter:

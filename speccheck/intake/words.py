@@ -3,10 +3,10 @@
 from __future__ import annotations
 
 import re
-import tomllib
 import unicodedata
 from functools import cache, lru_cache
-from importlib import resources
+
+from speccheck.kept import toml
 
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]\s*$")
 _SPACES = re.compile(r"[\s\u00a0\u2007\u2009\u202f\u200b_]+")
@@ -27,10 +27,9 @@ def fold(text: str) -> str:
 
 @cache
 def _table() -> dict[str, dict[str, frozenset[str]]]:
-    text = resources.files("speccheck").joinpath("data", "table_words.toml").read_text(encoding="utf-8")
     return {
         name: {role: frozenset(fold(word) for word in words) for role, words in roles.items()}
-        for name, roles in tomllib.loads(text).items()
+        for name, roles in toml("table_words.toml").items()
     }
 
 

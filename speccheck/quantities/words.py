@@ -3,9 +3,9 @@
 from __future__ import annotations
 
 import functools
-import tomllib
-from importlib import resources
 from typing import Any
+
+from speccheck.kept import toml
 
 ERROR_VALUES = frozenset(
     {"#div/0!", "#n/a", "#name?", "#null!", "#num!", "#ref!", "#value!", "#spill!", "#calc!", "#getting_data"}
@@ -15,8 +15,7 @@ ERROR_VALUES = frozenset(
 
 @functools.cache
 def _tables() -> dict[str, Any]:
-    text = resources.files("speccheck").joinpath("data", "cell_words.toml").read_text(encoding="utf-8")
-    return tomllib.loads(text)
+    return toml("cell_words.toml")
 
 
 @functools.cache

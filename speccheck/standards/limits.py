@@ -6,12 +6,12 @@ worked examples, which a test runs. No set is a default of the world: the name i
 
 from __future__ import annotations
 
-import tomllib
 from collections.abc import Mapping
 from dataclasses import dataclass
 from functools import cache
 from importlib import resources
-from typing import Any
+
+from speccheck.kept import toml
 
 PUBLIC = "general public"
 WORKERS = "workers"
@@ -156,8 +156,7 @@ def limit_set(name: str) -> LimitSet:
     if name not in limit_set_names():
         known = ", ".join(limit_set_names())
         raise UnknownLimitSetError(f"exposure limit set '{name}' is not known; known are {known}")
-    path = resources.files("speccheck").joinpath("data", "exposure", f"{name}.toml")
-    data: dict[str, Any] = tomllib.loads(path.read_text(encoding="utf-8"))
+    data = toml(f"exposure/{name}.toml")
     rows = tuple(LimitRow(**row) for row in data.pop("limit"))
     examples = tuple(LimitExample(**example) for example in data.pop("example"))
     return LimitSet(rows=rows, examples=examples, **data)

@@ -7,13 +7,12 @@ A term is matched whole, in any case and with any spacing; the longest match at 
 from __future__ import annotations
 
 import functools
-import tomllib
 from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import dataclass
 from enum import StrEnum
-from importlib import resources
 
 from speccheck.dictionary import parameters, synonyms
+from speccheck.kept import toml
 
 
 class Kind(StrEnum):
@@ -127,8 +126,7 @@ def _of_word(letter: str) -> bool:
 @functools.cache
 def words() -> Mapping[str, Mapping[str, list[str]]]:
     """The word lists of the data file."""
-    text = resources.files("speccheck").joinpath("data/requirement_words.toml").read_text(encoding="utf-8")
-    return tomllib.loads(text)
+    return toml("requirement_words.toml")
 
 
 @functools.cache
