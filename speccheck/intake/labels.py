@@ -11,10 +11,12 @@ from speccheck.dictionary import match_heading, parameters, synonyms
 from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.words import column_role, fold, is_counting_unit
 from speccheck.kept import kept
+from speccheck.kept import kept
 from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
+_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
 _VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
 _MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
@@ -178,6 +180,10 @@ def _stem(word: str) -> str:
 @cache
 def _vocabulary() -> frozenset[str]:
     """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
+    return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
+
+
+def _first_letters() -> frozenset[str]:
     return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
 
 
