@@ -15,9 +15,10 @@ _TYPICAL = re.compile(r"\bt[yi]p(?:\.|ic|isch|\b)")
 _PAIR_NAMED = re.compile(
     r"cross|intra|inter|pol|\+\s*45|between (bands|columns|arrays)|same (band|column)|co-"
 )
-_CLOSE_COLUMNS_WL = 0.7
+_CLOSE_COLUMNS_WL = 0.6
 _HIGH_BETWEEN_COLUMNS_DB = 28.0
 _BEYOND_MEASURED_DB = 50.0
+_HIGH_UNNAMED_DB = 40.0
 
 
 @check(
@@ -106,7 +107,7 @@ def _typical(reading: Reading) -> bool:
     "isolation-plausible",
     "Isolation is plausible for the ports it is between",
     needs=("port_isolation",),
-    optional=("rf_ports", "array_columns", "subarray_columns", "horizontal_element_spacing"),
+    optional=("rf_ports", "transceivers", "array_columns", "subarray_columns", "horizontal_element_spacing"),
     about=("port_isolation",),
     source="coupling of close columns 15 to 28 dB (common practice); n(n − 1)/2 port pairs",
 )
@@ -115,6 +116,7 @@ def isolation_plausible(
     *,
     port_isolation: Reading,
     rf_ports: Reading | None,
+    transceivers: Reading | None,
     array_columns: Reading | None,
     subarray_columns: Reading | None,
     horizontal_element_spacing: Reading | None,
@@ -125,20 +127,22 @@ def isolation_plausible(
     pairs = n·(n − 1)/2; spacing of driven columns = column spacing · columns in a sub-array, in wavelengths
 
     Assumptions
-    A figure that names no ports is taken for the worst pair. Columns driven apart and up to 0.7 λ from each
+    A figure that names no ports is taken for the worst pair. Columns driven apart and up to 0.6 λ from each
     other couple at 15 to 28 dB (common practice): 28 dB or more between them is doubtful unless the ports are
-    named. Above 50 dB measurements of panels seldom reach (common practice).
+    named. Two polarisations of one column reach about 30 dB: from 40 dB on the figure is doubtful where no
+    ports are named, and from 50 dB in any case (common practice).
 
     Worked example
     8 ports have 28 pairs. Four columns 40 mm apart at 3600 MHz stand 0.48 λ from each other: 30 dB for the
     worst pair is doubtful; for the two polarisations of one column it would be usual.
     """
     claimed = port_isolation.nominal
-    ports = int(rf_ports.nominal) if rf_ports else None
+    counted = rf_ports or transceivers
+    ports = int(counted.nominal) if counted else None
     pitch_wl = _driven_pitch_wl(case, ports, array_columns, subarray_columns, horizontal_element_spacing)
     named = bool(_PAIR_NAMED.search(words(port_isolation))) or port_isolation.at.get("same_column") == 1
     close = pitch_wl is not None and pitch_wl <= _CLOSE_COLUMNS_WL and not named
-    highest = _HIGH_BETWEEN_COLUMNS_DB if close else _BEYOND_MEASURED_DB
+    highest = _HIGH_BETWEEN_COLUMNS_DB if close else _BEYOND_MEASURED_DB if named else _HIGH_UNNAMED_DB
     doubtful = claimed >= highest
     about = (
         f"for columns {pitch_wl:.2f} λ apart when the ports are not named"

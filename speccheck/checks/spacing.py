@@ -8,6 +8,7 @@ ends of the range.
 
 from __future__ import annotations
 
+from speccheck.checks.beams import columns_of_width
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
@@ -40,6 +41,8 @@ SOURCE = "grating-lobe condition d < λ/(1 + sin θ): R. J. Mailloux, Phased Arr
         "horizontal_element_spacing",
         "horizontal_scan",
         "transceivers",
+        "horizontal_beamwidth",
+        "ports_per_band",
         "grating_lobes",
         "sidelobe_suppression",
     ),
@@ -51,6 +54,8 @@ def horizontal_spacing(
     array_columns: Reading,
     horizontal_scan: Reading | None,
     transceivers: Reading | None,
+    horizontal_beamwidth: Reading | None,
+    ports_per_band: Reading | None,
     grating_lobes: Reading | None,
     sidelobe_suppression: Reading | None,
 ) -> Judgement | None:
@@ -65,8 +70,9 @@ def horizontal_spacing(
     d/λ < 1/(1 + sin θ); the lobe stands at sin θ' = sin θ − λ/d
 
     Assumptions
-    Element of TR 38.901 form, 65° × 65°. Passive columns fed together are not steered. A triangular
-    lattice is judged by its own check.
+    Element of TR 38.901 form, 65° × 65°. Passive columns fed together are not steered; columns that each
+    have their own ports and beam are arrays side by side and form no lattice. A triangular lattice is judged
+    by its own check.
 
     Worked example
     60 mm at 3800 MHz is 0.76 λ; steering to 60° allows 0.54 λ. A lobe enters from 18°, so it does not fit.
@@ -81,6 +87,8 @@ def horizontal_spacing(
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("horizontal_scan",), used=model.used)
     pitch = _pitch(case, "horizontal_element_spacing")
     if model.layout.lattice is Lattice.TRIANGULAR or pitch is None:
+        return None
+    if ends is None and _columns_apart(model, horizontal_beamwidth, ports_per_band):
         return None
     steering = Steering(ends or (0.0, 0.0), True, horizontal_scan)
     lobe = strongest(model, steering, subarrays=False)
@@ -144,6 +152,15 @@ def vertical_spacing(
     suppressions = (sidelobe_suppression, every_lobe(upper_sidelobe_suppression))
     broken = broken_claims(lobe, grating_lobes=grating_lobes, suppressions=suppressions, horizontal=False)
     return _judged(model, steering, pitch, broken, lobe)
+
+
+def _columns_apart(model: Model, width: Reading | None, ports: Reading | None) -> bool:
+    """Whether each column is an array of its own: a port pair and the beam of a single column."""
+    if ports is not None and ports.nominal < 2 * model.layout.columns:
+        return False
+    if width is None or isinstance(width.value, str):
+        return ports is not None
+    return columns_of_width(model, width.nominal, model.centre_hz, 0.0) == 1
 
 
 def _pitch(case: Case, key: str) -> Reading | None:

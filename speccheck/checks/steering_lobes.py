@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import functools
 import re
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 import numpy as np
 
@@ -12,7 +12,7 @@ from speccheck.checks.model import Model
 from speccheck.checks.saying import named
 from speccheck.physics import lobes
 from speccheck.physics.element import SectorElement
-from speccheck.physics.layout import ArrayLayout
+from speccheck.physics.layout import ArrayLayout, Lattice
 from speccheck.records import Fit, Reading, Step
 
 HARD_DB, SOFT_DB = -3.0, -8.0
@@ -104,13 +104,15 @@ def span_deg(reading: Reading | None) -> tuple[float, float] | None:
 def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[float, float], Reading] | None:
     """Both ends [deg] of the claimed steering in the vertical plane, positive downwards, and the wider claim.
 
-    A tilt range and a vertical scan range are both claims: a lobe inside either counts.
+    A tilt range and a vertical scan range are both claims: a lobe inside either counts. A scan range is
+    counted upwards, but '0 to 10°' with no negative end means below the horizon (common practice).
     """
     claims: list[tuple[tuple[float, float], Reading]] = []
     if tilt is not None and not isinstance(tilt.value, str):
         claims.append(((tilt.low, tilt.high), tilt))
     if scan is not None and (ends := span_deg(scan)):
-        claims.append(((-ends[1], -ends[0]), scan))
+        # without any angle of the other sign the range is that below the horizon
+        claims.append((ends if ends[0] >= 0 else (-ends[1], -ends[0]), scan))
     if not claims:
         return None
     widest = max(claims, key=lambda claim: claim[0][1] - claim[0][0])
@@ -119,11 +121,20 @@ def tilt_span_deg(tilt: Reading | None, scan: Reading | None) -> tuple[tuple[flo
 
 def strongest(model: Model, steering: Steering, *, subarrays: bool) -> Lobe:
     """The strongest lobe of the element or of the sub-array lattice over both ends of the range."""
-    layout = model.layout
+    layout = _in_plane(model.layout, horizontal=steering.horizontal)
     pitch_wl = _pitch_wl(model, steering, subarrays=subarrays)
     if pitch_wl > FAR_PITCH_WL:
         return _far(pitch_wl, steering)
     return _searched(layout, model.high_hz, steering.ordered_deg, steering.horizontal, subarrays)
+
+
+def _in_plane(layout: ArrayLayout, *, horizontal: bool) -> ArrayLayout:
+    """One row or column of a rectangular lattice: the lobes of the other plane are judged there."""
+    if layout.lattice is Lattice.TRIANGULAR:
+        return layout
+    if horizontal:
+        return replace(layout, rows=1, subarray_rows=1, subarray_tilt_deg=0.0)
+    return replace(layout, columns=1, subarray_columns=1)
 
 
 @functools.lru_cache(maxsize=4096)

@@ -45,7 +45,8 @@ def figures_say_their_statistic(case: Case) -> Judgement | None:
 
     Assumptions
     VSWR, return loss, isolation and intermodulation are absolute limits in the trade: 'typical' there, or
-    'typical' beside a sign of minimum or maximum, is doubtful. A ± tolerance may be statistical (mean ± 1.5
+    'typical' beside a sign of minimum or maximum, is doubtful, and so is one figure given as typical and as
+    minimum both. A ± tolerance may be statistical (mean ± 1.5
     standard deviations, 86.6 % of samples) or absolute: the sheet alone cannot tell. Figures without sign,
     tolerance or word are listed and asked about, not doubted.
 
@@ -56,7 +57,9 @@ def figures_say_their_statistic(case: Case) -> Judgement | None:
     stated = tuple(r for key in _KEY_FIGURES for r in case.panel.all(key))
     if not stated:
         return None
-    typical = tuple(r for r in stated if _TYPICAL.search(words(r)) and _sold_as_guaranteed(r))
+    typical = tuple(
+        r for r in stated if _TYPICAL.search(words(r)) and (_sold_as_guaranteed(r) or _also_bound(r, stated))
+    )
     bare = tuple(r for r in stated if _says_nothing(r))
     ranged = tuple(r for r in stated if r.tolerance)
     return Judgement(
@@ -84,6 +87,17 @@ def figures_say_their_statistic(case: Case) -> Judgement | None:
 
 def _sold_as_guaranteed(reading: Reading) -> bool:
     return reading.parameter in _GUARANTEED or reading.sense is not Sense.NOMINAL
+
+
+def _also_bound(typical: Reading, stated: tuple[Reading, ...]) -> bool:
+    """Whether the same figure stands as minimum or maximum of the same parameter and band as well."""
+    return any(
+        r.parameter == typical.parameter
+        and r.band == typical.band
+        and r.sense is not Sense.NOMINAL
+        and r.value == typical.value
+        for r in stated
+    )
 
 
 def _says_nothing(reading: Reading) -> bool:
