@@ -90,7 +90,7 @@ class DownPanels:
 
     @staticmethod
     def _name_groups_of_bands(values: list[Column]) -> bool:
-        """Whether the words over the columns part one panel's bands: no type codes, no band under two of them."""
+        """Whether the words over the columns part one panel's bands: no type codes, no band under two."""
         bands: dict[str, set[Band]] = {}
         for column in values:
             if column.words:
@@ -159,7 +159,7 @@ class DownPanels:
     def _bands_from_row(self, values: list[Column]) -> None:
         """A row of frequency ranges that differ across one panel's columns gives the columns their bands.
 
-        Of several such rows the one with the most ranges; ranges of another row that contain them are wider bands.
+        Of several such rows the one with the most ranges; ranges of another that contain them are wider.
         """
         rows = self._rows_of(_FREQUENCY_KEYS)
         for draft in self._drafts.values():
