@@ -29,6 +29,9 @@ VERDICTS = {
     GainZone.PLAUSIBLE: Fit.FITS,
     GainZone.LOW: Fit.DOUBTFUL,
 }
+WIDEST_SECTOR_DEG = 180.0
+"""Horizontal half-power width [deg] beyond which a panel radiates behind itself as well."""
+
 COLUMN_PRODUCT = 35_000.0
 """Directivity × width × width [deg²] of a uniform column: 8 at 0.8 λ, 18.3 dBi, 65° × 8° (computed)."""
 
@@ -68,11 +71,9 @@ def gain_fits_geometry(
     """Computes the directivity of the declared array, takes off a range of losses and compares.
 
     The array is fitted to the claimed beamwidths by a taper and integrated over the sphere, at the frequency
-    of
-    the claim (mid band unless stated). Above the lossless value a claim does not fit; between the least
+    of the claim (mid band unless stated). Above the lossless value a claim does not fit; between the least
     plausible loss and the lossless value it needs a loss statement; far below the expectation it is
-    questioned
-    too.
+    questioned too. A panel that radiates all round has no sector element and is not judged here.
 
     Formula
     D = 4π·U(beam) ÷ ∮U dΩ; gain = D − loss; loss 0.5–1.6 dB passive, 0.5–1.8 dB massive MIMO, 0.9–2.8 dB
@@ -88,6 +89,8 @@ def gain_fits_geometry(
     model = model_of(case)
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
+    if model.layout.columns == 1 and (number(horizontal_beamwidth) or 0.0) > WIDEST_SECTOR_DEG:
+        return _all_round(gain, horizontal_beamwidth)
     widths = _Widths(horizontal_beamwidth, vertical_beamwidth)
     stated = [g for g in case.panel.all("gain", case.band) if not isinstance(g.value, str)] or [gain]
     judged = [
@@ -99,6 +102,17 @@ def gain_fits_geometry(
         for one in stated
     ]
     return max(judged, key=lambda j: _SEVERITY[j.verdict])
+
+
+def _all_round(gain: Reading, width: Reading | None) -> Judgement:
+    wide = "" if width is None else f" with a horizontal width of {claim(width)}"
+    return Judgement(
+        verdict=Fit.NOT_JUDGED,
+        summary=f"{claim(gain)} gain claimed{wide}: no element of a sector panel is that wide, and the array"
+        " was not computed.",
+        question="Please state how the panel forms a beam that wide, and confirm that the horizontal width"
+        " is that of one beam at -3 dB.",
+    )
 
 
 _SEVERITY = {Fit.FITS: 0, Fit.NOT_JUDGED: 0, Fit.DOUBTFUL: 1, Fit.DOES_NOT_FIT: 2}
