@@ -9,7 +9,10 @@ from speccheck.dictionary.index import find, listed
 from speccheck.dictionary.parameters import parameters
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
-_BETWEEN = r"\s*[×*]\s*|\s+x\s+|\s*/\s*|\s*\|\s*|\s+by\s+|\s*&\s*|\s*\+\s*|\s+(?:and|und|et|y|e|i|en)\s+|(?<=\b\w)x(?=\w\b)"
+_BETWEEN = (
+    r"\s*[×*]\s*|\s+x\s+|\s*/\s*|\s*\|\s*|\s+by\s+|\s*&\s*|\s*\+\s*|\s+(?:and|und|et|y|e|i|en)\s+"
+    r"|(?<=\b\w)x(?=\w\b)"
+)
 _PARTS = re.compile(_BETWEEN, re.IGNORECASE)
 _COMMA_PARTS = re.compile(_BETWEEN + r"|\s*,\s+", re.IGNORECASE)
 _LETTERS = re.compile(r"\b([a-z])\s*[x×*/,]\s*([a-z])(?:\s*[x×*/,]\s*([a-z]))?\b", re.IGNORECASE)

@@ -18,8 +18,8 @@ _AT_WORDS = (
 )
 # units that conditions of a heading come in; a short list keeps the expression small
 _CONDITION_UNIT = (
-    r"(?:[GMk]?Hz|km/hr?|kmh|kph|m/s|mph|kn|kts?|°\s?C|°|deg(?:rees?)?|Grad"
-    r"|dBm|dBW|k?W|V|mm|m|%|λ|years?)(?!\w)"
+    r"(?:[GMk]?Hz|km/(?:hr?|u|std|godz)|kmh|kph|m/s|mph|kn|kts?|°\s?C|°|deg(?:rees?)?|Grad"
+    r"|dBm|dBW|k?W|V|mm|cm|m|ft|inch|in|%|λ|years?)(?!\w)"
 )
 _FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{_CONDITION_UNIT}|1(?=\W|$))?"
 _CONDITION = re.compile(

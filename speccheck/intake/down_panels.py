@@ -115,9 +115,15 @@ class DownPanels:
         """The bands of the panel a column speaks of."""
         draft = self.of(column)
         if id(draft) not in self._column_bands:
-            mine = [c for c in self._value_columns() if self.of(c) is draft]
-            self._column_bands[id(draft)] = ColumnBands(mine)
+            for key, columns in self._by_draft(self._value_columns()).items():
+                self._column_bands[key] = ColumnBands(columns)
         return self._column_bands[id(draft)]
+
+    def _by_draft(self, columns: list[Column]) -> dict[int, list[Column]]:
+        by_draft: dict[int, list[Column]] = {id(draft): [] for draft in self._drafts.values()}
+        for column in columns:
+            by_draft[id(self.of(column))].append(column)
+        return by_draft
 
     def claim_band(self, draft: Draft, cell: Cell, band: Band, heading: str) -> None:
         """A heading that gives the frequencies of a band is itself a claim."""

@@ -11,12 +11,10 @@ from speccheck.dictionary import match_heading, parameters, synonyms
 from speccheck.intake.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.words import column_role, fold, is_counting_unit
 from speccheck.kept import kept
-from speccheck.kept import kept
 from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
-_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
 _VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
 _MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
@@ -27,6 +25,7 @@ _TILTS = re.compile(
     re.IGNORECASE,
 )
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
+_DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
 _UNIT_BRACKET = re.compile(r"\s*[(\[][^()\[\]\d]{1,8}[)\]]\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _SEVERAL = re.compile(r"[xX×/*]")
@@ -82,7 +81,14 @@ class Labels:
         if not self._could_be_heading(text):
             return Label(text)
         cleaned = text.strip().rstrip(":").strip()
-        attempts = (self._with_list, self._with_unit, self._match, self._with_tilts, self._with_bands)
+        attempts = (
+            self._with_list,
+            self._with_unit,
+            self._match,
+            self._with_tilts,
+            self._with_bands,
+            self._with_demand,
+        )
         for found in (attempt(cleaned) for attempt in attempts):
             if found:
                 return replace(found, text=text)
@@ -128,6 +134,11 @@ class Labels:
             return inner
         tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1]))
         return replace(inner, tilts=tilts)
+
+    def _with_demand(self, text: str) -> Label:
+        """'Vertical beamwidth at -3 dB ≤ 8°': what is asked for stands behind the name of the parameter."""
+        cut = _DEMAND.match(text)
+        return replace(self.of(cut[1]), sense="nominal") if cut else Label(text)
 
     def _with_bands(self, text: str) -> Label:
         bands = find_bands(text)
@@ -180,10 +191,6 @@ def _stem(word: str) -> str:
 @cache
 def _vocabulary() -> frozenset[str]:
     """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
-    return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
-
-
-def _first_letters() -> frozenset[str]:
     return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
 
 
