@@ -168,8 +168,9 @@ class DownPanels:
         Of several such rows the one with the most ranges; ranges of another that contain them are wider.
         """
         rows = self._rows_of(_FREQUENCY_KEYS)
+        by_draft = self._by_draft([c for c in values if c.role in ("", "offered", "panel")])
         for draft in self._drafts.values():
-            mine = [c for c in values if self.of(c) is draft and c.role in ("", "offered", "panel")]
+            mine = by_draft[id(draft)]
             spans = [self._spans_of_row(row, mine) for row in rows]
             best = max(spans, key=lambda found: len(set(found.values())), default={})
             if len(set(best.values())) < 2 or any(c.band for c in mine):

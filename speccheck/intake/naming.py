@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 from dataclasses import dataclass
+from functools import lru_cache
 
 from speccheck.intake.bands import is_band_label
 from speccheck.intake.claims import SheetResult
@@ -41,6 +42,7 @@ class Title:
     certain: bool
 
 
+@lru_cache(maxsize=20_000)
 def model_name(text: str) -> str:
     """The panel's name in a title or model cell: 'Type Kaldora 12S' is Kaldora 12S.
 
