@@ -16,6 +16,7 @@ from speccheck.quantities.units import unit_name
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
 _VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/labels.py", "intake/words.py", "quantities/units.py")
+_MOST_SUGGESTIONS = 300
 _MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
 _NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
@@ -60,6 +61,7 @@ class Labels:
         self._synonyms = dict(synonyms)
         self._known: dict[str, Label] = {}
         self._vocabulary = _vocabulary() | {_stem(word) for text in synonyms for word in _runs(text)}
+        self._near: dict[str, str] = {}
         self._misses = 0
 
     def of(self, text: str) -> Label:
@@ -150,8 +152,14 @@ class Labels:
         return self._match(text.strip()) if len(text.strip()) == 1 else Label(text)
 
     def suggestion(self, text: str) -> str:
-        """The nearest known headings to a text."""
-        return "; ".join(match_heading(text, self._synonyms).suggestions[:2]) if text else ""
+        """The nearest known headings to a text; for the first few hundred texts of a file only."""
+        near = self._near.get(text)
+        if near is None:
+            if len(self._near) >= _MOST_SUGGESTIONS:
+                return ""
+            found = match_heading(text, self._synonyms).suggestions if text else ()
+            near = self._near[text] = "; ".join(found[:2])
+        return near
 
     def _match(self, text: str) -> Label:
         found = match_heading(text, self._synonyms, suggest=False)
