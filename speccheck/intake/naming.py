@@ -123,7 +123,8 @@ class Names:
         candidates: list[Cell] = []
         for row in range(top - 1, max(0, top - 25), -1):
             cells = [c for c in marks.rows.get(row, ()) if c.column <= right]
-            near = [c for c in cells if c.column >= left - 2] or cells
+            near = [c for c in cells if c.column >= left]
+            near = near or [c for c in cells if c.column >= left - 2] or cells
             if any(result.roles.get((c.row, c.column), "note") != "note" for c in near):
                 break
             titles = [c for c in near if isinstance(c.raw, str) and not is_band_label(c.text)]

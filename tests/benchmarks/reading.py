@@ -113,7 +113,7 @@ def main() -> None:
         ):
             times, floor = ratio(file, repeats)
             print(
-                f"read {name:<22} {times:5.2f} x openpyxl's full load ({floor * 1000:.1f} ms); at most 2, aim 1.5"
+                f"read {name:<22} {times:5.2f} x openpyxl's load ({floor * 1000:.1f} ms); at most 2, aim 1.5"
             )
         peaks = {rows: peak_mb(catalogue(path, rows)) for rows in (500, 1000, 2000, 4000)}
         for rows, peak in peaks.items():
