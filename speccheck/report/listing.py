@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import textwrap
+
 from speccheck.dictionary import parameters
 from speccheck.records import Band, Panel, Reading, Sense, Statement, Submission, Value
 from speccheck.text import plain
