@@ -111,12 +111,15 @@ class Builder:
     def _bands(self, draft: Draft, outcomes: list[tuple[Claim, Outcome]]) -> bool:
         """Complete the draft's bands from its frequency cells; True when it has several."""
         overall: list[Band] = []
-        for claim, outcome in outcomes:
-            if claim.context.label.parameters[0] not in FREQUENCY:
-                continue
+        told = [(c, o) for c, o in outcomes if c.context.label.parameters[0] in FREQUENCY]
+        for _, outcome in told:
             for found in outcome.found:
                 _name_to_span(found)
+        in_figures = bool(draft.bands) or any(_in_figures(o.found) for _, o in told)
+        for claim, outcome in told:
             spans = [f.value for f in outcome.found if isinstance(f.value, tuple)]
+            if in_figures and not claim.banded and not _in_figures(outcome.found):
+                continue
             if len(spans) > 1 and len(draft.bands) < 2:
                 draft.bands += [s for s in spans if s not in draft.bands]
             elif len(spans) == 1 and not claim.banded:
@@ -152,6 +155,13 @@ def _name_to_span(found: Found) -> None:
             found.value = hull
 
 
+def _in_figures(found: list[Found]) -> bool:
+    """Whether a frequency cell gives any range in figures, not only names of standard bands."""
+    return any(
+        isinstance(f.value, tuple) and not isinstance(f.figure.quantity.stated_value, str) for f in found
+    )
+
+
 def _markers(heading: str) -> tuple[str, ...]:
     return split_footnotes(heading)[1] if heading else ()
 
@@ -162,6 +172,8 @@ def _shared_out(
     """A list of figures in one cell, given to the panel's bands in their order."""
     first = found[0]
     if first.parameter in FREQUENCY:
+        if bands and not claim.banded and claim.band is None and not _in_figures(found):
+            return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
     alike = _plain_list(found)
     tilts = claim.context.label.tilts
@@ -188,6 +200,14 @@ def _plain_list(found: list[Found]) -> list[Found]:
     told_apart = any(f.figure.quantity.at for f in alike)
     told_apart = told_apart or len({(f.figure.condition, f.figure.sense) for f in alike}) > 1
     return [] if told_apart else alike
+
+
+def _named_bands(found: list[Found], bands: list[Band]) -> list[Found]:
+    """Names of standard bands say what is supported; they are no bands with figures of their own."""
+    for one in found:
+        span = _span_of(one)
+        one.parameter, one.band = "operating_bands", span if span in bands else None
+    return found
 
 
 def _frequencies(claim: Claim, found: list[Found], several: bool) -> list[Found]:
