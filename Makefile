@@ -27,11 +27,13 @@ benchmarks: $(VENV)/installed-test
 $(VENV)/installed: pyproject.toml
 	$(PYTHON) -m venv $(VENV)
 	$(BIN)/pip install --quiet -e .
+	$(BIN)/python -m compileall -q speccheck
 	touch $@
 
 $(VENV)/installed-test: pyproject.toml
 	$(PYTHON) -m venv $(VENV)
 	$(BIN)/pip install --quiet -e '.[test]'
+	$(BIN)/python -m compileall -q speccheck
 	touch $@
 
 # PDF needs Pango from the system; without root the program still writes HTML and says what to install.

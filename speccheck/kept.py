@@ -2,7 +2,7 @@
 
 The dictionary is written for people to read and correct; parsing and folding it would take as long in
 every run as judging a panel. Kept things are made anew when a byte of what they are made from changes.
-Where the folder cannot be written, or Python is told to write no byte code, they are made each time.
+Where the folder cannot be written they are made each time.
 """
 
 from __future__ import annotations
@@ -31,18 +31,21 @@ def kept(name: str, sources: tuple[str, ...], make: Callable[[], T]) -> T:
     name : of the thing, one file each
     sources : data and code it is made from, as patterns below the package, such as ``data/*.csv``
     make : makes it, of dicts, lists, tuples, sets, texts and numbers only
+
+    Raises
+    ------
+    FileNotFoundError : no file has a source's name, so that a change of it would go unseen
     """
     path = _FOLDER / f"{name}.{sys.implementation.cache_tag}.kept"
-    stamp = _digest(sources)
+    stamp = _digest(sources)  # of contents: tools that install or copy give files of two versions one time
     with contextlib.suppress(OSError, EOFError, ValueError, TypeError):
         of, thing = marshal.loads(path.read_bytes())  # noqa: S302 - trusted as far as the byte code beside it
         if of == stamp:
             found: T = thing
             return found
     made = make()
-    if not sys.dont_write_bytecode:
-        with contextlib.suppress(OSError, ValueError):
-            _write(path, marshal.dumps((stamp, cast(Any, made))))
+    with contextlib.suppress(OSError, ValueError):
+        _write(path, marshal.dumps((stamp, cast(Any, made))))
     return made
 
 
@@ -61,7 +64,10 @@ def toml(name: str) -> dict[str, Any]:
 def _digest(sources: tuple[str, ...]) -> bytes:
     digest = hashlib.blake2b(digest_size=16)
     for pattern in sources:
-        for path in sorted(PACKAGE.glob(pattern)):
+        paths = sorted(PACKAGE.glob(pattern))
+        if not paths:
+            raise FileNotFoundError(f"no {pattern} in {PACKAGE}")
+        for path in paths:
             content = path.read_bytes()
             digest.update(f"{path.name} {len(content)} ".encode())
             digest.update(content)

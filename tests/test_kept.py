@@ -15,7 +15,6 @@ from speccheck.kept import PACKAGE, kept, toml
 def folder(tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> Path:
     monkeypatch.setattr(module, "PACKAGE", tmp_path)
     monkeypatch.setattr(module, "_FOLDER", tmp_path / "kept")
-    monkeypatch.setattr("sys.dont_write_bytecode", False)
     (tmp_path / "a.txt").write_text("1")
     return tmp_path
 
@@ -46,12 +45,16 @@ def test_a_damaged_file_is_made_anew(folder: Path, content: bytes) -> None:
     assert made("after") == "after"
 
 
-def test_nothing_is_written_where_python_writes_no_byte_code(
-    folder: Path, monkeypatch: pytest.MonkeyPatch
-) -> None:
-    monkeypatch.setattr("sys.dont_write_bytecode", True)
+@pytest.mark.usefixtures("folder")
+def test_a_source_that_is_not_there_is_an_error() -> None:
+    with pytest.raises(FileNotFoundError, match="moved"):
+        kept("thing", ("*.txt", "moved.py"), lambda: 1)
+
+
+@pytest.mark.usefixtures("folder")
+def test_a_folder_that_cannot_be_written_is_no_error(monkeypatch: pytest.MonkeyPatch) -> None:
+    monkeypatch.setattr(module, "_FOLDER", Path("/proc/nowhere"))
     assert made("thing") == "thing"
-    assert not (folder / "kept").exists()
 
 
 @pytest.mark.parametrize("path", sorted((PACKAGE / "data").rglob("*.toml")), ids=lambda path: path.name)

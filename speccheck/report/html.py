@@ -70,7 +70,7 @@ def templates_folder() -> Path:
 class _CompiledTemplates(jinja2.BytecodeCache):
     """Compiled templates beside the package's own byte code, as Python keeps its own; compiling takes 0.1 s.
 
-    Where that folder cannot be written, or Python is told to write none, they are compiled each time.
+    Where that folder cannot be written they are compiled each time.
     """
 
     folder = Path(__file__).parent / "__pycache__"
@@ -85,9 +85,9 @@ class _CompiledTemplates(jinja2.BytecodeCache):
 
     def dump_bytecode(self, bucket: Bucket) -> None:
         """Keep a compiled template; a failure costs time only."""
-        if not sys.dont_write_bytecode:
-            with contextlib.suppress(OSError, OutputError):
-                write_bytes_atomic(self._file(bucket), bucket.bytecode_to_string())
+        with contextlib.suppress(OSError, OutputError):
+            self.folder.mkdir(exist_ok=True)
+            write_bytes_atomic(self._file(bucket), bucket.bytecode_to_string())
 
     def _file(self, bucket: Bucket) -> Path:
         return self.folder / f"template-{bucket.key[:20]}.{sys.implementation.cache_tag}.bin"
