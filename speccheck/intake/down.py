@@ -107,7 +107,7 @@ class DownReader:
         title = above[0] if len(above) == 1 and self._grid.name != above[0].text else None
         if title is not None and is_band_label(title.text) and isinstance(title.raw, str):
             self._section(title)
-        elif is_band_label(self._grid.name):
+        elif is_band_label(self._grid.name) and not self._names.is_file(self._grid.name):
             state.section_band, state.section_name = find_bands(self._grid.name).hull, self._grid.name
 
     def _repeats_heading(self, cells: list[Cell]) -> bool:

@@ -89,8 +89,17 @@ def describe_columns(
     for index in sorted(used):
         stack = heading_stack(marks.grid, heading_rows, index, table.label_column + 1)
         columns[index] = describe(index, stack, marks.labels)
+        _head_in_table(columns[index], used[index], result)
     settle_roles(columns, used, _shares(marks, table, columns, used))
     return columns
+
+
+def _head_in_table(column: Column, cells: list[Cell], result: SheetResult) -> None:
+    """'Comments' in the first row of a table without headings says what its column is for."""
+    first = cells[0] if cells and not column.cells else None
+    if first is not None and column_role(first.text) in ("remark", "compliance", "required"):
+        column.role = column_role(first.text)
+        result.mark(first, "heading")
 
 
 def _shares(

@@ -5,6 +5,7 @@ from __future__ import annotations
 from collections import defaultdict
 from dataclasses import dataclass
 
+from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.grid import Cell
 from speccheck.intake.marks import Marks, looks_like_value
 from speccheck.intake.words import column_role
@@ -121,9 +122,11 @@ def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[t
 def heads_columns(marks: Marks, row: int, column: int) -> bool:
     """Whether a row is the heading row of a table with its labels in this column."""
     cell = marks.grid.cells.get((row, column))
-    if cell is None or column_role(cell.text) != "parameter":
+    beside = [other for other in marks.rows.get(row, ()) if other.column > column]
+    if cell is None or not beside or (row, column) in marks.headings:
         return False
-    return any(other.column > column for other in marks.rows[row])
+    bands = len(beside) > 1 and all(find_bands(c.text).proved and is_band_label(c.text) for c in beside)
+    return column_role(cell.text) == "parameter" or bands
 
 
 def _right_bound(columns: dict[int, list[int]], column: int, top: int, bottom: int) -> int:

@@ -116,7 +116,7 @@ class Labels:
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
         lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0]) and cut.start() > 3]
-        if not lists:
+        if not lists or not _names_something(text[: lists[-1].start()]):
             return Label(text)
         found, cut = [], lists[-1]
         for word in re.split(r"\s*/\s*", cut[0]):
@@ -180,6 +180,11 @@ class Labels:
             tolerance=found.tolerance_of,
             how=found.how,
         )
+
+
+def _names_something(text: str) -> bool:
+    """Whether a text holds a word of weight, more than 'max.' or 'RF'."""
+    return any(len(word) > 2 and not statistic_of(word) for word in _runs(text))
 
 
 def _tidy(text: str) -> str:

@@ -107,6 +107,10 @@ class Names:
     def __init__(self, grid: Grid, stem: str) -> None:
         self._grid, self._stem = grid, stem
 
+    def is_file(self, name: str) -> bool:
+        """Whether a sheet's name is only that of its file, as in delimited text."""
+        return name == self._stem
+
     def is_title(self, text: str) -> bool:
         """Whether a text reads as the title of a panel."""
         return _score(text, self._grid.name.strip()) > 0

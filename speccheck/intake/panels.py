@@ -10,6 +10,7 @@ from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Draft
 from speccheck.intake.ends import join_ends
 from speccheck.intake.found import Found, Outcome
+from speccheck.intake.nicknames import resolve_nicknames
 from speccheck.intake.reading import Reader
 from speccheck.quantities import split_footnotes
 from speccheck.records import Band, Panel, Statement, Unread
@@ -81,6 +82,7 @@ class Builder:
             for claim in piece.claims
         ]
         join_ends(outcomes)
+        resolve_nicknames(outcomes)
         several = self._bands(draft, outcomes)
         for claim, outcome in outcomes:
             role = "reading" if outcome.joined else "unread"

@@ -54,7 +54,7 @@ def name_in_title(text: str) -> str:
         name = _around_code(part.split())
         if name:
             return name
-    return ""
+    return named if len(named.split()) <= _SHORT + 1 else ""
 
 
 def _around_code(words: list[str]) -> str:

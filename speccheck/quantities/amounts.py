@@ -105,7 +105,8 @@ class _Reader:
             self._depth = max(0, self._depth - 1)
             self._settle_words()
         elif kind == "at":
-            pending.at = True
+            self._settle_words()
+            self._pending.at = True
         elif kind in _JOINING:
             if kind == "plus" and self._found and self._kind(1) in ("", "close", "sep"):
                 self._found[-1].sense = self._found[-1].sense or "min"
