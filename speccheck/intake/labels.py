@@ -15,7 +15,7 @@ from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
-_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/**/labels.py", "intake/**/words.py", "quantities/units.py")
+_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/**/labels.py", "intake/**/words.py", "**/units.py")
 _MOST_SUGGESTIONS = 300
 _MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
