@@ -7,6 +7,7 @@ breaks a claim which fitted is dropped. Nothing here names a culprit: candidates
 
 from __future__ import annotations
 
+from collections import Counter
 from collections.abc import Callable, Collection
 from dataclasses import dataclass, replace
 
@@ -15,7 +16,7 @@ from speccheck.records import Band, CellRef, Convention, Finding, Fit, Panel, Re
 Transform = Callable[[Panel, "Reach"], Panel]
 Rerun = Callable[[Panel], tuple[Finding, ...]]
 
-_Key = tuple[str, Band | None, tuple[CellRef, ...]]
+_Key = tuple[str, Band | None, tuple[CellRef, ...], int]
 
 MISFIT = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 LISTED = 5
@@ -137,13 +138,14 @@ def offer_innocent_readings(panel: Panel, findings: tuple[Finding, ...], rerun: 
     findings : what the checks say of it
     rerun : judges another reading of the panel by the same checks
     """
-    misfits = {_key(f): f for f in findings if f.verdict in MISFIT}
+    keyed = _keyed(findings)
+    misfits = {key: f for key, f in keyed.items() if f.verdict in MISFIT}
     if not misfits:
         return findings
-    trial = _Trial(panel, misfits, frozenset(_key(f) for f in findings if f.verdict is Fit.FITS), rerun)
+    trial = _Trial(panel, misfits, frozenset(k for k, f in keyed.items() if f.verdict is Fit.FITS), rerun)
     tried = [trial.of(rank, reading) for rank, reading in enumerate(INNOCENT_READINGS.values())]
     candidates = sorted((c for c in tried if c is not None), key=lambda c: c.order)
-    return tuple(_completed(f, candidates) if _key(f) in misfits else f for f in findings)
+    return tuple(_completed(key, f, candidates) if key in misfits else f for key, f in keyed.items())
 
 
 @dataclass(frozen=True, slots=True)
@@ -159,7 +161,7 @@ class _Trial:
         """The reading over all bands or else the misfitting ones; None if it repairs nothing."""
         if not any(set(reading.parameters) & set(f.parameters) for f in self.misfits.values()):
             return None
-        bands = tuple(dict.fromkeys(band for _, band, _ in self.misfits if band is not None))
+        bands = tuple(dict.fromkeys(band for _, band, *_ in self.misfits if band is not None))
         seen = [self.panel]
         for reach in (Reach(), Reach(bands)) if len(self.panel.bands) > 1 else (Reach(),):
             other = reading.reread(self.panel, reach)
@@ -172,9 +174,11 @@ class _Trial:
         return None
 
     def _judged(self, rank: int, reading: InnocentReading, other: Panel) -> _Candidate | None:
-        after = {_key(f): f for f in self.rerun(other)}
+        after = _keyed(self.rerun(other))
         if any(f.verdict is Fit.DOES_NOT_FIT for key, f in after.items() if key not in self.misfits):
             return None
+        if any(after[k].verdict is Fit.NOT_JUDGED for k in self.fitted if k in after):
+            return None  # a claim that fitted and can no longer be judged is not explained
         repaired = {k: after[k] for k in self.misfits if k in after and after[k].verdict is Fit.FITS}
         repaired |= {k: _settled(f) for k, f in self.misfits.items() if k not in after and f.check == SLIPS}
         if not repaired:
@@ -191,13 +195,25 @@ def _settled(finding: Finding) -> Finding:
     return replace(finding, verdict=Fit.FITS, claimed=None, expected=None)
 
 
-def _key(finding: Finding) -> _Key:
-    """What a finding is about; its cells count in any order, since exchanged parameters exchange them."""
-    return (finding.check, finding.band, tuple(sorted(finding.where, key=str)))
+def _keyed(findings: tuple[Finding, ...]) -> dict[_Key, Finding]:
+    """Findings by what they are about, in their order.
+
+    The one finding of a check and band is known by these alone, since another reading may stand on other
+    cells; several are told apart by their cells, in any order.
+    """
+    count = Counter((f.check, f.band) for f in findings)
+    keyed: dict[_Key, Finding] = {}
+    for f in findings:
+        cells = tuple(sorted(f.where, key=str)) if count[f.check, f.band] > 1 else ()
+        ordinal = 0
+        while (f.check, f.band, cells, ordinal) in keyed:
+            ordinal += 1
+        keyed[f.check, f.band, cells, ordinal] = f
+    return keyed
 
 
-def _completed(finding: Finding, candidates: list[_Candidate]) -> Finding:
-    mine = [c for c in candidates if _key(finding) in c.repaired][:LISTED]
+def _completed(key: _Key, finding: Finding, candidates: list[_Candidate]) -> Finding:
+    mine = [c for c in candidates if key in c.repaired][:LISTED]
     cells = ", ".join(str(place) for place in finding.where)
     if not mine:
         said = finding.question or "Please state the frequency, tilt and conditions these figures hold for."
@@ -207,8 +223,8 @@ def _completed(finding: Finding, candidates: list[_Candidate]) -> Finding:
     asked = " or ".join(dict.fromkeys(c.reading.ask for c in mine[:2]))
     return replace(
         finding,
-        conventions=tuple(_convention(c, c.repaired[_key(finding)]) for c in mine),
-        working=(*finding.working, *(s for c in mine for s in _left_over(c, c.repaired[_key(finding)]))),
+        conventions=tuple(_convention(c, c.repaired[key]) for c in mine),
+        working=(*finding.working, *(s for c in mine for s in _left_over(c, c.repaired[key]))),
         question=f"Please confirm ({cells}) whether {asked}.",
     )
 

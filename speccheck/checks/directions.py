@@ -21,6 +21,7 @@ _ON_AXIS = re.compile(
 _USUAL_SECTOR_DB = 15.0
 _USUAL_AXIS_DB = 35.0
 _UNDEFINED_CROSS_DB = 25.0
+_CUT = re.compile(r"\b(cut|pattern|schnitt|coupe|corte|taglio)")
 _HORIZON = re.compile(r"horizon(?!tal)|at 0\s*° elevation|elevation 0")
 
 
@@ -140,7 +141,7 @@ def _cross_kind(stated: Reading) -> tuple[str, float]:
     "horizontal-cut-through-beam",
     "Horizontal cut goes through the beam",
     needs=("horizontal_beamwidth",),
-    optional=("gain", "electrical_tilt", "vertical_beamwidth"),
+    optional=("gain", "electrical_tilt", "vertical_beamwidth", "remarks"),
     source="3GPP TR 38.901 Table 7.3-1: main beam falls by 12·(angle/beamwidth)² dB",
 )
 def horizontal_cut_through_beam(
@@ -149,6 +150,7 @@ def horizontal_cut_through_beam(
     gain: Reading | None,
     electrical_tilt: Reading | None,
     vertical_beamwidth: Reading | None,
+    remarks: Reading | None,
 ) -> Judgement | None:
     """Asks whether a cut taken on the horizon was taken while the beam was tilted away from it.
 
@@ -156,15 +158,16 @@ def horizontal_cut_through_beam(
     level at the horizon [dB] = −12·(tilt/θv)²; beam peak and horizon agree where it is near 0
 
     Assumptions
-    Applies where the words of the width or gain name the horizon. The tilt is the one stated beside the
-    figure, else the middle of the range. More than 1 dB below the peak is doubtful.
+    Applies where the words of the width or gain, or a remark on the cuts, name the horizon. The tilt is the
+    one stated beside the figure, else the middle of the range. More than 1 dB below the peak is doubtful.
 
     Worked example
     At 6° of tilt with a 7° vertical width the horizon lies 12·(6/7)² = 8.8 dB under the beam peak: width and
     gain of that cut are not those of the beam.
     """
     said = words(horizontal_beamwidth, gain)
-    if not _HORIZON.search(said):
+    remark = words(remarks)
+    if not _HORIZON.search(said) and not (_CUT.search(remark) and _HORIZON.search(remark)):
         return None
     if electrical_tilt is None or vertical_beamwidth is None:
         lacking = "electrical_tilt" if electrical_tilt is None else "vertical_beamwidth"

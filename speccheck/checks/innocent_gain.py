@@ -18,8 +18,8 @@ PEAK_OVER_AVERAGE_DB = 9.0
 SYSTEM_MODEL_ELEMENT_DBI = 8.0
 """Element gain of the system models, 3GPP TR 38.901 Table 7.3-1."""
 
-SHORT_FORMULA_WITHIN_DB = 0.3
-"""Rounding of element gain and count [dB]."""
+SHORT_FORMULA_WITHIN_DB = 0.15
+"""The formula's result as printed, to a tenth of a decibel [dB]."""
 
 _POWERS = ("conducted_power", "max_power_total")
 
@@ -80,11 +80,15 @@ def gain_before_feed(panel: Panel, reach: Reach) -> Panel:
     "gain",
 )
 def gain_at_best_frequency(panel: Panel, reach: Reach) -> Panel:
-    """The figure held against the upper band edge."""
+    """The figure held against the upper edge of its band, or of the highest band that repeats it."""
 
     def at_top(reading: Reading) -> Reading:
+        alike = [r.band[1] for r in panel.all("gain") if r.band and r.value == reading.value]
         band = reading.band or (panel.bands[-1] if panel.bands else None)
-        return reading if band is None else replace(reading, at={**reading.at, "frequency_mhz": band[1]})
+        if band is None:
+            return reading
+        top = max([band[1], *alike]) if reading.band else band[1]
+        return replace(reading, at={**reading.at, "frequency_mhz": top})
 
     return reread(panel, reach, ("gain",), at_top)
 

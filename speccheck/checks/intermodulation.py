@@ -15,7 +15,7 @@ _STANDARD_CARRIER_DBM = 43.0
 _USUAL_DBC = (-165.0, -140.0)
 _SLOPES = (2.5, 3.0)
 _HIGHER_ORDER = re.compile(r"\b(5th|7th|9th|fifth|seventh|ninth|im[579]|pim[579]|5\. ?ord|7\. ?ord)")
-_POSITIVE = re.compile(r"(?<![-−–\d.,])\d{2,3}(?:[.,]\d+)?\s*dBc", re.IGNORECASE)
+_SIGNED = re.compile(r"[-−–]\s*\d{2,3}")
 
 
 @check(
@@ -56,7 +56,7 @@ def intermodulation_comparable(
     trouble, verdict = _trouble(passive_intermodulation, carrier, ends, small)
     span = f"{ends[0]:.1f} dBc" if ends[0] == ends[1] else f"{ends[0]:.1f} to {ends[1]:.1f} dBc"
     notes = [] if known is not None else ["Test power not stated; two carriers of 43 dBm (20 W) are taken."]
-    if _POSITIVE.search(passive_intermodulation.raw):
+    if not in_dbm and not _SIGNED.search(passive_intermodulation.raw):
         notes.append("Written without its minus sign; read as a negative level.")
     return Judgement(
         verdict=verdict,

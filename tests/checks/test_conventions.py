@@ -94,3 +94,27 @@ def test_only_the_misfitting_band_is_reread_where_the_others_fit() -> None:
     misfits = [f for f in findings if f.verdict in MISFIT and f.check == "gain-fits-geometry"]
     assert [f.band for f in misfits] == [(2300.0, 2690.0)]
     assert misfits[0].conventions[0].name == "both polarisations added into the gain"
+
+
+def test_rows_and_columns_exchanged_are_offered_first_though_the_findings_stand_on_other_cells() -> None:
+    # 12 rows of 58 mm and 8 columns of 41.5 mm fill 696 mm × 332 mm; threes do not divide 8 rows
+    swapped = {
+        "frequency_range": [3300, 3800],
+        "polarisations": 2,
+        "array_rows": 8,
+        "array_columns": 12,
+        "subarray_rows": 3,
+        "subarray_tilt": 6,
+        "vertical_element_spacing": "58 mm",
+        "horizontal_element_spacing": "41.5 mm",
+        "transceivers": 64,
+        "horizontal_beamwidth": 13.2,
+        "vertical_beamwidth": 6.3,
+        "electrical_tilt": [2, 10],
+        "height": 0.79,
+        "width": 0.40,
+    }
+    findings = [f for f in examine(panel_of(swapped), Settings()) if f.verdict in MISFIT]
+    assert "vertical-beamwidth-fits-rows" in [f.check for f in findings]
+    for finding in findings:
+        assert finding.conventions[0].name == "array given as columns × rows"
