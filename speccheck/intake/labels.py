@@ -225,7 +225,7 @@ def looks_like_line(text: str) -> bool:
 def split_lines(text: str) -> list[str]:
     """The lines of a cell; pieces between semicolons count as lines when each has a label."""
     lines = [line.strip() for line in text.splitlines() if line.strip()]
-    split = []
+    split: list[str] = []
     for line in lines:
         pieces = [piece.strip() for piece in re.split(r"\s*[;|]\s*", line) if piece.strip()]
         split += pieces if len(pieces) > 1 and all(map(looks_like_line, pieces)) else [line]

@@ -33,7 +33,7 @@ def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
         DownReader(marks, down, result, names).read()
         result.mark_claims()
     read_lines(marks, result, names)
-    result.drafts.sort(key=lambda draft: min((c.cell.row for c in draft.claims), default=0))
+    result.drafts.sort(key=lambda draft: draft.claims[0].cell.row if draft.claims else 0)
     _leftovers(marks, result)
     return result
 

@@ -15,12 +15,12 @@ def resolve_nicknames(outcomes: list[tuple[Claim, Outcome]]) -> None:
     """Give 'gain, low band' the frequencies that 'frequency range, low band' states."""
     bands: dict[str, set[Band]] = {}
     for claim, outcome in outcomes:
-        name = _nickname(claim)
-        if name and claim.context.label.parameters[0] in _FREQUENCY:
+        name = _nickname(claim) if claim.context.label.parameters[0] in _FREQUENCY else ""
+        if name:
             spans = [f.value for f in outcome.found if isinstance(f.value, tuple)]
             bands.setdefault(name, set()).update(spans)
-    for claim, outcome in outcomes:
-        spans_of_name = bands.get(_nickname(claim), set()) if bands else set()
+    for claim, outcome in outcomes if bands else ():
+        spans_of_name = bands.get(_nickname(claim), set())
         if claim.band is None and len(spans_of_name) == 1:
             (claim.band,) = spans_of_name
             claim.banded = True
