@@ -53,6 +53,9 @@ _DOUBTS = {
     "VERSION": "'latest' is read as the version in force at the tender date",
 }
 
+WINDOW_UNKNOWN = "judged on the figure; stated without tolerance, so the offered window is not known"
+"""Note of a row whose bare figure lies inside the window demanded: a narrow pass and a question."""
+
 
 def doubt(code: str, detail: str = "") -> str:
     """A doubt in words, starting with its code word."""

@@ -6,7 +6,7 @@ from collections.abc import Callable, Iterator
 from dataclasses import dataclass, replace
 
 from speccheck.records import Assessment, Band, CellRef, Compliance, Fit, Level, MatrixRow, PanelAssessment
-from speccheck.records.demands import blocked
+from speccheck.records.demands import WINDOW_UNKNOWN, blocked
 
 UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
 
@@ -20,6 +20,7 @@ _ASKED = {
 }
 
 _REWORD = "{what} cannot be judged as it is worded. The buyer settles the wording; no figure is asked yet."
+_TOLERANCE = "{what} is stated without a tolerance. Please state the window within which every figure lies."
 _PAPERS = "The offer declares {what}. Please supply the papers that show it."
 
 
@@ -68,12 +69,14 @@ def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Questi
 
 def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str], str]) -> Iterator[Question]:
     for row in panel.requirements:
-        if row.verdict not in UNANSWERED or row.requirement.level is Level.INFORMATION:
+        window_unknown = WINDOW_UNKNOWN in row.note
+        unanswered = row.verdict in UNANSWERED or window_unknown
+        if not unanswered or row.requirement.level is Level.INFORMATION:
             continue
         name = label(row.requirement.parameter) if row.requirement.parameter else "this requirement"
         what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name
         papers = row.requirement.operator == "evidence" and row.verdict is Compliance.DECLARED_ONLY
-        asked = _PAPERS if papers else _ASKED[row.verdict]
+        asked = _TOLERANCE if window_unknown else _PAPERS if papers else _ASKED[row.verdict]
         if blocked(row.requirement.doubts):
             asked = _REWORD
         yield Question(

@@ -9,7 +9,7 @@ from dataclasses import dataclass, replace
 from speccheck.dictionary import Parameter
 from speccheck.quantities import UnknownUnitError, convert
 from speccheck.records import Compliance, Reading, Requirement, Sense, Settings
-from speccheck.records.demands import doubt_code
+from speccheck.records.demands import WINDOW_UNKNOWN, doubt_code
 from speccheck.tender.conditions import Comparable
 from speccheck.tender.grading import FAILING, PASSING, Grade, graded, rounded, settled
 from speccheck.tender.offers import Relation
@@ -117,7 +117,8 @@ def _against_limit(
     )
     if isinstance(limit, tuple):
         margin = settled(min(span.low - limit[0], limit[1] - span.high), max(map(abs, limit)))
-        return _windowed(requirement, parameter, reading, graded(margin, guard))
+        grade = rounded(graded(margin, guard), span.half_digit)
+        return _windowed(requirement, parameter, reading, grade)
     if not isinstance(limit, float | int):
         return Grade(Compliance.NOT_JUDGED, None, "the limit is not a figure")
     if operator == "=":
@@ -130,19 +131,19 @@ def _against_limit(
         equal_meets=settings.equality_meets if equal else operator in ("≥", "≤"),
         equal_note="EQUAL: exactly at the limit; the equality rule decides" if equal else "",
     )
-    converted = (
-        reading.stated_unit or reading.unit
-    ) != requirement.unit or parameter.key != reading.parameter
-    return rounded(grade, span.half_digit, converted=converted)
+    return rounded(grade, span.half_digit)
 
 
 def _windowed(requirement: Requirement, parameter: Parameter, reading: Reading, grade: Grade) -> Grade:
-    """A window in the offer must lie inside the required one; a figure without tolerance shows no window."""
+    """A window in the offer must lie inside the required one.
+
+    A figure without tolerance is judged as it stands and never passes better than narrowly: its window
+    is not known, and the bidder is asked for it.
+    """
     bare = reading.tolerance is None and not isinstance(reading.value, tuple)
     firm = canonical(requirement.statistic, parameter.direction) in ("", "each")
     if bare and firm and parameter.direction == "window" and grade.verdict in PASSING:
-        note = "offered without tolerance: the offered window is not known"
-        return replace(grade, verdict=Compliance.NOT_JUDGED, note=note)
+        return replace(grade, verdict=Compliance.MEETS_NARROWLY, note=WINDOW_UNKNOWN)
     return grade
 
 

@@ -52,21 +52,16 @@ def graded(margin: float, guard: float, *, equal_meets: bool = True, equal_note:
     return Grade(Compliance.FAILS, margin)
 
 
-def rounded(grade: Grade, allowance: float, *, converted: bool) -> Grade:
+def rounded(grade: Grade, allowance: float) -> Grade:
     """The grade once half a unit of the last digit printed in the offer is allowed for.
 
-    After conversion of units the allowance carries a shortfall; in the offer's own unit it only
-    softens the fail, since the bidder chose how many digits to print.
+    A shortfall within it is a narrow pass, after conversion of units as in the offer's own unit.
     """
-    if grade.margin is None or grade.margin >= 0 or grade.margin + allowance < 0:
+    short = grade.verdict in FAILING and grade.margin is not None and grade.margin < 0
+    if not short or (grade.margin or 0.0) + allowance < -_SLACK:
         return grade
-    if grade.verdict is not Compliance.FAILS and not (
-        converted and grade.verdict is Compliance.FAILS_NARROWLY
-    ):
-        return grade
-    note = f"ROUND: within half a unit of the last digit printed ({allowance:.2g})"
-    verdict = Compliance.MEETS_NARROWLY if converted else Compliance.FAILS_NARROWLY
-    return Grade(verdict, grade.margin, note)
+    note = f"ROUND: short by less than half a unit of the last digit printed ({allowance:.2g})"
+    return Grade(Compliance.MEETS_NARROWLY, grade.margin, note)
 
 
 PASSING = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)

@@ -18,6 +18,7 @@ from speccheck.records import (
     Tender,
 )
 from speccheck.records.demands import blocked
+from speccheck.tender.answer_rule import answer_rule, ruled
 from speccheck.tender.capabilities import covers_bands, covers_range
 from speccheck.tender.caps import capped
 from speccheck.tender.conditions import at_demanded_tilt, comparable
@@ -43,11 +44,12 @@ def judge(tender: Tender, panel: Panel, findings: Sequence[Finding]) -> tuple[Ma
     findings : what the checks said of the same panel; a misfit marks the rows of its parameters
     """
     rows: list[MatrixRow] = []
+    rule = answer_rule(tender.requirements)
     for requirement in tender.requirements:
         if requirement.operator in _NOT_ROWS:
             continue
         for row in _rows(requirement, panel, tender.settings):
-            rows.append(with_deviation(marked(row, findings), tender, panel))
+            rows.append(with_deviation(marked(ruled(row, rule), findings), tender, panel))
     return (*rows, *capped(tender.requirements, rows))
 
 

@@ -70,7 +70,7 @@ MATRIX = {
     "Elm 4": "m   d   m   m   m   m   m   m  m   m  m   d   n",
     "Fir 4": "m   m   m   a   f   m   m   m  m   m  m   n   f",
     "Gorse 4": "m   m   m   m   m   f   m   m  f   s  m   n   n",
-    "Hazel 4": "f   m   j   m   m   m   s   m  m   m  m   n   n",
+    "Hazel 4": "f   m   n   m   m   m   s   m  m   m  m   n   n",
     "Hazel 2": "m   j   m   m   m   m   m   f  m   m  m   j   n",
 }
 WORDS = {

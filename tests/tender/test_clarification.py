@@ -86,7 +86,7 @@ def test_answers_stand_beside_the_first_figure(hazel: Assessment, tmp_path: Path
     )
     width = taken["Hazel 4/E3"]
     assert (width.kind, width.first and width.first.raw) == (AnswerKind.CHANGED, "65")
-    assert [(e.before, e.after) for e in width.effects] == [(Compliance.NOT_JUDGED, Compliance.MEETS)]
+    assert [(e.before, e.after) for e in width.effects] == [(Compliance.MEETS_NARROWLY, Compliance.MEETS)]
     level = taken["Hazel 4/E7"]
     assert (level.kind, level.answered and level.answered.value) == (AnswerKind.ADDED, -155.0)
     assert [(e.before, e.after) for e in level.effects] == [(Compliance.NOT_STATED, Compliance.MEETS)]

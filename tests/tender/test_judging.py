@@ -78,7 +78,7 @@ def test_margins_are_signed_in_the_good_direction(
     [
         (65.0, 5.0, "meets"),
         (65.0, 7.0, "fails"),
-        (65.0, None, "not judged"),
+        (65.0, None, "meets narrowly"),
         (72.0, None, "fails"),
         ((61.0, 69.0), None, "meets"),
     ],
@@ -86,7 +86,7 @@ def test_margins_are_signed_in_the_good_direction(
 def test_an_offered_window_lies_inside_the_required_one(
     value: Any, tolerance: float | None, verdict: str
 ) -> None:
-    """65° ± 5° is required; an offered 65° ± 7° fails, a bare 65° shows no window."""
+    """65° ± 5° is required; an offered 65° ± 7° fails, a bare 65° is judged as it stands (narrowly)."""
     row = _row(
         demand("horizontal_beamwidth", "within", (60.0, 70.0)),
         says("horizontal_beamwidth", value, tolerance=tolerance),
@@ -233,6 +233,23 @@ def test_rounding_decides_between_vswr_and_return_loss() -> None:
     assert row.offered_in_unit == pytest.approx(13.98, abs=0.005)
     assert "ROUND" in row.note
     assert "1.5 = 13.98 dB" in row.note
+
+
+@pytest.mark.parametrize(
+    ("offered", "raw", "verdict"),
+    [(16.96, "16.96", "fails"), (17.0, "17", "meets"), (16.9, "16.9", "fails"), (16.95, "16.95", "fails")],
+)
+def test_a_shortfall_beyond_the_digits_printed_fails(offered: float, raw: str, verdict: str) -> None:
+    """Half a unit of the last digit: 0.005 dB of 16.96, 0.05 dB of 16.9; neither reaches 17."""
+    assert _row(demand("gain", "≥", 17.0), says("gain", offered, raw)).verdict.value == verdict
+
+
+@pytest.mark.parametrize(("raw", "verdict"), [("17", "meets narrowly"), ("17.0", "fails")])
+def test_rounding_holds_in_the_unit_of_the_offer(raw: str, verdict: str) -> None:
+    """A '17' may have been 17.4 before it was rounded, a '17.0' not."""
+    row = _row(demand("gain", "≥", 17.4), says("gain", 17.0, raw))
+    assert row.verdict.value == verdict
+    assert ("ROUND" in row.note) == (verdict == "meets narrowly")
 
 
 @pytest.mark.parametrize(("vswr", "verdict"), [(1.7, "fails"), (1.4, "meets")])
