@@ -92,7 +92,8 @@ def gain_fits_geometry(
     if model.layout.columns == 1 and (number(horizontal_beamwidth) or 0.0) > WIDEST_SECTOR_DEG:
         return _all_round(gain, horizontal_beamwidth)
     widths = _Widths(horizontal_beamwidth, vertical_beamwidth)
-    stated = [g for g in case.panel.all("gain", case.band) if not isinstance(g.value, str)] or [gain]
+    all_stated = [g for g in case.panel.all("gain", case.band) if not isinstance(g.value, str)]
+    stated = [g for g in all_stated if "angle_deg" not in g.at] or [gain]
     judged = [
         _judged(
             model,

@@ -134,7 +134,8 @@ def _of_a_part(stated: Reading) -> Judgement:
 
 
 def _eirp_span(case: Case, power: TransmitPower, feed_loss: Reading | None) -> tuple[float, float]:
-    gains = case.panel.all("gain", case.band)
+    stated = case.panel.all("gain", case.band)
+    gains = [g for g in stated if "angle_deg" not in g.at] or stated
     lowest = min(g.low - (0.0 if g.tolerance else half_digit(g)) for g in gains)
     highest = max(g.high + (0.0 if g.tolerance else half_digit(g)) for g in gains)
     loss_db = feed_loss.high if feed_loss else 0.0

@@ -58,6 +58,8 @@ def _split(parts: list[str]) -> str:
     if together:
         return together
     keys = [listed(piece) for piece in pieces]
+    if keys[-1] == "beam_count":  # 'gain, broadcast beam' names the beam
+        return ""
     if not all(keys) or len(set(keys)) < len(keys) or any("+" in key for key in keys):
         return ""
     per_port = keys[-1] == "rf_ports" and parameters()[keys[0]].unit != ""  # 'puissance max./port'

@@ -22,9 +22,10 @@ _CONDITION_UNIT = (
     r"|dBm|dBW|k?W|V|mm|cm|m|ft|inch|in|%|λ|years?)(?!\w)"
 )
 _FIGURE = rf"[±+\-]?\s?{NUMERAL_PATTERN}\s?(?:{_CONDITION_UNIT}|1(?=\W|$))?"
+_TURNED = r"(?:(?:electrical|el\.?)\s)?(?:tilt|downtilt|edt|scan|steering|azimuth)(?:\s(?:of|angle))?\s?[:=]?"
 _CONDITION = re.compile(
-    rf"{_AT_WORDS}?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])"
-    r"(?:\s(?:tilt|downtilt|edt|carriers|tones)\b)?",
+    rf"(?:{_AT_WORDS}\s{_TURNED}|(?<=[,;(])\s?{_TURNED}|{_AT_WORDS})?\s?(?<![\w.])(?:\d\s?[x×]\s?)?{_FIGURE}(?:\s?(?:-|…|to|bis|à|a|do|tot|/|±|\+)\s?{_FIGURE})*(?![\w])"
+    r"(?:\s(?:tilt|downtilt|edt|scan|steering|azimuth|carriers|tones)\b)?",
     re.IGNORECASE,
 )
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")

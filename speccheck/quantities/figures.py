@@ -254,9 +254,9 @@ def _at(condition: Amount, claim_dimension: str) -> dict[str, float]:
         high = convert(condition.high, condition.unit, "MHz")
         return {"frequency_low_mhz": min(low, high), "frequency_high_mhz": max(low, high)}
     if kind == "angle" and condition.high is None:
-        tilt = claim_dimension in ("gain", "angle") or any(
-            w.casefold() in word_set("tilt") for w in (*condition.words, *condition.before)
-        )
+        beside = {w.casefold() for w in (*condition.words, *condition.before)}
+        sideways = bool(beside & word_set("scan"))
+        tilt = not sideways and (claim_dimension in ("gain", "angle") or bool(beside & word_set("tilt")))
         named = {"tilt_deg" if tilt and not condition.plusminus else "angle_deg": condition.low}
         return named if condition.tolerance is None else {**named, "angle_span_deg": condition.tolerance}
     if kind in _NAMED and condition.high is None:
