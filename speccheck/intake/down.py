@@ -148,9 +148,7 @@ class DownReader:
             state.section_band, state.section_name = find_bands(cell.text).hull, cell.text
             self._result.mark(cell, "heading")
             if state.section_band:
-                draft = self._panels.first
-                draft.bands.append(state.section_band)
-                self._panels.claim_band(draft, cell, state.section_band, "heading of the rows below")
+                self._panels.claim_band(self._panels.first, cell, state.section_band, "heading of rows below")
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""

@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import re
+
 from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
@@ -16,6 +18,7 @@ from speccheck.records import Band
 
 NAME_KEYS = frozenset({"model", "panel_type"})
 _NAMING_KEYS = frozenset({"model", "panel_type", "manufacturer", "part_number", "revision"})
+_NUMBERED = re.compile(r"\d\d")
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 
 
@@ -57,7 +60,7 @@ class DownPanels:
         values = self._value_columns()
         self.model_row = self._find_model_row(values)
         title = None
-        if not self.model_row and self._name_groups_of_bands(values):
+        if not self.model_row and (self._name_groups_of_bands(values) or self._name_nothing(values)):
             title = names.title_for(self._table, heading_rows, self._marks, self._result)
             self._unname(values if title.certain else [])
         for column in values:
@@ -97,7 +100,18 @@ class DownPanels:
                 bands.setdefault(column.name, set()).update([column.band] if column.band else [])
         groups = list(bands.values())
         apart = sum(map(len, groups)) == len(set().union(*groups))
-        return len(groups) > 1 and all(groups) and apart and not any(map(codes, bands))
+        return (
+            len(groups) > 1
+            and all(groups)
+            and apart
+            and not any(codes(name) or _NUMBERED.search(name) for name in bands)
+        )
+
+    @staticmethod
+    def _name_nothing(values: list[Column]) -> bool:
+        """Whether one heading without any figure stands over the values; a title names a panel better."""
+        names = {column.name for column in values if column.words}
+        return len(names) == 1 and not any(letter.isdigit() for name in names for letter in name)
 
     @staticmethod
     def _unname(values: list[Column]) -> None:

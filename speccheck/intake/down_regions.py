@@ -7,7 +7,7 @@ from dataclasses import dataclass
 
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.grid import Cell
-from speccheck.intake.marks import Marks, looks_like_value
+from speccheck.intake.marks import Marks, is_form_heading, looks_like_value
 from speccheck.intake.words import column_role
 
 _NEAR = 4
@@ -126,7 +126,8 @@ def heads_columns(marks: Marks, row: int, column: int) -> bool:
     if cell is None or not beside or (row, column) in marks.headings:
         return False
     bands = len(beside) > 1 and all(find_bands(c.text).proved and is_band_label(c.text) for c in beside)
-    return column_role(cell.text) == "parameter" or bands
+    form = is_form_heading([column_role(c.text) for c in (cell, *beside) if isinstance(c.raw, str)])
+    return column_role(cell.text) == "parameter" or bands or form
 
 
 def _right_bound(columns: dict[int, list[int]], column: int, top: int, bottom: int) -> int:

@@ -58,7 +58,7 @@ def _unmark_column_words(marks: Marks) -> None:
         if not 0 < len(headings) <= 4:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
-        if _is_form_heading(roles):
+        if is_form_heading(roles):
             for column in headings:
                 if column_role(marks.grid.cells[row, column].text):
                     del marks.headings[row, column]
@@ -73,7 +73,7 @@ def _unmark_column_words(marks: Marks) -> None:
                 del marks.headings[row, column]
 
 
-def _is_form_heading(roles: list[str]) -> bool:
+def is_form_heading(roles: list[str]) -> bool:
     """Whether a row says of each column of a form what it is for: 'Requirement | Offered | Comply'."""
     labels = {"parameter", "required"} & set(roles)
     answers = {"offered", "compliance"} & set(roles)

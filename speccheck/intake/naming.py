@@ -27,7 +27,9 @@ _ASIDE = re.compile(
     r"\s*[(\[][^()\[\]]*\b(?:rev|issue|draft|offer\w*|bid|proposed|version|date|standard|option)\b[^()\[\]]*[)\]]\s*$",
     re.IGNORECASE,
 )
-_PAPERS = re.compile(r"\b(?:tender|rf[qpi]|project|contract|order|document|doc|ref|lot|annex|clause)\b")
+_PAPERS = re.compile(
+    r"\b(?:concurso|concorso|licita\w+|ausschreibung|vergabe|appel|marche|gara|przetarg\w*|postepowanie|aanbesteding|bestek|tender|rf[qpi]|project|contract|order|document|doc|ref|lot|annex|clause)\b"
+)
 _LONG_TITLE = 90
 _LONG_NAME = 40
 _LONGEST_NAME = 120
@@ -82,6 +84,8 @@ def _score(text: str, sheet: str) -> int:
     words = " ".join(text.split())
     if len(words) > _LONG_TITLE:
         return 0
+    if announced(words):
+        return 5
     if len(sheet) > 2 and not is_generic_sheet_name(sheet) and fold(sheet) in fold(words):
         return 4
     stripped = _without_prefix(words, "prefix")
@@ -89,7 +93,7 @@ def _score(text: str, sheet: str) -> int:
     prefixed = (
         stripped != words and len(stripped) <= _LONG_NAME and (codes(stripped) or stripped[-1:].isdigit())
     )
-    if prefixed or announced(words) or (inside is not None and any(map(str.isdigit, inside[1]))):
+    if prefixed or (inside is not None and any(map(str.isdigit, inside[1]))):
         return 3
     if codes(words) and not _PAPERS.search(fold(words)):
         return 2

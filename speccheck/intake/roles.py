@@ -46,7 +46,7 @@ def _by_content(column: Column, cells: list[Cell]) -> str:
     if units - dashes >= 1 and units >= (0.9 if column.words else 0.6) * len(cells):
         return "unit"
     answers = sum(bool(answer(text)) for text in texts)
-    if answers >= 2 and answers >= 0.7 * len(cells) and not column.words:
+    if answers >= 2 and answers >= (0.9 if column.words else 0.7) * len(cells):
         return "compliance"
     wordy = sum(len(text) > 25 and not any(letter.isdigit() for letter in text) for text in texts)
     if wordy >= 0.6 * len(cells) and not column.words:
@@ -65,6 +65,16 @@ def _beside_the_values(
         if not columns[index].role and share is not None and share < _SILENT and values:
             texts = all(isinstance(cell.raw, str) for cell in cells.get(index, []))
             columns[index].role = "condition" if index < values[0] and texts else "remark"
+    _beside_the_offer(columns, shares)
+
+
+def _beside_the_offer(columns: dict[int, Column], shares: dict[int, float | None]) -> None:
+    """Beside a column named as the offer, one of unknown heading that answers for nothing is none."""
+    if not any(c.role == "offered" and not c.words for c in columns.values()):
+        return
+    for index, share in shares.items():
+        if not columns[index].role and columns[index].words and (share or 0.0) < _ANSWERS:
+            columns[index].role = "remark"
 
 
 def _band_columns(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:

@@ -22,7 +22,7 @@ def fold(text: str) -> str:
     if not plain.isascii():
         plain = unicodedata.normalize("NFKD", plain.translate(_DASHES))
         plain = "".join(letter for letter in plain if not unicodedata.combining(letter))
-    return _SPACES.sub(" ", plain).strip(" :*\t\n")
+    return _SPACES.sub(" ", plain).strip(" :*?\t\n")
 
 
 @cache
