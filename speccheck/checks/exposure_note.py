@@ -113,12 +113,14 @@ def _frame(panel: Panel, settings: Settings, limits: LimitSet) -> Frame:
         tolerance_db=settings.power_tolerance_db,
         tdd_share=share,
         power_factor=reduction if active(panel) else 1.0,
+        country_factor=settings.country_factor,
     )
 
 
 def _factors(frame: Frame) -> tuple[Step, ...]:
     return (
         Step("Reflection factor on power density", "1 free space; 2.56 ground; 4 full", frame.reflection),
+        *_country(frame),
         Step(
             "Time factor shown beside",
             f"downlink share {frame.tdd_share:g} × actual-maximum factor {frame.power_factor:g}",
@@ -130,6 +132,12 @@ def _factors(frame: Frame) -> tuple[Step, ...]:
             round(frame.cautious_factor, 3),
         ),
     )
+
+
+def _country(frame: Frame) -> tuple[Step, ...]:
+    if frame.country_factor == 1:
+        return ()
+    return (Step("Country factor on the levels", "setting of the buyer", frame.country_factor),)
 
 
 def _assumptions(panel: Panel, sources: tuple[Radiated, ...], frame: Frame) -> list[str]:
@@ -144,6 +152,11 @@ def _assumptions(panel: Panel, sources: tuple[Radiated, ...], frame: Frame) -> l
         f"Cautious set: time factor 1, reflection {frame.cautious_reflection:g}, power raised by "
         f"{frame.tolerance_db:g} dB.",
     ]
+    if frame.country_factor != 1:
+        said.append(
+            f"Every level is the one of the limit set times the country factor {frame.country_factor:g} that "
+            "the buyer set; the rules of the country decide."
+        )
     if frame.time_factor < 1:
         said.append(
             f"Beside the full-power distance: time factor {frame.time_factor:g}, valid only where the "

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from itertools import product
 
 from speccheck.checks.exposure_inputs import Radiated
@@ -32,6 +32,7 @@ class Frame:
     tolerance_db: float
     tdd_share: float
     power_factor: float
+    country_factor: float = 1.0
 
     @property
     def time_factor(self) -> float:
@@ -45,7 +46,10 @@ class Frame:
 
     def level(self, source: Radiated, population: str, basis: str) -> tuple[float, Limit] | None:
         """Frequency [MHz] and level where the limit of a band is lowest."""
-        return self.limits.lowest(*source.band, population, basis)
+        found = self.limits.lowest(*source.band, population, basis)
+        if found is None:
+            return None
+        return found[0], replace(found[1], value_w_m2=found[1].value_w_m2 * self.country_factor)
 
 
 def band_rows(panel: Panel, source: Radiated, frame: Frame) -> tuple[ExposureRow, ...]:

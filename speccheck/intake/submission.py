@@ -58,7 +58,7 @@ def read_account(
     with _collector_at_rest():
         book = open_book(path, limits)
         refuse_tender(book)
-        return _account(book, Path(path).stem, headings or {})
+        return account_of(book, Path(path).stem, headings or {})
 
 
 @contextmanager
@@ -73,7 +73,8 @@ def _collector_at_rest() -> Iterator[None]:
             gc.enable()
 
 
-def _account(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
+def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
+    """What an opened book says; a panel without a name is called after `stem`."""
     labels = Labels(headings)
     visible = [grid for grid in book.grids if not grid.hidden]
     results = [read_layout(grid, labels, stem) for grid in visible]

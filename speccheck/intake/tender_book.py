@@ -13,6 +13,7 @@ from speccheck.intake.grid import Grid
 from speccheck.intake.opening import Book, open_book
 from speccheck.intake.phrases import CONTRADICTING_LEVELS, Habits
 from speccheck.intake.requirements import COLUMNS, ReadRow, read_requirements
+from speccheck.intake.tender_references import resolved
 from speccheck.intake.tender_settings import read_deviations, read_headings, read_settings
 from speccheck.intake.tender_tables import Table, fold, table, trouble
 from speccheck.records import CellRef, Deviation, Finding, Fit, Settings, Tender, Unread
@@ -40,6 +41,7 @@ def read_tender(path: str | Path) -> Tender:
         house=settings.headings, statistic=settings.statistic, decimal_comma=_comma(settings, sheets)
     )
     rows, labels = read_requirements(found, habits)
+    rows = resolved(rows, book, habits)
     if not rows:
         raise _unusable(book.file, "no filled requirement row", sheet="Requirements")
     deviations, more = (

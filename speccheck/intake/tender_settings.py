@@ -57,6 +57,15 @@ def _reflection(text: str) -> float:
     return value
 
 
+@_setting("country_factor", "Country factor", "Country factors", "Country factor on exposure limits")
+def _country(text: str) -> float:
+    value = _number(text.rstrip("% "))
+    value = value / 100 if "%" in text else value
+    if not 0 < value <= 1:
+        raise ValueError("a factor on the power density of the limit, above 0 and up to 1")
+    return value
+
+
 @_setting("power_tolerance_db", "Power tolerance", "Power tolerance dB")
 def _decibels(text: str) -> float:
     value = _number(re.sub(r"\s*dB$", "", text))

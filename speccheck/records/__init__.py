@@ -23,7 +23,7 @@ from speccheck.records.results import (
     ExposureZone,
     PanelAssessment,
 )
-from speccheck.records.tenders import Deviation, MatrixRow, Requirement, Settings, Tender
+from speccheck.records.tenders import Deviation, MatrixRow, Premise, Requirement, Settings, Tender
 from speccheck.records.verdicts import Amount, Convention, Finding, Interval, Step
 from speccheck.records.words import Compliance, Fit, Level, Outcome, Sense, Status
 
@@ -53,6 +53,7 @@ __all__ = [
     "Outcome",
     "Panel",
     "PanelAssessment",
+    "Premise",
     "Reading",
     "Requirement",
     "Sense",

@@ -11,6 +11,16 @@ from speccheck.records.words import Compliance, Level
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
+class Premise:
+    """What must hold of an offer before a requirement binds it; `limit` in `unit`."""
+
+    parameter: str
+    operator: str
+    limit: Value | None = None
+    unit: str = ""
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
 class Requirement:
     """One row of the buyer's requirements as read; `limit` is in the requirement's own unit.
 
@@ -34,6 +44,7 @@ class Requirement:
     unread: str = ""
     confirmed: bool = False
     weight: float | None = None
+    premise: Premise | None = None
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -79,6 +90,7 @@ class Settings:
     tdd_duty: float = 1.0
     actual_maximum_factor: float = 1.0
     power_tolerance_db: float = 2.0
+    country_factor: float = 1.0
     guard_bands: Mapping[str, float] = field(default_factory=dict)
     equality_meets: bool = True
     statistic: str = "each"

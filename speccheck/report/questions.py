@@ -20,6 +20,8 @@ _ASKED = {
 }
 
 _REWORD = "{what} cannot be judged as it is worded. The buyer settles the wording; no figure is asked yet."
+_FOR_BUYER = ("condition", "baseline")
+"""Operators that ask the bidder nothing: what they refer to is the buyer's to settle."""
 _TOLERANCE = "{what} is stated without a tolerance. Please state the window within which every figure lies."
 _PAPERS = "The offer declares {what}. Please supply the papers that show it."
 
@@ -71,7 +73,8 @@ def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str],
     for row in panel.requirements:
         window_unknown = WINDOW_UNKNOWN in row.note
         unanswered = row.verdict in UNANSWERED or window_unknown
-        if not unanswered or row.requirement.level is Level.INFORMATION:
+        for_buyer = row.requirement.operator in _FOR_BUYER or row.requirement.level is Level.INFORMATION
+        if not unanswered or for_buyer:
             continue
         name = label(row.requirement.parameter) if row.requirement.parameter else "this requirement"
         what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name

@@ -124,6 +124,7 @@ def _settings(assessment: Assessment) -> list[list[Content]]:
     rules = assessment.settings
     numbers: Mapping[str, float] = {
         "Reflection factor on power density": rules.reflection_factor,
+        "Country factor on exposure levels": rules.country_factor,
         "TDD duty": rules.tdd_duty,
         "Actual-maximum factor": rules.actual_maximum_factor,
         "Power tolerance of the cautious set (dB)": rules.power_tolerance_db,

@@ -6,7 +6,7 @@ from collections.abc import Iterator
 from textwrap import wrap
 
 from speccheck.dictionary import parameters
-from speccheck.records import Requirement, Tender, Value
+from speccheck.records import Premise, Requirement, Tender, Value
 from speccheck.text import plain
 
 _WIDTH = 100
@@ -71,8 +71,16 @@ def reading_of(requirement: Requirement) -> str:
         f"({requirement.statistic})" if requirement.statistic else "",
         ", ".join(f"{low:g}-{high:g} MHz" for low, high in requirement.bands),
         requirement.scope,
+        _premise(requirement.premise),
     ]
-    return " ".join(part for part in parts if part)
+    return " ".join(dict.fromkeys(part for part in parts if part))
+
+
+def _premise(premise: Premise | None) -> str:
+    if premise is None:
+        return ""
+    label = parameters()[premise.parameter].label
+    return f"(only where {label} {premise.operator} {_limit(premise.limit)} {premise.unit}".rstrip() + ")"
 
 
 def _limit(limit: Value | None) -> str:

@@ -254,6 +254,7 @@ def _settings_rows(settings: Settings, numbers: Numbers) -> tuple[tuple[str, str
     return (
         ("Limit set of the exposure note", settings.limit_set),
         ("Reflection factor on power density", numbers.stated(settings.reflection_factor)),
+        ("Country factor on exposure levels", numbers.stated(settings.country_factor)),
         ("TDD duty", numbers.stated(settings.tdd_duty)),
         ("Actual-maximum factor", numbers.stated(settings.actual_maximum_factor)),
         ("Power tolerance of the cautious set", numbers.stated(settings.power_tolerance_db, "dB")),

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
 from dataclasses import replace
+from functools import partial
 
 from speccheck.dictionary import parameters
 from speccheck.records import (
@@ -28,6 +29,7 @@ from speccheck.tender.figures import Comparison, compare, guard_band
 from speccheck.tender.grading import FAILING, PASSING, SEVERITY, Grade, graded, settled
 from speccheck.tender.named import compare_names
 from speccheck.tender.offers import Offer, offers
+from speccheck.tender.premises import under_premise
 from speccheck.tender.statistics import canonical, tilt_means
 
 _NOT_ROWS = ("rule", "after award")
@@ -57,6 +59,8 @@ def _rows(requirement: Requirement, panel: Panel, settings: Settings) -> Iterato
     stops = blocked(requirement.doubts)
     if stops:
         yield _row(requirement, Compliance.NOT_JUDGED, note="; ".join(stops))
+    elif requirement.premise is not None:
+        yield from under_premise(requirement, partial(_rows, panel=panel, settings=settings))
     elif requirement.operator in ("baseline", "condition"):
         note = requirement.doubts[0].partition(": ")[2] if requirement.doubts else ""
         yield _row(requirement, Compliance.NOT_JUDGED, note=note)

@@ -65,6 +65,16 @@ def test_distances_of_the_spherical_model(dbm, public, workers, factored, cautio
     assert 0 <= row(note, "workers").distance_m - workers < 0.105
 
 
+def test_a_country_factor_lowers_the_level_and_is_said():
+    """r = sqrt(EIRP/(4πS)): a quarter of the level doubles the distance."""
+    plain, strict = of_eirp(60.0), of_eirp(60.0, Settings(country_factor=0.25))
+    for one, other in zip(plain.rows, strict.rows, strict=True):
+        assert other.limit_w_m2 is None or other.limit_w_m2 == pytest.approx(one.limit_w_m2 / 4, rel=1e-3)
+        assert other.distance_m == pytest.approx(2 * one.distance_m, abs=0.2)
+    assert any("country factor 0.25" in said for said in strict.assumptions)
+    assert not any("country factor" in said for said in plain.assumptions)
+
+
 def test_two_decibels_of_tolerance_add_a_quarter_to_the_cautious_distance():
     """10^(2/20) = 1.259 by hand."""
     plain, raised = of_eirp(80), of_eirp(80, Settings(power_tolerance_db=2.0))

@@ -26,6 +26,6 @@ ANSWERS = demand("", "rule", "answers allowed", "", clause="9", scope="Meets / D
     ],
 )
 def test_answers_outside_the_tenders_list_count_as_does_not_meet(said: Any, verdict: str) -> None:
-    """Only where the tender has such a rule; a figure stays a figure (phrase 55 of the requirement wordings)."""
+    """Only where the tender has such a rule; a figure stays a figure (phrase 55)."""
     rows = judge(tender(ANSWERS, demand("gain", "≥", 17.0)), panel(said), ())
     assert [row.verdict.value for row in rows] == [verdict]

@@ -75,6 +75,7 @@ def test_everything_a_buyer_sets_is_taken_in(tmp_path: Path) -> None:
             ["Exposure limit set", "icnirp-1998", None],
             ["Reflection factor", 2.56, None],
             ["TDD duty", 75, "%"],
+            ["Country factor", 0.25, None],
             ["Actual-maximum factor", 0.25, None],
             ["Loss: passive", "0.5-1.5", "dB"],
             ["Paper", "letter", None],
@@ -88,6 +89,7 @@ def test_everything_a_buyer_sets_is_taken_in(tmp_path: Path) -> None:
     assert rules.guard_bands == pytest.approx({"gain": 0.3, "weight": 0.5})
     assert (rules.equality_meets, rules.statistic, rules.limit_set) == (False, "typ", "icnirp-1998")
     assert (rules.reflection_factor, rules.tdd_duty, rules.actual_maximum_factor) == (2.56, 0.75, 0.25)
+    assert rules.country_factor == 0.25
     assert (rules.loss_db, rules.paper, rules.report_number, rules.issued) == (
         {"passive": (0.5, 1.5)},
         "Letter",
