@@ -63,6 +63,7 @@ def _stages(start: Cut) -> Iterator[Cut]:
     yield remarks
     for base in dict.fromkeys((start, figures, remarks)):
         yield from _without_notes(base)
+    yield _without_letter(figures)
 
 
 def _without_unit(cut: Cut) -> Cut:
@@ -76,13 +77,20 @@ def _without_unit(cut: Cut) -> Cut:
             rest = f"{cut.text[: bracket.start()]} ({others}) {cut.text[bracket.end() :]}"
             return replace(cut, text=rest, unit=unit)
     trailing = _TRAILING_UNIT.search(cut.text)
-    if not trailing or cut.text[trailing.start() - 1 : trailing.start()].isdigit():
+    if not trailing or re.search(r"(?<![A-Za-z])\d+$", cut.text[: trailing.start()]):
         return cut
     letter_alone = trailing.group()[0].isspace() and len(trailing.group(1)) < 2
     name = unit_name(trailing.group(1))
     if not name or (letter_alone and trailing.group(1) not in "°%Ω"):
         return cut
     return replace(cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=name)
+
+
+def _without_letter(cut: Cut) -> Cut:
+    """'Front wind N': a letter at the end may be a unit, where the parameter is stated in it."""
+    words, _, letter = cut.text.rpartition(" ")
+    name = unit_name(letter) if len(letter) == 1 and words and not cut.unit else ""
+    return replace(cut, text=words.strip(" ,;:/"), unit=name) if name else cut
 
 
 def _unit_among_notes(inner: str) -> tuple[str, str]:

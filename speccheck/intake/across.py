@@ -12,7 +12,7 @@ from speccheck.intake.columns import Column, heading_stack
 from speccheck.intake.composing import compose
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
-from speccheck.intake.marks import Marks
+from speccheck.intake.marks import Marks, is_size_letter
 from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Across
 
@@ -76,7 +76,7 @@ class AcrossReader:
         for index in sorted(used):
             stack = heading_stack(self._grid, rows, index, self._table.left)
             label, column = compose(index, stack, labels)
-            letters = [c for c in stack if len(c.text.strip()) == 1 and self._marks.is_heading(c)]
+            letters = [c for c in stack if is_size_letter(c.text) and self._marks.is_heading(c)]
             label = self._marks.headings[letters[-1].row, letters[-1].column] if letters else label
             role = "" if label else column.role
             context = Context(

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from dataclasses import dataclass, field
 
 from speccheck.intake.grid import Cell, Grid
@@ -10,6 +11,8 @@ from speccheck.intake.words import column_role
 
 _LONGEST = 2000
 _SIZES = frozenset("HWDBTLPAGS")
+_LETTER_UNIT = re.compile(r"(?<=^[A-Za-z])\s*(?:[(\[]|,\s)\s*(?:mm|cm|m|in|inch|\")\s*[)\]]?$")
+_LONGEST_LETTER = 9
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -77,6 +80,8 @@ def is_form_heading(roles: list[str]) -> bool:
     """Whether a row says of each column of a form what it is for: 'Requirement | Offered | Comply'."""
     labels = {"parameter", "required"} & set(roles)
     answers = {"offered", "compliance"} & set(roles)
+    if len(roles) > 1 and set(roles) <= {"offered", "remark", "compliance", "required"}:
+        return True
     return bool(labels and answers) and sum(map(bool, roles)) * 4 >= 3 * len(roles)
 
 
@@ -88,9 +93,9 @@ def _follows_heading(marks: Marks, row: int, column: int) -> bool:
 def _mark_letters(marks: Marks) -> None:
     """H, W and D beside or below one another head the three sizes."""
     letters = {
-        place: cell.text.strip()
+        place: _LETTER_UNIT.sub("", cell.text.strip())
         for place, cell in marks.grid.cells.items()
-        if isinstance(cell.raw, str) and cell.text.strip().upper() in _SIZES
+        if isinstance(cell.raw, str) and is_size_letter(cell.text)
     }
     for row, column in letters:
         for step in ((0, 1), (1, 0)):
@@ -104,12 +109,18 @@ def _mark_letters(marks: Marks) -> None:
             marks.headings[row, column] = label
 
 
+def is_size_letter(text: str) -> bool:
+    """Whether a heading is a letter, perhaps with a unit of length, that may head a size."""
+    return len(text) < _LONGEST_LETTER and _LETTER_UNIT.sub("", text.strip()).upper() in _SIZES
+
+
 def _mark_three(marks: Marks, places: list[tuple[int, int]], letters: str) -> None:
     """'H x L x P' and 'L x W x H': what a letter stands for depends on the other two."""
     sizes = marks.labels.of(letters).parameters
     for place, size in zip(places, sizes, strict=False):
         text = marks.grid.cells[place].text
-        marks.headings[place] = Label(text, (size,), how=f"heading '{text}' of '{letters}'")
+        unit = "".join(_LETTER_UNIT.findall(text.strip())).strip(" ,()[]")
+        marks.headings[place] = Label(text, (size,), unit=unit, how=f"heading '{text}' of '{letters}'")
 
 
 def _might_be_heading(text: str) -> bool:

@@ -110,6 +110,7 @@ class Names:
 
     def __init__(self, grid: Grid, stem: str) -> None:
         self._grid, self._stem = grid, stem
+        self._titles: set[tuple[int, int]] = set()
 
     def is_file(self, name: str) -> bool:
         """Whether a sheet's name is only that of its file, as in delimited text."""
@@ -133,7 +134,8 @@ class Names:
             cells = [c for c in marks.rows.get(row, ()) if c.column <= right]
             near = [c for c in cells if c.column >= left]
             near = near or [c for c in cells if c.column >= left - 2] or cells
-            if any(result.roles.get((c.row, c.column), "note") != "note" for c in near):
+            places = [(c.row, c.column) for c in near]
+            if any(p not in self._titles and result.roles.get(p, "note") != "note" for p in places):
                 break
             titles = [c for c in near if isinstance(c.raw, str) and not is_band_label(c.text)]
             candidates += [c for c in titles if not marks.is_heading(c)]
@@ -141,7 +143,7 @@ class Names:
         if any(scores):
             return self._taken(candidates[scores.index(max(scores))], result)
         if not is_generic_sheet_name(sheet):
-            return Title(model_name(sheet), first, True)
+            return Title(model_name(sheet), first, any(letter.isdigit() for letter in sheet))
         short = [c for c in candidates if len(c.text) <= _LONG_NAME and _may_name(c.text)]
         short = short if len(candidates) <= 3 else []
         if short:
@@ -150,5 +152,6 @@ class Names:
         return Title(self._stem, first, False)
 
     def _taken(self, cell: Cell, result: SheetResult) -> Title:
+        self._titles.add((cell.row, cell.column))
         result.mark(cell, "heading")
         return Title(model_name(cell.text), cell, True)

@@ -6,11 +6,13 @@ import re
 from collections import defaultdict
 from dataclasses import replace
 
+from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.grid import Cell
-from speccheck.intake.labels import looks_like_line, split_lines
+from speccheck.intake.labels import Label, looks_like_line, split_lines
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
+from speccheck.records import Band
 
 _NAME_KEYS = frozenset({"model", "panel_type"})
 
@@ -37,6 +39,8 @@ class _Column:
     def __init__(self, marks: Marks, result: SheetResult, names: Names, column: int) -> None:
         self._marks, self._result, self._names, self._index = marks, result, names, column
         self._draft: Draft | None = None
+        self._band: Band | None = None
+        self._band_name = ""
 
     def read(self, first: int, last: int) -> None:
         for row in range(first, last + 1):
@@ -51,8 +55,12 @@ class _Column:
             elif looks_like_line(cell.text):
                 self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
                 self._result.mark(cell, "unread")
+            elif isinstance(cell.raw, str) and is_band_label(cell.text):
+                self._section(cell, find_bands(cell.text).hull)
             elif self._names.is_title(cell.text):
                 self._title(cell, cell.text)
+            else:
+                self._band, self._band_name = None, ""
 
     def _line(self, cell: Cell, text: str) -> bool:
         """Take one line in; False when it says nothing that was understood."""
@@ -72,11 +80,22 @@ class _Column:
             return True
         draft = self._draft or self._untitled(cell)
         inherited = replace(label, text="")
-        band = label.bands.hull
-        draft.claims.append(
-            Claim(cell, Context(inherited, heading=label.text), band, text=value, banded=band is not None)
-        )
+        band = label.bands.hull or self._band
+        name = "" if band else self._band_name
+        context = Context(inherited, heading=label.text, band_name=name)
+        draft.claims.append(Claim(cell, context, band, text=value, banded=bool(band or name)))
         return True
+
+    def _section(self, cell: Cell, band: Band | None) -> None:
+        """A line that only names a band heads the lines below it."""
+        self._result.mark(cell, "heading")
+        self._band, self._band_name = band, " ".join(cell.text.split())
+        draft = self._draft or self._untitled(cell)
+        if band is not None and band not in draft.bands:
+            draft.bands.append(band)
+            label = Label("heading of the lines below", ("operating_bands",), "MHz")
+            text = f"{band[0]:g}-{band[1]:g} MHz"
+            draft.claims.append(Claim(cell, Context(label, heading=label.text), band, text=text, banded=True))
 
     def _untitled(self, cell: Cell) -> Draft:
         title = self._names.above(cell.row, cell.column, cell.column + 3, self._marks, self._result)
@@ -87,6 +106,7 @@ class _Column:
         self._open(model_name(text), cell, named=True)
 
     def _open(self, name: str, cell: Cell, *, named: bool) -> Draft:
+        self._band, self._band_name = None, ""
         self._draft = Draft(name, self._marks.grid, cell, named=named)
         self._result.drafts.append(self._draft)
         return self._draft

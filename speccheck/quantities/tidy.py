@@ -51,6 +51,7 @@ _TRAILING_SIGN = re.compile(r"(?<=\S)\s?(\*{1,3}|†|‡|§|#)\)?$")
 _TRAILING_MARK = re.compile(
     _TRAILING_SIGN.pattern + r"|(?<=\S)\s(\d|[a-e])\)$|(?<=\S)\s?[\[(](\d)[\])]$|(?<=\S)\s[\[(]([a-e])[\])]$"
 )
+_BRACKETED_MARK = re.compile(r"\((?:\d|[a-e])\)$")
 _NOTE = re.compile(r"[,;]?\s?[\[(]\s?(?:see )?(?:foot)?note:?\s?(\w{1,3})\s?[\])]$", re.IGNORECASE)
 
 
@@ -89,5 +90,6 @@ def split_footnotes(text: str, *, bracketed: bool = True) -> tuple[str, tuple[st
         body = _POWER_OF_TEN.sub(lambda m: "e" + m.group(1).translate(_POWERS), body)
         body = _RAISED.sub(keep, body)
     body = _NOTE.sub(keep, body)
-    without = (_TRAILING_MARK if bracketed else _TRAILING_SIGN).sub(keep, body)
+    closes = body.count("(") >= body.count(")") > 0 and not _BRACKETED_MARK.search(body)
+    without = (_TRAILING_MARK if bracketed and not closes else _TRAILING_SIGN).sub(keep, body)
     return (without.strip(), tuple(marks)) if without.strip() else (text.strip(), ())
