@@ -151,7 +151,7 @@ def horizontal_beamwidth_fits_columns(
     it and does not fit. 65° is one column: with 25.3 dBi, the gain of all columns, it is doubtful.
     """
     if array_columns is None or round(array_columns.nominal) < 2:
-        return _single_column(horizontal_beamwidth)
+        return _single_column(horizontal_beamwidth, stated=array_columns is not None)
     model = model_of(case, "horizontal")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
@@ -176,10 +176,12 @@ def horizontal_beamwidth_fits_columns(
     return _of_fewer(model, horizontal_beamwidth, own, uniform, theirs=theirs)
 
 
-def _single_column(width: Reading) -> Judgement | None:
+def _single_column(width: Reading, *, stated: bool) -> Judgement | None:
     low, high = COLUMN_WIDTHS_DEG
     if width.nominal >= ALL_ROUND_DEG:
         return None
+    if width.nominal < low - 3 and not stated:
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("array_columns",))
     fits = low - 3 <= width.nominal <= high
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOUBTFUL,

@@ -19,6 +19,7 @@ _CLOSE_COLUMNS_WL = 0.6
 _HIGH_BETWEEN_COLUMNS_DB = 28.0
 _BEYOND_MEASURED_DB = 50.0
 _HIGH_UNNAMED_DB = 40.0
+_MOST_PORTS = 1024
 
 
 @check(
@@ -167,7 +168,7 @@ def isolation_plausible(
 
 def _isolation_steps(ports: int | None, pitch_wl: float | None) -> tuple[Step, ...]:
     steps = []
-    if ports and ports > 1:
+    if ports and 1 < ports <= _MOST_PORTS:
         steps.append(Step("Pairs of ports", f"{ports} × {ports - 1} / 2", ports * (ports - 1) / 2))
     if pitch_wl is not None:
         steps.append(

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from speccheck.checks.model import FEW_BRANCHES
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -77,6 +78,8 @@ def elements_fit_counts(
     if total and total != positions:
         meanings |= {total: "positions of all bands", total * each: "dipoles of all bands"}
     fits = count in meanings
+    if not fits and array_columns is None:
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("array_columns",))
     tail = (
         f"It counts {meanings[count]}."
         if fits
@@ -132,6 +135,8 @@ def transceivers_fit_subarrays(
     """
     claimed, (each, assumed) = whole(transceivers), polarisation_count(polarisations)
     rows, columns, groups = whole(array_rows), whole(array_columns), group_count(panel_groups)
+    if array_columns is None and claimed > FEW_BRANCHES:
+        return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("array_columns",))
     if subarray_rows is None and subarray_columns is None:
         return _any_subarray(transceivers, (rows, columns, each, groups), assumed)
     down, across = whole(subarray_rows), whole(subarray_columns)
