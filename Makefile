@@ -10,12 +10,12 @@ export DEBIAN_FRONTEND = noninteractive
 PANGO := libpango-1.0-0 libpangoft2-1.0-0 libharfbuzz-subset0 fonts-dejavu-core
 SYSTEM := $(PANGO) chromium poppler-utils qpdf libreoffice-calc-nogui
 
-.PHONY: demo test system pango benchmarks clean
+.PHONY: demo test system pango browser benchmarks clean
 
 demo: pango $(VENV)/installed
 	$(BIN)/speccheck check sample_specs --out reports || test $$? -eq 1
 
-test: pango $(VENV)/installed-test
+test: pango browser $(VENV)/installed-test
 	$(BIN)/ruff check .
 	$(BIN)/ruff format --check .
 	$(BIN)/mypy
@@ -43,9 +43,18 @@ pango:
 		apt-get update -qq && apt-get install -y -qq --no-install-recommends $(PANGO) >/dev/null; \
 	else echo "Pango is not installed: no PDF until you install $(PANGO)"; fi
 
+# The accessibility rules that the browser tests run; without npm or a registry those tests are skipped.
+browser:
+	@if [ ! -d tests/browser/node_modules ] && command -v npm >/dev/null; then \
+		npm install --prefix tests/browser --no-audit --no-fund --loglevel=error \
+		|| echo "the accessibility rules could not be fetched: their test is skipped"; \
+	fi
+
 system:
 	apt-get update -qq
 	apt-get install -y -qq --no-install-recommends $(SYSTEM) >/dev/null
+	@command -v npm >/dev/null || apt-get install -y -qq --no-install-recommends npm >/dev/null \
+		|| echo "npm could not be installed: the accessibility rules are skipped"
 
 clean:
 	rm -rf $(VENV) dist reports .pytest_cache .mypy_cache .ruff_cache .hypothesis
