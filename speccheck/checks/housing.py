@@ -2,34 +2,44 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.ports import group_count
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
+from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 
 @dataclass(frozen=True, slots=True)
 class _Side:
-    """One direction: what is stated of the box, how many elements at which pitch [m]."""
+    """One direction: what is stated of the box, how many elements at which pitch [m], how wide one is [m]."""
 
     word: str
     elements: str
     stated: Reading
     count: int
     pitch_m: float
+    element_m: float
 
     @property
     def full_m(self) -> float:
-        """Length [m] of the array with half a pitch beyond the outermost elements."""
-        return self.count * self.pitch_m
+        """Length [m] of the array with half an element beyond the outermost centres."""
+        return (self.count - 1) * self.pitch_m + self.element_m
+
+    @property
+    def formula(self) -> str:
+        """How the length comes about."""
+        pitch, element = f"{self.pitch_m * 1000:.4g} mm", f"{self.element_m * 1000:.4g} mm"
+        if self.element_m == self.pitch_m:
+            return f"{self.count} × {pitch}"
+        return f"({self.count} − 1) × {pitch} + {element}"
 
     @property
     def least_m(self) -> float:
-        """Length [m] with a quarter pitch beyond the outermost elements."""
-        return (self.count - 0.5) * self.pitch_m
+        """Length [m] with a quarter of an element beyond the outermost centres."""
+        return (self.count - 1) * self.pitch_m + self.element_m / 2
 
     @property
     def verdict(self) -> Fit:
@@ -77,10 +87,12 @@ def array_fits_housing(
     """Multiplies elements by their spacing and holds the product against height and width.
 
     Formula
-    N·d ≤ side: fits; (N − ½)·d > side: does not fit; between them doubtful
+    N·d ≤ side: fits; (N − ½)·d > side: does not fit; between them doubtful. Columns farther apart than half
+    a wavelength at the lower band edge take (N − 1)·d and that half wavelength.
 
     Assumptions
-    An element needs half a pitch beyond its centre, a quarter at the very least. A spacing in λ without a
+    An element needs half a pitch beyond its centre, a quarter at the very least; an element is half a
+    wavelength wide at most. A spacing in λ without a
     frequency is taken at the middle of the band. Several panel groups stand side by side within the box.
 
     Worked example
@@ -105,7 +117,7 @@ def array_fits_housing(
         working=tuple(
             Step(
                 f"Array along the {side.word}",
-                f"{side.count} × {side.pitch_m * 1000:.4g} mm",
+                side.formula,
                 round(side.full_m * 1000, 1),
                 "mm",
             )
@@ -124,14 +136,13 @@ def _sides(model: Model, height: Reading | None, width: Reading | None, groups: 
     layout = model.layout
     sides: list[_Side] = []
     if height is not None and layout.rows > 1:
-        sides.append(_Side("height", "rows", height, layout.rows, layout.vertical_pitch_m))
+        pitch = layout.vertical_pitch_m
+        sides.append(_Side("height", "rows", height, layout.rows, pitch, pitch))
     if width is not None and layout.columns > 1:
-        sides.append(_Side("width", "columns", width, layout.columns, layout.horizontal_pitch_m))
+        pitch, widest = layout.horizontal_pitch_m, SPEED_OF_LIGHT_MPS / model.low_hz / 2
+        sides.append(_Side("width", "columns", width, layout.columns, pitch, min(pitch, widest)))
     if groups > 1 and sides:
         # groups stand along the side with more room, so only one side grows
         roomy = max(sides, key=lambda s: s.stated.high / s.full_m)
-        sides = [
-            _Side(s.word, s.elements, s.stated, s.count * groups, s.pitch_m) if s is roomy else s
-            for s in sides
-        ]
+        sides = [replace(s, count=s.count * groups) if s is roomy else s for s in sides]
     return sides
