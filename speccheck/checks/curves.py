@@ -22,6 +22,7 @@ from speccheck.records import Band, CellRef, Curve, Drawing, Finding, Panel, Rea
 _EDGE_POINTS = 13
 _DECIMALS = 4
 _BOTTOM_MHZ, _TOP_MHZ = 10.0, 300e3
+_MOST_LOBES = 12
 _MOST_ROWS = 512
 _NARROWEST_WL, _WIDEST_WL = 0.01, 20.0
 _STEEPEST_DEG = 89.0
@@ -161,6 +162,7 @@ def _steering_map(model: Model, steering: Steering) -> Iterator[Drawing]:
         if visible or np.hypot(outline[0] + u, outline[1] + v).min() <= 1.6:
             curves.append(_curve("grating lobe", outline[0] + u, outline[1] + v, "u", "v"))
         seen += visible
+    curves += _subarray_lobes(model, outline)
     low, high = steering.tilts_deg
     span = f"tilt {low:.3g}° to {high:.3g}°".replace("-", "−")
     span += f", azimuth ±{steering.scan_deg:.3g}°" if steering.scan_deg else ""
@@ -174,12 +176,63 @@ def _steering_map(model: Model, steering: Steering) -> Iterator[Drawing]:
         kind="steering-map",
         title=title,
         text=f"Element lattice at {at}, {span}: {_lobes(seen)} with the centre inside the circle of visible "
-        "directions for some beam of that range. Their level, and the lobes of sub-arrays, are computed in "
-        "the checks.",
+        f"directions for some beam of that range. {_of_subarrays(model)}Levels are "
+        "computed in the checks.",
         band=model.band,
         curves=tuple(curves),
         marks={"lobes_seen": float(seen)},
         where=_cells(model, steering),
+    )
+
+
+def _subarray_lobes(model: Model, outline: tuple[np.ndarray, np.ndarray]) -> list[Curve]:
+    """Lobes of the lattice of sub-arrays near visible space, those of the elements left out.
+
+    Source: quantisation lobes of an array of sub-arrays stand at sin θ + n·λ/D (R. J. Mailloux, Phased Array
+    Antenna Handbook, ch. 7).
+    """
+    layout = model.layout
+    rows, columns = _grouped(model)
+    if layout.lattice is Lattice.TRIANGULAR:
+        return []
+    wavelength = SPEED_OF_LIGHT_MPS / model.high_hz
+    u_step = wavelength / (layout.horizontal_pitch_m * columns) if layout.columns > columns else np.inf
+    v_step = wavelength / (layout.vertical_pitch_m * rows) if layout.rows > rows else np.inf
+    own = [
+        (i * u_step if i else 0.0, j * v_step if j else 0.0)
+        for i in _orders(u_step if columns > 1 else np.inf)
+        for j in _orders(v_step if rows > 1 else np.inf)
+        if i % columns or j % rows
+    ]
+    return [
+        _curve("sub-array lobe", outline[0] + u, outline[1] + v, "u", "v")
+        for u, v in own
+        if np.hypot(outline[0] + u, outline[1] + v).min() <= 1
+    ]
+
+
+def _grouped(model: Model) -> tuple[int, int]:
+    """Rows and columns of a sub-array, 1 along an axis where they fill the whole array."""
+    layout = model.layout
+    rows = layout.subarray_rows if layout.subarray_rows < layout.rows else 1
+    return rows, layout.subarray_columns if layout.subarray_columns < layout.columns else 1
+
+
+def _orders(step: float) -> range:
+    """Orders of lobes that can reach visible space from any beam."""
+    most = min(int(2 / step), _MOST_LOBES) if np.isfinite(step) else 0
+    return range(-most, most + 1)
+
+
+def _of_subarrays(model: Model) -> str:
+    rows, columns = _grouped(model)
+    if rows * columns == 1:
+        return ""
+    if model.layout.lattice is Lattice.TRIANGULAR:
+        return "Lobes of sub-arrays of a triangular lattice are not drawn. "
+    return (
+        f"Sub-arrays of {rows} × {columns} bring lobes of their own, dotted here, weakened by the pattern of "
+        "the sub-array. "
     )
 
 

@@ -186,12 +186,18 @@ def _steering_map(drawing: Drawing, numbers: Numbers) -> Figure:
     claimed, *lobes = drawing.curves
     for lobe in lobes:
         outline = [*zip(lobe.x, lobe.y, strict=True), (lobe.x[0], lobe.y[0])]
-        canvas.line(((x(u), y(v)) if max(abs(u), abs(v)) <= 1.6 else _HIDDEN for u, v in outline), "limit")
+        canvas.line(
+            ((x(u), y(v)) if max(abs(u), abs(v)) <= 1.6 else _HIDDEN for u, v in outline),
+            "third" if lobe.name == "sub-array lobe" else "limit",
+        )
     canvas.line([(x(u), y(v)) for u, v in zip(claimed.x, claimed.y, strict=True)], "first", close=True)
     canvas.write(x(1.62), y(0) + 3, "u →", "start", "small")
     canvas.write(x(0) + 5, y(1.6) + 8, "v ↑", style="small")
-    canvas.write(40, 227, "– · – grating lobes", style="limit-text")
-    canvas.write(170, 227, "—— claimed steering", style="first-text")
+    grouped = any(lobe.name == "sub-array lobe" for lobe in lobes)
+    canvas.write(4, 227, "– · – grating lobes", style="limit-text")
+    canvas.write(112, 227, "—— claimed steering", style="first-text")
+    if grouped:
+        canvas.write(222, 227, "····· sub-array lobes", style="third-text")
     return canvas.figure(drawing.title, drawing.text, where=drawing.where, note=EXPECTED, kind=drawing.kind)
 
 

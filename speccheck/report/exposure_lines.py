@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import re
+from collections.abc import Iterable
 from dataclasses import dataclass
 
 from speccheck.records import Band, ExposureNote, ExposureRow, ExposureZone
@@ -33,7 +35,7 @@ class ExposureTable:
 
 def exposure_table(note: ExposureNote) -> ExposureTable:
     """Fold the rows of a note; no row is left out."""
-    populations = {row.population: row.category or row.population for row in note.rows}
+    populations = _populations(note)
     places = {name: i for i, name in enumerate(populations)}
     folded: list[tuple[tuple[Band | None, str, float], list[ExposureRow | None]]] = []
     for row in note.rows:
@@ -71,6 +73,15 @@ class ZoneTable:
     lines: tuple[ZoneLine, ...]
 
 
+def _populations(note: ExposureNote) -> dict[str, str]:
+    """Who is meant, in the words of the limit set, beside the plain word where that differs."""
+    return {row.population: _category(row.population, row.category) for row in note.rows}
+
+
+def _category(population: str, category: str) -> str:
+    return category if population in category else f"{category} ({population})" if category else population
+
+
 def zone_table(note: ExposureNote) -> ZoneTable:
     """Fold the zones of a note; no zone is left out."""
     populations = tuple(dict.fromkeys(zone.population for zone in note.around))
@@ -79,4 +90,37 @@ def zone_table(note: ExposureNote) -> ZoneTable:
         line = folded.setdefault((zone.band, zone.basis), [None] * len(populations))
         line[populations.index(zone.population)] = zone
     lines = (ZoneLine(band=band, basis=basis, zones=tuple(zones)) for (band, basis), zones in folded.items())
-    return ZoneTable(populations=populations, lines=tuple(lines))
+    named = _populations(note)
+    return ZoneTable(populations=tuple(named.get(p, p) for p in populations), lines=tuple(lines))
+
+
+_BAND = re.compile(r"(\d+(?:\.\d+)?[-–]\d+(?:\.\d+)?)\sMHz")
+_FIGURES = re.compile(r" \([\d.,]+ m\)|; cylindrical model holds up to [\d.,]+ m")
+
+
+def merged_by_band(texts: Iterable[str]) -> tuple[str, ...]:
+    """Sentences that differ in their band alone, said once for all of those bands."""
+    said: dict[str, list[str]] = {}
+    for text in texts:
+        found = _BAND.search(text)
+        frame = f"{text[: found.start()]}\0{text[found.end() :]}" if found else text
+        said.setdefault(frame, []).append(found[1] if found else "")
+    return tuple(frame.replace("\0", ", ".join(bands) + " MHz") for frame, bands in said.items())
+
+
+def region_lines(note: ExposureNote) -> tuple[str, ...]:
+    """Near or far field of the distances: with figures for one band, a line for each region for several."""
+    regions: dict[str, dict[Band, None]] = {}
+    several = len({row.band for row in note.rows if row.band}) > 1
+    for row in note.rows:
+        if row.region and (row.band or not several):
+            words = _FIGURES.sub("", row.region) if several else row.region
+            regions.setdefault(words, {})
+            if row.band:
+                regions[words][row.band] = None
+    if not several:
+        return tuple(regions)
+    return tuple(
+        f"{words} ({', '.join(f'{low:g}-{high:g}' for low, high in bands)} MHz)"
+        for words, bands in regions.items()
+    )

@@ -38,6 +38,7 @@ _DECIMAL_IN_PROSE = re.compile(
     r"'[^']*'|“[^”]*”|"  # what a bidder wrote is quoted as it stands
     rf"(?<![\w.,])\d+\.\d+(?=(?:\s?(?:to|and|–|…|±|×)\s?[+−-]?\d+(?:\.\d+)?)*\s?{_UNITS})"
 )
+_POWER_OF_TEN = re.compile(r"(?<![\w.])\d(?:\.\d+)?e\+\d+")
 _DECIMAL_IN_FORMULA = re.compile(r"(?<=\d)\.(?=\d)")
 
 
@@ -76,11 +77,13 @@ class Numbers:
         return self._with_unit(self.plain(number, decimals_for(number, unit)), unit)
 
     def stated(self, value: Value | None, unit: str = "") -> str:
-        """A value as read: every digit it was stated with."""
+        """A value as read: every digit it was stated with; speeds, stated in km/h as a rule, to 0.1 m/s."""
         if value is None:
             return "–"
         if isinstance(value, str):
             return value
+        if unit == "m/s":
+            value = (round(value[0], 1), round(value[1], 1)) if isinstance(value, tuple) else round(value, 1)
         if isinstance(value, tuple):
             return self._with_unit(f"{self.plain(value[0])} to {self.plain(value[1])}", unit)
         return self._with_unit(self.plain(value), unit)
@@ -123,6 +126,7 @@ class Numbers:
 
     def formula(self, text: str) -> str:
         """A formula with its numbers; beside a decimal comma its arguments are parted by semicolons."""
+        text = _POWER_OF_TEN.sub(lambda m: self.plain(float(m[0]), 0) if float(m[0]) < 1e12 else m[0], text)
         if not self.decimal_comma:
             return text
         return _DECIMAL_IN_FORMULA.sub(",", text.replace(", ", "; "))

@@ -18,7 +18,7 @@ from markupsafe import Markup
 from speccheck.atomic import write_bytes_atomic
 from speccheck.errors import OutputError
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
-from speccheck.report.exposure_lines import exposure_table, zone_table
+from speccheck.report.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
 from speccheck.report.view import build_view, label, rules_fingerprint
@@ -132,6 +132,8 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         Fit=Fit,
         Level=Level,
         exposure_table=exposure_table,
+        merged_by_band=merged_by_band,
+        region_lines=region_lines,
         rules_fingerprint=rules_fingerprint,
         zone_table=zone_table,
         WIND_CAUTIONS=WIND_CAUTIONS,

@@ -62,7 +62,7 @@ def _count(number: int, one: str, many: str) -> str:
 
 def decisions(assessment: Assessment, questions: Sequence[Question]) -> tuple[str, ...]:
     """What the approver is asked to decide."""
-    asked = []
+    rejected: dict[str, list[str]] = {}
     for panel in assessment.panels:
         if panel.outcome is Outcome.REJECT:
             failed = (
@@ -71,9 +71,11 @@ def decisions(assessment: Assessment, questions: Sequence[Question]) -> tuple[st
                 if row.requirement.level is Level.MANDATORY and row.verdict is Compliance.FAILS
             )
             clauses = ", ".join(dict.fromkeys(clause for clause in failed if clause))
-            asked.append(
-                f"{panel.panel.name}: confirm or withdraw the rejection on clause {clauses or 'as listed'}."
-            )
+            rejected.setdefault(clauses or "as listed", []).append(panel.panel.name)
+    asked = [
+        f"{', '.join(names)}: confirm or withdraw the rejection on clause {clauses}."
+        for clauses, names in rejected.items()
+    ]
     if questions:
         span = f"questions 1 to {len(questions)}" if len(questions) > 1 else "question 1"
         asked.append(f"Release {span} to the bidder and set the date the answers are due.")

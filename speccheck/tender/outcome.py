@@ -21,7 +21,8 @@ def outcome(findings: Sequence[Finding], rows: Sequence[MatrixRow]) -> tuple[Out
     rows : requirement rows of the same panel; empty without a tender
     """
     failed = tuple(_failed(rows))
-    asked = (*_open(rows), *_doubted(rows), *_misfits(findings))
+    misfits = tuple(_misfits(findings, Fit.DOES_NOT_FIT))
+    asked = (*misfits, *_open(rows), *_misfits(findings, Fit.DOUBTFUL), *_doubted(rows))
     reasons = tuple(dict.fromkeys((*failed, *asked)))
     if failed:
         return Outcome.REJECT, reasons
@@ -62,8 +63,13 @@ def _doubted(rows: Sequence[MatrixRow]) -> Iterator[str]:
             yield f"{label(row)}: claim in doubt ({', '.join(row.in_doubt)})"
 
 
-def _misfits(findings: Sequence[Finding]) -> Iterator[str]:
+def _misfits(findings: Sequence[Finding], verdict: Fit) -> Iterator[str]:
+    """Claims of one verdict, each with its figures: the first sentence of what was found."""
     for finding in findings:
-        if finding.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL):
+        if finding.verdict is verdict:
             band = f", {finding.band[0]:g}-{finding.band[1]:g} MHz" if finding.band else ""
-            yield f"{finding.title}{band}: {finding.verdict.value}"
+            yield f"{verdict.value}{band}: {_first_sentence(finding.summary) or finding.title}"
+
+
+def _first_sentence(text: str) -> str:
+    return text.partition(". ")[0].rstrip(".")
