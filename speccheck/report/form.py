@@ -10,6 +10,7 @@ from speccheck.dictionary import Parameter, parameters
 from speccheck.records import Requirement, Tender
 from speccheck.report.book import book_bytes
 from speccheck.report.cells import Content, Rich
+from speccheck.report.form_columns import Asked, asked_columns, condition_of
 from speccheck.report.formats import shown_unit
 from speccheck.report.sheets import Column, Grid, Imprint, NumberCheck, Table
 
@@ -111,11 +112,12 @@ def form_bytes(tender: Tender | None = None) -> bytes:
     )
 
 
-def form_heading(parameter: Parameter) -> str:
-    """Return a heading that the dictionary knows, with the unit that the form asks for."""
+def form_heading(parameter: Parameter, condition: str = "") -> str:
+    """Return a heading that the dictionary knows, with condition and unit that the form asks for."""
     known = parameter.headings.get("en", ())
     same = parameter.label.lower() in {word.lower() for word in known}
     word = parameter.label if same or not known else known[0][:1].upper() + known[0][1:]
+    word = f"{word}, {condition}" if condition else word
     unit, _ = form_unit(parameter)
     return f"{word} ({unit})" if unit else word
 
@@ -135,11 +137,10 @@ def _keys(tender: Tender | None) -> tuple[str, ...]:
 
 
 def _bid(keys: Sequence[str], tender: Tender | None) -> Table:
-    chosen = [parameters()[key] for key in keys]
-    asked = tender.requirements if tender else ()
-    columns = [_column(p, [r for r in asked if r.parameter == p.key], keys) for p in chosen]
+    chosen = tuple(asked_columns(keys, tender.requirements if tender else ()))
+    columns = [_column(one, keys) for one in chosen]
     blank: list[Content] = [None] * len(columns)
-    example = [_example(p) for p in chosen]
+    example = [_example(one.parameter) for one in chosen]
     return Table(
         name=SHEET,
         columns=columns,
@@ -148,14 +149,15 @@ def _bid(keys: Sequence[str], tender: Tender | None) -> Table:
     )
 
 
-def _column(parameter: Parameter, asked: Iterable[Requirement], keys: Sequence[str]) -> Column:
-    heading = form_heading(parameter)
+def _column(one: Asked, keys: Sequence[str]) -> Column:
+    parameter = one.parameter
+    heading = form_heading(parameter, one.condition)
     numeric = parameter.kind in ("number", "count")
     return Column(
         heading=heading,
         width=_width(parameter, heading),
         look="entry" if numeric else "entry-text",
-        note=_note(parameter, asked),
+        note=_note(parameter, one.requirements),
         choices=_choice_range(parameter.key, keys),
         check=_number_check(parameter) if numeric else None,
     )
@@ -244,7 +246,9 @@ def _clauses(tender: Tender) -> Table:
 
 def _where_to_answer(requirement: Requirement) -> str:
     parameter = parameters().get(requirement.parameter)
-    return f"on sheet {SHEET}, column {form_heading(parameter)}" if parameter else "here, in words"
+    if parameter is None:
+        return "here, in words"
+    return f"on sheet {SHEET}, column {form_heading(parameter, condition_of(requirement))}"
 
 
 def _read_me(tender: Tender | None) -> Table:

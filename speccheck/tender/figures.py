@@ -17,6 +17,7 @@ from speccheck.tender.statistics import canonical, could_decide, offered_statist
 
 _AT_LEAST, _AT_MOST = ("≥", ">"), ("≤", "<")
 _NUMERAL = re.compile(r"\d+(?:[.,]\d+)?")
+_FEWEST_DIGITS = 2
 _IDENTITY = Relation("")
 
 
@@ -88,12 +89,15 @@ def _span(requirement: Requirement, parameter: Parameter, offered: Comparable, r
 
 
 def _half_digit(reading: Reading, there: Callable[[float], float]) -> float:
-    """Half a unit of the last digit printed, carried to the requirement's unit."""
+    """Half a unit of the last digit printed, carried to the requirement's unit.
+
+    A lone digit was not rounded to a unit: '2' is no VSWR of 1.5.
+    """
     stated = reading.value if reading.stated_value is None else reading.stated_value
     if isinstance(stated, str | tuple) or isinstance(reading.value, str | tuple):
         return 0.0
     printed = [n for n in _NUMERAL.findall(reading.raw) if float(n.replace(",", ".")) == abs(stated)]
-    if not printed:
+    if not printed or len(re.sub(r"^[0.,]+|[.,]", "", printed[0])) < _FEWEST_DIGITS:
         return 0.0
     decimals = len(re.split("[.,]", printed[0])[1]) if re.search("[.,]", printed[0]) else 0
     half = 0.5 * 10.0**-decimals

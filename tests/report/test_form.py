@@ -1,6 +1,7 @@
 """The blank bid form: filled without a manual, read back whole, its example row left out."""
 
 import io
+from dataclasses import replace
 
 import openpyxl
 import pytest
@@ -160,6 +161,36 @@ def test_clauses_are_not_read_as_the_bidders_figures(tmp_path):
     book.save(path)
     (panel,) = read_submission(path).panels
     assert [reading.value for reading in panel.all("gain")] == [16.5]
+
+
+def test_conditions_of_the_tender_stand_in_the_headings_and_come_back(tmp_path):
+    """150 km/h = 41.67 m/s; a force without its speed could not be judged."""
+    rows = (
+        replace(asked("1", "wind_load", "≤ 600 N at 150 km/h"), at={"wind_speed_mps": 150 / 3.6}),
+        replace(asked("2", "passive_intermodulation", "≤ -150 dBc @ 2 x 43"), at={"carrier_dbm": 43.0}),
+        replace(asked("3", "cross_polar_discrimination", "≥ 20 dB (0°)"), at={"angle_deg": 0.0}),
+        replace(asked("3", "cross_polar_discrimination", "≥ 10 dB (±60°)"), at={"angle_deg": 60.0}),
+    )
+    book = openpyxl.load_workbook(io.BytesIO(form_bytes(replace(TENDER, requirements=rows))))
+    sheet = book["Bid"]
+    sheet["A3"].value, sheet["B3"].value = "Fenwick 4", "1710-2170"
+    place = columns(sheet)
+    for heading, value in (
+        ("Wind load, frontal, at 150 km/h (N)", 512),
+        ("Passive intermodulation, at 2 x 43 dBm (dBc)", -153),
+        ("Cross-polar discrimination, at 0° (dB)", 21),
+        ("Cross-polar discrimination, at 60° (dB)", 11),
+    ):
+        sheet.cell(3, place[heading]).value = value
+    path = tmp_path / "filled.xlsx"
+    book.save(path)
+    (panel,) = read_submission(path).panels
+    assert panel.all("wind_load")[0].at["wind_speed_mps"] == pytest.approx(41.67, abs=0.01)
+    assert panel.all("passive_intermodulation")[0].at["carrier_dbm"] == 43
+    assert {(r.value, r.at["angle_deg"]) for r in panel.all("cross_polar_discrimination")} == {
+        (21, 0),
+        (11, 60),
+    }
 
 
 def test_same_tender_same_bytes():

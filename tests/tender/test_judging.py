@@ -252,6 +252,10 @@ def test_rounding_holds_in_the_unit_of_the_offer(raw: str, verdict: str) -> None
     assert ("ROUND" in row.note) == (verdict == "meets narrowly")
 
 
+def test_a_lone_digit_was_not_rounded() -> None:
+    assert _row(demand("vswr", "≤", 1.5), says("vswr", 2.0, "2")).verdict is Compliance.FAILS
+
+
 @pytest.mark.parametrize(("vswr", "verdict"), [(1.7, "fails"), (1.4, "meets")])
 def test_return_loss_is_judged_from_vswr(vswr: float, verdict: str) -> None:
     assert _row(demand("return_loss", "≥", 14.0), says("vswr", vswr)).verdict.value == verdict
