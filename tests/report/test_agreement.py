@@ -3,6 +3,10 @@
 import html.parser
 import io
 import json
+import re
+import shutil
+import subprocess
+from collections import Counter
 from pathlib import Path
 
 import openpyxl
@@ -10,8 +14,11 @@ import pytest
 
 from speccheck.intake.tender_book import read_tender
 from speccheck.pipeline import assess
+from speccheck.records import Fit
 from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
+from speccheck.report.marks import FITS
+from speccheck.report.pdf import pdf_bytes
 from speccheck.report.review import review_bytes
 
 FOLDER = Path(__file__).parents[2] / "sample_specs"
@@ -93,3 +100,38 @@ def test_every_open_check_has_a_question_and_every_doubt_its_innocent_readings(o
         column(book, "Findings", "Verdict"), column(book, "Findings", "Innocent readings"), strict=True
     )
     assert all(text for verdict, text in said if verdict in ("does not fit", "doubtful"))
+
+
+RUNNING = re.compile(r"^(DRAFT – not issued|Report not numbered.*|Page \d+ of \d+|\S+\.xlsx)$", re.MULTILINE)
+
+
+@pytest.mark.skipif(not shutil.which("pdftotext"), reason="poppler-utils is not installed")
+@pytest.mark.parametrize("sample", SAMPLES, ids=lambda path: path.stem)
+def test_the_pdf_says_what_the_other_outputs_say(sample, tmp_path):
+    assessment = assess(sample, tender=read_tender(FOLDER / "tender.xlsx"))
+    page = render_html(assessment)
+    (tmp_path / "report.pdf").write_bytes(pdf_bytes(page))
+    text = subprocess.run(
+        ["pdftotext", tmp_path / "report.pdf", "-"], capture_output=True, text=True, check=True
+    ).stdout
+    printed, shown = squeezed(RUNNING.sub("", text)), squeezed(Words(page).text)
+    document = json.loads(to_json(assessment))
+    for panel in document["panels"]:
+        findings, rows = panel["findings"], panel["requirements"]
+        said = [finding["summary"] for finding in findings if finding["verdict"] != "fits"]
+        said += panel["reasons"]
+        said += [f"{row['clause']}" for row in rows]
+        distances = [row["distance_m"] for row in panel["exposure"]["rows"]]
+        said += [f"{distance:.1f} m" for distance in distances]
+        for words in map(squeezed, said):
+            assert words in shown
+            assert words in printed
+        verdicts = Counter(finding["verdict"] for finding in findings)
+        for word in ("does not fit", "doubtful"):
+            symbol = FITS[Fit(word)].symbol
+            assert text.count(symbol) >= verdicts[word]
+
+
+def squeezed(text):
+    """Text without its spaces and line ends, with one kind of dash."""
+    return re.sub(r"[−–]", "-", re.sub(r"\s", "", text))
