@@ -10,11 +10,13 @@ from speccheck.intake.bands import find_bands
 from speccheck.intake.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.columns import Column, heading_stack
 from speccheck.intake.composing import compose
+from speccheck.intake.edges import band_between, edge_columns
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks, is_size_letter
 from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Across
+from speccheck.records import Band
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _NAME_KEYS = ("model", "panel_type", "part_number")
@@ -52,6 +54,7 @@ class AcrossReader:
         self._banded: int = 0
         self._nicknamed: int = 0
         self._names_of_bands: set[int] = set()
+        self._edges: tuple[int, int] = (0, 0)
         self._contexts: dict[tuple[int, str], Context] = {}
         self._by_name: dict[str, tuple[Draft, set[object]]] = {}
         self._at = _Row()
@@ -106,6 +109,7 @@ class AcrossReader:
         self._names_of_bands = {i for i in frequencies if given and i not in given}
         narrow = [i for i in given or frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
         self._banded = next(iter(narrow or given or frequencies), 0)
+        self._edges = edge_columns({i: fields[i].column.heading for i in columns})
         nicknames = [i for i in columns if holds_nicknames(columns[i])]
         self._nicknamed = nicknames[0] if nicknames else 0
 
@@ -162,6 +166,9 @@ class AcrossReader:
             self._grid.covering(row, self._nicknamed) if self._nicknamed else None,
             self._unit_of(self._banded) if self._banded else "",
         )
+        if self._edges[0] and not said.band:
+            heading = self._fields[self._edges[0]].column.heading
+            said = RowBand(band_between(self._grid, row, self._edges, heading), said.name)
         key = (said.band, said.name)
         if name_cell is not None:
             self._result.mark(name_cell, "heading")
@@ -199,6 +206,9 @@ class AcrossReader:
         if found is None:
             return
         said, column = self._at.said, found.column
+        if cell.column in self._edges:
+            self._claim_edge(cell, draft, said.band)
+            return
         silent = cell.column == self._nicknamed or cell.column in self._names_of_bands
         if silent or (cell.column == self._banded and said.point):
             self._result.mark(cell, "label")
@@ -226,6 +236,15 @@ class AcrossReader:
         else:
             found.misses += 1
             self._result.mark(cell, "unread")
+
+    def _claim_edge(self, cell: Cell, draft: Draft, band: Band | None) -> None:
+        """The band of a row is claimed by the cell of its lower edge."""
+        self._result.mark(cell, "unread" if band is None else "reading")
+        if band is not None and cell.column == self._edges[0]:
+            heading = self._fields[cell.column].column.heading
+            context = Context(Label(heading, ("operating_bands",), "MHz"), heading=heading)
+            text = f"{band[0]:g}-{band[1]:g} MHz"
+            draft.claims.append(Claim(cell, context, band, text=text, banded=True))
 
     def _noted(self, context: Context, name: str) -> Context:
         """A context with the nickname of the row's band, made once for each."""

@@ -5,10 +5,17 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from speccheck.intake.bands import find_bands, is_band_label
-from speccheck.intake.claims import Claim, Context, Declared, SheetResult
+from speccheck.intake.claims import Claim, Context, SheetResult
 from speccheck.intake.columns import VALUE_ROLES, Column
+from speccheck.intake.down_answers import take_answers
 from speccheck.intake.down_bands import NamedBand, band_of_row
-from speccheck.intake.down_headings import describe_columns, extend, find_headings, find_name_column
+from speccheck.intake.down_headings import (
+    describe_columns,
+    extend,
+    find_headings,
+    find_name_column,
+    numbering_columns,
+)
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.down_regions import Down, cells_between
 from speccheck.intake.down_row import RowCells, joined_label, row_cells
@@ -16,16 +23,10 @@ from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
-from speccheck.intake.words import answer, is_generic_sheet_name
+from speccheck.intake.words import is_generic_sheet_name
 from speccheck.records import Band
 
 _LOOK_AHEAD = 60
-_FORM = {
-    "said": frozenset({"compliance"}),
-    "required": frozenset({"required"}),
-    "offered": VALUE_ROLES,
-    "unit": frozenset({"unit"}),
-}
 
 
 @dataclass(slots=True)
@@ -54,6 +55,7 @@ class DownReader:
         self._columns: dict[int, Column] = {}
         self._heading_rows: list[int] = []
         self._state = _State()
+        self._numbering: set[int] = set()
 
     def read(self) -> None:
         """Place every cell of the table and collect its claims."""
@@ -62,6 +64,7 @@ class DownReader:
         self._columns = describe_columns(self._marks, self._table, self._heading_rows, self._result)
         self._panels = DownPanels(self._marks, self._table, self._columns, self._result)
         self._panels.open(self._names, self._heading_rows)
+        self._numbering = numbering_columns(self._marks, self._table, self._heading_rows)
         self._panels.name_column = find_name_column(self._marks, self._table, self._heading_rows)
         self._section_above()
         first = (self._heading_rows[-1] + 1) if self._heading_rows else self._table.top
@@ -124,6 +127,8 @@ class DownReader:
         state = self._state
         for cell in cells:
             self._result.mark(cell, "label")
+            if cell.column in self._numbering:
+                continue
             bands = find_bands(cell.text)
             if is_band_label(cell.text) and isinstance(cell.raw, str):
                 state.side_band, state.side_name = bands.hull, cell.text
@@ -175,7 +180,9 @@ class DownReader:
                 self._claim(cell, label, extra)
             else:
                 self._result.mark(cell, "note" if column.role == "remark" else "label")
-        self._answers(row)
+        take_answers(
+            self._grid, self._columns, row, state.label, draft=self._panels.first, result=self._result
+        )
 
     def _claim(self, cell: Cell, label: Label, extra: RowCells) -> None:
         if cell.row == self._panels.model_row and label.parameters[0] in NAME_KEYS:
@@ -278,21 +285,3 @@ class DownReader:
                 self._result.mark(cell, "unread")
             else:
                 self._result.mark(cell, "label")
-
-    def _answers(self, row: int) -> None:
-        """A declaration of compliance stands for an offer only where there is none."""
-        cells = {role: self._cells_of(row, roles) for role, roles in _FORM.items()}
-        label = self._state.label
-        for said in cells["said"]:
-            if label is None or answer(said.text) != "comply":
-                continue
-            context = Context(label, cells["unit"][0].text if cells["unit"] else "", heading=label.text)
-            if not cells["offered"]:
-                self._panels.first.claims.append(Claim(said, context, None))
-            elif cells["required"]:
-                row_said = Declared(cells["required"][0], cells["offered"][0], said, context)
-                self._result.declared.append(row_said)
-
-    def _cells_of(self, row: int, roles: frozenset[str]) -> list[Cell]:
-        found = (self._grid.cells.get((row, i)) for i, c in self._columns.items() if c.role in roles)
-        return [cell for cell in found if cell is not None]

@@ -13,6 +13,7 @@ from speccheck.intake.roles import settle_roles
 from speccheck.intake.words import column_role
 
 _REACH = 7
+_FEWEST_NUMBERED, _MOST_OF = 4, 0.7
 _LONG_NOTE = 120
 
 
@@ -54,6 +55,23 @@ def find_name_column(marks: Marks, table: Down, heading_rows: list[int]) -> int:
             if column_role(cell.text) == "panel" or label.parameters[:1] in (("model",), ("part_number",)):
                 return cell.column
     return 0
+
+
+def numbering_columns(marks: Marks, table: Down, heading_rows: list[int]) -> set[int]:
+    """Columns before the labels that number the rows, 'B1', 'B2': so headed, or different in every row."""
+    found = {
+        cell.column
+        for row in heading_rows
+        for cell in cells_between(marks, row, table.left, table.label_column - 1)
+        if column_role(cell.text) == "number"
+    }
+    rows = range(table.top, table.bottom + 1)
+    for column in {c.column for row in rows for c in cells_between(marks, row, 1, table.label_column - 1)}:
+        cells = [cell for row in rows if (cell := marks.grid.cells.get((row, column))) is not None]
+        texts = {cell.text for cell in cells}
+        if len(cells) >= _FEWEST_NUMBERED and len(texts) == len(cells) >= _MOST_OF * len(rows):
+            found.add(column)
+    return found
 
 
 def extend(marks: Marks, table: Down, result: SheetResult) -> None:

@@ -29,6 +29,9 @@ _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\
 _DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
 _UNIT_BRACKET = re.compile(r"\s*[(\[][^()\[\]\d]{1,8}[)\]]\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
+_LISTED_IN_BRACKET = re.compile(
+    r"[(\[]\s*([^\W\d][^()\[\]/]*\s[^()\[\]/]*(?:/[^()\[\]/]+)+|[^\W\d][^()\[\]/]*(?:/[^()\[\]/]+\s[^()\[\]/]+)+)\s*[)\]]"
+)
 _SEVERAL = re.compile(r"[xX×/*]")
 _RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
@@ -115,12 +118,19 @@ class Labels:
 
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
+        bracket = _LISTED_IN_BRACKET.search(text)
+        if bracket is not None:
+            return self._of_items(text, bracket.start(), bracket.end(), bracket[1])
         lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0]) and cut.start() > 3]
         if not lists or not _names_something(text[: lists[-1].start()]):
             return Label(text)
-        found, cut = [], lists[-1]
-        for word in re.split(r"\s*/\s*", cut[0]):
-            single = f"{text[: cut.start()].rstrip(' ([')} ({word}) {text[cut.end() :].lstrip(' )]')}".strip()
+        return self._of_items(text, lists[-1].start(), lists[-1].end(), lists[-1][0])
+
+    def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
+        """The heading of several figures, one for each item between `start` and `end` of a heading."""
+        found = []
+        for item in re.split(r"\s*/\s*", items):
+            single = f"{text[:start].rstrip(' ([')} ({item}) {text[end:].lstrip(' )]')}".strip()
             found.append(self._with_unit(single) or self._match(single))
         keys = tuple(key for label in found for key in label.parameters)
         several = len(set(keys)) == len(found) and all(len(label.parameters) == 1 for label in found)
@@ -215,6 +225,12 @@ def _first_letters() -> frozenset[str]:
 def is_unit(text: str) -> bool:
     """Whether a cell holds a unit and nothing else; a dash in a unit column says that there is none."""
     return len(text) <= 24 and (bool(unit_name(text)) or is_counting_unit(text))
+
+
+def begins_with_unit(text: str) -> bool:
+    """Whether a text is a unit with a note, such as 'N (150 km/h)'."""
+    first = text.split(maxsplit=1)[0] if text.strip() else ""
+    return bool(unit_name(first)) and not any(letter.isdigit() for letter in first)
 
 
 def looks_like_line(text: str) -> bool:

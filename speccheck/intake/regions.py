@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from dataclasses import dataclass, field
 
-from speccheck.intake.labels import is_heading_filler
+from speccheck.intake.labels import begins_with_unit, is_heading_filler
 from speccheck.intake.marks import Marks, looks_like_value, says_column_role
 from speccheck.intake.words import column_role
 
@@ -122,11 +122,17 @@ def _is_subheading(marks: Marks, row: int, above: int) -> bool:
 
 def _details_heading(marks: Marks, row: int, above: int, following: list[int]) -> bool:
     """Whether a row of short words details the heading row above: no figures, nothing under the first."""
-    first, cells = marks.rows[above][0], marks.rows[row]
-    if row != above + 1 or not following or cells[0].column <= first.column:
+    cells = marks.rows[row]
+    if (
+        row != above + 1
+        or not following
+        or cells[0].column <= min(marks.rows[r][0].column for r in following)
+    ):
         return False
     words = [c for c in cells if isinstance(c.raw, str) and len(c.text) <= _LONGEST_DETAIL and not c.fault]
-    figures = sum(looks_like_value(c) and not is_heading_filler(c.text) for c in cells)
+    figures = sum(
+        looks_like_value(c) and not is_heading_filler(c.text) and not begins_with_unit(c.text) for c in cells
+    )
     below = max(sum(looks_like_value(c) for c in marks.rows[r]) for r in following)
     return len(words) == len(cells) > 1 and not figures and below > 1
 
