@@ -35,8 +35,8 @@ WIDEST_SECTOR_DEG = 180.0
 COLUMN_PRODUCT = 35_000.0
 """Directivity × width × width [deg²] of a uniform column: 8 at 0.8 λ, 18.3 dBi, 65° × 8° (computed)."""
 
-SHORT_FORMULA_WITHIN_DB = 0.15
-"""A system-model figure is printed to 0.1 dB; rounding stays within this [dB]."""
+SHORT_FORMULA_WITHIN_DB, MOST_RANGE_DB = 0.15, 1.0
+"""Rounding of a system-model figure; half range of a gain of which either end may be the expected one [dB]."""
 
 
 def number(reading: Reading | None) -> float | None:
@@ -190,7 +190,8 @@ def _edges(model: Model, claims: Claims, beam: BeamGain) -> _Edges:
 def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) -> Judgement:
     if "element_gain_dbi" in gain.at:
         return _against_short_formula(model, gain)
-    slack, value = last_digit_slack(gain), gain.nominal
+    half = (gain.value[1] - gain.value[0]) / 2 if isinstance(gain.value, tuple) else 0.0
+    slack, value = max(last_digit_slack(gain), min(half, MOST_RANGE_DB), 0.05), gain.nominal
     ranked = [(claims, beam, _edges(model, claims, beam)) for claims, beam in held]
     order = [GainZone.PLAUSIBLE, GainZone.LOW, GainZone.QUESTION, GainZone.IMPOSSIBLE]
     claims, beam, edges = min(
