@@ -36,7 +36,7 @@ COLUMN_PRODUCT = 35_000.0
 """Directivity × width × width [deg²] of a uniform column: 8 at 0.8 λ, 18.3 dBi, 65° × 8° (computed)."""
 
 SHORT_FORMULA_WITHIN_DB, MOST_RANGE_DB = 0.15, 1.0
-"""Rounding of a system-model figure; half range of a gain of which either end may be the expected one [dB]."""
+"""Rounding of a system-model figure; half range of a gain whose either end may be the expected one [dB]."""
 
 
 def number(reading: Reading | None) -> float | None:
