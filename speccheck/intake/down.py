@@ -213,7 +213,7 @@ class DownReader:
         )
         draft = self._panels.of(column)
         banded = band is not None or bool(name)
-        draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance))
+        draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance(column)))
         self._panels.note(draft, label)
         if band is not None and band not in draft.bands:
             draft.bands.append(band)

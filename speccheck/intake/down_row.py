@@ -12,10 +12,10 @@ from speccheck.intake.labels import Label, Labels
 
 @dataclass(slots=True)
 class RowCells:
-    """Qualifying cells of a row; `units` by column, as a table may have several unit columns."""
+    """Qualifying cells of a row; units and tolerances by column, as a table may have several such columns."""
 
     condition: Cell | None = None
-    tolerance: Cell | None = None
+    tolerances: dict[int, Cell] = field(default_factory=dict)
     band: Cell | None = None
     units: dict[int, Cell] = field(default_factory=dict)
 
@@ -23,6 +23,11 @@ class RowCells:
     def condition_text(self) -> str:
         """Text of the condition cell."""
         return self.condition.text if self.condition else ""
+
+    def tolerance(self, column: Column) -> Cell | None:
+        """The tolerance of a column: the next one after it, or the only one of the row's table."""
+        after = [index for index in self.tolerances if index > column.index]
+        return self.tolerances[min(after)] if after else next(iter(self.tolerances.values()), None)
 
     def unit(self, column: Column) -> str:
         """The unit that holds for a column: of several the nearest, after it rather than before it."""
@@ -48,7 +53,7 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
             if cell is not None and column.role == "condition":
                 conditions.append(cell)
             elif cell is not None:
-                found.tolerance = found.tolerance or cell
+                found.tolerances[index] = cell
     found.condition = conditions[0] if conditions else None
     return found
 

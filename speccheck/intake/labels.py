@@ -27,6 +27,10 @@ _TILTS = re.compile(
 )
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
 _DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
+_BAND_WORD = re.compile(
+    r"\b(?:(?:in|im|en|dans|na|w|nel\w*|la|der|the)\s+)*(?:sub-?)?(?:band|bande|banda|pasmo|pasmie|teilband)\b",
+    re.I,
+)
 _UNIT_BRACKET = re.compile(r"\s*[(\[][^()\[\]\d]{1,8}[)\]]\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _LISTED_IN_BRACKET = re.compile(
@@ -155,6 +159,8 @@ class Labels:
     def _with_bands(self, text: str) -> Label:
         bands = find_bands(text)
         inner = self._match(_tidy(bands.rest)) if bands.spans and bands.rest else Label(text)
+        if not inner and bands.spans:
+            inner = self._match(_tidy(_BAND_WORD.sub(" ", bands.rest)))
         return replace(inner, bands=bands) if inner else inner
 
     def letter(self, text: str) -> Label:

@@ -48,6 +48,7 @@ def column_role(text: str) -> str:
 
 
 _LEANINGS = (
+    ("tolerance", r"^tol\b|toleran[zct]|tolleran"),
     ("remark", r"\bremark|\bcomment|bemerkung|anmerkung|remarque|observa[cç]|uwagi|opmerking|justification"),
     ("compliance", r"\bcompl(?:y|ies|iance|iant)\b|konformit|conformit"),
     ("offered", r"\boffer|\bbidder|\btenderer|\bsupplier|\bvendor|angebot|\bofert|\bpropos|aangebod|oferow"),

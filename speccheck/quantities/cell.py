@@ -29,6 +29,10 @@ Raw = str | float | int | bool | datetime | date | time | timedelta | None
 _LONGEST_TEXT = 1000
 _POLARISATIONS = (1, 2, 3, 4)
 _PLAIN = re.compile(r"-?[0-9]{1,4}(?:[.,][0-9]{1,2})?")
+_TOLERANCE_WORD = re.compile(
+    r"[,;(]?\s*\b(?:toleran[cz]\w*|tolérance|tolerância|tolleranza|tolerantie)\s*(?:of|von|de|di|:)?\s*(?=[±+])",
+    re.IGNORECASE,
+)
 _FORMAT_UNIT = re.compile(r'["\[ \\]([^"\]\\;]+?)["\]\\;]*$')
 
 
@@ -107,7 +111,7 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     if status:
         return CellContent(status=status, notes=(raw.strip(),) if status == "declared" else ())
     body, marks = split_footnotes(raw, bracketed=wanted.kind in ("number", "range", "scan", "size"))
-    text = tidy(body)
+    text = _TOLERANCE_WORD.sub(" ", tidy(body))
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
     content = time_share(text, wanted) or with_usual_unit(_read_figures(text, wanted), wanted)

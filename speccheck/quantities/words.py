@@ -29,7 +29,8 @@ def roles() -> dict[str, tuple[tuple[str, str], ...]]:
         for name, phrases in _tables()[section].items():
             role = ("statistic", name) if section == "statistic" else (name, "")
             for phrase in phrases:
-                table[phrase] = (*table.get(phrase, ()), role)
+                key = phrase.casefold()
+                table[key] = (*table.get(key, ()), role)
     return table
 
 
@@ -42,16 +43,16 @@ def longest_phrase() -> int:
 @functools.cache
 def statuses() -> dict[str, str]:
     """Text of a whole cell to its status."""
-    return {phrase: status for status, phrases in _tables()["status"].items() for phrase in phrases}
+    return {p.casefold(): status for status, phrases in _tables()["status"].items() for p in phrases}
 
 
 @functools.cache
 def referrals() -> tuple[str, ...]:
     """Beginnings of a cell that points elsewhere."""
-    return tuple(_tables()["referred"]["beginnings"])
+    return tuple(beginning.casefold() for beginning in _tables()["referred"]["beginnings"])
 
 
 @functools.cache
 def word_set(name: str) -> frozenset[str]:
     """A plain list of the file: ``understood``, ``tilt``, ``answers``."""
-    return frozenset(_tables()[name]["words"])
+    return frozenset(word.casefold() for word in _tables()[name]["words"])
