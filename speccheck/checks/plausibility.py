@@ -9,6 +9,7 @@ from speccheck.dictionary import Parameter, parameters
 from speccheck.records import Amount, Fit, Interval, Reading, Step
 
 _NUMERIC = frozenset({"number", "count", "range", "scan", "bands"})
+_FIGURE_OR_WORDS = frozenset({"connectors", "polarisation", "size"})
 _MAY_BE_NAMED = frozenset({"bands", "scan"})
 
 
@@ -19,7 +20,9 @@ def impossible(reading: Reading) -> bool:
 
 def _trouble(reading: Reading) -> str:
     parameter = parameters().get(reading.parameter)
-    if parameter is None or parameter.kind not in _NUMERIC:
+    if parameter is None or parameter.kind not in _NUMERIC | _FIGURE_OR_WORDS:
+        return ""
+    if parameter.kind in _FIGURE_OR_WORDS and isinstance(reading.value, str):
         return ""
     if isinstance(reading.value, str):
         return "" if parameter.kind in _MAY_BE_NAMED else "is text where a figure belongs"
