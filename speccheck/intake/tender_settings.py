@@ -108,6 +108,14 @@ def _comma(text: str) -> bool:
     raise ValueError("'point' or 'comma'")
 
 
+@_setting("date_order", "Date habit", "Date order", "Date format")
+def _date_order(text: str) -> str:
+    known = {fold(name): name for name in ("iso", "day first", "month first")}
+    if fold(text) not in known:
+        raise ValueError("'iso', 'day first' or 'month first'")
+    return known[fold(text)]
+
+
 @_setting("issued", "Issued")
 def _yes_no(text: str) -> bool:
     if fold(text) in _TRUE:

@@ -98,6 +98,7 @@ class Settings:
     headings: Mapping[str, str] = field(default_factory=dict)
     paper: str = "A4"
     decimal_comma: bool = False
+    date_order: str = "iso"
     report_number: str = ""
     revision: str = ""
     issued: bool = False

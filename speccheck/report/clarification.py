@@ -76,7 +76,7 @@ def clarification_bytes(assessment: Assessment) -> bytes:
 
 def render_clarification(assessment: Assessment, taken: Sequence[TakenAnswer] = ()) -> str:
     """The clarification list as a page to send, or with the answers that came back."""
-    numbers = Numbers(assessment.settings.decimal_comma)
+    numbers = Numbers(assessment.settings.decimal_comma, assessment.settings.date_order)
     questions = questions_of(assessment)
     return render(
         "clarification.html",
@@ -130,7 +130,7 @@ def _stated(assessment: Assessment, question: Question) -> tuple[str, ...]:
 
 
 def _questions(assessment: Assessment) -> Table:
-    numbers = Numbers(assessment.settings.decimal_comma)
+    numbers = Numbers(assessment.settings.decimal_comma, assessment.settings.date_order)
     rows = []
     for question in questions_of(assessment):
         cells = [str(where) for where in question.where]
@@ -182,7 +182,7 @@ def _questions(assessment: Assessment) -> Table:
 
 
 def _answers(assessment: Assessment, taken: Sequence[TakenAnswer]) -> Table:
-    numbers = Numbers(assessment.settings.decimal_comma)
+    numbers = Numbers(assessment.settings.decimal_comma, assessment.settings.date_order)
     rows = [
         (
             one.answer.number,

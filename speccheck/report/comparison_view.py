@@ -116,7 +116,7 @@ class Comparison:
 def compare(evaluation: Evaluation) -> Comparison:
     """Put an evaluation in reading order: offers by place, the rejected ones first as they decide most."""
     columns = tuple(_columns(evaluation))
-    numbers = Numbers(evaluation.settings.decimal_comma)
+    numbers = Numbers(evaluation.settings.decimal_comma, evaluation.settings.date_order)
     shown = columns[:MOST_COLUMNS]
     requirements = evaluation.tender.requirements if evaluation.tender else ()
     rows = [(c.number, c.name, c.offer) for c in shown]

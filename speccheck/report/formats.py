@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import datetime as dt
 import math
 import re
 from dataclasses import dataclass
@@ -42,11 +43,30 @@ _POWER_OF_TEN = re.compile(r"(?<![\w.])\d(?:\.\d+)?e\+\d+")
 _DECIMAL_IN_FORMULA = re.compile(r"(?<=\d)\.(?=\d)")
 
 
+_MONTHS = (
+    "January", "February", "March", "April", "May", "June",
+    "July", "August", "September", "October", "November", "December",
+)  # fmt: skip
+
+
 @dataclass(frozen=True, slots=True)
 class Numbers:
-    """The number habits of a report: decimal comma or decimal point."""
+    """The habits of a report: decimal comma or point; dates as ISO 8601, day first or month first."""
 
     decimal_comma: bool = False
+    date_order: str = "iso"
+
+    def day(self, text: str) -> str:
+        """An ISO date in the order of the page, the month in letters; other text as it stands."""
+        try:
+            day = dt.date.fromisoformat(text)
+        except ValueError:
+            return text
+        if self.date_order == "day first":
+            return f"{day.day} {_MONTHS[day.month - 1]} {day.year}"
+        if self.date_order == "month first":
+            return f"{_MONTHS[day.month - 1]} {day.day}, {day.year}"
+        return text
 
     def plain(self, value: float, decimals: int | None = None) -> str:
         """A number with `decimals` digits after the sign, or as many as it was stated with."""

@@ -50,7 +50,7 @@ def render(template: str, paper: str, numbers: Numbers, **context: Any) -> str:
     """
     style = _stylesheet(PAPERS.get(paper.lower(), "A4"))
     script = _asset("report.js")
-    page = _environment(numbers.decimal_comma).get_template(template)
+    page = _environment(numbers).get_template(template)
     return page.render(
         style=Markup(style),  # noqa: S704 - the program's own style sheet and script
         script=Markup(script),  # noqa: S704
@@ -94,8 +94,7 @@ class _CompiledTemplates(jinja2.BytecodeCache):
 
 
 @functools.cache
-def _environment(decimal_comma: bool) -> jinja2.Environment:
-    numbers = Numbers(decimal_comma)
+def _environment(numbers: Numbers) -> jinja2.Environment:
     environment = jinja2.Environment(
         loader=jinja2.FileSystemLoader(templates_folder()),
         autoescape=True,
@@ -117,6 +116,7 @@ def _environment(decimal_comma: bool) -> jinja2.Environment:
         interval=numbers.interval,
         band=numbers.band,
         number=numbers.plain,
+        day=numbers.day,
         prose=numbers.prose,
         formula=numbers.formula,
         metres_up=numbers.rounded_up,

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import textwrap
 from collections.abc import Callable, Iterable
 
 from speccheck.records import Band, Compliance, Finding, Fit, Interval, MatrixRow, PanelAssessment
@@ -25,17 +26,16 @@ MOST_ROWS = 24
 
 def margin_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Figure | None:
     """Signed margins, in dB or as a share of the limit, so that no axis mixes units."""
-    rows = [(row, share) for row in panel.requirements if (share := _margin_share(row)) is not None][
-        :MOST_ROWS
-    ]
-    if not rows:
+    every = [(row, share) for row in panel.requirements if (share := _margin_share(row)) is not None]
+    if not every:
         return None
+    least = sorted(range(len(every)), key=lambda i: every[i][1])[:MOST_ROWS]
+    rows = [every[i] for i in sorted(least)]
     canvas = Canvas(FULL, 40 + 20 * len(rows), numbers)
     scale = Scale(-1, 1, 300, 520)
     bottom = 22 + 20 * len(rows)
     canvas.write(scale(-1), 12, "outside the limit", style="small")
     canvas.write(scale(1), 12, "inside the limit", "end", "small")
-    table = []
     for i, (row, share) in enumerate(rows):
         y = 26 + 20 * i
         name = _row_name(row, numbers, label)
@@ -48,23 +48,30 @@ def margin_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Fig
             canvas.box(min(end, scale(0)), y, abs(end - scale(0)), 9, mark.tone)
         written = numbers.signed(row.margin or 0.0, row.requirement.unit)
         canvas.write(528, y + 8, f"{mark.symbol} {written}", style="text")
-        table.append((name, mark.word, written))
     canvas.line(((scale(0), 18), (scale(0), bottom)), "zero")
     canvas.write(scale(0), bottom + 14, "full bar: 3 dB, or 20 % of the limit", "middle", "small")
-    short = sum(1 for row, _ in rows if (row.margin or 0) < 0)
+    short = sum(1 for row, _ in every if (row.margin or 0) < 0)
     title = (
-        f"{short} of {len(rows)} numeric rows are outside their limit"
+        f"{short} of {len(every)} numeric rows are outside their limit"
         if short
-        else (f"{_all(len(rows), 'numeric row')} on the good side of the limit")
+        else (f"{_all(len(every), 'numeric row')} on the good side of the limit")
     )
+    drawn = f" The {len(rows)} rows with the least margin are drawn." if len(rows) < len(every) else ""
     return canvas.figure(
         title,
         "Margin of every numeric requirement in the parameter’s own good direction; bars end at the edge of "
-        f"the scale. Closest to its limit: {_closest(rows, numbers, label)}.",
+        f"the scale. Closest to its limit: {_closest(every, numbers, label)}.{drawn}",
         where=tuple(dict.fromkeys(row.offered.where for row, _ in rows if row.offered)),
         kind="margins",
         columns=("Requirement", "Verdict", "Margin"),
-        rows=tuple(table),
+        rows=tuple(
+            (
+                _row_name(row, numbers, label),
+                mark_for(row.verdict).word,
+                numbers.signed(row.margin or 0.0, row.requirement.unit),
+            )
+            for row, _ in every
+        ),
     )
 
 
@@ -110,8 +117,9 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     for i, finding in enumerate(shown):
         y = 14 + 34 * i
         mark = mark_for(finding.verdict)
-        title = finding.title if len(finding.title) <= 46 else finding.title[:45] + "…"
-        canvas.write(4, y + 8, title, style="text")
+        lines = textwrap.wrap(finding.title, 46, max_lines=2, placeholder="…")
+        for at, line in enumerate(lines):
+            canvas.write(4, y + (8 if len(lines) == 1 else 2 + 13 * at), line, style="text")
         _interval_row(canvas, finding, y, mark.tone)
         canvas.write(548, y + 8, f"{mark.symbol} {mark.word}", style="strong")
         table.append(

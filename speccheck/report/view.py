@@ -140,7 +140,7 @@ class ReportView:
 
 def build_view(assessment: Assessment) -> ReportView:
     """Put an assessment in reading order."""
-    numbers = Numbers(assessment.settings.decimal_comma)
+    numbers = Numbers(assessment.settings.decimal_comma, assessment.settings.date_order)
     questions = collect_questions(assessment, label)
     panels = tuple(
         _panel_view(i, panel, assessment, questions, numbers)
@@ -175,7 +175,15 @@ def fingerprint(assessment: Assessment) -> str:
 def rules_fingerprint(settings: Settings, tender: Tender | None, program_version: str) -> str:
     """SHA-256 over settings, tender and program version: the same rules give the same one in every output."""
     rules = asdict(settings)
-    for not_a_rule in ("today", "report_number", "revision", "issued", "paper", "decimal_comma"):
+    for not_a_rule in (
+        "today",
+        "report_number",
+        "revision",
+        "issued",
+        "paper",
+        "decimal_comma",
+        "date_order",
+    ):
         rules.pop(not_a_rule, None)
     rules["program"] = program_version
     rules["tender_file"] = tender.sha256 if tender else ""

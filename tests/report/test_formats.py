@@ -75,3 +75,12 @@ def test_margins_carry_their_sign() -> None:
 def test_compliance_distances_are_rounded_up(metres: float, written: str) -> None:
     # 5 m and 8 m together: √(25 + 64) = 9.43 m, printed as 9.5 m
     assert POINT.rounded_up(metres).startswith(written)
+
+
+@pytest.mark.parametrize(
+    ("order", "written"),
+    [("iso", "2027-03-31"), ("day first", "31 March 2027"), ("month first", "March 31, 2027")],
+)
+def test_dates_follow_the_habit_and_name_the_month(order: str, written: str) -> None:
+    assert Numbers(date_order=order).day("2027-03-31") == written
+    assert Numbers(date_order=order).day("") == ""

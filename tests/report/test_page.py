@@ -14,6 +14,7 @@ from report.sample import OUTLINE, PANEL, SUBMISSION, sample
 from report.strategies import assessments
 
 from speccheck.records import Assessment, Compliance, ExposureNote, Fit, Level, Panel, Unread
+from speccheck.report.formats import Numbers
 from speccheck.report.html import _environment, render_html
 from speccheck.report.view import build_view
 
@@ -258,7 +259,7 @@ def test_the_same_assessment_gives_the_same_page() -> None:
 
 
 def test_an_undefined_name_in_a_template_is_an_error() -> None:
-    template = _environment(False).from_string("{{ viw.panels }}")
+    template = _environment(Numbers()).from_string("{{ viw.panels }}")
     with pytest.raises(jinja2.UndefinedError):
         template.render()
 
