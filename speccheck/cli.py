@@ -31,6 +31,7 @@ class Exit(IntEnum):
     CLARIFY_OR_REJECT = 1
     WRONG_USAGE = 2
     UNUSABLE_INPUT = 3
+    INTERRUPTED = 130
 
 
 EXIT_CODES = """\b
@@ -38,7 +39,8 @@ Exit codes:
   0  everything is acceptable
   1  something to clarify or to reject
   2  wrong usage
-  3  an input could not be used (the rest was still done)"""
+  3  an input could not be used (the rest was still done)
+  130  interrupted; what is written is whole"""
 
 _path = click.Path(path_type=Path)
 
@@ -111,16 +113,17 @@ def check(
     from speccheck.batch import assess_many
 
     tender_file, tender = _tender(bids, tender_file)
-    evaluation = assess_many(
-        bids,
-        out=out,
-        tender=tender,
-        tender_file=tender_file,
-        formats=formats,
-        jobs=jobs,
-        resume=resume,
-        progress=_show_progress,
-    )
+    with screen.stoppable(Exit.INTERRUPTED):
+        evaluation = assess_many(
+            bids,
+            out=out,
+            tender=tender,
+            tender_file=tender_file,
+            formats=formats,
+            jobs=jobs,
+            resume=resume,
+            progress=_show_progress,
+        )
     if not evaluation.bids:
         raise click.UsageError(
             f"no bid found in {', '.join(map(str, bids))}: name a workbook or a folder with some"

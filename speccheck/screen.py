@@ -2,7 +2,10 @@
 
 from __future__ import annotations
 
+import signal
+import sys
 from collections.abc import Iterable, Iterator, Sequence
+from contextlib import contextmanager
 from textwrap import wrap
 
 from speccheck.checks.registry import Check
@@ -14,6 +17,28 @@ from speccheck.text import plain
 _SYMBOLS = {Outcome.ACCEPTABLE: "✓", Outcome.CLARIFY: "?", Outcome.REJECT: "×"}
 _WIDTH = 100
 _SECTIONS = ("Formula", "Assumptions", "Worked example")
+
+
+@contextmanager
+def stoppable(code: int) -> Iterator[None]:
+    """End the program with `code` and a message on an interrupt (Ctrl-C).
+
+    The first interrupt lets other processes finish their bids, a second one ends at once.
+    """
+
+    def stop(_number: int, _frame: object) -> None:
+        signal.signal(signal.SIGINT, signal.SIG_DFL)
+        print("\nspeccheck: interrupted; bids under way in other processes are finished", file=sys.stderr)  # noqa: T201
+        raise KeyboardInterrupt
+
+    before = signal.signal(signal.SIGINT, stop)
+    try:
+        yield
+    except KeyboardInterrupt:
+        print("speccheck: stopped; every file written is whole, --resume does the rest", file=sys.stderr)  # noqa: T201
+        sys.exit(code)
+    finally:
+        signal.signal(signal.SIGINT, before)
 
 
 def progress_line(done: int, total: int, bid: Bid) -> str:

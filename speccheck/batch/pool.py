@@ -6,6 +6,7 @@ one bid at a time, and a bid on which the process dies once more is named as unu
 
 from __future__ import annotations
 
+import gc
 import multiprocessing
 import os
 import signal
@@ -13,12 +14,15 @@ from collections.abc import Iterator, Sequence
 from concurrent.futures import FIRST_COMPLETED, Future, ProcessPoolExecutor, wait
 from concurrent.futures.process import BrokenProcessPool
 from contextlib import contextmanager
+from threading import Thread
 
 from speccheck.batch.inputs import BidFile
 from speccheck.batch.work import Rules, do_bid, failed
 from speccheck.records.evaluations import Bid
 
 _QUEUED_PER_PROCESS = 2
+_COLLECT_AFTER = 50_000
+"""New objects between two searches for cycles, as for the whole program: records hold none."""
 _ONE_THREAD = ("OMP_NUM_THREADS", "OPENBLAS_NUM_THREADS", "MKL_NUM_THREADS")
 _rules: list[Rules] = []
 
@@ -92,7 +96,17 @@ def _pool(jobs: int, rules: Rules) -> Iterator[ProcessPoolExecutor]:
 def _start(rules: Rules) -> None:
     """An interrupt is for the parent: bids under way are finished, none is begun."""
     signal.signal(signal.SIGINT, signal.SIG_IGN)
+    gc.set_threshold(_COLLECT_AFTER)
+    Thread(target=_end_with_parent, daemon=True).start()
     _rules[:] = [rules]
+
+
+def _end_with_parent() -> None:
+    """A parent that was killed can't stop its processes, and they would wait for work for ever."""
+    parent = multiprocessing.parent_process()
+    if parent is not None:
+        parent.join()
+        os._exit(1)
 
 
 def _do(bid: BidFile) -> Bid:

@@ -15,6 +15,7 @@ from typing import Any, Literal
 from speccheck.atomic import write_bytes_atomic
 from speccheck.text import plain
 
+_UNDATED = dt.datetime(2000, 1, 1, tzinfo=dt.UTC)
 VARIANT = "pdf/a-3a"
 """Form in which the file is written: tags and attachments need it. No validator has confirmed a level."""
 
@@ -107,8 +108,6 @@ def _import_weasyprint() -> Any:
 
 
 def _moment() -> dt.datetime:
-    """Date of the attachments: SOURCE_DATE_EPOCH, else the start of today."""
-    epoch = os.environ.get("SOURCE_DATE_EPOCH")
-    if epoch:
-        return dt.datetime.fromtimestamp(int(epoch), dt.UTC)
-    return dt.datetime.now(dt.UTC).replace(hour=0, minute=0, second=0, microsecond=0)
+    """Date of the attachments: SOURCE_DATE_EPOCH, else none of any meaning, so that a run can be repeated."""
+    epoch = os.environ.get("SOURCE_DATE_EPOCH", "")
+    return dt.datetime.fromtimestamp(int(epoch), dt.UTC) if epoch.isdigit() else _UNDATED
