@@ -21,11 +21,13 @@ sys.path.insert(0, str(Path(__file__).resolve().parents[1]))
 
 from intake.corpus_bids_cells import CELLS
 from intake.corpus_bids_hard import HARD
+from intake.corpus_bids_headings import HEADINGS
 from intake.corpus_bids_layouts import LAYOUTS
+from intake.corpus_bids_sides import SIDES
 from intake.corpus_texts import TEXTS
 
 CORPUS = Path(__file__).parent / "corpus"
-WORKBOOKS = {**LAYOUTS, **CELLS, **HARD}
+WORKBOOKS = {**LAYOUTS, **CELLS, **HARD, **HEADINGS, **SIDES}
 FIXED = datetime(2026, 1, 1)  # noqa: DTZ001 - openpyxl writes naive times
 
 

@@ -28,3 +28,9 @@ def sheet(book: Workbook, title: str, rows: Sequence[Row] = (), corner: str = "A
     made.title = title
     place(made, corner, rows)
     return made
+
+
+def merge(made: Worksheet, areas: str) -> None:
+    """Merge areas such as ``A1:B1 C3:C5``."""
+    for area in areas.split():
+        made.merge_cells(area)

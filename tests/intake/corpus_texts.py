@@ -76,6 +76,39 @@ UNSETTLED = [
     ["Wind load, frontal", "1,234 N"],
     ["Weight", "21 kg"],
 ]
+GERMAN = [
+    ["Angebot Felsa Funktechnik"],
+    ["Angebotener Typ: Felsa 17X"],
+    [],
+    ["Merkmal", "Wert", "Einheit", "Bemerkung"],
+    ["Frequenzbereich", "1.710 – 2.200", "MHz"],
+    ["Polarisation", "±45", "°", "Doppelslant"],
+    ["Gewinn", "17,3 +/- 0,5", "dBi", "Bandmitte"],
+    ["Öffnungswinkel horizontal (-3 dB)", "65 +/- 4", "°"],
+    ["Öffnungswinkel vertikal (-3 dB)", "7,1", "°"],
+    ["Elektrische Absenkung", "2 bis 10", "°", "fernsteuerbar"],
+    ["Nebenzipfelunterdrückung oberhalb der Hauptkeule", "min. 17", "dB"],
+    ["Vor-/Rückverhältnis", "mind. 26", "dB"],
+    ["Kreuzpolarentkopplung (0°)", "mind. 19", "dB"],
+    ["Stehwellenverhältnis", "max. 1,5"],
+    ["Entkopplung zwischen den Eingängen", "mind. 30", "dB"],
+    ["Belastbarkeit je Eingang", "300", "W"],
+    ["Höhe", "1.310", "mm"],
+    ["Breite", "160", "mm"],
+    ["Tiefe", "92", "mm"],
+    ["Gewicht ohne Halterung", "10,1", "kg", "mit Halterung 13,4 kg"],
+    ["Windlast frontal bei 150 km/h", "280", "N"],
+    ["Überlebenswindgeschwindigkeit", "200", "km/h"],
+]  # fmt: skip
+EDGES = [
+    ["Model", "Freq low, MHz", "Freq high, MHz", "Gain, dBi", "Gain tol., dB", "Az HPBW, deg", "El HPBW, deg", "Height, mm", "Weight, kg"],
+    ["CS-10", "694", "960", "14.0", "0.5", "60", "5.0", "1,000", "8.0"],
+    ["CS-11", "1695", "2690", "14.1", "0.5", "61", "5.2", "1,040", "8.5"],
+    ["CS-12", "3300", "3800", "14.2", "0.5", "62", "5.4", "1,080", "9.0"],
+    ["CS-13", "694", "960", "14.3", "0.5", "63", "5.6", "1,120", "9.5"],
+    ["CS-14", "1695", "2690", "14.4", "0.5", "64", "5.8", "1,160", "10.0"],
+    ["CS-15", "3300", "3800", "14.5", "0.5", "65", "6.0", "1,200", "10.5"],
+]  # fmt: skip
 
 TEXTS: dict[str, tuple[list[list[str]], str, str]] = {
     "t01_french.csv": (FRENCH, "utf-8", ";"),
@@ -84,5 +117,7 @@ TEXTS: dict[str, tuple[list[list[str]], str, str]] = {
     "t04_polish.csv": (POLISH, "utf-8-sig", ";"),
     "t05_english_thousands.csv": (ENGLISH_THOUSANDS, "cp1252", ","),
     "t06_unsettled.csv": (UNSETTLED, "utf-8", ","),
+    "t07_german.csv": (GERMAN, "utf-16", ";"),
+    "t08_band_edges.csv": (EDGES, "utf-8", ","),
 }
 """File name to rows, encoding and delimiter."""
