@@ -113,7 +113,7 @@ def is_band_nickname(text: str) -> bool:
     if folded in words["nickname"]:
         return True
     return bool(re.fullmatch(r"(?:r|b|y|l|m|h|lb|mb|hb)[1-9]\d?", folded)) or any(
-        re.fullmatch(re.escape(start) + r"s?[ -]?(?:\d|[a-h]|[ivx]+)\b.{0,20}", folded)
+        re.fullmatch(re.escape(start) + r"s?(?:[ -]?\d|[ -](?:[a-h]|[ivx]+))\b.{0,20}", folded)
         for start in words["starts"]
     )
 
