@@ -91,6 +91,7 @@ def _requirements(row: Row, habits: Habits) -> Iterator[Requirement]:
     for clause in clauses:
         doubts = list(clause.doubts)
         if not level_known:
+            doubts = [text for text in doubts if doubt_code(text) != "LEVEL"]
             doubts.append(doubt("LEVEL", f"'{row.text('level')}' is none of {LEVEL_WORDS}"))
         if not parameter_known:
             doubts.append(doubt("PARAMETER", f"'{row.text('parameter')}' is not in the dictionary"))

@@ -12,6 +12,7 @@ from speccheck.errors import UnusableInputError
 from speccheck.intake.grid import Grid
 from speccheck.intake.opening import Book, open_book
 from speccheck.intake.phrases import CONTRADICTING_LEVELS, Habits
+from speccheck.intake.requirement_columns import LEVEL_WORDS
 from speccheck.intake.requirements import COLUMNS, ReadRow, read_requirements
 from speccheck.intake.tender_references import resolved
 from speccheck.intake.tender_settings import read_deviations, read_headings, read_settings
@@ -47,9 +48,10 @@ def read_tender(path: str | Path) -> Tender:
     deviations, more = (
         read_deviations(sheets["deviations"], book.file) if "deviations" in sheets else ((), ())
     )
-    settings = _dated(
-        replace(settings, tender=settings.tender or book.file, tender_sha256=book.sha256), deviations
-    )
+    settings = replace(settings, tender=settings.tender or book.file, tender_sha256=book.sha256)
+    dated = _dated(settings, deviations)
+    undated = tuple(_undated(settings, dated, deviations))
+    settings = dated
     requirements = tuple(r for row in rows for r in row.requirements)
     return Tender(
         file=book.file,
@@ -61,6 +63,7 @@ def read_tender(path: str | Path) -> Tender:
         findings=(
             *troubles,
             *more,
+            *undated,
             *_row_troubles(rows),
             *_duplicates(rows),
             *_deviation_troubles(deviations, {r.clause for r in requirements}, settings.today),
@@ -115,6 +118,13 @@ def _dated(settings: Settings, deviations: tuple[Deviation, ...]) -> Settings:
     return replace(settings, today=day.date().isoformat())
 
 
+def _undated(stated: Settings, dated: Settings, deviations: tuple[Deviation, ...]) -> Iterator[Finding]:
+    if dated.today != stated.today:
+        summary = f"no Evaluation date is set, so expiry was judged by the day of the run, {dated.today}"
+        ask = "Set the Evaluation date on the sheet Settings, so that the evaluation can be repeated."
+        yield trouble("tender-deviations", "Accepted deviations", deviations[0].where, summary, ask)
+
+
 def _unread(found: Table, rows: Iterable[ReadRow], file: str) -> Iterator[Unread]:
     for cell in found.unknown:
         where = CellRef(file, "Requirements", cell.address)
@@ -138,13 +148,23 @@ def _row_troubles(rows: Iterable[ReadRow]) -> Iterator[Finding]:
             yield trouble(
                 "tender-requirement-rows", "Requirement rows", where, summary, ask, verdict=Fit.NOT_JUDGED
             )
+        if row.row.text("weight") and row.requirements[0].weight is None:
+            clause, found = row.requirements[0].clause, row.row.text("weight")
+            summary = f"clause {clause}: found '{found}' as weight; expected a number; the row has none"
+            ask = "Correct the weight."
+            yield trouble("tender-weights", "Weights", row.row.where("weight"), summary, ask)
         yield from _level_troubles(row)
 
 
 def _level_troubles(row: ReadRow) -> Iterator[Finding]:
     doubts = [text for r in row.requirements for text in r.doubts if doubt_code(text) == "LEVEL"]
     title, level = "Levels of requirements", row.row.text("level")
-    if any(CONTRADICTING_LEVELS in text for text in doubts):
+    unknown = [text for text in doubts if LEVEL_WORDS in text]
+    if unknown:
+        first = row.requirements[0]
+        summary = f"clause {first.clause}: level {unknown[0].partition('; ')[2]}; read as {first.level.value}"
+        yield trouble("tender-levels", title, row.row.where("level"), summary, "Use one of these words.")
+    elif any(CONTRADICTING_LEVELS in text for text in doubts):
         first = row.requirements[0]
         summary = f"clause {first.clause}: {CONTRADICTING_LEVELS}; read as {first.level.value}"
         yield trouble("tender-levels", title, first.where, summary, "Use words of one level.")

@@ -11,7 +11,7 @@ import math
 import types
 import typing
 from collections.abc import Mapping
-from dataclasses import fields, is_dataclass
+from dataclasses import MISSING, fields, is_dataclass
 from enum import StrEnum
 from typing import Any, Union
 
@@ -104,9 +104,15 @@ def _decode_scalar(hint: type, data: Json) -> Any:
 
 
 def decode_fields(record: type, data: dict[str, Json], home: str, **given: object) -> Any:
-    """Return a record from its fields by name; `given` holds those that are already at hand."""
-    hints = _hints(record)
-    read = {name: decode(hint, data[name], home) for name, hint in hints.items() if name not in given}
+    """Return a record from its fields by name; `given` holds those that are already at hand.
+
+    A field with a default may be absent: an earlier program did not know it.
+    """
+    wanted = ((name, hint) for name, hint in _hints(record).items() if name not in given)
+    optional = _optional(record)
+    read = {
+        name: decode(hint, data[name], home) for name, hint in wanted if name in data or name not in optional
+    }
     return record(**read, **given)
 
 
@@ -142,6 +148,15 @@ def _names(record: type) -> tuple[str, ...]:
     if not is_dataclass(record):
         raise TypeError(f"{record.__name__} is not a record")
     return tuple(field.name for field in fields(record))
+
+
+@functools.cache
+def _optional(record: Any) -> frozenset[str]:
+    return frozenset(
+        field.name
+        for field in fields(record)
+        if field.default is not MISSING or field.default_factory is not MISSING
+    )
 
 
 @functools.cache

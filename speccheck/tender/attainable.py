@@ -33,9 +33,18 @@ class Size:
 def attainability(rows: Sequence[Demanded], requirements: Sequence[Requirement]) -> Iterator[Finding]:
     """Findings on mandatory gain and beamwidth rows against size and frequency, band by band."""
     duties = [row for row in rows if row.requirement.level is Level.MANDATORY]
+    duties += _nominal_widths(requirements)
     for band in _bands(duties, requirements):
         yield from _gain(duties, requirements, band)
         yield from _widths(duties, requirements, band)
+
+
+def _nominal_widths(requirements: Sequence[Requirement]) -> Iterator[Demanded]:
+    """Beamwidths named without tolerance ('65°'): no limit for an offer, but what the buyer has in mind."""
+    for r in requirements:
+        bare = r.operator == "information" and r.level is Level.MANDATORY
+        if bare and r.parameter == "horizontal_beamwidth" and isinstance(r.limit, float | int):
+            yield Demanded(r, float(r.limit), float(r.limit), "deg")
 
 
 def _bands(duties: Sequence[Demanded], requirements: Sequence[Requirement]) -> tuple[Band, ...]:

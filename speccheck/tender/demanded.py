@@ -62,7 +62,8 @@ def named(requirement: Requirement) -> str:
     """'clause 4.2 (Gain ≥ 17 dBi)'."""
     known = parameters().get(requirement.parameter)
     label = known.label if known else requirement.wording[:60]
-    demand = f"{label} {requirement.operator} {_figure(requirement)} {requirement.unit}".rstrip()
+    operator = "nominally" if requirement.operator == "information" else requirement.operator
+    demand = f"{label} {operator} {_figure(requirement)} {requirement.unit}".rstrip()
     return f"clause {requirement.clause or requirement.where} ({demand})"
 
 

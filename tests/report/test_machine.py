@@ -54,6 +54,13 @@ def test_members_and_order_of_the_contract(bid):
     assert row["where"] == {"file": "tender.xlsx", "sheet": "Requirements", "cell": "B2"}
 
 
+def test_a_result_of_an_earlier_program_lacks_members_that_came_later(bid):
+    """Members may be added within a version of the schema; what has a default may be absent."""
+    document = json.loads(to_json(bid))
+    del document["settings"]["country_factor"]
+    assert from_json(json.dumps(document)) == from_json(to_json(bid))
+
+
 def test_mirror_stays_in_the_input_file(bid):
     assert bid.submission.mirror
     assert from_json(to_json(bid)).submission.mirror == ()

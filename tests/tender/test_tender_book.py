@@ -206,6 +206,15 @@ def test_group_labels_are_listed_and_not_judged(tmp_path: Path) -> None:
     assert any(u.text == "Electrical" for u in tender.unread)
 
 
+def test_a_weight_that_is_no_number_and_a_missing_evaluation_date_are_named(tmp_path: Path) -> None:
+    row = ["1", "Weight ≤ 20 kg", "D", None, None, None, None, None, None, "heavy", "yes"]
+    deviation = ["1", "bid5", "light mast", "head of planning", "2099-12-31"]
+    head = ["Clause", "Bidder or panel", "Reason", "Approver", "Expiry"]
+    tender = _tender(tmp_path, row, Deviations=[head, deviation])
+    assert any("'heavy' as weight" in text for text in _troubles(tender, "J2"))
+    assert any("no Evaluation date" in text for text in _troubles(tender, "A2"))
+
+
 def test_a_tender_given_as_bid_is_refused_by_name(tmp_path: Path) -> None:
     sheets = {"Settings": [["Setting", "Value"]]}
     path = write_tender(tmp_path / "tender.xlsx", [HEAD, ["1", "Gain ≥ 17 dBi", "M"]], **sheets)

@@ -47,6 +47,12 @@ def test_gain_out_of_reach_names_the_limiting_rows() -> None:
     assert "15.4 dBi" in finding.summary
 
 
+def test_a_beamwidth_without_tolerance_counts_too() -> None:
+    found = vet(_must(BOX[0], "Horizontal beamwidth 65°", BOX[2], "Gain shall be at least 17 dBi"))
+    assert [f.check for f in found] == ["tender-gain-attainable"]
+    assert "nominally 65 deg" in found[0].summary
+
+
 @pytest.mark.parametrize(("gain", "verdict"), [(14.5, None), (15.2, Fit.DOUBTFUL), (16.5, Fit.DOES_NOT_FIT)])
 def test_gain_just_within_reach_leaves_nothing_for_losses(gain: float, verdict: Fit | None) -> None:
     found = vet(_must(*BOX, f"Gain ≥ {gain} dBi"))
