@@ -20,9 +20,15 @@ _MOST_SUGGESTIONS = 300
 _MOST_MISSES = 5_000
 """More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
 _NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
+_AT = r"[,(]?\s*(?:at|@|bei|mit|for|für|à|a|con|com|przy|bij|vs\.?)?\s*"
+_TILT_WORD = (
+    r"(?:(?:electrical|electric|el\.|elektrisch\w*)\s*)?(?:down-?)?(?:tilts?|neigung\w*|absenkung\w*|inclinaison|"
+    r"inclinaci[oó]n|inclina[cç][aã]o|inclinazione|pochyleni\w*|nachyleni\w*|neiging)(?:\s+(?:angles?|el\w*))?"
+)
+_ANGLE = r"\d+(?:[.,]\d+)?\s*(?:°|deg\.?|grad\b)?"
+_ANGLES = rf"((?:{_ANGLE}\s*/\s*)+{_ANGLE})"
 _TILTS = re.compile(
-    r"[,(]?\s*(?:at|@|bei|for|für|à|a|przy|bij|vs\.?)?\s*(?:electrical\s+|el\.\s*)?(?:down-?)?(?:tilts?|neigung|inclinaison)"
-    r"\s*(?:of|=|:)?\s*((?:\d+(?:[.,]\d+)?\s*°?\s*/\s*)+\d+(?:[.,]\d+)?\s*°?)\s*[)]?\s*$",
+    rf"{_AT}(?:{_TILT_WORD}\s*(?:of|=|:)?\s*{_ANGLES}|{_ANGLES}\s*(?:of\s+)?{_TILT_WORD})\s*[)]?\s*$",
     re.IGNORECASE,
 )
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
@@ -31,7 +37,7 @@ _BAND_WORD = re.compile(
     r"\b(?:(?:in|im|en|dans|na|w|nel\w*|la|der|the)\s+)*(?:sub-?)?(?:band|bande|banda|pasmo|pasmie|teilband)\b",
     re.I,
 )
-_UNIT_BRACKET = re.compile(r"\s*[(\[][^()\[\]\d]{1,8}[)\]]\s*$")
+_UNIT_BRACKET = re.compile(r"\s*(?:[(\[][^()\[\]\d]{1,8}[)\]]|,?\s*\b(?:dBi|dBd|dB))\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _LISTED_IN_BRACKET = re.compile(
     r"[(\[]\s*([^\W\d][^()\[\]/]*\s[^()\[\]/]*(?:/[^()\[\]/]+)+|[^\W\d][^()\[\]/]*(?:/[^()\[\]/]+\s[^()\[\]/]+)+)\s*[)\]]"
@@ -92,9 +98,9 @@ class Labels:
         cleaned = text.strip().rstrip(":").strip()
         attempts = (
             self._with_list,
+            self._with_tilts,
             self._with_unit,
             self._match,
-            self._with_tilts,
             self._with_bands,
             self._with_demand,
         )
@@ -144,11 +150,12 @@ class Labels:
         """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""
         bare = _UNIT_BRACKET.sub("", text)
         listed = _TILTS.search(bare)
-        unit = text[len(bare) :]
-        inner = self._match(bare[: listed.start()].strip(" ,;") + unit) if listed else Label(text)
-        if listed is None or not inner:
+        if listed is None:
+            return Label(text)
+        inner = self._match(bare[: listed.start()].strip(" ,;") + text[len(bare) :])
+        if not inner:
             return inner
-        tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1]))
+        tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1] or listed[2]))
         return replace(inner, tilts=tilts)
 
     def _with_demand(self, text: str) -> Label:
