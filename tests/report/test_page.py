@@ -288,3 +288,14 @@ def test_no_assessment_stops_the_page(assessment: Assessment) -> None:
 
 def test_a_page_stays_below_the_weight_limit() -> None:
     assert len(PAGE.encode()) < 400_000
+
+
+def test_a_very_long_cell_is_whole_on_the_screen_and_short_on_paper():
+    text = "y" * 10_000
+    reading = replace(sample().submission.panels[0].readings[0], raw=text)
+    panel = replace(sample().submission.panels[0], readings=(reading,))
+    page = render_html(replace(sample(), submission=replace(sample().submission, panels=(panel,))))
+    shown = re.sub(r"<[^>]*>", "", page)
+    assert text in shown
+    assert '<span class="rest">' + "y" * 8_800 + "</span>" in page  # 10 000 less the 1 200 that are printed
+    assert "10000 characters" in shown
