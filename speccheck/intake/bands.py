@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 from dataclasses import dataclass
 from functools import lru_cache
+from itertools import pairwise
 
 from speccheck.intake.words import is_band_nickname
 from speccheck.records import Band
@@ -18,6 +19,8 @@ _RANGE = re.compile(
     r"(?<![\w.,])" + _NUMBER + _DASH + _NUMBER + r"(?:\s*(MHz|GHz))?(?![\d°%λ])", re.IGNORECASE
 )
 _NAME = re.compile(r"(?<![\w-])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])(\d{1,3})(?![\w.-])")
+_GAP = 1.1
+"""Neighbouring sub-bands leave no more than a duplex gap between them."""
 _LOWEST_MHZ, _HIGHEST_MHZ = 60.0, 110_000.0
 
 
@@ -36,6 +39,12 @@ class BandText:
         if not self.spans:
             return None
         return min(s[0] for s in self.spans), max(s[1] for s in self.spans)
+
+    @property
+    def connected(self) -> bool:
+        """Whether the ranges overlap or follow on one another, so that their hull is a band."""
+        ordered = sorted(self.spans)
+        return bool(self.names) or all(b[0] <= a[1] * _GAP for a, b in pairwise(ordered))
 
 
 NO_BANDS = BandText((), "", False)

@@ -114,7 +114,7 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
 
 def _take_band(column: Column, cell: Cell, text: str) -> None:
     bands = find_bands(text)
-    if bands.spans:
+    if bands.spans and bands.connected:
         column.take_band(bands.hull, cell)
         text = bands.rest if not bands.names else text
     column.band_name = " ".join(filter(None, (column.band_name, text.strip(" ()[]:,-–"))))

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.claims import Claim, Context, SheetResult
@@ -23,7 +23,7 @@ from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
-from speccheck.intake.words import is_generic_sheet_name
+from speccheck.intake.words import is_generic_sheet_name, without_number
 from speccheck.records import Band
 
 _LOOK_AHEAD = 60
@@ -157,6 +157,7 @@ class DownReader:
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""
+        state.group = cell.text if self._marks.is_heading(cell) else state.group
         if self._names.is_title(cell.text) or not is_generic_sheet_name(cell.text):
             state.pending_title = cell
 
@@ -165,6 +166,7 @@ class DownReader:
         extra = row_cells(self._grid, self._columns, row)
         if label_cell is None and row > state.label_bottom and not (extra.condition or extra.band):
             state.label = None
+        self._band_label(label_cell)
         label = joined_label(self._marks.labels, state.label, extra.condition, state.group)
         if not label:
             self._unknown_row(label if state.label is None else state.label, beside)
@@ -183,6 +185,14 @@ class DownReader:
         take_answers(
             self._grid, self._columns, row, state.label, draft=self._panels.first, result=self._result
         )
+
+    def _band_label(self, cell: Cell | None) -> None:
+        """'(a) 698–960 MHz' below 'Gain' is the gain in that band."""
+        state = self._state
+        text = without_number(cell.text) if cell is not None and not state.label else ""
+        group = self._marks.labels.of(state.group) if text and is_band_label(text) else None
+        if group:
+            state.label = replace(group, bands=find_bands(text))
 
     def _claim(self, cell: Cell, label: Label, extra: RowCells) -> None:
         if cell.row == self._panels.model_row and label.parameters[0] in NAME_KEYS:

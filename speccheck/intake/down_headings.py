@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import re
+
 from speccheck.intake.answering import labelled, share_answering
 from speccheck.intake.bands import is_band_label
 from speccheck.intake.claims import SheetResult
@@ -13,6 +15,7 @@ from speccheck.intake.roles import settle_roles
 from speccheck.intake.words import column_role
 
 _REACH = 7
+_FIGURE = re.compile(r"\s*[-+<>≤≥±]?\s*\d{1,3}(?:[.,]\d+)?\s*")
 _FEWEST_NUMBERED, _MOST_OF = 4, 0.7
 _LONG_NOTE = 120
 
@@ -40,7 +43,7 @@ def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], besi
         return False
     if label is None or label.row != row or column_role(label.text):
         return all(isinstance(c.raw, str | int | float) for c in beside)
-    if marks.is_heading(label):
+    if marks.is_heading(label) or any(_FIGURE.fullmatch(c.text) for c in beside if isinstance(c.raw, str)):
         return False
     if any(column_role(c.text) or is_band_label(c.text) for c in beside):
         return True

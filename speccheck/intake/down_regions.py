@@ -8,7 +8,7 @@ from dataclasses import dataclass
 from speccheck.intake.bands import find_bands, is_band_label
 from speccheck.intake.grid import Cell
 from speccheck.intake.marks import Marks, is_form_heading, looks_like_value
-from speccheck.intake.words import column_role
+from speccheck.intake.words import column_role, without_number
 
 _NEAR = 4
 
@@ -56,6 +56,9 @@ def _has_value_right(marks: Marks, row: int, column: int) -> bool:
     for cell in marks.rows[row]:
         if cell.column > column:
             return not marks.is_heading(cell) and not _heads_a_list(marks, row, column, cell)
+    below = marks.grid.cells.get((row + 1, column))
+    if below is not None and is_band_label(without_number(below.text)) and not marks.is_heading(below):
+        return any(c.column > column for c in marks.rows[row + 1])
     span = marks.grid.span(marks.grid.cells[row, column])
     return any(
         c.column > span.right
@@ -82,11 +85,20 @@ def _is_second_label(marks: Marks, columns: dict[int, list[int]], column: int) -
     """Whether a column of headings only details the labels of a column before it, values following both."""
     for other, rows in columns.items():
         if other < column and rows[0] <= columns[column][-1] and columns[column][0] <= rows[-1] + _NEAR:
+            if _details_labels(marks, other, column, columns[column]):
+                return True
             near = [row for row in rows if columns[column][0] - 6 <= row <= columns[column][-1] + 6]
             beyond = [row for row in near if _first_value_column(marks, row, other) > column]
             if near and len(beyond) * 2 > len(near):
                 return True
     return False
+
+
+def _details_labels(marks: Marks, labels: int, column: int, rows: list[int]) -> bool:
+    """Whether every heading of a column stands just behind another heading, with something beyond both."""
+    beside = ([c.column for c in marks.rows[row]] for row in rows if (row, labels) in marks.headings)
+    between = [sum(labels < c < column for c in found) == 0 and found[-1] > column for found in beside]
+    return len(between) == len(rows) and all(between)
 
 
 def _is_group_column(marks: Marks, columns: dict[int, list[int]], column: int) -> bool:

@@ -95,7 +95,7 @@ def _score(text: str, sheet: str) -> int:
     )
     if prefixed or (inside is not None and any(map(str.isdigit, inside[1]))):
         return 3
-    if codes(words) and not _PAPERS.search(fold(words)):
+    if (codes(words) or name_in_title(words)) and not _PAPERS.search(fold(words)):
         return 2
     return 1 if stripped != words and len(stripped.split()) <= 3 else 0
 

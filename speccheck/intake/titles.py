@@ -64,7 +64,10 @@ def _around_code(words: list[str]) -> str:
         first = last = index
         while first > 0 and _is_name(words[first - 1]):
             first -= 1
-        while last + 1 < len(words) and (_is_name(words[last + 1]) or _is_code(words[last + 1])):
+        shouted = all(word.isupper() for word in words if word.isalpha())
+        while last + 1 < len(words) and (
+            _is_code(words[last + 1]) or (_is_name(words[last + 1]) and not shouted)
+        ):
             last += 1
         return " ".join(words[first : last + 1])
     return ""

@@ -9,6 +9,7 @@ from functools import cache, lru_cache
 from speccheck.kept import toml
 
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]\s*$")
+_ITEM_NUMBER = re.compile(r"^\s*(?:[(\[]?[a-h\d]{1,2}[)\]]|[-•*·▪–])\s*")
 _SPACES = re.compile(r"[\s\u00a0\u2007\u2009\u202f\u200b_]+")
 _DASHES = str.maketrans(
     {"–": "-", "—": "-", "−": "-", "‐": "-", "‑": "-", "’": "'", "ß": "ss", "ł": "l", "ø": "o"}
@@ -102,6 +103,11 @@ def generic_title_words() -> frozenset[str]:
     """Single words that occur in titles and sheet names without being part of a panel's name."""
     phrases = title_prefixes("prefix") | title_prefixes("weak") | _table()["sheet"]["generic"]
     return frozenset(word for phrase in phrases for word in phrase.split())
+
+
+def without_number(text: str) -> str:
+    """A label without the number or letter of its item: '(a) 698–960 MHz'."""
+    return _ITEM_NUMBER.sub("", text)
 
 
 def is_band_nickname(text: str) -> bool:
