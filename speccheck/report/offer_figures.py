@@ -112,10 +112,10 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     shown = [f for f in findings if f.verdict is not Fit.NOT_JUDGED and _ends(f) is not None][:MOST_ROWS]
     if not shown:
         return None
-    canvas = Canvas(FULL, 26 + 34 * len(shown), numbers)
+    canvas = Canvas(FULL, 26 + 37 * len(shown), numbers)
     table = []
     for i, finding in enumerate(shown):
-        y = 14 + 34 * i
+        y = 14 + 37 * i
         mark = mark_for(finding.verdict)
         lines = textwrap.wrap(finding.title, 46, max_lines=2, placeholder="…")
         for at, line in enumerate(lines):
@@ -127,7 +127,7 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
         )
     canvas.write(
         290,
-        22 + 34 * len(shown),
+        22 + 37 * len(shown),
         "bar: expected interval   ◆ claim   each row has its own scale",
         style="small",
     )

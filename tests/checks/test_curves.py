@@ -69,6 +69,17 @@ def test_half_a_wavelength_keeps_lobes_out_of_the_steering_map() -> None:
     assert wide.marks["lobes_seen"] > 0
 
 
+def test_lobes_of_sub_arrays_stand_a_wavelength_over_their_pitch_apart() -> None:
+    # lobes at sin θ + n·λ/D (Mailloux, Phased Array Antenna Handbook, ch. 7): three rows of 58 mm at 3800 MHz
+    # have λ/D = 78.893/174 = 0.453; the third order is the element lattice's own
+    grouped = drawn("steering-map", **ACTIVE | {"vertical_element_spacing": 0.058, "subarray_rows": 3.0})
+    assert grouped is not None
+    own = grouped.curves[0]
+    steps = {round(c.y[0] - own.y[0], 2) for c in grouped.curves if c.name == "sub-array lobe"}
+    assert {0.45, -0.45, 0.91, -0.91} <= steps
+    assert not steps & {1.36, -1.36}
+
+
 def test_width_of_the_vertical_cut_is_that_of_a_uniform_line() -> None:
     # 50.8° · λ/L of a uniform line (Balanis, Antenna Theory, ch. 6): 12 · 58 mm at 3550 MHz gives 6.16°
     drawing = drawn("vertical-cut", **ACTIVE)
