@@ -83,6 +83,9 @@ def extend(marks: Marks, table: Down, result: SheetResult) -> None:
     row = max(table.bottom, min(span.bottom, table.bottom + 60))
     while True:
         cells = cells_between(marks, row + 1, table.label_column, table.right)
+        if _heads_details(marks, table, row + 1, cells, result):
+            row += 1
+            continue
         if len(cells) < 2 or any((c.row, c.column) in result.roles for c in cells):
             break
         if heads_columns(marks, row + 1, table.label_column):
@@ -91,6 +94,14 @@ def extend(marks: Marks, table: Down, result: SheetResult) -> None:
             break
         row += 1
     table.bottom = row
+
+
+def _heads_details(marks: Marks, table: Down, row: int, cells: list[Cell], result: SheetResult) -> bool:
+    """Whether a known label stands alone over rows that detail it: 'Wind load' over 'frontal' and 'lateral'."""
+    if len(cells) != 1 or not marks.is_heading(cells[0]) or (row, cells[0].column) in result.roles:
+        return False
+    below = cells_between(marks, row + 1, table.label_column, table.right)
+    return cells[0].column == table.label_column and len(below) > 1 and below[0].column == table.label_column
 
 
 def describe_columns(

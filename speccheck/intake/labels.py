@@ -31,6 +31,8 @@ _TILTS = re.compile(
     rf"{_AT}(?:{_TILT_WORD}\s*(?:of|=|:)?\s*{_ANGLES}|{_ANGLES}\s*(?:of\s+)?{_TILT_WORD})\s*[)]?\s*$",
     re.IGNORECASE,
 )
+_CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
+_STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
 _DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
 _BAND_WORD = re.compile(
@@ -62,6 +64,7 @@ class Label:
     tolerance: bool = False
     how: str = ""
     tilts: tuple[float, ...] = ()
+    statistics: tuple[str, ...] = ()
 
     def __bool__(self) -> bool:
         return bool(self.parameters)
@@ -99,6 +102,7 @@ class Labels:
         attempts = (
             self._with_list,
             self._with_tilts,
+            self._with_statistics,
             self._with_unit,
             self._match,
             self._with_bands,
@@ -158,6 +162,20 @@ class Labels:
         tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1] or listed[2]))
         return replace(inner, tilts=tilts)
 
+    def _with_statistics(self, text: str) -> Label:
+        """'Power consumption, typ./max.' heads two figures of one parameter."""
+        bracket = _UNIT_BRACKET.search(text)
+        bare, unit = (text[: bracket.start()], bracket[0]) if bracket else (text, "")
+        listed = _STATISTICS.search(bare)
+        if listed is None or not (
+            name := (bare[: listed.start()] + " " + bare[listed.end() :]).strip(" ,;:")
+        ):
+            return Label(text)
+        said = tuple(statistic_of(word) for word in re.split(r"\s*/\s*", listed[1]))
+        said = tuple("typical" if word == "typ" else word for word in said)
+        inner = self._with_unit(f"{name}{unit}") or self._match(f"{name}{unit}")
+        return replace(inner, statistics=said) if len(inner.parameters) == 1 and all(said) else Label(text)
+
     def _with_demand(self, text: str) -> Label:
         """'Vertical beamwidth at -3 dB ≤ 8°': what is asked for stands behind the name of the parameter."""
         cut = _DEMAND.match(text)
@@ -188,6 +206,8 @@ class Labels:
         found = match_heading(text, self._synonyms, suggest=False)
         if not found.exact or not found.parameters:
             return Label(text)
+        if found.condition and _CODE.fullmatch(text):
+            return Label(text)  # 'BR-0012' is a model, not a width
         if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
             return Label(text)  # 'RAL 7035' and 'Model 12' are answers
         condition = found.condition

@@ -111,7 +111,9 @@ def _mark_letters(marks: Marks) -> None:
 
 def is_size_letter(text: str) -> bool:
     """Whether a heading is a letter, perhaps with a unit of length, that may head a size."""
-    return len(text) < _LONGEST_LETTER and _LETTER_UNIT.sub("", text.strip()).upper() in _SIZES
+    if len(text) >= _LONGEST_LETTER or (len(text) > 1 and text[1] not in " ([,"):
+        return False
+    return _LETTER_UNIT.sub("", text.strip()).upper() in _SIZES
 
 
 def _mark_three(marks: Marks, places: list[tuple[int, int]], letters: str) -> None:
