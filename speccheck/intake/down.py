@@ -157,7 +157,7 @@ class DownReader:
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""
-        state.group = cell.text if self._marks.is_heading(cell) else state.group
+        state.group = cell.text
         if self._names.is_title(cell.text) or not is_generic_sheet_name(cell.text):
             state.pending_title = cell
 

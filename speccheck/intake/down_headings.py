@@ -97,11 +97,13 @@ def extend(marks: Marks, table: Down, result: SheetResult) -> None:
 
 
 def _heads_details(marks: Marks, table: Down, row: int, cells: list[Cell], result: SheetResult) -> bool:
-    """Whether a known label stands alone over rows that detail it: 'Wind load' over 'frontal' and 'lateral'."""
-    if len(cells) != 1 or not marks.is_heading(cells[0]) or (row, cells[0].column) in result.roles:
+    """Whether a label alone heads rows that detail it: 'Wind load' over 'frontal' and 'lateral'."""
+    if len(cells) != 1 or cells[0].column != table.label_column or (row, cells[0].column) in result.roles:
         return False
     below = cells_between(marks, row + 1, table.label_column, table.right)
-    return cells[0].column == table.label_column and len(below) > 1 and below[0].column == table.label_column
+    if len(below) < 2 or below[0].column != table.label_column:
+        return False
+    return marks.is_heading(cells[0]) or bool(marks.labels.of(f"{cells[0].text} {below[0].text.strip()}"))
 
 
 def describe_columns(
