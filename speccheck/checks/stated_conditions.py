@@ -8,10 +8,12 @@ from speccheck.checks.cell_text import words
 from speccheck.physics.power import dbm
 from speccheck.quantities import band_names, convert
 from speccheck.records import Band, Panel, Reading
+from speccheck.standards import operating_band
 
 _SPEED = re.compile(r"(\d+(?:[.,]\d+)?)\s*(km/h|kmh|kph|mph|m/s)", re.IGNORECASE)
 _CARRIERS = re.compile(r"2\s*[x×*·]\s*\+?(\d+(?:[.,]\d+)?)\s*(dbm|w)\b", re.IGNORECASE)
 _SPEED_UNITS = {"kmh": "km/h", "kph": "km/h"}
+_ORDINAL = re.compile(r"(?<!LTE )(?<!NR )\bband\s?\d", re.IGNORECASE)
 _MEGAHERTZ = re.compile(r"\d[\d.,\s]*\d")
 
 
@@ -42,8 +44,18 @@ def named_bands(panel: Panel) -> dict[str, Reading]:
     found: dict[str, Reading] = {}
     for reading in _frequency_cells(panel):
         for name in band_names(f"{reading.raw} {reading.condition}")[0]:
-            found.setdefault(name, reading)
+            if not _only_counts(name, reading):
+                found.setdefault(name, reading)
     return found
+
+
+def _only_counts(name: str, reading: Reading) -> bool:
+    """Whether 'Band 1: 790-862 MHz' numbers the panel's own bands: no part of the standard band is in it."""
+    band = operating_band(name)
+    ordinal = _ORDINAL.search(reading.raw) and _has_figures(reading)
+    if not ordinal or band is None:
+        return bool(ordinal)
+    return all(high <= reading.low or low >= reading.high for low, high in band.spans)
 
 
 def stated_ranges(panel: Panel, *keys: str) -> tuple[Band, ...]:
