@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Mapping
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 
 from speccheck.quantities import Quantity, UnknownUnitError, convert
 from speccheck.records import Band, CellRef, Reading, Sense, Statement, Unread, Value
@@ -38,6 +38,12 @@ class Found:
     remark: str = ""
     recognised: str = ""
     at: Mapping[str, float] | None = None
+
+    def take_statistic(self, word: str) -> None:
+        """Take what the heading says of this figure of several: ``min``, ``typical``, ``mean`` or ``max``."""
+        bounds = word in ("min", "max")
+        sense = Sense(word) if bounds else Sense.NOMINAL
+        self.figure = replace(self.figure, sense=sense, statistic="" if bounds else word)
 
     def reading(self) -> Reading:
         """The finished reading."""

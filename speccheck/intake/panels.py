@@ -34,6 +34,7 @@ GEOMETRY = frozenset(
         "transceivers",
         "csi_rs_ports",
         "mimo_layers",
+        "uplink_layers",
         "served_users",
         "beam_count",
         "element_gain",
@@ -178,10 +179,13 @@ def _shared_out(
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
     alike = _plain_list(found)
-    tilts = claim.context.label.tilts
+    tilts, statistics = claim.context.label.tilts, claim.context.label.statistics
     if tilts and len(alike) == len(tilts):
         for one, tilt in zip(alike, tilts, strict=True):
             one.at = {"tilt_deg": tilt}
+    elif statistics and len(alike) == len(statistics):
+        for one, statistic in zip(alike, statistics, strict=True):
+            one.take_statistic(statistic)
     elif len(alike) == len(bands) and claim.band is None:
         for one, band in zip(alike, bands, strict=True):
             one.band = band

@@ -49,6 +49,9 @@ _LINEAR: dict[str, tuple[str, float]] = {
     "m²": ("area", 1.0),
     "cm²": ("area", 1e-4),
     "ft²": ("area", 0.09290304),
+    "l": ("volume", 1.0),
+    "m³": ("volume", 1e3),
+    "cm³": ("volume", 1e-3),
     "Pa": ("pressure", 1.0),
     "kPa": ("pressure", 1e3),
     "dB": ("level", 1.0),
@@ -110,6 +113,9 @@ _SPELLINGS: dict[str, str] = {
     "m²": "m² m2 m^2 sqm sq.m qm",
     "cm²": "cm² cm2 cm^2",
     "ft²": "ft² ft2 ft^2 sqft sq.ft",
+    "l": "l litre litres liter liters ltr litro litros litri litr litrów dm³ dm3 dm^3",
+    "m³": "m³ m3 m^3 cbm",
+    "cm³": "cm³ cm3 cm^3 ccm",
     "Pa": "pa n/m2 n/m²",
     "kPa": "kpa",
     "dB": "db decibel",
@@ -126,7 +132,7 @@ _SPELLINGS: dict[str, str] = {
 _NAMES: dict[str, str] = {word: name for name, words in _SPELLINGS.items() for word in words.split(" ")}
 _NAMES |= {"° c": "°C", "° f": "°F"}
 
-_BY_LENGTH = sorted(_NAMES, key=len, reverse=True)
+_BY_LENGTH = sorted(_NAMES.keys() - {"l"}, key=len, reverse=True)  # an L behind a figure is a length
 UNIT_PATTERN = "(?i:" + "|".join(map(re.escape, _BY_LENGTH)) + r")(?:(?![^\W\d_])|(?=[xX]\s?\d))"
 """Regular expression for any spelling, longest first, not running on into a word."""
 
