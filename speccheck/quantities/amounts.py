@@ -111,13 +111,15 @@ class _Reader:
             if kind == "plus" and self._found and self._kind(1) in ("", "close", "sep"):
                 self._found[-1].sense = self._found[-1].sense or "min"
             if kind in ("sep", "slash", "times", "plus"):
-                self._settle_words(keep=kind != "sep")
+                self._settle_words(keep=kind in ("times", "plus"))
             if kind != "colon" or self._tokens[self._at - 1].kind in ("num", "unit", "close"):
                 pending.joined = _JOINING[kind]
         elif kind == "word":
             pending.words.append(token.text)
         elif kind == "unit" and self._found and not self._found[-1].unit:
             self._found[-1].unit = token.value
+        elif kind == "unit" and token.text == "V":  # behind another unit it stands for the vertical plane
+            pending.words.append(token.text)
 
     def _settle_words(self, keep: bool = False) -> None:
         """Words up to a comma or a closing bracket belong to the amount before them."""
