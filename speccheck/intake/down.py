@@ -19,14 +19,13 @@ from speccheck.intake.down_headings import (
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.down_regions import Down, cells_between
 from speccheck.intake.down_row import RowCells, joined_label, row_cells
+from speccheck.intake.down_titles import stated_below, waiting_title
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
-from speccheck.intake.words import is_generic_sheet_name, without_number
+from speccheck.intake.words import without_number
 from speccheck.records import Band
-
-_LOOK_AHEAD = 60
 
 
 @dataclass(slots=True)
@@ -158,8 +157,7 @@ class DownReader:
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""
         state.group = cell.text
-        if self._names.is_title(cell.text) or not is_generic_sheet_name(cell.text):
-            state.pending_title = cell
+        state.pending_title = waiting_title(self._names, state.pending_title, cell)
 
     def _values(self, row: int, label_cell: Cell | None, beside: list[Cell]) -> None:
         state = self._state
@@ -255,13 +253,9 @@ class DownReader:
         if not current.claims and self._names.is_title(title.text):
             current.name, current.where, current.named = model_name(title.text), title, True
             return
-        below = {
-            key
-            for row in range(title.row + 1, min(title.row + _LOOK_AHEAD, self._table.bottom + 1))
-            if (found := self._marks.headings.get((row, self._table.label_column)))
-            for key in found.parameters
-        }
-        needed = 2 if self._names.is_title(title.text) else 4
+        certain = self._names.is_title(title.text)
+        below = stated_below(self._marks, self._table, title, certain=certain)
+        needed = 2 if certain else 4
         if len(below & current.keys()) >= needed:
             name = model_name(title.text)
             self._panels.start(name, title)

@@ -11,8 +11,8 @@ from speccheck.intake.claims import SheetResult
 from speccheck.intake.down_regions import Down
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.marks import Marks
-from speccheck.intake.titles import PARTS, announced, codes, name_in_title
-from speccheck.intake.words import fold, is_generic_sheet_name, title_prefixes
+from speccheck.intake.titles import PARTS, announced, codes, is_numbered_name, name_in_title
+from speccheck.intake.words import fold, is_generic_sheet_name, is_group_heading, title_prefixes
 
 _DESCRIBES = re.compile(
     r"\b(?:data ?sheet|technical|data|specifications?|comparison|tender|bid|offer|rev(?:ision)?|issue|draft|"
@@ -97,7 +97,8 @@ def _score(text: str, sheet: str) -> int:
         return 3
     if (codes(words) or name_in_title(words)) and not _PAPERS.search(fold(words)):
         return 2
-    return 1 if stripped != words and len(stripped.split()) <= 3 else 0
+    named = is_numbered_name(words) and not _PAPERS.search(fold(words))
+    return 1 if named or (stripped != words and len(stripped.split()) <= 3) else 0
 
 
 def _may_name(text: str) -> bool:
@@ -138,7 +139,7 @@ class Names:
             if any(p not in self._titles and result.roles.get(p, "note") != "note" for p in places):
                 break
             titles = [c for c in near if isinstance(c.raw, str) and not is_band_label(c.text)]
-            candidates += [c for c in titles if not marks.is_heading(c)]
+            candidates += [c for c in titles if not (marks.is_heading(c) or is_group_heading(c.text))]
         scores = [_score(c.text, sheet) for c in candidates]
         if any(scores):
             return self._taken(candidates[scores.index(max(scores))], result)

@@ -6,7 +6,7 @@ import re
 from functools import cache
 from itertools import pairwise
 
-from speccheck.intake.words import fold, generic_title_words, title_prefixes
+from speccheck.intake.words import fold, generic_title_words, is_group_word, title_prefixes
 
 _CODE = re.compile(r"(?<![\w.])(?=[\w./+-]*\d)(?=[\w./+-]*[A-Za-z])[A-Za-z0-9][\w./+-]{2,}(?![\w])")
 _NOT_A_CODE = re.compile(
@@ -20,6 +20,8 @@ _GENERIC = re.compile(
     r"antenn|antena|panel|band$|sheet|daten|sector|sektor|passiv|activ|aktiv|port$|ports$|beam|array|mimo|technical|"
     r"specif|revision|issue|rev\.?$|draft|offer|tender|bid$|model|type|typ$|product|dual|multi|quad|hexa|octo|penta"
 )
+_NUMBER_OF_NAME = re.compile(r"\d{2}[\d/.-]*")
+_YEAR = re.compile(r"(?:19|20)\d\d(?:[-/.]\d\d?)*")
 _SHORT = 3
 
 
@@ -55,6 +57,13 @@ def name_in_title(text: str) -> str:
         if name:
             return name
     return named if len(named.split()) <= _SHORT + 1 else ""
+
+
+def is_numbered_name(text: str) -> bool:
+    """Whether a short text is a name and its number, such as 'NORDA 65-12'; 'Section 12' is none."""
+    words = text.split()
+    pairs = [(a, b) for a, b in pairwise(words) if _NUMBER_OF_NAME.fullmatch(b) and not _YEAR.fullmatch(b)]
+    return len(words) <= _SHORT + 1 and any(_is_name(a) and not is_group_word(a) for a, _ in pairs)
 
 
 def _around_code(words: list[str]) -> str:

@@ -93,6 +93,18 @@ def is_generic_sheet_name(name: str) -> bool:
     return fold(name).rstrip("0123456789 -_.()") in _table()["sheet"]["generic"] | {""}
 
 
+@lru_cache(maxsize=20_000)
+def is_group_heading(text: str) -> bool:
+    """Whether a text only heads a part of a panel's table, such as 'Mechanical properties'."""
+    words = re.findall(r"[^\W\d_]+", fold(text))
+    return bool(words) and not any(map(str.isdigit, text)) and _table()["group"]["words"].issuperset(words)
+
+
+def is_group_word(word: str) -> bool:
+    """Whether one word belongs to headings of parts, such as 'section'."""
+    return fold(word) in _table()["group"]["words"]
+
+
 def title_prefixes(strength: str = "prefix") -> frozenset[str]:
     """Words before the name of a panel in a title; the ``weak`` ones, such as 'Data sheet', name none."""
     return _table()["title"][strength]
