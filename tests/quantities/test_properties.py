@@ -83,6 +83,7 @@ def test_a_number_reads_back_whatever_its_separators(
 def test_every_spelling_of_a_unit_is_read_behind_a_number(tenths: int, spelling: tuple[str, str]) -> None:
     written, name = spelling
     assume(name != "pcs" or not written.endswith("."))
+    assume(written != "l")  # a bare L behind a figure names a length, as in '1400L x 300W'
     for text in (f"{tenths / 10} {written}", f"{tenths / 10}{written}"):
         (found,) = read_cell(text, kind="number", expected=name).quantities
         assert (found.value, found.unit) == (tenths / 10, name)
