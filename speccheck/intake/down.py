@@ -18,7 +18,7 @@ from speccheck.intake.down_headings import (
 )
 from speccheck.intake.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.down_regions import Down, cells_between
-from speccheck.intake.down_row import RowCells, joined_label, row_cells
+from speccheck.intake.down_row import RowCells, asides_of, joined_label, row_cells
 from speccheck.intake.down_titles import stated_below, waiting_title
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
@@ -172,11 +172,14 @@ class DownReader:
         self._maybe_new_panel()
         if label.parameters[0] in NAME_KEYS:
             self._name_panel(label, beside)
+        extra.asides = asides_of(self._columns, label, beside)
         for cell in beside:
             column = self._columns.get(cell.column)
             if column is None:
                 continue
-            if column.role in VALUE_ROLES and cell is not extra.band:
+            if cell in extra.asides:
+                self._result.mark(cell, "note")
+            elif column.role in VALUE_ROLES and cell is not extra.band:
                 self._claim(cell, label, extra)
             else:
                 self._result.mark(cell, "note" if column.role == "remark" else "label")
@@ -211,10 +214,11 @@ class DownReader:
         band, name = said_of
         heading = self._state.label.text if self._state.label else ""
         condition = extra.condition_text
+        condition = find_bands(condition).rest if find_bands(condition).proved else condition
         context = Context(
             label=label,
             unit=extra.unit(column),
-            condition=condition if not find_bands(condition).proved else find_bands(condition).rest,
+            condition="; ".join(filter(None, (condition, *(c.text for c in extra.asides)))),
             statistic=column.statistic,
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),

@@ -4,10 +4,14 @@ from __future__ import annotations
 
 from dataclasses import dataclass, field
 
+from speccheck.dictionary import parameters
 from speccheck.intake.bands import is_band_label
-from speccheck.intake.columns import Column
+from speccheck.intake.columns import VALUE_ROLES, Column
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label, Labels
+from speccheck.quantities import read_cell
+
+_MEASURED = ("number", "range", "scan", "count", "size")
 
 
 @dataclass(slots=True)
@@ -18,6 +22,7 @@ class RowCells:
     tolerances: dict[int, Cell] = field(default_factory=dict)
     band: Cell | None = None
     units: dict[int, Cell] = field(default_factory=dict)
+    asides: list[Cell] = field(default_factory=list)
 
     @property
     def condition_text(self) -> str:
@@ -56,6 +61,26 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
                 found.tolerances[index] = cell
     found.condition = conditions[0] if conditions else None
     return found
+
+
+def asides_of(columns: dict[int, Column], label: Label, beside: list[Cell]) -> list[Cell]:
+    """Words in a column without a heading, behind the figure of a row: 'mid tilt' remarks on a gain."""
+    values = [c for c in beside if (k := columns.get(c.column)) is not None and k.role in VALUE_ROLES]
+    kind = parameters()[label.parameters[0]].kind
+    if kind not in _MEASURED or len(values) < 2 or not _has_figure(values[0]):
+        return []
+    return [
+        cell
+        for cell in values[1:]
+        if isinstance(cell.raw, str)
+        and not (_has_figure(cell) or columns[cell.column].cells or columns[cell.column].band)
+        and any(map(str.isalpha, cell.text))
+        and read_cell(cell.raw, kind=kind).status is None
+    ]
+
+
+def _has_figure(cell: Cell) -> bool:
+    return not isinstance(cell.raw, str) or any(map(str.isdigit, cell.text))
 
 
 def joined_label(labels: Labels, label: Label | None, condition: Cell | None, group: str = "") -> Label:
