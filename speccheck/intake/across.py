@@ -16,6 +16,7 @@ from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks, is_size_letter
 from speccheck.intake.naming import Names, model_name
 from speccheck.intake.regions import Across
+from speccheck.intake.told_by_value import label_by_values
 from speccheck.records import Band
 
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
@@ -81,6 +82,9 @@ class AcrossReader:
             label, column = compose(index, stack, labels)
             letters = [c for c in stack if is_size_letter(c.text) and self._marks.is_heading(c)]
             label = self._marks.headings[letters[-1].row, letters[-1].column] if letters else label
+            if not label and column.role == "":
+                texts = [c.text for c in self._column_cells(index)]
+                label = label_by_values(column.heading, texts) or label
             role = "" if label else column.role
             context = Context(
                 label=label,

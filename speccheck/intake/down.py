@@ -24,6 +24,7 @@ from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.labels import Label
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
+from speccheck.intake.told_by_value import label_by_values
 from speccheck.intake.words import without_number
 from speccheck.records import Band
 
@@ -115,11 +116,8 @@ class DownReader:
     def _repeats_heading(self, cells: list[Cell]) -> bool:
         if not self._heading_rows:
             return False
-        texts = [
-            (c.column, c.text)
-            for c in self._marks.rows.get(self._heading_rows[-1], ())
-            if c.column <= self._table.right
-        ]
+        heads = cells_between(self._marks, self._heading_rows[-1], 1, self._table.right)
+        texts = [(c.column, c.text) for c in heads]
         return len(texts) > 1 and [(c.column, c.text) for c in cells] == texts
 
     def _left_cells(self, row: int, cells: list[Cell]) -> None:
@@ -166,6 +164,8 @@ class DownReader:
             state.label = None
         self._band_label(label_cell)
         label = joined_label(self._marks.labels, state.label, extra.condition, state.group)
+        if not label and label_cell is not None:
+            label = label_by_values(label_cell.text, [c.text for c in beside if self._is_value(c)])
         if not label:
             self._unknown_row(label if state.label is None else state.label, beside)
             return
@@ -186,6 +186,10 @@ class DownReader:
         take_answers(
             self._grid, self._columns, row, state.label, draft=self._panels.first, result=self._result
         )
+
+    def _is_value(self, cell: Cell) -> bool:
+        column = self._columns.get(cell.column)
+        return column is not None and column.role in VALUE_ROLES
 
     def _band_label(self, cell: Cell | None) -> None:
         """'(a) 698–960 MHz' below 'Gain' is the gain in that band."""
@@ -287,8 +291,7 @@ class DownReader:
             else "value without a heading"
         )
         for cell in beside:
-            column = self._columns.get(cell.column)
-            if column is not None and column.role in VALUE_ROLES:
+            if self._is_value(cell):
                 self._result.unread.append((cell, reason, self._marks.labels.suggestion(label_text)))
                 self._result.mark(cell, "unread")
             else:

@@ -12,6 +12,7 @@ from speccheck.intake.grid import Cell
 from speccheck.intake.labels import Label, looks_like_line, split_lines
 from speccheck.intake.marks import Marks
 from speccheck.intake.naming import Names, model_name
+from speccheck.intake.told_by_value import label_by_values
 from speccheck.records import Band
 
 _NAME_KEYS = frozenset({"model", "panel_type"})
@@ -52,6 +53,8 @@ class _Column:
                 taken = [self._line(cell, line) for line in lines]
                 if not any(taken):
                     self._result.mark(cell, "unread")
+            elif (known := _by_value(cell.text)) is not None:
+                self._claim(cell, *known)
             elif looks_like_line(cell.text):
                 self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
                 self._result.mark(cell, "unread")
@@ -78,13 +81,16 @@ class _Column:
                 self._open(model_name(value), cell, named=True)
             self._result.mark(cell, "heading")
             return True
+        self._claim(cell, label, value)
+        return True
+
+    def _claim(self, cell: Cell, label: Label, value: str) -> None:
         draft = self._draft or self._untitled(cell)
         inherited = replace(label, text="")
         band = label.bands.hull or self._band
         name = "" if band else self._band_name
         context = Context(inherited, heading=label.text, band_name=name)
         draft.claims.append(Claim(cell, context, band, text=value, banded=bool(band or name)))
-        return True
 
     def _section(self, cell: Cell, band: Band | None) -> None:
         """A line that only names a band heads the lines below it."""
@@ -110,3 +116,10 @@ class _Column:
         self._draft = Draft(name, self._marks.grid, cell, named=named)
         self._result.drafts.append(self._draft)
         return self._draft
+
+
+def _by_value(text: str) -> tuple[Label, str] | None:
+    """A line whose value alone says what it is, 'Configuration: 64T64R'."""
+    heading, colon, value = text.partition(":")
+    label = label_by_values(heading.strip(), [value]) if colon else None
+    return (label, value.strip()) if label else None

@@ -19,8 +19,11 @@ def special_count(text: str) -> CellContent | None:
     if chains:
         sent, received = float(chains.group(1)), float(chains.group(2))
         if sent == received:
-            return CellContent(quantities=(Quantity(value=sent),))
-        pair = (Quantity(value=sent, condition="transmit"), Quantity(value=received, condition="receive"))
+            return CellContent(quantities=(Quantity(value=sent, parameter="transceivers"),))
+        pair = (
+            Quantity(value=sent, parameter="transceivers", condition="transmit"),
+            Quantity(value=received, parameter="transceivers", condition="receive"),
+        )
         return CellContent(quantities=pair)
     product = _FACTORS.fullmatch(text)
     if not product:
