@@ -59,7 +59,8 @@ def xml_text(text: str) -> str:
     """Any text as XML character data that a spreadsheet shows as it was typed."""
     if _HARMLESS.fullmatch(text) and len(text) <= LONGEST_TEXT:
         return text
-    clean = _LOOKS_ESCAPED.sub("_x005F_", _NOT_XML.sub("\ufffd", plain(text, LONGEST_TEXT)))
+    lines = plain(text, LONGEST_TEXT).replace("\r\n", "\n").replace("\r", "\n")  # as XML reads them anyway
+    clean = _LOOKS_ESCAPED.sub("_x005F_", _NOT_XML.sub("\ufffd", lines))
     return clean.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;")
 
 
