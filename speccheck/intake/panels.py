@@ -11,6 +11,7 @@ from speccheck.intake.claims import Claim, Draft
 from speccheck.intake.ends import join_ends
 from speccheck.intake.found import Found, Outcome
 from speccheck.intake.nicknames import resolve_nicknames
+from speccheck.intake.noted import settle_by_note, unband_repeated
 from speccheck.intake.reading import Reader
 from speccheck.quantities import split_footnotes
 from speccheck.records import Band, Panel, Statement, Unread
@@ -106,6 +107,7 @@ class Builder:
             built.roles[outcome.sheet, claim.cell.row, claim.cell.column] = role
         _add_tolerances(readings, tolerances, built.unread)
         _place(readings, draft.bands, several)
+        unband_repeated(readings)
         built.panel = replace(
             built.panel, readings=tuple(f.reading() for f in readings), statements=tuple(statements)
         )
@@ -146,6 +148,8 @@ class Builder:
         remark = "; ".join(f"note {m}: {notes[m]}" for m in markers if m in notes)
         for one in found:
             one.remark = remark
+            for marker in markers:
+                settle_by_note(one, notes.get(marker, ""))
 
 
 def _name_to_span(found: Found) -> None:
@@ -166,7 +170,8 @@ def _in_figures(found: list[Found]) -> bool:
 
 
 def _markers(heading: str) -> tuple[str, ...]:
-    return split_footnotes(heading)[1] if heading else ()
+    """Footnote markers of a heading; of headings one above another each may have its own."""
+    return tuple(marker for part in heading.split(" / ") for marker in split_footnotes(part)[1])
 
 
 def _shared_out(

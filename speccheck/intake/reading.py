@@ -24,10 +24,10 @@ from speccheck.quantities import (
 from speccheck.records import CellRef, Sense, Statement, Status, Unread
 from speccheck.text import plain
 
-_MAX_WORDS = re.compile(
+MAX_WORDS = re.compile(
     r"(?<![a-z])(?:max(?:imum|imal\w*|i|\.)?|p\s?max|massim\w+|m[áa]xim\w+|maks\w*)(?![a-z])", re.IGNORECASE
 )
-_MIN_WORDS = re.compile(
+MIN_WORDS = re.compile(
     r"(?<![a-z])(?:min(?:imum|imal\w*|\.)?|m[íi]nim\w+|at least|mindest\w*)(?![a-z])", re.IGNORECASE
 )
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
@@ -230,7 +230,7 @@ def _sense(settled: Quantity, context: Context) -> Sense:
         return Sense(context.label.sense)
     if context.statistic in ("min", "max"):
         return Sense(context.statistic)
-    smallest, largest = (bool(words.search(context.condition)) for words in (_MIN_WORDS, _MAX_WORDS))
+    smallest, largest = (bool(words.search(context.condition)) for words in (MIN_WORDS, MAX_WORDS))
     if smallest != largest:
         return Sense.MIN if smallest else Sense.MAX
     return Sense.NOMINAL
