@@ -12,6 +12,7 @@ from speccheck.intake.ends import join_ends
 from speccheck.intake.found import Found, Outcome
 from speccheck.intake.nicknames import resolve_nicknames
 from speccheck.intake.noted import settle_by_note, unband_repeated
+from speccheck.intake.planes import ASK_FOR_PLANES, part_by_plane
 from speccheck.intake.reading import Reader
 from speccheck.quantities import split_footnotes
 from speccheck.records import Band, Panel, Statement, Unread
@@ -183,6 +184,8 @@ def _shared_out(
         if bands and not claim.banded and claim.band is None and not _in_figures(found):
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
+    if trouble := part_by_plane(found):
+        return [], Unread(where=first.where, text=first.raw, reason=trouble, suggestion=ASK_FOR_PLANES)
     alike = _plain_list(found)
     tilts, statistics = claim.context.label.tilts, claim.context.label.statistics
     if tilts and len(alike) == len(tilts):

@@ -70,6 +70,22 @@ def test_words_after_each_figure_give_its_plane(tmp_path: Path) -> None:
     ]
 
 
+@pytest.mark.parametrize("spacings", ["0.5λ x 0.7λ (H x V)", "0.5λ H / 0.7λ V", "V 0.7λ, H 0.5λ"])
+def test_letters_beside_two_spacings_give_the_planes(tmp_path: Path, spacings: str) -> None:
+    rows = [["Model", "TP-64A"], ["Gain (dBi)", 24], ["Element spacing", spacings], ["Weight (kg)", 20]]
+    assert set(_lines(tmp_path, rows, "horizontal_element_spacing", "vertical_element_spacing")) == {
+        "TP-64A: B3 horizontal_element_spacing 0.5 λ",
+        "TP-64A: B3 vertical_element_spacing 0.7 λ",
+    }
+
+
+def test_two_spacings_without_planes_are_not_read(tmp_path: Path) -> None:
+    rows = [["Parameter", "Value"], ["Gain (dBi)", 24], ["Element spacing", "0.5λ x 0.7λ"]]
+    submission = read(tmp_path, rows).submission
+    assert [u.where.cell for u in submission.unread] == ["B3"]
+    assert "which plane" in submission.unread[0].reason
+
+
 def test_statistics_in_the_heading_part_the_figures(tmp_path: Path) -> None:
     rows = [["Parameter", "AAU-32"], ["Frequency (MHz)", "3400-3800"], ["Gain (dBi)", 24]]
     rows += [["Power consumption, typ./max.", "520 / 780 W"], ["Layers DL/UL", "16/8"], ["Volume, l", "29"]]
