@@ -85,6 +85,8 @@ class AcrossReader:
             if not label and column.role == "":
                 texts = [c.text for c in self._column_cells(index)]
                 label = label_by_values(column.heading, texts) or label
+            if column.role == "tolerance" and column.unit:
+                label = Label(column.heading)
             role = "" if label else column.role
             context = Context(
                 label=label,

@@ -16,6 +16,8 @@ PLANE_LETTERS = ("H", "V")
 VALUE_ROLES = frozenset({"", "offered", "panel", "typical", "minimum", "maximum", "parameter"})
 """Roles of columns whose cells may be claims; an empty role is a column named after a panel or band."""
 
+_SLACK = re.compile(r"(?:±|\+/-)\s*(.+)")
+
 
 @dataclass(slots=True)
 class Column:
@@ -92,8 +94,11 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
     text = " ".join(cell.text.split())
     statistic = statistic_of(text)
     role = column_role(text) or column_leaning(text)
+    slack = _SLACK.fullmatch(text)
     if text in PLANE_LETTERS:
         column.words.append(text)
+    elif slack and is_unit(slack[1]):
+        column.role, column.unit = "tolerance", slack[1]
     elif is_unit(text):
         column.unit = text
     elif statistic:

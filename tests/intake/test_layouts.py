@@ -344,3 +344,14 @@ def test_house_headings_are_taken_in(tmp_path: Path) -> None:
     assert [item.where.cell for item in plain.submission.unread] == ["B2"]
     house = read(tmp_path, rows, headings={"Quay rating": "survival_wind_speed"})
     assert any("survival_wind_speed" in text for text in lines(house))
+
+
+def test_a_column_of_slack_under_a_merged_heading_is_no_second_figure(tmp_path: Path) -> None:
+    rows: Rows = [
+        ["Type", "Frequency (MHz)", "Gain", None],
+        [None, None, "dBi", "± dB"],
+        ["K-1", "1710-2170", 17.2, 0.5],
+    ]
+    (panel,) = read(tmp_path, rows, ["C1:D1"]).submission.panels
+    (gain,) = panel.all("gain")
+    assert (gain.value, gain.tolerance, gain.where.cell) == (17.2, 0.5, "C3")
