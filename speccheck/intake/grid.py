@@ -31,11 +31,14 @@ class Cell:
     number_format: str = ""
     formula: str = ""
     fault: str = ""
+    _address: str = field(default="", init=False, repr=False, compare=False)
 
     @property
     def address(self) -> str:
         """Address such as ``D12``."""
-        return f"{column_letters(self.column)}{self.row}"
+        if not self._address:
+            self._address = f"{column_letters(self.column)}{self.row}"
+        return self._address
 
 
 @dataclass(frozen=True, slots=True)

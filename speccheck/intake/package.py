@@ -9,7 +9,7 @@ from speccheck.errors import UnusableInputError
 from speccheck.intake.archive import Archive
 from speccheck.intake.limits import Limits
 from speccheck.intake.number_formats import BUILT_IN
-from speccheck.intake.xml_parts import End, Start, Text, stream
+from speccheck.intake.xml_parts import Ends, Starts, Text, stream
 
 
 @dataclass(frozen=True, slots=True)
@@ -96,29 +96,29 @@ class _PartReader:
         path = posixpath.join(folder, "_rels", f"{name}.rels")
         found: dict[str, tuple[str, str]] = {}
 
-        def start(tag: str, at: dict[str, str]) -> None:
-            if tag == "Relationship" and at.get("TargetMode") != "External":
+        def relation(at: dict[str, str]) -> None:
+            if at.get("TargetMode") != "External":
                 kind = at.get("Type", "").rsplit("/", 1)[-1]
                 target = posixpath.normpath(posixpath.join("/", folder, at.get("Target", ""))).lstrip("/")
                 found[at.get("Id", "")] = (kind, target)
 
         if path in self._archive:
-            self._stream(path, start)
+            self._stream(path, {"Relationship": relation})
         return found
 
     def sheets(self, part: str, relations: dict[str, tuple[str, str]], package: Package) -> list[SheetEntry]:
         found: list[SheetEntry] = []
 
-        def start(tag: str, at: dict[str, str]) -> None:
-            if tag == "workbookPr":
-                package.counts_from_1904 = at.get("date1904") in ("1", "true")
-            elif tag == "sheet":
-                kind, target = relations.get(_relation_id(at), ("", ""))
-                if kind == "worksheet" and target in self._archive:
-                    hidden = at.get("state", "visible") != "visible"
-                    found.append(SheetEntry(at.get("name", ""), target, hidden))
+        def properties(at: dict[str, str]) -> None:
+            package.counts_from_1904 = at.get("date1904") in ("1", "true")
 
-        self._stream(part, start)
+        def sheet(at: dict[str, str]) -> None:
+            kind, target = relations.get(_relation_id(at), ("", ""))
+            if kind == "worksheet" and target in self._archive:
+                hidden = at.get("state", "visible") != "visible"
+                found.append(SheetEntry(at.get("name", ""), target, hidden))
+
+        self._stream(part, {"workbookPr": properties, "sheet": sheet})
         if not found:
             raise self._not_a_workbook()
         if len(found) > self._limits.sheets:
@@ -127,35 +127,9 @@ class _PartReader:
 
     def texts(self, part: str) -> list[str]:
         """Shared texts; runs of rich text joined, phonetic hints left out."""
-        found: list[str] = []
-        pieces: list[str] = []
-        state = {"text": False, "hint": 0, "total": 0}
-
-        def start(tag: str, _: dict[str, str]) -> None:
-            if tag == "si":
-                pieces.clear()
-            elif tag == "rPh":
-                state["hint"] += 1
-            elif tag == "t":
-                state["text"] = not state["hint"]
-
-        def end(tag: str) -> None:
-            if tag == "si":
-                found.append("".join(pieces))
-            elif tag == "rPh":
-                state["hint"] -= 1
-            elif tag == "t":
-                state["text"] = False
-
-        def text(data: str) -> None:
-            if state["text"]:
-                state["total"] += len(data)
-                if state["total"] > self._limits.text_total:
-                    raise self._archive.too_large("more text than the limit")
-                pieces.append(data)
-
-        self._stream(part, start, end, text)
-        return found
+        shared = _SharedTexts(self._archive, self._limits)
+        self._stream(part, shared.starts, shared.ends, shared.text)
+        return shared.found
 
     def formats(self, part: str) -> list[str]:
         """Number format by style index."""
@@ -163,29 +137,35 @@ class _PartReader:
         found: list[str] = []
         inside = [False]
 
-        def start(tag: str, at: dict[str, str]) -> None:
-            if tag == "numFmt":
-                own[_whole(at.get("numFmtId", ""))] = at.get("formatCode", "")[:200]
-            elif tag == "cellXfs":
-                inside[0] = True
-            elif tag == "xf" and inside[0]:
+        def number_format(at: dict[str, str]) -> None:
+            own[_whole(at.get("numFmtId", ""))] = at.get("formatCode", "")[:200]
+
+        def cell_style(at: dict[str, str]) -> None:
+            if inside[0]:
                 number = _whole(at.get("numFmtId", "0"))
                 code = own.get(number) or BUILT_IN.get(number, "")
                 found.append("" if code == "General" else code)
 
-        def end(tag: str) -> None:
-            if tag == "cellXfs":
-                inside[0] = False
+        def enter(_: dict[str, str]) -> None:
+            inside[0] = True
 
-        self._stream(part, start, end)
+        def leave() -> None:
+            inside[0] = False
+
+        self._stream(part, {"numFmt": number_format, "cellXfs": enter, "xf": cell_style}, {"cellXfs": leave})
         return found
 
     def _stream(
-        self, part: str, start: Start, end: End = lambda _: None, text: Text = lambda _: None
+        self, part: str, starts: Starts, ends: Ends | None = None, text: Text = lambda _: None
     ) -> None:
-        chunks = self._archive.chunks(part)
         stream(
-            chunks, file=self._archive.file, part=part, limits=self._limits, start=start, end=end, text=text
+            self._archive.chunks(part),
+            file=self._archive.file,
+            part=part,
+            limits=self._limits,
+            starts=starts,
+            ends=ends or {},
+            text=text,
         )
 
     def _not_a_workbook(self) -> UnusableInputError:
@@ -195,6 +175,44 @@ class _PartReader:
             expected="an .xlsx or .xlsm workbook",
             remedy="save the data as .xlsx",
         )
+
+
+class _SharedTexts:
+    """Collects the shared texts."""
+
+    def __init__(self, archive: Archive, limits: Limits) -> None:
+        self._archive, self._limits = archive, limits
+        self.found: list[str] = []
+        self._pieces: list[str] = []
+        self._total = self._hints = 0
+        self._listening = False
+        self.starts: Starts = {"si": self._begin, "rPh": self._hint, "t": self._listen}
+        self.ends: Ends = {"si": self._finish, "rPh": self._hint_over, "t": self._stop}
+
+    def text(self, data: str) -> None:
+        if self._listening:
+            self._total += len(data)
+            if self._total > self._limits.text_total:
+                raise self._archive.too_large("more text than the limit")
+            self._pieces.append(data)
+
+    def _begin(self, _: dict[str, str]) -> None:
+        self._pieces.clear()
+
+    def _finish(self) -> None:
+        self.found.append("".join(self._pieces))
+
+    def _hint(self, _: dict[str, str]) -> None:
+        self._hints += 1
+
+    def _hint_over(self) -> None:
+        self._hints -= 1
+
+    def _listen(self, _: dict[str, str]) -> None:
+        self._listening = not self._hints
+
+    def _stop(self) -> None:
+        self._listening = False
 
 
 def _relation_id(at: dict[str, str]) -> str:

@@ -84,9 +84,9 @@ class Reader:
         content, figures, trouble = known
         if not figures or content.status is not None or trouble or claim.tolerance is not None:
             return self._read_with_care(claim, sheet, where, known)
-        return Outcome(
-            sheet, [_found(where, claim, figure) for figure in figures], None, None, content.footnotes
-        )
+        if len(figures) == 1:  # nearly every cell of a catalogue
+            return Outcome(sheet, [_found(where, claim, figures[0])], None, None, content.footnotes)
+        return Outcome(sheet, [_found(where, claim, f) for f in figures], None, None, content.footnotes)
 
     def _read_with_care(self, claim: Claim, sheet: str, where: CellRef, understood: _Understood) -> Outcome:
         """A claim whose cell says no figure, or more than one."""
@@ -164,11 +164,19 @@ class Reader:
 
 
 def _found(where: CellRef, claim: Claim, figure: Figure) -> Found:
-    value, tolerance = figure.quantity.value, figure.quantity.tolerance
-    text, heading, band = claim.cell.text, claim.context.heading, claim.band
-    if "frequency_high_mhz" in figure.at and band is None:
+    quantity, band = figure.quantity, claim.band
+    if band is None and "frequency_high_mhz" in figure.at:
         band = (figure.at["frequency_low_mhz"], figure.at["frequency_high_mhz"])
-    return Found(where, text, heading, figure, figure.parameter, value, band, tolerance)
+    return Found(
+        where,
+        claim.cell.text,
+        claim.context.heading,
+        figure,
+        figure.parameter,
+        quantity.value,
+        band,
+        quantity.tolerance,
+    )
 
 
 def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: str) -> Figure:

@@ -6,14 +6,14 @@ A single pass gives formula and stored result together, which a general workbook
 from __future__ import annotations
 
 import re
-from dataclasses import dataclass, field
+from dataclasses import dataclass
 
 from speccheck.intake.archive import Archive
 from speccheck.intake.grid import Cell, Grid, Raw, Span, text_of
 from speccheck.intake.limits import Limits
 from speccheck.intake.number_formats import date_of_serial, date_of_text, shows_date
 from speccheck.intake.package import Package, SheetEntry
-from speccheck.intake.xml_parts import stream
+from speccheck.intake.xml_parts import Ends, Starts, stream
 
 _ADDRESS = re.compile(r"([A-Z]{1,3})([0-9]{1,7})")
 _NO_RESULT = "formula without a stored result"
@@ -25,18 +25,6 @@ class Allowance:
     """Cells still allowed in this workbook."""
 
     cells: int
-
-
-@dataclass(slots=True)
-class _Open:
-    """The cell being read."""
-
-    kind: str = ""
-    style: str = ""
-    value: str = ""
-    formula: str = ""
-    has_formula: bool = False
-    texts: list[str] = field(default_factory=list)
 
 
 def read_sheet(
@@ -54,8 +42,8 @@ def read_sheet(
         file=archive.file,
         part=entry.part,
         limits=limits,
-        start=reader.start,
-        end=reader.end,
+        starts=reader.starts(),
+        ends=reader.ends(),
         text=reader.text,
     )
     return reader.grid()
@@ -78,40 +66,20 @@ class _SheetReader:
         self._pieces: list[str] = []
         self._listening = False
 
-    def start(self, tag: str, at: dict[str, str]) -> None:
-        if tag == "c":
-            self._start_cell(at)
-        elif tag in ("v", "f", "t"):
-            if tag == "f":
-                self._has_formula = True
-            if tag != "t":
-                self._pieces.clear()
-            self._listening = True
-        elif tag == "row":
-            number = at.get("r", "")
-            self._row = int(number) if number.isdigit() and len(number) < 8 else self._row + 1
-            self._column = 0
-            if at.get("hidden") in ("1", "true") or at.get("ht") == "0":
-                self._hidden_rows.add(self._row)
-        elif tag == "mergeCell":
-            self._merge(at.get("ref", ""))
-        elif tag == "col" and (at.get("hidden") in ("1", "true") or at.get("width") == "0"):
-            low, high = at.get("min", ""), at.get("max", "")
-            if low.isdigit() and high.isdigit():
-                self._hidden_columns.append((int(low), int(high)))
-        elif tag == "rPh":
-            self._listening = False
+    def starts(self) -> Starts:
+        return {
+            "c": self._start_cell,
+            "v": self._start_value,
+            "f": self._start_formula,
+            "t": self._start_text,
+            "row": self._start_row,
+            "mergeCell": self._merge,
+            "col": self._column_width,
+            "rPh": self._start_hint,
+        }
 
-    def end(self, tag: str) -> None:
-        if tag == "c":
-            if self._pieces or self._has_formula:
-                self._end_cell()
-        elif tag in ("v", "t"):
-            self._listening = False
-        elif tag == "f":
-            self._formula = "".join(self._pieces)
-            self._pieces.clear()
-            self._listening = False
+    def ends(self) -> Ends:
+        return {"c": self._end_cell, "v": self._end_text, "t": self._end_text, "f": self._end_formula}
 
     def text(self, data: str) -> None:
         if self._listening:
@@ -126,6 +94,42 @@ class _SheetReader:
         grid.spans = {(span.top, span.left): span for span in self._spans}
         grid.hidden_rows, grid.hidden_columns = frozenset(hidden_rows), tuple(ranges)
         return grid
+
+    def _start_row(self, at: dict[str, str]) -> None:
+        number = at.get("r", "")
+        self._row = int(number) if number.isdigit() and len(number) < 8 else self._row + 1
+        self._column = 0
+        if at.get("hidden") in ("1", "true") or at.get("ht") == "0":
+            self._hidden_rows.add(self._row)
+
+    def _column_width(self, at: dict[str, str]) -> None:
+        if at.get("hidden") in ("1", "true") or at.get("width") == "0":
+            low, high = at.get("min", ""), at.get("max", "")
+            if low.isdigit() and high.isdigit():
+                self._hidden_columns.append((int(low), int(high)))
+
+    def _start_value(self, _: dict[str, str]) -> None:
+        self._pieces.clear()
+        self._listening = True
+
+    def _start_formula(self, _: dict[str, str]) -> None:
+        self._has_formula = True
+        self._pieces.clear()
+        self._listening = True
+
+    def _start_text(self, _: dict[str, str]) -> None:
+        self._listening = True
+
+    def _start_hint(self, _: dict[str, str]) -> None:
+        self._listening = False
+
+    def _end_text(self) -> None:
+        self._listening = False
+
+    def _end_formula(self) -> None:
+        self._formula = "".join(self._pieces)
+        self._pieces.clear()
+        self._listening = False
 
     def _start_cell(self, at: dict[str, str]) -> None:
         address = at.get("r", "")
@@ -142,6 +146,8 @@ class _SheetReader:
         self._pieces.clear()
 
     def _end_cell(self) -> None:
+        if not (self._pieces or self._has_formula):
+            return
         stored = "".join(self._pieces)
         number_format = self._package.number_format(self._style) if self._style else ""
         raw, fault = self._value(stored, number_format)
@@ -202,8 +208,8 @@ class _SheetReader:
             return int(number), ""
         return number, ""
 
-    def _merge(self, reference: str) -> None:
-        ends = [_place(part) for part in reference.split(":", 1)]
+    def _merge(self, at: dict[str, str]) -> None:
+        ends = [_place(part) for part in at.get("ref", "").split(":", 1)]
         if len(ends) == 2 and ends[0] and ends[1] and len(self._spans) < self._limits.merged_ranges:
             (top, left), (bottom, right) = ends[0], ends[1]
             if top <= bottom and left <= right:

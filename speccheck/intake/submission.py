@@ -9,7 +9,7 @@ from dataclasses import dataclass
 from pathlib import Path
 
 from speccheck.errors import UnusableInputError
-from speccheck.intake.claims import SheetResult
+from speccheck.intake.claims import Draft, SheetResult
 from speccheck.intake.declared import contrary_notices
 from speccheck.intake.grid import Cell, Grid
 from speccheck.intake.joining import joined
@@ -18,7 +18,7 @@ from speccheck.intake.layout import read_layout
 from speccheck.intake.limits import Limits
 from speccheck.intake.notices import book_notices, footnotes, grid_notices, note_notices
 from speccheck.intake.opening import Book, open_book
-from speccheck.intake.panels import Builder
+from speccheck.intake.panels import Builder, Built
 from speccheck.intake.reading import Reader
 from speccheck.intake.tender_given_as_bid import refuse_tender
 from speccheck.quantities import decimal_habit
@@ -30,7 +30,18 @@ class Account:
     """A submission and what became of each filled cell: sheet, row and column to a word."""
 
     submission: Submission
-    roles: Mapping[tuple[str, int, int], str]
+    layouts: tuple[SheetResult, ...]
+    titles: tuple[Draft, ...]
+    built: tuple[Built, ...]
+
+    @property
+    def roles(self) -> dict[tuple[str, int, int], str]:
+        """What each filled cell was taken for; the word of reading it comes after that of its place."""
+        roles = {(r.grid.name, *place): role for r in self.layouts for place, role in r.roles.items()}
+        roles |= {(t.grid.name, c.cell.row, c.cell.column): "heading" for t in self.titles for c in t.claims}
+        for piece in self.built:
+            roles |= piece.roles
+        return roles
 
 
 def read_submission(
@@ -89,16 +100,12 @@ def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     for grid in book.grids:
         notices += grid_notices(grid, reader.where)
     unread: list[Unread] = []
-    roles: dict[tuple[str, int, int], str] = {}
     for result in results:
         notices += note_notices(result, labels, reader.where)
         notices += contrary_notices(result.declared, result.grid.name, reader)
         unread += _layout_unread(result, reader)
-        roles.update({(result.grid.name, row, column): role for (row, column), role in result.roles.items()})
-    roles.update({(t.grid.name, c.cell.row, c.cell.column): "heading" for t in titles for c in t.claims})
     for piece in built:
         unread += piece.unread
-        roles.update(piece.roles)
     submission = Submission(
         file=book.file,
         sha256=book.sha256,
@@ -108,7 +115,7 @@ def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
         notices=tuple(notices),
         mirror=tuple(_mirror(grid) for grid in book.grids),
     )
-    return Account(submission, roles)
+    return Account(submission, tuple(results), tuple(titles), tuple(built))
 
 
 def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
@@ -129,17 +136,17 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
 
 def _mirror(grid: Grid) -> MirrorSheet:
     cells = {**grid.cells, **grid.hidden_cells} if grid.hidden_cells else grid.cells
-    ordered = (cells[place] for place in sorted(cells))
     return MirrorSheet(
         name=grid.name,
         hidden=grid.hidden,
-        cells=tuple(MirrorCell(cell.address, _plain_value(cell), cell.formula) for cell in ordered),
+        cells=tuple([_mirrored(cells[place]) for place in sorted(cells)]),
     )
 
 
-def _plain_value(cell: Cell) -> str | float | None:
+def _mirrored(cell: Cell) -> MirrorCell:
     raw = cell.raw
-    return raw if isinstance(raw, str | float | int) and not isinstance(raw, bool) else cell.text
+    value = raw if isinstance(raw, str | float | int) and not isinstance(raw, bool) else cell.text
+    return MirrorCell(cell.address, value, cell.formula)
 
 
 def _no_table(book: Book) -> UnusableInputError:

@@ -6,7 +6,7 @@ refused at once: without one there are no entities to expand and nothing externa
 
 from __future__ import annotations
 
-from collections.abc import Callable, Iterable
+from collections.abc import Callable, Iterable, Mapping
 from xml.parsers import expat
 
 from speccheck.errors import UnusableInputError
@@ -15,15 +15,17 @@ from speccheck.intake.limits import Limits
 _LONG = 500_000
 """A piece of this many bytes without a new element is one text no cell can hold."""
 
-Start = Callable[[str, dict[str, str]], None]
-End = Callable[[str], None]
+Starts = Mapping[str, Callable[[dict[str, str]], None]]
+"""What is done at the start of an element, given its attributes, by the element's name."""
+
+Ends = Mapping[str, Callable[[], None]]
 Text = Callable[[str], None]
 
 
 def stream(
-    chunks: Iterable[bytes], *, file: str, part: str, limits: Limits, start: Start, end: End, text: Text
+    chunks: Iterable[bytes], *, file: str, part: str, limits: Limits, starts: Starts, ends: Ends, text: Text
 ) -> None:
-    """Feed a part to the handlers; element names come without their namespace prefix.
+    """Feed a part to the handlers, found by element names without their namespace prefix.
 
     Raises
     ------
@@ -32,15 +34,18 @@ def stream(
     parser = expat.ParserCreate()
     parser.buffer_text = True
     count = 0
-    local: dict[str, str] = {}
 
     def started(name: str, attributes: dict[str, str]) -> None:
         nonlocal count
         count += 1
-        start(local.get(name) or local.setdefault(name, name[name.rfind(":") + 1 :]), attributes)
+        start = starts.get(name) or starts.get(name[name.rfind(":") + 1 :])
+        if start is not None:
+            start(attributes)
 
     def ended(name: str) -> None:
-        end(local.get(name) or name)
+        end = ends.get(name) or ends.get(name[name.rfind(":") + 1 :])
+        if end is not None:
+            end()
 
     def refuse_document_type(*_: object) -> None:
         raise _unusable(file, f"a document type declaration in '{part}'", "remove it; spreadsheets have none")
