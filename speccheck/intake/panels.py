@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Mapping
 from dataclasses import dataclass, field, replace
+from functools import lru_cache
 
 from speccheck.dictionary import parameters
 from speccheck.intake.bands import find_bands
@@ -150,7 +151,8 @@ class Builder:
         for one in found:
             one.remark = remark
             for marker in markers:
-                settle_by_note(one, notes.get(marker, ""))
+                if marker in notes:
+                    settle_by_note(one, notes[marker])
 
 
 def _name_to_span(found: Found) -> None:
@@ -170,6 +172,7 @@ def _in_figures(found: list[Found]) -> bool:
     )
 
 
+@lru_cache(maxsize=2000)
 def _markers(heading: str) -> tuple[str, ...]:
     """Footnote markers of a heading; of headings one above another each may have its own."""
     return tuple(marker for part in heading.split(" / ") for marker in split_footnotes(part)[1])
