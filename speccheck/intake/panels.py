@@ -187,7 +187,7 @@ def _shared_out(
         if bands and not claim.banded and claim.band is None and not _in_figures(found):
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
-    if trouble := part_by_plane(found):
+    if len(found) > 1 and (trouble := part_by_plane(found)):
         return [], Unread(where=first.where, text=first.raw, reason=trouble, suggestion=ASK_FOR_PLANES)
     alike = _plain_list(found)
     tilts, statistics = claim.context.label.tilts, claim.context.label.statistics
