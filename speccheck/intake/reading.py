@@ -62,7 +62,7 @@ class Reader:
     def read(self, claim: Claim, sheet: str) -> Outcome:
         """Readings of one claim, or its statement, or why it was not read."""
         cell, context = claim.cell, claim.context
-        where = self.where(sheet, cell.address)
+        where = CellRef(self._file, sheet, cell.address)
         if cell.fault:
             return Outcome(
                 sheet,
