@@ -92,5 +92,6 @@ influences       gain_influences(layout, freq_hz, gain, *, tilt_deg=0, scan_deg=
 
 Inner workings, in the order of a calculation: layout (lines, row_shifts, wavenumber, row_weights,
 column_weights) places and drives the elements, field gives the far field, beam finds where it points,
-radiated integrates it by the lag form, cuts samples both principal cuts, readings reads widths and lobes.
+radiated integrates it by the lag form (quadrature serves the kernels of its elements), cuts samples both
+principal cuts, readings reads widths and lobes.
 """

@@ -41,7 +41,7 @@ def find_beam(states: Excitation) -> Beam:
     Returns [Beam]: direction and power factors, shape (S,) each.
     Source: definition of the beam peak; analytic derivatives of the array factor.
     """
-    reach_t, reach_p = (_reach(states, axis) for axis in (0, 1))
+    reach = _reach(states)
     theta, phi = _pulled(states)
     for _ in range(_STEPS):
         g_t, g_p, h_t, h_p, h_tp = _derivatives(states, theta, phi)
@@ -50,10 +50,10 @@ def find_beam(states: Excitation) -> Beam:
             d_theta, d_phi = (h_tp * g_p - h_p * g_t) / determinant, (h_tp * g_t - h_t * g_p) / determinant
         else:  # each axis on its own
             d_theta, d_phi = _uphill(g_t, h_t), _uphill(g_p, h_p)
-        d_theta = np.minimum(np.maximum(d_theta, -reach_t), reach_t)
-        d_phi = np.minimum(np.maximum(d_phi, -reach_p), reach_p)
-        theta, phi = theta + d_theta, phi + d_phi
-        if max(np.abs(d_theta).max(), np.abs(d_phi).max()) < _SETTLED_RAD:
+        step = np.array([d_theta, d_phi])
+        step = np.minimum(np.maximum(step, -reach), reach)
+        theta, phi = theta + step[0], phi + step[1]
+        if np.abs(step).max() < _SETTLED_RAD:
             break
     row, column = _turned(states, np.sin(theta) * np.sin(phi), np.cos(theta))
     return Beam(theta, phi, states.element.power(theta, phi), squared(row.sum(1)), squared(column.sum(1)))
@@ -61,24 +61,27 @@ def find_beam(states: Excitation) -> Beam:
 
 def _pulled(states: Excitation) -> tuple[Floats, Floats]:
     """First guess: each line a parabola by the spread of its weights, pulled in by the element alone."""
-    start = np.array([states.theta_rad - np.pi / 2, states.phi_rad])
+    angle = np.array([states.theta_rad - np.pi / 2, states.phi_rad])
     stiff = np.array([[2 * line.spread_m2] for line in lines(states.layout)]) * states.wavenumbers**2
-    angle, sine = start, np.sin(start)
+    sine = np.sin(angle)
     for _ in range(2):
         now, cosine = np.sin(angle), np.cos(angle)
-        slopes = np.array(states.element.log_slopes(angle[0] + np.pi / 2, angle[1])).reshape(2, 2, -1)
-        off = now - sine
-        gradient = slopes[0] - stiff * off * cosine
-        bend = np.minimum(slopes[1] - stiff * (cosine * cosine - off * now), -_FLAT)
-        angle = angle - gradient / bend
+        stiff_off, stiff_cosine = stiff * (now - sine), stiff * cosine
+        gradient, bend = -stiff_off * cosine, stiff_off * now - stiff_cosine * cosine
+        e_t, e_p, e_tt, e_pp = states.element.log_slopes(angle[0] + np.pi / 2, angle[1])
+        gradient[0] += e_t
+        gradient[1] += e_p
+        bend[0] += e_tt
+        bend[1] += e_pp
+        angle -= gradient / np.minimum(bend, -_FLAT)
     return angle[0] + np.pi / 2, angle[1]
 
 
-def _reach(states: Excitation, axis: int) -> float:
-    """Longest step [rad]: about a third of a null width of the aperture, and never more than a sixth."""
-    positions = lines(states.layout)[axis].positions
-    extent = float(positions[-1] - positions[0])
-    return min(2.0 / (float(states.distinct.max()) * (extent + 1e-9)), 0.17)
+def _reach(states: Excitation) -> Floats:
+    """Longest step [rad] by theta and phi: about a third of a null width, never more than a sixth."""
+    k = float(states.distinct.max())
+    extents = (float(line.positions[-1] - line.positions[0]) for line in lines(states.layout))
+    return np.array([[min(2.0 / (k * (extent + 1e-9)), 0.17)] for extent in extents])
 
 
 def _uphill(gradient: Floats, curvature: Floats) -> Floats:
@@ -110,8 +113,7 @@ def _factor_derivatives(
     rows, columns = lines(states.layout)
     k = states.wavenumbers
     turned, column = _turned(states, u_y, u_z)
-    y, yy = _log_derivatives(column @ columns.moments)
-    z, zz = _log_derivatives(turned @ rows.moments)
+    (y, z), (yy, zz) = _log_derivatives(np.array([column @ columns.moments, turned @ rows.moments]))
     if states.row_shifts_m is None:
         return k * z, k * y, k * k * zz, k * k * yy, None
     shift = 1j * states.row_shifts_m
@@ -133,7 +135,6 @@ def _turned(states: Excitation, u_y: Floats, u_z: Floats) -> tuple[Complex, Comp
 
 
 def _log_derivatives(moments: Complex) -> tuple[Floats, Floats]:
-    """First and second derivative of the log power from a factor and its two derivatives, shape (S, 3)."""
-    scaled = moments[:, 1:] / moments[:, :1]
-    slope = scaled[:, 0]
-    return 2 * slope.real, 2 * (scaled[:, 1] - slope * slope).real
+    """First and second derivative of the log power from a factor and its two derivatives, shape (..., 3)."""
+    slope, bend = moments[..., 1] / moments[..., 0], moments[..., 2] / moments[..., 0]
+    return 2 * slope.real, 2 * (bend - slope * slope).real

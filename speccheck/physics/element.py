@@ -14,9 +14,22 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from speccheck.physics.decibels import Floats, db, floats, ratio
+from speccheck.physics.quadrature import (
+    cosine_sums,
+    even_coefficients,
+    even_nodes,
+    even_polynomials,
+    legendre,
+    legendre_order,
+)
 
 _PER_DB = np.log(10) / 10
 """Nepers of power [1] in a decibel."""
+_PARABOLA = float(-24 * _PER_DB * np.degrees(1) ** 2)
+"""Curvature of the logarithm of a parabola in dB [1/rad^2], times the square of its width [deg^2]."""
+_SPAN_STEP, _WIDEST_SPAN = 16.0, 80.0
+"""Phases [rad] of the longest lag: kernel series are kept in these steps; beyond, building one costs more
+than it saves."""
 
 
 class Element(Protocol):
@@ -29,7 +42,7 @@ class Element(Protocol):
     def __hash__(self) -> int: ...
 
     def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
-        """Slopes and curvatures of log power by theta_rad [rad] and phi_rad [rad]: t, p, tt, pp."""
+        """Slopes and curvatures of log power by theta_rad [rad], phi_rad [rad]: t, p, tt, pp."""
         ...
 
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
@@ -84,11 +97,11 @@ class SectorElement:
         >>> float(db(SectorElement().power(np.pi / 2, np.radians(32.5))).round(4))
         -3.0
         """
-        elevation = (np.degrees(theta_rad) - 90) / self.el_hpbw_deg
-        azimuth = np.degrees(phi_rad) / self.az_hpbw_deg
-        vertical = np.minimum(12 * elevation * elevation, self.el_floor_db)
+        elevation, azimuth = floats(theta_rad) - np.pi / 2, floats(phi_rad)
+        bend_t, bend_p = (_PARABOLA / (2 * w * w) for w in (self.el_hpbw_deg, self.az_hpbw_deg))
         # the exponentials run over each angle alone, not over all pairs
-        product = np.exp(-_PER_DB * vertical) * np.exp(-12 * _PER_DB * azimuth * azimuth)
+        vertical = np.exp(np.maximum(bend_t * elevation * elevation, -_PER_DB * self.el_floor_db))
+        product = vertical * np.exp(bend_p * azimuth * azimuth)
         return np.asarray(np.maximum(product, 10 ** (-self.floor_db / 10)))
 
     def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
@@ -99,11 +112,30 @@ class SectorElement:
         Returns [1/rad, 1/rad, 1/rad^2, 1/rad^2]: by theta, phi, theta twice, phi twice.
         Source: derivative of the parabolas.
         """
-        bend_t, bend_p = (-24 * _PER_DB / np.radians(w) ** 2 for w in (self.el_hpbw_deg, self.az_hpbw_deg))
-        slope_t = bend_t * (theta_rad - np.pi / 2)
-        return slope_t, bend_p * phi_rad, np.full_like(slope_t, bend_t), np.full_like(slope_t, bend_p)
+        bend_t, bend_p = (_PARABOLA / (w * w) for w in (self.el_hpbw_deg, self.az_hpbw_deg))
+        return bend_t * (theta_rad - np.pi / 2), bend_p * phi_rad, np.array(bend_t), np.array(bend_p)
 
     def kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
+        """Kernel of the element, of a panel of ordinary size by one series for all such panels.
+
+        wavenumbers [rad/m]: 2 pi / wavelength, shape (F,).
+        y_m [m]: horizontal lags, shape (Y,).
+        z_m [m]: vertical lags, shape (Z,).
+        Returns [1]: integrals, shape (F, Y, Z).
+        Source: it depends on wavenumber times lag alone, and is even and band-limited in either: a short
+        Chebyshev series.
+        """
+        highest = float(wavenumbers.max())
+        y_phase, z_phase = highest * float(np.abs(y_m).max()), highest * float(np.abs(z_m).max())
+        if min(y_phase, z_phase) == 0 or max(y_phase, z_phase) > _WIDEST_SPAN:
+            return self.integrated_kernel(wavenumbers, y_m, z_m)
+        y_span, z_span = (_SPAN_STEP * float(np.ceil(phase / _SPAN_STEP)) for phase in (y_phase, z_phase))
+        series = _kernel_series(self, y_span, z_span)
+        over_y = even_polynomials(wavenumbers[:, None] * (y_m / y_span), series.shape[0])
+        over_z = even_polynomials(wavenumbers[:, None] * (z_m / z_span), series.shape[1])
+        return np.asarray(over_y @ series @ over_z.transpose(0, 2, 1))
+
+    def integrated_kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
         """Kernel of the element: the floor in closed form, the rest by quadrature over its own region.
 
         wavenumbers [rad/m]: 2 pi / wavelength, shape (F,).
@@ -114,9 +146,12 @@ class SectorElement:
         """
         y_phase, z_phase = (float(wavenumbers.max() * np.abs(lags).max()) for lags in (y_m, z_m))
         reach = np.radians(min(180.0, self.az_hpbw_deg * (self.floor_db / 12) ** 0.5))
-        orders = _order(np.pi / 4 * float(np.hypot(y_phase, z_phase))), _order(reach / 2 * y_phase)
+        orders = (
+            legendre_order(np.pi / 4 * float(np.hypot(y_phase, z_phase))),
+            legendre_order(reach / 2 * y_phase),
+        )
         sines, u_z, weights = _nodes(self, *orders)
-        over_phi = _cosine_sums(wavenumbers[:, None, None] * sines, y_m, weights)
+        over_phi = cosine_sums(wavenumbers[:, None, None] * sines, y_m, weights)
         over_theta: Floats = over_phi @ np.cos((wavenumbers[:, None] * u_z)[:, :, None] * z_m)
         return over_theta + ratio(-self.floor_db) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
@@ -169,8 +204,8 @@ class CosineElement:
         Source: half of the mean of cos(k r sin psi cos chi), weighted by cos^n psi; trapezoid in chi.
         """
         distance = wavenumbers[:, None, None] * np.hypot(y_m[None, :, None], z_m[None, None, :])
-        order = _order(float(distance.max())) + 16
-        nodes, weights = _legendre(order)
+        order = legendre_order(float(distance.max())) + 16
+        nodes, weights = legendre(order)
         root = (nodes + 1) / 2  # cos psi = root^2 keeps a fractional power smooth at the horizon
         weights = weights * root * root ** (2 * self.exponent)
         turns = np.cos(np.pi * (np.arange(order) + 0.5) / order)
@@ -224,47 +259,17 @@ class IsotropicElement:
         return (0.5 if self.front_only else 1.0) * _isotropic_kernel(wavenumbers, y_m, z_m)
 
 
-def _cosine_sums(angles: Floats, lags: Floats, weights: Floats) -> Floats:
-    """Sums over the last axis of weights (T, P) times cos(lag angle), angles (F, T, P): shape (F, L, T).
-
-    By recurrence where the lags are whole multiples of one step: cos(n + 1)x = 2 cos x cos nx - cos(n - 1)x.
-    """
-    ones = np.ones(angles.shape[-1])
-    out = np.empty((len(lags), *angles.shape[:2]))
-    steps = lags[1:] - lags[:-1]
-    if len(lags) < 3 or abs(lags[0]) > 1e-12 or steps.max() - steps.min() > 1e-9 * steps[0]:
-        for n, lag in enumerate(lags):
-            out[n] = (weights * np.cos(lag * angles)) @ ones
-        return out.transpose(1, 0, 2)
-    twice = np.cos(steps[0] * angles)
-    before, last = weights, weights * twice
-    twice += twice
-    out[0], out[1] = before @ ones, last @ ones
-    for n in range(2, len(lags)):
-        following = twice * last
-        following -= before
-        before, last = last, following
-        out[n] = last @ ones
-    return out.transpose(1, 0, 2)
-
-
 def _isotropic_kernel(wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:
     distance = np.hypot(y_m[:, None], z_m)
     return np.sinc(wavenumbers[:, None, None] / np.pi * distance)
 
 
-def _order(phase_rad: float) -> int:
-    """Quadrature order for a phase that swings by this much either side of the middle of the span.
-
-    Half of it resolves the swing; the rest covers the pattern and the edge of the swing (1e-7 and better).
-    """
-    return 2 * int(np.ceil((phase_rad / 2 + 6 + np.cbrt(phase_rad)) / 2)) + 2 * (phase_rad < 1)
-
-
 @lru_cache(maxsize=64)
-def _legendre(order: int) -> tuple[Floats, Floats]:
-    nodes, weights = np.polynomial.legendre.leggauss(order)
-    return nodes, weights
+def _kernel_series(element: SectorElement, y_span: float, z_span: float) -> Floats:
+    """Chebyshev coefficients of the kernel, even orders of y (first axis) and of z, both as phases [rad]."""
+    y, z = even_nodes(y_span), even_nodes(z_span)
+    samples = element.integrated_kernel(np.ones(1), y, z)[0]
+    return np.asarray(even_coefficients(len(y)) @ samples @ even_coefficients(len(z)).T)
 
 
 @lru_cache(maxsize=64)
@@ -273,12 +278,12 @@ def _nodes(element: SectorElement, elevations: int, azimuths: int) -> tuple[Floa
     floor, flat = element.floor_db, min(element.el_floor_db, element.floor_db)
     edge = min(90.0, element.el_hpbw_deg * np.sqrt(flat / 12))
     spans = [(0.0, edge)] if edge >= 90 or flat >= floor else [(0.0, edge), (edge, 90.0)]
-    nodes, weights = _legendre(elevations)
+    nodes, weights = legendre(elevations)
     elevation = np.concatenate([low + (high - low) * (nodes + 1) / 2 for low, high in spans])
     d_elevation = np.radians(np.concatenate([(high - low) / 2 * weights for low, high in spans]))
     vertical = np.minimum(12 * (elevation / element.el_hpbw_deg) ** 2, flat)
     reach = np.minimum(180.0, element.az_hpbw_deg * np.sqrt(np.maximum(floor - vertical, 0) / 12))
-    nodes, weights = _legendre(azimuths)
+    nodes, weights = legendre(azimuths)
     azimuth = reach[:, None] * (nodes + 1) / 2
     above_floor = ratio(-(vertical[:, None] + 12 * (azimuth / element.az_hpbw_deg) ** 2)) - ratio(-floor)
     solid = d_elevation[:, None] * np.radians(reach)[:, None] / 2 * weights

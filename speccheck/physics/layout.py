@@ -193,11 +193,11 @@ def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[
     amplitudes = np.ones(len(positions))
     if taper:
         amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
-    squares = positions * positions
-    total = float(amplitudes.sum())
-    spread = float(amplitudes @ squares) / total - (float(amplitudes @ positions) / total) ** 2
     moments = np.ones((len(positions), 3), complex)
-    moments.imag[:, 1], moments.real[:, 1], moments.real[:, 2] = positions, 0, -squares
+    np.multiply(positions, 1j, out=moments[:, 1])
+    np.multiply(moments[:, 1], moments[:, 1], out=moments[:, 2])
+    total, first, second = (amplitudes @ moments).tolist()
+    spread = float(((first * first - total * second) / (total * total)).real)
     return Line(positions, centres, amplitudes, pitch, spread, moments, _factors(inner, outer, taper, pitch))
 
 

@@ -49,73 +49,64 @@ def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     """
     cuts, count = level.shape
     index = np.arange(count, dtype=np.int16)
-    at_peak = np.rint(np.interp(peak_rad, angle_rad, index)).astype(np.int16)[:, None]
+    at_peak = np.rint(np.interp(peak_rad, angle_rad, index)).astype(np.int16)
+    # what lies before the beam lies after it on the cut read backwards
+    rays = np.concatenate([level, level[:, ::-1]])
+    beyond = index > np.concatenate([at_peak, count - 1 - at_peak])[:, None]
     # single precision hides the rounding of a flat cut and halves the work of comparing
-    coarse = level.astype(np.float32)
-    sides = index > at_peak, index < at_peak
-    edges = angle_at(_half_power(level, coarse, sides), count)
-    minima, lobes, found = _lobes_beside(coarse, sides, index)
-    outside = (index >= minima[0][:, None]) | (index <= minima[1][:, None])
-    best = np.where(outside, coarse, np.float32(-1)).argmax(1)
-    some = outside.any(1)
-    height, offset = _vertex(level, np.arange(3 * cuts) % cuts, np.concatenate([*lobes, best]))
+    coarse = rays.astype(np.float32)
+    edges = _half_power(rays, coarse, beyond)
+    minimum, lobe, found = _lobes_beside(coarse, beyond, index)
+    outside = (index >= minimum[:cuts, None]) | (index < count - minimum[cuts:, None])
+    best = (coarse[:cuts] * outside).argmax(1)
+    found = np.concatenate([found, outside[np.arange(cuts), best]])
+    height, offset = _vertex(rays, np.arange(3 * cuts) % (2 * cuts), np.concatenate([lobe, best]))
+    height[~found] = np.nan
     height_db = 10 * np.log10(np.maximum(height, 1e-30))
-    height_db[~np.concatenate([*found, some])] = np.nan
+    angles = angle_at(np.concatenate([edges, best + offset[2 * cuts :]]), count)
     return CutFigures(
-        edges[:cuts] - edges[cuts:],
+        angles[:cuts] + angles[cuts : 2 * cuts],
         height_db[cuts : 2 * cuts],
         height_db[:cuts],
         height_db[2 * cuts :],
-        np.where(some, angle_at(best + offset[2 * cuts :], count), np.nan),
+        np.where(found[2 * cuts :], angles[2 * cuts :], np.nan),
     )
 
 
-def _half_power(level: Floats, coarse: Singles, sides: tuple[Flags, Flags]) -> Floats:
-    """Fractional index of the half-power crossings, after the beam and then before it; nan: none.
+def _half_power(rays: Floats, coarse: Singles, beyond: Flags) -> Floats:
+    """Fractional index of the half-power crossings after the beam; nan: none.
 
     By the cubic through four samples: a secant, then one step of Newton's method.
     """
-    cuts, count = level.shape
-    low = coarse < np.float32(0.5)
-    after, before = low & sides[0], low & sides[1]
-    right = after.argmax(1)
-    left = count - 1 - before[:, ::-1].argmax(1)
-    between = np.concatenate([np.maximum(right - 1, 0), np.minimum(left, count - 2)])
-    rows = np.arange(2 * cuts) % cuts * count
+    each, count = np.arange(len(rays)), rays.shape[1]
+    low = (coarse < np.float32(0.5)) & beyond
+    first = low.argmax(1)
+    between = np.maximum(first - 1, 0)
     base = np.minimum(np.maximum(between, 1), count - 3)
-    flat = level.ravel()
-    c0, c1, c2, c3 = _CUBIC @ flat[rows + base + _FOUR]
-    here, there = flat[rows + between + _TWO]
+    c0, c1, c2, c3 = _CUBIC @ rays[each, base + _FOUR]
+    here, there = rays[each, between + _TWO]
     fall = here - there
-    at = (between - base) + (here - 0.5) / np.where(fall == 0, 1.0, fall)
+    fall[fall == 0] = 1.0
+    at = (between - base) + (here - 0.5) / fall
     slope = c1 + at * (2 * c2 + 3 * c3 * at)
-    at = at - (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / np.where(slope == 0, 1.0, slope)
-    each = np.arange(cuts)
-    crossed = np.concatenate([after[each, right], before[each, left]])
-    return np.where(crossed, base + at, np.nan)
+    slope[slope == 0] = 1.0
+    at -= (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / slope
+    return np.where(low[each, first], base + at, np.nan)
 
 
-def _lobes_beside(
-    coarse: Singles, sides: tuple[Flags, Flags], index: Places
-) -> tuple[tuple[Places, Places], tuple[Indices, Indices], tuple[Flags, Flags]]:
-    """After the beam and before it: index of the first minimum (off the cut: none), of the lobe, if any.
+def _lobes_beside(coarse: Singles, beyond: Flags, index: Places) -> tuple[Places, Indices, Flags]:
+    """Index of the first minimum after the beam (off the cut: none), of the lobe that follows, if any.
 
     A lobe needs a fall beyond it: a rise up to the end of the cut is none.
     """
-    cuts, count = coarse.shape
-    each = np.arange(cuts)
-    up, down = coarse[:, 1:] > coarse[:, :-1], coarse[:, 1:] < coarse[:, :-1]
-    climbs = up & sides[0][:, :-1]
+    each, count = np.arange(len(coarse)), coarse.shape[1]
+    up = coarse[:, 1:] > coarse[:, :-1]
+    climbs = up & beyond[:, :-1]
     first = climbs.argmax(1)
-    after = np.where(climbs[each, first], first, 2 * count).astype(np.int16)
-    falls = (index[:-1] > after[:, None]) > up
+    minimum = np.where(climbs[each, first], first, 2 * count).astype(np.int16)
+    falls = (index[:-1] > minimum[:, None]) > up
     lobe = falls.argmax(1)
-    drops = (down & sides[1][:, 1:])[:, ::-1]
-    first = drops.argmax(1)
-    before = np.where(drops[each, first], count - 1 - first, -1 - count).astype(np.int16)
-    rises = ((index[1:] < before[:, None]) > down)[:, ::-1]
-    other = rises.argmax(1)
-    return (after, before), (lobe, count - 1 - other), (falls[each, lobe], rises[each, other])
+    return minimum, lobe, falls[each, lobe]
 
 
 def _vertex(level: Floats, rows: Indices, at: Indices) -> tuple[Floats, Floats]:
@@ -124,14 +115,19 @@ def _vertex(level: Floats, rows: Indices, at: Indices) -> tuple[Floats, Floats]:
 
     The outermost two samples of a cut stay as they are.
     """
-    count = level.shape[1]
-    base = np.minimum(np.maximum(at, 2), count - 3)
-    c0, c1, c2, c3, c4 = _QUARTIC @ level.ravel()[rows * count + base + _FIVE]
-    t = np.minimum(np.maximum(-c1 / np.where(c2 < 0, 2 * c2, -np.inf), -0.6), 0.6)
-    bend = 2 * c2 + t * (6 * c3 + 12 * c4 * t)
-    t = t - (c1 + t * (2 * c2 + t * (3 * c3 + 4 * c4 * t))) / np.where(bend < 0, bend, -np.inf)
-    t = np.minimum(np.maximum(t, -0.6), 0.6)
+    base = np.minimum(np.maximum(at, 2), level.shape[1] - 3)
+    c0, c1, c2, c3, c4 = _QUARTIC @ level[rows, base + _FIVE]
+    double, triple, quadruple = 2 * c2, 3 * c3, 4 * c4
+    t = _within(c1 / -np.where(double < 0, double, -np.inf))
+    slope = c1 + t * (double + t * (triple + t * quadruple))
+    bend = double + t * (2 * triple + t * (3 * quadruple))
+    t -= slope / np.where(bend < 0, bend, -np.inf)
     inner = base == at
-    t = np.where(inner, t, 0.0)
+    t = np.where(inner, _within(t), 0.0)
     height = c0 + t * (c1 + t * (c2 + t * (c3 + t * c4)))
-    return np.where(inner, height, level.ravel()[rows * count + at]), t
+    return np.where(inner, height, level[rows, at]), t
+
+
+def _within(offset: Floats) -> Floats:
+    """Offsets [samples] kept near the highest sample."""
+    return np.minimum(np.maximum(offset, -0.6), 0.6)
