@@ -34,6 +34,7 @@ class _Field:
     context: Context
     role: str = ""
     misses: int = 0
+    of_frequency: bool = False
 
 
 @dataclass(slots=True)
@@ -95,7 +96,9 @@ class AcrossReader:
                 heading=column.heading,
                 band_name=column.band_name if column.band is None else "",
             )
-            self._fields[index] = _Field(column, label, context, role)
+            self._fields[index] = _Field(
+                column, label, context, role, of_frequency=set(label.parameters) <= _FREQUENCY_KEYS
+            )
 
     def _choose_names_and_bands(self) -> None:
         fields = self._fields
@@ -120,7 +123,7 @@ class AcrossReader:
         self._nicknamed = nicknames[0] if nicknames else 0
 
     def _is_frequency(self, found: _Field) -> bool:
-        of_label = bool(found.label) and set(found.label.parameters) <= _FREQUENCY_KEYS
+        of_label = bool(found.label) and found.of_frequency
         return found.role == "band" or (of_label and not found.context.statistic)
 
     def _unit_of(self, index: int) -> str:
@@ -220,7 +223,7 @@ class AcrossReader:
             self._result.mark(cell, "label")
         elif found.label:
             band, banded = column.band, column.band is not None or bool(column.band_name)
-            of_row = column.index == self._banded or not set(found.label.parameters) <= _FREQUENCY_KEYS
+            of_row = column.index == self._banded or not found.of_frequency
             context = self._noted(found.context, said.name) if of_row else found.context
             if not banded and of_row and said.known:
                 band, banded = said.band, True

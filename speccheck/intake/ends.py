@@ -16,7 +16,7 @@ def join_ends(outcomes: list[tuple[Claim, Outcome]]) -> None:
     """Make one range of the lower and the upper end; its place is the cell of the lower one."""
     lower: dict[tuple[str, int, str, object], Found] = {}
     for claim, outcome in outcomes:
-        if len(outcome.found) != 1 or claim.context.statistic not in ("min", "max"):
+        if claim.context.statistic not in ("min", "max") or len(outcome.found) != 1:
             continue
         found = outcome.found[0]
         if parameters()[found.parameter].kind not in _RANGES or not isinstance(found.value, float):

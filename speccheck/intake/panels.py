@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Mapping
-from dataclasses import dataclass, field, replace
+from dataclasses import dataclass, replace
 from functools import lru_cache
 
 from speccheck.dictionary import parameters
@@ -63,8 +63,13 @@ class Built:
     """A panel with what was not read of it, and what each of its cells became."""
 
     panel: Panel
-    unread: list[Unread] = field(default_factory=list)
-    roles: dict[tuple[str, int, int], str] = field(default_factory=dict)
+    unread: list[Unread]
+    outcomes: list[tuple[Claim, Outcome]]
+
+    @property
+    def roles(self) -> dict[tuple[str, int, int], str]:
+        """What each cell became: sheet, row and column to a word."""
+        return {(o.sheet, c.cell.row, c.cell.column): _role(c, o) for c, o in self.outcomes}
 
 
 class Builder:
@@ -76,7 +81,7 @@ class Builder:
     def build(self, draft: Draft) -> Built:
         """Read the claims of a draft and settle what only the whole panel can settle."""
         where = self._reader.where(draft.grid.name, draft.where.address)
-        built = Built(Panel(name=draft.name, where=where))
+        unread: list[Unread] = []
         statements: list[Statement] = []
         readings: list[Found] = []
         tolerances: list[tuple[Claim, Outcome]] = []
@@ -89,31 +94,29 @@ class Builder:
         resolve_nicknames(outcomes)
         several = self._bands(draft, outcomes)
         for claim, outcome in outcomes:
-            role = "reading" if outcome.joined else "unread"
             if claim.context.label.tolerance:
                 tolerances.append((claim, outcome))
-                role = "label"
-            else:
-                if outcome.found:
-                    role = "reading"
-                    found, trouble = _shared_out(claim, outcome.found, draft.bands, several)
-                    self._add_notes(found, outcome, claim)
-                    readings += found
-                    if trouble is not None:
-                        built.unread.append(trouble)
-                if outcome.statement is not None:
-                    role = "statement"
-                    statements.append(outcome.statement)
-                if outcome.unread is not None:
-                    built.unread.append(outcome.unread)
-            built.roles[outcome.sheet, claim.cell.row, claim.cell.column] = role
-        _add_tolerances(readings, tolerances, built.unread)
+                continue
+            if outcome.found:
+                found, trouble = _shared_out(claim, outcome.found, draft.bands, several)
+                self._add_notes(found, outcome, claim)
+                readings += found
+                if trouble is not None:
+                    unread.append(trouble)
+            if outcome.statement is not None:
+                statements.append(outcome.statement)
+            if outcome.unread is not None:
+                unread.append(outcome.unread)
+        _add_tolerances(readings, tolerances, unread)
         _place(readings, draft.bands, several)
         unband_repeated(readings)
-        built.panel = replace(
-            built.panel, readings=tuple(f.reading() for f in readings), statements=tuple(statements)
+        panel = Panel(
+            name=draft.name,
+            where=where,
+            readings=tuple([f.reading() for f in readings]),
+            statements=tuple(statements),
         )
-        return built
+        return Built(panel, unread, outcomes)
 
     def _bands(self, draft: Draft, outcomes: list[tuple[Claim, Outcome]]) -> bool:
         """Complete the draft's bands from its frequency cells; True when it has several."""
@@ -155,6 +158,14 @@ class Builder:
                     settle_by_note(one, notes[marker])
 
 
+def _role(claim: Claim, outcome: Outcome) -> str:
+    if claim.context.label.tolerance:
+        return "label"
+    if outcome.statement is not None:
+        return "statement"
+    return "reading" if outcome.found or outcome.joined else "unread"
+
+
 def _name_to_span(found: Found) -> None:
     """A band given by name ('n78') as its frequencies."""
     if isinstance(found.value, str):
@@ -187,7 +198,9 @@ def _shared_out(
         if bands and not claim.banded and claim.band is None and not _in_figures(found):
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
-    if len(found) > 1 and (trouble := part_by_plane(found)):
+    if len(found) == 1:
+        return found, None
+    if trouble := part_by_plane(found):
         return [], Unread(where=first.where, text=first.raw, reason=trouble, suggestion=ASK_FOR_PLANES)
     alike = _plain_list(found)
     tilts, statistics = claim.context.label.tilts, claim.context.label.statistics

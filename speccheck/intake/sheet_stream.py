@@ -154,7 +154,7 @@ class _SheetReader:
         formula = f"={self._formula}" if self._has_formula else ""
         if self._has_formula and raw is None and not fault:
             fault = _NO_RESULT
-        text = text_of(raw)
+        text = raw if isinstance(raw, str) else text_of(raw)
         if not fault and (not text or text.isspace()):
             return
         if len(text) > self._limits.text_length:
