@@ -49,7 +49,7 @@
     const field = document.getElementById("go-to-cell");
     const wanted = field.value.trim().toUpperCase();
     if (!wanted) return;
-    const rows = [...main.querySelectorAll("tr[id^='cell-']")];
+    const rows = [...main.querySelectorAll("#inputs tr[id]")];
     const name = (row) => row.querySelector("th").textContent.trim().toUpperCase();
     const row = rows.find((r) => name(r) === wanted) || rows.find((r) => name(r).endsWith(`!${wanted}`));
     if (!row) {
@@ -75,7 +75,7 @@
 
   const tools = make("div", "", { class: "tools", role: "group", "aria-label": "Filter and find" });
   const sets = [filterSet("verdict", "Verdict"), filterSet("level", "Level")].filter(Boolean);
-  const more = main.querySelector("tr[id^='cell-']") ? [cellSet()] : [];
+  const more = main.querySelector("#inputs tr[id]") ? [cellSet()] : [];
   if (sets.length || more.length) {
     tools.append(...sets, ...more, say);
     main.prepend(tools);

@@ -10,13 +10,14 @@ from __future__ import annotations
 import math
 from collections.abc import Iterable, Sequence
 from dataclasses import dataclass, field
+from itertools import groupby
 from typing import Literal
 
 from speccheck.records import CellRef
 from speccheck.report.formats import Numbers
+from speccheck.report.paths import Point, path_data, short
 
 Anchor = Literal["start", "middle", "end"]
-Point = tuple[float, float]
 
 
 @dataclass(frozen=True, slots=True)
@@ -59,6 +60,20 @@ class Figure:
         """Whether two such figures stand side by side."""
         return self.width <= 330
 
+    @property
+    def runs(self) -> tuple[tuple[str, tuple[str, ...]], ...]:
+        """Style and paths of the strokes that follow each other in one style; it is written once a run."""
+        runs = groupby(self.strokes, key=lambda stroke: stroke.style)
+        return tuple((style, tuple(stroke.path for stroke in strokes)) for style, strokes in runs)
+
+    @property
+    def lettering(self) -> tuple[tuple[str, Anchor, tuple[Label, ...]], ...]:
+        """Style, anchor and labels that share both, in the order in which they first appear."""
+        groups: dict[tuple[str, Anchor], list[Label]] = {}
+        for label in self.labels:
+            groups.setdefault((label.style, label.anchor), []).append(label)
+        return tuple((style, anchor, tuple(labels)) for (style, anchor), labels in groups.items())
+
 
 @dataclass(slots=True)
 class Canvas:
@@ -72,16 +87,8 @@ class Canvas:
 
     def line(self, points: Iterable[Point], style: str, *, close: bool = False) -> None:
         """A line through points; interrupted where a point is not finite."""
-        parts: list[str] = []
-        pen_down = False
-        for x, y in points:
-            if not (math.isfinite(x) and math.isfinite(y)):
-                pen_down = False
-                continue
-            parts.append(f"{'L' if pen_down else 'M'}{_short(x)} {_short(y)}")
-            pen_down = True
-        if parts:
-            self.strokes.append(Stroke("".join(parts) + ("Z" if close else ""), style))
+        if path := path_data(points, close=close):
+            self.strokes.append(Stroke(path, style))
 
     def box(self, x: float, y: float, width: float, height: float, style: str) -> None:
         """A rectangle."""
@@ -95,8 +102,8 @@ class Canvas:
         """A whole ellipse."""
         if not all(map(math.isfinite, (x, y, rx, ry))):
             return
-        a, b, c, d = _short(x - rx), _short(x + rx), _short(rx), _short(ry)
-        at = _short(y)
+        a, b, c, d = short(x - rx), short(x + rx), short(rx), short(ry)
+        at = short(y)
         self.strokes.append(Stroke(f"M{a} {at}A{c} {d} 0 1 1 {b} {at}A{c} {d} 0 1 1 {a} {at}Z", style))
 
     def diamond(self, x: float, y: float, size: float, style: str) -> None:
@@ -207,8 +214,3 @@ def _round_step(raw: float) -> float:
     """The nearest of 1, 2, 5 × a power of ten that is not smaller."""
     power = 10.0 ** math.floor(math.log10(raw))
     return next(power * m for m in (1, 2, 5, 10) if power * m >= raw * (1 - 1e-9))
-
-
-def _short(value: float) -> str:
-    """A coordinate with one decimal, without needless zeros."""
-    return f"{value:.1f}".removesuffix(".0")

@@ -7,7 +7,8 @@ import contextlib
 import functools
 import hashlib
 import sys
-from collections.abc import Iterable
+from collections.abc import Iterable, Sequence
+from itertools import accumulate
 from pathlib import Path
 from typing import Any
 
@@ -21,6 +22,7 @@ from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Comp
 from speccheck.report.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
+from speccheck.report.paths import short
 from speccheck.report.view import build_view, label, rules_fingerprint
 from speccheck.text import plain
 
@@ -107,6 +109,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
     )
     environment.filters.update(
         label=label,
+        coordinate=short,
         unit=shown_unit,
         mark=mark_for,
         stated=numbers.stated,
@@ -123,6 +126,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         capitalize_first=_capitalize_first,
         by_weight=_by_weight,
         joined=_joined,
+        halves=_halves,
     )
     environment.globals.update(
         FITS=FITS,
@@ -154,6 +158,15 @@ def _capitalize_first(text: str) -> str:
 def _joined(texts: Iterable[str]) -> str:
     """Several remarks as one sentence."""
     return "; ".join(text.rstrip(".") for text in texts) + "."
+
+
+def _halves(texts: Sequence[str]) -> tuple[Sequence[str], ...]:
+    """Texts in two parts of about the same length, in their order; one text stays one part."""
+    if len(texts) < 2:
+        return (texts,)
+    ends = list(accumulate(map(len, texts)))
+    cut = min(range(1, len(texts)), key=lambda i: abs(2 * ends[i - 1] - ends[-1]))
+    return texts[:cut], texts[cut:]
 
 
 _WEIGHT = {

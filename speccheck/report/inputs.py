@@ -34,7 +34,7 @@ def input_rows(submission: Submission) -> tuple[tuple[InputRow, ...], dict[CellR
     for where, panel_name, reading, statement in items:
         first = where not in anchors
         if first:
-            anchors[where] = f"cell-{len(anchors) + 1}"
+            anchors[where] = f"c{len(anchors) + 1}"
         rows.append(
             InputRow(
                 where=where,

@@ -22,6 +22,8 @@ _DRAWN = {
 }
 FULL = 640
 MOST_ROWS = 24
+_LAYERS = {style: i for i, style in enumerate(("grid", "expected", "zero"))}
+"""What lies below what in a chart whose rows do not meet; marks lie on top."""
 
 
 def margin_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Figure | None:
@@ -125,12 +127,9 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
         table.append(
             (finding.title, numbers.amount(finding.claimed), numbers.interval(finding.expected), mark.word)
         )
-    canvas.write(
-        290,
-        22 + 37 * len(shown),
-        "bar: expected interval   ◆ claim   each row has its own scale",
-        style="small",
-    )
+    canvas.strokes.sort(key=lambda stroke: _LAYERS.get(stroke.style, len(_LAYERS)))
+    key = "bar: expected interval   ◆ claim   each row has its own scale"
+    canvas.write(290, 22 + 37 * len(shown), key, style="small")
     outside = [f for f in shown if f.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
     where = "" if band is None else f" of {numbers.band(band)}"
     title = (

@@ -31,6 +31,7 @@ from speccheck.report.formats import Numbers
 from speccheck.report.inputs import InputRow, input_rows
 from speccheck.report.marks import Mark, mark_for
 from speccheck.report.questions import Question, collect_questions
+from speccheck.report.shared import Basis, common_bases
 from speccheck.report.summary import Tally, decisions, sentence, tally
 
 MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
@@ -87,6 +88,11 @@ class PanelView:
     def misfits(self) -> tuple[FindingView, ...]:
         """Claims that do not fit, then doubtful ones."""
         return tuple(f for verdict in MISFITS for f in self.findings if f.finding.verdict is verdict)
+
+    @property
+    def bases(self) -> dict[str, Basis]:
+        """By check: source and assumptions that hold for all its answers on this panel."""
+        return common_bases(f.finding for f in self.findings)
 
     def with_verdict(self, verdict: Fit) -> tuple[FindingView, ...]:
         """Findings of one verdict."""
