@@ -59,7 +59,8 @@ def read_submission(
     ------
     UnusableInputError : the file cannot be used at all
     """
-    return read_account(path, headings=headings, limits=limits).submission
+    with _collector_at_rest():
+        return _account(path, headings, limits).submission
 
 
 def read_account(
@@ -67,9 +68,13 @@ def read_account(
 ) -> Account:
     """As `read_submission`, with what became of every filled cell."""
     with _collector_at_rest():
-        book = open_book(path, limits)
-        refuse_tender(book)
-        return account_of(book, Path(path).stem, headings or {})
+        return _account(path, headings, limits)
+
+
+def _account(path: str | Path, headings: Mapping[str, str] | None, limits: Limits | None) -> Account:
+    book = open_book(path, limits)
+    refuse_tender(book)
+    return account_of(book, Path(path).stem, headings or {})
 
 
 @contextmanager
