@@ -53,9 +53,11 @@ def unband_repeated(readings: list[Found]) -> None:
             column = found.where.cell.rstrip("0123456789")
             columns[found.parameter, found.where.sheet, column].append(found)
     for alike in columns.values():
+        if len(alike) < 2:
+            continue
         rows = {found.where.cell for found in alike}
         bands = {found.band for found in alike}
-        repeated = len(alike) > 1 and len(rows) == len(bands) == len(alike) and None not in bands
+        repeated = len(rows) == len(bands) == len(alike) and None not in bands
         per_band = any(re.search(r"band|pasm", found.heading, re.IGNORECASE) for found in alike)
         if repeated and not per_band and len({found.value for found in alike}) == 1:
             for found in alike:

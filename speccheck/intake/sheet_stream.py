@@ -61,7 +61,7 @@ class _SheetReader:
         self._hidden_columns: list[tuple[int, int]] = []
         self._columns: dict[str, int] = {}
         self._row = self._column = 0
-        self._kind = self._style = self._formula = ""
+        self._kind = self._style = self._formula = self._row_digits = ""
         self._has_formula = False
         self._pieces: list[str] = []
         self._listening = False
@@ -98,7 +98,7 @@ class _SheetReader:
     def _start_row(self, at: dict[str, str]) -> None:
         number = at.get("r", "")
         self._row = int(number) if number.isdigit() and len(number) < 8 else self._row + 1
-        self._column = 0
+        self._column, self._row_digits = 0, ""
         if at.get("hidden") in ("1", "true") or at.get("ht") == "0":
             self._hidden_rows.add(self._row)
 
@@ -139,7 +139,9 @@ class _SheetReader:
             column = self._columns[letters] = _column_number(letters)
         self._column = column or self._column + 1
         if len(letters) < len(address) and column:
-            self._row = min(int(address[len(letters) :][:8]), _MAX_ROW)
+            digits = address[len(letters) :]
+            if digits != self._row_digits:
+                self._row_digits, self._row = digits, min(int(digits[:8]), _MAX_ROW)
         self._kind = at.get("t", "n")
         self._style = at.get("s", "")
         self._formula, self._has_formula = "", False
