@@ -62,9 +62,13 @@ class Figure:
 
     @property
     def runs(self) -> tuple[tuple[str, tuple[str, ...]], ...]:
-        """Style and paths of the strokes that follow each other in one style; it is written once a run."""
+        """Style and paths of the strokes that follow each other in one style; it is written once a run.
+
+        Grid lines are one path; shapes stay apart, for where they overlap each shows its own edge.
+        """
         runs = groupby(self.strokes, key=lambda stroke: stroke.style)
-        return tuple((style, tuple(stroke.path for stroke in strokes)) for style, strokes in runs)
+        paths = ((style, tuple(stroke.path for stroke in strokes)) for style, strokes in runs)
+        return tuple((style, ("".join(run),) if style in ("grid", "axis") else run) for style, run in paths)
 
     @property
     def lettering(self) -> tuple[tuple[str, Anchor, tuple[Label, ...]], ...]:

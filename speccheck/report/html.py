@@ -6,6 +6,7 @@ import base64
 import contextlib
 import functools
 import hashlib
+import re
 import sys
 from collections.abc import Iterable, Sequence
 from itertools import accumulate
@@ -22,11 +23,20 @@ from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Comp
 from speccheck.report.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.formats import Numbers, shown_unit
 from speccheck.report.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
-from speccheck.report.paths import short
 from speccheck.report.view import build_view, label, rules_fingerprint
 from speccheck.text import plain
 
 PAPERS = {"a4": "A4", "letter": "letter"}
+_FACES = (("Report Sans", "", 400, "regular"), ("Report Sans", "", 600, "semibold"))
+_WIDE_FACES = (
+    ("Report Sans Wide", "-wide", 400, "regular"),
+    ("Report Sans Wide", "-wide", 600, "semibold"),
+)
+_WIDE_LETTERS = re.compile(
+    "[\u0100-\u017f\u0218-\u021b\u0400-\u045f]|(?![ΔΣΩαβγδεζηθλμπρσφψ])[\u0384-\u03ce]"
+)
+"""Letters of bidders beyond the basic typeface, whose faces only a page that shows them carries. The Greek
+letters of formulas are in the basic one."""
 
 
 def render_html(assessment: Assessment) -> str:
@@ -50,15 +60,23 @@ def render(template: str, paper: str, numbers: Numbers, **context: Any) -> str:
     numbers : number habits of the page
     context : what the template prints
     """
-    style = _stylesheet(PAPERS.get(paper.lower(), "A4"))
+    page = _fill(template, paper, numbers, context, wide=False)
+    return _fill(template, paper, numbers, context, wide=True) if _WIDE_LETTERS.search(page) else page
+
+
+def _fill(template: str, paper: str, numbers: Numbers, context: dict[str, Any], *, wide: bool) -> str:
+    style = _stylesheet(PAPERS.get(paper.lower(), "A4"), wide=wide)
     script = _asset("report.js")
-    page = _environment(numbers).get_template(template)
-    return page.render(
-        style=Markup(style),  # noqa: S704 - the program's own style sheet and script
-        script=Markup(script),  # noqa: S704
-        style_hash=_csp_hash(style),
-        script_hash=_csp_hash(script),
-        **context,
+    return (
+        _environment(numbers)
+        .get_template(template)
+        .render(
+            style=Markup(style),  # noqa: S704 - the program's own style sheet and script
+            script=Markup(script),  # noqa: S704
+            style_hash=_csp_hash(style),
+            script_hash=_csp_hash(script),
+            **context,
+        )
     )
 
 
@@ -109,7 +127,6 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
     )
     environment.filters.update(
         label=label,
-        coordinate=short,
         unit=shown_unit,
         mark=mark_for,
         stated=numbers.stated,
@@ -187,12 +204,12 @@ def _by_weight(rows: Iterable[MatrixRow]) -> list[MatrixRow]:
 
 
 @functools.cache
-def _stylesheet(paper: str) -> str:
+def _stylesheet(paper: str, *, wide: bool) -> str:
     """Style sheet with the typeface inside, for one paper size."""
     faces = "".join(
-        f"@font-face{{font-family:'Report Sans';font-weight:{weight};"
-        f"src:url(data:font/woff2;base64,{_font(name)}) format('woff2')}}\n"
-        for name, weight in (("inter-regular.woff2", 400), ("inter-semibold.woff2", 600))
+        f"@font-face{{font-family:'{family}';font-weight:{weight};"
+        f"src:url(data:font/woff2;base64,{_font(f'inter-{name}{ending}.woff2')}) format('woff2')}}\n"
+        for family, ending, weight, name in (_FACES + _WIDE_FACES if wide else _FACES)
     )
     return faces + _asset("report.css").replace("size: A4", f"size: {paper}")
 

@@ -140,8 +140,8 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     return canvas.figure(
         title,
         "Expected interval and claim: "
-        + "; ".join(f"{t[0]}: {t[1]} against {t[2]}" for t in table[:6])
-        + ("; the others are in the table." if len(table) > 6 else "."),
+        + "; ".join(f"{t[0]}: {t[1]} against {t[2]}" for t in table[:3])
+        + ("; the others are in the table." if len(table) > 3 else "."),
         where=tuple(dict.fromkeys(ref for f in outside for ref in f.where)),
         kind="intervals",
         columns=("Check", "Claimed", "Expected", "Verdict"),
