@@ -154,7 +154,7 @@ def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | No
 
 
 def _read_vetted(path: Path) -> Tender:
-    from speccheck.intake.tender_book import read_tender
+    from speccheck.intake.tenders.tender_book import read_tender
     from speccheck.tender.vetting import vetted
 
     return vetted(read_tender(path))
@@ -163,7 +163,7 @@ def _read_vetted(path: Path) -> Tender:
 def _read_tender(path: Path | None) -> Tender | None:
     if path is None:
         return None
-    from speccheck.intake.tender_book import read_tender
+    from speccheck.intake.tenders.tender_book import read_tender
 
     return read_tender(path)
 
@@ -192,10 +192,10 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
     """
     from speccheck.batch.lone_tender import has_requirements
     from speccheck.intake import read_submission
-    from speccheck.report.listing import listing
+    from speccheck.report.screens.listing import listing
 
     if has_requirements(bid):
-        from speccheck.report.tender_listing import tender_listing
+        from speccheck.report.screens.tender_listing import tender_listing
 
         click.echo(tender_listing(_read_vetted(bid)))
         return
@@ -204,7 +204,7 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
     click.echo(listing(submission))
     if out is not None:
         from speccheck.atomic import write_bytes_atomic
-        from speccheck.report.readbook import read_json, write_read_book
+        from speccheck.report.workbooks.readbook import read_json, write_read_book
 
         out.mkdir(parents=True, exist_ok=True)
         write_read_book(submission, out / f"{bid.stem}.reading.xlsx")
@@ -217,7 +217,7 @@ def read(bid: Path, out: Path | None, tender_file: Path | None) -> None:
 @click.option("--tender", "tender_file", type=_path, help="Ask for exactly what this tender requires.")
 def form(target: Path, tender_file: Path | None) -> None:
     """Write a blank bid form to hand to bidders."""
-    from speccheck.report.form import write_form
+    from speccheck.report.workbooks.form import write_form
 
     write_form(target, _read_tender(tender_file))
     click.echo(f"Written: {target}")
@@ -233,9 +233,9 @@ def answers(bid: Path, answered: Path, tender_file: Path | None, out: Path) -> N
 
     A changed figure is named as a change of substance; the offer itself stays as it was opened.
     """
-    from speccheck.intake.answers import read_answers
+    from speccheck.intake.tenders.answers import read_answers
     from speccheck.pipeline import assess
-    from speccheck.report.clarification import write_answers
+    from speccheck.report.pages.clarification import write_answers
     from speccheck.tender.answers import take_in
 
     assessment = assess(bid, tender=_read_tender(tender_file))

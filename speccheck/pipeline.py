@@ -11,10 +11,10 @@ from speccheck.checks import examine, exposure_note, panel_drawings
 from speccheck.intake import read_submission
 from speccheck.records import Assessment, Finding, MatrixRow, Panel, PanelAssessment, Settings, Tender
 from speccheck.records.outputs import SUFFIXES
-from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
-from speccheck.report.pdf import Attachment, pdf_bytes
-from speccheck.report.review import review_bytes
+from speccheck.report.pages.html import render_html
+from speccheck.report.pages.pdf import Attachment, pdf_bytes
+from speccheck.report.workbooks.review import review_bytes
 from speccheck.tender.outcome import outcome
 
 

@@ -58,7 +58,7 @@ def assess_many(
             progress(len(results), len(bids), result)
     evaluation = evaluate([results[place] for place in sorted(results)], tender, rules.settings, rules.digest)
     if len(bids) > 1 or sum(len(bid.offers) for bid in evaluation.bids) > 1:
-        from speccheck.report.comparison import write_comparison  # noqa: PLC0415 - not for a single offer
+        from speccheck.report.offers.comparison import write_comparison  # noqa: PLC0415 - not for a single offer
 
         write_comparison(evaluation, rules.out, formats)
     return evaluation

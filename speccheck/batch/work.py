@@ -17,8 +17,8 @@ from speccheck.errors import OutputError, UnusableInputError
 from speccheck.records import Assessment, Settings, Tender
 from speccheck.records.evaluations import Bid
 from speccheck.records.outputs import SUFFIXES
-from speccheck.report.clarification import write_clarification
-from speccheck.report.pdf import PdfUnavailableError
+from speccheck.report.pages.clarification import write_clarification
+from speccheck.report.pages.pdf import PdfUnavailableError
 from speccheck.tender.summaries import summarise
 
 

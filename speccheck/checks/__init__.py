@@ -5,18 +5,17 @@ order of the imports is the order of the findings.
 """
 
 # isort: off
-from speccheck.checks import plausibility
-from speccheck.checks import spacing, lattices
-from speccheck.checks import gain, gain_widths, gain_runs
-from speccheck.checks import beamwidth, beamwidth_box
-from speccheck.checks import sidelobes, tapers, scan
-from speccheck.checks import housing, ports, connectors, layers
-from speccheck.checks import power, power_array, power_budget, losses, matching, intermodulation
-from speccheck.checks import frequency_unit, bands, duplex, directions
-from speccheck.checks import wind, mechanics, exposure, wording
-from speccheck.checks import innocent_gain, innocent_beams, innocent_geometry, innocent_statements
-from speccheck.checks.curves import panel_drawings
-from speccheck.checks.exposure_note import exposure_note
+from speccheck.checks.families import plausibility
+from speccheck.checks.families import spacing, lattices
+from speccheck.checks.families import gain, gain_widths, gain_runs
+from speccheck.checks.families import beamwidth, beamwidth_box, sidelobes, tapers, scan
+from speccheck.checks.families import housing, ports, connectors, layers
+from speccheck.checks.families import power, power_array, power_budget, losses, matching, intermodulation
+from speccheck.checks.families import frequency_unit, bands, duplex, directions
+from speccheck.checks.families import wind, mechanics, exposure, wording
+from speccheck.checks.innocent import innocent_gain, innocent_beams, innocent_geometry, innocent_statements
+from speccheck.checks.drawings.curves import panel_drawings
+from speccheck.checks.desk.exposure_note import exposure_note
 from speccheck.checks.runner import examine
 # isort: on
 

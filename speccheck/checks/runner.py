@@ -12,8 +12,8 @@ from dataclasses import replace
 
 import numpy as np
 
-from speccheck.checks.conventions import offer_innocent_readings
-from speccheck.checks.plausibility import impossible
+from speccheck.checks.families.plausibility import impossible
+from speccheck.checks.innocent.conventions import offer_innocent_readings
 from speccheck.checks.registry import CHECKS, Case, Check, Judgement
 from speccheck.dictionary import parameters
 from speccheck.records import Band, CellRef, Finding, Fit, Panel, Reading, Settings

@@ -9,18 +9,18 @@ from dataclasses import dataclass
 from pathlib import Path
 
 from speccheck.errors import UnusableInputError
-from speccheck.intake.claims import Draft, SheetResult
-from speccheck.intake.declared import contrary_notices
-from speccheck.intake.grid import Cell, Grid
-from speccheck.intake.joining import joined
-from speccheck.intake.labels import Labels
-from speccheck.intake.layout import read_layout
-from speccheck.intake.limits import Limits
-from speccheck.intake.notices import book_notices, footnotes, grid_notices, note_notices
-from speccheck.intake.opening import Book, open_book
-from speccheck.intake.panels import Builder, Built
-from speccheck.intake.reading import Reader
-from speccheck.intake.tender_given_as_bid import refuse_tender
+from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.files.limits import Limits
+from speccheck.intake.files.opening import Book, open_book
+from speccheck.intake.panels.declared import contrary_notices
+from speccheck.intake.panels.joining import joined
+from speccheck.intake.panels.notices import book_notices, footnotes, grid_notices, note_notices
+from speccheck.intake.panels.panels import Builder, Built
+from speccheck.intake.panels.reading import Reader
+from speccheck.intake.tables.claims import Draft, SheetResult
+from speccheck.intake.tables.labels import Labels
+from speccheck.intake.tables.layout import read_layout
+from speccheck.intake.tenders.tender_given_as_bid import refuse_tender
 from speccheck.quantities import decimal_habit
 from speccheck.records import MirrorCell, MirrorSheet, Notice, Submission, Unread
 

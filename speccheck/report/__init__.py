@@ -1,0 +1,1 @@
+"""Everything that is written; sees an Assessment only."""

@@ -23,7 +23,7 @@ from openpyxl import Workbook, load_workbook
 
 from speccheck import pipeline
 from speccheck.batch import assess_many
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 
 FORMATS = ("json", "html", "xlsx")
 BANDS = ((694, 960, 16.0, 9.5), (1710, 2690, 17.6, 6.5))

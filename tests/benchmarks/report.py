@@ -19,8 +19,8 @@ import weasyprint
 
 from speccheck.pipeline import assess
 from speccheck.records import Assessment
-from speccheck.report.html import render_html
-from speccheck.report.pdf import pdf_bytes
+from speccheck.report.pages.html import render_html
+from speccheck.report.pages.pdf import pdf_bytes
 
 SPECS = Path(__file__).parents[2] / "sample_specs"
 ROUNDS = 2

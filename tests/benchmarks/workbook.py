@@ -17,9 +17,9 @@ from pathlib import Path
 import openpyxl
 
 from speccheck.pipeline import assess
-from speccheck.report.form import form_bytes
 from speccheck.report.machine import to_json
-from speccheck.report.review import review_bytes
+from speccheck.report.workbooks.form import form_bytes
+from speccheck.report.workbooks.review import review_bytes
 
 SAMPLES = Path(__file__).parents[2] / "sample_specs"
 REPEATS = 15

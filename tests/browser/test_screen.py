@@ -11,7 +11,7 @@ import pytest
 from browser.devtools import CHROMIUM, Browser
 from report.sample import sample
 
-from speccheck.report.html import render_html
+from speccheck.report.pages.html import render_html
 
 pytestmark = [
     pytest.mark.browser,

@@ -6,7 +6,7 @@ import pytest
 from checks.cases import panel_of
 
 from speccheck.checks import examine
-from speccheck.checks.conventions import INNOCENT_READINGS, NONE_FITS, Reach, innocent
+from speccheck.checks.innocent.conventions import INNOCENT_READINGS, NONE_FITS, Reach, innocent
 from speccheck.records import Fit, Settings
 
 COLUMN = {

@@ -10,8 +10,8 @@ from hypothesis import strategies as st
 
 from speccheck.checks import panel_drawings
 from speccheck.records import Amount, Band, CellRef, Drawing, Finding, Fit, Interval, Panel, Reading, Settings
-from speccheck.report.array_figures import draw
-from speccheck.report.formats import Numbers
+from speccheck.report.pages.array_figures import draw
+from speccheck.report.pages.formats import Numbers
 
 BAND: Band = (3300.0, 3800.0)
 WHERE = CellRef("bid.xlsx", "Data", "B2")

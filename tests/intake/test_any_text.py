@@ -10,7 +10,7 @@ from intake.sheets import read
 from openpyxl.cell.cell import ILLEGAL_CHARACTERS_RE
 
 from speccheck.errors import UnusableInputError
-from speccheck.report.listing import WIDTH, listing
+from speccheck.report.screens.listing import WIDTH, listing
 
 TRADE = st.sampled_from(
     [

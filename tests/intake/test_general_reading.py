@@ -6,7 +6,7 @@ from pathlib import Path
 
 import pytest
 
-from speccheck.intake.labels import Labels
+from speccheck.intake.tables.labels import Labels
 from tests.intake.sheets import Rows, line, read
 
 

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import pytest
 
-from speccheck.intake.labels import Labels
+from speccheck.intake.tables.labels import Labels
 
 _BEGINNINGS = (
     "BR",

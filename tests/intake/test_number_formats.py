@@ -9,7 +9,7 @@ from hypothesis import given
 from hypothesis import strategies as st
 from openpyxl.styles.numbers import BUILTIN_FORMATS, is_date_format
 
-from speccheck.intake.number_formats import BUILT_IN, date_of_serial, date_of_text, shows_date
+from speccheck.intake.files.number_formats import BUILT_IN, date_of_serial, date_of_text, shows_date
 
 _PIECES = ("0", "0.0", "#,##0", "d", "mmm", "yy", "h:mm", " ", "-", '"dBm"', '"d"', "[Red]", "[$-409]", "[h]")
 

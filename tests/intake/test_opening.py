@@ -11,8 +11,8 @@ from hypothesis import strategies as st
 from openpyxl import Workbook, load_workbook
 from openpyxl.cell.cell import ILLEGAL_CHARACTERS_RE
 
-from speccheck.intake.grid import Cell, text_of
-from speccheck.intake.opening import open_book
+from speccheck.intake.files.grid import Cell, text_of
+from speccheck.intake.files.opening import open_book
 
 EARLIEST = datetime.datetime.fromisoformat("1990-01-01")
 LATEST = datetime.datetime.fromisoformat("2040-01-01")

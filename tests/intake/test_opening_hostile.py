@@ -14,8 +14,8 @@ import pytest
 from openpyxl import Workbook
 
 from speccheck.errors import UnusableInputError
-from speccheck.intake.limits import Limits
-from speccheck.intake.opening import open_book
+from speccheck.intake.files.limits import Limits
+from speccheck.intake.files.opening import open_book
 
 SHEET = "xl/worksheets/sheet1.xml"
 MAIN = '<worksheet xmlns="http://schemas.openxmlformats.org/spreadsheetml/2006/main">{}</worksheet>'

@@ -12,14 +12,14 @@ from pathlib import Path
 import openpyxl
 import pytest
 
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.pipeline import assess
 from speccheck.records import Fit
-from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
-from speccheck.report.marks import FITS
-from speccheck.report.pdf import pdf_bytes
-from speccheck.report.review import review_bytes
+from speccheck.report.pages.html import render_html
+from speccheck.report.pages.marks import FITS
+from speccheck.report.pages.pdf import pdf_bytes
+from speccheck.report.workbooks.review import review_bytes
 
 FOLDER = Path(__file__).parents[2] / "sample_specs"
 SAMPLES = sorted(FOLDER.glob("*-*.xlsx"))

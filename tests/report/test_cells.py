@@ -9,10 +9,10 @@ from hypothesis import given, settings
 from hypothesis import strategies as st
 from openpyxl.utils import get_column_letter
 
-from speccheck.report.book import book_bytes
-from speccheck.report.cells import Rich, column_letter, xml_attribute, xml_text
-from speccheck.report.looks import LOOKS, TONES
-from speccheck.report.sheets import Column, Grid, Imprint, Table
+from speccheck.report.workbooks.book import book_bytes
+from speccheck.report.workbooks.cells import Rich, column_letter, xml_attribute, xml_text
+from speccheck.report.workbooks.looks import LOOKS, TONES
+from speccheck.report.workbooks.sheets import Column, Grid, Imprint, Table
 from speccheck.text import plain
 
 any_text = st.text(alphabet=st.characters(), max_size=40)

@@ -10,7 +10,7 @@ from speccheck.dictionary import match_heading, parameters
 from speccheck.errors import UnusableInputError
 from speccheck.intake import read_submission
 from speccheck.records import CellRef, Level, Requirement, Settings, Tender
-from speccheck.report.form import EXAMPLE, USUAL, form_bytes, form_heading, form_unit, write_form
+from speccheck.report.workbooks.form import EXAMPLE, USUAL, form_bytes, form_heading, form_unit, write_form
 
 FIGURES = {
     "array_rows": 10,

@@ -5,7 +5,7 @@ from __future__ import annotations
 import pytest
 
 from speccheck.records import Amount, Interval
-from speccheck.report.formats import Numbers
+from speccheck.report.pages.formats import Numbers
 
 POINT, COMMA = Numbers(), Numbers(decimal_comma=True)
 

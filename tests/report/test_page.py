@@ -14,9 +14,9 @@ from report.sample import OUTLINE, PANEL, SUBMISSION, sample
 from report.strategies import assessments
 
 from speccheck.records import Assessment, Compliance, ExposureNote, Fit, Level, Panel, Unread
-from speccheck.report.formats import Numbers
-from speccheck.report.html import _environment, render_html
-from speccheck.report.view import build_view
+from speccheck.report.pages.formats import Numbers
+from speccheck.report.pages.html import _environment, render_html
+from speccheck.report.pages.view import build_view
 
 PAGE = render_html(sample())
 

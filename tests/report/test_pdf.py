@@ -14,9 +14,9 @@ import pytest
 from report.sample import FILE, sample
 
 from speccheck.errors import OutputError
-from speccheck.report import pdf as pdf_module
-from speccheck.report.html import render_html
-from speccheck.report.pdf import Attachment, PdfUnavailableError, pdf_bytes, write_pdf
+from speccheck.report.pages import pdf as pdf_module
+from speccheck.report.pages.html import render_html
+from speccheck.report.pages.pdf import Attachment, PdfUnavailableError, pdf_bytes, write_pdf
 
 ATTACHED = (
     Attachment(name="bid.result.json", content=b'{"schema": 1}', description="Result", relationship="Data"),

@@ -5,7 +5,7 @@ import json
 
 import openpyxl
 
-from speccheck.report.readbook import read_book_bytes, read_json, write_read_book
+from speccheck.report.workbooks.readbook import read_book_bytes, read_json, write_read_book
 
 
 def test_every_cell_that_was_read_is_listed_and_linked(bid, tmp_path):

@@ -11,7 +11,7 @@ import openpyxl
 import pytest
 
 from speccheck.pipeline import assess
-from speccheck.report.review import review_bytes
+from speccheck.report.workbooks.review import review_bytes
 
 SOFFICE = shutil.which("soffice")
 

@@ -13,7 +13,7 @@ from report.strategies import assessments
 from speccheck.errors import OutputError
 from speccheck.records import Amount, Assessment, MirrorCell, MirrorSheet, Settings, Submission
 from speccheck.report.machine import from_json, to_json
-from speccheck.report.review import review_bytes, write_review
+from speccheck.report.workbooks.review import review_bytes, write_review
 
 HOSTILE = [
     "=1+1",

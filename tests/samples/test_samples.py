@@ -9,7 +9,7 @@ from typing import Any
 
 import pytest
 
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.pipeline import assess
 from speccheck.records import Assessment, Compliance, Finding, Fit, Level, PanelAssessment
 

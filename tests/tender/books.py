@@ -8,8 +8,8 @@ from typing import Any
 
 from openpyxl import Workbook
 
-from speccheck.intake.grid import Cell
-from speccheck.intake.tender_tables import Row, Table
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.tenders.tender_tables import Row, Table
 
 Cells = Sequence[Any]
 

@@ -15,7 +15,7 @@ from openpyxl import load_workbook
 
 from speccheck.batch import assess_many, find_bids
 from speccheck.batch import work as work_module
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Tender
 from tender.evaluation import BIDS, write_bid, write_evaluation
 
@@ -23,7 +23,7 @@ RUN = """
 import os, signal, sys
 from speccheck import pipeline
 from speccheck.batch import assess_many
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 
 assess = pipeline.assess
 def dying(path, **rules):

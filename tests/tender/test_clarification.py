@@ -9,11 +9,11 @@ from openpyxl import load_workbook
 
 from speccheck import pipeline
 from speccheck.errors import UnusableInputError
-from speccheck.intake.answers import read_answers
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.answers import read_answers
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Assessment, Compliance
 from speccheck.records.answers import AnswerKind, TakenAnswer
-from speccheck.report.clarification import render_clarification, write_answers, write_clarification
+from speccheck.report.pages.clarification import render_clarification, write_answers, write_clarification
 from speccheck.tender.answers import take_in
 from tender.evaluation import BIDS, write_evaluation
 

@@ -21,9 +21,9 @@ from speccheck.records import (
     Tender,
     Unread,
 )
-from speccheck.report.html import render_html
 from speccheck.report.machine import to_json
-from speccheck.report.review import review_bytes
+from speccheck.report.pages.html import render_html
+from speccheck.report.workbooks.review import review_bytes
 from speccheck.tender.copies import copy_for
 
 HERE = CellRef("tender.xlsx", "Deviations", "B2")

@@ -9,7 +9,7 @@ import pytest
 from openpyxl import load_workbook
 
 from speccheck.batch import Evaluation, assess_many
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Outcome
 from tender.evaluation import MATRIX, POINTS, REJECTED, WORDS, write_evaluation
 

@@ -11,9 +11,9 @@ import pytest
 from hypothesis import given
 from hypothesis import strategies as st
 
-from speccheck.intake.phrases import PLAIN_HABITS, read_wording
-from speccheck.intake.requirements import read_requirements
-from speccheck.intake.wording.clauses import Clause
+from speccheck.intake.tenders.phrases import PLAIN_HABITS, read_wording
+from speccheck.intake.tenders.requirements import read_requirements
+from speccheck.intake.tenders.wording.clauses import Clause
 from speccheck.quantities import convert
 from speccheck.records import Level
 from speccheck.records.demands import blocked

@@ -7,7 +7,7 @@ from typing import Any
 
 import pytest
 
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Requirement, Tender
 from speccheck.tender.judging import judge
 from tender.books import write_tender

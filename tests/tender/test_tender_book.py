@@ -10,7 +10,7 @@ from openpyxl import load_workbook
 
 from speccheck.errors import UnusableInputError
 from speccheck.intake import read_submission
-from speccheck.intake.tender_book import read_tender
+from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Level, Tender
 from tender.books import write_tender
 

@@ -4,8 +4,8 @@ from __future__ import annotations
 
 from pathlib import Path
 
-from speccheck.intake.tender_book import read_tender
-from speccheck.report.tender_listing import tender_listing
+from speccheck.intake.tenders.tender_book import read_tender
+from speccheck.report.screens.tender_listing import tender_listing
 from speccheck.tender.vetting import vetted
 from tender.books import write_tender
 

@@ -5,7 +5,7 @@ from __future__ import annotations
 
 import pytest
 
-from speccheck.intake.phrases import read_wording
+from speccheck.intake.tenders.phrases import read_wording
 from speccheck.records import CellRef, Fit, Level, Requirement, Tender
 from speccheck.tender.vetting import vet, vetted
 

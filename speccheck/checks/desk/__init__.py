@@ -1,0 +1,1 @@
+"""The desk check of RF exposure."""

@@ -1,0 +1,1 @@
+"""The checks themselves, a module a family."""

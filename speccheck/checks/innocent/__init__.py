@@ -1,0 +1,1 @@
+"""Innocent readings that would explain a misfit."""

@@ -1,0 +1,211 @@
+"""Innocent readings of gain and power. See `conventions` for how they are tried."""
+
+from __future__ import annotations
+
+import math
+from dataclasses import replace
+
+from speccheck.checks.innocent.conventions import Reach, innocent, marked, reread, scaled, shifted
+from speccheck.records import Panel, Reading
+
+DIPOLE_DBI = 2.15
+"""Gain of a half-wave dipole [dBi]; 10·log10 1.641 (any antenna handbook)."""
+
+TWICE_DB = 3.01
+PEAK_OVER_AVERAGE_DB = 9.0
+"""Middle of the usual 8 to 10 dB from average to envelope power of many carriers (common practice)."""
+
+SYSTEM_MODEL_ELEMENT_DBI = 8.0
+"""Element gain of the system models, 3GPP TR 38.901 Table 7.3-1."""
+
+SHORT_FORMULA_WITHIN_DB = 0.15
+"""The formula's result as printed, to a tenth of a decibel [dB]."""
+
+_POWERS = ("conducted_power", "max_power_total")
+
+
+@innocent(
+    "2.15 dB of a half-wave dipole added twice",
+    "the gain is counted from an isotropic radiator (dBi) or a half-wave dipole (dBd)",
+    "gain",
+)
+def dipole_added_twice(panel: Panel, reach: Reach) -> Panel:
+    """Gain less 2.15 dB."""
+    return reread(panel, reach, ("gain",), shifted(-DIPOLE_DBI))
+
+
+@innocent(
+    "gain in dBd under a heading in dBi",
+    "the gain is counted from an isotropic radiator (dBi) or a half-wave dipole (dBd)",
+    "gain",
+)
+def gain_in_dbd(panel: Panel, reach: Reach) -> Panel:
+    """Gain plus 2.15 dB."""
+    return reread(panel, reach, ("gain",), shifted(DIPOLE_DBI))
+
+
+@innocent("both polarisations added into the gain", "the gain is that of one polarisation", "gain")
+def both_polarisations_added(panel: Panel, reach: Reach) -> Panel:
+    """Gain less 3.01 dB: an aperture shared by two polarisations is not larger."""
+    return reread(panel, reach, ("gain",), shifted(-TWICE_DB))
+
+
+@innocent(
+    "directivity, before losses",
+    "the gain is measured at the connector or is the directivity without losses",
+    "gain",
+)
+def directivity_as_gain(panel: Panel, reach: Reach) -> Panel:
+    """The figure held against the lossless array."""
+    return reread(panel, reach, ("gain",), marked(loss_db=0.0))
+
+
+@innocent(
+    "gain at an internal plane, before the stated loss",
+    "the gain holds at the connector or behind the internal feed",
+    "gain",
+    "feed_loss",
+)
+def gain_before_feed(panel: Panel, reach: Reach) -> Panel:
+    """Gain less the stated feed loss."""
+    loss = panel.get("feed_loss")
+    if loss is None or isinstance(loss.value, str):
+        return panel
+    return reread(panel, reach, ("gain",), shifted(-loss.nominal))
+
+
+@innocent(
+    "gain at the best frequency of the band",
+    "the gain holds over the whole band or at its best frequency",
+    "gain",
+)
+def gain_at_best_frequency(panel: Panel, reach: Reach) -> Panel:
+    """The figure held against the upper edge of its band, or of the highest band that repeats it."""
+
+    def at_top(reading: Reading) -> Reading:
+        alike = [r.band[1] for r in panel.all("gain") if r.band and r.value == reading.value]
+        band = reading.band or (panel.bands[-1] if panel.bands else None)
+        if band is None:
+            return reading
+        top = max([band[1], *alike]) if reading.band else band[1]
+        return replace(reading, at={**reading.at, "frequency_mhz": top})
+
+    return reread(panel, reach, ("gain",), at_top)
+
+
+@innocent(
+    "system-model figure: element gain + 10·log10 N",
+    "the gain is computed as element gain plus 10·log10 of the elements",
+    "gain",
+)
+def system_model_gain(panel: Panel, reach: Reach) -> Panel:
+    """The figure held against the short formula of system models, where it is that formula's result.
+
+    The models are of planar arrays: a single column meets the formula of 8 dBi by chance only.
+    """
+    element = panel.get("element_gain")
+    gain = SYSTEM_MODEL_ELEMENT_DBI if element is None or isinstance(element.value, str) else element.nominal
+
+    def marked_if_equal(reading: Reading) -> Reading:
+        rows, columns = (panel.get(key, reading.band) for key in ("array_rows", "array_columns"))
+        if rows is None or isinstance(rows.value, str):
+            return reading
+        across = 1 if columns is None or isinstance(columns.value, str) else columns.nominal
+        if across < 2 and element is None:
+            return reading
+        count = rows.nominal * across
+        short = gain + 10 * math.log10(max(1.0, count))
+        equal = abs(reading.nominal - short) <= SHORT_FORMULA_WITHIN_DB
+        return marked(element_gain_dbi=gain)(reading) if equal else reading
+
+    return reread(panel, reach, ("gain",), marked_if_equal)
+
+
+@innocent("gain of one column or sub-array", "the gain is that of the whole panel or of one column", "gain")
+def gain_of_one_column(panel: Panel, reach: Reach) -> Panel:
+    """The figure held against one column."""
+    return reread(panel, reach, ("gain",), marked(beam_columns=1))
+
+
+@innocent("gain of another band", "the gain stands in the column of its band", "gain")
+def gain_of_another_band(panel: Panel, reach: Reach) -> Panel:
+    """Gains of two bands exchanged."""
+    gains = [r for r in panel.all("gain") if r.band is not None]
+    if len(gains) != 2 or reach.bands is not None:
+        return panel
+    other = {gains[0].where: gains[1], gains[1].where: gains[0]}
+    return replace(
+        panel,
+        readings=tuple(
+            replace(r, value=other[r.where].value) if r.parameter == "gain" and r.where in other else r
+            for r in panel.readings
+        ),
+    )
+
+
+@innocent(
+    "EIRP with both polarisations added twice", "the EIRP adds the power of both polarisations once", "eirp"
+)
+def polarisations_twice_in_eirp(panel: Panel, reach: Reach) -> Panel:
+    """EIRP less 3.01 dB."""
+    return reread(panel, reach, ("eirp",), shifted(-TWICE_DB))
+
+
+@innocent("EIRP of one polarisation", "the EIRP is that of one or of both polarisations", "eirp")
+def eirp_of_one_polarisation(panel: Panel, reach: Reach) -> Panel:
+    """EIRP plus 3.01 dB."""
+    return reread(panel, reach, ("eirp",), shifted(TWICE_DB))
+
+
+@innocent("EIRP of one port", "the EIRP is that of one port or of all", "eirp")
+def eirp_of_one_port(panel: Panel, reach: Reach) -> Panel:
+    """EIRP of all transceivers or connectors."""
+    ports = panel.get("transceivers") or panel.get("rf_ports")
+    if ports is None or isinstance(ports.value, str):
+        return panel
+    return reread(panel, reach, ("eirp",), shifted(10 * math.log10(max(1.0, ports.nominal))))
+
+
+@innocent("ERP written as EIRP", "the figure is ERP (from a half-wave dipole) or EIRP", "eirp")
+def erp_as_eirp(panel: Panel, reach: Reach) -> Panel:
+    """EIRP plus 2.15 dB."""
+    return reread(panel, reach, ("eirp",), shifted(DIPOLE_DBI))
+
+
+@innocent("EIRP converted from ERP twice", "the figure is ERP (from a half-wave dipole) or EIRP", "eirp")
+def erp_converted_twice(panel: Panel, reach: Reach) -> Panel:
+    """EIRP less 2.15 dB."""
+    return reread(panel, reach, ("eirp",), shifted(-DIPOLE_DBI))
+
+
+@innocent(
+    "EIRP of the envelope peak, not the average", "the EIRP is the average or the envelope peak", "eirp"
+)
+def eirp_of_envelope(panel: Panel, reach: Reach) -> Panel:
+    """EIRP less 9 dB."""
+    return reread(panel, reach, ("eirp",), shifted(-PEAK_OVER_AVERAGE_DB))
+
+
+@innocent(
+    "EIRP averaged over the TDD pattern", "the EIRP is averaged over the downlink share", "eirp", "tdd_duty"
+)
+def eirp_averaged(panel: Panel, reach: Reach) -> Panel:
+    """EIRP over the stated downlink share, or 75 % where none is stated."""
+    duty = panel.get("tdd_duty")
+    share = duty.nominal / 100 if duty is not None and not isinstance(duty.value, str) else 0.75
+    return reread(panel, reach, ("eirp",), shifted(-10 * math.log10(max(share, 0.01))))
+
+
+@innocent("power of one polarisation", "the power is that of one or of both polarisations", *_POWERS)
+def power_of_one_polarisation(panel: Panel, reach: Reach) -> Panel:
+    """Twice the stated power."""
+    return reread(panel, reach, _POWERS, scaled(2))
+
+
+@innocent("power of one port", "the power is that of one port or of all", *_POWERS)
+def power_of_one_port(panel: Panel, reach: Reach) -> Panel:
+    """The stated power times transceivers or connectors."""
+    ports = panel.get("transceivers") or panel.get("rf_ports")
+    if ports is None or isinstance(ports.value, str):
+        return panel
+    return reread(panel, reach, _POWERS, scaled(ports.nominal))

@@ -1,0 +1,1 @@
+"""Any file from outside to grids of cells."""

@@ -1,0 +1,1 @@
+"""Claims read, and put together by panel."""

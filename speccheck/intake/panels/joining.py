@@ -1,0 +1,89 @@
+"""Pieces of one panel found in several tables or sheets, put together."""
+
+from __future__ import annotations
+
+from speccheck.intake.tables.claims import Claim, Draft
+from speccheck.records import Band
+
+_TITLE_KEYS = frozenset(
+    {"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"}
+)
+
+
+def joined(drafts: list[Draft]) -> tuple[list[Draft], list[Draft]]:
+    """Drafts put together by name, or because a piece has no name of its own; and those of no panel.
+
+    A piece that only names a model or maker heads the table that follows it, or the only panel there is.
+    """
+    joiner = _Joiner()
+    pieces = [draft for draft in drafts if draft.claims]
+    last_of_sheet = {id(draft.grid): draft for draft in pieces}
+    for draft in pieces:
+        joiner.take(draft, last=draft is last_of_sheet[id(draft.grid)])
+    return joiner.finish()
+
+
+class _Joiner:
+    def __init__(self) -> None:
+        self._kept: list[Draft] = []
+        self._by_name: dict[str, list[Draft]] = {}
+        self._titles: list[Draft] = []
+
+    def take(self, draft: Draft, *, last: bool) -> None:
+        """Keep a draft, or join it to one kept before; `last` says that no other follows on its sheet."""
+        if draft.keys() <= _TITLE_KEYS:
+            self._titles.append(draft)
+            return
+        title = self._titles[-1] if self._titles and self._titles[-1].grid is draft.grid else None
+        if title is not None and last:
+            self._titles.pop()
+            if title.named:
+                draft.name, draft.where, draft.named = title.name, title.where, True
+            draft.joined.append(title)
+        home = self._home(draft)
+        if home is None:
+            self._kept.append(draft)
+            self._by_name.setdefault(draft.name.casefold(), []).append(draft)
+            return
+        if draft.named and not home.named:
+            home.name, home.named = draft.name, True
+            self._by_name.setdefault(draft.name.casefold(), []).append(home)
+        home.joined.append(draft)
+        home.bands += [band for band in draft.bands if band not in home.bands]
+
+    def finish(self) -> tuple[list[Draft], list[Draft]]:
+        """Panels, and titles that belong to none of them."""
+        if not self._kept:
+            return self._titles, []
+        if len(self._kept) > 1:
+            return self._kept, self._titles
+        only = self._kept[0]
+        for title in self._titles:
+            if title.named and not only.named:
+                only.name, only.where, only.named = title.name, title.where, True
+            only.joined.append(title)
+        return self._kept, []
+
+    def _home(self, draft: Draft) -> Draft | None:
+        for other in reversed(self._by_name.get(draft.name.casefold(), [])):
+            if not _clashes(draft, other):
+                return other
+        if not self._kept:
+            return None
+        last = self._kept[-1]
+        if draft.named and (last.named or last.grid is draft.grid):
+            return None
+        alone = len(self._kept) == 1 or last.grid is draft.grid
+        return last if alone and not _clashes(draft, last) else None
+
+
+def _clashes(draft: Draft, other: Draft) -> bool:
+    """Whether two drafts state the same things and so are two panels."""
+    mine, theirs = _stated(draft), _stated(other)
+    shared = {entry for entry in mine & theirs if entry[0] not in _TITLE_KEYS}
+    return len(shared) >= 2 and len(shared) * 3 >= min(len(mine), len(theirs))
+
+
+def _stated(draft: Draft) -> set[tuple[str, Band | None, str]]:
+    claims: list[Claim] = [claim for piece in draft.pieces() for claim in piece.claims]
+    return {(key, c.band, c.context.band_name) for c in claims for key in c.context.label.parameters}

@@ -1,0 +1,1 @@
+"""Where the tables of a sheet lie, and what each value cell inherits from its headings."""

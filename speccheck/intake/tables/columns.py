@@ -1,0 +1,146 @@
+"""What the heading rows above a table say of each of its columns."""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass, field
+
+from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.labels import Label, Labels, is_unit, statistic_of
+from speccheck.intake.tables.words import column_leaning, column_role
+from speccheck.records import Band
+
+PLANE_LETTERS = ("H", "V")
+"""Over a column they mean horizontal and vertical, not hours and volts."""
+VALUE_ROLES = frozenset({"", "offered", "panel", "typical", "minimum", "maximum", "parameter"})
+"""Roles of columns whose cells may be claims; an empty role is a column named after a panel or band."""
+
+_SLACK = re.compile(r"(?:±|\+/-)\s*(.+)")
+
+
+@dataclass(slots=True)
+class Column:
+    """One column of a table: the heading cells over it and what they say."""
+
+    index: int
+    cells: list[Cell] = field(default_factory=list)
+    role: str = ""
+    words: list[str] = field(default_factory=list)
+    name_cell: Cell | None = None
+    band: Band | None = None
+    band_name: str = ""
+    band_cell: Cell | None = None
+    wider: Band | None = None
+    statistic: str = ""
+    unit: str = ""
+    frequency: Cell | None = None
+
+    def take_band(self, band: Band | None, cell: Cell) -> None:
+        """Take in the band of a heading cell; one above that contains it stays as the wider band."""
+        above = self.band
+        if above and band and above != band and above[0] <= band[0] and band[1] <= above[1]:
+            self.wider = above
+        self.band, self.band_cell = band, cell
+
+    @property
+    def name(self) -> str:
+        """Words of the headings that are neither band, unit nor role: a panel's name, if anything."""
+        return " ".join(self.words)
+
+    @property
+    def heading(self) -> str:
+        """All heading texts, top to bottom."""
+        return " / ".join(dict.fromkeys(" ".join(cell.text.split()) for cell in self.cells))
+
+
+def heading_stack(grid: Grid, rows: list[int], column: int, left: int) -> list[Cell]:
+    """Heading cells over a column, top to bottom; a heading over several columns counts for each.
+
+    A heading that is not merged reaches to the next filled cell of its row, unless it is in the lowest row.
+    """
+    stack: list[Cell] = []
+    for row in rows:
+        cell = grid.covering(row, column)
+        own = any(above.column == column for above in stack)
+        if cell is None and not own and row != rows[-1] and grid.covering(rows[-1], column) is not None:
+            for before in range(column - 1, max(left, column - 12) - 1, -1):
+                cell = grid.cells.get((row, before))
+                if cell is not None:
+                    merged = grid.spans.get((row, before))
+                    cell = (
+                        None if merged or column_role(cell.text) in ("parameter", "unit", "number") else cell
+                    )
+                    break
+        if cell is not None and cell not in stack:
+            stack.append(cell)
+    return stack
+
+
+def describe(index: int, stack: list[Cell], labels: Labels) -> Column:
+    """Sort the heading texts over a value column into band, unit, statistic, role and panel name."""
+    column = Column(index, stack)
+    for cell in stack:
+        _take(column, cell, labels)
+    if column.role == "band" and (column.band or column.band_name):
+        column.role = ""
+    if column.frequency is not None and column.band is None:
+        column.band, column.band_cell = labels.of(column.frequency.text).bands.hull, column.frequency
+        column.frequency = None
+    return column
+
+
+def _take(column: Column, cell: Cell, labels: Labels) -> None:
+    text = " ".join(cell.text.split())
+    statistic = statistic_of(text)
+    role = column_role(text) or column_leaning(text)
+    slack = _SLACK.fullmatch(text)
+    if text in PLANE_LETTERS:
+        column.words.append(text)
+    elif slack and is_unit(slack[1]):
+        column.role, column.unit = "tolerance", slack[1]
+    elif is_unit(text):
+        column.unit = text
+    elif statistic:
+        column.statistic = statistic
+        column.role = column.role or {"min": "minimum", "typ": "typical", "max": "maximum"}[statistic]
+    elif role:
+        column.role = role
+        bands = find_bands(text)
+        if bands.spans and bands.proved:
+            column.band, column.band_cell = bands.hull, cell
+    elif _is_frequency_heading(labels.of(text)):
+        column.frequency = cell
+    elif is_band_label(text):
+        _take_band(column, cell, text)
+    else:
+        _take_name(column, cell, text)
+
+
+def _take_band(column: Column, cell: Cell, text: str) -> None:
+    bands = find_bands(text)
+    if bands.spans and bands.connected:
+        column.take_band(bands.hull, cell)
+        text = bands.rest if not bands.names else text
+    column.band_name = " ".join(filter(None, (column.band_name, text.strip(" ()[]:,-–"))))
+
+
+def _take_name(column: Column, cell: Cell, text: str) -> None:
+    bands = find_bands(text)
+    unit = re.search(r"\s*[(\[]([^()\[\]]+)[)\]]\s*$", text)
+    if bands.spans and bands.proved:
+        column.take_band(bands.hull, cell)
+        text = bands.rest.strip(" ()[]:,-–")
+    elif unit and is_unit(unit[1]):
+        column.unit, text = unit[1], text[: unit.start()]
+    if text:
+        column.words.append(text)
+        column.name_cell = cell
+
+
+def _is_frequency_heading(label: Label) -> bool:
+    return (
+        bool(label.bands.spans)
+        and set(label.parameters) <= {"frequency_range", "operating_bands"}
+        and bool(label)
+    )

@@ -1,0 +1,232 @@
+"""Which panel each column of a table with parameters down the side speaks of."""
+
+from __future__ import annotations
+
+import re
+
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.tables.bands import find_bands
+from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
+from speccheck.intake.tables.columns import VALUE_ROLES, Column
+from speccheck.intake.tables.down_bands import ColumnBands
+from speccheck.intake.tables.down_regions import Down
+from speccheck.intake.tables.labels import Label
+from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.naming import Names, model_name
+from speccheck.intake.tables.titles import codes
+from speccheck.records import Band
+
+NAME_KEYS = frozenset({"model", "panel_type"})
+_NAMING_KEYS = frozenset({"model", "panel_type", "manufacturer", "part_number", "revision"})
+_NUMBERED = re.compile(r"\d\d")
+_FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
+
+
+class DownPanels:
+    """The drafts of one table, by panel name; a single nameless one where columns name no panels."""
+
+    def __init__(self, marks: Marks, table: Down, columns: dict[int, Column], result: SheetResult) -> None:
+        self._marks, self._table, self._columns, self._result = marks, table, columns, result
+        self._drafts: dict[str, Draft] = {}
+        self._column_bands: dict[int, ColumnBands] = {}
+        self._technical: set[int] = set()
+        self._seen: dict[str, Draft] = {}
+        self.model_row = 0
+        self.name_column = 0
+        self.named_by_row = False
+
+    @property
+    def first(self) -> Draft:
+        """The only draft, or the first of several."""
+        return next(iter(self._drafts.values()))
+
+    @property
+    def first_is_technical(self) -> bool:
+        """Whether the first panel already has figures, not only names."""
+        return id(self.first) in self._technical
+
+    def note(self, draft: Draft, label: Label) -> None:
+        """Remember that a panel has been given a claim."""
+        if label.parameters[0] not in _NAMING_KEYS:
+            self._technical.add(id(draft))
+
+    @property
+    def several(self) -> bool:
+        """Whether the columns name more than one panel."""
+        return len(self._drafts) > 1
+
+    def open(self, names: Names, heading_rows: list[int]) -> None:
+        """Make a draft for each panel named over the columns, or one named by the title."""
+        values = self._value_columns()
+        self.model_row = self._find_model_row(values)
+        title = None
+        if not self.model_row and (self._name_groups_of_bands(values) or self._name_nothing(values)):
+            title = names.title_for(self._table, heading_rows, self._marks, self._result)
+            self._unname(values if title.certain else [])
+        for column in values:
+            cell = self._name_cell(column)
+            if cell is not None and model_name(cell.text) not in self._drafts:
+                self._add(model_name(cell.text), cell, named=True)
+        if not self._drafts:
+            title = title or names.title_for(self._table, heading_rows, self._marks, self._result)
+            self._add("", title.cell, named=title.certain).name = title.name
+        self._bands_from_row(values)
+        self._claims_of_headings(values)
+
+    def start(self, name: str, cell: Cell) -> None:
+        """Begin the next panel of a table that lists panels below one another."""
+        self._drafts = {}
+        self._add(name, cell, named=True)
+
+    def follow(self, row: int) -> None:
+        """Go to the panel that a column of names beside the labels gives for a row."""
+        cell = self._marks.grid.covering(row, self.name_column) if self.name_column else None
+        name = model_name(cell.text) if cell is not None else ""
+        if cell is None or not name or name in self._drafts:
+            return
+        if not self._seen:
+            self._result.drafts.remove(self.first)
+        if name not in self._seen:
+            self.start(name, cell)
+            self._seen[name] = self.first
+        self._drafts = {name: self._seen[name]}
+
+    @staticmethod
+    def _name_groups_of_bands(values: list[Column]) -> bool:
+        """Whether the words over the columns part one panel's bands: no type codes, no band under two."""
+        bands: dict[str, set[Band]] = {}
+        for column in values:
+            if column.words:
+                bands.setdefault(column.name, set()).update([column.band] if column.band else [])
+        groups = list(bands.values())
+        apart = sum(map(len, groups)) == len(set().union(*groups))
+        return (
+            len(groups) > 1
+            and all(groups)
+            and apart
+            and not any(codes(name) or _NUMBERED.search(name) for name in bands)
+        )
+
+    @staticmethod
+    def _name_nothing(values: list[Column]) -> bool:
+        """Whether one heading without any figure stands over the values; a title names a panel better."""
+        names = {column.name for column in values if column.words}
+        return len(names) == 1 and not any(letter.isdigit() for name in names for letter in name)
+
+    @staticmethod
+    def _unname(values: list[Column]) -> None:
+        for column in values:
+            column.words, column.name_cell = [], None
+
+    def of(self, column: Column) -> Draft:
+        """The draft a column speaks of."""
+        if len(self._drafts) == 1:
+            return self.first
+        cell = self._name_cell(column)
+        return self._drafts.get(model_name(cell.text) if cell else "") or self.first
+
+    def bands_of(self, column: Column) -> ColumnBands:
+        """The bands of the panel a column speaks of."""
+        draft = self.of(column)
+        if id(draft) not in self._column_bands:
+            for key, columns in self._by_draft(self._value_columns()).items():
+                self._column_bands[key] = ColumnBands(columns)
+        return self._column_bands[id(draft)]
+
+    def _by_draft(self, columns: list[Column]) -> dict[int, list[Column]]:
+        by_draft: dict[int, list[Column]] = {id(draft): [] for draft in self._drafts.values()}
+        for column in columns:
+            by_draft[id(self.of(column))].append(column)
+        return by_draft
+
+    def claim_band(self, draft: Draft, cell: Cell, band: Band, heading: str) -> None:
+        """A heading that gives the frequencies of a band is itself a claim."""
+        if band not in draft.bands:
+            draft.bands.append(band)
+        context = Context(Label(heading, ("operating_bands",), "MHz"), heading=heading)
+        text = f"{band[0]:g}-{band[1]:g} MHz"
+        draft.claims.append(Claim(cell, context, band, text=text, banded=True))
+
+    def _add(self, key: str, where: Cell, *, named: bool) -> Draft:
+        draft = self._drafts[key] = Draft(key, self._marks.grid, where, named=named)
+        self._result.drafts.append(draft)
+        return draft
+
+    def _value_columns(self) -> list[Column]:
+        return [column for column in self._columns.values() if column.role in VALUE_ROLES]
+
+    def _name_cell(self, column: Column) -> Cell | None:
+        if self.model_row:
+            cell = self._marks.grid.covering(self.model_row, column.index)
+            if cell is not None:
+                return cell
+        return column.name_cell
+
+    def _rows_of(self, keys: frozenset[str]) -> list[int]:
+        rows = range(self._table.top, self._table.bottom + 1)
+        column, headings = self._table.label_column, self._marks.headings
+        return [r for r in rows if (found := headings.get((r, column))) and set(found.parameters) <= keys]
+
+    def _find_model_row(self, values: list[Column]) -> int:
+        if len(values) < 2:
+            return 0
+        for row in self._rows_of(NAME_KEYS):
+            cells = [self._marks.grid.cells.get((row, column.index)) for column in values]
+            if len({cell.text for cell in cells if cell is not None}) > 1:
+                return row
+        return 0
+
+    def _bands_from_row(self, values: list[Column]) -> None:
+        """A row of frequency ranges that differ across one panel's columns gives the columns their bands.
+
+        Of several such rows the one with the most ranges; ranges of another that contain them are wider.
+        """
+        rows = self._rows_of(_FREQUENCY_KEYS)
+        by_draft = self._by_draft([c for c in values if c.role in ("", "offered", "panel")])
+        for draft in self._drafts.values():
+            mine = by_draft[id(draft)]
+            spans = [self._spans_of_row(row, mine) for row in rows]
+            best = max(spans, key=lambda found: len(set(found.values())), default={})
+            if len(set(best.values())) < 2 or any(c.band for c in mine):
+                continue
+            for column in mine:
+                column.band = best.get(column.index)
+                if column.band is not None and column.band not in draft.bands:
+                    draft.bands.append(column.band)
+                column.wider = next((w for s in spans if _holds(w := s.get(column.index), column.band)), None)
+
+    def _spans_of_row(self, row: int, columns: list[Column]) -> dict[int, Band]:
+        unit = self._marks.headings[row, self._table.label_column].unit or "MHz"
+        cells = {c.index: self._marks.grid.covering(row, c.index) for c in columns}
+        found = {i: _only_band(cell.text, unit) for i, cell in cells.items() if cell is not None}
+        return {index: span for index, span in found.items() if span is not None}
+
+    def _claims_of_headings(self, values: list[Column]) -> None:
+        done: set[tuple[int, int]] = set()
+        for column in values:
+            draft = self.of(column)
+            frequency, named_by = column.frequency, column.band_cell
+            if frequency is not None and (frequency.row, frequency.column) not in done:
+                done.add((frequency.row, frequency.column))
+                self._claim_range(draft, frequency)
+            if column.band is not None and named_by is not None:
+                if column.band not in draft.bands:
+                    draft.bands.append(column.band)
+                if (named_by.row, named_by.column) not in done:
+                    done.add((named_by.row, named_by.column))
+                    self.claim_band(draft, named_by, column.band, "column heading")
+
+    def _claim_range(self, draft: Draft, cell: Cell) -> None:
+        label = self._marks.labels.of(cell.text)
+        context = Context(Label(label.text, ("frequency_range",), "MHz"), heading=label.text)
+        for low, high in label.bands.spans[:1]:
+            draft.claims.append(Claim(cell, context, None, text=f"{low:g}-{high:g} MHz"))
+
+
+def _only_band(text: str, unit: str) -> Band | None:
+    spans = find_bands(text if "hz" in text.lower() else f"{text} {unit}").spans
+    return spans[0] if len(spans) == 1 else None
+
+
+def _holds(wider: Band | None, band: Band | None) -> bool:
+    return bool(wider and band and wider != band and wider[0] <= band[0] and band[1] <= wider[1])

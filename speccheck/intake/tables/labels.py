@@ -1,0 +1,291 @@
+"""What a heading says: parameter, unit, band, statistic and condition, read once per distinct text."""
+
+from __future__ import annotations
+
+import re
+from collections.abc import Mapping
+from dataclasses import dataclass, replace
+from functools import cache, lru_cache
+
+from speccheck.dictionary import match_heading, parameters, synonyms
+from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
+from speccheck.intake.tables.words import column_role, fold, is_counting_unit
+from speccheck.kept import kept
+from speccheck.quantities.units import unit_name
+
+FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
+_LONGEST = 160
+_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/**/labels.py", "intake/**/words.py", "**/units.py")
+_MOST_SUGGESTIONS = 300
+_MOST_MISSES = 5_000
+"""More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
+_NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
+_AT = r"[,(]?\s*(?:at|@|bei|mit|for|für|à|a|con|com|przy|bij|vs\.?)?\s*"
+_TILT_WORD = (
+    r"(?:(?:electrical|electric|el\.|elektrisch\w*)\s*)?(?:down-?)?(?:tilts?|neigung\w*|absenkung\w*|inclinaison|"
+    r"inclinaci[oó]n|inclina[cç][aã]o|inclinazione|pochyleni\w*|nachyleni\w*|neiging)(?:\s+(?:angles?|el\w*))?"
+)
+_ANGLE = r"\d+(?:[.,]\d+)?\s*(?:°|deg\.?|grad\b)?"
+_ANGLES = rf"((?:{_ANGLE}\s*/\s*)+{_ANGLE})"
+_TILTS = re.compile(
+    rf"{_AT}(?:{_TILT_WORD}\s*(?:of|=|:)?\s*{_ANGLES}|{_ANGLES}\s*(?:of\s+)?{_TILT_WORD})\s*[)]?\s*$",
+    re.IGNORECASE,
+)
+_CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
+_STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
+_UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
+_DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
+_BAND_WORD = re.compile(
+    r"\b(?:(?:in|im|en|dans|na|w|nel\w*|la|der|the)\s+)*(?:sub-?)?(?:band|bande|banda|pasmo|pasmie|teilband)\b",
+    re.I,
+)
+_UNIT_BRACKET = re.compile(r"\s*(?:[(\[][^()\[\]\d]{1,8}[)\]]|,?\s*\b(?:dBi|dBd|dB))\s*$")
+_LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
+_LISTED_IN_BRACKET = re.compile(
+    r"[(\[]\s*([^\W\d][^()\[\]/]*\s[^()\[\]/]*(?:/[^()\[\]/]+)+|[^\W\d][^()\[\]/]*(?:/[^()\[\]/]+\s[^()\[\]/]+)+)\s*[)\]]"
+)
+_SEVERAL = re.compile(r"[xX×/*]")
+_RUN = re.compile(r"[^\W\d_]+")
+_LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
+_STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
+
+
+@dataclass(frozen=True, slots=True)
+class Label:
+    """A heading as understood. No `parameters` means it is not in the dictionary."""
+
+    text: str
+    parameters: tuple[str, ...] = ()
+    unit: str = ""
+    condition: str = ""
+    bands: BandText = NO_BANDS
+    sense: str = "nominal"
+    statistic: str = ""
+    tolerance: bool = False
+    how: str = ""
+    tilts: tuple[float, ...] = ()
+    statistics: tuple[str, ...] = ()
+
+    def __bool__(self) -> bool:
+        return bool(self.parameters)
+
+
+class Labels:
+    """The reader of headings, with the buyer's own synonyms."""
+
+    def __init__(self, synonyms: Mapping[str, str]) -> None:
+        self._synonyms = dict(synonyms)
+        self._known: dict[str, Label] = {}
+        self._vocabulary = _vocabulary() | {_stem(word) for text in synonyms for word in _runs(text)}
+        self._near: dict[str, str] = {}
+        self._misses = 0
+
+    def of(self, text: str) -> Label:
+        """Understand one heading text."""
+        known = self._known.get(text)
+        if known is None:
+            known = self._known[text] = self._understand(text)
+        return known
+
+    def parse_line(self, text: str) -> tuple[Label, str] | None:
+        """A line ``Label: value`` cut in two, when the label is known."""
+        match = _LINE.match(text)
+        if match is None:
+            return None
+        label = self.of(match[1])
+        return (label, match[2].strip()) if label and label.parameters != ("remarks",) else None
+
+    def _understand(self, text: str) -> Label:
+        if not self._could_be_heading(text):
+            return Label(text)
+        cleaned = text.strip().rstrip(":").strip()
+        attempts = (
+            self._with_list,
+            self._with_tilts,
+            self._with_statistics,
+            self._with_unit,
+            self._match,
+            self._with_bands,
+            self._with_demand,
+        )
+        for found in (attempt(cleaned) for attempt in attempts):
+            if found:
+                return replace(found, text=text)
+        self._misses += 1
+        return Label(text)
+
+    def _could_be_heading(self, text: str) -> bool:
+        words = _runs(text)
+        if len(text) > _LONGEST or self._misses > _MOST_MISSES:
+            return False
+        if not any(_stem(word) in self._vocabulary for word in words):
+            return False
+        return max(map(len, words)) > 1 or (len(words) > 1 and _SEVERAL.search(text) is not None)
+
+    def _with_unit(self, text: str) -> Label:
+        """'Total power, W': the letter behind the comma is a unit before it is a word."""
+        cut = _UNIT_BEHIND.match(text)
+        if cut is None or not unit_name(cut[2]):
+            return Label(text)
+        found = self._match(f"{cut[1]} {cut[3]}".strip())
+        return replace(found, unit=found.unit or cut[2]) if len(found.parameters) == 1 else Label(text)
+
+    def _with_list(self, text: str) -> Label:
+        """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
+        bracket = _LISTED_IN_BRACKET.search(text)
+        if bracket is not None:
+            return self._of_items(text, bracket.start(), bracket.end(), bracket[1])
+        lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0]) and cut.start() > 3]
+        if not lists or not _names_something(text[: lists[-1].start()]):
+            return Label(text)
+        return self._of_items(text, lists[-1].start(), lists[-1].end(), lists[-1][0])
+
+    def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
+        """The heading of several figures, one for each item between `start` and `end` of a heading."""
+        found = []
+        for item in re.split(r"\s*/\s*", items):
+            single = f"{text[:start].rstrip(' ([')} ({item}) {text[end:].lstrip(' )]')}".strip()
+            found.append(self._with_unit(single) or self._match(single))
+        keys = tuple(key for label in found for key in label.parameters)
+        several = len(set(keys)) == len(found) and all(len(label.parameters) == 1 for label in found)
+        return replace(found[0], parameters=keys) if several else Label(text)
+
+    def _with_tilts(self, text: str) -> Label:
+        """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""
+        bare = _UNIT_BRACKET.sub("", text)
+        listed = _TILTS.search(bare)
+        if listed is None:
+            return Label(text)
+        inner = self._match(bare[: listed.start()].strip(" ,;") + text[len(bare) :])
+        if not inner:
+            return inner
+        tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1] or listed[2]))
+        return replace(inner, tilts=tilts)
+
+    def _with_statistics(self, text: str) -> Label:
+        """'Power consumption, typ./max.' heads two figures of one parameter."""
+        bracket = _UNIT_BRACKET.search(text)
+        bare, unit = (text[: bracket.start()], bracket[0]) if bracket else (text, "")
+        listed = _STATISTICS.search(bare)
+        if listed is None or not (
+            name := (bare[: listed.start()] + " " + bare[listed.end() :]).strip(" ,;:")
+        ):
+            return Label(text)
+        said = tuple(statistic_of(word) for word in re.split(r"\s*/\s*", listed[1]))
+        said = tuple("typical" if word == "typ" else word for word in said)
+        inner = self._with_unit(f"{name}{unit}") or self._match(f"{name}{unit}")
+        return replace(inner, statistics=said) if len(inner.parameters) == 1 and all(said) else Label(text)
+
+    def _with_demand(self, text: str) -> Label:
+        """'Vertical beamwidth at -3 dB ≤ 8°': what is asked for stands behind the name of the parameter."""
+        cut = _DEMAND.match(text)
+        return replace(self.of(cut[1]), sense="nominal") if cut else Label(text)
+
+    def _with_bands(self, text: str) -> Label:
+        bands = find_bands(text)
+        inner = self._match(_tidy(bands.rest)) if bands.spans and bands.rest else Label(text)
+        if not inner and bands.spans:
+            inner = self._match(_tidy(_BAND_WORD.sub(" ", bands.rest)))
+        return replace(inner, bands=bands) if inner else inner
+
+    def letter(self, text: str) -> Label:
+        """A single letter as a heading, such as H for the height; only its neighbours can prove it one."""
+        return self._match(text.strip()) if len(text.strip()) == 1 else Label(text)
+
+    def suggestion(self, text: str) -> str:
+        """The nearest known headings to a text; for the first few hundred texts of a file only."""
+        near = self._near.get(text)
+        if near is None:
+            if len(self._near) >= _MOST_SUGGESTIONS:
+                return ""
+            found = match_heading(text, self._synonyms).suggestions if text else ()
+            near = self._near[text] = "; ".join(found[:2])
+        return near
+
+    def _match(self, text: str) -> Label:
+        found = match_heading(text, self._synonyms, suggest=False)
+        if not found.exact or not found.parameters:
+            return Label(text)
+        if found.condition and _CODE.fullmatch(text):
+            return Label(text)  # 'BR-0012' is a model, not a width
+        if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
+            return Label(text)  # 'RAL 7035' and 'Model 12' are answers
+        condition = found.condition
+        bands = find_bands(condition) if condition else NO_BANDS
+        return Label(
+            text=text,
+            parameters=tuple(found.parameters),
+            unit=found.unit,
+            condition=condition,
+            bands=bands if bands.proved or set(found.parameters) <= FREQUENCY_KEYS else NO_BANDS,
+            sense=found.sense,
+            statistic=found.statistic,
+            tolerance=found.tolerance_of,
+            how=found.how,
+        )
+
+
+def _names_something(text: str) -> bool:
+    """Whether a text holds a word of weight, more than 'max.' or 'RF'."""
+    return any(len(word) > 2 and not statistic_of(word) for word in _runs(text))
+
+
+def _tidy(text: str) -> str:
+    text = re.sub(r"[(\[]\s*[)\]]", " ", text)
+    return re.sub(r"\s*[@,;:–-]\s*$", "", " ".join(text.split())).strip()
+
+
+def _runs(text: str) -> list[str]:
+    return _RUN.findall(text)
+
+
+@lru_cache(maxsize=20_000)
+def _stem(word: str) -> str:
+    return fold(word)[:4]
+
+
+@cache
+def _vocabulary() -> frozenset[str]:
+    """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
+    return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
+
+
+def _first_letters() -> frozenset[str]:
+    texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
+    return frozenset(_stem(word) for word in set(_runs("\n".join(texts))) if not unit_name(word))
+
+
+def is_unit(text: str) -> bool:
+    """Whether a cell holds a unit and nothing else; a dash in a unit column says that there is none."""
+    return len(text) <= 24 and (bool(unit_name(text)) or is_counting_unit(text))
+
+
+def begins_with_unit(text: str) -> bool:
+    """Whether a text is a unit with a note, such as 'N (150 km/h)'."""
+    first = text.split(maxsplit=1)[0] if text.strip() else ""
+    return bool(unit_name(first)) and not any(letter.isdigit() for letter in first)
+
+
+def looks_like_line(text: str) -> bool:
+    """Whether a text has the form ``Label: value``, known or not."""
+    return len(text) < 200 and _LINE.match(text) is not None
+
+
+def split_lines(text: str) -> list[str]:
+    """The lines of a cell; pieces between semicolons count as lines when each has a label."""
+    lines = [line.strip() for line in text.splitlines() if line.strip()]
+    split: list[str] = []
+    for line in lines:
+        pieces = [piece.strip() for piece in re.split(r"\s*[;|]\s*", line) if piece.strip()]
+        split += pieces if len(pieces) > 1 and all(map(looks_like_line, pieces)) else [line]
+    return split
+
+
+def statistic_of(text: str) -> str:
+    """``min``, ``typ`` or ``max`` when a heading cell says only that."""
+    return _STATISTIC.get(column_role(text), "")
+
+
+def is_heading_filler(text: str) -> bool:
+    """Whether a cell under a heading still belongs to the heading: a unit, band or statistic."""
+    return is_unit(text) or is_band_label(text) or bool(statistic_of(text)) or text.strip() in ("H", "V")

@@ -1,0 +1,152 @@
+"""A first look at every cell of a sheet: headings, pasted lines, plain values."""
+
+from __future__ import annotations
+
+import re
+from dataclasses import dataclass, field
+
+from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.tables.labels import Label, Labels, is_unit, split_lines, statistic_of
+from speccheck.intake.tables.words import column_role
+
+_LONGEST = 2000
+_SIZES = frozenset("HWDBTLPAGS")
+_LETTER_UNIT = re.compile(r"(?<=^[A-Za-z])\s*(?:[(\[]|,\s)\s*(?:mm|cm|m|in|inch|\")\s*[)\]]?$")
+_LONGEST_LETTER = 9
+_LINE_MARKS = (":", "=", "\t", "...", "…")
+
+
+@dataclass(slots=True)
+class Marks:
+    """Headings and pasted lines of a sheet by place, and its cells by row."""
+
+    grid: Grid
+    labels: Labels
+    rows: dict[int, list[Cell]]
+    headings: dict[tuple[int, int], Label] = field(default_factory=dict)
+    lines: dict[tuple[int, int], tuple[Label, str]] = field(default_factory=dict)
+
+    def is_heading(self, cell: Cell) -> bool:
+        """Whether a cell is a heading of the dictionary."""
+        return (cell.row, cell.column) in self.headings
+
+    def heading_columns(self, row: int) -> list[int]:
+        """Columns of a row that hold headings."""
+        return [cell.column for cell in self.rows.get(row, ()) if (row, cell.column) in self.headings]
+
+
+def mark(grid: Grid, labels: Labels) -> Marks:
+    """Look at every visible cell once."""
+    marks = Marks(grid, labels, grid.rows())
+    wordless: set[str] = set()
+    for row, cells in marks.rows.items():
+        following: Cell | None = None
+        for cell in reversed(cells):
+            raw = cell.raw
+            if isinstance(raw, str) and raw not in wordless and not cell.fault:
+                if _might_be_heading(raw):
+                    _mark_text(marks, (row, cell.column), raw, following)
+                else:
+                    wordless.add(raw)
+            following = cell
+    _mark_letters(marks)
+    _unmark_column_words(marks)
+    return marks
+
+
+def _unmark_column_words(marks: Marks) -> None:
+    """Words over the columns of a table with headings down the side head no values: 'Parameter | Typ'."""
+    for row, cells in marks.rows.items():
+        headings = marks.heading_columns(row)
+        if not 0 < len(headings) <= 4:
+            continue
+        roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
+        if is_form_heading(roles):
+            for column in headings:
+                if column_role(marks.grid.cells[row, column].text):
+                    del marks.headings[row, column]
+            continue
+        if len(headings) > 2:
+            continue
+        statistics = sum(role in ("minimum", "typical", "maximum") for role in roles)
+        for column in headings:
+            said = statistic_of(marks.grid.cells[row, column].text)
+            detail = bool(said) and _follows_heading(marks, row, column)
+            if "parameter" in roles or statistics > 1 or detail:
+                del marks.headings[row, column]
+
+
+def is_form_heading(roles: list[str]) -> bool:
+    """Whether a row says of each column of a form what it is for: 'Requirement | Offered | Comply'."""
+    labels = {"parameter", "required"} & set(roles)
+    answers = {"offered", "compliance"} & set(roles)
+    if len(roles) > 1 and set(roles) <= {"offered", "remark", "compliance", "required"}:
+        return True
+    return bool(labels and answers) and sum(map(bool, roles)) * 4 >= 3 * len(roles)
+
+
+def _follows_heading(marks: Marks, row: int, column: int) -> bool:
+    before = marks.grid.covering(row, column - 1) if column > 1 else None
+    return before is not None and (before.row, before.column) in marks.headings
+
+
+def _mark_letters(marks: Marks) -> None:
+    """H, W and D beside or below one another head the three sizes."""
+    letters = {
+        place: _LETTER_UNIT.sub("", cell.text.strip())
+        for place, cell in marks.grid.cells.items()
+        if isinstance(cell.raw, str) and is_size_letter(cell.text)
+    }
+    for row, column in letters:
+        for step in ((0, 1), (1, 0)):
+            places = [(row + n * step[0], column + n * step[1]) for n in range(3)]
+            if all(place in letters for place in places):
+                _mark_three(marks, places, " x ".join(letters[place] for place in places))
+    for (row, column), letter in letters.items():
+        around = ((row - 1, column), (row + 1, column), (row, column - 1), (row, column + 1))
+        pair = any(place in letters and letters[place] != letter for place in around)
+        if pair and (row, column) not in marks.headings and (label := marks.labels.letter(letter)):
+            marks.headings[row, column] = label
+
+
+def is_size_letter(text: str) -> bool:
+    """Whether a heading is a letter, perhaps with a unit of length, that may head a size."""
+    if len(text) >= _LONGEST_LETTER or (len(text) > 1 and text[1] not in " ([,"):
+        return False
+    return _LETTER_UNIT.sub("", text.strip()).upper() in _SIZES
+
+
+def _mark_three(marks: Marks, places: list[tuple[int, int]], letters: str) -> None:
+    """'H x L x P' and 'L x W x H': what a letter stands for depends on the other two."""
+    sizes = marks.labels.of(letters).parameters
+    for place, size in zip(places, sizes, strict=False):
+        text = marks.grid.cells[place].text
+        unit = "".join(_LETTER_UNIT.findall(text.strip())).strip(" ,()[]")
+        marks.headings[place] = Label(text, (size,), unit=unit, how=f"heading '{text}' of '{letters}'")
+
+
+def _might_be_heading(text: str) -> bool:
+    return len(text) <= _LONGEST and any(letter.isalpha() for letter in text) and not is_unit(text)
+
+
+def _mark_text(marks: Marks, place: tuple[int, int], text: str, following: Cell | None) -> None:
+    """A label with its value behind a colon is a line, unless the value stands in the next cell."""
+    alone = following is None or (following.row, following.column) in marks.lines
+    if (alone or "\n" in text) and any(mark in text for mark in _LINE_MARKS):
+        known = [line for line in map(marks.labels.parse_line, split_lines(text)) if line is not None]
+        if known:
+            marks.lines[place] = known[0]
+            return
+    label = marks.labels.of(text)
+    if label:
+        marks.headings[place] = label
+
+
+def looks_like_value(cell: Cell) -> bool:
+    """Whether a cell could hold a figure."""
+    return not isinstance(cell.raw, str) or any(letter.isdigit() for letter in cell.text)
+
+
+def says_column_role(cell: Cell) -> bool:
+    """Whether a cell only says what its column is for."""
+    return isinstance(cell.raw, str) and bool(column_role(cell.raw))

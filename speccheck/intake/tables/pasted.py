@@ -1,0 +1,125 @@
+"""Lines 'Label: value unit' pasted into one column, one or several a cell."""
+
+from __future__ import annotations
+
+import re
+from collections import defaultdict
+from dataclasses import replace
+
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.panels.told_by_value import label_by_values
+from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
+from speccheck.intake.tables.labels import Label, looks_like_line, split_lines
+from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.naming import Names, model_name
+from speccheck.records import Band
+
+_NAME_KEYS = frozenset({"model", "panel_type"})
+
+
+def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
+    """Collect the pasted lines no table has taken."""
+    columns: dict[int, list[Cell]] = defaultdict(list)
+    for place in sorted(marks.lines):
+        if place not in result.roles:
+            columns[place[1]].append(marks.grid.cells[place])
+    for column, cells in columns.items():
+        last = cells[-1].row
+        while (below := marks.grid.cells.get((last + 1, column))) is not None and looks_like_line(below.text):
+            last += 1
+        _Column(marks, result, names, column).read(cells[0].row, last)
+
+
+_SUPERSEDED = re.compile(
+    r"supersed|previous|formerly|no longer|obsolete|withdrawn|ungültig|überholt|ersetzt durch", re.I
+)
+
+
+class _Column:
+    def __init__(self, marks: Marks, result: SheetResult, names: Names, column: int) -> None:
+        self._marks, self._result, self._names, self._index = marks, result, names, column
+        self._draft: Draft | None = None
+        self._band: Band | None = None
+        self._band_name = ""
+
+    def read(self, first: int, last: int) -> None:
+        for row in range(first, last + 1):
+            cell = self._marks.grid.cells.get((row, self._index))
+            if cell is None or (row, self._index) in self._result.roles:
+                continue
+            lines = split_lines(cell.text)
+            if (row, self._index) in self._marks.lines:
+                taken = [self._line(cell, line) for line in lines]
+                if not any(taken):
+                    self._result.mark(cell, "unread")
+            elif (known := _by_value(cell.text)) is not None:
+                self._claim(cell, *known)
+            elif looks_like_line(cell.text):
+                self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
+                self._result.mark(cell, "unread")
+            elif isinstance(cell.raw, str) and is_band_label(cell.text):
+                self._section(cell, find_bands(cell.text).hull)
+            elif self._names.is_title(cell.text):
+                self._title(cell, cell.text)
+            else:
+                self._band, self._band_name = None, ""
+
+    def _line(self, cell: Cell, text: str) -> bool:
+        """Take one line in; False when it says nothing that was understood."""
+        parsed = self._marks.labels.parse_line(text)
+        if parsed is None and self._names.is_title(text) and not looks_like_line(text):
+            self._title(cell, text)
+            return True
+        if parsed is None or _SUPERSEDED.search(text):
+            reason = "quotes a superseded figure" if parsed else "has no known label"
+            self._result.unread.append((cell, f"line '{text[:80]}' {reason}", ""))
+            return False
+        label, value = parsed
+        if label.parameters[0] in _NAME_KEYS:
+            if self._draft is None or self._draft.claims:
+                self._open(model_name(value), cell, named=True)
+            self._result.mark(cell, "heading")
+            return True
+        self._claim(cell, label, value)
+        return True
+
+    def _claim(self, cell: Cell, label: Label, value: str) -> None:
+        draft = self._draft or self._untitled(cell)
+        inherited = replace(label, text="")
+        band = label.bands.hull or self._band
+        name = "" if band else self._band_name
+        context = Context(inherited, heading=label.text, band_name=name)
+        draft.claims.append(Claim(cell, context, band, text=value, banded=bool(band or name)))
+
+    def _section(self, cell: Cell, band: Band | None) -> None:
+        """A line that only names a band heads the lines below it."""
+        self._result.mark(cell, "heading")
+        self._band, self._band_name = band, " ".join(cell.text.split())
+        draft = self._draft or self._untitled(cell)
+        if band is not None and band not in draft.bands:
+            draft.bands.append(band)
+            label = Label("heading of the lines below", ("operating_bands",), "MHz")
+            text = f"{band[0]:g}-{band[1]:g} MHz"
+            draft.claims.append(Claim(cell, Context(label, heading=label.text), band, text=text, banded=True))
+
+    def _untitled(self, cell: Cell) -> Draft:
+        title = self._names.above(cell.row, cell.column, cell.column + 3, self._marks, self._result)
+        return self._open(title.name, title.cell, named=title.certain)
+
+    def _title(self, cell: Cell, text: str) -> None:
+        self._result.mark(cell, "heading")
+        self._open(model_name(text), cell, named=True)
+
+    def _open(self, name: str, cell: Cell, *, named: bool) -> Draft:
+        self._band, self._band_name = None, ""
+        self._draft = Draft(name, self._marks.grid, cell, named=named)
+        self._result.drafts.append(self._draft)
+        return self._draft
+
+
+def _by_value(text: str) -> tuple[Label, str] | None:
+    """A line whose value alone says what it is, 'Configuration: 64T64R'."""
+    heading, colon, value = text.partition(":")
+    label = label_by_values(heading.strip(), [value]) if colon else None
+    return (label, value.strip()) if label else None

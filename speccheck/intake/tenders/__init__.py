@@ -1,0 +1,1 @@
+"""The buyer's workbook: requirements, settings, deviations, answers."""

@@ -1,0 +1,1 @@
+"""Offers side by side: page, workbook and JSON."""

@@ -1,0 +1,105 @@
+"""Small repeated charts: one numeric requirement each, all offers on one axis, the limit drawn in."""
+
+from __future__ import annotations
+
+from collections.abc import Iterator, Sequence
+
+from speccheck.records import Requirement
+from speccheck.records.evaluations import Offer, OfferCell
+from speccheck.report.pages.canvas import Canvas, Figure, scale_around
+from speccheck.report.pages.formats import Numbers, shown_unit
+from speccheck.report.pages.marks import mark_for
+from speccheck.report.pages.view import label
+
+MOST_CHARTS = 12
+MOST_OFFERS = 24
+_WIDTH, _ROW = 320, 16
+
+Row = tuple[int, str, Offer]
+
+
+def strips(
+    requirements: Sequence[Requirement], offers: Sequence[Row], numbers: Numbers
+) -> tuple[Figure, ...]:
+    """Charts of the numeric requirements that at least two offers answer, in tender order."""
+    figures: list[Figure] = []
+    for index, requirement in enumerate(requirements):
+        points = list(_points(index, offers[:MOST_OFFERS]))
+        limits = _limits(requirement)
+        if len({number for number, _, _ in points}) >= 2 and limits and len(figures) < MOST_CHARTS:
+            figures.append(_strip(requirement, limits, points, numbers))
+    return tuple(figures)
+
+
+def _points(index: int, offers: Sequence[Row]) -> Iterator[tuple[int, str, OfferCell]]:
+    for number, name, offer in offers:
+        for cell in offer.cells:
+            if cell.requirement == index and isinstance(cell.offered, float | int | tuple):
+                yield number, name, cell
+
+
+def _limits(requirement: Requirement) -> tuple[float, ...]:
+    limit = requirement.limit
+    if isinstance(limit, tuple):
+        return limit
+    return (float(limit),) if isinstance(limit, float | int) else ()
+
+
+def _strip(
+    requirement: Requirement,
+    limits: Sequence[float],
+    points: Sequence[tuple[int, str, OfferCell]],
+    numbers: Numbers,
+) -> Figure:
+    rows = list(dict.fromkeys((number, name) for number, name, _ in points))
+    canvas = Canvas(_WIDTH, 44 + _ROW * len(rows), numbers)
+    bottom = 14 + _ROW * len(rows)
+    scale = scale_around([*limits, *(v for _, _, cell in points for v in _ends(cell))], 34, 250)
+    for tick in scale.ticks(4):
+        canvas.line(((scale(tick), 10), (scale(tick), bottom)), "grid")
+        canvas.write(scale(tick), bottom + 12, numbers.plain(tick), "middle", "small")
+    for limit in limits:
+        canvas.line(((scale(limit), 8), (scale(limit), bottom)), "limit")
+    for line, (number, _) in enumerate(rows):
+        y = 14 + _ROW * line + 5
+        canvas.write(4, y + 4, f"{number}", style="text")
+        for cell in (cell for n, _, cell in points if n == number):
+            ends = _ends(cell)
+            if len(ends) == 2:
+                canvas.line(((scale(ends[0]), y), (scale(ends[1]), y)), "claimspan")
+            for value in ends:
+                canvas.diamond(scale(value), y, 4, mark_for(cell.verdict).tone)
+        worst = [cell for n, _, cell in points if n == number]
+        shown = min(worst, key=lambda c: c.margin if c.margin is not None else float("inf"))
+        written = numbers.stated(_rounded(shown), requirement.unit)
+        canvas.write(258, y + 4, f"{mark_for(shown.verdict).symbol} {written}", style="small")
+    name = label(requirement.parameter) if requirement.parameter else requirement.wording[:40]
+    unit = shown_unit(requirement.unit)
+    canvas.write(142, bottom + 26, f"{name}{f' [{unit}]' if unit else ''}; dashed: limit", "middle", "small")
+    table = tuple(
+        (f"{n}", who, mark_for(c.verdict).word, numbers.stated(_rounded(c), requirement.unit))
+        for n, who, c in points
+    )
+    passing = sum(1 for _, _, c in points if (c.margin or 0.0) >= 0)
+    limit_text = numbers.stated(requirement.limit, requirement.unit)
+    return canvas.figure(
+        f"Clause {requirement.clause or '–'}, {name} {requirement.operator} {limit_text}: "
+        f"{passing} of {len(points)} figures inside",
+        f"Offered figures on one axis, offer numbers at the left; the limit {limit_text} is dashed.",
+        kind="offers",
+        columns=("Offer", "Panel", "Verdict", "Figure"),
+        rows=table,
+    )
+
+
+def _ends(cell: OfferCell) -> tuple[float, ...]:
+    if isinstance(cell.offered, tuple):
+        return cell.offered
+    return (float(cell.offered),) if isinstance(cell.offered, float | int) else ()
+
+
+def _rounded(cell: OfferCell) -> float | tuple[float, float] | None:
+    ends = tuple(float(f"{value:.4g}") for value in _ends(cell))
+    if len(ends) == 2:
+        return ends[0], ends[1]
+    return ends[0] if ends else None

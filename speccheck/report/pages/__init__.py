@@ -1,0 +1,1 @@
+"""Pages to read and sign: HTML, PDF and their figures."""

@@ -1,0 +1,125 @@
+"""Cells, rows and links of a generated sheet as SpreadsheetML text.
+
+Text is always of the text type, so that nothing typed by a bidder can run, and a formula is stored
+with its result, so that a reader that does not calculate shows it too.
+"""
+
+from __future__ import annotations
+
+import functools
+import math
+import re
+from collections.abc import Iterable, Mapping, Sequence
+from dataclasses import dataclass
+
+from speccheck.report.workbooks.looks import style_number
+from speccheck.text import plain
+
+LONGEST_TEXT = 32_000
+"""A cell holds 32 767 characters."""
+
+_NOT_XML = re.compile("[\ud800-\udfff\ufffe\uffff]")
+_HARMLESS = re.compile("[ -%'-;=?-^`-~\u00a0-\u1fff\u2010-\u2027\u2030-\u2065\u2070-\ud7ff\n]*")
+"""Text that needs no care: no mark-up, no controls, no direction marks, no underscore."""
+_LOOKS_ESCAPED = re.compile(r"_(?=x[0-9A-Fa-f]{4}_)")
+_RUNS_WHEN_EDITED = tuple("=+-@|%\t\r\n ")
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Rich:
+    """A cell with more than a value.
+
+    `look` names a style other than the column's, `link` a place inside the workbook such as
+    ``'Input 1'!D12``, `hint` what is shown over the link, `formula` a live formula without its equals
+    sign whose stored result is `value`.
+    """
+
+    value: str | float | None = None
+    look: str = ""
+    link: str = ""
+    hint: str = ""
+    formula: str = ""
+
+
+Content = str | float | Rich | None
+"""What a cell of a generated sheet holds."""
+
+
+@functools.cache
+def column_letter(number: int) -> str:
+    """Letters of a column number, counted from 1."""
+    letters = ""
+    while number:
+        number, rest = divmod(number - 1, 26)
+        letters = chr(ord("A") + rest) + letters
+    return letters
+
+
+def xml_text(text: str) -> str:
+    """Any text as XML character data that a spreadsheet shows as it was typed."""
+    if _HARMLESS.fullmatch(text) and len(text) <= LONGEST_TEXT:
+        return text
+    lines = plain(text, LONGEST_TEXT).replace("\r\n", "\n").replace("\r", "\n")  # as XML reads them anyway
+    clean = _LOOKS_ESCAPED.sub("_x005F_", _NOT_XML.sub("\ufffd", lines))
+    return clean.replace("&", "&amp;").replace("<", "&lt;").replace(">", "&gt;")
+
+
+def xml_attribute(text: str) -> str:
+    """Any text as an XML attribute value between double quotes."""
+    return xml_text(text).replace('"', "&quot;").replace("\n", "&#10;")
+
+
+def sheet_data(rows: Mapping[int, Iterable[tuple[int, Content, str]]], heights: Mapping[int, float]) -> str:
+    """Return the ``sheetData`` element; each row is (column number, content, look) in column order.
+
+    `heights` [points] is what a row starts with; a program may fit it anew.
+    """
+    letters = [column_letter(n) for n in range(1, _widest(rows) + 1)]
+    parts = ["<sheetData>"]
+    for number, row in rows.items():
+        height = f' ht="{heights[number]:g}"' if number in heights else ""
+        parts.append(f'<row r="{number}"{height}>')
+        parts += [_cell(f"{letters[column - 1]}{number}", item, look) for column, item, look in row]
+        parts.append("</row>")
+    parts.append("</sheetData>")
+    return "".join(parts)
+
+
+def hyperlinks(links: Sequence[tuple[str, Rich]]) -> str:
+    """Return the ``hyperlinks`` element for (address, cell) pairs; links lead inside the workbook only."""
+    if not links:
+        return ""
+    body = "".join(
+        f'<hyperlink ref="{address}" location="{xml_attribute(cell.link)}"'
+        f' tooltip="{xml_attribute(cell.hint[:250])}"/>'
+        for address, cell in links
+    )
+    return f"<hyperlinks>{body}</hyperlinks>"
+
+
+def _widest(rows: Mapping[int, Iterable[tuple[int, Content, str]]]) -> int:
+    return max((column for row in rows.values() for column, _, _ in row), default=1)
+
+
+def _cell(address: str, item: Content, look: str) -> str:
+    formula = ""
+    if isinstance(item, Rich):
+        look, formula, item = item.look or look, item.formula, item.value
+    if isinstance(item, str):
+        if formula:
+            return (
+                f'<c r="{address}" s="{style_number(look)}" t="str">'
+                f"<f>{xml_text(formula)}</f><v>{xml_text(item)}</v></c>"
+            )
+        style = style_number(look, quoted=item.startswith(_RUNS_WHEN_EDITED))
+        return (
+            f'<c r="{address}" s="{style}" t="inlineStr">'
+            f'<is><t xml:space="preserve">{xml_text(item)}</t></is></c>'
+        )
+    style = style_number(look)
+    if isinstance(item, bool):
+        return f'<c r="{address}" s="{style}" t="b"><v>{int(item)}</v></c>'
+    stored = f"<f>{xml_text(formula)}</f>" if formula else ""
+    if item is None or not math.isfinite(item):
+        return f'<c r="{address}" s="{style}">{stored}</c>'
+    return f'<c r="{address}" s="{style}">{stored}<v>{item!r}</v></c>'
