@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Sequence
+from functools import cache
 from pathlib import Path
 
 from speccheck import __version__
@@ -80,11 +81,14 @@ def write_outputs(assessment: Assessment, bid: Path, out: Path, formats: Sequenc
     PdfUnavailableError : the PDF libraries of the system are missing; everything else is written by then
     """
     out.mkdir(parents=True, exist_ok=True)
+    page = cache(lambda: render_html(assessment))
+    result = cache(lambda: to_json(assessment).encode())
+    review = cache(lambda: review_bytes(assessment))
     makers = {
-        "json": lambda: to_json(assessment).encode(),
-        "xlsx": lambda: review_bytes(assessment),
-        "html": lambda: render_html(assessment).encode(),
-        "pdf": lambda: pdf_bytes(render_html(assessment), _attachments(assessment, bid)),
+        "json": result,
+        "xlsx": review,
+        "html": lambda: page().encode(),
+        "pdf": lambda: pdf_bytes(page(), _attachments(bid, result(), review())),
     }
     written = []
     for name, suffix in SUFFIXES.items():
@@ -95,18 +99,18 @@ def write_outputs(assessment: Assessment, bid: Path, out: Path, formats: Sequenc
     return written
 
 
-def _attachments(assessment: Assessment, bid: Path) -> tuple[Attachment, ...]:
+def _attachments(bid: Path, result: bytes, review: bytes) -> tuple[Attachment, ...]:
     stem = bid.stem
     return (
         Attachment(
             name=f"{stem}{SUFFIXES['json']}",
-            content=to_json(assessment).encode(),
+            content=result,
             description="The whole result, for machines",
             relationship="Data",
         ),
         Attachment(
             name=f"{stem}{SUFFIXES['xlsx']}",
-            content=review_bytes(assessment),
+            content=review,
             description="Review workbook",
             relationship="Supplement",
         ),
