@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Sequence
+from collections.abc import Callable, Sequence
 from functools import cache
 from pathlib import Path
 
@@ -84,7 +84,7 @@ def write_outputs(assessment: Assessment, bid: Path, out: Path, formats: Sequenc
     page = cache(lambda: render_html(assessment))
     result = cache(lambda: to_json(assessment).encode())
     review = cache(lambda: review_bytes(assessment))
-    makers = {
+    makers: dict[str, Callable[[], bytes]] = {
         "json": result,
         "xlsx": review,
         "html": lambda: page().encode(),
