@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
-from datetime import date, datetime
 
 from speccheck.records import Compliance, Level, Outcome, Requirement, Value
 from speccheck.records.evaluations import Evaluation, OfferCell
@@ -14,7 +13,7 @@ from speccheck.report.pages.marks import mark_for
 from speccheck.report.pages.view import label, rules_fingerprint
 from speccheck.report.workbooks.book import book_bytes
 from speccheck.report.workbooks.cells import Content, Rich, column_letter
-from speccheck.report.workbooks.sheets import UNDATED, Column, Imprint, Table
+from speccheck.report.workbooks.sheets import Column, Imprint, Table, moment_of
 
 _MOST_MATRIX_COLUMNS = 250
 _PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
@@ -38,16 +37,8 @@ def _imprint(evaluation: Evaluation) -> Imprint:
         subject=f"speccheck {evaluation.program_version}",
         footer=f"{status}{number}comparison of offers",
         paper=rules.paper,
-        moment=_moment(rules.today),
+        moment=moment_of(rules.today),
     )
-
-
-def _moment(today: str) -> datetime:
-    try:
-        day = date.fromisoformat(today)
-    except ValueError:
-        return UNDATED
-    return datetime(day.year, day.month, day.day)  # noqa: DTZ001 - the file format has no zone
 
 
 def _read_me(view: Comparison) -> Table:

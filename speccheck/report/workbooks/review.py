@@ -5,7 +5,6 @@ It is built new from the assessment; the bidder's own file is never opened or sa
 
 from __future__ import annotations
 
-from datetime import date, datetime
 from pathlib import Path
 
 from speccheck.atomic import write_bytes_atomic
@@ -19,7 +18,7 @@ from speccheck.report.workbooks.review_places import place_everything
 from speccheck.report.workbooks.review_recomputed import recomputed
 from speccheck.report.workbooks.review_summary import question_list, summary
 from speccheck.report.workbooks.review_tables import findings, requirements
-from speccheck.report.workbooks.sheets import UNDATED, Grid, Imprint, Table
+from speccheck.report.workbooks.sheets import Grid, Imprint, Table, moment_of
 
 
 def write_review(assessment: Assessment, path: Path | str) -> None:
@@ -62,13 +61,5 @@ def imprint(assessment: Assessment, title: str) -> Imprint:
         subject=f"speccheck {assessment.program_version}",
         footer=f"{status}{number}{assessment.submission.file}{revision}",
         paper=rules.paper,
-        moment=_moment(rules.today),
+        moment=moment_of(rules.today),
     )
-
-
-def _moment(today: str) -> datetime:
-    try:
-        day = date.fromisoformat(today)
-    except ValueError:
-        return UNDATED
-    return datetime(day.year, day.month, day.day)  # noqa: DTZ001 - the file format has no zone

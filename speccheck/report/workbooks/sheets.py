@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass, field
-from datetime import datetime
+from datetime import date, datetime
 
 from speccheck.report.workbooks.cells import Content
 
@@ -72,3 +72,12 @@ class Imprint:
     footer: str = ""
     paper: str = "A4"
     moment: datetime = UNDATED
+
+
+def moment_of(today: str) -> datetime:
+    """Time a workbook bears for an ISO day; UNDATED where there is none."""
+    try:
+        day = date.fromisoformat(today)
+    except ValueError:
+        return UNDATED
+    return datetime(day.year, day.month, day.day)  # noqa: DTZ001 - the file format has no zone
