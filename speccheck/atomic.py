@@ -4,15 +4,20 @@ from __future__ import annotations
 
 import os
 import tempfile
+from collections.abc import Iterator
+from contextlib import contextmanager
 from pathlib import Path
+from typing import IO
 
 from speccheck.errors import OutputError
 
 
-def write_bytes_atomic(path: Path | str, data: bytes) -> None:
-    """Write `data` to `path` so that no reader ever sees half of it, whatever ends the program.
+@contextmanager
+def whole_file(path: Path | str) -> Iterator[IO[bytes]]:
+    """A stream whose content stands at `path` when the block ends without an error, and not before.
 
-    It does not wait for the disk: after a power cut the file may be missing or empty.
+    No reader ever sees half of it, whatever ends the program. It does not wait for the disk: after a power
+    cut the file may be missing or empty.
 
     Raises
     ------
@@ -24,7 +29,7 @@ def write_bytes_atomic(path: Path | str, data: bytes) -> None:
         handle, name = tempfile.mkstemp(prefix=f".{target.name[:80]}.", suffix=".part", dir=target.parent)
         unfinished = Path(name)
         with os.fdopen(handle, "wb") as stream:
-            stream.write(data)
+            yield stream
         unfinished.chmod(0o666 & ~_umask())
         unfinished.replace(target)
     except OSError as error:
@@ -35,6 +40,12 @@ def write_bytes_atomic(path: Path | str, data: bytes) -> None:
         if unfinished is not None:
             unfinished.unlink(missing_ok=True)
         raise
+
+
+def write_bytes_atomic(path: Path | str, data: bytes) -> None:
+    """Write `data` to `path` as one whole file. Errors as above."""
+    with whole_file(path) as stream:
+        stream.write(data)
 
 
 def write_text_atomic(path: Path | str, text: str) -> None:

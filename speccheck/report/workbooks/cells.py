@@ -9,7 +9,7 @@ from __future__ import annotations
 import functools
 import math
 import re
-from collections.abc import Iterable, Mapping, Sequence
+from collections.abc import Sequence
 from dataclasses import dataclass
 
 from speccheck.report.workbooks.looks import style_number
@@ -17,6 +17,9 @@ from speccheck.text import plain
 
 LONGEST_TEXT = 32_000
 """A cell holds 32 767 characters."""
+
+_SHORT = 60
+"""Letters of a text that is worth keeping as it was written."""
 
 _NOT_XML = re.compile("[\ud800-\udfff\ufffe\uffff]")
 _HARMLESS = re.compile("[ -%'-;=?-^`-~\u00a0-\u1fff\u2010-\u2027\u2030-\u2065\u2070-\ud7ff\n]*")
@@ -69,20 +72,14 @@ def xml_attribute(text: str) -> str:
     return xml_text(text).replace('"', "&quot;").replace("\n", "&#10;")
 
 
-def sheet_data(rows: Mapping[int, Iterable[tuple[int, Content, str]]], heights: Mapping[int, float]) -> str:
-    """Return the ``sheetData`` element; each row is (column number, content, look) in column order.
+def row_xml(number: int, row: Sequence[tuple[int, Content, str]], height: float | None) -> str:
+    """Return a ``row`` element of (column number, content, look) in column order.
 
-    `heights` [points] is what a row starts with; a program may fit it anew.
+    `height` [points] is what the row starts with; a program may fit it anew.
     """
-    letters = [column_letter(n) for n in range(1, _widest(rows) + 1)]
-    parts = ["<sheetData>"]
-    for number, row in rows.items():
-        height = f' ht="{heights[number]:g}"' if number in heights else ""
-        parts.append(f'<row r="{number}"{height}>')
-        parts += [_cell(f"{letters[column - 1]}{number}", item, look) for column, item, look in row]
-        parts.append("</row>")
-    parts.append("</sheetData>")
-    return "".join(parts)
+    tall = f' ht="{height:g}"' if height is not None else ""
+    cells = [_cell(f"{column_letter(column)}{number}", item, look) for column, item, look in row]
+    return f'<row r="{number}"{tall}>{"".join(cells)}</row>'
 
 
 def hyperlinks(links: Sequence[tuple[str, Rich]]) -> str:
@@ -97,10 +94,6 @@ def hyperlinks(links: Sequence[tuple[str, Rich]]) -> str:
     return f"<hyperlinks>{body}</hyperlinks>"
 
 
-def _widest(rows: Mapping[int, Iterable[tuple[int, Content, str]]]) -> int:
-    return max((column for row in rows.values() for column, _, _ in row), default=1)
-
-
 def _cell(address: str, item: Content, look: str) -> str:
     formula = ""
     if isinstance(item, Rich):
@@ -111,11 +104,8 @@ def _cell(address: str, item: Content, look: str) -> str:
                 f'<c r="{address}" s="{style_number(look)}" t="str">'
                 f"<f>{xml_text(formula)}</f><v>{xml_text(item)}</v></c>"
             )
-        style = style_number(look, quoted=item.startswith(_RUNS_WHEN_EDITED))
-        return (
-            f'<c r="{address}" s="{style}" t="inlineStr">'
-            f'<is><t xml:space="preserve">{xml_text(item)}</t></is></c>'
-        )
+        said = _text(item, look) if len(item) > _SHORT else _short_text(item, look)
+        return f'<c r="{address}" {said}'
     style = style_number(look)
     if isinstance(item, bool):
         return f'<c r="{address}" s="{style}" t="b"><v>{int(item)}</v></c>'
@@ -123,3 +113,13 @@ def _cell(address: str, item: Content, look: str) -> str:
     if item is None or not math.isfinite(item):
         return f'<c r="{address}" s="{style}">{stored}</c>'
     return f'<c r="{address}" s="{style}">{stored}<v>{item!r}</v></c>'
+
+
+def _text(text: str, look: str) -> str:
+    """A cell of text after its address."""
+    style = style_number(look, quoted=text.startswith(_RUNS_WHEN_EDITED))
+    return f's="{style}" t="inlineStr"><is><t xml:space="preserve">{xml_text(text)}</t></is></c>'
+
+
+_short_text = functools.lru_cache(maxsize=4096)(_text)
+"""Verdicts, labels, bands and names stand in thousands of cells."""

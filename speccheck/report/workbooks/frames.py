@@ -5,7 +5,7 @@ The order of the elements is that of the schema of ISO/IEC 29500-1, CT_Worksheet
 
 from __future__ import annotations
 
-from collections.abc import Mapping, Sequence
+from collections.abc import Iterator, Sequence
 from textwrap import wrap
 
 from speccheck.report.workbooks.cells import (
@@ -13,7 +13,7 @@ from speccheck.report.workbooks.cells import (
     Rich,
     column_letter,
     hyperlinks,
-    sheet_data,
+    row_xml,
     xml_attribute,
     xml_text,
 )
@@ -39,21 +39,24 @@ _ALLOWED = [
 Row = Sequence[tuple[int, Content, str]]
 
 
-def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> str:
-    """Return the worksheet part of a sheet."""
-    rows = _rows_of(sheet)
-    heights = _row_heights(sheet) if isinstance(sheet, Table) else {}
+def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> Iterator[str]:
+    """Yield the worksheet part of a sheet, a row at a time: a long table is never in memory as text."""
     frozen = sheet.frozen if isinstance(sheet, Table) else 1
-    return (
+    yield (
         f'<worksheet xmlns="{_MAIN}" xmlns:r="{_RELATIONS}">'
         '<sheetPr><pageSetUpPr fitToPage="1"/></sheetPr>'
         f'<dimension ref="{extent(sheet)}"/>'
         f"{_view(frozen)}"
         '<sheetFormatPr defaultRowHeight="15"/>'
-        f"{_columns(sheet)}"
-        f"{sheet_data(rows, heights)}"
-        f"{_helps(sheet) if isinstance(sheet, Table) else ''}"
-        f"{hyperlinks(_links(rows))}"
+        f"{_columns(sheet)}<sheetData>"
+    )
+    links: list[tuple[str, Rich]] = []
+    for number, row, height in _rows_of(sheet):
+        links += _links(number, row)
+        yield row_xml(number, row, height)
+    yield (
+        f"</sheetData>{_helps(sheet) if isinstance(sheet, Table) else ''}"
+        f"{hyperlinks(links)}"
         '<pageMargins left="0.6" right="0.6" top="0.6" bottom="0.7" header="0.3" footer="0.3"/>'
         f'<pageSetup paperSize="{1 if imprint.paper.lower() == "letter" else 9}" orientation="landscape"'
         ' fitToWidth="1" fitToHeight="0"/>'
@@ -63,19 +66,19 @@ def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> str:
     )
 
 
-def _rows_of(sheet: Table | Grid) -> dict[int, Row]:
-    """Return the cells of a sheet by row: column number, content, look."""
+def _rows_of(sheet: Table | Grid) -> Iterator[tuple[int, Row, float | None]]:
+    """Yield number, cells (column number, content, look) and height of each row."""
     if isinstance(sheet, Grid):
-        return {
-            number: [(column, item, "number") for column, item in sorted(row.items())]
-            for number, row in sorted(sheet.cells.items())
-        }
+        for number, cells in sorted(sheet.cells.items()):
+            yield number, [(column, item, "number") for column, item in sorted(cells.items())], None
+        return
     looks = [column.look for column in sheet.columns]
-    rows: dict[int, Row] = {1: [(n, c.heading, "heading") for n, c in enumerate(sheet.columns, start=1)]}
+    wrapped = [(n, column.width) for n, column in enumerate(sheet.columns) if column.look == "wrap"]
+    headings: Row = [(n, c.heading, "heading") for n, c in enumerate(sheet.columns, start=1)]
+    yield 1, headings, _heading_height(sheet)
     numbers = range(1, len(looks) + 1)
     for number, row in enumerate(sheet.rows, start=2):
-        rows[number] = list(zip(numbers, row, looks, strict=True))
-    return rows
+        yield number, list(zip(numbers, row, looks, strict=True)), _row_height(row, wrapped)
 
 
 def extent(sheet: Table | Grid) -> str:
@@ -193,13 +196,10 @@ def _checks(column: Column, cells: str) -> list[str]:
     return found
 
 
-def _links(rows: Mapping[int, Row]) -> list[tuple[str, Rich]]:
-    return [
-        (f"{column_letter(column)}{number}", item)
-        for number, row in rows.items()
-        for column, item, _ in row
-        if isinstance(item, Rich) and item.link
-    ]
+def _links(number: int, row: Row) -> Iterator[tuple[str, Rich]]:
+    for column, item, _ in row:
+        if isinstance(item, Rich) and item.link:
+            yield f"{column_letter(column)}{number}", item
 
 
 def _footer(imprint: Imprint) -> str:
@@ -208,16 +208,15 @@ def _footer(imprint: Imprint) -> str:
     return f"&L&F\n{said}&C&A, page &P of &N&Rprinted &D &T"
 
 
-def _row_heights(table: Table) -> dict[int, float]:
-    """Heights [points] that show wrapped text whole, for programs that don't fit rows on opening."""
-    wrapped = [(n, column.width) for n, column in enumerate(table.columns) if column.look == "wrap"]
-    headings = max(len(wrap(column.heading, max(int(column.width) - 3, 4))) for column in table.columns)
-    heights = {1: LINE_POINTS * headings + 4}
-    for number, row in enumerate(table.rows, start=2):
-        lines = max((_lines(_text(row[n]), width) for n, width in wrapped), default=1)
-        if lines > 1:
-            heights[number] = min(LINE_POINTS * lines, TALLEST_POINTS)
-    return heights
+def _heading_height(table: Table) -> float:
+    lines = max(len(wrap(column.heading, max(int(column.width) - 3, 4))) for column in table.columns)
+    return LINE_POINTS * lines + 4
+
+
+def _row_height(row: Sequence[Content], wrapped: Sequence[tuple[int, float]]) -> float | None:
+    """Height [points] that shows wrapped text whole, for programs that don't fit rows on opening."""
+    lines = max((_lines(_text(row[n]), width) for n, width in wrapped), default=1)
+    return min(LINE_POINTS * lines, TALLEST_POINTS) if lines > 1 else None
 
 
 def _text(item: Content) -> str:
