@@ -120,14 +120,18 @@ def shares(model: Model) -> tuple[int, ...]:
 def columns_of_width(model: Model, width_deg: float, freq_hz: float, tilt_deg: float) -> int | None:
     """How many columns give a horizontal width [deg]; None where no whole share of them does."""
     best: tuple[float, int] | None = None
+    wider = False
     for columns in shares(model):
-        uniform, _ = uniform_widths_deg(flat(model.with_columns(columns).layout), freq_hz, tilt_deg)
-        if uniform is None:
+        if columns == 1:
             near = COLUMN_WIDTHS_DEG[0] <= width_deg <= COLUMN_WIDTHS_DEG[1]
             # the element's width is free within its range, so distance counts less than for an array
             distance = 0.3 * abs(np.log(width_deg / NARROW_ELEMENT_DEG)) if near else np.inf
+        elif wider:  # the fewer columns, the wider their beam
+            continue
         else:
-            ratio = width_deg / uniform
+            uniform, _ = uniform_widths_deg(flat(model.with_columns(columns).layout), freq_hz, tilt_deg)
+            ratio = np.nan if uniform is None else width_deg / uniform
+            wider = ratio < SAME_BEAM[0]
             distance = abs(np.log(ratio)) if SAME_BEAM[0] <= ratio <= SAME_BEAM[1] else np.inf
         if np.isfinite(distance) and (best is None or distance < best[0]):
             best = (float(distance), columns)

@@ -6,15 +6,17 @@ innocent readings on misfits and turns a crash into a finding. It never raises f
 
 from __future__ import annotations
 
+import functools
 import itertools
-from collections.abc import Iterator
-from dataclasses import replace
+from collections.abc import Collection, Iterator
+from dataclasses import dataclass, replace
 
 import numpy as np
 
 from speccheck.checks.families.plausibility import impossible
-from speccheck.checks.innocent.conventions import offer_innocent_readings
+from speccheck.checks.innocent.offering import offer_innocent_readings
 from speccheck.checks.registry import CHECKS, Case, Check, Judgement
+from speccheck.checks.watched import WatchedPanel
 from speccheck.dictionary import parameters
 from speccheck.records import Band, CellRef, Finding, Fit, Panel, Reading, Settings
 
@@ -33,26 +35,99 @@ def examine(panel: Panel, settings: Settings) -> tuple[Finding, ...]:
     them and one question to the bidder
     """
     with np.errstate(all="ignore"):
-        return offer_innocent_readings(panel, run_checks(panel, settings), lambda p: run_checks(p, settings))
+        asread = Examination(panel, settings)
+        return offer_innocent_readings(panel, asread.findings(), asread.reread)
 
 
 def run_checks(panel: Panel, settings: Settings) -> tuple[Finding, ...]:
     """The findings of a panel as it stands, without trying any other reading of it."""
-    usable = replace(panel, readings=tuple(r for r in panel.readings if not impossible(r)))
-    spoken_of = _spoken_of(panel)
-    found: list[Finding] = []
-    for check in CHECKS.values():
-        if check.about and not any(key in spoken_of for key in check.about):
-            continue
-        seen = panel if check.sees_impossible else usable
+    return Examination(panel, settings).findings()
+
+
+@dataclass(frozen=True, slots=True)
+class _Answer:
+    """What a check says of a panel, and the parameters it asked for; None if it took them all."""
+
+    findings: tuple[Finding, ...]
+    asked: frozenset[str] | None
+
+
+class Examination:
+    """What the checks say of one panel, each run when its answer is first wanted.
+
+    Another reading of the same panel is examined beside this one: a check that asked for no figure that
+    differs would say the same again and is not run.
+    """
+
+    def __init__(self, panel: Panel, settings: Settings, beside: Examination | None = None) -> None:
+        self._panel, self._settings, self._beside = panel, settings, beside
+        self._differ = _differing(beside._panel, panel) if beside else None
+        self._answers: dict[str, _Answer] = {}
+
+    def reread(self, other: Panel) -> Examination:
+        """The examination of another reading of this panel."""
+        return Examination(other, self._settings, self)
+
+    def findings(self, slugs: Collection[str] | None = None) -> tuple[Finding, ...]:
+        """The findings of all checks, or of those named, in the order the checks are registered."""
+        wanted = (check for check in CHECKS.values() if slugs is None or check.slug in slugs)
+        return tuple(itertools.chain.from_iterable(self._answer(check).findings for check in wanted))
+
+    def _answer(self, check: Check) -> _Answer:
+        answer = self._answers.get(check.slug) or self._kept(check) or self._run(check)
+        self._answers[check.slug] = answer
+        return answer
+
+    def _kept(self, check: Check) -> _Answer | None:
+        """The answer to the other reading, where nothing the check asked for differs from it."""
+        if self._beside is None or self._differ is None:
+            return None
+        kept = self._beside._answers.get(check.slug)
+        return kept if kept and kept.asked is not None and self._differ.isdisjoint(kept.asked) else None
+
+    def _run(self, check: Check) -> _Answer:
+        asked = {*check.about, *check.needs, *check.optional}
+        if check.about and not any(key in self._spoken_of for key in check.about):
+            return _Answer((), frozenset(asked))
+        seen = self._all if check.sees_impossible else self._usable
+        seen.listen()
         bands: tuple[Band | None, ...] = (seen.bands or (None,)) if check.scope == "band" else (None,)
         by_band = [
-            list(_findings(check, Case(seen, band, settings), panel))
+            list(_findings(check, Case(seen, band, self._settings), self._panel))
             for band in bands
-            if not check.about or any(_in_band(spoken_of.get(key), band) for key in check.about)
+            if not check.about or any(_in_band(self._spoken_of.get(key), band) for key in check.about)
         ]
-        found += _joined(list(itertools.chain.from_iterable(by_band)), len(bands))
-    return tuple(found)
+        findings = _joined(list(itertools.chain.from_iterable(by_band)), len(bands))
+        cited = {key for finding in findings for key in finding.parameters}
+        return _Answer(tuple(findings), None if seen.asked is None else frozenset(asked | cited | seen.asked))
+
+    @functools.cached_property
+    def _all(self) -> WatchedPanel:
+        return WatchedPanel(self._panel)
+
+    @functools.cached_property
+    def _usable(self) -> WatchedPanel:
+        usable = tuple(r for r in self._panel.readings if not impossible(r))
+        return WatchedPanel(replace(self._panel, readings=usable))
+
+    @functools.cached_property
+    def _spoken_of(self) -> dict[str, set[Band | None]]:
+        """The bands in which each parameter is stated, with or without a figure."""
+        bands: dict[str, set[Band | None]] = {}
+        for reading in self._panel.readings:
+            bands.setdefault(reading.parameter, set()).add(reading.band)
+        for statement in self._panel.statements:
+            bands.setdefault(statement.parameter, set()).add(statement.band)
+        return bands
+
+
+def _differing(one: Panel, other: Panel) -> frozenset[str] | None:
+    """The parameters whose readings differ; None where the panels differ in more than that."""
+    same_frame = one.bands == other.bands and one.statements is other.statements
+    if not same_frame or len(one.readings) != len(other.readings):
+        return None
+    pairs = zip(one.readings, other.readings, strict=True)
+    return frozenset(key for a, b in pairs if a is not b for key in (a.parameter, b.parameter))
 
 
 def _joined(findings: list[Finding], bands: int) -> list[Finding]:
@@ -152,16 +227,6 @@ def _reason(key: str, case: Case, panel: Panel) -> str:
     if spoken:
         return f"{_label(key)} without a figure in {spoken[0].where}"
     return f"{_label(key)} not stated"
-
-
-def _spoken_of(panel: Panel) -> dict[str, set[Band | None]]:
-    """The bands in which each parameter is stated, with or without a figure."""
-    bands: dict[str, set[Band | None]] = {}
-    for reading in panel.readings:
-        bands.setdefault(reading.parameter, set()).add(reading.band)
-    for statement in panel.statements:
-        bands.setdefault(statement.parameter, set()).add(statement.band)
-    return bands
 
 
 def _in_band(bands: set[Band | None] | None, band: Band | None) -> bool:

@@ -189,8 +189,21 @@ def _ratios(count: int, grouped: int) -> tuple[Floats, Floats]:
     if count < 3:  # two ports of equal weight: no taper
         return np.ones(2), np.array([1.0, 2.0])
     pedestals = np.linspace(1, 0, 65)
-    tapers = [np.repeat(cosine_on_pedestal(count, c), grouped) for c in pedestals]
-    return pedestals, np.array([beamwidth_ratio(taper) for taper in tapers])
+    tapers = np.array([np.repeat(cosine_on_pedestal(count, c), grouped) for c in pedestals])
+    uniform = _uniform_half_power_rad(count * grouped)
+    return pedestals, _symmetric_half_power_rad(tapers, uniform) / uniform
+
+
+def _symmetric_half_power_rad(tapers: Floats, uniform_rad: float) -> Floats:
+    """Half-power phases [rad] of symmetric tapers, one a row, each at most twice the uniform one."""
+    places = np.arange(tapers.shape[1]) - (tapers.shape[1] - 1) / 2
+    total = tapers.sum(axis=1)
+    low, high = np.zeros(len(tapers)), np.full(len(tapers), min(2 * uniform_rad, np.pi))
+    for _ in range(36):  # halves the bracket to the last digits
+        middle = (low + high) / 2
+        beam = np.einsum("rn,rn->r", tapers, np.cos(np.outer(middle, places))) > total * np.sqrt(0.5)
+        low, high = np.where(beam, middle, low), np.where(beam, high, middle)
+    return low
 
 
 def _chebyshev_polynomial(order: int, x: Floats) -> Floats:

@@ -6,7 +6,8 @@ import pytest
 from checks.cases import panel_of
 
 from speccheck.checks import examine
-from speccheck.checks.innocent.conventions import INNOCENT_READINGS, NONE_FITS, Reach, innocent
+from speccheck.checks.innocent.conventions import INNOCENT_READINGS, Reach, innocent
+from speccheck.checks.innocent.offering import NONE_FITS
 from speccheck.records import Fit, Settings
 
 COLUMN = {

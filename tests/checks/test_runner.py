@@ -8,9 +8,10 @@ import pytest
 from checks.cases import panel_of
 
 from speccheck.checks import examine
+from speccheck.checks.innocent.conventions import INNOCENT_READINGS, Reach, reread, scaled
 from speccheck.checks.registry import CHECKS, Case, Judgement, check
-from speccheck.checks.runner import run_checks
-from speccheck.records import Finding, Fit, Panel, Settings
+from speccheck.checks.runner import Examination, run_checks
+from speccheck.records import Finding, Fit, Panel, Reading, Settings
 
 COLUMN = {
     "frequency_range": [1710, 2170],
@@ -137,3 +138,56 @@ def test_registry_refuses_a_slug_twice_and_a_check_without_explanation(
 
 def test_slugs_are_plain_words() -> None:
     assert all(slug == slug.lower() and " " not in slug for slug in CHECKS)
+
+
+RICH = {
+    **COLUMN,
+    "polarisations": 2,
+    "rf_ports": 2,
+    "electrical_tilt": [0, 10],
+    "upper_sidelobe_suppression": 18,
+    "feed_loss": 0.7,
+    "height": 1.24,
+    "width": 0.17,
+    "weight": 14,
+    "wind_load": "480 N at 150 km/h",
+    "vswr": 1.5,
+    "return_loss": 14,
+    "max_power_per_port": 300,
+    "passive_intermodulation": -153,
+    "gain": "21 dBi",
+}
+
+
+@pytest.mark.parametrize("name", sorted(INNOCENT_READINGS))
+def test_answers_kept_from_the_panel_as_read_are_those_of_a_fresh_run(name: str) -> None:
+    other = INNOCENT_READINGS[name].reread(panel_of(RICH), Reach())
+    asread = Examination(panel_of(RICH), Settings())
+    asread.findings()
+    assert asread.reread(other).findings() == run_checks(other, Settings())
+
+
+@pytest.mark.usefixtures("registered")
+def test_check_that_asked_for_nothing_changed_is_not_run_again() -> None:
+    asked: list[str] = []
+
+    @check("looks-at-gain", "Looks at gain", needs=("gain",), source="test")
+    def looks_at_gain(gain: Reading) -> Judgement | None:
+        """Looks at the gain."""
+        asked.append("gain")
+        return Judgement(verdict=Fit.FITS, summary=f"{gain.nominal:g}")
+
+    @check("looks-aside", "Looks aside", needs=("vertical_beamwidth",), source="test")
+    def looks_aside(case: Case) -> Judgement | None:
+        """Looks at a parameter it does not declare."""
+        rows = case.panel.get("array_rows", case.band)
+        asked.append("rows")
+        return Judgement(verdict=Fit.FITS, summary=f"{rows.nominal:g}" if rows else "")
+
+    panel = panel_of({**COLUMN, "vswr": 1.5})
+    asread = Examination(panel, Settings())
+    asread.findings()
+    for key, run in (("gain", ["gain"]), ("array_rows", ["rows"]), ("vswr", [])):
+        asked.clear()
+        asread.reread(reread(panel, Reach(), (key,), scaled(2))).findings()
+        assert asked == run

@@ -35,10 +35,12 @@ def _rescaled(factor: float) -> Callable[[Reading], Reading]:
 
 def _swapped(panel: Panel, one: str, other: str) -> Panel:
     names = {one: other, other: one}
-    return replace(
-        panel,
-        readings=tuple(replace(r, parameter=names.get(r.parameter, r.parameter)) for r in panel.readings),
-    )
+
+    def renamed(reading: Reading) -> Reading:
+        name = names.get(reading.parameter)
+        return reading if name is None else replace(reading, parameter=name)
+
+    return replace(panel, readings=tuple(renamed(r) for r in panel.readings))
 
 
 @innocent("rows count the dipoles of both polarisations", "the rows count positions or dipoles", "array_rows")
