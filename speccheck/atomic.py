@@ -4,12 +4,15 @@ from __future__ import annotations
 
 import os
 import tempfile
-from collections.abc import Iterator
+from collections.abc import Iterator, Sequence
 from contextlib import contextmanager
 from pathlib import Path
 from typing import IO
 
 from speccheck.errors import OutputError
+
+_NAMED = 80
+"""Letters of a file's name that its unfinished form bears."""
 
 
 @contextmanager
@@ -26,7 +29,7 @@ def whole_file(path: Path | str) -> Iterator[IO[bytes]]:
     target = Path(path)
     unfinished: Path | None = None
     try:
-        handle, name = tempfile.mkstemp(prefix=f".{target.name[:80]}.", suffix=".part", dir=target.parent)
+        handle, name = tempfile.mkstemp(prefix=f".{target.name[:_NAMED]}.", suffix=".part", dir=target.parent)
         unfinished = Path(name)
         with os.fdopen(handle, "wb") as stream:
             yield stream
@@ -51,6 +54,14 @@ def write_bytes_atomic(path: Path | str, data: bytes) -> None:
 def write_text_atomic(path: Path | str, text: str) -> None:
     """Write `text` as UTF-8; a lone surrogate becomes a replacement mark. Errors as above."""
     write_bytes_atomic(path, text.encode("utf-8", "replace"))
+
+
+def remove_unfinished(folder: Path, starts: Sequence[str]) -> None:
+    """Remove what killed programs left of the files in `folder` whose names start so."""
+    wanted = tuple(start[:_NAMED] for start in starts)
+    for left in folder.glob(".*.part"):
+        if left.name[1:].startswith(wanted):
+            left.unlink(missing_ok=True)
 
 
 def _umask() -> int:

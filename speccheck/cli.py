@@ -7,6 +7,7 @@ from __future__ import annotations
 
 import gc
 import os
+import signal
 import sys
 from enum import IntEnum
 from pathlib import Path
@@ -21,7 +22,7 @@ from speccheck.records.outputs import FORMATS
 
 if TYPE_CHECKING:
     from speccheck.records import Assessment, Tender
-    from speccheck.records.evaluations import Bid, Evaluation
+    from speccheck.records.evaluations import Evaluation
 
 
 class Exit(IntEnum):
@@ -69,13 +70,25 @@ def main() -> None:
     # Nearly everything made in a run lives to its end and hardly any of it in cycles: looking for those
     # after every 700 objects, and through all of them at the end, would take a tenth of the whole run.
     gc.set_threshold(50_000)
+    before = signal.signal(signal.SIGINT, _stop)
     try:
         cli(standalone_mode=True)
     except (UnusableInputError, OutputError) as error:
         click.echo(f"speccheck: {error}", err=True)
         sys.exit(Exit.UNUSABLE_INPUT)
+    except SystemExit as end:
+        if end.code != Exit.INTERRUPTED:  # libraries that were interrupted still remove their temporary files
+            gc.freeze()
+        raise
     finally:
-        gc.freeze()
+        signal.signal(signal.SIGINT, before)
+
+
+def _stop(_number: int, _frame: object) -> None:
+    """Give up on an interrupt (Ctrl-C), leaving nothing unfinished; a second one ends at once."""
+    signal.signal(signal.SIGINT, signal.SIG_DFL)
+    click.echo("\nspeccheck: interrupted; what is under way is given up", err=True)
+    sys.exit(Exit.INTERRUPTED)
 
 
 @cli.command(epilog=EXIT_CODES)
@@ -113,7 +126,8 @@ def check(
     from speccheck.batch import assess_many
 
     tender_file, tender = _tender(bids, tender_file)
-    with screen.stoppable(Exit.INTERRUPTED):
+    progress = screen.Progress(sys.stdout)
+    with screen.resumable(progress):
         evaluation = assess_many(
             bids,
             out=out,
@@ -122,7 +136,7 @@ def check(
             formats=formats,
             jobs=jobs,
             resume=resume,
-            progress=_show_progress,
+            progress=progress,
         )
     if not evaluation.bids:
         raise click.UsageError(
@@ -166,12 +180,6 @@ def _read_tender(path: Path | None) -> Tender | None:
     from speccheck.intake.tenders.tender_book import read_tender
 
     return read_tender(path)
-
-
-def _show_progress(done: int, total: int, bid: Bid) -> None:
-    from speccheck import screen
-
-    click.echo(screen.progress_line(done, total, bid))
 
 
 def _exit_code(evaluation: Evaluation) -> Exit:

@@ -1,12 +1,13 @@
-"""What the command line shows: a line a bid, a short table, the explanation of a check."""
+"""What the command line shows: progress, a short table, the explanation of a check."""
 
 from __future__ import annotations
 
-import signal
 import sys
-from collections.abc import Iterable, Iterator, Sequence
+import time
+from collections.abc import Callable, Iterable, Iterator, Sequence
 from contextlib import contextmanager
 from textwrap import wrap
+from typing import TextIO
 
 from speccheck.checks.registry import Check
 from speccheck.dictionary import parameters
@@ -16,34 +17,60 @@ from speccheck.text import plain
 
 _SYMBOLS = {Outcome.ACCEPTABLE: "✓", Outcome.CLARIFY: "?", Outcome.REJECT: "×"}
 _WIDTH = 100
+_BAR = 24
 _SECTIONS = ("Formula", "Assumptions", "Worked example")
 
 
+class Progress:
+    """A line for each bid that is done; below them, on a terminal, a bar with count and time left."""
+
+    def __init__(self, stream: TextIO, clock: Callable[[], float] = time.monotonic) -> None:
+        self._stream = stream
+        self._clock = clock
+        self._started = clock()
+        self._worked = 0
+        self.count = ""
+
+    def __call__(self, done: int, total: int, bid: Bid) -> None:
+        """Tell of one bid; only bids that were worked on tell how long the others will take."""
+        self._worked += not bid.resumed
+        self.count = f"{done} of {total} bids"
+        left = ""
+        if self._worked and done < total:
+            left = f", {_duration((self._clock() - self._started) / self._worked * (total - done))} left"
+        line = progress_line(done, total, bid, left)
+        if not self._stream.isatty():
+            print(line, file=self._stream, flush=True)
+            return
+        full = round(_BAR * done / total)
+        bar = f"{'━' * full}{'╌' * (_BAR - full)} {self.count}{left}" if done < total else ""
+        print(f"\r\x1b[K{line}\n{bar}", end="", file=self._stream, flush=True)
+
+
+def _duration(seconds: float) -> str:
+    if seconds < 90:
+        return f"{max(round(seconds), 1)} s"
+    minutes = round(seconds / 60)
+    return f"{minutes} min" if minutes < 90 else f"{minutes // 60} h {minutes % 60} min"
+
+
 @contextmanager
-def stoppable(code: int) -> Iterator[None]:
-    """End the program with `code` and a message on an interrupt (Ctrl-C).
-
-    The first interrupt lets other processes finish their bids, a second one ends at once.
-    """
-
-    def stop(_number: int, _frame: object) -> None:
-        signal.signal(signal.SIGINT, signal.SIG_DFL)
-        print("\nspeccheck: interrupted; bids under way in other processes are finished", file=sys.stderr)  # noqa: T201
-        raise KeyboardInterrupt
-
-    before = signal.signal(signal.SIGINT, stop)
+def resumable(progress: Progress) -> Iterator[None]:
+    """Say what is done where the program is ended early."""
     try:
         yield
-    except KeyboardInterrupt:
-        print("speccheck: stopped; every file written is whole, --resume does the rest", file=sys.stderr)  # noqa: T201
-        sys.exit(code)
-    finally:
-        signal.signal(signal.SIGINT, before)
+    except SystemExit:
+        print(  # noqa: T201
+            f"speccheck: stopped, {progress.count or 'no bid'} done; every file written is whole, "
+            "and the same command with --resume does the rest",
+            file=sys.stderr,
+        )
+        raise
 
 
-def progress_line(done: int, total: int, bid: Bid) -> str:
-    """One line about a bid that has just been done."""
-    count = f"[{done:>{len(str(total))}}/{total}]"
+def progress_line(done: int, total: int, bid: Bid, left: str = "") -> str:
+    """One line about a bid that has just been done; `left` tells the time left."""
+    count = f"[{done:>{len(str(total))}}/{total}{left}]"
     name = plain(bid.file, 60)
     if bid.error:
         return f"{count} {name}: not used\n    {plain(bid.error, 600)}"

@@ -2,16 +2,18 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Iterable, Iterator, Sequence
+from collections.abc import Callable, Generator, Iterable, Iterator, Sequence
+from contextlib import closing, contextmanager, suppress
 from pathlib import Path
 
 from speccheck import __version__
-from speccheck.batch.finished import rules_digest
+from speccheck.batch.finished import rules_digest, sweep_unfinished
 from speccheck.batch.inputs import BidFile, find_bids
 from speccheck.batch.work import Rules, do_bid
 from speccheck.records import Settings, Tender
 from speccheck.records.evaluations import Bid, Evaluation
 from speccheck.records.outputs import FORMATS
+from speccheck.report.pages.pdf import PdfUnavailableError
 from speccheck.tender.ranking import standings, swings, weight_notes, weight_table, weights
 
 __all__ = ["BidFile", "Evaluation", "assess_many", "find_bids"]
@@ -52,25 +54,37 @@ def assess_many(
     bids = find_bids(paths, tender_file=tender_file)
     rules = _rules(tender, settings, formats, Path(out), resume=resume)
     results: dict[int, Bid] = {}
-    for place, result in _results(bids, rules, jobs):
-        results[place] = result
-        if progress is not None:
-            progress(len(results), len(bids), result)
+    with _tidy(bids, rules.out), closing(_results(bids, rules, jobs)) as finished:
+        for place, result in finished:
+            results[place] = result
+            if progress is not None:
+                progress(len(results), len(bids), result)
     evaluation = evaluate([results[place] for place in sorted(results)], tender, rules.settings, rules.digest)
     if len(bids) > 1 or sum(len(bid.offers) for bid in evaluation.bids) > 1:
         from speccheck.report.offers.comparison import write_comparison  # noqa: PLC0415 - not for a single offer
 
-        write_comparison(evaluation, rules.out, formats)
+        with suppress(PdfUnavailableError):  # the note of every bid tells it
+            write_comparison(evaluation, rules.out, formats)
     return evaluation
 
 
-def _results(bids: Sequence[BidFile], rules: Rules, jobs: int) -> Iterator[tuple[int, Bid]]:
-    """Place and result of each bid, in the order they are finished."""
+def _results(bids: Sequence[BidFile], rules: Rules, jobs: int) -> Generator[tuple[int, Bid]]:
+    """Place and result of each bid, in the order they are finished; closing it ends what is under way."""
     if jobs <= 1 or len(bids) <= 1:
         return ((place, do_bid(bid, rules)) for place, bid in enumerate(bids))
     from speccheck.batch.pool import run  # noqa: PLC0415 - the process pool is not for a single bid
 
     return run(bids, rules, jobs)
+
+
+@contextmanager
+def _tidy(bids: Sequence[BidFile], out: Path) -> Iterator[None]:
+    """No unfinished file before or after, whatever was killed."""
+    sweep_unfinished(out, bids)
+    try:
+        yield
+    finally:
+        sweep_unfinished(out, bids)
 
 
 def evaluate(bids: Sequence[Bid], tender: Tender | None, settings: Settings, digest: str = "") -> Evaluation:

@@ -8,10 +8,12 @@ from __future__ import annotations
 
 import hashlib
 import json
+from collections import defaultdict
 from collections.abc import Sequence
 from pathlib import Path
 
-from speccheck.atomic import write_text_atomic
+from speccheck.atomic import remove_unfinished, write_text_atomic
+from speccheck.batch.inputs import BidFile
 from speccheck.records import Settings, Tender
 from speccheck.records.evaluations import Bid
 from speccheck.report.codec import decode, encode
@@ -71,11 +73,11 @@ def read_mark(out: Path, path: Path, rules: str) -> Bid | None:
     return bid if whole and bid.sha256 and bid.sha256 == file_digest(path) else None
 
 
-def sweep_unfinished(out: Path, stem: str) -> None:
-    """Remove the unfinished files that an earlier run of the same bid left when it was killed."""
-    for left in out.glob(f".{_escaped(stem)}.*.part"):
-        left.unlink(missing_ok=True)
-
-
-def _escaped(stem: str) -> str:
-    return "".join(f"[{c}]" if c in "*?[" else c for c in stem)
+def sweep_unfinished(out: Path, bids: Sequence[BidFile]) -> None:
+    """Remove the unfinished files that an earlier run of the same bids left when it was killed."""
+    starts = defaultdict(list, {out: ["comparison."] if len(bids) > 1 else []})
+    for bid in bids:
+        starts[out / bid.folder].append(f"{bid.path.stem}.")
+    for folder, names in starts.items():
+        remove_unfinished(folder, names)
+        remove_unfinished(folder / MARKS_FOLDER, names)

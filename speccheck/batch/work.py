@@ -11,7 +11,7 @@ from dataclasses import dataclass, replace
 from pathlib import Path
 
 from speccheck import pipeline
-from speccheck.batch.finished import file_digest, read_mark, sweep_unfinished, write_mark
+from speccheck.batch.finished import file_digest, read_mark, write_mark
 from speccheck.batch.inputs import BidFile
 from speccheck.errors import OutputError, UnusableInputError
 from speccheck.records import Assessment, Settings, Tender
@@ -43,7 +43,6 @@ def do_bid(bid: BidFile, rules: Rules) -> Bid:
             return replace(done, path=str(bid.path), resumed=True)
     try:
         out.mkdir(parents=True, exist_ok=True)
-        sweep_unfinished(out, bid.path.stem)
         assessment = pipeline.assess(bid.path, tender=rules.tender, settings=rules.settings)
         outputs, note = _outputs(assessment, bid.path, out, rules.formats)
     except (UnusableInputError, OutputError) as error:

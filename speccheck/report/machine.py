@@ -140,26 +140,28 @@ def _read_matrix_row(data: dict[str, Json], home: str) -> MatrixRow:
 
 def laid_out(document: dict[str, Json]) -> str:
     """Return JSON text with one member, and one item of a long list, a line."""
-    members = [f"{_compact(name)}:{_member(value)}" for name, value in document.items()]
+    members = [f"{compact(name)}:{member(value)}" for name, value in document.items()]
     text = "{" + ",\n".join(members) + "}\n"
     # a lone surrogate cannot be stored as UTF-8; JSON has an escape of the same look for it
     return text.encode("utf-8", "backslashreplace").decode("utf-8")
 
 
-def _member(value: Json) -> str:
+def member(value: Json) -> str:
+    """Return JSON text with one item of a list, and one member of a record that holds records, a line."""
     if isinstance(value, dict) and any(isinstance(part, list | dict) for part in value.values()):
-        inner = [f"{_compact(name)}:{_items(part)}" for name, part in value.items()]
+        inner = [f"{compact(name)}:{_items(part)}" for name, part in value.items()]
         return "{\n" + ",\n".join(inner) + "}"
     if isinstance(value, list) and value and isinstance(value[0], dict):
-        return "[\n" + ",\n".join(_member(item) for item in value) + "]"
-    return _compact(value)
+        return "[\n" + ",\n".join(member(item) for item in value) + "]"
+    return compact(value)
 
 
 def _items(value: Json) -> str:
     if isinstance(value, list) and value and isinstance(value[0], dict):
-        return "[\n" + ",\n".join(_compact(item) for item in value) + "]"
-    return _compact(value)
+        return "[\n" + ",\n".join(compact(item) for item in value) + "]"
+    return compact(value)
 
 
-def _compact(value: Json) -> str:
+def compact(value: Json) -> str:
+    """Return JSON text without a line break."""
     return _ENCODER.encode(value)

@@ -15,7 +15,7 @@ from speccheck.records import Assessment, Compliance
 from speccheck.records.answers import AnswerKind, TakenAnswer
 from speccheck.report.pages.clarification import render_clarification, write_answers, write_clarification
 from speccheck.tender.answers import take_in
-from tender.evaluation import BIDS, write_evaluation
+from batch.evaluation import BIDS, write_evaluation
 
 
 @pytest.fixture

@@ -7,7 +7,7 @@ from collections.abc import Iterator, Sequence
 from speccheck.records import Compliance, Level, Outcome, Requirement, Value
 from speccheck.records.evaluations import Evaluation, OfferCell
 from speccheck.report.offers.comparison_view import Column as OfferColumn
-from speccheck.report.offers.comparison_view import Comparison, compare, lines
+from speccheck.report.offers.comparison_view import Comparison, lines
 from speccheck.report.pages.formats import shown_unit
 from speccheck.report.pages.marks import mark_for
 from speccheck.report.pages.view import label, rules_fingerprint
@@ -19,9 +19,9 @@ _MOST_MATRIX_COLUMNS = 250
 _PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
 
 
-def comparison_bytes(evaluation: Evaluation) -> bytes:
+def comparison_bytes(view: Comparison) -> bytes:
     """The comparison workbook as an .xlsx file; the same evaluation gives the same bytes."""
-    view = compare(evaluation)
+    evaluation = view.evaluation
     sheets = [_read_me(view), _offers(view)]
     if evaluation.tender is not None:
         sheets += [_matrix(view), _rows(view), _points(view)]

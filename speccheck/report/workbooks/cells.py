@@ -95,17 +95,14 @@ def hyperlinks(links: Sequence[tuple[str, Rich]]) -> str:
 
 
 def _cell(address: str, item: Content, look: str) -> str:
+    if isinstance(item, str):
+        said = _short_text(item, look) if len(item) <= _SHORT else _text(item, look)
+        return f'<c r="{address}" {said}'
     formula = ""
     if isinstance(item, Rich):
         look, formula, item = item.look or look, item.formula, item.value
     if isinstance(item, str):
-        if formula:
-            return (
-                f'<c r="{address}" s="{style_number(look)}" t="str">'
-                f"<f>{xml_text(formula)}</f><v>{xml_text(item)}</v></c>"
-            )
-        said = _text(item, look) if len(item) > _SHORT else _short_text(item, look)
-        return f'<c r="{address}" {said}'
+        return _cell(address, item, look) if not formula else _calculated_text(address, item, look, formula)
     style = style_number(look)
     if isinstance(item, bool):
         return f'<c r="{address}" s="{style}" t="b"><v>{int(item)}</v></c>'
@@ -113,6 +110,13 @@ def _cell(address: str, item: Content, look: str) -> str:
     if item is None or not math.isfinite(item):
         return f'<c r="{address}" s="{style}">{stored}</c>'
     return f'<c r="{address}" s="{style}">{stored}<v>{item!r}</v></c>'
+
+
+def _calculated_text(address: str, text: str, look: str, formula: str) -> str:
+    return (
+        f'<c r="{address}" s="{style_number(look)}" t="str">'
+        f"<f>{xml_text(formula)}</f><v>{xml_text(text)}</v></c>"
+    )
 
 
 def _text(text: str, look: str) -> str:

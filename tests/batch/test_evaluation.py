@@ -8,10 +8,10 @@ from pathlib import Path
 import pytest
 from openpyxl import load_workbook
 
+from batch.evaluation import MATRIX, POINTS, REJECTED, WORDS, write_evaluation
 from speccheck.batch import Evaluation, assess_many
 from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Outcome
-from tender.evaluation import MATRIX, POINTS, REJECTED, WORDS, write_evaluation
 
 
 @pytest.fixture(scope="module")

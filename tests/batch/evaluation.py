@@ -3,10 +3,10 @@
 
 from __future__ import annotations
 
+import json
 from pathlib import Path
 
-from openpyxl import Workbook
-
+from openpyxl import Workbook, load_workbook
 from tender.books import write_tender
 
 REQUIREMENTS = [
@@ -110,3 +110,14 @@ def write_bid(path: Path, panels: list[list[object]]) -> None:
     for panel in panels:
         sheet.append(panel)
     book.save(path)
+
+
+def whole(out: Path) -> list[str]:
+    """Names of the outputs, each opened to see that it is whole."""
+    for path in out.glob("*.json"):
+        json.loads(path.read_text(encoding="utf-8"))
+    for path in out.glob("*.xlsx"):
+        load_workbook(path)
+    for path in out.glob("*.html"):
+        assert path.read_text(encoding="utf-8").rstrip().endswith("</html>")
+    return sorted(path.name for path in out.iterdir() if path.is_file() and not path.name.startswith("."))

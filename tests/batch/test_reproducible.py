@@ -8,9 +8,9 @@ import sys
 from pathlib import Path
 
 import pytest
-
 from tender.books import write_tender
-from tender.evaluation import BIDS, DEVIATIONS, REQUIREMENTS, SETTINGS, write_bid
+
+from batch.evaluation import BIDS, DEVIATIONS, REQUIREMENTS, SETTINGS, write_bid
 
 ANOTHER_DAY = """\
 import datetime, time

@@ -1,23 +1,19 @@
-"""Many files: none stops the others; a killed run leaves whole files and a resumed one does the rest."""
+"""Many files: none stops the others, and a resumed run does what changed."""
 
 from __future__ import annotations
 
-import json
-import os
-import signal
 import subprocess
 import sys
 from dataclasses import replace
 from pathlib import Path
 
 import pytest
-from openpyxl import load_workbook
 
+from batch.evaluation import BIDS, whole, write_bid, write_evaluation
 from speccheck.batch import assess_many, find_bids
 from speccheck.batch import work as work_module
 from speccheck.intake.tenders.tender_book import read_tender
 from speccheck.records import Tender
-from tender.evaluation import BIDS, write_bid, write_evaluation
 
 RUN = """
 import os, signal, sys
@@ -55,22 +51,11 @@ def rules(evaluation: Path) -> Tender:
     return read_tender(evaluation / "tender.xlsx")
 
 
-def _whole(out: Path) -> list[str]:
-    """Names of the outputs, each opened to see that it is whole."""
-    for path in out.glob("*.result.json"):
-        json.loads(path.read_text(encoding="utf-8"))
-    for path in out.glob("*.xlsx"):
-        load_workbook(path)
-    for path in out.glob("*.html"):
-        assert path.read_text(encoding="utf-8").rstrip().endswith("</html>")
-    return sorted(path.name for path in out.iterdir() if path.is_file() and not path.name.startswith("."))
-
-
 def test_two_processes_give_what_one_gives(evaluation: Path, rules: Tender) -> None:
     one = assess_many([evaluation / "bids"], out=evaluation / "one", tender=rules, formats=("json",))
     two = assess_many([evaluation / "bids"], out=evaluation / "two", tender=rules, formats=("json",), jobs=2)
     assert [bid.file for bid in one.bids] == [bid.file for bid in two.bids]
-    for name in _whole(evaluation / "one"):
+    for name in whole(evaluation / "one"):
         assert (evaluation / "one" / name).read_bytes() == (evaluation / "two" / name).read_bytes(), name
 
 
@@ -98,39 +83,6 @@ def test_a_resumed_evaluation_compares_like_a_fresh_one(evaluation: Path, rules:
         )
         pages.append((evaluation / "out" / "comparison.json").read_bytes())
     assert pages[0] == pages[1]
-
-
-@pytest.mark.slow
-@pytest.mark.parametrize("how", [signal.SIGKILL, signal.SIGINT])
-def test_a_killed_run_leaves_whole_files_and_resume_finishes(evaluation: Path, how: signal.Signals) -> None:
-    script = evaluation / "run.py"
-    script.write_text(RUN, encoding="utf-8")
-    command = [sys.executable, str(script), str(evaluation)]
-    with subprocess.Popen(
-        [*command, "2"], stdout=subprocess.PIPE, stderr=subprocess.DEVNULL, text=True, start_new_session=True
-    ) as first:
-        assert first.stdout is not None
-        for _ in range(2):
-            first.stdout.readline()
-        os.killpg(first.pid, how)
-    assert first.returncode != 0
-    before = _whole(evaluation / "out")
-    assert 0 < len([name for name in before if name.endswith(".json")]) < len(BIDS) + 1
-    again = subprocess.run([*command, "1", "resume"], stdout=subprocess.PIPE, text=True, check=True)
-    kept = [line.split()[1] for line in again.stdout.splitlines() if line.endswith("kept")]
-    assert kept
-    after = _whole(evaluation / "out")
-    assert len([name for name in after if name.endswith(".result.json")]) == len(BIDS)
-    assert not list((evaluation / "out").glob(".*.part"))
-    fresh = evaluation / "fresh"
-    assess_many(
-        [evaluation / "bids"],
-        out=fresh,
-        tender=read_tender(evaluation / "tender.xlsx"),
-        formats=("html", "xlsx", "json"),
-    )
-    for name in after:
-        assert (evaluation / "out" / name).read_bytes() == (fresh / name).read_bytes(), name
 
 
 @pytest.mark.slow
