@@ -141,17 +141,15 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
 
 def _mirror(grid: Grid) -> MirrorSheet:
     cells = {**grid.cells, **grid.hidden_cells} if grid.hidden_cells else grid.cells
-    return MirrorSheet(
-        name=grid.name,
-        hidden=grid.hidden,
-        cells=tuple([_mirrored(cells[place]) for place in sorted(cells)]),
-    )
+    ordered = [cells[place] for place in sorted(cells)]
+    mirrored = tuple([MirrorCell(cell.address, _stored(cell), cell.formula) for cell in ordered])
+    return MirrorSheet(name=grid.name, hidden=grid.hidden, cells=mirrored)
 
 
-def _mirrored(cell: Cell) -> MirrorCell:
+def _stored(cell: Cell) -> str | float:
+    """A number as it is, anything else as text; a truth value, an int to isinstance, is no number."""
     raw = cell.raw
-    value = raw if isinstance(raw, str | float | int) and not isinstance(raw, bool) else cell.text
-    return MirrorCell(cell.address, value, cell.formula)
+    return raw if type(raw) is int or type(raw) is float else cell.text
 
 
 def _no_table(book: Book) -> UnusableInputError:

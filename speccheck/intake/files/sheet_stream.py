@@ -9,7 +9,7 @@ import re
 from dataclasses import dataclass
 
 from speccheck.intake.files.archive import Archive
-from speccheck.intake.files.grid import Cell, Grid, Raw, Span, text_of
+from speccheck.intake.files.grid import Cell, Grid, Place, Raw, Span, text_of
 from speccheck.intake.files.limits import Limits
 from speccheck.intake.files.number_formats import date_of_serial, date_of_text, shows_date
 from speccheck.intake.files.package import Package, SheetEntry
@@ -55,14 +55,16 @@ class _SheetReader:
     ) -> None:
         self._archive, self._entry, self._package = archive, entry, package
         self._limits, self._allowance = limits, allowance
-        self._cells: list[Cell] = []
+        self._cells: dict[Place, Cell] = {}
         self._spans: list[Span] = []
         self._hidden_rows: set[int] = set()
         self._hidden_columns: list[tuple[int, int]] = []
         self._columns: dict[str, int] = {}
+        self._numbers: dict[str, tuple[Raw, str]] = {}
         self._row = self._column = 0
-        self._kind = self._style = self._formula = self._row_digits = ""
-        self._has_formula = False
+        self._row_digits = ""
+        self._cell: dict[str, str] = {}
+        self._formula: str | None = None
         self._pieces: list[str] = []
         self._listening = False
 
@@ -86,11 +88,13 @@ class _SheetReader:
             self._pieces.append(data)
 
     def grid(self) -> Grid:
-        grid = Grid(name=self._entry.name, hidden=self._entry.hidden)
+        grid = Grid(name=self._entry.name, hidden=self._entry.hidden, cells=self._cells)
         hidden_rows, ranges = self._hidden_rows, self._hidden_columns
-        for cell in self._cells:
-            out_of_sight = cell.row in hidden_rows or any(low <= cell.column <= high for low, high in ranges)
-            (grid.hidden_cells if out_of_sight else grid.cells)[cell.row, cell.column] = cell
+        if hidden_rows or ranges:
+            grid.cells = {}
+            for place, cell in self._cells.items():
+                hidden = cell.row in hidden_rows or any(low <= cell.column <= high for low, high in ranges)
+                (grid.hidden_cells if hidden else grid.cells)[place] = cell
         grid.spans = {(span.top, span.left): span for span in self._spans}
         grid.hidden_rows, grid.hidden_columns = frozenset(hidden_rows), tuple(ranges)
         return grid
@@ -113,7 +117,6 @@ class _SheetReader:
         self._listening = True
 
     def _start_formula(self, _: dict[str, str]) -> None:
-        self._has_formula = True
         self._pieces.clear()
         self._listening = True
 
@@ -138,25 +141,24 @@ class _SheetReader:
         if column is None:
             column = self._columns[letters] = _column_number(letters)
         self._column = column or self._column + 1
-        if len(letters) < len(address) and column:
-            digits = address[len(letters) :]
-            if digits != self._row_digits:
-                self._row_digits, self._row = digits, min(int(digits[:8]), _MAX_ROW)
-        self._kind = at.get("t", "n")
-        self._style = at.get("s", "")
-        self._formula, self._has_formula = "", False
+        digits = address[len(letters) :]
+        if digits != self._row_digits and digits and column:
+            self._row_digits, self._row = digits, min(int(digits[:8]), _MAX_ROW)
+        self._cell = at
+        self._formula = None
         self._pieces.clear()
 
     def _end_cell(self) -> None:
-        if not (self._pieces or self._has_formula):
+        stored, formula = "".join(self._pieces), self._formula
+        if not stored and formula is None:
             return
-        stored = "".join(self._pieces)
-        number_format = self._package.number_format(self._style) if self._style else ""
-        raw, fault = self._value(stored, number_format)
-        formula = f"={self._formula}" if self._has_formula else ""
-        if self._has_formula and raw is None and not fault:
-            fault = _NO_RESULT
-        text = raw if isinstance(raw, str) else text_of(raw)
+        style = self._cell.get("s")
+        number_format = self._package.number_format(style) if style else ""
+        raw, text, fault = self._value(self._cell.get("t", "n"), stored, number_format)
+        if formula is not None:
+            formula = f"={formula}"
+            if raw is None:
+                text, fault = formula, fault or _NO_RESULT
         if not fault and (not text or text.isspace()):
             return
         if len(text) > self._limits.text_length:
@@ -165,50 +167,53 @@ class _SheetReader:
         self._allowance.cells -= 1
         if self._allowance.cells < 0:
             raise self._archive.too_large(f"more than {self._limits.cells} filled cells")
-        self._cells.append(
-            Cell(
-                self._row,
-                self._column,
-                raw,
-                (fault and not text and formula) or text,
-                number_format,
-                formula[:500],
-                fault,
-            )
-        )
+        row, column = self._row, self._column
+        cell = Cell(row, column, raw, text, number_format, formula[:500] if formula else "", fault)
+        self._cells[row, column] = cell
 
-    def _value(self, stored: str, number_format: str) -> tuple[Raw, str]:
-        kind = self._kind
+    def _value(self, kind: str, stored: str, number_format: str) -> tuple[Raw, str, str]:
+        """A stored value, the same as text, and why it cannot be used."""
+        if kind == "n" and not number_format:
+            return *self._number(stored), ""
         if kind == "s":
-            texts = self._package.texts
-            index = int(stored) if stored.isdigit() and len(stored) < 10 else -1
-            return (
-                (texts[index], "")
-                if 0 <= index < len(texts)
-                else (None, "reference to a text that is not there")
-            )
+            return self._shared_text(stored)
         if kind in ("str", "inlineStr"):
-            return stored, ""
+            return stored, stored, ""
+        if kind == "e" and stored:
+            return stored, stored, f"error value {stored[:20]}"
+        return *self._converted(kind, stored, number_format), ""
+
+    def _shared_text(self, stored: str) -> tuple[Raw, str, str]:
+        texts = self._package.texts
+        index = int(stored) if stored.isdigit() and len(stored) < 10 else -1
+        if 0 <= index < len(texts):
+            return texts[index], texts[index], ""
+        return None, "", "reference to a text that is not there"
+
+    def _number(self, stored: str) -> tuple[Raw, str]:
+        """A number and its text; sheets repeat their figures, so each is made once."""
+        known = self._numbers.get(stored)
+        if known is None:
+            known = self._numbers[stored] = _number_of(stored)
+        return known
+
+    def _converted(self, kind: str, stored: str, number_format: str) -> tuple[Raw, str]:
+        """A truth value, date or number and its text; text where it is none of them."""
         if not stored:
             return None, ""
-        if kind == "e":
-            return stored, f"error value {stored[:20]}"
-        if kind == "b":
-            return stored.strip() == "1", ""
-        return self._number_or_date(stored, number_format)
-
-    def _number_or_date(self, stored: str, number_format: str) -> tuple[Raw, str]:
+        raw: Raw
         try:
-            if self._kind == "d":
-                return date_of_text(stored), ""
-            number = float(stored)
-            if number_format and shows_date(number_format):
-                return date_of_serial(number, counts_from_1904=self._package.counts_from_1904), ""
+            if kind == "b":
+                raw = stored.strip() == "1"
+            elif kind == "d":
+                raw = date_of_text(stored)
+            elif number_format and shows_date(number_format):
+                raw = date_of_serial(float(stored), counts_from_1904=self._package.counts_from_1904)
+            else:
+                return self._number(stored)
         except (ValueError, OverflowError):
-            return stored, ""
-        if number.is_integer() and abs(number) < 1e15:
-            return int(number), ""
-        return number, ""
+            return stored, stored
+        return raw, text_of(raw)
 
     def _merge(self, at: dict[str, str]) -> None:
         ends = [_place(part) for part in at.get("ref", "").split(":", 1)]
@@ -216,6 +221,17 @@ class _SheetReader:
             (top, left), (bottom, right) = ends[0], ends[1]
             if top <= bottom and left <= right:
                 self._spans.append(Span(top, left, bottom, right))
+
+
+def _number_of(stored: str) -> tuple[Raw, str]:
+    if not stored:
+        return None, ""
+    try:
+        number = float(stored)
+    except ValueError:
+        return stored, stored
+    raw = int(number) if number.is_integer() and abs(number) < 1e15 else number
+    return raw, text_of(raw)
 
 
 def _place(address: str) -> tuple[int, int] | None:

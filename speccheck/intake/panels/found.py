@@ -21,6 +21,8 @@ class Figure:
     recognised: str
     condition: str
     at: Mapping[str, float]
+    band: Band | None
+    """Band that the cell or heading itself names."""
 
 
 @dataclass(slots=True)

@@ -76,7 +76,7 @@ class Builder:
     """Makes panels of drafts."""
 
     def __init__(self, reader: Reader, notes: Mapping[str, Mapping[str, str]]) -> None:
-        self._reader, self._notes = reader, notes
+        self._reader, self._notes = reader, {sheet: found for sheet, found in notes.items() if found}
 
     def build(self, draft: Draft) -> Built:
         """Read the claims of a draft and settle what only the whole panel can settle."""
@@ -97,12 +97,14 @@ class Builder:
             if claim.context.label.tolerance:
                 tolerances.append((claim, outcome))
                 continue
-            if outcome.found:
-                found, trouble = _shared_out(claim, outcome.found, draft.bands, several)
-                self._add_notes(found, outcome, claim)
-                readings += found
+            found = outcome.found
+            if len(found) > 1 or (found and found[0].parameter in FREQUENCY):
+                found, trouble = _shared_out(claim, found, draft.bands, several)
                 if trouble is not None:
                     unread.append(trouble)
+            if self._notes:
+                self._add_notes(found, outcome, claim)
+            readings += found
             if outcome.statement is not None:
                 statements.append(outcome.statement)
             if outcome.unread is not None:
@@ -146,9 +148,7 @@ class Builder:
         return len(draft.bands) > 1 or named
 
     def _add_notes(self, found: list[Found], outcome: Outcome, claim: Claim) -> None:
-        notes = self._notes.get(outcome.sheet)
-        if not notes:
-            return
+        notes = self._notes.get(outcome.sheet, {})
         markers = dict.fromkeys((*outcome.footnotes, *_markers(claim.context.heading)))
         remark = "; ".join(f"note {m}: {notes[m]}" for m in markers if m in notes)
         for one in found:
@@ -192,14 +192,12 @@ def _markers(heading: str) -> tuple[str, ...]:
 def _shared_out(
     claim: Claim, found: list[Found], bands: list[Band], several: bool
 ) -> tuple[list[Found], Unread | None]:
-    """A list of figures in one cell, given to the panel's bands in their order."""
+    """Frequencies taken for bands; a list of figures in one cell given to the panel's bands in order."""
     first = found[0]
     if first.parameter in FREQUENCY:
         if bands and not claim.banded and claim.band is None and not _in_figures(found):
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
-    if len(found) == 1:
-        return found, None
     if trouble := part_by_plane(found):
         return [], Unread(where=first.where, text=first.raw, reason=trouble, suggestion=ASK_FOR_PLANES)
     alike = _plain_list(found)

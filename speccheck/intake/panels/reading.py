@@ -164,9 +164,7 @@ class Reader:
 
 
 def _found(where: CellRef, claim: Claim, figure: Figure) -> Found:
-    quantity, band = figure.quantity, claim.band
-    if band is None and "frequency_high_mhz" in figure.at:
-        band = (figure.at["frequency_low_mhz"], figure.at["frequency_high_mhz"])
+    quantity = figure.quantity
     return Found(
         where,
         claim.cell.text,
@@ -174,7 +172,7 @@ def _found(where: CellRef, claim: Claim, figure: Figure) -> Found:
         figure,
         figure.parameter,
         quantity.value,
-        band,
+        claim.band or figure.band,
         quantity.tolerance,
     )
 
@@ -192,6 +190,8 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
     how = label.how or f"heading '{context.heading or label.text}'"
     if quantity.unit or parameter.unit:
         how += f"; {supplied or _unit_told(quantity, _unit(context)[1], parameter)}"
+    at = _at(" ".join(filter(None, (*conditions[1:3], of_unit))), parameter.unit) | dict(settled.at)
+    named = "frequency_high_mhz" in at
     return Figure(
         parameter=parameter.key,
         quantity=replace(settled, alternatives=quantity.alternatives) if supplied else settled,
@@ -199,8 +199,9 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, tail: st
         sense=_sense(settled, context),
         statistic=settled.statistic or _statistic(context, parameter),
         recognised=how + tail,
-        at=_at(" ".join(filter(None, (*conditions[1:3], of_unit))), parameter.unit) | dict(settled.at),
         condition="; ".join(dict.fromkeys(filter(None, conditions))),
+        at=at,
+        band=(at["frequency_low_mhz"], at["frequency_high_mhz"]) if named else None,
     )
 
 

@@ -41,6 +41,7 @@ class _Field:
     role: str = ""
     misses: int = 0
     of_frequency: bool = False
+    banded: bool = False
 
 
 @dataclass(slots=True)
@@ -63,6 +64,7 @@ class AcrossReader:
         self._nicknamed: int = 0
         self._names_of_bands: set[int] = set()
         self._edges: tuple[int, int] = (0, 0)
+        self._guides: set[int] = set()
         self._contexts: dict[tuple[int, str], Context] = {}
         self._by_name: dict[str, tuple[Draft, set[object]]] = {}
         self._at = _Row()
@@ -103,7 +105,12 @@ class AcrossReader:
                 band_name=column.band_name if column.band is None else "",
             )
             self._fields[index] = _Field(
-                column, label, context, role, of_frequency=set(label.parameters) <= _FREQUENCY_KEYS
+                column,
+                label,
+                context,
+                role,
+                of_frequency=set(label.parameters) <= _FREQUENCY_KEYS,
+                banded=column.band is not None or bool(column.band_name),
             )
 
     def _choose_names_and_bands(self) -> None:
@@ -127,6 +134,7 @@ class AcrossReader:
         self._edges = edge_columns({i: fields[i].column.heading for i in columns})
         nicknames = [i for i in columns if holds_nicknames(columns[i])]
         self._nicknamed = nicknames[0] if nicknames else 0
+        self._guides = {*self._edges, *self._names_of_bands, self._nicknamed, self._banded}
 
     def _is_frequency(self, found: _Field) -> bool:
         of_label = bool(found.label) and found.of_frequency
@@ -220,19 +228,15 @@ class AcrossReader:
         found = self._fields.get(cell.column)
         if found is None:
             return
-        said, column = self._at.said, found.column
-        if cell.column in self._edges:
-            self._claim_edge(cell, draft, said.band)
+        if cell.column in self._guides and self._only_guides(cell, draft):
             return
-        silent = cell.column == self._nicknamed or cell.column in self._names_of_bands
-        if silent or (cell.column == self._banded and said.point):
-            self._result.mark(cell, "label")
-        elif found.label:
-            band, banded = column.band, column.band is not None or bool(column.band_name)
-            of_row = column.index == self._banded or not found.of_frequency
-            context = self._noted(found.context, said.name) if of_row else found.context
-            if not banded and of_row and said.known:
-                band, banded = said.band, True
+        said, column = self._at.said, found.column
+        if found.label.parameters:
+            context, band, banded = found.context, column.band, found.banded
+            if not found.of_frequency or column.index == self._banded:
+                context = self._noted(context, said.name) if said.name else context
+                if not banded and said.known:
+                    band, banded = said.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)
@@ -252,6 +256,17 @@ class AcrossReader:
             found.misses += 1
             self._result.mark(cell, "unread")
 
+    def _only_guides(self, cell: Cell, draft: Draft) -> bool:
+        """Whether a cell says nothing but the band of its row."""
+        if cell.column in self._edges:
+            self._claim_edge(cell, draft, self._at.said.band)
+            return True
+        silent = cell.column == self._nicknamed or cell.column in self._names_of_bands
+        if silent or (cell.column == self._banded and self._at.said.point):
+            self._result.mark(cell, "label")
+            return True
+        return False
+
     def _claim_edge(self, cell: Cell, draft: Draft, band: Band | None) -> None:
         """The band of a row is claimed by the cell of its lower edge."""
         self._result.mark(cell, "unread" if band is None else "reading")
@@ -263,8 +278,6 @@ class AcrossReader:
 
     def _noted(self, context: Context, name: str) -> Context:
         """A context with the nickname of the row's band, made once for each."""
-        if not name:
-            return context
         key = (id(context), name)
         if key not in self._contexts:
             self._contexts[key] = replace(context, condition=name)
@@ -280,15 +293,7 @@ class AcrossReader:
                 rows = self._table.data_rows
                 where = next(c for r in rows if (c := self._grid.cells.get((r, index))) is not None)
             heading = found.column.heading[:80]
-            reason = (
-                f"column heading '{heading}' is not in the dictionary"
-                if heading
-                else "a column without a heading"
-            )
-            self._result.unread.append(
-                (
-                    where,
-                    f"{reason}; its {found.misses} cells were not read",
-                    self._marks.labels.suggestion(found.label.text),
-                )
-            )
+            unknown = f"column heading '{heading}' is not in the dictionary"
+            reason = unknown if heading else "a column without a heading"
+            nearest = self._marks.labels.suggestion(found.label.text)
+            self._result.unread.append((where, f"{reason}; its {found.misses} cells were not read", nearest))

@@ -75,12 +75,17 @@ class SheetResult:
     roles: dict[tuple[int, int], str] = field(default_factory=dict)
     unread: list[tuple[Cell, str, str]] = field(default_factory=list)
     declared: list[Declared] = field(default_factory=list)
+    _walked: int = 0
 
     def mark_claims(self) -> None:
-        """Say of every claim made so far that its cell is taken; reading it gives the final word."""
-        for draft in self.drafts:
+        """Say of every claim of the tables just walked that its cell is taken; reading gives the last word.
+
+        A walk adds drafts and leaves those of earlier walks alone, so each claim is marked once.
+        """
+        for draft in self.drafts[self._walked :]:
             for claim in draft.claims:
                 self.roles.setdefault((claim.cell.row, claim.cell.column), "claimed")
+        self._walked = len(self.drafts)
 
     def mark(self, cell: Cell, role: str) -> None:
         """Say what a cell was taken for; the first word stands."""

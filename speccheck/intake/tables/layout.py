@@ -33,6 +33,7 @@ def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
         DownReader(marks, down, result, names).read()
         result.mark_claims()
     read_lines(marks, result, names)
+    result.mark_claims()
     result.drafts.sort(key=lambda draft: draft.claims[0].cell.row if draft.claims else 0)
     _leftovers(marks, result)
     return result
@@ -66,9 +67,9 @@ def _with_own_rows(marks: Marks, table: Across) -> Across:
 
 def _leftovers(marks: Marks, result: SheetResult) -> None:
     """Cells outside every table: notes, unless a figure stands beside a word as if it were a claim."""
-    result.mark_claims()
-    for row, cells in marks.rows.items():
-        free = [c for c in cells if (row, c.column) not in result.roles]
+    left = marks.grid.cells.keys() - result.roles.keys()
+    for row in sorted({row for row, _ in left}):
+        free = [c for c in marks.rows[row] if (row, c.column) in left]
         for position, cell in enumerate(free):
             if cell.fault:
                 result.mark(cell, "unread")

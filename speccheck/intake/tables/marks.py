@@ -38,16 +38,16 @@ class Marks:
 def mark(grid: Grid, labels: Labels) -> Marks:
     """Look at every visible cell once."""
     marks = Marks(grid, labels, grid.rows())
-    wordless: set[str] = set()
+    values: set[str] = set()
     for row, cells in marks.rows.items():
         following: Cell | None = None
         for cell in reversed(cells):
             raw = cell.raw
-            if isinstance(raw, str) and raw not in wordless and not cell.fault:
-                if _might_be_heading(raw):
-                    _mark_text(marks, (row, cell.column), raw, following)
+            if isinstance(raw, str) and raw not in values and not cell.fault:
+                if _is_value(raw, labels):
+                    values.add(raw)
                 else:
-                    wordless.add(raw)
+                    _mark_text(marks, (row, cell.column), raw, following)
             following = cell
     _mark_letters(marks)
     _unmark_column_words(marks)
@@ -56,9 +56,9 @@ def mark(grid: Grid, labels: Labels) -> Marks:
 
 def _unmark_column_words(marks: Marks) -> None:
     """Words over the columns of a table with headings down the side head no values: 'Parameter | Typ'."""
-    for row, cells in marks.rows.items():
-        headings = marks.heading_columns(row)
-        if not 0 < len(headings) <= 4:
+    for row in sorted({row for row, _ in marks.headings}):
+        cells, headings = marks.rows[row], marks.heading_columns(row)
+        if len(headings) > 4:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
         if is_form_heading(roles):
@@ -95,7 +95,7 @@ def _mark_letters(marks: Marks) -> None:
     letters = {
         place: _LETTER_UNIT.sub("", cell.text.strip())
         for place, cell in marks.grid.cells.items()
-        if isinstance(cell.raw, str) and is_size_letter(cell.text)
+        if len(cell.text) < _LONGEST_LETTER and isinstance(cell.raw, str) and is_size_letter(cell.text)
     }
     for row, column in letters:
         for step in ((0, 1), (1, 0)):
@@ -125,8 +125,11 @@ def _mark_three(marks: Marks, places: list[tuple[int, int]], letters: str) -> No
         marks.headings[place] = Label(text, (size,), unit=unit, how=f"heading '{text}' of '{letters}'")
 
 
-def _might_be_heading(text: str) -> bool:
-    return len(text) <= _LONGEST and any(letter.isalpha() for letter in text) and not is_unit(text)
+def _is_value(text: str, labels: Labels) -> bool:
+    """Whether a text is neither heading nor line, wherever it stands; catalogues repeat their values."""
+    if len(text) > _LONGEST or not any(letter.isalpha() for letter in text) or is_unit(text):
+        return True
+    return not (any(mark in text for mark in _LINE_MARKS) or labels.of(text))
 
 
 def _mark_text(marks: Marks, place: tuple[int, int], text: str, following: Cell | None) -> None:
