@@ -55,10 +55,11 @@ def graded(margin: float, guard: float, *, equal_meets: bool = True, equal_note:
 def rounded(grade: Grade, allowance: float) -> Grade:
     """The grade once half a unit of the last digit printed in the offer is allowed for.
 
-    A shortfall within it is a narrow pass, after conversion of units as in the offer's own unit.
+    A shortfall within it is a narrow pass, after conversion of units as in the offer's own unit. A shortfall
+    of the whole half is none: the limit itself would have been printed one digit higher.
     """
     short = grade.verdict in FAILING and grade.margin is not None and grade.margin < 0
-    if not short or (grade.margin or 0.0) + allowance < -_SLACK:
+    if not short or (grade.margin or 0.0) + allowance <= _SLACK:
         return grade
     note = f"ROUND: short by less than half a unit of the last digit printed ({allowance:.2g})"
     return Grade(Compliance.MEETS_NARROWLY, grade.margin, note)

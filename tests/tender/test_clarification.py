@@ -5,6 +5,7 @@ from __future__ import annotations
 from pathlib import Path
 
 import pytest
+from batch.evaluation import BIDS, write_evaluation
 from openpyxl import load_workbook
 
 from speccheck import pipeline
@@ -15,7 +16,6 @@ from speccheck.records import Assessment, Compliance
 from speccheck.records.answers import AnswerKind, TakenAnswer
 from speccheck.report.pages.clarification import render_clarification, write_answers, write_clarification
 from speccheck.tender.answers import take_in
-from batch.evaluation import BIDS, write_evaluation
 
 
 @pytest.fixture

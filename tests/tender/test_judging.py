@@ -252,6 +252,11 @@ def test_rounding_holds_in_the_unit_of_the_offer(raw: str, verdict: str) -> None
     assert ("ROUND" in row.note) == (verdict == "meets narrowly")
 
 
+def test_a_shortfall_of_the_whole_half_unit_was_not_rounded() -> None:
+    """17.5 rounds to 18, half away from zero or half to even (IEEE 754-2019, 4.3), never to 17."""
+    assert _row(demand("gain", "≥", 17.5), says("gain", 17.0, "17")).verdict is Compliance.FAILS
+
+
 def test_a_lone_digit_was_not_rounded() -> None:
     assert _row(demand("vswr", "≤", 1.5), says("vswr", 2.0, "2")).verdict is Compliance.FAILS
 

@@ -145,6 +145,13 @@ def test_any_gain_reads_back_to_itself(gain: float, words: str) -> None:
             [("width", "≤", 300, ()), ("height", "≤", 1500, ()), ("depth", "≤", 150, ())],
         ),
         ("A panel with at least 64 transceivers", [("transceivers", "≥", 64, ())]),
+        (
+            "The antenna shall cover 698 to 894 MHz and 1695 to 2360 MHz",
+            [
+                ("frequency_range", "contains", (698, 894), ()),
+                ("frequency_range", "contains", (1695, 2360), ()),
+            ],
+        ),
         ("Gewinn mindestens 17 dBi", [("gain", "≥", 17, ())]),
         ("Le gain doit être au moins 17 dBi", [("gain", "≥", 17, ())]),
     ],
@@ -153,6 +160,26 @@ def test_other_ways_to_say_it(words: str, readings: list[tuple[Any, ...]]) -> No
     """Common practice: kinds of wording met in schedules beyond the numbered ones."""
     read = [(c.parameter, c.operator, c.limit, c.bands) for c in read_wording(words)]
     assert read == readings
+
+
+@pytest.mark.parametrize(
+    "words", ["Minimum gain 14 dBi", "VSWR max. 1.5", "Max. weight 30 kg", "Gain min 14 dBi"]
+)
+def test_a_bound_that_is_part_of_a_name_is_a_word_of_direction(words: str) -> None:
+    (clause,) = read_wording(words)
+    assert clause.operator in "≥≤"
+    assert "DIR" not in clause.codes
+
+
+def test_maximum_power_is_a_capability_and_no_upper_limit() -> None:
+    """Common practice: what a port must bear is a least figure, whatever its heading is called."""
+    (clause,) = read_wording("Max power per port 250 W")
+    assert (clause.operator, "CLASH" in clause.codes) == ("≥", False)
+
+
+def test_a_row_for_information_needs_no_value() -> None:
+    (clause,) = read_wording("State the mean time between failures", level=Level.INFORMATION)
+    assert (clause.parameter, clause.operator, clause.codes) == ("mtbf", "information", ())
 
 
 def test_a_typical_value_beside_a_guaranteed_one_keeps_its_own_statistic() -> None:

@@ -12,6 +12,7 @@ from dataclasses import dataclass, replace
 from speccheck.dictionary import parameters
 from speccheck.intake.tenders.wording import names
 from speccheck.intake.tenders.wording.clauses import Clause
+from speccheck.intake.tenders.wording.figures import Form
 from speccheck.intake.tenders.wording.lexicon import Kind
 from speccheck.intake.tenders.wording.segments import (
     demands,
@@ -62,7 +63,9 @@ def read_wording(
     found = tokens(wording, house=habits.house, decimal_comma=habits.decimal_comma)
     key = parameter or _parameter(found)
     clauses = (
-        _named(found, key) or _figures(found, key, fixed=bool(parameter)) or (_without_figure(found, key),)
+        _named(found, key)
+        or _figures(found, key, fixed=bool(parameter))
+        or (_without_figure(found, key, level),)
     )
     return tuple(_completed(clause, found, level, habits) for clause in clauses)
 
@@ -70,7 +73,14 @@ def read_wording(
 def _parameter(found: Sequence[Token]) -> str:
     """Key of the parameter named, the first that a figure's unit fits; several keys joined by '+'."""
     named = names.of_kind(found, Kind.PARAMETER)
-    return fitting_parameter(found) or (named[0].said if named else "")
+    return fitting_parameter(found) or (named[0].said if named else _frequencies(found))
+
+
+def _frequencies(found: Sequence[Token]) -> str:
+    """'The antenna shall cover 698 to 894 MHz' names no parameter, but its figures do."""
+    figures = [token.figure for token in found if token.figure is not None]
+    bands = all(figure.form is Form.RANGE and figure.unit in ("MHz", "GHz") for figure in figures)
+    return "frequency_range" if figures and bands and not names.of_kind(found, Kind.UNREAD) else ""
 
 
 _NAMED = (
@@ -104,9 +114,9 @@ def _figures(found: Sequence[Token], key: str, *, fixed: bool) -> tuple[Clause, 
     return (*read, *more)
 
 
-def _without_figure(found: Sequence[Token], key: str) -> Clause:
+def _without_figure(found: Sequence[Token], key: str, column: Level | None) -> Clause:
     """A row without a figure: papers or a statement where that is enough, else a question."""
-    if own_level(found) is Level.INFORMATION:
+    if Level.INFORMATION in (own_level(found), column):
         return Clause(parameter=key, operator="information")
     if not key:
         return Clause(operator="evidence").doubting("PARAMETER")

@@ -130,10 +130,8 @@ def _unread(found: Table, rows: Iterable[ReadRow], file: str) -> Iterator[Unread
         where = CellRef(file, "Requirements", cell.address)
         yield Unread(where=where, text=cell.text, reason="column not known, not read")
     for row in rows:
-        for requirement in row.requirements:
-            if requirement.unread:
-                reason = "words of the requirement not understood"
-                yield Unread(where=requirement.where, text=requirement.unread, reason=reason)
+        for where, text in dict.fromkeys((r.where, r.unread) for r in row.requirements if r.unread):
+            yield Unread(where=where, text=text, reason="words of the requirement not understood")
 
 
 def _row_troubles(rows: Iterable[ReadRow]) -> Iterator[Finding]:

@@ -8,7 +8,7 @@ from dataclasses import dataclass, field, replace
 from speccheck.dictionary import Parameter, parameters
 from speccheck.intake.tenders.wording.families import belongs
 from speccheck.intake.tenders.wording.figures import Figure, Form
-from speccheck.intake.tenders.wording.lexicon import Kind, general_vocabularies
+from speccheck.intake.tenders.wording.lexicon import Kind, fold, general_vocabularies
 from speccheck.intake.tenders.wording.places import Place, bare_band, place_of
 from speccheck.intake.tenders.wording.tokens import Token
 from speccheck.records import Level
@@ -220,9 +220,18 @@ def _comparator(segment: Sequence[Token], limits: Sequence[int], parameter: Para
     after = [i for i in said if i == limits[-1] + 1]
     chosen = before[-1] if before else after[0] if after else None
     if chosen is None:
-        return "", ""
+        return _bound_in_name(segment, parameter), ""
     others = [said[i] for i in (*before, *after) if i != chosen and said[i] in ("≥", "≤")]
     return said[chosen], _bound_statistic(others[0], parameter) if others else ""
+
+
+def _bound_in_name(segment: Sequence[Token], parameter: Parameter) -> str:
+    """'Minimum gain', 'VSWR max': a bound that belongs to the name; not that of 'maximum power per port'."""
+    (bounds,) = (v for v in general_vocabularies() if v.kind is Kind.COMPARATOR)
+    names = [token.text for token in segment if token.kind is Kind.PARAMETER]
+    said = {bounds.meaning[fold(text)] for name in names for _, text in bounds.finditer(name)}
+    worst = {"higher": "≥", "lower": "≤"}.get(parameter.direction, "")
+    return worst if worst in said else ""
 
 
 def _bound_statistic(said: str, parameter: Parameter) -> str:
