@@ -6,42 +6,23 @@ import re
 from dataclasses import dataclass, field, replace
 
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.panels.told_by_value import label_by_values
-from speccheck.intake.tables.across_bands import (
-    RowBand,
-    band_of,
-    gives_frequencies,
-    holds_nicknames,
-    holds_spans,
-)
+from speccheck.intake.tables.across_bands import RowBand, band_of, band_of_title
+from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
+from speccheck.intake.tables.across_whole import settle_whole
 from speccheck.intake.tables.bands import find_bands
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
-from speccheck.intake.tables.columns import Column, heading_stack
-from speccheck.intake.tables.composing import compose
-from speccheck.intake.tables.edges import band_between, edge_columns
+from speccheck.intake.tables.edges import band_between
 from speccheck.intake.tables.labels import Label
-from speccheck.intake.tables.marks import Marks, is_size_letter
+from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
-from speccheck.intake.tables.regions import Across
+from speccheck.intake.tables.regions import Across, cells_of
+from speccheck.intake.tables.words import is_aside_of_table
 from speccheck.records import Band
 
-_FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
-_NAME_KEYS = ("model", "panel_type", "part_number")
 _EXAMPLE = re.compile(r"\s*example\b", re.IGNORECASE)
 _SILENT_ROLES = {"remark": "note", "number": "label", "group": "label", "level": "label", "required": "label"}
-
-
-@dataclass(slots=True)
-class _Field:
-    """One column: what its cells claim."""
-
-    column: Column
-    label: Label
-    context: Context
-    role: str = ""
-    misses: int = 0
-    of_frequency: bool = False
-    banded: bool = False
+_ABOVE = 2
+"""Rows above the headings in which a title may give the band of a table."""
 
 
 @dataclass(slots=True)
@@ -52,112 +33,54 @@ class _Row:
     said: RowBand = field(default_factory=RowBand)
 
 
+@dataclass(slots=True)
+class _Known:
+    """A panel met before, and the rows about it."""
+
+    draft: Draft
+    rows: dict[int, RowBand] = field(default_factory=dict)
+    said: set[RowBand] = field(default_factory=set)
+
+
 class AcrossReader:
     """Walks one table from its first data row to its last."""
 
     def __init__(self, marks: Marks, table: Across, result: SheetResult, names: Names) -> None:
         self._marks, self._table, self._result, self._names = marks, table, result, names
         self._grid: Grid = marks.grid
-        self._fields: dict[int, _Field] = {}
-        self._named: int = 0
-        self._banded: int = 0
-        self._nicknamed: int = 0
-        self._names_of_bands: set[int] = set()
-        self._edges: tuple[int, int] = (0, 0)
-        self._guides: set[int] = set()
+        self._fields: dict[int, Field] = {}
         self._contexts: dict[tuple[int, str], Context] = {}
-        self._by_name: dict[str, tuple[Draft, set[object]]] = {}
+        self._known: dict[str, _Known] = {}
+        self._panels: list[_Known] = []
+        self._section = RowBand()
+        self._title: Cell | None = None
         self._at = _Row()
 
     def read(self) -> None:
         """Place every cell of the table and collect its claims."""
-        self._describe()
+        self._fields = describe_fields(self._marks, self._table)
         for row in [*self._table.heading_rows, *self._table.repeated]:
-            for cell in self._cells(row):
+            for cell in cells_of(self._marks, self._table, row):
                 self._result.mark(cell, "heading")
-        self._choose_names_and_bands()
+        self._guides = find_guides(self._grid, self._table, self._fields)
+        self._section_above()
         for row in self._table.data_rows:
-            self._row(row, self._cells(row))
+            self._row(row, cells_of(self._marks, self._table, row))
+        panels = [(known.draft, known.rows) for known in self._panels]
+        settle_whole(self._grid, panels, self._fields, self._guides.of_bands)
         self._report_unknown()
 
-    def _cells(self, row: int) -> list[Cell]:
-        return [c for c in self._marks.rows.get(row, ()) if self._table.left <= c.column <= self._table.right]
-
-    def _describe(self) -> None:
-        rows, labels = self._table.heading_rows, self._marks.labels
-        used = {c.column for row in [*rows, *self._table.data_rows] for c in self._cells(row)}
-        for index in sorted(used):
-            stack = heading_stack(self._grid, rows, index, self._table.left)
-            label, column = compose(index, stack, labels)
-            letters = [c for c in stack if is_size_letter(c.text) and self._marks.is_heading(c)]
-            label = self._marks.headings[letters[-1].row, letters[-1].column] if letters else label
-            if not label and column.role == "":
-                texts = [c.text for c in self._column_cells(index)]
-                label = label_by_values(column.heading, texts) or label
-            if column.role == "tolerance" and column.unit:
-                label = Label(column.heading)
-            role = "" if label else column.role
-            context = Context(
-                label=label,
-                unit=column.unit,
-                statistic=column.statistic,
-                heading=column.heading,
-                band_name=column.band_name if column.band is None else "",
-            )
-            self._fields[index] = _Field(
-                column,
-                label,
-                context,
-                role,
-                of_frequency=set(label.parameters) <= _FREQUENCY_KEYS,
-                banded=column.band is not None or bool(column.band_name),
-            )
-
-    def _choose_names_and_bands(self) -> None:
-        fields = self._fields
-        for key in _NAME_KEYS:
-            named = [i for i, f in fields.items() if f.label.parameters[:1] == (key,)]
-            if named:
-                self._named = next((i for i in named if self._holds_words(i)), named[0])
-                break
-        else:
-            roles = [i for i, f in fields.items() if f.role == "panel"]
-            self._named = roles[0] if roles else self._unlabelled_text_column()
-        columns = {i: self._column_cells(i) for i in fields if i != self._named}
-        frequencies = [
-            i for i in columns if self._is_frequency(fields[i]) and holds_spans(columns[i], self._unit_of(i))
-        ]
-        given = [i for i in frequencies if gives_frequencies(columns[i])]
-        self._names_of_bands = {i for i in frequencies if given and i not in given}
-        narrow = [i for i in given or frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
-        self._banded = next(iter(narrow or given or frequencies), 0)
-        self._edges = edge_columns({i: fields[i].column.heading for i in columns})
-        nicknames = [i for i in columns if holds_nicknames(columns[i])]
-        self._nicknamed = nicknames[0] if nicknames else 0
-        self._guides = {*self._edges, *self._names_of_bands, self._nicknamed, self._banded}
-
-    def _is_frequency(self, found: _Field) -> bool:
-        of_label = bool(found.label) and found.of_frequency
-        return found.role == "band" or (of_label and not found.context.statistic)
-
-    def _unit_of(self, index: int) -> str:
-        return self._fields[index].label.unit or self._fields[index].column.unit or "MHz"
-
-    def _column_cells(self, index: int) -> list[Cell]:
-        return [c for r in self._table.data_rows[:40] if (c := self._grid.cells.get((r, index))) is not None]
-
-    def _holds_words(self, index: int) -> bool:
-        cells = self._column_cells(index)
-        return bool(cells) and all(isinstance(c.raw, str) for c in cells)
-
-    def _unlabelled_text_column(self) -> int:
-        for index, found in self._fields.items():
-            if not found.label and found.role in ("", "parameter", "offered", "typical"):
-                cells = [c for r in self._table.data_rows[:50] if (c := self._grid.cells.get((r, index)))]
-                if cells and all(isinstance(c.raw, str) and any(map(str.isalpha, c.raw)) for c in cells):
-                    return index
-        numbers = [i for i, f in self._fields.items() if f.role == "number"]
-        return numbers[0] if numbers else 0
+    def _section_above(self) -> None:
+        """A band alone in a row just above the headings holds for all rows."""
+        top = self._table.heading_rows[0]
+        for row in range(top - 1, max(0, top - 1 - _ABOVE), -1):
+            cells = cells_of(self._marks, self._table, row)
+            if len(cells) > 1 or any((row, c.column) in self._result.roles for c in cells):
+                return
+            if cells and (said := band_of_title(cells[0], self._names.is_title)):
+                self._section = said
+                self._result.mark(cells[0], "heading")
+                return
 
     def _row(self, row: int, cells: list[Cell]) -> None:
         if _EXAMPLE.match(cells[0].text):
@@ -165,88 +88,107 @@ class AcrossReader:
             for cell in cells[1:]:
                 self._result.mark(cell, "label")
             return
-        if len(cells) == 1 and len(self._fields) > 2:
-            cell = cells[0]
-            known = self._fields.get(cell.column)
-            if known is None or not known.label or cell.column in (self._named, self._table.left):
+        if row in self._table.groups or self._heads_rows(cells):
+            for cell in cells:
                 self._result.mark(cell, "heading")
-                self._at = _Row() if cell.column != self._named else self._at
-                if cell.column == self._named:
-                    self._start_panel(row, cell)
-                return
+            if not is_aside_of_table(cells[0].text):
+                self._group(row, cells[0])
+            return
         self._place(row, cells)
         draft = self._at.draft
         if draft is None:
             return
         for cell in cells:
-            if cell.column != self._named:
+            if cell.column != self._guides.named:
                 self._claim(cell, draft)
 
+    def _heads_rows(self, cells: list[Cell]) -> bool:
+        """Whether a cell alone in its row stands where no figure may."""
+        if len(cells) > 1 or len(self._fields) < 3:
+            return False
+        known = self._fields.get(cells[0].column)
+        aside = cells[0].column in (self._guides.named, self._table.left)
+        return known is None or not known.label or aside
+
+    def _group(self, row: int, cell: Cell) -> None:
+        """A title over the rows that follow: their band, their panel, or words that only group them."""
+        said = band_of_title(cell, self._names.is_title)
+        self._section, self._title = said or RowBand(), None
+        self._at = _Row()
+        if said is None and self._guides.named and cell.column == self._guides.named:
+            self._start_panel(row, cell)
+        elif said is None and not self._guides.named and self._names.is_title(cell.text):
+            self._title = cell
+
     def _place(self, row: int, cells: list[Cell]) -> None:
-        name_cell = self._grid.cells.get((row, self._named)) if self._named else None
+        guides, fields = self._guides, self._fields
+        name_cell = self._grid.cells.get((row, guides.named)) if guides.named else None
         said = band_of(
-            self._grid.covering(row, self._banded) if self._banded else None,
-            self._grid.covering(row, self._nicknamed) if self._nicknamed else None,
-            self._unit_of(self._banded) if self._banded else "",
+            self._grid.covering(row, guides.banded) if guides.banded else None,
+            self._grid.covering(row, guides.nicknamed) if guides.nicknamed else None,
+            unit_of(fields[guides.banded]) if guides.banded else "",
         )
-        if self._edges[0] and not said.band:
-            heading = self._fields[self._edges[0]].column.heading
-            said = RowBand(band_between(self._grid, row, self._edges, heading), said.name)
-        key = (said.band, said.name)
+        if guides.edges[0] and not said.band:
+            heading = fields[guides.edges[0]].column.heading
+            said = RowBand(band_between(self._grid, row, guides.edges, heading), said.name)
+        if not said.said:
+            said = self._section
         if name_cell is not None:
             self._result.mark(name_cell, "heading")
-            name = model_name(name_cell.text)
-            known = self._by_name.get(name)
-            if known and said.name + str(said.band or "") and key not in known[1]:
-                self._at = _Row(known[0])
+            known = self._known.get(model_name(name_cell.text))
+            if known and said.said and said not in known.said:
+                self._at = _Row(known.draft)
             else:
                 self._start_panel(row, name_cell)
-        elif self._at.draft is None or not (self._named or self._banded or self._nicknamed):
+        elif self._at.draft is None or not (guides.named or guides.banded or guides.nicknamed):
             self._start_panel(row, cells[0])
         self._at.said = said
         draft = self._at.draft
         if draft is not None:
-            self._by_name[draft.name][1].add(key)
+            known = self._known[draft.name]
+            known.rows[row] = said
+            known.said.add(said)
             if said.band and said.band not in draft.bands:
                 draft.bands.append(said.band)
 
     def _start_panel(self, row: int, cell: Cell) -> None:
-        if self._named and cell.column == self._named:
+        if self._guides.named and cell.column == self._guides.named:
             draft = Draft(model_name(cell.text), self._grid, cell, named=True)
+        elif self._title is not None:
+            draft = Draft(model_name(self._title.text), self._grid, self._title, named=True)
         else:
-            top = self._table.heading_rows[0]
-            title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
-            several = len(self._table.data_rows) > 1 and not (self._banded or self._nicknamed)
-            draft = Draft(
-                f"{title.name} row {row}" if several else title.name, self._grid, cell, named=title.certain
-            )
+            draft = self._untitled(row, cell)
         self._result.drafts.append(draft)
-        self._by_name[draft.name] = (draft, set())
+        known = self._known[draft.name] = _Known(draft)
+        self._panels.append(known)
         self._at = _Row(draft)
+
+    def _untitled(self, row: int, cell: Cell) -> Draft:
+        """The panel of rows that name none: the one of the title above, or one of several."""
+        top = self._table.heading_rows[0]
+        title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
+        several = len(self._table.data_rows) > 1 and not (self._guides.banded or self._guides.nicknamed)
+        name = f"{title.name} row {row}" if several else title.name
+        return Draft(name, self._grid, cell, named=title.certain)
 
     def _claim(self, cell: Cell, draft: Draft) -> None:
         found = self._fields.get(cell.column)
         if found is None:
             return
-        if cell.column in self._guides and self._only_guides(cell, draft):
+        if cell.column in self._guides.of_bands and self._only_guides(cell, draft):
             return
         said, column = self._at.said, found.column
         if found.label.parameters:
             context, band, banded = found.context, column.band, found.banded
-            if not found.of_frequency or column.index == self._banded:
+            if not found.of_frequency or column.index == self._guides.banded:
                 context = self._noted(context, said.name) if said.name else context
                 if not banded and said.known:
                     band, banded = said.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)
-        elif cell.column == self._banded:
-            label = Label(column.heading, ("operating_bands",), column.unit or "MHz")
-            if find_bands(cell.text).spans:
-                context = Context(label, heading=column.heading)
-                draft.claims.append(Claim(cell, context, said.band, banded=said.band is not None))
-            else:
-                self._result.mark(cell, "label")
+        elif cell.column in (self._guides.banded, self._guides.overall):
+            self._claim_range(cell, draft, found)
         elif found.role in _SILENT_ROLES:
             self._result.mark(cell, _SILENT_ROLES[found.role])
         elif found.role == "tolerance" and draft.claims:
@@ -256,13 +198,25 @@ class AcrossReader:
             found.misses += 1
             self._result.mark(cell, "unread")
 
+    def _claim_range(self, cell: Cell, draft: Draft, found: Field) -> None:
+        """Frequencies under a word such as 'Band': the band of a row, or the whole range of its panel."""
+        if not find_bands(cell.text).spans:
+            self._result.mark(cell, "label")
+            return
+        overall = cell.column == self._guides.overall
+        key, band = ("frequency_range", None) if overall else ("operating_bands", self._at.said.band)
+        label = Label(found.column.heading, (key,), found.column.unit or "MHz")
+        context = Context(label, heading=found.column.heading)
+        draft.claims.append(Claim(cell, context, band, banded=band is not None))
+
     def _only_guides(self, cell: Cell, draft: Draft) -> bool:
         """Whether a cell says nothing but the band of its row."""
-        if cell.column in self._edges:
+        guides = self._guides
+        if cell.column in guides.edges:
             self._claim_edge(cell, draft, self._at.said.band)
             return True
-        silent = cell.column == self._nicknamed or cell.column in self._names_of_bands
-        if silent or (cell.column == self._banded and self._at.said.point):
+        silent = cell.column == guides.nicknamed or cell.column in guides.names_of_bands
+        if silent or (cell.column == guides.banded and self._at.said.point):
             self._result.mark(cell, "label")
             return True
         return False
@@ -270,7 +224,7 @@ class AcrossReader:
     def _claim_edge(self, cell: Cell, draft: Draft, band: Band | None) -> None:
         """The band of a row is claimed by the cell of its lower edge."""
         self._result.mark(cell, "unread" if band is None else "reading")
-        if band is not None and cell.column == self._edges[0]:
+        if band is not None and cell.column == self._guides.edges[0]:
             heading = self._fields[cell.column].column.heading
             context = Context(Label(heading, ("operating_bands",), "MHz"), heading=heading)
             text = f"{band[0]:g}-{band[1]:g} MHz"

@@ -4,12 +4,18 @@ from __future__ import annotations
 
 from dataclasses import dataclass, field
 
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.tables.across_groups import parts_rows
 from speccheck.intake.tables.labels import begins_with_unit, is_heading_filler
 from speccheck.intake.tables.marks import Marks, looks_like_value, says_column_role
-from speccheck.intake.tables.words import column_role
+from speccheck.intake.tables.words import column_role, is_aside_of_table
 
 _LOOK_BELOW = 4
 _LONGEST_DETAIL = 30
+_WIDE = 4
+"""A heading over more columns than this and one more heads the rows below rather than the columns."""
+_FEW = 2
+"""A row with no more cells than this may only head the rows below it."""
 _REACH_BELOW = 400
 """Empty rows after which a table is over; catalogues are continuous."""
 
@@ -23,6 +29,8 @@ class Across:
     left: int
     right: int
     repeated: list[int] = field(default_factory=list)
+    groups: set[int] = field(default_factory=set)
+    """Data rows that only head, part or close the others: families, page numbers, sums."""
 
 
 def find_across(marks: Marks) -> list[Across]:
@@ -116,8 +124,15 @@ def _is_subheading(marks: Marks, row: int, above: int) -> bool:
     cells = marks.rows[row]
     if row > above + 1 or not cells:
         return False
+    if len(cells) == 1 and (cells[0].column == marks.rows[above][0].column or _is_wide(marks, cells[0])):
+        return False
     fillers = [c for c in cells if is_heading_filler(c.text) or (marks.is_heading(c) and len(cells) > 1)]
     return len(fillers) == len(cells) and (len(cells) > 1 or is_heading_filler(cells[0].text))
+
+
+def _is_wide(marks: Marks, cell: Cell) -> bool:
+    span = marks.grid.span(cell)
+    return span.right - span.left >= _WIDE
 
 
 def _details_heading(marks: Marks, row: int, above: int, following: list[int]) -> bool:
@@ -159,8 +174,8 @@ def _is_upper_heading(marks: Marks, row: int, heading_row: int) -> bool:
 def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list[int]) -> None:
     texts = {c.column: c.text for c in marks.rows[heading_row]}
     last = heading_row
-    for row in following:
-        cells = [c for c in marks.rows[row] if table.left <= c.column <= table.right]
+    for position, row in enumerate(following):
+        cells = cells_of(marks, table, row)
         if row - last > _REACH_BELOW:
             break
         if not cells:
@@ -174,7 +189,12 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         if table.repeated and table.repeated[-1] == row - 1 and all(is_heading_filler(c.text) for c in cells):
             table.repeated.append(row)
             continue
-        if (marks.is_heading(cells[0]) and cells[0].column == table.left) or len(headings) > 2:
+        heads = (marks.is_heading(cells[0]) and cells[0].column == table.left) or len(headings) > 2
+        if (len(cells) <= _FEW or is_aside_of_table(cells[0].text)) and parts_rows(
+            marks, cells, heading_row, following[position + 1 : position + 1 + _LOOK_BELOW]
+        ):
+            table.groups.add(row)
+        elif heads:
             break
         if (row, cells[0].column) in marks.lines and len(cells) == 1:
             break
@@ -184,6 +204,10 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         table.data_rows.pop()
 
 
+def cells_of(marks: Marks, table: Across, row: int) -> list[Cell]:
+    """The cells of a row that belong to a table."""
+    return [c for c in marks.rows.get(row, ()) if table.left <= c.column <= table.right]
+
+
 def _is_data(marks: Marks, table: Across, row: int) -> bool:
-    cells = [c for c in marks.rows[row] if table.left <= c.column <= table.right]
-    return len(cells) > 1
+    return row not in table.groups and len(cells_of(marks, table, row)) > 1

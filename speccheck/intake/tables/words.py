@@ -11,6 +11,10 @@ from speccheck.kept import toml
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]\s*$")
 _ITEM_NUMBER = re.compile(r"^\s*(?:[(\[]?[a-h\d]{1,2}[)\]]|[-•*·▪–])\s*")
 _SPACES = re.compile(r"[\s\u00a0\u2007\u2009\u202f\u200b_]+")
+_PAGE = re.compile(
+    r"^\W*(?:page|seite|pagina|strona|str\.|blatt|sheet|feuille|folio|pag?\.)\s*\d+(?:\s*(?:of|von|sur|de|di|z|van|/)\s*\d+)?\W*$"
+)
+_CODE = re.compile(r"[A-Z]+-?\d|\d-?[A-Z]")
 _DASHES = str.maketrans(
     {"–": "-", "—": "-", "−": "-", "‐": "-", "‑": "-", "’": "'", "ß": "ss", "ł": "l", "ø": "o"}
 )
@@ -98,6 +102,19 @@ def is_group_heading(text: str) -> bool:
     """Whether a text only heads a part of a panel's table, such as 'Mechanical properties'."""
     words = re.findall(r"[^\W\d_]+", fold(text))
     return bool(words) and not any(map(str.isdigit, text)) and _table()["group"]["words"].issuperset(words)
+
+
+@lru_cache(maxsize=20_000)
+def is_aside_of_table(text: str) -> bool:
+    """Whether a row that begins so closes or parts a table: page number, sum, mean, 'continued'."""
+    folded = fold(text)
+    if len(folded) > 40:
+        return False
+    words = _table()["aside"]
+    first = re.match(r"[\W_]*([^\W\d_-]+(?:-[^\W\d_]+)?)", folded)
+    return bool(_PAGE.search(folded)) or (
+        first is not None and first[1] in words["first"] and not _CODE.search(text)
+    )
 
 
 def is_group_word(word: str) -> bool:

@@ -1,0 +1,149 @@
+"""What the columns of a table with headings across hold: figures of a parameter, names of panels, bands."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass, field
+
+from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.panels.told_by_value import label_by_values
+from speccheck.intake.tables.across_bands import gives_frequencies, holds_nicknames, holds_spans
+from speccheck.intake.tables.claims import Context
+from speccheck.intake.tables.columns import Column, heading_stack
+from speccheck.intake.tables.composing import compose
+from speccheck.intake.tables.edges import edge_columns
+from speccheck.intake.tables.labels import FREQUENCY_KEYS, Label
+from speccheck.intake.tables.marks import Marks, is_size_letter
+from speccheck.intake.tables.regions import Across
+
+_NAME_KEYS = ("model", "panel_type", "part_number")
+_LOOKED_AT = 40
+
+
+@dataclass(slots=True)
+class Field:
+    """One column: what its cells claim."""
+
+    column: Column
+    label: Label
+    context: Context
+    role: str = ""
+    misses: int = 0
+    of_frequency: bool = False
+    banded: bool = False
+
+
+@dataclass(slots=True)
+class Guides:
+    """Columns that say whom and what band a row is about; 0 where there is none.
+
+    `overall` gives the whole range of a panel whose bands stand in the headings.
+    """
+
+    named: int = 0
+    banded: int = 0
+    nicknamed: int = 0
+    overall: int = 0
+    names_of_bands: set[int] = field(default_factory=set)
+    edges: tuple[int, int] = (0, 0)
+    of_bands: frozenset[int] = frozenset()
+
+
+def describe_fields(marks: Marks, table: Across) -> dict[int, Field]:
+    """The columns of a table, from the headings over them and, failing those, from what they hold."""
+    rows = [*table.heading_rows, *table.data_rows]
+    within = (c.column for row in rows for c in marks.rows.get(row, ()))
+    used = sorted({column for column in within if table.left <= column <= table.right})
+    return {index: _describe(marks, table, index) for index in used}
+
+
+def _describe(marks: Marks, table: Across, index: int) -> Field:
+    stack = heading_stack(marks.grid, table.heading_rows, index, table.left)
+    label, column = compose(index, stack, marks.labels)
+    letters = [c for c in stack if is_size_letter(c.text) and marks.is_heading(c)]
+    label = marks.headings[letters[-1].row, letters[-1].column] if letters else label
+    if not label and column.role == "":
+        texts = [c.text for c in cells_below(marks.grid, table, index)]
+        label = label_by_values(column.heading, texts) or label
+    if column.role == "tolerance" and column.unit:
+        label = Label(column.heading)
+    context = Context(
+        label=label,
+        unit=column.unit,
+        statistic=column.statistic,
+        heading=column.heading,
+        band_name=column.band_name if column.band is None else "",
+    )
+    return Field(
+        column,
+        label,
+        context,
+        role="" if label else column.role,
+        of_frequency=set(label.parameters) <= FREQUENCY_KEYS,
+        banded=column.band is not None or bool(column.band_name),
+    )
+
+
+def cells_below(grid: Grid, table: Across, index: int) -> list[Cell]:
+    """The first cells of a column."""
+    rows = table.data_rows[:_LOOKED_AT]
+    return [cell for row in rows if (cell := grid.cells.get((row, index))) is not None]
+
+
+def unit_of(found: Field) -> str:
+    """The unit of the frequencies in a column of bands."""
+    return found.label.unit or found.column.unit or "MHz"
+
+
+def find_guides(grid: Grid, table: Across, fields: dict[int, Field]) -> Guides:
+    """Which columns name the panel and the band of a row."""
+    guides = Guides(_name_column(grid, table, fields))
+    columns = {i: cells_below(grid, table, i) for i in fields if i != guides.named}
+    frequencies = [
+        i for i in columns if _is_frequency(fields[i]) and holds_spans(columns[i], unit_of(fields[i]))
+    ]
+    given = [i for i in frequencies if gives_frequencies(columns[i])]
+    guides.names_of_bands = {i for i in frequencies if given and i not in given}
+    narrow = [i for i in given or frequencies if fields[i].label.parameters[:1] != ("frequency_range",)]
+    guides.banded = next(iter(narrow or given or frequencies), 0)
+    if _name_several_bands(fields):
+        guides.overall, guides.banded = guides.banded, 0
+    guides.edges = edge_columns({i: fields[i].column.heading for i in columns})
+    guides.nicknamed = next((i for i in columns if holds_nicknames(columns[i])), 0)
+    guides.of_bands = frozenset(
+        {*guides.edges, *guides.names_of_bands, guides.nicknamed, guides.banded} - {0}
+    )
+    return guides
+
+
+def _name_several_bands(fields: dict[int, Field]) -> bool:
+    """Whether the headings part the figures by band, so that no row is about one band."""
+    found = (f.column for f in fields.values() if f.banded and f.label and not f.of_frequency)
+    return len({column.band or column.band_name for column in found}) > 1
+
+
+def _is_frequency(found: Field) -> bool:
+    of_label = bool(found.label) and found.of_frequency
+    return found.role == "band" or (of_label and not found.context.statistic)
+
+
+def _name_column(grid: Grid, table: Across, fields: dict[int, Field]) -> int:
+    for key in _NAME_KEYS:
+        named = [i for i, f in fields.items() if f.label.parameters[:1] == (key,)]
+        if named:
+            return next((i for i in named if _holds_words(cells_below(grid, table, i))), named[0])
+    roles = [i for i, f in fields.items() if f.role == "panel"]
+    return roles[0] if roles else _unlabelled_text_column(grid, table, fields)
+
+
+def _holds_words(cells: list[Cell]) -> bool:
+    return bool(cells) and all(isinstance(c.raw, str) for c in cells)
+
+
+def _unlabelled_text_column(grid: Grid, table: Across, fields: dict[int, Field]) -> int:
+    for index, found in fields.items():
+        if not found.label and found.role in ("", "parameter", "offered", "typical"):
+            cells = cells_below(grid, table, index)
+            if _holds_words(cells) and all(any(map(str.isalpha, c.text)) for c in cells):
+                return index
+    numbers = [i for i, f in fields.items() if f.role == "number"]
+    return numbers[0] if numbers else 0
