@@ -19,6 +19,7 @@ from speccheck.quantities.figures import Claim, claims, quantity, unread_words
 from speccheck.quantities.lexer import Token, tokens
 from speccheck.quantities.numerals import numeral
 from speccheck.quantities.ranges import one_range, scan_range
+from speccheck.quantities.shown import shown_around
 from speccheck.quantities.spectrum import band_names, bands
 from speccheck.quantities.statuses import declares, is_error_value, status_of
 from speccheck.quantities.tidy import split_footnotes, tidy
@@ -33,7 +34,6 @@ _TOLERANCE_WORD = re.compile(
     r"[,;(]?\s*\b(?:toleran[cz]\w*|tolérance|tolerância|tolleranza|tolerantie)\s*(?:of|von|de|di|:)?\s*(?=[±+])",
     re.IGNORECASE,
 )
-_FORMAT_UNIT = re.compile(r'["\[ \\]([^"\]\\;]+?)["\]\\;]*$')
 
 
 def read_cell(
@@ -80,6 +80,10 @@ def read_cell(
 def _read_number(number: float, wanted: Expected, number_format: str) -> CellContent:
     if not math.isfinite(number):
         return CellContent(rest=str(number), notes=("not a finite number",))
+    if number_format and number_format != "General":
+        seen = _as_shown(number, wanted, number_format)
+        if seen is not None:
+            return seen
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=f"{number:.15g}"),))
     if wanted.kind == "connectors":
@@ -87,14 +91,24 @@ def _read_number(number: float, wanted: Expected, number_format: str) -> CellCon
     if wanted.kind == "polarisation" and number not in _POLARISATIONS:
         return CellContent(rest=f"{number:g}", notes=("not a number of polarisations",))
     unit = wanted.unit
-    if number_format and number_format != "General":
-        if "%" in number_format and '"' not in number_format:
-            return CellContent(quantities=(Quantity(value=number * 100, unit="%"),))
-        literal = _FORMAT_UNIT.search(number_format.split(";", maxsplit=1)[0])
-        unit = (unit_name(literal.group(1)) if literal else "") or unit
     if wanted.kind == "bands":
         unit = unit or "MHz"
     return CellContent(quantities=(Quantity(value=number, unit=unit),))
+
+
+def _as_shown(number: float, wanted: Expected, number_format: str) -> CellContent | None:
+    """A number with the sign, word or unit that its format shows; None where the format adds nothing."""
+    around = shown_around(number_format, negative=number < 0)
+    if around is None:
+        return None
+    content = _read_text(around.text(number), replace(wanted, decimal_comma=False))
+    if len(content.quantities) != 1 or content.status or (content.rest and around.scale < 1.0):
+        return None
+    value = content.quantities[0].value
+    if wanted.kind in ("polarisation", "text", "bands"):
+        return content
+    largest = value[1] if isinstance(value, tuple) else value
+    return content if isinstance(largest, float) and math.isclose(largest, number * around.scale) else None
 
 
 @functools.lru_cache(maxsize=16384)

@@ -58,9 +58,11 @@ def describe_fields(marks: Marks, table: Across) -> dict[int, Field]:
 
 def _describe(marks: Marks, table: Across, index: int) -> Field:
     stack = heading_stack(marks.grid, table.heading_rows, index, table.left)
-    label, column = compose(index, stack, marks.labels)
     letters = [c for c in stack if is_size_letter(c.text) and marks.is_heading(c)]
-    label = marks.headings[letters[-1].row, letters[-1].column] if letters else label
+    # the letter W over a width is no unit
+    label, column = compose(index, [c for c in stack if c not in letters], marks.labels)
+    if letters:
+        label, column.cells = marks.headings[letters[-1].row, letters[-1].column], stack
     if not label and column.role == "":
         texts = [c.text for c in cells_below(marks.grid, table, index)]
         label = label_by_values(column.heading, texts) or label
