@@ -11,6 +11,12 @@ from speccheck.kept import toml
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]\s*$")
 _ITEM_NUMBER = re.compile(r"^\s*(?:[(\[]?[a-h\d]{1,2}[)\]]|[-•*·▪–])\s*")
 _SPACES = re.compile(r"[\s\u00a0\u2007\u2009\u202f\u200b_]+")
+_LANGUAGES = re.compile(r"\s*[/|\n]\s*")
+_MOST_LANGUAGES = 3
+_TOLD_BY_ONE = frozenset({"parameter", "unit", "remark", "condition", "offered", "required", "compliance"})
+_ARRAY = r"(?:r|b|y|l|m|h|lb|mb|hb)[1-9]\d?"
+_ARRAYS = re.compile(rf"{_ARRAY}(?:\s*[/+&,-]\s*{_ARRAY})*")
+_NUMBER_OF_ARRAY = r"s?(?:[ -]?\d|[ -](?:[a-h]|[ivx]+|[a-z]{1,2}[1-9]\d?))\b.{0,20}"
 _PAGE = re.compile(
     r"^\W*(?:page|seite|pagina|strona|str\.|blatt|sheet|feuille|folio|pag?\.)\s*\d+(?:\s*(?:of|von|sur|de|di|z|van|/)\s*\d+)?\W*$"
 )
@@ -43,13 +49,42 @@ def _column_roles() -> dict[str, str]:
     return {word: role for role, words in reversed(_table()["column"].items()) for word in words}
 
 
+@lru_cache(maxsize=20_000)
 def column_role(text: str) -> str:
-    """What a column under this heading holds: ``unit``, ``offered``, ``remark`` …; empty when unknown."""
+    """What a column under this heading holds: ``unit``, ``offered``, ``remark`` …; empty when unknown.
+
+    The heading may say it in two languages, 'Parámetro / Parameter', or among other words, 'Guaranteed min'.
+    """
     if len(text) > 60:
         return ""
     folded = fold(text)
+    known = _column_roles().get(folded, "")
+    return known or _role_in_languages(folded) or _statistic_role(folded) or _role(folded)
+
+
+def _role(folded: str) -> str:
     roles = _column_roles()
     return roles.get(folded) or roles.get(_BRACKETED.sub("", folded).strip(" :"), "")
+
+
+def _role_in_languages(folded: str) -> str:
+    """The role that parts of a heading agree on; one of them may be a word that is not known."""
+    parts = [part for part in _LANGUAGES.split(folded) if part]
+    if not 2 <= len(parts) <= _MOST_LANGUAGES:
+        return ""
+    roles = [_role(part) for part in parts]
+    said = set(filter(None, roles))
+    role = said.pop() if len(said) == 1 else ""
+    return role if all(roles) or role in _TOLD_BY_ONE else ""
+
+
+def _statistic_role(folded: str) -> str:
+    """``minimum``, ``typical`` or ``maximum`` where all other words only confirm it: 'Value (min.)'."""
+    words = [word for word in re.split(r"[\s()\[\],;:/-]+", folded) if word]
+    confirming = _table()["statistic"]["confirming"]
+    roles = {_role(word) for word in words if word not in confirming}
+    role = roles.pop() if len(roles) == 1 else ""
+    return role if len(words) > 1 and role in ("minimum", "typical", "maximum") else ""
 
 
 _LEANINGS = (
@@ -139,18 +174,22 @@ def without_number(text: str) -> str:
     return _ITEM_NUMBER.sub("", text)
 
 
+@lru_cache(maxsize=20_000)
 def is_band_nickname(text: str) -> bool:
-    """Whether a text names a band without saying its frequencies, such as ``Low band`` or ``Sub-band 2``."""
+    """Whether a text names a band or array without saying its frequencies: ``Low band``, ``Array R1``."""
     folded = _BRACKETED.sub("", fold(text))
     if len(folded) > 40:
         return False
     words = _table()["band"]
-    if folded in words["nickname"]:
+    if folded in words["nickname"] or _ARRAYS.fullmatch(folded) or _colour_and_number(folded):
         return True
-    return bool(re.fullmatch(r"(?:r|b|y|l|m|h|lb|mb|hb)[1-9]\d?", folded)) or any(
-        re.fullmatch(re.escape(start) + r"s?(?:[ -]?\d|[ -](?:[a-h]|[ivx]+))\b.{0,20}", folded)
-        for start in words["starts"]
-    )
+    return any(re.fullmatch(re.escape(start) + _NUMBER_OF_ARRAY, folded) for start in words["starts"])
+
+
+def _colour_and_number(folded: str) -> bool:
+    """'Red 1', 'yellow array 2': arrays are told apart by the colour of their connectors."""
+    cut = re.fullmatch(r"([^\W\d]+)(?:\s+[^\W\d]+)?[ -]?\d{1,2}", folded)
+    return cut is not None and cut[1] in _table()["band"]["colours"]
 
 
 def answer(text: str) -> str:
