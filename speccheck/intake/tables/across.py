@@ -6,10 +6,10 @@ import re
 from dataclasses import dataclass, field, replace
 
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.across_bands import RowBand, band_of, band_of_title
+from speccheck.intake.tables.across_bands import RowBand, band_of
 from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
 from speccheck.intake.tables.across_whole import settle_whole
-from speccheck.intake.tables.bands import find_bands
+from speccheck.intake.tables.bands import band_of_title, find_bands
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.edges import band_between
 from speccheck.intake.tables.labels import Label
@@ -71,14 +71,17 @@ class AcrossReader:
         self._report_unknown()
 
     def _section_above(self) -> None:
-        """A band alone in a row just above the headings holds for all rows."""
+        """A band alone in a row just above the headings holds for all rows, if they tell of no other."""
+        guides = self._guides
+        if guides.of_bands or guides.overall or any(found.banded for found in self._fields.values()):
+            return
         top = self._table.heading_rows[0]
         for row in range(top - 1, max(0, top - 1 - _ABOVE), -1):
             cells = cells_of(self._marks, self._table, row)
             if len(cells) > 1 or any((row, c.column) in self._result.roles for c in cells):
                 return
-            if cells and (said := band_of_title(cells[0], self._names.is_title)):
-                self._section = said
+            if cells and (said := band_of_title(cells[0].text, self._names.is_title)):
+                self._section = RowBand(*said)
                 self._result.mark(cells[0], "heading")
                 return
 
@@ -112,8 +115,8 @@ class AcrossReader:
 
     def _group(self, row: int, cell: Cell) -> None:
         """A title over the rows that follow: their band, their panel, or words that only group them."""
-        said = band_of_title(cell, self._names.is_title)
-        self._section, self._title = said or RowBand(), None
+        said = band_of_title(cell.text, self._names.is_title)
+        self._section, self._title = RowBand(*said) if said else RowBand(), None
         self._at = _Row()
         if said is None and self._guides.named and cell.column == self._guides.named:
             self._start_panel(row, cell)

@@ -3,18 +3,15 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Callable
 from dataclasses import dataclass
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.bands import find_bands
 from speccheck.intake.tables.words import is_band_nickname
 from speccheck.records import Band
 
 _POINT = re.compile(r"\s*(\d{3,6}(?:[.,]\d+)?)\s*(?:MHz)?\s*", re.IGNORECASE)
-_SEVERAL = re.compile(r"\d\s*/\s*\d")
 _LOOKED_AT = 12
-_LONGEST_TITLE = 60
 
 
 @dataclass(frozen=True, slots=True)
@@ -49,18 +46,6 @@ def band_of(cell: Cell | None, nickname: Cell | None, unit: str) -> RowBand:
     if len(found.spans) > 1 and not found.names:
         return RowBand(None, name)
     return RowBand(found.hull, name if found.hull else name or " ".join(cell.text.split()))
-
-
-def band_of_title(cell: Cell, is_title: Callable[[str], bool]) -> RowBand | None:
-    """The band a title gives to the rows below it; None for a sentence and for the name of a panel."""
-    text = " ".join(cell.text.split())
-    if not isinstance(cell.raw, str) or len(text) > _LONGEST_TITLE or text.endswith((".", "!")):
-        return None
-    found = find_bands(text)
-    if is_band_label(text):
-        return RowBand(found.hull, "" if found.hull else text)
-    one = len(found.spans) == 1 and found.proved and not found.names and not _SEVERAL.search(text)
-    return RowBand(found.hull) if one and not is_title(found.rest) else None
 
 
 def holds_spans(cells: list[Cell], unit: str) -> bool:

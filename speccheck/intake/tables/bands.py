@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import re
+from collections.abc import Callable
 from dataclasses import dataclass
 from functools import lru_cache
 from itertools import pairwise
@@ -21,6 +22,8 @@ _RANGE = re.compile(
 _NAME = re.compile(r"(?<![\w-])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])(\d{1,3})(?![\w.-])")
 _GAP = 1.1
 """Neighbouring sub-bands leave no more than a duplex gap between them."""
+_LONGEST_TITLE = 60
+_SEVERAL = re.compile(r"\d\s*/\s*\d")
 _LOWEST_MHZ, _HIGHEST_MHZ = 60.0, 110_000.0
 
 
@@ -103,7 +106,9 @@ def _number(text: str, unit: str) -> float:
 
 _BAND_WORDS = re.compile(
     r"(?:(?:sub-?)?band|teilband|bande|banda|pasmo|range|frequency|frequenz\w*|fr[ée]quence|frecuencia|frequenza|"
-    r"uplink|downlink|ul|dl|tx|rx|nr|lte|gsm|umts|5g|4g|fdd|tdd|array|cluster|port|ports|[ryblmh]\d{1,2}|[lmh]b\d?|"
+    r"uplink|downlink|ul|dl|tx|rx|nr|lte|gsm|umts|5g|4g|fdd|tdd|arrays?|cluster|ports?|"
+    r"inputs?|[ryblmhpgow]\d{1,2}|[lmh]b\d?|"
+    r"tore?|eing[äa]nge?|anschl[üu]sse?|entr[ée]es?|puertos?|porte|portas?|porty?|poort(?:en)?|"
     r"low(?:er)?|mid(?:dle)?|high|upper|and|&|\d{1,2}|[a-h])$",
     re.IGNORECASE,
 )
@@ -115,5 +120,20 @@ def is_band_label(text: str) -> bool:
     found = find_bands(text)
     if not found.spans:
         return is_band_nickname(text)
-    words = re.sub(r"[\s()\[\],;:/+.–-]+", " ", found.rest).split()
+    words = re.sub(r"[\s()\[\],;:|/+.·•–—-]+", " ", found.rest).split()
     return all(_BAND_WORDS.match(word) for word in words) or is_band_nickname(" ".join(words))
+
+
+def band_of_title(text: str, is_title: Callable[[str], bool]) -> tuple[Band | None, str] | None:
+    """The band, or its nickname, that a title gives to the rows below it.
+
+    None for a sentence, for several bands, and where `is_title` finds a panel's name in the other words.
+    """
+    words = " ".join(text.split())
+    if len(words) > _LONGEST_TITLE or words.endswith((".", "!")):
+        return None
+    found = find_bands(words)
+    if is_band_label(words):
+        return found.hull, "" if found.hull else words
+    one = len(found.spans) == 1 and found.proved and not found.names and not _SEVERAL.search(words)
+    return (found.hull, "") if one and not is_title(found.rest) else None

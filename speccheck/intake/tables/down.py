@@ -6,7 +6,7 @@ from dataclasses import dataclass, field, replace
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
-from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
 from speccheck.intake.tables.claims import Claim, Context, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.down_answers import take_answers
@@ -146,8 +146,9 @@ class DownReader:
         """A label with nothing beside it: a group word, a band for the rows below, or a panel's title."""
         state = self._state
         state.label = None
-        if is_band_label(cell.text):
-            state.section_band, state.section_name = find_bands(cell.text).hull, cell.text
+        said = band_of_title(cell.text, self._names.is_title)
+        if said is not None:
+            state.section_band, state.section_name = said[0], cell.text
             self._result.mark(cell, "heading")
             if state.section_band:
                 self._panels.claim_band(self._panels.first, cell, state.section_band, "heading of rows below")
