@@ -53,6 +53,8 @@ pattern          gain_pattern_dbi(layout, element, freq_hz, theta_deg, phi_deg, 
 lobes            element_lobes(layout, element, freq_hz, tilt_deg=0, scan_deg=0) -> Lobes,
                  subarray_lobes(...), highest_lobe(...) anywhere in front. Lobes: level_db against the beam
                  (nan: none), theta_deg, phi_deg, visible_count, centre_visible
+reciprocal       element_points(layout, wavelength_m), subarray_points(layout, wavelength_m): where, in
+                 direction cosines around the beam, those lobes have their centres
 taper            taylor(count, sidelobe_db, nbar), chebyshev(count, sidelobe_db),
                  cosine_on_pedestal(count, pedestal), efficiency_db(weights), beamwidth_ratio(weights),
                  pedestal_for_ratio(count, ratio, grouped=1), sidelobe_db(weights), line_pattern(weights),

@@ -8,11 +8,13 @@ import numpy as np
 
 from speccheck.physics.decibels import Floats
 from speccheck.physics.field import Excitation, squared
-from speccheck.physics.layout import Complex, lines
+from speccheck.physics.layout import Complex
 
 _STEPS = 30
 _SETTLED_RAD = 4e-3
 """Newton's method squares the error: a last step of 4e-3 rad leaves about 5e-5 rad, 0.003 deg."""
+_FLAT_RISE = 0.1
+"""Beside a null Newton's method only doubles the distance: a short step that rises more is not the last."""
 _FLAT = 1e-6
 
 
@@ -53,7 +55,8 @@ def find_beam(states: Excitation) -> Beam:
         step = np.array([d_theta, d_phi])
         step = np.minimum(np.maximum(step, -reach), reach)
         theta, phi = theta + step[0], phi + step[1]
-        if np.abs(step).max() < _SETTLED_RAD:
+        rise = np.abs(step * (g_t, g_p)).max()
+        if rise < _FLAT_RISE and np.abs(step).max() < _SETTLED_RAD:
             break
     row, column = _turned(states, np.sin(theta) * np.sin(phi), np.cos(theta))
     return Beam(theta, phi, states.element.power(theta, phi), squared(row.sum(1)), squared(column.sum(1)))
@@ -62,7 +65,7 @@ def find_beam(states: Excitation) -> Beam:
 def _pulled(states: Excitation) -> tuple[Floats, Floats]:
     """First guess: each line a parabola by the spread of its weights, pulled in by the element alone."""
     angle = np.array([states.theta_rad - np.pi / 2, states.phi_rad])
-    stiff = np.array([[2 * line.spread_m2] for line in lines(states.layout)]) * states.wavenumbers**2
+    stiff = np.array([[2 * line.spread_m2] for line in states.lines]) * states.wavenumbers**2
     sine = np.sin(angle)
     for _ in range(2):
         now, cosine = np.sin(angle), np.cos(angle)
@@ -80,7 +83,7 @@ def _pulled(states: Excitation) -> tuple[Floats, Floats]:
 def _reach(states: Excitation) -> Floats:
     """Longest step [rad] by theta and phi: about a third of a null width, never more than a sixth."""
     k = float(states.distinct.max())
-    extents = (float(line.positions[-1] - line.positions[0]) for line in lines(states.layout))
+    extents = (float(line.positions[-1] - line.positions[0]) for line in states.lines)
     return np.array([[min(2.0 / (k * (extent + 1e-9)), 0.17)] for extent in extents])
 
 
@@ -110,7 +113,7 @@ def _factor_derivatives(
     states: Excitation, u_y: Floats, u_z: Floats
 ) -> tuple[Floats, Floats, Floats, Floats, Floats | None]:
     """Derivatives of the log power of the array factor: by z, y, zz, yy, zy (None: rectangular lattice)."""
-    rows, columns = lines(states.layout)
+    rows, columns = states.lines
     k = states.wavenumbers
     turned, column = _turned(states, u_y, u_z)
     (y, z), (yy, zz) = _log_derivatives(np.array([column @ columns.moments, turned @ rows.moments]))
@@ -126,7 +129,7 @@ def _factor_derivatives(
 
 def _turned(states: Excitation, u_y: Floats, u_z: Floats) -> tuple[Complex, Complex]:
     """Contribution of each row (S, M) and of each column (S, N) in one direction per state."""
-    rows, columns = lines(states.layout)
+    rows, columns = states.lines
     across = (states.wavenumbers * u_y)[:, None]
     path = (states.wavenumbers * u_z)[:, None] * rows.moments[:, 1]
     if states.row_shifts_m is not None:

@@ -131,8 +131,10 @@ class SectorElement:
             return self.integrated_kernel(wavenumbers, y_m, z_m)
         y_span, z_span = (_SPAN_STEP * float(np.ceil(phase / _SPAN_STEP)) for phase in (y_phase, z_phase))
         series = _kernel_series(self, y_span, z_span)
-        over_y = even_polynomials(wavenumbers[:, None] * (y_m / y_span), series.shape[0])
-        over_z = even_polynomials(wavenumbers[:, None] * (z_m / z_span), series.shape[1])
+        phases = np.concatenate([y_m / y_span, z_m / z_span]) * wavenumbers[:, None]
+        over = even_polynomials(phases, max(series.shape))
+        over_y = over[:, : len(y_m), : series.shape[0]]
+        over_z = over[:, len(y_m) :, : series.shape[1]]
         return np.asarray(over_y @ series @ over_z.transpose(0, 2, 1))
 
     def integrated_kernel(self, wavenumbers: Floats, y_m: Floats, z_m: Floats) -> Floats:

@@ -20,15 +20,19 @@ from speccheck.physics.layout import (
     wavenumber,
 )
 
+Singles = NDArray[np.float32]
+
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Excitation:
     """A panel driven in S states: wavenumbers [rad/m], steering, weights of rows (S, M), columns (S, N).
 
-    `distinct` holds the F different wavenumbers, `which` the one of each state.
+    `lines` are the rows and columns of the layout; `distinct` holds the F different wavenumbers, `which` the
+    one of each state.
     """
 
     layout: ArrayLayout
+    lines: tuple[Line, Line]
     element: Element
     wavenumbers: Floats
     theta_rad: Floats
@@ -42,11 +46,12 @@ class Excitation:
     steer_z: Floats
 
     @property
-    def row_groups(self) -> tuple[tuple[slice, float], ...]:
-        """Rows that share a sideways shift, and that shift [m]."""
-        if self.row_shifts_m is None or len(self.row_shifts_m) < 2:
+    def row_groups(self) -> tuple[tuple[slice | NDArray[np.intp], float], ...]:
+        """Rows that share a sideways shift, and that shift [m]; each panel group begins with an unshifted row."""
+        if self.row_shifts_m is None:
             return ((slice(None), 0.0),)
-        return ((slice(0, None, 2), 0.0), (slice(1, None, 2), float(self.row_shifts_m[1])))
+        shifts = dict.fromkeys(self.row_shifts_m.tolist())
+        return tuple((np.flatnonzero(self.row_shifts_m == shift), shift) for shift in shifts)
 
 
 def excite(
@@ -75,7 +80,19 @@ def excite(
     places = {value: at for at, value in enumerate(dict.fromkeys(k.tolist()))}
     distinct, which = np.array(list(places)), np.array([places[value] for value in k.tolist()])
     return Excitation(
-        layout, element, k, np.pi / 2 + tilt, phi, rows, columns, shifts, distinct, which, u_y, -np.sin(tilt)
+        layout,
+        lines(layout),
+        element,
+        k,
+        np.pi / 2 + tilt,
+        phi,
+        rows,
+        columns,
+        shifts,
+        distinct,
+        which,
+        u_y,
+        -np.sin(tilt),
     )
 
 
@@ -109,7 +126,7 @@ def row_factor(states: Excitation, u_y: Floats, u_z: Floats) -> Complex:
     Source: array factor, 3GPP TR 37.840 clause 5.4.4.
     """
     k = states.wavenumbers[:, None]
-    table = phasors(lines(states.layout)[0], k * u_z)
+    table = phasors(states.lines[0], k * u_z)
     total: Complex = np.zeros(u_z.shape, complex)
     for part, shift in states.row_groups:
         factor = (states.rows[:, None, part] @ table[:, part])[:, 0]
@@ -125,31 +142,32 @@ def column_factor(states: Excitation, u_y: Floats) -> Complex:
     Returns [1]: complex factor, shape (S, P).
     Source: array factor, 3GPP TR 37.840 clause 5.4.4.
     """
-    table = phasors(lines(states.layout)[1], states.wavenumbers[:, None] * u_y)
+    table = phasors(states.lines[1], states.wavenumbers[:, None] * u_y)
     return np.asarray((states.columns[:, None] @ table)[:, 0])
 
 
-def line_power(line: Line, scale: Floats, profile: Floats, steered: Floats, fixed: Floats | float) -> Floats:
+def line_power(line: Line, wavenumbers: Floats, cosine: Singles, steered: Floats, fixed: float) -> Singles:
     """Power of a line that is a product of uniform lines: a cosine series in the phase between neighbours.
 
     line [Line]: with factors.
-    scale [rad/m]: wavenumber times what of the direction cosine is the same all along a cut, shape (S, 1).
-    profile [1]: the rest of the direction cosine, shape (P,).
-    steered [rad/m]: wavenumber times the direction cosine of the steering, shape (S, 1).
-    fixed [rad/m]: the same for the fixed direction of the sub-arrays, shape (S, 1).
+    wavenumbers [rad/m]: shape (S,).
+    cosine [1]: direction cosine along the line, single precision, shape (S, P) or (P,).
+    steered [1]: direction cosine of the steering, shape (S,).
+    fixed [1]: the same for the fixed direction of the sub-arrays.
     Returns [1]: squared magnitude of the line factor, shape (S, P).
     Source: array polynomial, C. A. Balanis, "Antenna Theory", ch. 6; summed by Clenshaw's recurrence.
     """
-    power: Floats | None = None
+    power: Singles | None = None
     for factor in line.factors:
-        phase = (scale * factor.pitch_m) * profile
-        phase -= factor.pitch_m * (steered if factor.steered else fixed)
+        step = wavenumbers * factor.pitch_m
+        phase = step.astype(np.float32)[:, None] * cosine
+        phase -= (step * (steered if factor.steered else fixed)).astype(np.float32)[:, None]
         one = _series_power(np.cos(phase, out=phase), factor.amplitudes)
         power = one if power is None else np.multiply(power, one, out=power)
-    return np.ones((len(scale), len(profile))) if power is None else power
+    return np.ones((len(wavenumbers), cosine.shape[-1]), np.float32) if power is None else power
 
 
-def _series_power(cosine: Floats, amplitudes: tuple[float, ...]) -> Floats:
+def _series_power(cosine: Singles, amplitudes: tuple[float, ...]) -> Singles:
     """|sum a_n e^(j n x)|^2 from cos x.
 
     A symmetric line is real about its middle: cos(x/2) times a series of Chebyshev polynomials of the third
@@ -167,7 +185,7 @@ def _series_power(cosine: Floats, amplitudes: tuple[float, ...]) -> Floats:
     if len(terms) == 1:
         terms.append(0.0)
     twice = cosine + cosine
-    before: Floats | float = terms[-1]
+    before: Singles | float = terms[-1]
     last = twice * terms[-1]
     last += terms[-2]
     for term in terms[-3::-1]:

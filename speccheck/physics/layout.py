@@ -178,51 +178,57 @@ def row_shifts(layout: ArrayLayout) -> Floats | None:
 
 def _line(inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...]) -> Line:
     (count, pitch, grouped), (groups, group_pitch) = inner, outer
-    positions = _centred(count) * pitch
+    if count == 1 and groups > 1:
+        pitch = group_pitch
+    if groups == 1 or abs(group_pitch - count * pitch) < 1e-9 * group_pitch:
+        unit = _unit_line((groups * count, grouped), (1, 0.0), taper)
+    else:
+        unit = _unit_line((count, grouped), (groups, group_pitch / pitch), taper)
+    positions = unit.positions * pitch
+    return Line(
+        positions,
+        unit.centres * pitch if grouped > 1 else positions,
+        unit.amplitudes,
+        unit.pitch_m * pitch,
+        unit.spread_m2 * pitch * pitch,
+        unit.moments * np.array([1.0, pitch, pitch * pitch]),
+        tuple(Factor(factor.pitch_m * pitch, factor.amplitudes, factor.steered) for factor in unit.factors),
+    )
+
+
+@lru_cache(maxsize=256)
+def _unit_line(inner: tuple[int, int], outer: tuple[int, float], taper: tuple[float, ...]) -> Line:
+    """A line of pitch one: elements and those that share a port, groups and their pitch."""
+    (count, grouped), (groups, group_pitch) = inner, outer
+    positions = floats(np.arange(count) - (count - 1) / 2)
     if groups > 1:
         middles = (np.arange(groups) - (groups - 1) / 2) * group_pitch
         positions = floats(middles[:, None] + positions).ravel()
-    uniform = groups == 1 or abs(group_pitch - count * pitch) < 1e-9 * group_pitch
-    if not uniform:
-        pitch = 0.0
-    elif count == 1:
-        pitch = group_pitch
-    centres = positions
-    if grouped > 1:
-        centres = np.repeat(positions.reshape(-1, grouped).mean(1), grouped)
+    centres = np.repeat(positions.reshape(-1, grouped).mean(1), grouped)
     amplitudes = np.ones(len(positions))
     if taper:
         amplitudes = np.repeat(floats(taper), len(positions) // len(taper))
-    moments = np.ones((len(positions), 3), complex)
-    np.multiply(positions, 1j, out=moments[:, 1])
-    np.multiply(moments[:, 1], moments[:, 1], out=moments[:, 2])
-    total, first, second = (amplitudes @ moments).tolist()
-    spread = float(((first * first - total * second) / (total * total)).real)
-    return Line(positions, centres, amplitudes, pitch, spread, moments, _factors(inner, outer, taper, pitch))
-
-
-@lru_cache(maxsize=128)
-def _centred(count: int) -> Floats:
-    return floats(np.arange(count) - (count - 1) / 2)
+    moments = np.stack([np.ones(len(positions)), 1j * positions, -positions * positions], axis=1)
+    mean, square = np.average(np.stack([positions, positions**2]), axis=1, weights=amplitudes).tolist()
+    pitch = 1.0 if groups == 1 else 0.0
+    factors = _factors(count, grouped, outer, taper)
+    return Line(positions, centres, amplitudes, pitch, square - mean * mean, moments, factors)
 
 
 def _factors(
-    inner: tuple[int, float, int], outer: tuple[int, float], taper: tuple[float, ...], pitch: float
+    count: int, grouped: int, outer: tuple[int, float], taper: tuple[float, ...]
 ) -> tuple[Factor, ...]:
-    """Ports, elements inside a sub-array, and panel groups as factors of one line."""
-    (count, _, grouped), (groups, group_pitch) = inner, outer
-    if pitch == 0.0 and groups * count > 1:  # groups apart: a factor of their own, unless a taper runs across
+    """Ports, elements inside a sub-array, and panel groups as factors of a line of pitch one."""
+    groups, group_pitch = outer
+    if groups > 1:  # a factor of their own, unless a taper runs across
         if taper:
             return ()
-        inside = _factors(inner, (1, 0.0), (), inner[1])
-        return (*inside, Factor(group_pitch, (1.0,) * groups, True))
-    ports = groups * count // grouped
+        return *_factors(count, grouped, (1, 0.0), ()), Factor(group_pitch, (1.0,) * groups, True)
+    ports = count // grouped
     if len(taper) not in (0, ports):
         return ()
-    of_ports = Factor(grouped * pitch, taper or (1.0,) * ports, True)
-    if grouped == 1:
-        return (of_ports,)
-    return of_ports, Factor(pitch, (1.0,) * grouped, False)
+    of_ports = Factor(float(grouped), taper or (1.0,) * ports, True)
+    return (of_ports,) if grouped == 1 else (of_ports, Factor(1.0, (1.0,) * grouped, False))
 
 
 def wavenumber(freq_hz: Floats) -> Floats:

@@ -11,17 +11,24 @@ from collections.abc import Callable
 from dataclasses import dataclass
 
 import numpy as np
-from numpy.typing import ArrayLike
+from numpy.typing import ArrayLike, NDArray
 
 from speccheck.physics.beam import find_beam
-from speccheck.physics.cuts import front_angles
+from speccheck.physics.cuts import front_grid
 from speccheck.physics.decibels import Floats, db, floats, wavelength_m
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation, excite, intensity
-from speccheck.physics.layout import ArrayLayout, Lattice
+from speccheck.physics.layout import ArrayLayout
+from speccheck.physics.reciprocal import element_points, subarray_points
 
-_ACROSS = 13
-"""Samples [1] across the search box of one lobe, each way."""
+_STEPS = 12
+"""Steps [1] across the search box of one lobe, each way and for each panel group."""
+_REFINED = 8
+"""Coarse maxima [1] of all boxes that are looked at finely."""
+_CLIMB = 60
+"""Most moves [1] on the way to the top of a lobe."""
+_RIVAL = 0.7
+"""A maximum of samples six to a null width lies within 0.6 dB of its top: lower ones are no rivals."""
 
 
 @dataclass(frozen=True, eq=False, slots=True)
@@ -73,7 +80,7 @@ def element_lobes(
     >>> float(lobe.level_db.round(2)), float(lobe.phi_deg.round())
     (-2.65, -60.0)
     """
-    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), _element_points)
+    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), element_points)
 
 
 def subarray_lobes(
@@ -99,7 +106,7 @@ def subarray_lobes(
     >>> float(lobe.level_db.round(1)), float(lobe.theta_deg.round(1))
     (-7.9, 74.3)
     """
-    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), _subarray_points)
+    return _all_states(layout, element, (freq_hz, tilt_deg, scan_deg), subarray_points)
 
 
 def highest_lobe(
@@ -153,40 +160,8 @@ def _all_states(
     )
 
 
-def _element_points(layout: ArrayLayout, wavelength: float) -> Floats:
-    """Reciprocal points (u_y, u_z) of the element lattice around the beam, itself left out."""
-    y_step = wavelength / layout.horizontal_pitch_m if layout.columns > 1 else np.inf
-    z_step = wavelength / layout.vertical_pitch_m if layout.rows > 1 else np.inf
-    y, z = _orders(y_step, z_step)
-    shear = y * z_step / 2 if layout.lattice is Lattice.TRIANGULAR and layout.rows > 1 else 0.0
-    points = floats(np.stack([y * _finite(y_step), z * _finite(z_step) - shear], 1))
-    return floats(points[(y != 0) | (z != 0)])
-
-
-def _subarray_points(layout: ArrayLayout, wavelength: float) -> Floats:
-    """Reciprocal points of the lattice of two or more sub-arrays, points of the element lattice left out."""
-    across, along = layout.subarray_columns, layout.subarray_rows
-    y_pitch, z_pitch = across * layout.horizontal_pitch_m, along * layout.vertical_pitch_m
-    y_step = wavelength / y_pitch if layout.columns > across else np.inf
-    z_step = wavelength / z_pitch if layout.rows > along else np.inf
-    y, z = _orders(y_step, z_step)
-    points = floats(np.stack([y * _finite(y_step), z * _finite(z_step)], 1))
-    return floats(points[(y % across != 0) | (z % along != 0)])
-
-
-def _orders(y_step: float, z_step: float) -> tuple[Floats, Floats]:
-    """All orders that can come within a null width of visible space."""
-    most = [0 if not np.isfinite(step) else int(np.ceil(3 / step)) + 1 for step in (y_step, z_step)]
-    y, z = np.meshgrid(*(np.arange(-count, count + 1.0) for count in most), indexing="ij")
-    return y.ravel(), z.ravel()
-
-
-def _finite(step: float) -> float:
-    return step if np.isfinite(step) else 0.0
-
-
 def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats) -> _Lobe:
-    """Highest level within a null width of any of the points: all boxes coarsely, the best three finely."""
+    """Highest level within a null width of any of the points: all boxes coarsely, the best maxima finely."""
     layout = state.layout
     tilt, phi = state.theta_rad[0] - np.pi / 2, state.phi_rad[0]
     centres = np.array([np.cos(tilt) * np.sin(phi), -np.sin(tilt)]) + points
@@ -198,40 +173,46 @@ def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats
     )
     visible = int((np.hypot(*centres.T) <= 1 + 1e-9).sum())
     centres = centres[(np.abs(centres) < 1 + half_width).all(1)]
+    offsets = _box(half_width, (layout.panel_columns, layout.panel_rows))
     if len(centres) == 0:
         return _Lobe(visible_count=visible)
-    offsets = _box(half_width)
-    power = _seen_power(state, centres[:, None] + offsets)
-    best: tuple[float, Floats, Floats] | None = None
-    for at in np.argsort(power.max(1))[:-4:-1]:
-        found = _refined(state, centres[at], half_width, offsets[power[at].argmax()])
-        if found is not None and (best is None or found[0] > best[0]):
-            best = (*found, centres[at])
-    if best is None or best[0] <= 0:
+    power = _seen_power(state, centres[:, None, None], offsets, half_width)
+    tops = np.argwhere(_local_maxima(power) & (power > 0))
+    box, y, z = tops[np.argsort(-power[tuple(tops.T)])[:_REFINED]].T
+    if len(box) == 0:
         return _Lobe(visible_count=visible)
-    level, (u_y, u_z), centre = best
-    theta = np.arccos(u_z)
-    phi = np.arcsin(np.clip(u_y / max(np.sin(theta), 1e-12), -1, 1))
+    heights, places = _refined(state, centres[box], half_width, offsets[y, z])
+    best = heights.argmax()
+    level, where, around = heights[best], places[best], centres[box[best]]
+    theta = np.arccos(where[1])
+    phi = np.arcsin(np.clip(where[0] / max(np.sin(theta), 1e-12), -1, 1))
     return _Lobe(
         float(db(level / beam)),
         float(np.degrees(theta)),
         float(np.degrees(phi)),
         visible,
-        bool(np.hypot(*centre) <= 1 + 1e-9),
+        bool(np.hypot(*around) <= 1 + 1e-9),
     )
 
 
-def _box(half_width: Floats) -> Floats:
-    """Offsets (K, 2) over a box, one line of them where the array has no width that way."""
-    steps = np.linspace(-1, 1, _ACROSS)
-    y, z = (width * steps if width > 0 else np.zeros(1) for width in half_width)
-    return floats(np.stack(np.meshgrid(y, z, indexing="ij"), -1).reshape(-1, 2))
+def _box(half_width: Floats, groups: tuple[int, int] = (1, 1)) -> Floats:
+    """Offsets (Y, Z, 2) over a box, one line of them where the array has no width that way."""
+    y, z = (
+        width * np.linspace(-1, 1, _STEPS * count + 1) if width > 0 else np.zeros(1)
+        for width, count in zip(half_width, groups, strict=True)
+    )
+    return floats(np.stack(np.meshgrid(y, z, indexing="ij"), -1))
 
 
-def _seen_power(state: Excitation, u: Floats) -> Floats:
-    """Intensity at direction cosines (..., 2); -1 outside visible space."""
-    power = np.full(u.shape[:-1], -1.0)
-    seen = u[..., 0] ** 2 + u[..., 1] ** 2 <= 1 - 1e-9
+def _seen_power(state: Excitation, centres: Floats, offsets: Floats, half_width: Floats) -> Floats:
+    """Intensity at offsets (..., 2) in the boxes of lattice points; -1 where that is no visible direction.
+
+    What lies beyond visible space counts on its rim, where the flank of a hidden lobe is highest.
+    """
+    u = centres + offsets
+    u = u / np.maximum(np.hypot(u[..., 0], u[..., 1]) * (1 + 1e-9), 1.0)[..., None]
+    seen = (np.abs(u - centres) <= half_width + 1e-12).all(-1)
+    power = np.full(seen.shape, -1.0)
     u_y, u_z = u[seen].T
     theta = np.arccos(u_z)
     phi = np.arcsin(np.clip(u_y / np.sin(theta), -1, 1))
@@ -241,46 +222,70 @@ def _seen_power(state: Excitation, u: Floats) -> Floats:
 
 
 def _refined(
-    state: Excitation, centre: Floats, half_width: Floats, offset: Floats
-) -> tuple[float, Floats] | None:
-    """Highest level around an offset in the box of a lattice point, by two finer grids; None: not seen."""
-    level = -1.0
+    state: Excitation, centres: Floats, half_width: Floats, offsets: Floats
+) -> tuple[Floats, Floats]:
+    """Highest levels (C,) around offsets in the boxes of lattice points, by two finer grids, and where."""
+    each = np.arange(len(centres))
+    levels = np.zeros(len(centres))
     for finer in (1, 2):
-        near = offset + _box(half_width * (2 / (_ACROSS - 1)) ** finer)
-        near = near[(np.abs(near) <= half_width + 1e-12).all(1)]
-        power = _seen_power(state, centre + near)
-        level, offset = float(power.max()), near[power.argmax()]
-    return (level, centre + offset) if level >= 0 else None
+        near = offsets[:, None] + _box(half_width * (2 / _STEPS) ** finer).reshape(-1, 2)
+        near = np.clip(near, -half_width, half_width)
+        power = _seen_power(state, centres[:, None], near, half_width)
+        highest = power.argmax(1)
+        levels, offsets = power[each, highest], near[each, highest]
+    u = centres + offsets
+    return levels, u / np.maximum(np.hypot(u[:, :1], u[:, 1:]) * (1 + 1e-9), 1.0)
 
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
-    """Highest local maximum over the front outside the beam's own."""
-    phi = front_angles(state.layout, state.wavenumbers)
+    """Highest local maximum over the front that is not the beam: rivals are climbed to their tops."""
+    phi = front_grid(state.layout, state.wavenumbers).angle_rad
     theta = np.pi / 2 + phi[1:-1]
     mesh = np.meshgrid(theta, phi, indexing="ij")
     power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)
-    padded = np.pad(power, 1, constant_values=-1.0)
-    rows, columns = power.shape
-    higher = np.ones(power.shape, bool)
-    for down in (0, 1, 2):
-        for right in (0, 1, 2):
-            if (down, right) != (1, 1):
-                higher &= power >= padded[down : down + rows, right : right + columns] * (1 + 1e-9)
-    steps = theta[1] - theta[0], phi[1] - phi[0]
-    own = (np.abs(mesh[0] - beam_rad[0]) <= 1.5 * steps[0]) & (
-        np.abs(mesh[1] - beam_rad[1]) <= 1.5 * steps[1]
-    )
-    lobes = higher & ~own & (power > 1e-9 * beam)
-    if not lobes.any():
+    maxima = np.argwhere(_local_maxima(power) & (power > 1e-9 * beam))
+    levels = power[tuple(maxima.T)]
+    steps = np.array([theta[1] - theta[0], phi[1] - phi[0]])
+    best, level = np.full(2, np.nan), 0.0
+    others = len(maxima)
+    for at in np.argsort(-levels):
+        if levels[at] < _RIVAL * level:
+            break
+        top, height = _climbed(state, np.array([theta[maxima[at, 0]], phi[maxima[at, 1]]]), steps)
+        if (np.abs(top - beam_rad) < steps / 4).all():
+            others -= 1
+        elif height > level:
+            best, level = top, height
+    if level == 0:
         return _Lobe()
-    at = np.unravel_index(np.where(lobes, power, -1.0).argmax(), power.shape)
-    level, where = float(power[at]), (float(mesh[0][at]), float(mesh[1][at]))
-    for finer in (1.0, 0.2):
-        offsets = np.linspace(-finer, finer, _ACROSS)
-        near = np.meshgrid(where[0] + steps[0] * offsets, where[1] + steps[1] * offsets, indexing="ij")
-        near_phi = np.clip(near[1].reshape(1, -1), -np.pi / 2, np.pi / 2)
-        values = intensity(state, near[0].reshape(1, -1), near_phi)[0]
-        best = int(values.argmax())
-        level, where = float(values[best]), (float(near[0].ravel()[best]), float(near_phi[0, best]))
-    degrees = np.degrees(where)
-    return _Lobe(float(db(level / beam)), float(degrees[0]), float(degrees[1]), int(lobes.sum()), True)
+    theta_deg, phi_deg = np.degrees(best).tolist()
+    return _Lobe(float(db(level / beam)), theta_deg, phi_deg, others, True)
+
+
+def _local_maxima(power: Floats) -> NDArray[np.bool_]:
+    """Which samples of grids (..., Y, Z) are no lower than their neighbours; edges count as falling off."""
+    margins = [(0, 0)] * (power.ndim - 2) + [(1, 1)] * 2
+    padded = np.pad(power, margins, constant_values=-1.0) * (1 + 1e-9)
+    rows, columns = power.shape[-2:]
+    highest = np.ones(power.shape, bool)
+    for down in range(3) if rows > 1 else (1,):
+        for right in range(3) if columns > 1 else (1,):
+            if (down, right) != (1, 1):
+                highest &= power >= padded[..., down : down + rows, right : right + columns]
+    return highest
+
+
+def _climbed(state: Excitation, where: Floats, steps: Floats) -> tuple[Floats, float]:
+    """The local maximum uphill of a direction (theta, phi): best of a grid around it, ever finer."""
+    around = np.stack(np.meshgrid(*(np.linspace(-1, 1, 5),) * 2, indexing="ij"), -1).reshape(-1, 2)
+    span, height = steps / 3, 0.0  # less than half a step: never over the null beside it
+    for _ in range(_CLIMB):
+        near = np.clip(where + span * around, [1e-6, -np.pi / 2], [np.pi - 1e-6, np.pi / 2])
+        values = intensity(state, near[None, :, 0], near[None, :, 1])[0]
+        highest = values.argmax()
+        if np.abs(around[highest]).max() < 1:
+            span = span / 2
+        where, height = near[highest], float(values[highest])
+        if span[0] < steps[0] / 64:
+            break
+    return where, height

@@ -14,7 +14,7 @@ from numpy.typing import NDArray
 from speccheck.physics.decibels import Floats
 from speccheck.physics.element import Element
 from speccheck.physics.field import Excitation
-from speccheck.physics.layout import Complex, Line, lines
+from speccheck.physics.layout import Complex, Line
 
 
 def radiated_power(states: Excitation) -> Floats:
@@ -26,17 +26,16 @@ def radiated_power(states: Excitation) -> Floats:
     """
     if states.row_shifts_m is not None:
         return _staggered_power(states, states.row_shifts_m)
-    rows, columns = lines(states.layout)
-    (y_lags, y_pairs), (z_lags, z_pairs) = _folded(columns), _folded(rows)
+    rows, columns = states.lines
+    y_lags, over_y = _folded(columns, states.columns, states.wavenumbers * states.steer_y)
+    z_lags, over_z = _folded(rows, states.rows, states.wavenumbers * states.steer_z)
     kernel = _kernels(states, y_lags, z_lags)
-    over_y = _correlation(states.columns).real @ y_pairs
-    over_z = _correlation(states.rows).real @ z_pairs
     return np.asarray(((over_y[:, None] @ kernel)[:, 0] * over_z).sum(1))
 
 
 def _staggered_power(states: Excitation, shifts: Floats) -> Floats:
     """Pairs of rows with equal shift, and twice the real part of the pairs shifted against unshifted rows."""
-    rows, columns = lines(states.layout)
+    rows, columns = states.lines
     every = np.ones((len(columns.positions),) * 2, bool)
     y_lags, y_pairs = _sum_over(_differences(columns), every)
     over_y, pairs_z = _correlation(states.columns) @ y_pairs, _correlation(states.rows)
@@ -68,18 +67,25 @@ def _correlation(weights: Complex) -> Complex:
     return pairs.reshape(len(weights), -1)
 
 
-def _folded(line: Line) -> tuple[Floats, Floats]:
-    """Distinct absolute lags [m] of a line and the matrix that sums pairs over them."""
-    count = len(line.positions)
-    if line.pitch_m or count == 1:
-        return np.arange(float(count)) * line.pitch_m, _uniform_pairs(count)
-    return _sum_over(np.abs(_differences(line)), np.ones((count, count), bool))
+def _folded(line: Line, weights: Complex, steered: Floats) -> tuple[Floats, Floats]:
+    """Distinct absolute lags [m] of a line, and the sums over its pairs at each, shape (S, lags).
+
+    steered [rad/m]: wavenumber times the direction cosine of the steering, shape (S,). On a line that is
+    steered throughout all pairs at one lag have the same phase.
+    """
+    if len(line.factors) == 1 and line.factors[0].steered:
+        lags = line.factors[0].pitch_m * np.arange(float(len(line.positions)))
+        return lags, _autocorrelation(line.factors[0].amplitudes) * np.cos(steered[:, None] * lags)
+    lags, pairs = _sum_over(np.abs(_differences(line)), np.ones((len(line.positions),) * 2, bool))
+    return lags, _correlation(weights).real @ pairs
 
 
 @lru_cache(maxsize=64)
-def _uniform_pairs(count: int) -> Floats:
-    steps = np.abs(np.subtract.outer(np.arange(count), np.arange(count))).ravel()
-    return np.eye(count)[steps]
+def _autocorrelation(amplitudes: tuple[float, ...]) -> Floats:
+    """Sums of products of amplitudes at each lag, both signs of it together."""
+    sums = np.correlate(amplitudes, amplitudes, "full")[len(amplitudes) - 1 :]
+    sums[1:] *= 2
+    return sums
 
 
 def _differences(line: Line) -> Floats:

@@ -3,23 +3,21 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from functools import lru_cache
 
 import numpy as np
 from numpy.typing import NDArray
 
 from speccheck.physics.cuts import angle_at
 from speccheck.physics.decibels import Floats
+from speccheck.physics.field import Singles
 
 Indices = NDArray[np.intp]
 Flags = NDArray[np.bool_]
-Places = NDArray[np.int16]
-Singles = NDArray[np.float32]
 
-
-_TWO, _FOUR, _FIVE = (np.arange(*span)[:, None] for span in ((0, 2), (-1, 3), (-2, 3)))
-_CUBIC = np.linalg.inv(np.vander(_FOUR[:, 0], increasing=True))
-_QUARTIC = np.linalg.inv(np.vander(_FIVE[:, 0], increasing=True))
-"""From samples around a point to the coefficients of the polynomial through them."""
+_TWO, _THREE, _SEVEN = (np.arange(*span)[:, None] for span in ((0, 2), (-1, 2), (-3, 4)))
+_SEXTIC = np.linalg.inv(np.vander(_SEVEN[:, 0], increasing=True))
+"""From seven samples around a point to the coefficients of the polynomial through them."""
 
 
 @dataclass(frozen=True, eq=False, slots=True)
@@ -36,98 +34,112 @@ class CutFigures:
     highest_rad: Floats
 
 
-def read_cuts(level: Floats, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
+def read_cuts(level: Singles, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
     """Half-power width and lobes of cuts.
 
-    A lobe is what follows the first minimum beside the beam; the highest one includes grating and
-    sub-array lobes and the value at the end of the cut.
+    Every maximum of a cut and its crossings of half power are found on the samples and refined together.
+    The highest lobe includes grating and sub-array lobes and a rise towards the end of the cut.
     level [1]: power against the beam, shape (C, P).
-    angle_rad [rad]: the angles of `cuts.front_angles`, shape (P,).
+    angle_rad [rad]: the angles of `cuts.front_grid`, shape (P,).
     peak_rad [rad]: angle of the beam, shape (C,).
     Returns [CutFigures]: width [rad], lobes [dB], angle of the highest lobe [rad].
     Source: half power at -3.0103 dB of the beam; side lobes as in IEEE Std 145.
     """
     cuts, count = level.shape
-    index = np.arange(count, dtype=np.int16)
-    at_peak = np.rint(np.interp(peak_rad, angle_rad, index)).astype(np.int16)
-    # what lies before the beam lies after it on the cut read backwards
-    rays = np.concatenate([level, level[:, ::-1]])
-    beyond = index > np.concatenate([at_peak, count - 1 - at_peak])[:, None]
-    # single precision hides the rounding of a flat cut and halves the work of comparing
-    coarse = rays.astype(np.float32)
-    edges = _half_power(rays, coarse, beyond)
-    minimum, lobe, found = _lobes_beside(coarse, beyond, index)
-    outside = (index >= minimum[:cuts, None]) | (index < count - minimum[cuts:, None])
-    best = (coarse[:cuts] * outside).argmax(1)
-    found = np.concatenate([found, outside[np.arange(cuts), best]])
-    height, offset = _vertex(rays, np.arange(3 * cuts) % (2 * cuts), np.concatenate([lobe, best]))
-    height[~found] = np.nan
-    height_db = 10 * np.log10(np.maximum(height, 1e-30))
-    angles = angle_at(np.concatenate([edges, best + offset[2 * cuts :]]), count)
-    return CutFigures(
-        angles[:cuts] + angles[cuts : 2 * cuts],
-        height_db[cuts : 2 * cuts],
-        height_db[:cuts],
-        height_db[2 * cuts :],
-        np.where(found[2 * cuts :], angles[2 * cuts :], np.nan),
-    )
+    frame = _frame(cuts, count)
+    beam = frame.first + np.searchsorted((angle_rad[1:] + angle_rad[:-1]) / 2, peak_rad)
+    edge, crosses = _half_power(level, frame, beam)
+    lobe, starts = _maxima(level, frame)
+    cut = lobe // count
+    place, height = _refined(level, frame, edge, (lobe, cut, starts))
+    angle = angle_at(place, count)
+    before_edge, after_edge = np.where(crosses, angle[: 2 * cuts], np.nan).reshape(2, cuts)
+    ends = np.concatenate([starts, starts - 1])
+    at_end, height[ends] = height[ends], np.nan
+    before, after = _beside(height, lobe, beam)
+    height[ends] = np.where(level.take(frame.ends) > level.take(frame.inward), at_end, np.nan)
+    highest = np.fmax.reduceat(height, starts)
+    where, shown = np.full(cuts, np.nan), height == highest[cut]
+    where[cut[shown]] = angle[2 * cuts :][shown]
+    before, after, highest = 10 * np.log10(np.maximum([before, after, highest], 1e-30))
+    return CutFigures(after_edge - before_edge, before, after, highest, where)
 
 
-def _half_power(rays: Floats, coarse: Singles, beyond: Flags) -> Floats:
-    """Fractional index of the half-power crossings after the beam; nan: none.
+@dataclass(frozen=True, eq=False, slots=True)
+class _Frame:
+    """Indices that count samples through all cuts: the first of each cut (C,); all first ones, then the last
+    one before each of them (2 C,), and their neighbours inward; the first sample of the cut of each edge."""
 
-    By the cubic through four samples: a secant, then one step of Newton's method.
+    first: Indices
+    ends: Indices
+    inward: Indices
+    edge_rows: Indices
+
+
+@lru_cache(maxsize=64)
+def _frame(cuts: int, count: int) -> _Frame:
+    first = np.arange(0, cuts * count, count)
+    ends = np.concatenate([first, (first - 1) % (cuts * count)])
+    return _Frame(first, ends, ends + np.repeat([1, -1], cuts), np.tile(first, 2))
+
+
+def _half_power(level: Singles, frame: _Frame, beam: Indices) -> tuple[Indices, Flags]:
+    """The samples before the half-power crossings around each beam, all lower ones first, and which exist.
+
+    Each cut begins and ends with a crossing that is none, so that every search finds something.
     """
-    each, count = np.arange(len(rays)), rays.shape[1]
-    low = (coarse < np.float32(0.5)) & beyond
-    first = low.argmax(1)
-    between = np.maximum(first - 1, 0)
-    base = np.minimum(np.maximum(between, 1), count - 3)
-    c0, c1, c2, c3 = _CUBIC @ rays[each, base + _FOUR]
-    here, there = rays[each, between + _TWO]
-    fall = here - there
-    fall[fall == 0] = 1.0
-    at = (between - base) + (here - 0.5) / fall
-    slope = c1 + at * (2 * c2 + 3 * c3 * at)
-    slope[slope == 0] = 1.0
-    at -= (c0 - 0.5 + at * (c1 + at * (c2 + at * c3))) / slope
-    return np.where(low[each, first], base + at, np.nan)
+    cuts, count = level.shape
+    changes = np.ones((cuts, count + 1), bool)
+    low = level < np.float32(0.5)
+    np.not_equal(low[:, 1:], low[:, :-1], out=changes[:, 1:-1])
+    found = np.flatnonzero(changes)
+    margin = np.arange(cuts)  # one more crossing than samples in each cut
+    after = np.searchsorted(found, beam + margin, side="right")
+    sides = (found[[after - 1, after]] - (frame.first + margin)).ravel()
+    return np.minimum(np.maximum(sides, 1), count - 1) - 1, (sides > 0) & (sides < count)
 
 
-def _lobes_beside(coarse: Singles, beyond: Flags, index: Places) -> tuple[Places, Indices, Flags]:
-    """Index of the first minimum after the beam (off the cut: none), of the lobe that follows, if any.
+def _maxima(level: Singles, frame: _Frame) -> tuple[Indices, Indices]:
+    """All local maxima and both ends of every cut, in order, and where in that list each cut begins."""
+    up = level[:, 1:] > level[:, :-1]
+    listed = np.ones(level.shape, bool)
+    np.greater(up[:, :-1], up[:, 1:], out=listed[:, 1:-1])
+    lobe = np.flatnonzero(listed)
+    return lobe, np.searchsorted(lobe, frame.first)
 
-    A lobe needs a fall beyond it: a rise up to the end of the cut is none.
+
+def _beside(height: Floats, lobe: Indices, beam: Indices) -> tuple[Floats, Floats]:
+    """Height of the lobes before and after the beam of each cut; the beam's own becomes nan."""
+    own = np.searchsorted(lobe, beam + 1, side="right") - 1
+    is_beam = lobe[own] >= beam - 1
+    height[own[is_beam]] = np.nan
+    return height[own - is_beam], height[np.minimum(own + 1, len(height) - 1)]
+
+
+def _refined(
+    level: Singles, frame: _Frame, edge: Indices, lobes: tuple[Indices, Indices, Indices]
+) -> tuple[Floats, Floats]:
+    """Place (fractional index) of half-power crossings and of lobes, and the height of the lobes.
+
+    By a secant and a parabola first, then the polynomial through seven samples. Ends of cuts stay.
+    edge: sample before each crossing. lobes: their samples, cuts, and where each cut begins among them.
     """
-    each, count = np.arange(len(coarse)), coarse.shape[1]
-    up = coarse[:, 1:] > coarse[:, :-1]
-    climbs = up & beyond[:, :-1]
-    first = climbs.argmax(1)
-    minimum = np.where(climbs[each, first], first, 2 * count).astype(np.int16)
-    falls = (index[:-1] > minimum[:, None]) > up
-    lobe = falls.argmax(1)
-    return minimum, lobe, falls[each, lobe]
-
-
-def _vertex(level: Floats, rows: Indices, at: Indices) -> tuple[Floats, Floats]:
-    """Height and offset (in samples) of lobes: the quartic through five samples, the vertex of its parabola
-    refined by one Newton step.
-
-    The outermost two samples of a cut stay as they are.
-    """
-    base = np.minimum(np.maximum(at, 2), level.shape[1] - 3)
-    c0, c1, c2, c3, c4 = _QUARTIC @ level[rows, base + _FIVE]
-    double, triple, quadruple = 2 * c2, 3 * c3, 4 * c4
-    t = _within(c1 / -np.where(double < 0, double, -np.inf))
-    slope = c1 + t * (double + t * (triple + t * quadruple))
-    bend = double + t * (2 * triple + t * (3 * quadruple))
-    t -= slope / np.where(bend < 0, bend, -np.inf)
-    inner = base == at
-    t = np.where(inner, _within(t), 0.0)
-    height = c0 + t * (c1 + t * (c2 + t * (c3 + t * c4)))
-    return np.where(inner, height, level[rows, at]), t
-
-
-def _within(offset: Floats) -> Floats:
-    """Offsets [samples] kept near the highest sample."""
-    return np.minimum(np.maximum(offset, -0.6), 0.6)
+    lobe, cut, starts = lobes
+    edges, last = len(edge), level.shape[1] - 4
+    row = np.concatenate([frame.edge_rows, frame.first[cut]])
+    at = np.concatenate([edge, lobe - row[edges:]])
+    here, there = level.take(frame.edge_rows + edge + _TWO)
+    before, middle, after = level.take(lobe + _THREE, mode="clip")
+    drop, bend = here - there, middle + middle - before - after
+    drop[drop == 0] = np.inf
+    bend[bend <= 0] = bend[starts] = bend[starts - 1] = np.inf
+    start = np.concatenate([(here - 0.5) / drop, (after - before) / (bend + bend)])
+    base = np.minimum(np.maximum(at, 3), last)
+    offset = np.minimum(np.maximum(start, -1), 1) + (at - base)
+    coefficients = _SEXTIC @ level.take(row + base + _SEVEN)
+    value = coefficients[6]
+    for coefficient in coefficients[5::-1]:
+        value = value * offset + coefficient
+    place = base + offset
+    place[:edges] += (value[:edges] - 0.5) / drop
+    return place, value[edges:]

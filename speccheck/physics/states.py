@@ -9,7 +9,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from speccheck.physics.beam import find_beam
-from speccheck.physics.cuts import front_angles, horizontal_cut, vertical_cut
+from speccheck.physics.cuts import front_grid, principal_cuts
 from speccheck.physics.decibels import Floats, db, floats
 from speccheck.physics.element import Element
 from speccheck.physics.field import excite
@@ -144,10 +144,9 @@ def _figures(
     keys = np.array(distinct).T
     states = excite(layout, element, *keys)
     beam = find_beam(states)
-    angles = front_angles(layout, states.wavenumbers)
-    cuts = np.concatenate([horizontal_cut(states, beam, angles), vertical_cut(states, beam, angles)])
+    grid = front_grid(layout, states.wavenumbers)
     peaks = np.concatenate([beam.phi_rad, beam.theta_rad - np.pi / 2])
-    read = read_cuts(cuts, angles, peaks)
+    read = read_cuts(principal_cuts(states, beam, grid), grid.angle_rad, peaks)
     count = len(distinct)
     figures = np.empty((15, count))
     figures[:3] = keys
