@@ -3,10 +3,21 @@
 from __future__ import annotations
 
 from collections.abc import Mapping
-from dataclasses import dataclass, field, replace
+from dataclasses import dataclass, field, fields, make_dataclass, replace
+from typing import Any
 
 from speccheck.quantities import Quantity, UnknownUnitError, convert
 from speccheck.records import Band, CellRef, Reading, Sense, Statement, Unread, Value
+
+_OpenReading: Any = make_dataclass(
+    "_OpenReading", [(f.name, f.type) for f in fields(Reading)], slots=True, kw_only=True
+)
+"""A `Reading` that is still open: the same slots in an ordinary class.
+
+A frozen record is filled by one call of `object.__setattr__` a field, which took a sixth of the time of
+reading a catalogue. An open one is filled three times as fast, and closed for good by taking the class of
+the record.
+"""
 
 
 @dataclass(frozen=True, slots=True)
@@ -53,7 +64,7 @@ class Found:
         condition = figure.condition
         if self.remark:
             condition = f"{condition}; {self.remark}" if condition else self.remark
-        return Reading(
+        reading = _OpenReading(
             where=self.where,
             parameter=self.parameter,
             raw=self.raw,
@@ -71,6 +82,9 @@ class Found:
             recognised=self.recognised or figure.recognised,
             alternatives=quantity.alternatives,
         )
+        reading.__class__ = Reading
+        closed: Reading = reading
+        return closed
 
 
 @dataclass(slots=True)

@@ -8,7 +8,7 @@ from dataclasses import replace
 
 from speccheck.dictionary import specified
 from speccheck.intake.panels.found import Found
-from speccheck.intake.panels.reading import MAX_WORDS, MIN_WORDS
+from speccheck.intake.panels.understanding import MAX_WORDS, MIN_WORDS
 from speccheck.quantities import read_cell
 from speccheck.records import Sense
 
