@@ -13,7 +13,8 @@ from speccheck.checks.families import housing, ports, connectors, layers
 from speccheck.checks.families import power, power_array, power_budget, losses, matching, intermodulation
 from speccheck.checks.families import frequency_unit, bands, duplex, directions
 from speccheck.checks.families import wind, mechanics, exposure, wording
-from speccheck.checks.innocent import innocent_gain, innocent_beams, innocent_geometry, innocent_statements
+from speccheck.checks.innocent import innocent_gain, innocent_power, innocent_beams, innocent_geometry
+from speccheck.checks.innocent import innocent_lengths, innocent_matching, innocent_statements
 from speccheck.checks.drawings.curves import panel_drawings
 from speccheck.checks.desk.exposure_note import exposure_note
 from speccheck.checks.runner import examine
@@ -26,6 +27,9 @@ FAMILIES = (
     power, power_array, power_budget, losses, matching, intermodulation,
     frequency_unit, bands, duplex, directions, wind, mechanics, exposure, wording,
 )  # fmt: skip
-INNOCENT = (innocent_gain, innocent_beams, innocent_geometry, innocent_statements)
+INNOCENT = (
+    innocent_gain, innocent_power, innocent_beams, innocent_geometry, innocent_lengths, innocent_matching,
+    innocent_statements,
+)  # fmt: skip
 
 __all__ = ["FAMILIES", "INNOCENT", "examine", "exposure_note", "panel_drawings"]

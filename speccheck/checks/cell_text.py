@@ -34,7 +34,7 @@ def half_digit(reading: Reading) -> float:
 def _in_unit(half: float, reading: Reading, stated: float) -> float:
     if reading.stated_unit.lower() in _LEVELS and reading.unit == "W":
         return float(reading.nominal * (10 ** (half / 10) - 1))
-    if reading.unit.startswith("dB") or stated == 0 or not reading.stated_unit:
+    if reading.unit.startswith("dB") or stated == 0:
         return half
     return half * abs(reading.nominal / stated)
 

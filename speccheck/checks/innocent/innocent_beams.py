@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import replace
 
 from speccheck.checks.beams import COLUMN_WIDTHS_DEG
-from speccheck.checks.innocent.conventions import Reach, innocent, marked, reread, scaled
+from speccheck.checks.innocent.conventions import Reach, Transform, innocent, marked, reread, scaled
 from speccheck.records import Panel, Reading
 
 WIDE_BEAM_DEG = 100.0
@@ -14,6 +14,19 @@ practice), and 65 at half power is 111 to 119 at -10 dB."""
 
 ARRAY_BEAM_DEG = 50.0
 """Width [deg] at -10 dB below which a beam is that of an array of columns and not of an element."""
+
+
+_HORIZONTAL, _VERTICAL = "horizontal_beamwidth", "vertical_beamwidth"
+_WHOLE_ASKED = "the beamwidth is the whole angle between the half-power points or that to one side"
+
+
+def _doubled(keys: tuple[str, ...]) -> Transform:
+    """Widths of `keys` doubled; nothing is reread where the panel lacks one of them."""
+
+    def change(panel: Panel, reach: Reach) -> Panel:
+        return reread(panel, reach, keys, scaled(2)) if all(map(panel.all, keys)) else panel
+
+    return change
 
 
 def _wide_beam(panel: Panel) -> bool:
@@ -27,14 +40,22 @@ def _wide_beam(panel: Panel) -> bool:
     "horizontal_beamwidth",
 )
 def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
-    """The width belongs to one column, whatever the gain belongs to."""
-    return reread(panel, reach, ("horizontal_beamwidth",), marked(beam_columns=1))
+    """A width that a column can have belongs to one column, whatever the gain belongs to."""
+
+    def of_column(reading: Reading) -> Reading:
+        wide = COLUMN_WIDTHS_DEG[0] <= reading.nominal <= COLUMN_WIDTHS_DEG[1]
+        return marked(beam_columns=1)(reading) if wide else reading
+
+    return reread(panel, reach, ("horizontal_beamwidth",), of_column)
+
+
+_LEVEL_ASKED = "the {} taken at half power"
 
 
 @innocent(
     "horizontal width taken at -10 dB",
-    "the horizontal beamwidth is taken at half power",
-    "horizontal_beamwidth",
+    _LEVEL_ASKED.format("horizontal beamwidth is"),
+    _HORIZONTAL,
     likely=_wide_beam,
 )
 def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
@@ -49,15 +70,29 @@ def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
         single = columns is not None and columns.value == 1
         return reading if single and other.nominal < COLUMN_WIDTHS_DEG[0] else other
 
-    return reread(panel, reach, ("horizontal_beamwidth",), half_power)
+    return reread(panel, reach, (_HORIZONTAL,), half_power)
 
 
-@innocent(
-    "vertical width taken at -10 dB", "the vertical beamwidth is taken at half power", "vertical_beamwidth"
-)
+@innocent("vertical width taken at -10 dB", _LEVEL_ASKED.format("vertical beamwidth is"), _VERTICAL)
 def vertical_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
     """Width divided by 1.67, the ratio of a uniform line."""
-    return reread(panel, reach, ("vertical_beamwidth",), scaled(1 / 1.67))
+    return reread(panel, reach, (_VERTICAL,), scaled(1 / 1.67))
+
+
+@innocent("both widths taken at -10 dB", _LEVEL_ASKED.format("beamwidths are"), _VERTICAL, _HORIZONTAL)
+def widths_at_10_db(panel: Panel, reach: Reach) -> Panel:
+    """Both at once; nothing where either is stated alone or would be no half-power width."""
+    horizontal = horizontal_width_at_10_db(panel, reach)
+    both = panel.all(_VERTICAL) and horizontal != panel
+    return vertical_width_at_10_db(horizontal, reach) if both else panel
+
+
+for _name, _keys in (
+    ("horizontal width", (_HORIZONTAL,)),
+    ("vertical width", (_VERTICAL,)),
+    ("both widths", (_HORIZONTAL, _VERTICAL)),
+):
+    innocent(f"{_name} given to one side of the beam", _WHOLE_ASKED, *_keys)(_doubled(_keys))
 
 
 @innocent(

@@ -2,35 +2,15 @@
 
 from __future__ import annotations
 
-import math
-from collections.abc import Callable
 from dataclasses import replace
 
 from speccheck.checks.innocent.conventions import Reach, innocent, reread, scaled, shifted
-from speccheck.checks.model import WAVELENGTHS
 from speccheck.dictionary import parameters
-from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
-from speccheck.records import Band, Panel, Reading
-
-_SPACINGS = ("horizontal_element_spacing", "vertical_element_spacing", "element_spacing")
-_LENGTHS = (*_SPACINGS, "height", "width", "depth")
+from speccheck.records import Panel, Reading
 
 
 def _halved(reading: Reading) -> Reading:
     return scaled(0.5)(reading) if reading.nominal >= 2 and reading.nominal % 2 == 0 else reading
-
-
-def _rescaled(factor: float) -> Callable[[Reading], Reading]:
-    """Scaled where the result is a length that panels have; left alone elsewhere."""
-
-    def change(reading: Reading) -> Reading:
-        parameter = parameters()[reading.parameter]
-        usual = parameter.plausible or (0.0, math.inf)
-        # enlarged millimetre-wave lengths stay below what the dictionary calls usual
-        low, high = (parameter.possible or usual)[0] if factor > 1 else usual[0], usual[1]
-        return scaled(factor)(reading) if low <= reading.nominal * factor <= high else reading
-
-    return change
 
 
 def _swapped(panel: Panel, one: str, other: str) -> Panel:
@@ -168,50 +148,6 @@ def calibration_counted(panel: Panel, reach: Reach) -> Panel:
     return reread(panel, reach, ("rf_ports",), shifted(-calibration.nominal))
 
 
-def _at_edge(panel: Panel, reach: Reach, edge: Callable[[Band], float]) -> Panel:
-    """Spacings in λ taken at another frequency of their band [MHz]."""
-
-    def change(reading: Reading) -> Reading:
-        band = reading.band or (panel.bands[0] if panel.bands else None)
-        stated = reading.stated_value if reading.stated_unit in WAVELENGTHS else None
-        if band is None or not isinstance(stated, int | float):
-            return reading
-        value = stated * SPEED_OF_LIGHT_MPS / (edge(band) * 1e6)
-        return replace(reading, value=value, unit="m", at={**reading.at, "frequency_mhz": edge(band)})
-
-    return reread(panel, reach, _SPACINGS, change)
-
-
-@innocent(
-    "spacing in wavelengths quoted at the upper band edge",
-    "the spacing in λ holds at the top of the band",
-    *_SPACINGS,
-)
-def spacing_at_top(panel: Panel, reach: Reach) -> Panel:
-    """Spacing in λ taken at the upper edge."""
-    return _at_edge(panel, reach, lambda band: band[1])
-
-
-@innocent(
-    "spacing in wavelengths quoted at the lower band edge",
-    "the spacing in λ holds at the bottom of the band",
-    *_SPACINGS,
-)
-def spacing_at_bottom(panel: Panel, reach: Reach) -> Panel:
-    """Spacing in λ taken at the lower edge."""
-    return _at_edge(panel, reach, lambda band: band[0])
-
-
-@innocent(
-    "spacing in wavelengths quoted at mid band",
-    "the spacing in λ holds at the middle of the band",
-    *_SPACINGS,
-)
-def spacing_at_middle(panel: Panel, reach: Reach) -> Panel:
-    """Spacing in λ taken at the middle."""
-    return _at_edge(panel, reach, lambda band: (band[0] + band[1]) / 2)
-
-
 @innocent(
     "interleaved elements double the density",
     "elements of the upper band are interleaved at half the spacing",
@@ -230,18 +166,6 @@ def interleaved(panel: Panel, reach: Reach) -> Panel:
 def two_lines(panel: Panel, reach: Reach) -> Panel:
     """Half the rows, of the stated spacing."""
     return reread(panel, reach, ("array_rows",), _halved)
-
-
-@innocent("lengths in inches", "lengths are in millimetres or in inches", *_LENGTHS)
-def inches_for_millimetres(panel: Panel, reach: Reach) -> Panel:
-    """Lengths times 25.4, where that leaves a length panels have."""
-    return reread(panel, reach, _LENGTHS, _rescaled(25.4))
-
-
-@innocent("lengths in millimetres", "lengths are in millimetres or in inches", *_LENGTHS)
-def millimetres_for_inches(panel: Panel, reach: Reach) -> Panel:
-    """Lengths divided by 25.4, where that leaves a length panels have."""
-    return reread(panel, reach, _LENGTHS, _rescaled(1 / 25.4))
 
 
 @innocent(
@@ -269,6 +193,26 @@ def range_about_fixed_tilt(panel: Panel, reach: Reach) -> Panel:
         return replace(reading, value=(reading.nominal - half, reading.nominal + half))
 
     return reread(panel, reach, ("electrical_tilt", "vertical_scan"), centred)
+
+
+@innocent(
+    "tilt range with the mechanical tilt in it",
+    "the electrical tilt range holds the mechanical tilt as well",
+    "electrical_tilt",
+    "mechanical_tilt",
+    likely=lambda panel: bool(panel.all("mechanical_tilt")),
+)
+def mechanical_tilt_within(panel: Panel, reach: Reach) -> Panel:
+    """The stated mechanical tilt taken off both ends."""
+    bracket = panel.get("mechanical_tilt")
+    if bracket is None or isinstance(bracket.value, str):
+        return panel
+
+    def electrical(reading: Reading) -> Reading:
+        low, high = reading.low - bracket.low, reading.high - bracket.high
+        return replace(reading, value=(low, high), tolerance=None) if low <= high else reading
+
+    return reread(panel, reach, ("electrical_tilt",), electrical)
 
 
 _POSITIVE = tuple(key for key, p in parameters().items() if p.possible is not None and p.possible[0] >= 0)

@@ -1,4 +1,4 @@
-"""Innocent readings of matching, bands, directions, weights, wind and distances. See `conventions`."""
+"""Innocent readings of bands, directions, weights, wind and distances. See `conventions`."""
 
 from __future__ import annotations
 
@@ -31,73 +31,6 @@ def _texts(panel: Panel, keys: tuple[str, ...], reach: Reach, **conditions: floa
 def one_port_in_use(panel: Panel, reach: Reach) -> Panel:
     """The rating of a port not multiplied by their number."""
     return reread(panel, reach, ("max_power_per_port",), marked(one_port=1))
-
-
-def _less_decibels(offset_db: float) -> Transform:
-    def change(panel: Panel, reach: Reach) -> Panel:
-        return reread(panel, reach, ("eirp",), shifted(-offset_db))
-
-    return change
-
-
-for _over_db in (8, 10):
-    innocent(
-        f"EIRP of the envelope peak, {_over_db} dB above the average",
-        "the EIRP is the average or the envelope peak",
-        "eirp",
-    )(_less_decibels(float(_over_db)))
-
-
-@innocent("VSWR is typical", "the VSWR is typical or guaranteed", "vswr")
-def vswr_typical(panel: Panel, reach: Reach) -> Panel:
-    """VSWR marked typical: the guaranteed return loss may be lower than it gives."""
-    return reread(panel, reach, ("vswr",), marked(typical=1))
-
-
-@innocent("return loss is typical", "the return loss is typical or guaranteed", "return_loss")
-def return_loss_typical(panel: Panel, reach: Reach) -> Panel:
-    """Return loss marked typical: it may be higher than the guaranteed VSWR gives."""
-    return reread(panel, reach, ("return_loss",), marked(typical=1))
-
-
-@innocent(
-    "isolation of the two polarisations of one column",
-    "the isolation is that of the two polarisations of one column or of the worst pair of ports",
-    "port_isolation",
-)
-def isolation_within_column(panel: Panel, reach: Reach) -> Panel:
-    """Isolation held against what one dual-polarised column shows."""
-    return reread(panel, reach, ("port_isolation",), marked(same_column=1))
-
-
-@innocent(
-    "intermodulation in dBm written as dBc",
-    "the intermodulation is in dBm or relative to a carrier",
-    "passive_intermodulation",
-)
-def intermodulation_in_dbm(panel: Panel, reach: Reach) -> Panel:
-    """The figure as an absolute level."""
-    return reread(panel, reach, ("passive_intermodulation",), lambda r: replace(r, unit="dBm"))
-
-
-@innocent(
-    "intermodulation in dBc written as dBm",
-    "the intermodulation is in dBm or relative to a carrier",
-    "passive_intermodulation",
-)
-def intermodulation_in_dbc(panel: Panel, reach: Reach) -> Panel:
-    """The figure relative to one carrier."""
-    return reread(panel, reach, ("passive_intermodulation",), lambda r: replace(r, unit="dBc"))
-
-
-@innocent(
-    "small panel tested at its own rating",
-    "the test power is the highest one the panel is rated for",
-    "passive_intermodulation",
-)
-def tested_at_rating(panel: Panel, reach: Reach) -> Panel:
-    """The test power taken as the rating of the panel."""
-    return reread(panel, reach, ("passive_intermodulation",), marked(tested_at_rating=1))
 
 
 def _frequencies_times(factor: float) -> Transform:

@@ -7,12 +7,13 @@ that breaks a claim which fitted is dropped. Nothing here names a culprit: candi
 from __future__ import annotations
 
 from collections import Counter
-from collections.abc import Callable, Collection
+from collections.abc import Callable, Collection, Iterator
 from dataclasses import dataclass, replace
 from typing import Protocol
 
 from speccheck.checks.innocent.conventions import INNOCENT_READINGS, InnocentReading, Reach
-from speccheck.records import Band, CellRef, Convention, Finding, Fit, Panel, Step
+from speccheck.checks.innocent.ranking import Candidate, Key, ranked, span_of
+from speccheck.records import Convention, Finding, Fit, Panel, Step
 
 
 class Examined(Protocol):
@@ -24,34 +25,12 @@ class Examined(Protocol):
 
 Rerun = Callable[[Panel], Examined]
 
-_Key = tuple[str, Band | None, tuple[CellRef, ...], int]
-
 MISFIT = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 LISTED = 5
 SLIPS = "figure-plausible"
 """The one check that says nothing of a figure that is possible."""
 
 NONE_FITS = "None of the readings tried fits."
-
-
-@dataclass(frozen=True, slots=True)
-class _Candidate:
-    reading: InnocentReading
-    rank: int
-    repaired: dict[_Key, Finding]
-    leaves: tuple[str, ...]
-    likely: bool
-
-    @property
-    def order(self) -> tuple[bool, int, bool, float, int]:
-        """Repairs everything, repairs most, pointed to by the figures, leaves least over, listed first."""
-        return (
-            bool(self.leaves),
-            -len(self.repaired),
-            not self.likely,
-            max(map(_off_middle, _most_telling(self.repaired.values()))),
-            self.rank,
-        )
 
 
 def offer_innocent_readings(panel: Panel, findings: tuple[Finding, ...], rerun: Rerun) -> tuple[Finding, ...]:
@@ -69,7 +48,7 @@ def offer_innocent_readings(panel: Panel, findings: tuple[Finding, ...], rerun: 
         return findings
     trial = _Trial(panel, misfits, frozenset(k for k, f in keyed.items() if f.verdict is Fit.FITS), rerun)
     tried = [trial.of(rank, reading) for rank, reading in enumerate(INNOCENT_READINGS.values())]
-    candidates = sorted((c for c in tried if c is not None), key=lambda c: c.order)
+    candidates = ranked([c for c in tried if c is not None])
     return tuple(_completed(key, f, candidates) if key in misfits else f for key, f in keyed.items())
 
 
@@ -78,27 +57,35 @@ class _Trial:
     """The panel as read, what misfits and what fits, and the judge of another reading."""
 
     panel: Panel
-    misfits: dict[_Key, Finding]
-    fitted: frozenset[_Key]
+    misfits: dict[Key, Finding]
+    fitted: frozenset[Key]
     rerun: Rerun
 
-    def of(self, rank: int, reading: InnocentReading) -> _Candidate | None:
-        """The reading over all bands or else the misfitting ones; None if it repairs nothing."""
+    def of(self, rank: int, reading: InnocentReading) -> Candidate | None:
+        """The reading over all bands, or over the misfitting ones where that explains more."""
         if not any(set(reading.parameters) & set(f.parameters) for f in self.misfits.values()):
             return None
-        bands = tuple(dict.fromkeys(band for _, band, *_ in self.misfits if band is not None))
-        seen = [self.panel]
-        for reach in (Reach(), Reach(bands)) if len(self.panel.bands) > 1 else (Reach(),):
+        seen, candidates = [self.panel], []
+        for reach in self._reaches():
             other = reading.reread(self.panel, reach)
             if other in seen:
                 continue
             seen.append(other)
             candidate = self._judged(rank, reading, other)
-            if candidate:
+            if candidate and not candidate.entangled:
                 return candidate
-        return None
+            candidates += [candidate] if candidate else []
+        return next(iter(candidates), None)
 
-    def _judged(self, rank: int, reading: InnocentReading, other: Panel) -> _Candidate | None:
+    def _reaches(self) -> Iterator[Reach]:
+        """The whole panel, the misfitting bands, each of them alone."""
+        yield Reach()
+        if len(self.panel.bands) > 1:
+            bands = tuple(dict.fromkeys(band for _, band, *_ in self.misfits if band is not None))
+            yield Reach(bands)
+            yield from (Reach((band,)) for band in bands)
+
+    def _judged(self, rank: int, reading: InnocentReading, other: Panel) -> Candidate | None:
         examined = self.rerun(other)
         misfitting = _keyed(examined.findings({slug for slug, *_ in self.misfits}))
         if not self._repaired(misfitting):
@@ -109,16 +96,31 @@ class _Trial:
         if any(after[k].verdict is Fit.NOT_JUDGED for k in self.fitted if k in after):
             return None  # a claim that fitted and can no longer be judged is not explained
         repaired = self._repaired(after)
-        still = [key[0] for key in self.misfits if key not in repaired]
+        mended = {slug for slug, *_ in repaired}
+        still = [key for key in self.misfits if key not in repaired]
         doubted = [k[0] for k in after if k in self.fitted and after[k].verdict is Fit.DOUBTFUL]
-        return _Candidate(
-            reading, rank, repaired, tuple(dict.fromkeys([*still, *doubted])), reading.likely(self.panel)
+        return Candidate(
+            reading=reading,
+            rank=rank,
+            repaired=repaired,
+            judged=tuple(f for key, f in after.items() if f.verdict is Fit.FITS and key[0] in mended),
+            leaves=tuple(dict.fromkeys([*(slug for slug, *_ in still), *doubted])),
+            entangled=bool(doubted) or any(not _same(self.misfits[k], after.get(k)) for k in still),
+            likely=reading.likely(self.panel),
         )
 
-    def _repaired(self, after: dict[_Key, Finding]) -> dict[_Key, Finding]:
+    def _repaired(self, after: dict[Key, Finding]) -> dict[Key, Finding]:
         """What misfitted and fits now; an impossible figure that is no longer one fits as well."""
         fits = {k: after[k] for k in self.misfits if k in after and after[k].verdict is Fit.FITS}
         return fits | {k: _settled(f) for k, f in self.misfits.items() if k not in after and f.check == SLIPS}
+
+
+def _same(before: Finding, after: Finding | None) -> bool:
+    """Whether a check says the same again, so that what was reread is not its matter."""
+    return after is not None and all(
+        getattr(before, name) == getattr(after, name)
+        for name in ("verdict", "summary", "claimed", "expected")
+    )
 
 
 def _settled(finding: Finding) -> Finding:
@@ -126,14 +128,14 @@ def _settled(finding: Finding) -> Finding:
     return replace(finding, verdict=Fit.FITS, claimed=None, expected=None)
 
 
-def _keyed(findings: tuple[Finding, ...]) -> dict[_Key, Finding]:
+def _keyed(findings: tuple[Finding, ...]) -> dict[Key, Finding]:
     """Findings by what they are about, in their order.
 
     The one finding of a check and band is known by these alone, since another reading may stand on other
     cells; several are told apart by their cells, in any order.
     """
     count = Counter((f.check, f.band) for f in findings)
-    keyed: dict[_Key, Finding] = {}
+    keyed: dict[Key, Finding] = {}
     for f in findings:
         cells = tuple(sorted(f.where, key=str)) if count[f.check, f.band] > 1 else ()
         ordinal = 0
@@ -143,8 +145,10 @@ def _keyed(findings: tuple[Finding, ...]) -> dict[_Key, Finding]:
     return keyed
 
 
-def _completed(key: _Key, finding: Finding, candidates: list[_Candidate]) -> Finding:
-    mine = [c for c in candidates if key in c.repaired][:LISTED]
+def _completed(key: Key, finding: Finding, candidates: list[Candidate]) -> Finding:
+    mine = [c for c in candidates if key in c.repaired]
+    # one that leaves a check it touches in doubt is named only where no reading explains all it touches
+    mine = ([c for c in mine if not c.entangled] or mine)[:LISTED]
     cells = ", ".join(str(place) for place in finding.where)
     if not mine:
         said = finding.question or "Please state the frequency, tilt and conditions these figures hold for."
@@ -155,16 +159,26 @@ def _completed(key: _Key, finding: Finding, candidates: list[_Candidate]) -> Fin
     return replace(
         finding,
         conventions=tuple(_convention(c, c.repaired[key]) for c in mine),
+        assumptions=(*finding.assumptions, *_order_said(mine)),
         working=(*finding.working, *(s for c in mine for s in _left_over(c, c.repaired[key]))),
         question=f"Please confirm ({cells}) whether {asked}.",
     )
+
+
+def _order_said(candidates: list[Candidate]) -> tuple[str, ...]:
+    """What the order of the readings does not show."""
+    first, *others = candidates
+    if first.entangled:
+        return ("No single reading explains every figure; those named leave others in doubt.",)
+    as_well = [c.reading.name for c in others if c.fits_as_well_as(first)]
+    return (f"'{first.reading.name}' fits no better than '{as_well[0]}'.",) if as_well else ()
 
 
 def _with_cells(question: str, cells: str) -> str:
     return question if any(c in question for c in cells.split(", ")) else f"{question} (cells {cells})"
 
 
-def _convention(candidate: _Candidate, after: Finding) -> Convention:
+def _convention(candidate: Candidate, after: Finding) -> Convention:
     value = after.claimed.value if after.claimed else ""
     return Convention(
         name=candidate.reading.name,
@@ -180,42 +194,13 @@ def _of_difference(unit: str) -> str:
     return "dB" if unit in ("dBi", "dBd", "dBm", "dBc") else unit
 
 
-def _most_telling(findings: Collection[Finding]) -> Collection[Finding]:
-    """Of the findings that expect an interval in one unit the one with the narrowest; else all of them."""
-    narrowest: dict[str, tuple[float, Finding]] = {}
-    for finding in findings:
-        span = finding.expected
-        if span is None or span.low is None or span.high is None:
-            continue
-        width = span.high - span.low
-        if span.unit not in narrowest or width < narrowest[span.unit][0]:
-            narrowest[span.unit] = width, finding
-    return [finding for _, finding in narrowest.values()] or findings
-
-
-def _off_middle(after: Finding) -> float:
-    """Distance of the re-read claim from the middle of what is expected, in half widths of that interval."""
-    value = after.claimed.value if after.claimed else None
-    span = after.expected
-    if not isinstance(value, int | float) or span is None or span.low is None or span.high is None:
-        return 0.5
-    half = (span.high - span.low) / 2
-    return round(abs(value - (span.low + span.high) / 2) / half, 1) if half > 0 else 0.0
-
-
-def _left_over(candidate: _Candidate, after: Finding) -> tuple[Step, ...]:
+def _left_over(candidate: Candidate, after: Finding) -> tuple[Step, ...]:
     """What is left between the re-read claim and the middle of what is then expected."""
-    value = after.claimed.value if after.claimed else None
-    span = after.expected
-    if not isinstance(value, int | float) or span is None or span.low is None or span.high is None:
+    span = span_of(after)
+    if span is None or after.expected is None:
         return ()
-    middle = (span.low + span.high) / 2
-    formula = f"{value:.4g} − {middle:.4g} (middle of {span.low:.4g} to {span.high:.4g})"
-    return (
-        Step(
-            f"Left over if {candidate.reading.name}",
-            formula,
-            round(value - middle, 3),
-            _of_difference(span.unit),
-        ),
-    )
+    value, low, high = span
+    middle = (low + high) / 2
+    formula = f"{value:.4g} − {middle:.4g} (middle of {low:.4g} to {high:.4g})"
+    unit = _of_difference(after.expected.unit)
+    return (Step(f"Left over if {candidate.reading.name}", formula, round(value - middle, 3), unit),)
