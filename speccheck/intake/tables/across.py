@@ -9,7 +9,7 @@ from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.across_bands import RowBand, band_of
 from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
 from speccheck.intake.tables.across_whole import settle_whole
-from speccheck.intake.tables.bands import band_of_title, find_bands
+from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.edges import band_between
 from speccheck.intake.tables.labels import Label
@@ -71,10 +71,15 @@ class AcrossReader:
         self._report_unknown()
 
     def _section_above(self) -> None:
-        """A band alone in a row just above the headings holds for all rows, if they tell of no other."""
+        """A band alone in a row just above the headings, or as name of the sheet, holds for all rows.
+
+        Not where columns or headings tell of bands.
+        """
         guides = self._guides
         if guides.of_bands or guides.overall or any(found.banded for found in self._fields.values()):
             return
+        if is_band_label(self._grid.name) and not self._names.is_file(self._grid.name):
+            self._section = RowBand(find_bands(self._grid.name).hull, self._grid.name)
         top = self._table.heading_rows[0]
         for row in range(top - 1, max(0, top - 1 - _ABOVE), -1):
             cells = cells_of(self._marks, self._table, row)

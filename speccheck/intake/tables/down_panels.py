@@ -14,10 +14,12 @@ from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
 from speccheck.intake.tables.titles import codes
+from speccheck.intake.tables.words import names_array
 from speccheck.records import Band
 
 NAME_KEYS = frozenset({"model", "panel_type"})
 _NAMING_KEYS = frozenset({"model", "panel_type", "manufacturer", "part_number", "revision"})
+_ARRAY = re.compile(r"[A-Z]{1,2}[1-9]\d?")
 _NUMBERED = re.compile(r"\d\d")
 _FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 
@@ -59,6 +61,8 @@ class DownPanels:
         """Make a draft for each panel named over the columns, or one named by the title."""
         values = self._value_columns()
         self.model_row = self._find_model_row(values)
+        if not self.model_row:
+            self._name_arrays(values)
         title = None
         if not self.model_row and (self._name_groups_of_bands(values) or self._name_nothing(values)):
             title = names.title_for(self._table, heading_rows, self._marks, self._result)
@@ -90,6 +94,20 @@ class DownPanels:
             self.start(name, cell)
             self._seen[name] = self.first
         self._drafts = {name: self._seen[name]}
+
+    def _name_arrays(self, values: list[Column]) -> None:
+        """Take names such as 'Lower left' for arrays of one panel, and P1 beside R1 and Y1."""
+        named = [column for column in values if column.words]
+        known = any(column.band_name for column in values if not column.words)
+        if known and all(_ARRAY.fullmatch(column.name) for column in named):
+            arrays = named
+        elif len({column.name for column in named}) > 1 and all(names_array(c.name) for c in named):
+            arrays = named if self._rows_of(_FREQUENCY_KEYS) or all(c.band for c in named) else []
+        else:
+            return
+        for column in arrays:
+            column.band_name = column.band_name or column.name
+        self._unname(arrays)
 
     @staticmethod
     def _name_groups_of_bands(values: list[Column]) -> bool:

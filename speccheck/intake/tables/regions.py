@@ -190,8 +190,10 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
             table.repeated.append(row)
             continue
         heads = (marks.is_heading(cells[0]) and cells[0].column == table.left) or len(headings) > 2
-        if (len(cells) <= _FEW or is_aside_of_table(cells[0].text)) and parts_rows(
-            marks, cells, heading_row, following[position + 1 : position + 1 + _LOOK_BELOW]
+        after = following[position + 1 : position + 1 + _LOOK_BELOW]
+        aside = is_aside_of_table(cells[0].text)
+        if (aside and not heads) or (
+            (aside or len(cells) <= _FEW) and parts_rows(marks, cells, heading_row, after)
         ):
             table.groups.add(row)
         elif heads:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import is_unit
-from speccheck.intake.tables.words import answer
+from speccheck.intake.tables.words import answer, column_role
 
 _ANSWERS, _SILENT = 0.6, 0.4
 """Shares of cells from which on, and up to which, a column is surely one of values, or of none."""
@@ -100,8 +100,9 @@ def _conditions_before_units(columns: dict[int, Column], cells: dict[int, list[C
 
 
 def _several_offers(columns: dict[int, Column]) -> None:
-    """Columns 'Bidder A' and 'Bidder B' are two offers, each with its own name."""
+    """Columns 'Bidder A' and 'Bidder B' are two offers, each with its own name; 'Guaranteed' names none."""
     offers = [c for c in columns.values() if c.role == "offered" and c.cells and not (c.band or c.band_name)]
+    offers = [c for c in offers if not all(column_role(cell.text) for cell in c.cells)]
     if len({c.heading for c in offers}) > 1 and not any(c.words for c in offers):
         for column in offers:
             column.words, column.name_cell = [column.heading], column.cells[-1]

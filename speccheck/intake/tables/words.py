@@ -192,6 +192,13 @@ def _colour_and_number(folded: str) -> bool:
     return cut is not None and cut[1] in _table()["band"]["colours"]
 
 
+def names_array(text: str) -> bool:
+    """Whether words only tell the arrays of a panel apart, by place or colour: 'Lower left', 'Yellow array'."""
+    words = re.findall(r"[^\W\d_]+", fold(text))
+    band = _table()["band"]
+    return bool(words) and band["arrays"].union(band["colours"]).issuperset(words)
+
+
 def answer(text: str) -> str:
     """``comply`` or ``deviate`` for an answer without a figure, else empty."""
     folded = fold(text).rstrip(".!")
