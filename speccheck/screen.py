@@ -71,7 +71,7 @@ def resumable(progress: Progress) -> Iterator[None]:
 def progress_line(done: int, total: int, bid: Bid, left: str = "") -> str:
     """One line about a bid that has just been done; `left` tells the time left."""
     count = f"[{done:>{len(str(total))}}/{total}{left}]"
-    name = plain(bid.file, 60)
+    name = plain(bid.label, 60)
     if bid.error:
         return f"{count} {name}: not used\n    {plain(bid.error, 600)}"
     outcomes = ", ".join(f"{plain(o.panel, 40)} {o.outcome.value}" for o in bid.offers[:4])
@@ -89,7 +89,7 @@ def outcome_table(evaluation: Evaluation) -> str:
         for offer in bid.offers
     ]
     rows += [
-        (plain(bid.file, 28), "! not used", "see the message above") for bid in evaluation.bids if bid.error
+        (plain(bid.label, 28), "! not used", "see the message above") for bid in evaluation.bids if bid.error
     ]
     return _table(("Panel", "Outcome", "What blocks"), rows)
 

@@ -55,6 +55,7 @@ def do_bid(bid: BidFile, rules: Rules) -> Bid:
     result = Bid(
         path=str(bid.path),
         file=assessment.submission.file,
+        folder=bid.folder,
         sha256=assessment.submission.sha256,
         offers=summarise(assessment),
         outputs=tuple(path.name for path in outputs),
@@ -79,4 +80,4 @@ def _outputs(
 
 def failed(bid: BidFile, message: str) -> Bid:
     """A bid that could not be used."""
-    return Bid(path=str(bid.path), file=bid.path.name, error=message)
+    return Bid(path=str(bid.path), file=bid.path.name, folder=bid.folder, error=message)

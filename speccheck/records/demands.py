@@ -57,6 +57,11 @@ WINDOW_UNKNOWN = "judged on the figure; stated without tolerance, so the offered
 """Note of a row whose bare figure lies inside the window demanded: a narrow pass and a question."""
 
 
+def margin_unit(unit: str) -> str:
+    """Unit of a difference of two figures: levels over any reference differ by plain decibels."""
+    return "dB" if unit in ("dBi", "dBd", "dBm", "dBc") else unit
+
+
 def doubt(code: str, detail: str = "") -> str:
     """A doubt in words, starting with its code word."""
     text = _DOUBTS[code]

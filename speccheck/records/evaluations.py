@@ -5,6 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from speccheck.records.offers import Band, CellRef, Value
+from speccheck.records.outputs import SUFFIXES
 from speccheck.records.tenders import Settings, Tender
 from speccheck.records.words import Compliance, Outcome
 
@@ -44,17 +45,29 @@ class Offer:
 class Bid:
     """What became of one file: its offers and outputs, or the message why it could not be used.
 
-    `note` tells of an output that could not be made although the bid was used.
+    `note` tells of an output that could not be made although the bid was used; `folder` is where its outputs
+    lie below those of the evaluation, '' for there.
     """
 
     path: str
     file: str
+    folder: str = ""
     sha256: str = ""
     offers: tuple[Offer, ...] = ()
     outputs: tuple[str, ...] = ()
     error: str = ""
     note: str = ""
     resumed: bool = False
+
+    @property
+    def label(self) -> str:
+        """The file, with the folder that tells it from another of the same name."""
+        return f"{self.file} ({self.folder})" if self.folder else self.file
+
+    @property
+    def page(self) -> str:
+        """Its report as a page, '' where none was written."""
+        return next((name for name in self.outputs if name.endswith(SUFFIXES["html"])), "")
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

@@ -2,11 +2,12 @@
 
 from __future__ import annotations
 
+import math
 from collections.abc import Iterable, Sequence
 
 from speccheck.dictionary import Parameter
 from speccheck.quantities import UnknownUnitError, convert
-from speccheck.records import Band, Compliance, Panel, Reading, Requirement
+from speccheck.records import Band, Compliance, Panel, Reading, Requirement, Value
 from speccheck.standards import operating_band, union
 from speccheck.tender.grading import Grade, graded, settled
 
@@ -24,11 +25,35 @@ def covers_range(
     limit = requirement.limit
     if isinstance(limit, float | int):
         inside = max(min(limit - low, high - limit) for low, high in spans)
-        return graded(settled(inside, limit), guard)
+        return graded(settled(inside, limit), guard, requirement.unit)
     if not isinstance(limit, tuple):
         return Grade(Compliance.NOT_JUDGED, None, "the limit is not a range")
     margin = max(min(limit[0] - low, high - limit[1]) for low, high in spans)
-    return graded(settled(margin, max(map(abs, limit))), guard)
+    return graded(settled(margin, max(map(abs, limit))), guard, requirement.unit)
+
+
+def nearest(requirement: Requirement, readings: Sequence[Reading]) -> tuple[Reading, Value | None]:
+    """The offered range to show beside the demand, the one that has most in common, in the demand's unit."""
+    shown = [(reading, _in_unit(reading, requirement.unit)) for reading in readings]
+    limit = requirement.limit
+    if not isinstance(limit, tuple):
+        return shown[0]
+
+    def common(one: tuple[Reading, Value | None]) -> float:
+        value = one[1]
+        return min(value[1], limit[1]) - max(value[0], limit[0]) if isinstance(value, tuple) else -math.inf
+
+    return max(shown, key=common)
+
+
+def _in_unit(reading: Reading, unit: str) -> Value | None:
+    value = reading.value
+    try:
+        if isinstance(value, tuple):
+            return convert(value[0], reading.unit, unit), convert(value[1], reading.unit, unit)
+        return None if isinstance(value, str) else convert(value, reading.unit, unit)
+    except (UnknownUnitError, ValueError):
+        return None
 
 
 def _span(reading: Reading, parameter: Parameter, unit: str) -> Band:

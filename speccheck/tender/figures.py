@@ -121,7 +121,7 @@ def _against_limit(
     )
     if isinstance(limit, tuple):
         margin = settled(min(span.low - limit[0], limit[1] - span.high), max(map(abs, limit)))
-        grade = rounded(graded(margin, guard), span.half_digit)
+        grade = rounded(graded(margin, guard, requirement.unit), span.half_digit)
         return _windowed(requirement, parameter, reading, grade)
     if not isinstance(limit, float | int):
         return Grade(Compliance.NOT_JUDGED, None, "the limit is not a figure")
@@ -132,6 +132,7 @@ def _against_limit(
     grade = graded(
         settled(margin, float(limit)),
         guard,
+        requirement.unit,
         equal_meets=settings.equality_meets if equal else operator in ("≥", "≤"),
         equal_note="EQUAL: exactly at the limit; the equality rule decides" if equal else "",
     )

@@ -9,6 +9,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from speccheck.records import Compliance
+from speccheck.records.demands import margin_unit
 
 _SLACK = 1e-9
 """Share of the figures below which two floats count as equal."""
@@ -28,16 +29,20 @@ def settled(margin: float, scale: float) -> float:
     return 0.0 if abs(margin) <= _SLACK * max(1.0, abs(scale)) else margin
 
 
-def graded(margin: float, guard: float, *, equal_meets: bool = True, equal_note: str = "") -> Grade:
+def graded(
+    margin: float, guard: float, unit: str = "", *, equal_meets: bool = True, equal_note: str = ""
+) -> Grade:
     """Grade of one figure against one limit.
 
     Parameters
     ----------
     margin : figure against limit, positive on the good side, in the unit of the limit
     guard : guard band in the same unit, not negative
+    unit : that unit, for the words
     equal_meets : whether a figure exactly at the limit meets it
     equal_note : what to say where equality decided
     """
+    within = f"within the guard band of {guard:g} {margin_unit(unit)}".rstrip()
     if margin == 0 and (not equal_meets or equal_note):
         if equal_meets:
             return Grade(Compliance.MEETS_NARROWLY, 0.0, equal_note)
@@ -46,9 +51,9 @@ def graded(margin: float, guard: float, *, equal_meets: bool = True, equal_note:
     if margin >= guard:
         return Grade(Compliance.MEETS, margin)
     if margin >= 0:
-        return Grade(Compliance.MEETS_NARROWLY, margin, f"within the guard band of {guard:g}")
+        return Grade(Compliance.MEETS_NARROWLY, margin, within)
     if margin >= -guard and guard > 0:
-        return Grade(Compliance.FAILS_NARROWLY, margin, f"within the guard band of {guard:g}")
+        return Grade(Compliance.FAILS_NARROWLY, margin, within)
     return Grade(Compliance.FAILS, margin)
 
 

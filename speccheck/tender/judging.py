@@ -20,7 +20,7 @@ from speccheck.records import (
 )
 from speccheck.records.demands import blocked
 from speccheck.tender.answer_rule import answer_rule, ruled
-from speccheck.tender.capabilities import covers_bands, covers_range
+from speccheck.tender.capabilities import covers_bands, covers_range, nearest
 from speccheck.tender.caps import capped
 from speccheck.tender.conditions import at_demanded_tilt, comparable
 from speccheck.tender.deviations import with_deviation
@@ -89,13 +89,9 @@ def _bands_row(requirement: Requirement, panel: Panel) -> MatrixRow:
     if grade.verdict is Compliance.NOT_STATED:
         said = [s for s in panel.statements if s.parameter in ("frequency_range", "operating_bands")]
         return _without_reading(requirement, Offer(band=None, statements=tuple(said)))
-    value = None if not used or isinstance(used[0].value, str) else used[0].value
-    return replace(
-        _row(requirement, grade.verdict, note=grade.note),
-        offered=used[0] if used else None,
-        offered_in_unit=value,
-        margin=grade.margin,
-    )
+    shown, value = nearest(requirement, used) if used else (None, None)
+    row = _row(requirement, grade.verdict, note=grade.note)
+    return replace(row, offered=shown, offered_in_unit=value, margin=grade.margin)
 
 
 def _answered(requirement: Requirement, offer: Offer, panel: Panel, settings: Settings) -> MatrixRow:
@@ -119,9 +115,8 @@ def _answered(requirement: Requirement, offer: Offer, panel: Panel, settings: Se
             requirement, parameter, offer.readings, guard_band(requirement, parameter, settings)
         )
         row = _row(requirement, grade.verdict, note=grade.note, offer=offer)
-        first = offer.readings[0]
-        value = None if isinstance(first.value, str) else first.value
-        return replace(row, offered=first, offered_in_unit=value, margin=grade.margin)
+        shown, value = nearest(requirement, offer.readings)
+        return replace(row, offered=shown, offered_in_unit=value, margin=grade.margin)
     return _figure_row(requirement, offer, panel, settings)
 
 

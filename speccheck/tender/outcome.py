@@ -9,6 +9,7 @@ from collections.abc import Iterator, Sequence
 
 from speccheck.dictionary import parameters
 from speccheck.records import Finding, Fit, Level, MatrixRow, Outcome
+from speccheck.records.demands import margin_unit
 from speccheck.tender.grading import FAILING, OPEN
 
 
@@ -45,7 +46,7 @@ def _mandatory(rows: Sequence[MatrixRow]) -> Iterator[MatrixRow]:
 def _failed(rows: Sequence[MatrixRow]) -> Iterator[str]:
     for row in _mandatory(rows):
         if row.verdict in FAILING:
-            unit = row.requirement.unit
+            unit = margin_unit(row.requirement.unit)
             shown = "°" if unit == "deg" else f" {unit}".rstrip()
             margin = f" by {abs(row.margin):.3g}{shown}" if row.margin else ""
             yield f"{label(row)}: mandatory, {row.verdict.value}{margin}"

@@ -282,3 +282,16 @@ def test_ports_counted_band_by_band_are_asked_about() -> None:
     said = (says("rf_ports", 2.0, band=LOW), says("rf_ports", 4.0, band=HIGH))
     assert _row(demand("rf_ports", "≥", 6.0), *said).verdict is Compliance.NOT_JUDGED
     assert _row(demand("rf_ports", "≥", 8.0), *said).verdict is Compliance.FAILS
+
+
+def test_the_range_shown_is_the_one_that_answers_in_the_unit_demanded() -> None:
+    """1.695 to 2.36 GHz inside 1695 to 2690 MHz; the low band of the same panel answers nothing of it."""
+    offered = (says("operating_bands", LOW, band=LOW), says("operating_bands", HIGH, band=HIGH))
+    row = _row(demand("operating_bands", "contains", (1.695, 2.36), "GHz"), *offered)
+    assert row.verdict is Compliance.MEETS
+    assert row.offered_in_unit == pytest.approx((1.695, 2.69))
+
+
+def test_a_narrow_verdict_names_the_guard_band_with_its_unit() -> None:
+    row = _row(demand("gain", "≥", 17.0), says("gain", 16.9, "16.90"), guard_bands={"gain": 0.3})
+    assert row.note == "within the guard band of 0.3 dB"

@@ -53,11 +53,12 @@ def test_a_misfit_asks_and_never_rejects(verdict: Fit, expected: Outcome) -> Non
 
 
 def test_many_good_rows_never_average_a_failed_one_away() -> None:
+    """A difference of two levels is in dB, whatever their reference (ITU-R V.574-5, from memory)."""
     good = [demand("gain", "≥", float(g), clause=str(g)) for g in range(1, 17)]
     rows = judge(tender(*good, demand("gain", "≥", 18.0, clause="18")), panel(says("gain", 17.0)), ())
     verdict, reasons = outcome((), rows)
     assert verdict is Outcome.REJECT
-    assert reasons == ("clause 18, Gain: mandatory, fails by 1 dBi",)
+    assert reasons == ("clause 18, Gain: mandatory, fails by 1 dB",)
 
 
 def test_a_statement_without_figure_is_never_a_pass() -> None:

@@ -11,7 +11,14 @@ from speccheck.records import Level
 from speccheck.records.evaluations import Bid, Evaluation, Offer
 from speccheck.report.codec import encode_fields
 from speccheck.report.machine import compact, member
-from speccheck.report.offers.comparison_view import Comparison, compare
+from speccheck.report.offers.comparison_points import MOST_PLACES, points_lines, swing_texts
+from speccheck.report.offers.comparison_view import (
+    COLUMNS_PER_TABLE,
+    MARKS_PER_TABLE,
+    Comparison,
+    compare,
+)
+from speccheck.report.pages.view import guard_bands
 
 SCHEMA = "speccheck-comparison/1"
 _NOT_SAID_OF_A_BID = frozenset({"path", "resumed", "offers"})
@@ -29,12 +36,11 @@ def write_comparison(evaluation: Evaluation, out: str | Path, formats: Sequence[
     folder = Path(out)
     folder.mkdir(parents=True, exist_ok=True)
     view = cache(lambda: compare(evaluation))
-    page = cache(lambda: render_comparison(view()).encode("utf-8", "replace"))
     makers: dict[str, Callable[[], Iterator[bytes]]] = {
         "json": lambda: (text.encode("utf-8", "backslashreplace") for text in comparison_json(evaluation)),
         "xlsx": lambda: iter((_book(view()),)),
-        "html": lambda: iter((page(),)),
-        "pdf": lambda: iter((_pdf(page().decode()),)),
+        "html": lambda: iter((render_comparison(view(), linked=True).encode("utf-8", "replace"),)),
+        "pdf": lambda: iter((_pdf(render_comparison(view())),)),
     }
     written: list[Path] = []
     for name, make in makers.items():
@@ -68,13 +74,26 @@ def _offer_json(offer: Offer) -> str:
     return f'\n{said[:-1]},"cells":[\n{rows}]}}'
 
 
-def render_comparison(view: Comparison) -> str:
-    """The comparison as one self-contained HTML page."""
+def render_comparison(view: Comparison, *, linked: bool = False) -> str:
+    """The comparison as one self-contained HTML page, with links to the reports beside it if `linked`."""
     from speccheck.report.pages.html import render  # noqa: PLC0415 - jinja2 only if asked for
 
-    evaluation = view.evaluation
-    levels = tuple(level for level in Level if evaluation.tender is not None)
-    return render("comparison.html", evaluation.settings.paper, view.numbers, view=view, levels=levels)
+    settings = view.evaluation.settings
+    placed = view.placed[:MOST_PLACES]
+    return render(
+        "comparison.html",
+        settings.paper,
+        view.numbers,
+        view=view,
+        levels=tuple(Level),
+        groups=view.groups(COLUMNS_PER_TABLE),
+        glances=view.groups(MARKS_PER_TABLE),
+        placed=placed,
+        points=points_lines(view, placed),
+        swings=swing_texts(view),
+        guards=guard_bands(settings, view.numbers),
+        linked=linked,
+    )
 
 
 def _book(view: Comparison) -> bytes:

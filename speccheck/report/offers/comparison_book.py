@@ -4,10 +4,11 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
 
-from speccheck.records import Compliance, Level, Outcome, Requirement, Value
+from speccheck.records import Compliance, Outcome, Requirement, Value
 from speccheck.records.evaluations import Evaluation, OfferCell
+from speccheck.report.offers.comparison_points import points_lines
 from speccheck.report.offers.comparison_view import Column as OfferColumn
-from speccheck.report.offers.comparison_view import Comparison, lines
+from speccheck.report.offers.comparison_view import Comparison
 from speccheck.report.pages.formats import shown_unit
 from speccheck.report.pages.marks import mark_for
 from speccheck.report.pages.view import label, rules_fingerprint
@@ -16,7 +17,6 @@ from speccheck.report.workbooks.cells import Content, Rich, column_letter
 from speccheck.report.workbooks.sheets import Column, Imprint, Table, moment_of
 
 _MOST_MATRIX_COLUMNS = 250
-_PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
 
 
 def comparison_bytes(view: Comparison) -> bytes:
@@ -81,7 +81,7 @@ def _offers(view: Comparison) -> Table:
     )
     rows = [
         (
-            c.number, c.name, c.offer.file, c.offer.outcome.value, *c.counts, c.offer.misfits, c.offer.doubts,
+            c.number, c.name, c.bid.label, c.offer.outcome.value, *c.counts, c.offer.misfits, c.offer.doubts,
             c.points, c.place or None, "; ".join(c.offer.reasons),
         )
         for c in view.columns
@@ -107,10 +107,6 @@ def _offers(view: Comparison) -> Table:
 
 def _matrix(view: Comparison) -> Table:
     shown = view.columns[:_MOST_MATRIX_COLUMNS]
-    listed = sorted(
-        (line for level in Level for line in lines(view.evaluation, shown, level)),
-        key=lambda line: line.index,
-    )
     rows = [
         (
             line.requirement.clause,
@@ -118,7 +114,7 @@ def _matrix(view: Comparison) -> Table:
             _demand(view, line.requirement),
             *(_entry_text(view, line.requirement, entry.cell) if entry else None for entry in line.entries),
         )
-        for line in listed
+        for line in view.lines(shown)
     ]
     return Table(
         name="Matrix",
@@ -201,14 +197,12 @@ def _ends(value: Value | None) -> tuple[Content, Content]:
 
 def _points(view: Comparison) -> Table:
     """Weights and shares of the offers with a place; the last row sums them by a live formula."""
-    placed = [column for column in view.columns if column.place][:_MOST_MATRIX_COLUMNS]
-    requirements = view.evaluation.tender.requirements if view.evaluation.tender else ()
+    placed = view.placed[:_MOST_MATRIX_COLUMNS]
     rows: list[Sequence[Content]] = []
-    for one in view.evaluation.weights:
-        demanded = [requirements[place] for place in one.requirements]
-        shares = [float(all(_earns(column, place) for place in one.requirements)) for column in placed]
-        demands = "; ".join(_demand(view, requirement) for requirement in demanded)
-        rows.append((demanded[0].clause, demands, Rich(value=one.weight, look="entry"), *shares))
+    for line in points_lines(view, placed):
+        demands = "; ".join(_demand(view, requirement) for requirement in line.demands)
+        weight = Rich(value=line.weight, look="entry")
+        rows.append((line.demands[0].clause, demands, weight, *map(float, line.earned)))
     last = len(rows) + 1
     sums: list[Content] = [
         Rich(
@@ -234,11 +228,6 @@ def _points(view: Comparison) -> Table:
     )
 
 
-def _earns(column: OfferColumn, index: int) -> bool:
-    verdicts = [cell.verdict for cell in column.offer.cells if cell.requirement == index]
-    return bool(verdicts) and all(verdict in _PASSED for verdict in verdicts)
-
-
 def _files(view: Comparison) -> Table:
     return Table(
         name="Files",
@@ -250,7 +239,7 @@ def _files(view: Comparison) -> Table:
             Column(heading="Why not usable", width=80, look="wrap"),
         ),
         rows=[
-            (bid.file, bid.sha256, len(bid.offers), ", ".join(bid.outputs), bid.error)
+            (bid.label, bid.sha256, len(bid.offers), ", ".join(bid.outputs), bid.error)
             for bid in view.evaluation.bids
         ],
     )

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
 
-from speccheck.records import Requirement
+from speccheck.records import Compliance, Requirement
 from speccheck.records.evaluations import Offer, OfferCell
 from speccheck.report.pages.canvas import Canvas, Figure, scale_around
 from speccheck.report.pages.formats import Numbers, shown_unit
@@ -14,24 +14,32 @@ from speccheck.report.pages.view import label
 MOST_CHARTS = 12
 MOST_OFFERS = 24
 _WIDTH, _ROW = 320, 16
+_OUTSIDE = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
+_MOST_NAMED = 4
 
 Row = tuple[int, str, Offer]
+Point = tuple[int, str, OfferCell]
 
 
 def strips(
     requirements: Sequence[Requirement], offers: Sequence[Row], numbers: Numbers
 ) -> tuple[Figure, ...]:
     """Charts of the numeric requirements that at least two offers answer, in tender order."""
-    figures: list[Figure] = []
+    found = list(charted(requirements, offers))
+    return tuple(_strip(requirement, points, numbers) for requirement, points in found[:MOST_CHARTS])
+
+
+def charted(
+    requirements: Sequence[Requirement], offers: Sequence[Row]
+) -> Iterator[tuple[Requirement, Sequence[Point]]]:
+    """Requirements worth a chart, with the figures offered."""
     for index, requirement in enumerate(requirements):
         points = list(_points(index, offers[:MOST_OFFERS]))
-        limits = _limits(requirement)
-        if len({number for number, _, _ in points}) >= 2 and limits and len(figures) < MOST_CHARTS:
-            figures.append(_strip(requirement, limits, points, numbers))
-    return tuple(figures)
+        if _limits(requirement) and len({number for number, _, _ in points}) >= 2:
+            yield requirement, points
 
 
-def _points(index: int, offers: Sequence[Row]) -> Iterator[tuple[int, str, OfferCell]]:
+def _points(index: int, offers: Sequence[Row]) -> Iterator[Point]:
     for number, name, offer in offers:
         for cell in offer.cells:
             if cell.requirement == index and isinstance(cell.offered, float | int | tuple):
@@ -45,12 +53,8 @@ def _limits(requirement: Requirement) -> tuple[float, ...]:
     return (float(limit),) if isinstance(limit, float | int) else ()
 
 
-def _strip(
-    requirement: Requirement,
-    limits: Sequence[float],
-    points: Sequence[tuple[int, str, OfferCell]],
-    numbers: Numbers,
-) -> Figure:
+def _strip(requirement: Requirement, points: Sequence[Point], numbers: Numbers) -> Figure:
+    limits = _limits(requirement)
     rows = list(dict.fromkeys((number, name) for number, name, _ in points))
     canvas = Canvas(_WIDTH, 44 + _ROW * len(rows), numbers)
     bottom = 14 + _ROW * len(rows)
@@ -63,33 +67,45 @@ def _strip(
     for line, (number, _) in enumerate(rows):
         y = 14 + _ROW * line + 5
         canvas.write(4, y + 4, f"{number}", style="text")
-        for cell in (cell for n, _, cell in points if n == number):
+        cells = [cell for n, _, cell in points if n == number]
+        for cell in cells:
             ends = _ends(cell)
             if len(ends) == 2:
                 canvas.line(((scale(ends[0]), y), (scale(ends[1]), y)), "claimspan")
             for value in ends:
                 canvas.diamond(scale(value), y, 4, mark_for(cell.verdict).tone)
-        worst = [cell for n, _, cell in points if n == number]
-        shown = min(worst, key=lambda c: c.margin if c.margin is not None else float("inf"))
+        shown = min(cells, key=lambda c: c.margin if c.margin is not None else float("inf"))
         written = numbers.stated(_rounded(shown), requirement.unit)
         canvas.write(258, y + 4, f"{mark_for(shown.verdict).symbol} {written}", style="small")
     name = label(requirement.parameter) if requirement.parameter else requirement.wording[:40]
     unit = shown_unit(requirement.unit)
     canvas.write(142, bottom + 26, f"{name}{f' [{unit}]' if unit else ''}; dashed: limit", "middle", "small")
-    table = tuple(
-        (f"{n}", who, mark_for(c.verdict).word, numbers.stated(_rounded(c), requirement.unit))
-        for n, who, c in points
-    )
-    passing = sum(1 for _, _, c in points if (c.margin or 0.0) >= 0)
+    bands = ", ".join(map(numbers.band, requirement.bands))
     limit_text = numbers.stated(requirement.limit, requirement.unit)
+    demand = f"{name} {requirement.operator} {limit_text}{f', {bands}' if bands else ''}"
     return canvas.figure(
-        f"Clause {requirement.clause or '–'}, {name} {requirement.operator} {limit_text}: "
-        f"{passing} of {len(points)} figures inside",
-        f"Offered figures on one axis, offer numbers at the left; the limit {limit_text} is dashed.",
+        f"Clause {requirement.clause or '–'}: {demand}",
+        _in_words(points, requirement.unit, numbers),
         kind="offers",
         columns=("Offer", "Panel", "Verdict", "Figure"),
-        rows=table,
+        rows=tuple(
+            (f"{n}", who, mark_for(c.verdict).word, numbers.stated(_rounded(c), requirement.unit))
+            for n, who, c in points
+        ),
     )
+
+
+def _in_words(points: Sequence[Point], unit: str, numbers: Numbers) -> str:
+    outside = [(n, who, c) for n, who, c in points if (c.underlying or c.verdict) in _OUTSIDE]
+    if not outside:
+        return f"All {len(points)} figures are inside the limit."
+    named = [
+        f"{n} {who} ({numbers.stated(_rounded(c), unit)})"
+        for n, who, c in {n: (n, who, c) for n, who, c in outside}.values()
+    ]
+    more = f" and {len(named) - _MOST_NAMED} more" if len(named) > _MOST_NAMED else ""
+    said = f"{len(points) - len(outside)} of {len(points)} figures are inside the limit"
+    return f"{said}; outside: {', '.join(named[:_MOST_NAMED])}{more}."
 
 
 def _ends(cell: OfferCell) -> tuple[float, ...]:

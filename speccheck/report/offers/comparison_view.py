@@ -2,19 +2,20 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Sequence
+from collections.abc import Iterator, Mapping, Sequence
 from dataclasses import dataclass
+from functools import cached_property
 
 from speccheck.records import Compliance, Level, Outcome, Requirement
 from speccheck.records.evaluations import Bid, Evaluation, Offer, OfferCell
-from speccheck.report.offers.comparison_figures import strips
+from speccheck.report.offers.comparison_figures import MOST_CHARTS, charted, strips
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.formats import Numbers
 
 MOST_COLUMNS = 60
-"""Offers a page can show; the workbook and the JSON always hold all of them."""
+"""Offers whose figures a page can show; its list of offers, the workbook and the JSON hold all of them."""
 COLUMNS_PER_TABLE = 5
-MOST_SWINGS = 12
+MARKS_PER_TABLE = 20
 
 _SEVERITY = (
     Compliance.FAILS,
@@ -30,7 +31,7 @@ _FAILED = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
 _OPEN = (Compliance.NOT_STATED, Compliance.DECLARED_ONLY, Compliance.NOT_JUDGED)
 
 
-@dataclass(frozen=True, slots=True, kw_only=True)
+@dataclass(frozen=True, kw_only=True)
 class Column:
     """One offer; `number` is what charts and tables call it, `place` 0 where it has none."""
 
@@ -46,6 +47,14 @@ class Column:
     def knocked_out(self) -> bool:
         """Whether a mandatory requirement rejects the offer."""
         return self.offer.outcome is Outcome.REJECT
+
+    @cached_property
+    def cells(self) -> Mapping[int, Sequence[OfferCell]]:
+        """Rows of the offer by the place of their requirement."""
+        grouped: dict[int, list[OfferCell]] = {}
+        for cell in self.offer.cells:
+            grouped.setdefault(cell.requirement, []).append(cell)
+        return grouped
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -63,14 +72,14 @@ class Entry:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Line:
-    """One requirement across all shown offers."""
+    """One requirement across some offers."""
 
     index: int
     requirement: Requirement
     entries: tuple[Entry | None, ...]
 
 
-@dataclass(frozen=True, slots=True, kw_only=True)
+@dataclass(frozen=True, kw_only=True)
 class Comparison:
     """Everything the templates and the workbook print."""
 
@@ -79,55 +88,77 @@ class Comparison:
     unusable: tuple[Bid, ...]
     empty: tuple[Bid, ...]
     numbers: Numbers
-    figures: tuple[Figure, ...] = ()
     shown: tuple[Column, ...] = ()
 
-    def lines(self, columns: Sequence[Column], level: Level) -> tuple[Line, ...]:
-        """Lines of one level in tender order for some of the offers."""
-        return tuple(lines(self.evaluation, columns, level))
+    @property
+    def requirements(self) -> tuple[Requirement, ...]:
+        """Requirements of the tender, none without one."""
+        return self.evaluation.tender.requirements if self.evaluation.tender else ()
 
     @property
-    def column_groups(self) -> tuple[tuple[Column, ...], ...]:
-        """The shown offers, a table's width at a time."""
-        starts = range(0, len(self.shown), COLUMNS_PER_TABLE)
-        return tuple(self.shown[i : i + COLUMNS_PER_TABLE] for i in starts)
+    def placed(self) -> tuple[Column, ...]:
+        """Offers with a place, the first one first."""
+        return tuple(column for column in self.columns if column.place)
+
+    def lines(self, columns: Sequence[Column], level: Level | None = None) -> tuple[Line, ...]:
+        """Lines in tender order for some of the offers, of one level where it is given."""
+        return tuple(_lines(self.requirements, columns, level))
+
+    def groups(self, size: int) -> tuple[tuple[Column, ...], ...]:
+        """The shown offers, a table's width at a time, in tables of about the same width."""
+        tables = -(-len(self.shown) // size) or 1
+        width = -(-len(self.shown) // tables)
+        return tuple(self.shown[i : i + width] for i in range(0, len(self.shown), max(width, 1)))
 
     @property
     def hidden_columns(self) -> int:
-        """Offers that the page leaves to the workbook."""
+        """Offers whose figures the page leaves to the workbook."""
         return len(self.columns) - len(self.shown)
+
+    @cached_property
+    def figures(self) -> tuple[Figure, ...]:
+        """Charts of the requirements with figures."""
+        rows = [(column.number, column.name, column.offer) for column in self.shown]
+        return strips(self.requirements, rows, self.numbers)
+
+    @property
+    def hidden_figures(self) -> int:
+        """Requirements whose chart the page leaves out."""
+        rows = [(column.number, column.name, column.offer) for column in self.shown]
+        return max(sum(1 for _ in charted(self.requirements, rows)) - MOST_CHARTS, 0)
 
     @property
     def sentence(self) -> str:
         """The evaluation in one sentence."""
         outcomes = [column.offer.outcome for column in self.columns]
         parts = [f"{outcomes.count(word)} {word.value}" for word in Outcome if outcomes.count(word)]
-        bids = len(self.evaluation.bids)
-        unusable = f"; {len(self.unusable)} of them could not be used" if self.unusable else ""
-        offers = f"{len(outcomes)} offer{'' if len(outcomes) == 1 else 's'}"
-        return f"{offers} from {bids} file{'' if bids == 1 else 's'}: {', '.join(parts) or 'none'}{unusable}."
+        said = f"{_count(len(outcomes), 'offer')} from {_count(self._usable, 'file')}"
+        unusable = f"; {_count(len(self.unusable), 'more file')} could not be used" if self.unusable else ""
+        return f"{said}: {', '.join(parts) or 'none'}{unusable}."
 
     @property
-    def swing_texts(self) -> tuple[str, ...]:
-        """How far weights must move, in sentences, the least move of each pair of neighbours first."""
-        return tuple(_swing_texts(self))
+    def _usable(self) -> int:
+        return len(self.evaluation.bids) - len(self.unusable)
+
+
+def _count(number: int, thing: str) -> str:
+    return f"{number} {thing}{'' if number == 1 else 's'}"
 
 
 def compare(evaluation: Evaluation) -> Comparison:
-    """Put an evaluation in reading order: offers by place, the rejected ones first as they decide most."""
+    """Put an evaluation in reading order: the rejected offers first as they decide most, the others by place.
+
+    Where there are more offers than a page can show, it shows those with the best places.
+    """
     columns = tuple(_columns(evaluation))
-    numbers = Numbers(evaluation.settings.decimal_comma, evaluation.settings.date_order)
-    shown = columns[:MOST_COLUMNS]
-    requirements = evaluation.tender.requirements if evaluation.tender else ()
-    rows = [(c.number, c.name, c.offer) for c in shown]
+    first = columns if len(columns) <= MOST_COLUMNS else sorted(columns, key=lambda c: c.knocked_out)
     return Comparison(
         evaluation=evaluation,
         columns=columns,
         unusable=tuple(bid for bid in evaluation.bids if bid.error),
         empty=tuple(bid for bid in evaluation.bids if not bid.error and not bid.offers),
-        numbers=numbers,
-        shown=shown,
-        figures=strips(requirements, rows, numbers),
+        numbers=Numbers(evaluation.settings.decimal_comma, evaluation.settings.date_order),
+        shown=tuple(first[:MOST_COLUMNS]),
     )
 
 
@@ -162,23 +193,16 @@ def _counts(evaluation: Evaluation, offer: Offer) -> tuple[int, int, int, int, i
     return len(cells) - failed - open_, failed, open_, doubted, accepted
 
 
-def lines(evaluation: Evaluation, columns: Sequence[Column], level: Level) -> Iterator[Line]:
-    """Lines of one level, in tender order; rules that judge no row have no line."""
-    requirements = evaluation.tender.requirements if evaluation.tender else ()
-    grouped = [_by_requirement(column.offer) for column in columns]
+def _lines(
+    requirements: Sequence[Requirement], columns: Sequence[Column], level: Level | None
+) -> Iterator[Line]:
+    """Lines in tender order; rules that judge no row have no line."""
     for index, requirement in enumerate(requirements):
-        entries = tuple(_entry(cells.get(index, ())) for cells in grouped)
-        if requirement.level is level and (
-            requirement.operator not in ("rule", "after award") or any(entries)
-        ):
+        if level not in (None, requirement.level):
+            continue
+        entries = tuple(_entry(column.cells.get(index, ())) for column in columns)
+        if requirement.operator not in ("rule", "after award") or any(entries):
             yield Line(index=index, requirement=requirement, entries=entries)
-
-
-def _by_requirement(offer: Offer) -> dict[int, list[OfferCell]]:
-    grouped: dict[int, list[OfferCell]] = {}
-    for cell in offer.cells:
-        grouped.setdefault(cell.requirement, []).append(cell)
-    return grouped
 
 
 def _entry(cells: Sequence[OfferCell]) -> Entry | None:
@@ -189,26 +213,3 @@ def _entry(cells: Sequence[OfferCell]) -> Entry | None:
         return _SEVERITY.index(cell.verdict), cell.margin if cell.margin is not None else float("inf")
 
     return Entry(cell=min(cells, key=weight), bands=len(cells))
-
-
-def _swing_texts(comparison: Comparison) -> Iterator[str]:
-    evaluation = comparison.evaluation
-    requirements = evaluation.tender.requirements if evaluation.tender else ()
-    names = {(s.bid, s.offer): evaluation.bids[s.bid].offers[s.offer].panel for s in evaluation.standings}
-    numbers = {id(column.offer): column.number for column in comparison.columns}
-    seen: set[int] = set()
-    for swing in evaluation.swings:
-        if swing.ahead in seen or len(seen) >= MOST_SWINGS:
-            continue
-        seen.add(swing.ahead)
-        ahead, behind = evaluation.standings[swing.ahead], evaluation.standings[swing.behind]
-        clause = requirements[swing.requirement].clause
-        write = comparison.numbers.plain
-        first = numbers[id(evaluation.bids[ahead.bid].offers[ahead.offer])]
-        second = numbers[id(evaluation.bids[behind.bid].offers[behind.offer])]
-        one, other = names[ahead.bid, ahead.offer], names[behind.bid, behind.offer]
-        yield (
-            f"Offers {first} ({one}) and {second} ({other}) would draw level "
-            f"if the weight of clause {clause} moved from {write(swing.weight)} to "
-            f"{write(round(swing.weight_at_par, 3))}, all other weights kept."
-        )

@@ -8,6 +8,7 @@ import re
 from dataclasses import dataclass
 
 from speccheck.records import Amount, Band, Interval, Value
+from speccheck.records.demands import margin_unit
 
 MINUS = "−"
 NARROW_SPACE = " "
@@ -109,10 +110,10 @@ class Numbers:
         return self._with_unit(self.plain(value), unit)
 
     def signed(self, value: float, unit: str = "", decimals: int | None = None) -> str:
-        """A difference: always with its sign."""
+        """A difference of two figures in `unit`: always with its sign."""
         (value,), unit = _in_millimetres((value,), unit)
         digits = decimals_for(value, unit) if decimals is None else decimals
-        text = self.plain(value, digits)
+        text, unit = self.plain(value, digits), margin_unit(unit)
         return self._with_unit(text if text.startswith(MINUS) or float(value) == 0 else f"+{text}", unit)
 
     def amount(self, amount: Amount | None) -> str:

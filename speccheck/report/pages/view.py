@@ -25,6 +25,7 @@ from speccheck.records import (
     Settings,
     Tender,
 )
+from speccheck.records.demands import margin_unit
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.figures import panel_figures
 from speccheck.report.pages.formats import Numbers
@@ -173,6 +174,15 @@ def label(key: str) -> str:
     return known.label if known else key.replace("_", " ")
 
 
+def guard_bands(settings: Settings, numbers: Numbers) -> str:
+    """Guard bands in words, each in the unit of its parameter."""
+    known = parameters()
+    units = {key: margin_unit(known[key].unit) if key in known else "" for key in settings.guard_bands}
+    return "; ".join(
+        f"{label(key)} {numbers.figure(width, units[key])}" for key, width in settings.guard_bands.items()
+    )
+
+
 def fingerprint(assessment: Assessment) -> str:
     """Fingerprint of the rules an assessment was made by."""
     return rules_fingerprint(assessment.settings, assessment.tender, assessment.program_version)
@@ -263,7 +273,6 @@ def _matrix(assessment: Assessment) -> tuple[MatrixLine, ...]:
 
 
 def _settings_rows(settings: Settings, numbers: Numbers) -> tuple[tuple[str, str], ...]:
-    guards = "; ".join(f"{label(k)} {numbers.stated(v)}" for k, v in settings.guard_bands.items())
     losses = "; ".join(f"{k} {numbers.stated(v, 'dB')}" for k, v in settings.loss_db.items())
     return (
         ("Limit set of the exposure note", settings.limit_set),
@@ -274,7 +283,7 @@ def _settings_rows(settings: Settings, numbers: Numbers) -> tuple[tuple[str, str
         ("Power tolerance of the cautious set", numbers.stated(settings.power_tolerance_db, "dB")),
         ("Equality with a limit", "meets" if settings.equality_meets else "does not meet"),
         ("Statistic where a requirement names none", settings.statistic),
-        ("Guard bands", guards or "as built in for each parameter"),
+        ("Guard bands", guard_bands(settings, numbers) or "none"),
         ("Loss ranges", losses or "as built in for each class of panel"),
         ("House headings", str(len(settings.headings)) if settings.headings else "none"),
     )
