@@ -99,6 +99,8 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
         column.words.append(text)
     elif slack and is_unit(slack[1]):
         column.role, column.unit = "tolerance", slack[1]
+    elif role == "unit":
+        column.role = role
     elif is_unit(text):
         column.unit = text
     elif statistic:

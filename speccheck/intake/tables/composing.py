@@ -8,7 +8,7 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.bands import is_band_label
 from speccheck.intake.tables.columns import PLANE_LETTERS, Column, describe
 from speccheck.intake.tables.labels import Label, Labels, is_unit, statistic_of
-from speccheck.intake.tables.words import column_role
+from speccheck.intake.tables.words import column_role, is_group_heading
 
 _BRACKETS = re.compile(r"[(\[][^()\[\]]*[)\]]")
 
@@ -47,7 +47,8 @@ def _combinations(words: list[str]) -> list[str]:
         return []
     tails = [words[start:] for start in range(len(words) - 1)]
     joined = [text for tail in tails for text in (" ".join(tail), ", ".join(tail), _upper_bare(tail))]
-    return [*joined, " ".join(reversed(words)), *reversed(words)]
+    backwards = [] if is_group_heading(words[0]) else [" ".join(reversed(words))]
+    return [*joined, *backwards, *reversed(words)]
 
 
 def _upper_bare(words: list[str]) -> str:

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass, field, replace
+from dataclasses import replace
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
@@ -21,29 +21,12 @@ from speccheck.intake.tables.down_headings import (
 from speccheck.intake.tables.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.tables.down_regions import Down, cells_between
 from speccheck.intake.tables.down_row import RowCells, asides_of, joined_label, row_cells
+from speccheck.intake.tables.down_standing import Standing
 from speccheck.intake.tables.down_titles import stated_below, waiting_title
 from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
 from speccheck.intake.tables.words import without_number
-from speccheck.records import Band
-
-
-@dataclass(slots=True)
-class _State:
-    """Where the walk down the table stands."""
-
-    label: Label | None = None
-    label_row: int = 0
-    label_bottom: int = 0
-    section_band: Band | None = None
-    section_name: str = ""
-    side_band: Band | None = None
-    side_name: str = ""
-    side_bottom: int = 0
-    group: str = ""
-    pending_title: Cell | None = None
-    seen: set[tuple[object, ...]] = field(default_factory=set)
 
 
 class DownReader:
@@ -54,7 +37,7 @@ class DownReader:
         self._grid: Grid = marks.grid
         self._columns: dict[int, Column] = {}
         self._heading_rows: list[int] = []
-        self._state = _State()
+        self._state = Standing()
         self._numbering: set[int] = set()
 
     def read(self) -> None:
@@ -224,7 +207,7 @@ class DownReader:
             label=label,
             unit=extra.unit(column),
             condition="; ".join(filter(None, (condition, *(c.text for c in extra.asides)))),
-            statistic=column.statistic,
+            statistic=self._statistic(cell, column),
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )
@@ -235,6 +218,12 @@ class DownReader:
         if band is not None and band not in draft.bands:
             draft.bands.append(band)
 
+    def _statistic(self, cell: Cell, column: Column) -> str:
+        """What a column says of its figures; one merged over 'min', 'typ' and 'max' is none of them."""
+        span = self._grid.span(cell)
+        covered = [c.statistic for c in self._columns.values() if span.left <= c.index <= span.right]
+        return column.statistic if len(set(covered)) == 1 else ""
+
     def _bands_of(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> list[NamedBand]:
         if label.bands.spans:
             return [(label.bands.hull, "")]
@@ -242,13 +231,7 @@ class DownReader:
         if said is not None:
             return [said]
         bands = self._panels.bands_of(column)
-        return bands.of(self._grid, cell, column) or [self._of_section()]
-
-    def _of_section(self) -> NamedBand:
-        state = self._state
-        if state.side_name:
-            return state.side_band, "" if state.side_band else state.side_name
-        return state.section_band, "" if state.section_band else state.section_name
+        return bands.of(self._grid, cell, column) or [self._state.band]
 
     def _maybe_new_panel(self) -> None:
         """A title inside the table, over parameters the panel above already has, starts the next panel."""

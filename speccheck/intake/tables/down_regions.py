@@ -88,10 +88,16 @@ def _is_second_label(marks: Marks, columns: dict[int, list[int]], column: int) -
             if _details_labels(marks, other, column, columns[column]):
                 return True
             near = [row for row in rows if columns[column][0] - 6 <= row <= columns[column][-1] + 6]
+            near = [row for row in near if not _parted(marks, row, columns[column][0], column)]
             beyond = [row for row in near if _first_value_column(marks, row, other) > column]
             if near and len(beyond) * 2 > len(near):
                 return True
     return False
+
+
+def _parted(marks: Marks, row: int, top: int, column: int) -> bool:
+    """Whether the heading row of a table with labels in a column lies between a row above it and its top."""
+    return any(heads_columns(marks, between, column) for between in range(row + 1, top))
 
 
 def _details_labels(marks: Marks, labels: int, column: int, rows: list[int]) -> bool:

@@ -20,7 +20,7 @@ _GENERIC = re.compile(
     r"antenn|antena|panel|band$|sheet|daten|sector|sektor|passiv|activ|aktiv|port$|ports$|beam|array|mimo|technical|"
     r"specif|revision|issue|rev\.?$|draft|offer|tender|bid$|model|type|typ$|product|dual|multi|quad|hexa|octo|penta"
 )
-_NUMBER_OF_NAME = re.compile(r"\d{2}[\d/.-]*")
+_NUMBER_OF_NAME = re.compile(r"\d{2}[\d/.-]*|\d[/-]\d+")
 _YEAR = re.compile(r"(?:19|20)\d\d(?:[-/.]\d\d?)*")
 _SHORT = 3
 

@@ -128,8 +128,11 @@ def _roles_of_words() -> dict[str, frozenset[str]]:
 
 
 def is_generic_sheet_name(name: str) -> bool:
-    """Whether a sheet name says nothing of the panel on it."""
-    return fold(name).rstrip("0123456789 -_.()") in _table()["sheet"]["generic"] | {""}
+    """Whether a sheet name says nothing of the panel on it: 'Data 2', 'Panels A', 'Datasheets'."""
+    folded = fold(name).rstrip("0123456789 -_.()")
+    generic = _table()["sheet"]["generic"] | {""}
+    bare = re.sub(r"[ -][a-z]$", "", folded)
+    return bool({folded, bare, bare.removesuffix("s"), bare.removesuffix("en")} & generic)
 
 
 @lru_cache(maxsize=20_000)
@@ -193,7 +196,7 @@ def _colour_and_number(folded: str) -> bool:
 
 
 def names_array(text: str) -> bool:
-    """Whether words only tell the arrays of a panel apart, by place or colour: 'Lower left', 'Yellow array'."""
+    """Whether words only tell the arrays of a panel apart, by place or colour: 'Lower left', 'Yellow'."""
     words = re.findall(r"[^\W\d_]+", fold(text))
     band = _table()["band"]
     return bool(words) and band["arrays"].union(band["colours"]).issuperset(words)
