@@ -52,10 +52,10 @@ def compliance_distance_fits_power(case: Case, compliance_distance: Reading) -> 
 
     Assumptions
     Power over all ports and both polarisations, highest gain, general public and whole body of the limit set
-    unless the cell says workers. Tried are workers' and local limits, reflection 1, 2.56 and 4, time factors
-    1, 0.75, 0.25 and 0.1875. A distance at or above the plain one (free space, full power) fits; a shorter
-    one that a familiar set explains within 4 % is doubtful, as the set is not stated; one shorter than all of
-    them does not fit.
+    unless the cell says workers, its levels times the buyer's country factor. Tried are workers' and local
+    limits, reflection 1, 2.56 and 4, time factors 1, 0.75, 0.25 and 0.1875. A distance at or above the plain
+    one (free space, full power) fits; a shorter one that a familiar set explains within 4 % is doubtful, as
+    the set is not stated; one shorter than all of them does not fit.
 
     Worked example
     80 dBm and 10 W/m² give 28.2 m; 12.2 m is that at a factor of 0.1875, 45.1 m that at a reflection of 2.56.
@@ -72,32 +72,45 @@ def compliance_distance_fits_power(case: Case, compliance_distance: Reading) -> 
     if not sources:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=_missing(case.panel))
     population = WORKERS if _WORKER_WORDS.search(words(compliance_distance)) else PUBLIC
-    reach = _Reach(sources, limit_set(name), population)
+    reach = _Reach(sources, limit_set(name), population, case.settings.country_factor)
     plain = reach.distance(population, WHOLE_BODY, factor=compliance_distance.at.get("time_factor", 1.0))
     return None if plain is None else _judged(compliance_distance, reach, plain)
 
 
 @dataclass(frozen=True, slots=True)
 class _Reach:
-    """Distances [m] of all bands together under a limit set."""
+    """Distances [m] of all bands together under a limit set and the buyer's factor on its levels."""
 
     sources: tuple[Radiated, ...]
     limits: LimitSet
     population: str
+    country_factor: float
 
-    def distance(self, population: str, basis: str, *, k: float = 1.0, factor: float = 1.0) -> float | None:
+    def distance(
+        self,
+        population: str,
+        basis: str,
+        *,
+        k: float = 1.0,
+        factor: float = 1.0,
+        country: float | None = None,
+    ) -> float | None:
+        on_level = country or self.country_factor
         each = []
         for source in self.sources:
             level = self.limits.lowest(*source.band, population, basis)
             if level is None:
                 return None
-            each.append(float(distance_m(source.eirp_w, level[1].value_w_m2, k, factor)))
+            each.append(float(distance_m(source.eirp_w, level[1].value_w_m2 * on_level, k, factor)))
         return float(combined_distance_m(each))
 
     def familiar(self) -> list[tuple[str, float]]:
         """Distances [m] under every familiar combination, those of the population meant first."""
         people = (self.population, *(p for p in (PUBLIC, WORKERS) if p != self.population))
         found = []
+        if self.country_factor != 1:
+            r = self.distance(self.population, WHOLE_BODY, country=1.0)
+            found += [("the levels without the country factor", r)] if r is not None else []
         for who, basis, (factor, share), (k, reflection) in product(
             people, (WHOLE_BODY, LOCAL), _FACTORS, _REFLECTIONS
         ):
@@ -136,6 +149,7 @@ def _judged(cell: Reading, reach: _Reach, plain: float) -> Judgement:
         ),
         assumptions=(
             f"Limit set {reach.limits.title} ({reach.limits.edition}); {reach.population}, whole body.",
+            *_country(reach.country_factor),
             "Power over all ports and both polarisations; highest gain; average power.",
             "A calculated distance is no statement about a site; local rules and licensed practice decide.",
         ),
@@ -143,6 +157,12 @@ def _judged(cell: Reading, reach: _Reach, plain: float) -> Judgement:
         "stated distance.",
         used=tuple(r for s in reach.sources for r in s.readings),
     )
+
+
+def _country(factor: float) -> tuple[str, ...]:
+    if factor == 1:
+        return ()
+    return (f"Levels times the country factor {factor:g} that the buyer set.",)
 
 
 def _missing(panel: Panel) -> tuple[str, ...]:
