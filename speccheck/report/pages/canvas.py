@@ -30,10 +30,10 @@ class Stroke:
 
 @dataclass(frozen=True, slots=True)
 class Label:
-    """A text at a place."""
+    """A text at a place, to the unit."""
 
-    x: float
-    y: float
+    x: int
+    y: int
     text: str
     anchor: Anchor = "start"
     style: str = "text"
@@ -54,6 +54,8 @@ class Figure:
     columns: tuple[str, ...] = ()
     rows: tuple[tuple[str, ...], ...] = ()
     kind: str = ""
+    joined: bool = False
+    """Whether no two shapes of one style meet, so that those that follow each other may be one path."""
 
     @property
     def half(self) -> bool:
@@ -68,7 +70,10 @@ class Figure:
         """
         runs = groupby(self.strokes, key=lambda stroke: stroke.style)
         paths = ((style, tuple(stroke.path for stroke in strokes)) for style, strokes in runs)
-        return tuple((style, ("".join(run),) if style in ("grid", "axis") else run) for style, run in paths)
+        lines = ("grid", "axis")
+        return tuple(
+            (style, ("".join(run),) if self.joined or style in lines else run) for style, run in paths
+        )
 
     @property
     def lettering(self) -> tuple[tuple[str, Anchor, tuple[Label, ...]], ...]:
@@ -116,7 +121,7 @@ class Canvas:
 
     def write(self, x: float, y: float, text: str, anchor: Anchor = "start", style: str = "text") -> None:
         """A text; `y` is its base line."""
-        self.labels.append(Label(round(x, 1), round(y, 1), text, anchor, style))
+        self.labels.append(Label(round(x), round(y), text, anchor, style))
 
     def figure(self, title: str, text: str, **more: object) -> Figure:
         """The finished figure."""

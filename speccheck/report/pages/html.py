@@ -22,7 +22,9 @@ from speccheck.errors import OutputError
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
 from speccheck.report.pages.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.pages.formats import Numbers, shown_unit
+from speccheck.report.pages.inks import rules, shared_groups
 from speccheck.report.pages.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
+from speccheck.report.pages.shared import common_bases, named_reading, named_readings
 from speccheck.report.pages.view import build_view, label, rules_fingerprint
 from speccheck.text import plain
 
@@ -61,13 +63,14 @@ def render(template: str, paper: str, numbers: Numbers, **context: Any) -> str:
     context : what the template prints
     """
     page = _fill(template, paper, numbers, context, wide=False)
-    return _fill(template, paper, numbers, context, wide=True) if _WIDE_LETTERS.search(page) else page
+    wide = _WIDE_LETTERS.search("".join(set(page)))
+    return _fill(template, paper, numbers, context, wide=True) if wide else page
 
 
 def _fill(template: str, paper: str, numbers: Numbers, context: dict[str, Any], *, wide: bool) -> str:
     style = _stylesheet(PAPERS.get(paper.lower(), "A4"), wide=wide)
     script = _asset("report.js")
-    return (
+    page = (
         _environment(numbers)
         .get_template(template)
         .render(
@@ -78,6 +81,7 @@ def _fill(template: str, paper: str, numbers: Numbers, context: dict[str, Any], 
             **context,
         )
     )
+    return shared_groups(page)
 
 
 def templates_folder() -> Path:
@@ -152,6 +156,9 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         LEVELS=LEVELS,
         Fit=Fit,
         Level=Level,
+        common_bases=common_bases,
+        named_reading=named_reading,
+        named_readings=named_readings,
         exposure_table=exposure_table,
         merged_by_band=merged_by_band,
         region_lines=region_lines,
@@ -211,7 +218,7 @@ def _stylesheet(paper: str, *, wide: bool) -> str:
         f"src:url(data:font/woff2;base64,{_font(f'inter-{name}{ending}.woff2')}) format('woff2')}}\n"
         for family, ending, weight, name in (_FACES + _WIDE_FACES if wide else _FACES)
     )
-    return faces + _asset("report.css").replace("size: A4", f"size: {paper}")
+    return faces + rules() + _asset("report.css").replace("size: A4", f"size: {paper}")
 
 
 @functools.cache

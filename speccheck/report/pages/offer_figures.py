@@ -65,6 +65,7 @@ def margin_chart(panel: PanelAssessment, numbers: Numbers, label: Labels) -> Fig
         f"the scale. Closest to its limit: {_closest(every, numbers, label)}.{drawn}",
         where=tuple(dict.fromkeys(row.offered.where for row, _ in rows if row.offered)),
         kind="margins",
+        joined=True,
         columns=("Requirement", "Verdict", "Margin"),
         rows=tuple(
             (
@@ -115,7 +116,6 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
     if not shown:
         return None
     canvas = Canvas(FULL, 26 + 37 * len(shown), numbers)
-    table = []
     for i, finding in enumerate(shown):
         y = 14 + 37 * i
         mark = mark_for(finding.verdict)
@@ -124,10 +124,7 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
             canvas.write(4, y + (8 if len(lines) == 1 else 2 + 13 * at), line, style="text")
         _interval_row(canvas, finding, y, mark.tone)
         canvas.write(548, y + 8, f"{mark.symbol} {mark.word}", style="strong")
-        table.append(
-            (finding.title, numbers.amount(finding.claimed), numbers.interval(finding.expected), mark.word)
-        )
-    canvas.strokes.sort(key=lambda stroke: _LAYERS.get(stroke.style, len(_LAYERS)))
+    canvas.strokes.sort(key=lambda stroke: (_LAYERS.get(stroke.style, len(_LAYERS)), stroke.style))
     key = "bar: expected interval   ◆ claim   each row has its own scale"
     canvas.write(290, 22 + 37 * len(shown), key, style="small")
     outside = [f for f in shown if f.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
@@ -137,15 +134,16 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
         if outside
         else f"{_all(len(shown), 'claim')}{where} inside what is expected"
     )
+    closest = "; ".join(
+        f"{f.title}: {numbers.amount(f.claimed)} against {numbers.interval(f.expected)}"
+        for f in (outside or shown)[:2]
+    )
     return canvas.figure(
         title,
-        "Expected interval and claim: "
-        + "; ".join(f"{t[0]}: {t[1]} against {t[2]}" for t in table[:3])
-        + ("; the others are in the table." if len(table) > 3 else "."),
-        where=tuple(dict.fromkeys(ref for f in outside for ref in f.where)),
+        f"Claim on the interval expected. {closest}. Figures, working and cells of every row stand with its "
+        "check below.",
         kind="intervals",
-        columns=("Check", "Claimed", "Expected", "Verdict"),
-        rows=tuple(table),
+        joined=True,
     )
 
 

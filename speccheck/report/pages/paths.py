@@ -7,8 +7,8 @@ from collections.abc import Iterable, Sequence
 from itertools import pairwise
 
 Point = tuple[float, float]
-SLACK = 0.15
-"""Farthest that a thinned line may run from its points [SVG units]: a tenth of the width of a curve."""
+SLACK = 0.2
+"""Farthest that a thinned line may run from its points [SVG units]: a ninth of the width of a curve."""
 
 
 def path_data(points: Iterable[Point], *, close: bool = False) -> str:
@@ -32,11 +32,9 @@ def thinned(points: Sequence[Point], slack: float = SLACK) -> list[Point]:
     spans = [(0, len(points) - 1)]
     while spans:
         first, last = spans.pop()
-        distances = [_distance(points[i], points[first], points[last]) for i in range(first + 1, last)]
-        if distances and (worst := max(distances)) > slack:
-            middle = first + 1 + distances.index(worst)
-            keep.add(middle)
-            spans += [(first, middle), (middle, last)]
+        if last - first > 1 and (place := _farthest(points[first : last + 1], slack)):
+            keep.add(first + place)
+            spans += [(first, first + place), (first + place, last)]
     return [points[i] for i in sorted(keep)]
 
 
@@ -69,10 +67,20 @@ def _step(tenths: int) -> str:
     return whole.replace("0.", ".", 1) if whole.startswith(("0.", "-0.")) else whole
 
 
-def _distance(point: Point, start: Point, end: Point) -> float:
-    """Distance of a point from the stretch between two others."""
-    dx, dy = end[0] - start[0], end[1] - start[1]
-    length = dx * dx + dy * dy
-    share = ((point[0] - start[0]) * dx + (point[1] - start[1]) * dy) / length if length else 0.0
-    share = min(max(share, 0.0), 1.0)
-    return math.hypot(point[0] - start[0] - share * dx, point[1] - start[1] - share * dy)
+def _farthest(points: Sequence[Point], slack: float) -> int:
+    """Place of the point farthest from the stretch between the first and the last; 0 where all lie within."""
+    x0, y0 = points[0]
+    dx, dy = points[-1][0] - x0, points[-1][1] - y0
+    length = math.hypot(dx, dy)
+    if length:
+        along = [(x - x0) * dx + (y - y0) * dy for x, y in points]
+        lowest, highest = min(along), max(along)
+        if lowest < -slack * length:
+            return along.index(lowest)
+        if highest > length * (length + slack):
+            return along.index(highest)
+        aside = [abs((x - x0) * dy - (y - y0) * dx) for x, y in points]
+    else:
+        aside = [math.hypot(x - x0, y - y0) for x, y in points]
+    worst = max(aside)
+    return aside.index(worst) if worst > slack * (length or 1.0) else 0

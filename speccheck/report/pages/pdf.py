@@ -2,17 +2,21 @@
 
 from __future__ import annotations
 
+import contextlib
 import datetime as dt
+import gc
 import hashlib
 import io
 import os
 import warnings
-from collections.abc import Sequence
+import zlib
+from collections.abc import Iterator, Sequence
 from dataclasses import dataclass
 from pathlib import Path
 from typing import Any, Literal
 
 from speccheck.atomic import write_bytes_atomic
+from speccheck.report.pages.inks import for_print
 from speccheck.text import plain
 
 _UNDATED = dt.datetime(2000, 1, 1, tzinfo=dt.UTC)
@@ -69,7 +73,7 @@ def pdf_bytes(html: str, attachments: Sequence[Attachment] = ()) -> bytes:
     """The PDF of a page; parameters and errors as for `write_pdf`."""
     weasyprint = _load_weasyprint()
     fetcher = weasyprint.urls.URLFetcher(allowed_protocols=["data"])
-    document = weasyprint.HTML(string=html, url_fetcher=fetcher)
+    document = weasyprint.HTML(string=for_print(html), url_fetcher=fetcher)
     moment = _moment()
     enclosed = [
         weasyprint.Attachment(
@@ -82,15 +86,51 @@ def pdf_bytes(html: str, attachments: Sequence[Attachment] = ()) -> bytes:
         )
         for item in attachments
     ]
-    with warnings.catch_warnings():
+    with warnings.catch_warnings(), _collector_at_rest():
         # WeasyPrint leaves its colour profile to the garbage collector, which warns of an open file
         warnings.simplefilter("ignore", ResourceWarning)
         content: bytes = document.write_pdf(
+            finisher=_settle,
             attachments=enclosed,
             pdf_variant=VARIANT,
             pdf_identifier=hashlib.sha256(html.encode("utf-8", "replace")).digest()[:16],
         )
     return content
+
+
+@contextlib.contextmanager
+def _collector_at_rest() -> Iterator[None]:
+    """No search for cycles while a page is laid out: its million objects are all in use until the end."""
+    was_on = gc.isenabled()
+    gc.disable()
+    try:
+        yield
+    finally:
+        if was_on:
+            gc.enable()
+
+
+def _settle(_: Any, pdf: Any) -> None:
+    """Give every object its final bytes: pydyf asks for them twice, for the file and for its identifier.
+
+    Streams are packed here, at zlib's usual level: the highest takes twice as long for one byte in a hundred.
+    """
+    import pydyf  # noqa: PLC0415 - comes with WeasyPrint
+
+    class Settled(pydyf.Object):  # type: ignore[misc, unused-ignore]
+        data, compressible = b"", False
+
+    for place, item in enumerate(pdf.objects):
+        if item.free == "f":
+            continue
+        if isinstance(item, pydyf.Stream) and item.compress:
+            plainly = pydyf.Stream(item.stream).data
+            content = plainly[plainly.index(b"stream\n") + 7 : -len(b"\nendstream")]
+            item.extra["Filter"] = "/FlateDecode"
+            item.stream, item.compress = [zlib.compress(content)], False
+        settled = pdf.objects[place] = Settled()
+        settled.number, settled.generation, settled.free = item.number, item.generation, item.free
+        settled.data, settled.compressible = item.data, item.compressible
 
 
 def _load_weasyprint() -> Any:

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Callable, Iterator
 from dataclasses import dataclass, replace
 
@@ -19,6 +20,7 @@ _ASKED = {
     "Please state the figure, with its unit and conditions.",
 }
 
+_CELL = re.compile(r"\b[A-Z]{1,3}[1-9][0-9]*\b")
 _REWORD = "{what} cannot be judged as it is worded. The buyer settles the wording; no figure is asked yet."
 _FOR_BUYER = ("condition", "baseline")
 """Operators that ask the bidder nothing: what they refer to is the buyer's to settle."""
@@ -39,6 +41,12 @@ class Question:
     bands: tuple[Band, ...] = ()
     where: tuple[CellRef, ...] = ()
     findings: tuple[int, ...] = ()
+
+    @property
+    def unnamed(self) -> tuple[CellRef, ...]:
+        """Cells in question that its own words don't name."""
+        named = set(_CELL.findall(f"{self.asked} {self.problem}"))
+        return tuple(place for place in self.where if place.cell not in named)
 
 
 def collect_questions(assessment: Assessment, label: Callable[[str], str]) -> tuple[Question, ...]:

@@ -32,7 +32,6 @@ from speccheck.report.pages.formats import Numbers
 from speccheck.report.pages.inputs import InputRow, input_rows
 from speccheck.report.pages.marks import Mark, mark_for
 from speccheck.report.pages.questions import Question, collect_questions
-from speccheck.report.pages.shared import Basis, common_bases
 from speccheck.report.pages.summary import Tally, decisions, sentence, tally
 
 MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
@@ -47,6 +46,11 @@ class FindingView:
     anchor: str
     mark: Mark
     question: Question | None
+
+    @property
+    def unexplained(self) -> bool:
+        """Whether none of the innocent readings tried would explain the claim."""
+        return self.finding.verdict in MISFITS and not self.finding.conventions
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -91,9 +95,10 @@ class PanelView:
         return tuple(f for verdict in MISFITS for f in self.findings if f.finding.verdict is verdict)
 
     @property
-    def bases(self) -> dict[str, Basis]:
-        """By check: source and assumptions that hold for all its answers on this panel."""
-        return common_bases(f.finding for f in self.findings)
+    def reasons_of_rows(self) -> tuple[str, ...]:
+        """Reasons for the outcome besides the misfits, which a table of their own says in full."""
+        claims = tuple(verdict.value for verdict in MISFITS)
+        return tuple(reason for reason in self.source.reasons if not reason.startswith(claims))
 
     def with_verdict(self, verdict: Fit) -> tuple[FindingView, ...]:
         """Findings of one verdict."""
