@@ -161,9 +161,10 @@ def _tender(bids: tuple[Path, ...], tender_file: Path | None) -> tuple[Path | No
         if tender_file is None:
             return None, None
         click.echo(f"Tender: {tender_file} (found among the bids; name another with --tender)")
+    from speccheck.report.screens.tender_listing import tender_summary
+
     tender = _read_vetted(tender_file)
-    for finding in tender.findings:
-        click.echo(f"  {finding.summary}")
+    click.echo(tender_summary(tender))
     return tender_file, tender
 
 

@@ -215,6 +215,23 @@ def test_a_weight_that_is_no_number_and_a_missing_evaluation_date_are_named(tmp_
     assert any("no Evaluation date" in text for text in _troubles(tender, "A2"))
 
 
+@pytest.mark.parametrize("stated", [True, False])
+def test_the_evaluation_date_decides_and_then_source_date_epoch(
+    tmp_path: Path, monkeypatch: pytest.MonkeyPatch, *, stated: bool
+) -> None:
+    """1 900 000 000 s of POSIX time is 17 March 2030; the deviation expired between the two dates."""
+    monkeypatch.setenv("SOURCE_DATE_EPOCH", "1900000000")
+    head = ["Clause", "Bidder or panel", "Reason", "Approver", "Expiry"]
+    sheets = {"Deviations": [head, ["1", "bid5", "light mast", "head of planning", "2029-12-31"]]}
+    if stated:
+        sheets["Settings"] = [["Setting", "Value"], ["Evaluation date", "2029-06-01"]]
+    tender = _tender(tmp_path, ["1", "Weight ≤ 20 kg", "M"], **sheets)
+    said = [text for text in _troubles(tender, "A2") if "2030-03-17, the day of SOURCE_DATE_EPOCH" in text]
+    assert tender.settings.today == ("2029-06-01" if stated else "2030-03-17")
+    assert any("expired on 2029-12-31" in text for text in _troubles(tender, "A2")) is not stated
+    assert bool(said) is not stated
+
+
 def test_a_tender_given_as_bid_is_refused_by_name(tmp_path: Path) -> None:
     sheets = {"Settings": [["Setting", "Value"]]}
     path = write_tender(tmp_path / "tender.xlsx", [HEAD, ["1", "Gain ≥ 17 dBi", "M"]], **sheets)

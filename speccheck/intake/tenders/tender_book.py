@@ -113,14 +113,25 @@ def _dated(settings: Settings, deviations: tuple[Deviation, ...]) -> Settings:
     """Settings with the day that expiry is judged by; left open where nothing can expire."""
     if settings.today or not deviations:
         return settings
-    epoch = os.environ.get("SOURCE_DATE_EPOCH", "")
-    day = datetime.fromtimestamp(int(epoch), UTC) if epoch.isdigit() else datetime.now(UTC)
+    epoch = _source_date()
+    day = datetime.fromtimestamp(epoch, UTC) if epoch is not None else datetime.now(UTC)
     return replace(settings, today=day.date().isoformat())
+
+
+_YEAR_10000 = 253_402_300_800
+"""Seconds of the first moment that a date cannot hold."""
+
+
+def _source_date() -> int | None:
+    """SOURCE_DATE_EPOCH of the surroundings, the usual way to repeat a run of another day."""
+    epoch = os.environ.get("SOURCE_DATE_EPOCH", "")
+    return int(epoch) if epoch.isdecimal() and int(epoch) < _YEAR_10000 else None
 
 
 def _undated(stated: Settings, dated: Settings, deviations: tuple[Deviation, ...]) -> Iterator[Finding]:
     if dated.today != stated.today:
-        summary = f"no Evaluation date is set, so expiry was judged by the day of the run, {dated.today}"
+        source = "SOURCE_DATE_EPOCH" if _source_date() is not None else "the run, so another day may differ"
+        summary = f"no Evaluation date is set; expiry was judged by {dated.today}, the day of {source}"
         ask = "Set the Evaluation date on the sheet Settings, so that the evaluation can be repeated."
         yield trouble("tender-deviations", "Accepted deviations", deviations[0].where, summary, ask)
 

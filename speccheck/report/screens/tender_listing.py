@@ -27,12 +27,7 @@ def tender_listing(tender: Tender) -> str:
     ----------
     tender : the buyer's workbook, read
     """
-    open_rows = sum(not r.confirmed for r in tender.requirements)
-    lines = [
-        f"{plain(tender.file)}: {len(tender.requirements)} requirements read, {open_rows} not confirmed, "
-        f"{len(tender.deviations)} accepted deviations",
-        "",
-    ]
+    lines = [_head(tender), ""]
     for requirement in tender.requirements:
         lines += _requirement(requirement)
     if tender.findings:
@@ -46,6 +41,22 @@ def tender_listing(tender: Tender) -> str:
             for line in _wrapped(f"- {u.where}: {plain(u.text, 200)} ({u.reason})", "    ")
         ]
     return "\n".join(lines)
+
+
+def tender_summary(tender: Tender) -> str:
+    """What was read in one line, and below it what the tender leaves in doubt."""
+    troubles = [line for f in tender.findings for line in _wrapped(f"  - {f.summary}", "    ")]
+    return "\n".join([_head(tender), *troubles])
+
+
+def _head(tender: Tender) -> str:
+    open_rows = sum(not r.confirmed for r in tender.requirements)
+    read = f"{_count(len(tender.requirements), 'requirement')} read, {open_rows} not confirmed"
+    return f"{plain(tender.file)}: {read}, {_count(len(tender.deviations), 'accepted deviation')}"
+
+
+def _count(number: int, thing: str) -> str:
+    return f"{number} {thing}{'' if number == 1 else 's'}"
 
 
 def _requirement(requirement: Requirement) -> Iterator[str]:
