@@ -1,5 +1,6 @@
 """The dictionary: what a parameter is, what bidders call it, and how a heading is recognised."""
 
+from speccheck.dictionary.concepts import concept_words
 from speccheck.dictionary.folding import fold
 from speccheck.dictionary.matching import HeadingMatch, match_heading, specified
 from speccheck.dictionary.parameters import LANGUAGES, Example, Parameter, parameters, synonyms
@@ -9,6 +10,7 @@ __all__ = [
     "Example",
     "HeadingMatch",
     "Parameter",
+    "concept_words",
     "fold",
     "match_heading",
     "parameters",

@@ -7,6 +7,7 @@ import re
 from speccheck.dictionary.folding import fold, heading_words, without_neutral, word_list
 from speccheck.dictionary.index import find, listed
 from speccheck.dictionary.parameters import parameters
+from speccheck.quantities import dimension, unit_name
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
 _BETWEEN = (
@@ -15,6 +16,9 @@ _BETWEEN = (
 )
 _PARTS = re.compile(_BETWEEN, re.IGNORECASE)
 _COMMA_PARTS = re.compile(_BETWEEN + r"|\s*,\s+", re.IGNORECASE)
+_STATES = re.compile(r"(?:\bby\b|\bper\b|,)[^/×*|&+]*$", re.IGNORECASE)
+_OF_STATE = frozenset({"beam_count", "electrical_tilt", "tilt_steps", "operating_bands", "frequency_range"})
+"""Behind a comma or 'by' they say for which beam, tilt or band a figure holds."""
 _LETTERS = re.compile(r"\b([a-z])\s*[x×*/,]\s*([a-z])(?:\s*[x×*/,]\s*([a-z]))?\b", re.IGNORECASE)
 _DIMENSIONS = {"high": "height", "wide": "width", "deep": "depth"}
 _ARRAY = {
@@ -47,7 +51,10 @@ def _letters(text: str) -> str:
 
 def _parts(text: str) -> str:
     plain = _BRACKETS.sub(r" \1 ", text)
-    return _split(_PARTS.split(plain)) or _split(_COMMA_PARTS.split(plain))
+    keys = _split(_PARTS.split(plain)) or _split(_COMMA_PARTS.split(plain))
+    first, _, last = keys.partition("+")
+    states = last in _OF_STATE and parameters()[first].scope == "band" and first not in _OF_STATE
+    return "" if states and _STATES.search(plain) else keys
 
 
 def _split(parts: list[str]) -> str:
@@ -63,7 +70,13 @@ def _split(parts: list[str]) -> str:
     if not all(keys) or len(set(keys)) < len(keys) or any("+" in key for key in keys):
         return ""
     per_port = keys[-1] == "rf_ports" and parameters()[keys[0]].unit != ""  # 'puissance max./port'
-    return "" if per_port else "+".join(keys)
+    return "" if per_port or _names_its_unit(parts, keys) else "+".join(keys)
+
+
+def _names_its_unit(parts: list[str], keys: list[str]) -> bool:
+    """Whether the last part is the unit of the first: 'Max. power per port / W'; 'H / W' are two letters."""
+    unit, own = unit_name(parts[-1].strip()), parameters()[keys[0]].unit
+    return bool(own and unit) and len(parts[0].strip()) > 1 and dimension(unit) == dimension(own)
 
 
 def _same_kind(pieces: list[tuple[str, ...]]) -> str:

@@ -111,6 +111,12 @@ def _folded_phrases() -> dict[tuple[str, ...], tuple[str, ...]]:
 
 
 @functools.cache
+def concept_words() -> frozenset[str]:
+    """All words that any concept is made of."""
+    return frozenset(word for phrase in _phrases() for word in phrase)
+
+
+@functools.cache
 def telling_words() -> frozenset[str]:
     """Single words of the concepts that tell one parameter from another."""
     phrases = (phrase for phrase, concepts in _phrases().items() if _TELLING.intersection(concepts))

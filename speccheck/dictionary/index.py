@@ -5,8 +5,8 @@ from __future__ import annotations
 import difflib
 import functools
 
-from speccheck.dictionary.concepts import by_concepts
-from speccheck.dictionary.folding import fold, key_of, without_neutral
+from speccheck.dictionary.concepts import by_concepts, concept_words
+from speccheck.dictionary.folding import fold, key_of, without_neutral, word_list
 from speccheck.dictionary.parameters import parameters, synonyms
 from speccheck.kept import kept
 
@@ -53,6 +53,13 @@ def listed(words: tuple[str, ...]) -> str:
 def find(words: tuple[str, ...]) -> str:
     """Parameter key of a heading's words, listed or put together from known concepts; empty if unknown."""
     return listed(words) or by_concepts(words)
+
+
+@functools.cache
+def known_words() -> frozenset[str]:
+    """All words of listed headings and concepts, and those that must not be dropped."""
+    listed_words = {word for key in index() for word in key.split()}
+    return frozenset(listed_words).union(concept_words(), word_list("vital"))
 
 
 def suggestions(text: str) -> tuple[str, ...]:

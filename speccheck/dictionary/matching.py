@@ -11,19 +11,24 @@ from __future__ import annotations
 import functools
 import re
 from collections.abc import Iterable, Mapping
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from speccheck.dictionary.composites import composite
 from speccheck.dictionary.concepts import by_concepts
 from speccheck.dictionary.cuts import Cut, conditions_of, cuts
 from speccheck.dictionary.folding import fold, key_of, word_list
-from speccheck.dictionary.index import listed, suggestions
+from speccheck.dictionary.index import known_words, listed, suggestions
 from speccheck.dictionary.parameters import parameters
 from speccheck.quantities import answers, dimension, split_footnotes, tidy
 
 _LONGEST_HEADING = 160
+_LONGEST_REMARK = 80
 _SIDES = frozenset({"f", "l", "s", "r"})
 _STATISTICS = ("max", "min", "typical", "mean")
+_TWICE = re.compile(r"\s+[/|=–—-]\s+|\s*\|\s*|\n")
+_GLOSS = re.compile(r"([^()\[\]]+)[(\[]([^()\[\]]{2,60})[)\]]\s*")
+_MOST_LANGUAGES = 3
+_SHORT = 4
 _NUMBERING = re.compile(r"^\s*(?:(?:\d{1,2}\.)+\d{0,2}\.?\s+|\(?\d{1,2}[.)]\s+|\(?[a-zA-Z]\)\s+|[-•*·▪–]\s+)")
 
 
@@ -79,7 +84,7 @@ def specified(key: str, condition: str) -> str:
     words = " ".join(
         word for word in condition.split(", ", maxsplit=1)[0].split() if not any(c.isdigit() for c in word)
     )
-    if not words or not (word_list("vital") | _SIDES).intersection(fold(words)):
+    if not 0 < len(words) <= _LONGEST_REMARK or not (word_list("vital") | _SIDES).intersection(fold(words)):
         return key
     name = parameters()[key].label.split(",")[0].replace(" per port", "")
     found = match_heading(f"{name} {words}", suggest=False).parameters
@@ -105,8 +110,43 @@ def _match(text: str, house: Mapping[str, str], suggest: bool) -> HeadingMatch:
         whole = _match_body([Cut(body)], body, house)
         if whole:
             return whole
-    found = _match_body(cuts(unnumbered), unnumbered, house)
+    found = _match_body(cuts(unnumbered), unnumbered, house) or _said_twice(unnumbered, house)
     return found or HeadingMatch(suggestions=suggestions(body) if suggest else ())
+
+
+def _said_twice(body: str, house: Mapping[str, str]) -> HeadingMatch | None:
+    """'Gewinn / Gain' or 'Welligkeit (VSWR)': one name in two languages, or beside its abbreviation.
+
+    A half that is not known may be in a language that is not read; one with a word of the dictionary that
+    makes another parameter, or a quality of one, is none.
+    """
+    gloss = _GLOSS.fullmatch(body)
+    parts = [part for part in (gloss.groups() if gloss else _TWICE.split(body)) if part.strip()]
+    if not 2 <= len(parts) <= _MOST_LANGUAGES:
+        return None
+    found = [_match(part, house, suggest=False) for part in parts]
+    known = [m for m, part in zip(found, parts, strict=True) if m.parameters and len(part.strip()) > 1]
+    silent = [part for part, match in zip(parts, found, strict=True) if not match.parameters]
+    if len({match.parameters for match in known}) != 1 or any(match.tolerance_of for match in known):
+        return None
+    if silent and (gloss or len(known) > 1 or any(map(_tells_apart, silent))):
+        return None
+    senses = {match.sense for match in known} - {"nominal"}
+    return replace(
+        known[0],
+        unit=next((match.unit for match in known if match.unit), ""),
+        condition=", ".join(dict.fromkeys(match.condition for match in known if match.condition)),
+        sense=senses.pop() if len(senses) == 1 else "nominal",
+        statistic=next((match.statistic for match in known if match.statistic), ""),
+        how="; ".join(match.how for match in known),
+    )
+
+
+def _tells_apart(text: str) -> bool:
+    """Whether a text that names no parameter may still change one: 'flatness', 'per element', a figure."""
+    words = fold(text)
+    known = any(word in known_words() for word in words)
+    return known or not words or any(map(str.isdigit, text)) or max(map(len, words)) < _SHORT
 
 
 def _match_body(forms: Iterable[Cut], body: str, house: Mapping[str, str]) -> HeadingMatch | None:

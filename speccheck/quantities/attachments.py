@@ -48,13 +48,15 @@ _TWO = re.compile(
     r"""
     ± | ^x$ | \+\s*45 | 45\s*°?\s*/\s*-\s*45 | x-?pol | cross-?pol | crossed | dual | slant | orthogonal | two
     | zwei | doppel | kreuz | double | croisée | doble | cruzada | doppia | incrociata | dupla | podwójna
-    | krzyżowa | dubbel | kruis | h\s*[/+&]\s*v | v\s*[/+&]\s*h | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
-    | horizontal\s*(?:and|[&/+])\s*vertical | vertical\s*(?:and|[&/+])\s*horizontal
+    | krzyżowa | dubbel | kruis | \b(?:h|v|hp|vp)(?:-?pol\w*)?\s*(?:[/+&,]|and|und|et|y|e|i|en)\s*(?:h|v|hp|vp)(?:-?pol\w*)?\b
+    | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
+    | horizontal\w*\s*(?:and|und|et|y|e|i|en|[&/+,])\s*verti[ck]a\w* | verti[ck]a\w*\s*(?:and|und|et|y|e|i|en|[&/+,])\s*horizontal\w*
+    | orizzontal\w*\s*(?:e|[&/+,])\s*vertical\w* | vertical\w*\s*(?:e|[&/+,])\s*orizzontal\w* | poziom\w*\s*(?:i|[&/+,])\s*pion\w*
     """,
     re.IGNORECASE | re.VERBOSE,
 )
 _ONE = re.compile(
-    r"(?:single|linear|vertical\w*|vertikal\w*|verticale|pionowa|verticaal|horizontal\w*|v|h|vp|hp|one|circular\w*"
+    r"(?:linear\W+)?(?:single|linear|vertical\w*|vertikal\w*|verticale|pionowa|verticaal|horizontal\w*|v|h|vp|hp|one|circular\w*"
     r"|rhcp|lhcp|zirkular|einfach|simple)(?:[\s,-]+(?:linear|pol\w*|polari[sz]ed))?\.?",
     re.IGNORECASE,
 )

@@ -18,12 +18,14 @@ _HEADINGS = {
         "szerokość wiązki elewacyjna", "openingshoek el.",
     ),
     "port_isolation": (
-        "Entkopplung zwischen den Systemen", "découplage entre voies", "desacoplo entre puertos",
+        "Entkopplung der Tore", "découplage entre voies", "desacoplo entre puertos",
         "disaccoppiamento tra le porte", "desacoplamento entre polarizações", "odsprzężenie między portami",
         "ontkoppeling tussen de polarisaties",
     ),
     "interband_isolation": (
-        "Isolation Band zu Band", "découplage inter-bandes", "aislamiento entre sub-bandas",
+        "Entkopplung zwischen den Systemen", "isolation entre systèmes", "aislamiento entre sistemas",
+        "isolamento tra i sistemi", "izolacja między systemami", "isolatie tussen de systemen",
+        "isolation between systems", "isolation between arrays", "Isolation Band zu Band", "découplage inter-bandes", "aislamiento entre sub-bandas",
         "isolamento fra le bande", "isolação entre as bandas", "separacja międzypasmowa",
         "isolatie band tot band",
     ),

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections import Counter
 from collections.abc import Mapping
 from dataclasses import dataclass, replace
 from functools import lru_cache
@@ -12,6 +13,8 @@ from speccheck.intake.panels.found import Found, Outcome
 from speccheck.intake.panels.noted import settle_by_note, unband_repeated
 from speccheck.intake.panels.planes import ASK_FOR_PLANES, part_by_plane
 from speccheck.intake.panels.reading import Reader
+from speccheck.intake.panels.titled import claims_with_title
+from speccheck.intake.panels.told_by_panel import settle_by_panel
 from speccheck.intake.tables.bands import find_bands
 from speccheck.intake.tables.claims import Claim, Draft
 from speccheck.intake.tables.nicknames import resolve_nicknames
@@ -86,9 +89,7 @@ class Builder:
         readings: list[Found] = []
         tolerances: list[tuple[Claim, Outcome]] = []
         outcomes = [
-            (claim, self._reader.read(claim, piece.grid.name))
-            for piece in draft.pieces()
-            for claim in piece.claims
+            (claim, self._reader.read(claim, piece.grid.name)) for piece, claim in claims_with_title(draft)
         ]
         join_ends(outcomes)
         resolve_nicknames(outcomes)
@@ -112,6 +113,7 @@ class Builder:
         _add_tolerances(readings, tolerances, unread)
         _place(readings, draft.bands, several)
         unband_repeated(readings)
+        settle_by_panel(readings)
         panel = Panel(
             name=draft.name,
             where=where,
@@ -132,8 +134,9 @@ class Builder:
             spans = [f.value for f in outcome.found if isinstance(f.value, tuple)]
             if in_figures and not claim.banded and not _in_figures(outcome.found):
                 continue
-            if len(spans) > 1 and len(draft.bands) < 2:
-                draft.bands += [s for s in spans if s not in draft.bands]
+            if len(spans) > 1 and (len(draft.bands) < 2 or set(draft.bands) <= set(spans)):
+                # figures in one cell follow the order of the list, not that in which single bands were met
+                draft.bands[:] = dict.fromkeys([*spans, *draft.bands])
             elif len(spans) == 1 and not claim.banded:
                 overall.append(spans[0])
         for _, outcome in outcomes:
@@ -283,12 +286,14 @@ def _place(readings: list[Found], bands: list[Band], several: bool) -> None:
     """Bands by the scope of each parameter."""
     table = parameters()
     only = bands[0] if len(bands) == 1 and not several else None
+    by_array = Counter(found.parameter for found in readings if found.band == only) if only else {}
     for found in readings:
         key = found.parameter
         if key in FREQUENCY:
             continue
         by_band = table[key].scope == "band" and key not in GEOMETRY
         if only is not None:
-            found.band = only if by_band else None
+            of_array = key in PER_BAND_IF_SAID and by_array.get(key, 0) > 1 and found.band == only
+            found.band = only if by_band or of_array else None
         elif not by_band and key not in PER_BAND_IF_SAID:
             found.band = None

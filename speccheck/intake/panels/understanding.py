@@ -7,7 +7,7 @@ from collections.abc import Iterator
 from dataclasses import dataclass, replace
 from functools import lru_cache
 
-from speccheck.dictionary import Parameter, parameters, specified
+from speccheck.dictionary import Parameter, match_heading, parameters, specified
 from speccheck.intake.files.grid import Raw
 from speccheck.intake.panels.found import Figure
 from speccheck.intake.panels.unitless import with_unit
@@ -18,6 +18,7 @@ from speccheck.quantities import (
     Quantity,
     UnknownUnitError,
     array_of,
+    dimension,
     read_cell,
     settle,
 )
@@ -33,6 +34,10 @@ MIN_WORDS = re.compile(
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
 _FEWEST_OF_SEVERAL = {"array_rows": 2, "subarray_rows": 1}  # a plain number of rows may stand alone
+_COUNT_AND_FACTORS = re.compile(
+    r"\s*\d{1,4}\b(?!\s*[x×*/])[^\d(\[]*[(\[]\s*\d{1,3}\s*[x×*]\s*\d", re.IGNORECASE
+)
+_FACTORS_BEHIND = re.compile(r"\s*(?:[(\[,:]|\d)")
 _IDENTITY_UNITS = ("", "–", "-", "—")
 MOST_LETTERS = 120_000
 """Letters of different cells: time to understand grows with them, and catalogues repeat their figures."""
@@ -91,8 +96,7 @@ class Understanding:
         return known
 
     def _understand(self, raw: Raw, context: Context, number_format: str) -> Understood:
-        label = context.label
-        keys = label.parameters
+        keys = _keys(context, raw)
         table = parameters()
         first = table[keys[0]]
         ground = self._grounds.get(id(context))
@@ -135,6 +139,36 @@ def _effort(raw: Raw, context: Context) -> int:
     letters = len(raw) if isinstance(raw, str) else 0
     text = parameters()[context.label.parameters[0]].kind == "text"
     return _OF_NUMBER + (letters // _OF_PLAIN_TEXT if text else letters)
+
+
+def _keys(context: Context, raw: Raw) -> tuple[str, ...]:
+    """Parameters a cell answers for, where the cell or the unit says it better than the heading.
+
+    '192 elements (12x8x2)' under 'Elements (rows x columns x polarisations)' is their number, as 192 is
+    under 'Elements' beside '12 rows x 8 columns'; a mounting kit in kilograms is a weight.
+    """
+    label, keys = context.label, context.label.parameters
+    if keys[:2] == ("array_rows", "array_columns"):
+        counted = isinstance(raw, str) and _COUNT_AND_FACTORS.match(raw)
+        alone = not isinstance(raw, str) or raw.strip().isdecimal()
+        if counted or (alone and _names_elements(label.text)):
+            return ("element_count",)
+    elif keys == ("mounting_kit",) and _is_mass(raw, _unit(context)[0]):
+        return ("mounting_kit_weight",)
+    return keys
+
+
+@lru_cache(maxsize=200)
+def _names_elements(text: str) -> bool:
+    name = _FACTORS_BEHIND.split(text, maxsplit=1)[0]
+    return match_heading(name, suggest=False).parameters == ("element_count",)
+
+
+def _is_mass(raw: Raw, unit: str) -> bool:
+    if isinstance(raw, str) and not any(map(str.isdigit, raw)):
+        return False
+    found = read_cell(raw, kind="number", unit=unit, expected="kg").quantities
+    return len(found) == 1 and dimension(found[0].unit) == "mass"
 
 
 def _ground(context: Context) -> _Ground:

@@ -5,20 +5,18 @@ from __future__ import annotations
 import re
 from collections.abc import Mapping
 from dataclasses import dataclass, replace
-from functools import cache, lru_cache
 
-from speccheck.dictionary import match_heading, parameters, synonyms
+from speccheck.dictionary import match_heading, parameters
 from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
-from speccheck.intake.tables.words import column_role, fold, is_counting_unit
-from speccheck.kept import kept
+from speccheck.intake.tables.vocabulary import runs, stem, vocabulary
+from speccheck.intake.tables.words import column_role, is_counting_unit
 from speccheck.quantities.units import unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
-_VOCABULARY_SOURCES = ("data/headings/*.toml", "intake/**/labels.py", "intake/**/words.py", "**/units.py")
 _MOST_SUGGESTIONS = 300
-_MOST_MISSES = 5_000
-"""More texts that are no headings, though made of their words, no honest bid has; looking costs time."""
+MOST_LETTERS = 100_000
+"""Letters of different texts made of heading words: time to look up grows with them; bids have few."""
 _NUMBER = re.compile(r"\d+(?:[.,]\d+)?")
 _AT = r"[,(]?\s*(?:at|@|bei|mit|for|für|à|a|con|com|przy|bij|vs\.?)?\s*"
 _TILT_WORD = (
@@ -41,11 +39,12 @@ _BAND_WORD = re.compile(
 )
 _UNIT_BRACKET = re.compile(r"\s*(?:[(\[][^()\[\]\d]{1,8}[)\]]|,?\s*\b(?:dBi|dBd|dB))\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
+_BAR = re.compile(r"\s*\|\s*")
+_ITEM = r"[^\W\d][^()\[\]/]*"
 _LISTED_IN_BRACKET = re.compile(
-    r"[(\[]\s*([^\W\d][^()\[\]/]*\s[^()\[\]/]*(?:/[^()\[\]/]+)+|[^\W\d][^()\[\]/]*(?:/[^()\[\]/]+\s[^()\[\]/]+)+)\s*[)\]]"
+    rf"[(\[]\s*({_ITEM}\s[^()\[\]/]*(?:/\s*{_ITEM})+|{_ITEM}(?:/\s*{_ITEM}\s[^()\[\]/]+)+)\s*[)\]]"
 )
 _SEVERAL = re.compile(r"[xX×/*]")
-_RUN = re.compile(r"[^\W\d_]+")
 _LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
@@ -71,14 +70,15 @@ class Label:
 
 
 class Labels:
-    """The reader of headings, with the buyer's own synonyms."""
+    """The reader of headings, with the buyer's own synonyms; `passed_over` counts texts not looked up."""
 
     def __init__(self, synonyms: Mapping[str, str]) -> None:
         self._synonyms = dict(synonyms)
         self._known: dict[str, Label] = {}
-        self._vocabulary = _vocabulary() | {_stem(word) for text in synonyms for word in _runs(text)}
+        self._vocabulary = vocabulary() | {stem(word) for text in synonyms for word in runs(text)}
         self._near: dict[str, str] = {}
-        self._misses = 0
+        self._room = MOST_LETTERS
+        self.passed_over = 0
 
     def of(self, text: str) -> Label:
         """Understand one heading text."""
@@ -96,7 +96,7 @@ class Labels:
         return (label, match[2].strip()) if label and label.parameters != ("remarks",) else None
 
     def _understand(self, text: str) -> Label:
-        if not self._could_be_heading(text):
+        if not self._could_be_heading(text) or not self._has_room_for(text):
             return Label(text)
         cleaned = text.strip().rstrip(":").strip()
         attempts = (
@@ -111,16 +111,22 @@ class Labels:
         for found in (attempt(cleaned) for attempt in attempts):
             if found:
                 return replace(found, text=text)
-        self._misses += 1
         return Label(text)
 
     def _could_be_heading(self, text: str) -> bool:
-        words = _runs(text)
-        if len(text) > _LONGEST or self._misses > _MOST_MISSES:
+        words = runs(text)
+        if len(text) > _LONGEST:
             return False
-        if not any(_stem(word) in self._vocabulary for word in words):
+        if not any(stem(word) in self._vocabulary for word in words):
             return False
         return max(map(len, words)) > 1 or (len(words) > 1 and _SEVERAL.search(text) is not None)
+
+    def _has_room_for(self, text: str) -> bool:
+        if len(text) > self._room:
+            self.passed_over += 1
+            return False
+        self._room -= len(text)
+        return True
 
     def _with_unit(self, text: str) -> Label:
         """'Total power, W': the letter behind the comma is a unit before it is a word."""
@@ -132,6 +138,7 @@ class Labels:
 
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
+        text = _BAR.sub("/", text)
         bracket = _LISTED_IN_BRACKET.search(text)
         if bracket is not None:
             return self._of_items(text, bracket.start(), bracket.end(), bracket[1])
@@ -143,6 +150,8 @@ class Labels:
     def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
         """The heading of several figures, one for each item between `start` and `end` of a heading."""
         found = []
+        if len(unit_name(items.rpartition("/")[2])) > 1:
+            return Label(text)  # 'Frequency band / MHz'
         for item in re.split(r"\s*/\s*", items):
             single = f"{text[:start].rstrip(' ([')} ({item}) {text[end:].lstrip(' )]')}".strip()
             found.append(self._with_unit(single) or self._match(single))
@@ -227,32 +236,12 @@ class Labels:
 
 def _names_something(text: str) -> bool:
     """Whether a text holds a word of weight, more than 'max.' or 'RF'."""
-    return any(len(word) > 2 and not statistic_of(word) for word in _runs(text))
+    return any(len(word) > 2 and not statistic_of(word) for word in runs(text))
 
 
 def _tidy(text: str) -> str:
     text = re.sub(r"[(\[]\s*[)\]]", " ", text)
     return re.sub(r"\s*[@,;:–-]\s*$", "", " ".join(text.split())).strip()
-
-
-def _runs(text: str) -> list[str]:
-    return _RUN.findall(text)
-
-
-@lru_cache(maxsize=20_000)
-def _stem(word: str) -> str:
-    return fold(word)[:4]
-
-
-@cache
-def _vocabulary() -> frozenset[str]:
-    """First letters of all words of the dictionary's headings: a text without any of them is no heading."""
-    return kept("vocabulary", _VOCABULARY_SOURCES, _first_letters)
-
-
-def _first_letters() -> frozenset[str]:
-    texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
-    return frozenset(_stem(word) for word in set(_runs("\n".join(texts))) if not unit_name(word))
 
 
 def is_unit(text: str) -> bool:
