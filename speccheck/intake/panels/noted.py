@@ -6,7 +6,7 @@ import re
 from collections import defaultdict
 from dataclasses import replace
 
-from speccheck.dictionary import specified
+from speccheck.dictionary import parameters, specified
 from speccheck.intake.panels.found import Found
 from speccheck.intake.panels.understanding import MAX_WORDS, MIN_WORDS
 from speccheck.quantities import read_cell
@@ -46,7 +46,10 @@ def settle_by_note(found: Found, note: str) -> None:
 
 
 def unband_repeated(readings: list[Found]) -> None:
-    """Ports and connectors that every row of a panel repeats, one row a band, are the whole panel's."""
+    """Ports and connectors that every row of a panel repeats, one row a band, are the whole panel's.
+
+    Not where the same rows give other figures of the panel, such as its height, only once.
+    """
     columns: dict[tuple[str, str, str], list[Found]] = defaultdict(list)
     for found in readings:
         if found.parameter in _OF_PANEL:
@@ -59,6 +62,22 @@ def unband_repeated(readings: list[Found]) -> None:
         bands = {found.band for found in alike}
         repeated = len(rows) == len(bands) == len(alike) and None not in bands
         per_band = any(re.search(r"band|pasm", found.heading, re.IGNORECASE) for found in alike)
-        if repeated and not per_band and len({found.value for found in alike}) == 1:
+        same = repeated and not per_band and len({found.value for found in alike}) == 1
+        if same and not _gives_others_once(readings, alike):
             for found in alike:
                 found.band = None
+
+
+def _gives_others_once(readings: list[Found], alike: list[Found]) -> bool:
+    """Whether a figure of the whole panel stands in the first of these rows and in none of the others."""
+    rows = sorted(_row(found) for found in alike)
+    columns: dict[str, list[int]] = defaultdict(list)
+    for found in readings:
+        of_panel = parameters()[found.parameter].scope == "panel" and found.parameter not in _OF_PANEL
+        if of_panel and found.where.sheet == alike[0].where.sheet and _row(found) in rows:
+            columns[found.where.cell.rstrip("0123456789")].append(_row(found))
+    return any(set(given) == {rows[0]} for given in columns.values())
+
+
+def _row(found: Found) -> int:
+    return int(found.where.cell.lstrip("ABCDEFGHIJKLMNOPQRSTUVWXYZ"))

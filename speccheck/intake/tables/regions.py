@@ -184,7 +184,11 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         if len(headings) > 1 and all(texts[c.column] == c.text for c in headings):
             if sum(marks.is_heading(c) for c in marks.rows[row]) > len(headings):
                 break
-            table.repeated.append(row)
+            upper = _upper_rows(marks, table, row)
+            table.data_rows = [r for r in table.data_rows if r not in upper]
+            if upper and not _repeats(marks, table, heading_row, upper):
+                break
+            table.repeated += [*upper, row]
             continue
         if table.repeated and table.repeated[-1] == row - 1 and all(is_heading_filler(c.text) for c in cells):
             table.repeated.append(row)
@@ -204,6 +208,32 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         last = row
     while table.data_rows and not _is_data(marks, table, table.data_rows[-1]):
         table.data_rows.pop()
+
+
+def _upper_rows(marks: Marks, table: Across, row: int) -> list[int]:
+    """Rows of bands, or of words over several columns, just above a repeated heading row."""
+    found: list[int] = []
+    for above in (row - 1, row - 2):
+        cells = cells_of(marks, table, above)
+        if len(cells) < _FEW or not all(_is_upper_cell(marks, cell) for cell in cells):
+            break
+        found.insert(0, above)
+    return found
+
+
+def _is_upper_cell(marks: Marks, cell: Cell) -> bool:
+    span = marks.grid.span(cell)
+    return isinstance(cell.raw, str) and (span.right > span.left or is_heading_filler(cell.text))
+
+
+def _repeats(marks: Marks, table: Across, heading_row: int, upper: list[int]) -> bool:
+    """Whether rows above a repeated heading row say what the first ones above it said."""
+    first = [row for row in table.heading_rows if row < heading_row][-len(upper) :]
+    return [_texts(marks, row) for row in first] == [_texts(marks, row) for row in upper]
+
+
+def _texts(marks: Marks, row: int) -> list[tuple[int, str]]:
+    return [(cell.column, cell.text) for cell in marks.rows[row]]
 
 
 def cells_of(marks: Marks, table: Across, row: int) -> list[Cell]:
