@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 from collections import Counter
-from collections import Counter
 from collections.abc import Mapping
 from dataclasses import dataclass, replace
 from functools import lru_cache
@@ -14,7 +13,6 @@ from speccheck.intake.panels.found import Found, Outcome
 from speccheck.intake.panels.noted import settle_by_note, unband_repeated
 from speccheck.intake.panels.planes import ASK_FOR_PLANES, part_by_plane
 from speccheck.intake.panels.reading import Reader
-from speccheck.intake.panels.titled import claims_with_title
 from speccheck.intake.panels.titled import claims_with_title
 from speccheck.intake.panels.told_by_panel import settle_by_panel
 from speccheck.intake.tables.bands import find_bands
