@@ -53,6 +53,8 @@ class AcrossReader:
         self._known: dict[str, _Known] = {}
         self._panels: list[_Known] = []
         self._section = RowBand()
+        self._section_cell: Cell | None = None
+        self._section_context: Context | None = None
         self._title: Cell | None = None
         self._at = _Row()
 
@@ -86,7 +88,7 @@ class AcrossReader:
             if len(cells) > 1 or any((row, c.column) in self._result.roles for c in cells):
                 return
             if cells and (said := band_of_title(cells[0].text, self._names.is_title)):
-                self._section = RowBand(*said)
+                self._section, self._section_cell = RowBand(*said), cells[0]
                 self._result.mark(cells[0], "heading")
                 return
 
@@ -122,6 +124,7 @@ class AcrossReader:
         """A title over the rows that follow: their band, their panel, or words that only group them."""
         said = band_of_title(cell.text, self._names.is_title)
         self._section, self._title = RowBand(*said) if said else RowBand(), None
+        self._section_cell = cell if said else None
         self._at = _Row()
         if said is None and self._guides.named and cell.column == self._guides.named:
             self._start_panel(row, cell)
@@ -158,6 +161,16 @@ class AcrossReader:
             known.said.add(said)
             if said.band and said.band not in draft.bands:
                 draft.bands.append(said.band)
+                if said is self._section and self._section_cell is not None:
+                    self._claim_section(draft, self._section_cell, said.band)
+
+    def _claim_section(self, draft: Draft, cell: Cell, band: Band) -> None:
+        """The band that a title gives to the rows below it is claimed of each of their panels."""
+        if self._section_context is None:
+            label = Label("title of the rows below", ("operating_bands",), "MHz")
+            self._section_context = Context(label, heading=label.text)
+        text = f"{band[0]:g}-{band[1]:g} MHz"
+        draft.claims.append(Claim(cell, self._section_context, band, text=text, banded=True))
 
     def _start_panel(self, row: int, cell: Cell) -> None:
         if self._guides.named and cell.column == self._guides.named:
