@@ -14,7 +14,7 @@ from speccheck.intake.files.limits import Limits
 from speccheck.intake.files.opening import Book, open_book
 from speccheck.intake.panels.declared import contrary_notices
 from speccheck.intake.panels.joining import joined
-from speccheck.intake.panels.notices import book_notices, footnotes, grid_notices, note_notices
+from speccheck.intake.panels.notices import book_notices, footnotes, grid_notices, note_notices, passed_over
 from speccheck.intake.panels.panels import Builder, Built
 from speccheck.intake.panels.reading import Reader
 from speccheck.intake.tables.claims import Draft, SheetResult
@@ -96,7 +96,7 @@ def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
     results = [read_layout(grid, labels, stem) for grid in visible]
     drafts, titles = joined([draft for result in results for draft in result.drafts])
     if not drafts:
-        raise _no_table(book)
+        raise _no_table(book, labels)
     texts = (cell.raw for grid in visible for cell in grid.cells.values() if isinstance(cell.raw, str))
     reader = Reader(book.file, decimal_habit(dict.fromkeys(texts)))
     builder = Builder(reader, {result.grid.name: footnotes(result) for result in results})
@@ -109,6 +109,8 @@ def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
         notices += note_notices(result, labels, reader.where)
         notices += contrary_notices(result.declared, result.grid.name, reader)
         unread += _layout_unread(result, reader)
+    if labels.passed_over:
+        notices.append(Notice(where=reader.where("", ""), text=passed_over(labels)))
     for piece in built:
         unread += piece.unread
     submission = Submission(
@@ -152,11 +154,12 @@ def _stored(cell: Cell) -> str | float:
     return raw if type(raw) is int or type(raw) is float else cell.text
 
 
-def _no_table(book: Book) -> UnusableInputError:
+def _no_table(book: Book, labels: Labels) -> UnusableInputError:
     names = ", ".join(f"'{grid.name}'" for grid in book.grids[:5])
+    left = f"; {passed_over(labels)}" if labels.passed_over else ""
     return UnusableInputError(
         book.file,
-        found=f"no heading of the dictionary with a figure beside or below it (sheets {names})",
+        found=f"no heading of the dictionary with a figure beside or below it (sheets {names}){left}",
         expected="a table of panel parameters such as 'Gain', 'Frequency range', 'Height'",
         remedy="check that the right file was sent, or add the house's headings to the tender workbook",
     )

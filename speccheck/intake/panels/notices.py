@@ -10,7 +10,7 @@ from itertools import groupby
 from speccheck.intake.files.grid import Cell, Grid, column_letters
 from speccheck.intake.files.opening import Book
 from speccheck.intake.tables.claims import SheetResult
-from speccheck.intake.tables.labels import Labels
+from speccheck.intake.tables.labels import MOST_LETTERS, Labels
 from speccheck.records import CellRef, Notice
 from speccheck.text import plain
 
@@ -29,6 +29,14 @@ Where = Callable[[str, str], CellRef]
 def book_notices(book: Book, where: Where) -> list[Notice]:
     """Notices on the whole file."""
     return [Notice(where=where("", ""), text=text) for text in book.oddities]
+
+
+def passed_over(labels: Labels) -> str:
+    """What was not looked up, and why."""
+    return (
+        f"{labels.passed_over} texts were not looked up as headings: more than {MOST_LETTERS} letters of "
+        "different texts before them might be headings; split the file"
+    )
 
 
 def grid_notices(grid: Grid, where: Where) -> list[Notice]:
