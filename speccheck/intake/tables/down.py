@@ -116,9 +116,7 @@ class DownReader:
                 if state.side_bottom == row:
                     state.side_bottom = self._table.bottom
                 if bands.hull:
-                    draft = self._panels.first
-                    draft.bands.append(bands.hull)
-                    self._panels.claim_band(draft, cell, bands.hull, "row group")
+                    self._panels.claim_band_of_rows(cell, bands.hull, "row group")
             elif isinstance(cell.raw, str):
                 state.group = cell.text
                 state.side_band, state.side_name = None, ""
@@ -134,7 +132,7 @@ class DownReader:
             state.section_band, state.section_name = said[0], cell.text
             self._result.mark(cell, "heading")
             if state.section_band:
-                self._panels.claim_band(self._panels.first, cell, state.section_band, "heading of rows below")
+                self._panels.claim_band_of_rows(cell, state.section_band, "heading of rows below")
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""

@@ -11,6 +11,7 @@ from speccheck.intake.tables.columns import VALUE_ROLES, Column, describe, headi
 from speccheck.intake.tables.down_regions import Down, cells_between, heads_columns
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.roles import settle_roles
+from speccheck.intake.tables.titles import codes, is_numbered_name
 from speccheck.intake.tables.words import column_role
 from speccheck.intake.tenders.answering import labelled, share_answering
 
@@ -51,13 +52,25 @@ def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], besi
 
 
 def find_name_column(marks: Marks, table: Down, heading_rows: list[int]) -> int:
-    """The column before the labels that names the panel of each row, under a word such as 'Panel'; else 0."""
+    """The column before the labels that names the panel of each row, else 0.
+
+    It stands under a word such as 'Panel', or its cells are names merged down over the rows of a panel.
+    """
     for row in heading_rows:
         for cell in cells_between(marks, row, table.left, table.label_column - 1):
             label = marks.labels.of(cell.text)
             if column_role(cell.text) == "panel" or label.parameters[:1] in (("model",), ("part_number",)):
                 return cell.column
-    return 0
+    columns = range(table.left, table.label_column)
+    return next((column for column in columns if _holds_merged_names(marks, table, column)), 0)
+
+
+def _holds_merged_names(marks: Marks, table: Down, column: int) -> bool:
+    covering = [marks.grid.covering(row, column) for row in range(table.top, table.bottom + 1)]
+    cells = {cell.row: cell for cell in covering if cell is not None}.values()
+    return bool(cells) and all(
+        marks.grid.span(c).bottom > c.row and (codes(c.text) or is_numbered_name(c.text)) for c in cells
+    )
 
 
 def numbering_columns(marks: Marks, table: Down, heading_rows: list[int]) -> set[int]:

@@ -157,6 +157,11 @@ class DownPanels:
             by_draft[id(self.of(column))].append(column)
         return by_draft
 
+    def claim_band_of_rows(self, cell: Cell, band: Band, heading: str) -> None:
+        """A heading over or beside rows gives a band to all panels of the table."""
+        for draft in self._drafts.values():
+            self.claim_band(draft, cell, band, heading)
+
     def claim_band(self, draft: Draft, cell: Cell, band: Band, heading: str) -> None:
         """A heading that gives the frequencies of a band is itself a claim."""
         if band not in draft.bands:
