@@ -199,3 +199,17 @@ def test_same_tender_same_bytes():
 
 def test_usual_columns_are_parameters():
     assert set(USUAL) <= set(parameters())
+
+
+def test_a_tender_form_asks_in_the_tenders_units_and_for_each_band_once():
+    """A band is a row of the form: two columns of frequencies would be answered once here, once there."""
+    wind = replace(asked("2", "survival_wind_speed", "Survival wind speed at least 200 km/h"), unit="km/h")
+    band = asked("3", "frequency_range", "698 to 894 MHz")
+    tender = Tender(file="t.xlsx", sha256="", requirements=(wind, band))
+    book = openpyxl.load_workbook(io.BytesIO(form_bytes(tender)))
+    headings = [cell.value for cell in book["Bid"][1]]
+    assert "Survival wind speed (km/h)" in headings
+    assert [text for text in headings if "MHz" in text] == ["Operating bands (MHz)"]
+    answers = [cell.value for cell in book["Clauses"]["A"]]
+    assert answers[1].endswith("column Survival wind speed (km/h)")
+    assert answers[2].endswith("column Operating bands (MHz)")

@@ -6,7 +6,7 @@ from collections.abc import Iterator
 from textwrap import wrap
 
 from speccheck.dictionary import parameters
-from speccheck.records import Premise, Requirement, Tender, Value
+from speccheck.records import Finding, Premise, Requirement, Tender, Value
 from speccheck.text import plain
 
 _WIDTH = 100
@@ -32,7 +32,7 @@ def tender_listing(tender: Tender) -> str:
         lines += _requirement(requirement)
     if tender.findings:
         lines += ["", "To put right before issue"]
-        lines += [line for f in tender.findings for line in _wrapped(f"- {f.summary}", "    ")]
+        lines += [line for f in tender.findings for line in _wrapped(f"- {_asked(f)}", "    ")]
     if tender.unread:
         lines += ["", "Not read"]
         lines += [
@@ -47,6 +47,10 @@ def tender_summary(tender: Tender) -> str:
     """What was read in one line, and below it what the tender leaves in doubt."""
     troubles = [line for f in tender.findings for line in _wrapped(f"  - {f.summary}", "    ")]
     return "\n".join([_head(tender), *troubles])
+
+
+def _asked(finding: Finding) -> str:
+    return f"{finding.summary}. {finding.question}".strip()
 
 
 def _head(tender: Tender) -> str:

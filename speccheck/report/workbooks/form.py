@@ -11,7 +11,7 @@ from speccheck.records import Requirement, Tender
 from speccheck.report.pages.formats import shown_unit
 from speccheck.report.workbooks.book import book_bytes
 from speccheck.report.workbooks.cells import Content, Rich
-from speccheck.report.workbooks.form_columns import Asked, asked_columns, condition_of
+from speccheck.report.workbooks.form_columns import Asked, answering_key, asked_columns
 from speccheck.report.workbooks.sheets import Column, Grid, Imprint, NumberCheck, Table
 
 SHEET = "Bid"
@@ -73,6 +73,9 @@ EXAMPLE: dict[str, str | float] = {
 }
 """One invented panel in the form's units; other columns show the dictionary's example."""
 
+AS_ASKED = {"m/s": {"km/h": 3.6}, "N": {"kN": 0.001}}
+"""Units of a tender that its form asks in, and how many of each make one of the dictionary's unit."""
+
 CHOICES = {
     "polarisations": ("±45°", "vertical and horizontal", "vertical", "horizontal"),
     "connector_type": ("4.3-10 female", "7/16 female", "2.2-5 female", "N female"),
@@ -95,9 +98,10 @@ def write_form(path: Path | str, tender: Tender | None = None) -> None:
 def form_bytes(tender: Tender | None = None) -> bytes:
     """Return the blank bid form as an .xlsx file."""
     keys = _keys(tender)
-    sheets: list[Table | Grid] = [_read_me(tender), _bid(keys, tender)]
+    chosen = tuple(asked_columns(keys, tender.requirements if tender else ()))
+    sheets: list[Table | Grid] = [_read_me(tender), _bid(keys, chosen)]
     if tender is not None:
-        sheets.append(_clauses(tender))
+        sheets.append(_clauses(tender, chosen))
     sheets.append(_lists(keys))
     source = f" for {tender.file}" if tender else ""
     rules = tender.settings if tender else None
@@ -112,18 +116,22 @@ def form_bytes(tender: Tender | None = None) -> bytes:
     )
 
 
-def form_heading(parameter: Parameter, condition: str = "") -> str:
+def form_heading(parameter: Parameter, condition: str = "", asked: Sequence[Requirement] = ()) -> str:
     """Return a heading that the dictionary knows, with condition and unit that the form asks for."""
     known = parameter.headings.get("en", ())
     same = parameter.label.lower() in {word.lower() for word in known}
     word = parameter.label if same or not known else known[0][:1].upper() + known[0][1:]
     word = f"{word}, {condition}" if condition else word
-    unit, _ = form_unit(parameter)
+    unit, _ = form_unit(parameter, asked)
     return f"{word} ({unit})" if unit else word
 
 
-def form_unit(parameter: Parameter) -> tuple[str, float]:
+def form_unit(parameter: Parameter, asked: Sequence[Requirement] = ()) -> tuple[str, float]:
     """Return the unit asked for, and how many of it make one of the dictionary's unit."""
+    units = {requirement.unit for requirement in asked}
+    for unit, many in AS_ASKED.get(parameter.unit, {}).items():
+        if units == {unit}:
+            return unit, many
     if parameter.unit == "m" and any(word in parameter.key for word in SMALL_LENGTHS):
         return "mm", 1000.0
     return parameter.unit, 1.0
@@ -132,15 +140,14 @@ def form_unit(parameter: Parameter) -> tuple[str, float]:
 def _keys(tender: Tender | None) -> tuple[str, ...]:
     if tender is None:
         return tuple(dict.fromkeys((*ALWAYS, *USUAL)))
-    asked = [r.parameter for r in tender.requirements if r.parameter in parameters()]
+    asked = [answering_key(r) for r in tender.requirements if r.parameter in parameters()]
     return tuple(dict.fromkeys((*ALWAYS, *asked, *NEEDED, "remarks")))
 
 
-def _bid(keys: Sequence[str], tender: Tender | None) -> Table:
-    chosen = tuple(asked_columns(keys, tender.requirements if tender else ()))
+def _bid(keys: Sequence[str], chosen: Sequence[Asked]) -> Table:
     columns = [_column(one, keys) for one in chosen]
     blank: list[Content] = [None] * len(columns)
-    example = [_example(one.parameter) for one in chosen]
+    example = [_example(one.parameter, one.requirements) for one in chosen]
     return Table(
         name=SHEET,
         columns=columns,
@@ -151,7 +158,7 @@ def _bid(keys: Sequence[str], tender: Tender | None) -> Table:
 
 def _column(one: Asked, keys: Sequence[str]) -> Column:
     parameter = one.parameter
-    heading = form_heading(parameter, one.condition)
+    heading = form_heading(parameter, one.condition, one.requirements)
     numeric = parameter.kind in ("number", "count")
     return Column(
         heading=heading,
@@ -159,7 +166,7 @@ def _column(one: Asked, keys: Sequence[str]) -> Column:
         look="entry" if numeric else "entry-text",
         note=_note(parameter, one.requirements),
         choices=_choice_range(parameter.key, keys),
-        check=_number_check(parameter) if numeric else None,
+        check=_number_check(parameter, one.requirements) if numeric else None,
     )
 
 
@@ -169,8 +176,8 @@ def _width(parameter: Parameter, heading: str) -> float:
     return max(13.0, 1.2 * max(map(len, heading.split())) + 3, min(len(heading) * 0.7, 22))
 
 
-def _note(parameter: Parameter, asked: Iterable[Requirement]) -> str:
-    unit, _ = form_unit(parameter)
+def _note(parameter: Parameter, asked: Sequence[Requirement]) -> str:
+    unit, _ = form_unit(parameter, asked)
     parts = [parameter.definition]
     if unit:
         parts.append(f"Unit: {shown_unit(unit)}.")
@@ -180,30 +187,30 @@ def _note(parameter: Parameter, asked: Iterable[Requirement]) -> str:
     return "\n".join(parts)[:600]
 
 
-def _number_check(parameter: Parameter) -> NumberCheck | None:
+def _number_check(parameter: Parameter, asked: Sequence[Requirement]) -> NumberCheck | None:
     if parameter.plausible is None:
         return None
-    unit, factor = form_unit(parameter)
+    unit, factor = form_unit(parameter, asked)
     low, high = (edge * factor for edge in parameter.plausible)
     shown = f" {shown_unit(unit)}" if unit else ""
-    asked = f"a number in{shown}" if unit else "a number"
-    message = f"{parameter.label}: {asked}, usually {low:g} to {high:g}{shown}."
+    wanted = f"a number in{shown}" if unit else "a number"
+    message = f"{parameter.label}: {wanted}, usually {low:g} to {high:g}{shown}."
     return NumberCheck(low=low, high=high, message=message)
 
 
-def _example(parameter: Parameter) -> Content:
+def _example(parameter: Parameter, asked: Sequence[Requirement]) -> Content:
     if parameter.key in EXAMPLE:
         value = EXAMPLE[parameter.key]
         return Rich(value=value, look="example" if isinstance(value, str) else "example-number")
     if not parameter.examples:
         return Rich(look="example")
     first = parameter.examples[0]
-    _, factor = form_unit(parameter)
+    _, factor = form_unit(parameter, asked)
     if isinstance(first.value, tuple):
         return Rich(value=f"{first.value[0] * factor:g} to {first.value[1] * factor:g}", look="example")
     if isinstance(first.value, str):
         return Rich(value=first.cell, look="example")
-    return Rich(value=round(first.value * factor, 9), look="example-number")
+    return Rich(value=float(f"{first.value * factor:.4g}"), look="example-number")
 
 
 def _offered(keys: Iterable[str]) -> list[str]:
@@ -228,10 +235,15 @@ def _lists(keys: Sequence[str]) -> Table:
     )
 
 
-def _clauses(tender: Tender) -> Table:
+def _clauses(tender: Tender, chosen: Sequence[Asked]) -> Table:
     """One sentence a clause, in one cell: wording beside an answer would read as label and figure."""
+    headings = {
+        id(requirement): form_heading(one.parameter, one.condition, one.requirements)
+        for one in chosen
+        for requirement in one.requirements
+    }
     sentences = dict.fromkeys(
-        f"{r.clause} ({r.level.value}): {r.wording} — answer {_where_to_answer(r)}"
+        f"{r.clause} ({r.level.value}): {r.wording} — answer {_where_to_answer(headings.get(id(r)))}"
         for r in tender.requirements
     )
     return Table(
@@ -244,11 +256,8 @@ def _clauses(tender: Tender) -> Table:
     )
 
 
-def _where_to_answer(requirement: Requirement) -> str:
-    parameter = parameters().get(requirement.parameter)
-    if parameter is None:
-        return "here, in words"
-    return f"on sheet {SHEET}, column {form_heading(parameter, condition_of(requirement))}"
+def _where_to_answer(heading: str | None) -> str:
+    return f"on sheet {SHEET}, column {heading}" if heading else "here, in words"
 
 
 def _read_me(tender: Tender | None) -> Table:

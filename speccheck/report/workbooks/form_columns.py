@@ -9,6 +9,8 @@ from speccheck.dictionary import Parameter, parameters
 from speccheck.records import Requirement
 
 _KMH_PER_MPS = 3.6
+_ANSWERED_BY = {"frequency_range": "operating_bands"}
+"""A row of the form is a band: a second column of frequencies would ask for the same again."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -26,17 +28,22 @@ def condition_of(requirement: Requirement) -> str:
     if "wind_speed_mps" in at:
         return f"at {round(at['wind_speed_mps'] * _KMH_PER_MPS, 1):g} km/h"
     if "carrier_dbm" in at:
-        return f"at 2 x {at['carrier_dbm']:g} dBm"
+        return f"at 2 x {at['carrier_dbm']:.4g} dBm"
     if "angle_deg" in at:
         return f"at {abs(at['angle_deg']):g}°"
     return ""
+
+
+def answering_key(requirement: Requirement) -> str:
+    """Key of the column that a requirement is answered in."""
+    return _ANSWERED_BY.get(requirement.parameter, requirement.parameter)
 
 
 def asked_columns(keys: Sequence[str], requirements: Iterable[Requirement]) -> Iterator[Asked]:
     """One column a parameter, or one for each condition its figure is demanded under."""
     by_key: dict[str, dict[str, list[Requirement]]] = {}
     for requirement in requirements:
-        spoken = by_key.setdefault(requirement.parameter, {})
+        spoken = by_key.setdefault(answering_key(requirement), {})
         spoken.setdefault(condition_of(requirement), []).append(requirement)
     for key in keys:
         for condition, rows in by_key.get(key, {"": []}).items():
