@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import functools
 from dataclasses import replace
 
 from speccheck.checks.beams import Claims, beam_gains, claim_freq_hz, declared_loss_db, rest_tilt_deg
@@ -71,8 +72,8 @@ def sidelobes_fit_gain(
     uniform = max(
         beam.expected.directivity_dbi for beam in beam_gains(model, replace(claims, vertical_deg=None))
     )
-    cost = -efficiency_db(chebyshev(rows, min(suppression.low, 60.0)))
-    lossless = uniform - float(cost)
+    cost = _taper_cost_db(rows, min(suppression.low, 60.0))
+    lossless = uniform - cost
     loss = 0.0 if gain.at.get("loss_db") == 0 else LEAST_LOSS_DB
     value = gain.nominal - last_digit_slack(gain)
     verdict = (
@@ -94,7 +95,7 @@ def sidelobes_fit_gain(
             Step(
                 "Cost of the taper",
                 f"Chebyshev, {rows} elements, {suppression.low:g} dB",
-                round(float(cost), 2),
+                round(cost, 2),
                 "dB",
             ),
             Step("Lossless gain left", f"{uniform:.2f} − {cost:.2f}", round(lossless, 2), "dBi"),
@@ -103,6 +104,11 @@ def sidelobes_fit_gain(
         question="Please state gain and side lobes of the same beam: frequency, tilt and taper.",
         used=(suppression, *model.used),
     )
+
+
+@functools.lru_cache(maxsize=256)
+def _taper_cost_db(rows: int, suppression_db: float) -> float:
+    return -float(efficiency_db(chebyshev(rows, suppression_db)))
 
 
 @check(

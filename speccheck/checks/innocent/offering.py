@@ -22,6 +22,9 @@ class Examined(Protocol):
     def findings(self, slugs: Collection[str] | None = None) -> tuple[Finding, ...]:
         """What all checks say of it, or those named."""
 
+    def differs_for(self, slug: str) -> bool:
+        """Whether a figure that this check asked for was reread."""
+
 
 Rerun = Callable[[Panel], Examined]
 
@@ -30,7 +33,7 @@ LISTED = 5
 SLIPS = "figure-plausible"
 """The one check that says nothing of a figure that is possible."""
 
-NONE_FITS = "None of the readings tried fits."
+NONE_FITS = "None of the readings tried fits every figure it touches."
 
 
 def offer_innocent_readings(panel: Panel, findings: tuple[Finding, ...], rerun: Rerun) -> tuple[Finding, ...]:
@@ -62,20 +65,18 @@ class _Trial:
     rerun: Rerun
 
     def of(self, rank: int, reading: InnocentReading) -> Candidate | None:
-        """The reading over all bands, or over the misfitting ones where that explains more."""
+        """The reading over the widest reach in which it leaves no misfit that it touches."""
         if not any(set(reading.parameters) & set(f.parameters) for f in self.misfits.values()):
             return None
-        seen, candidates = [self.panel], []
+        seen = [self.panel]
         for reach in self._reaches():
             other = reading.reread(self.panel, reach)
             if other in seen:
                 continue
             seen.append(other)
-            candidate = self._judged(rank, reading, other)
-            if candidate and not candidate.entangled:
+            if candidate := self._judged(rank, reading, reach, self.rerun(other)):
                 return candidate
-            candidates += [candidate] if candidate else []
-        return next(iter(candidates), None)
+        return None
 
     def _reaches(self) -> Iterator[Reach]:
         """The whole panel, the misfitting bands, each of them alone."""
@@ -85,42 +86,58 @@ class _Trial:
             yield Reach(bands)
             yield from (Reach((band,)) for band in bands)
 
-    def _judged(self, rank: int, reading: InnocentReading, other: Panel) -> Candidate | None:
-        examined = self.rerun(other)
-        misfitting = _keyed(examined.findings({slug for slug, *_ in self.misfits}))
-        if not self._repaired(misfitting):
+    def _judged(
+        self, rank: int, reading: InnocentReading, reach: Reach, examined: Examined
+    ) -> Candidate | None:
+        if any(self._left_open(slug, reach, examined) for slug in self._misfitting_checks()):
+            return None
+        repaired = self._repaired(_keyed(examined.findings(set(self._misfitting_checks()))))
+        if not repaired:
             return None
         after = _keyed(examined.findings())
-        if any(f.verdict is Fit.DOES_NOT_FIT for key, f in after.items() if key not in self.misfits):
+        if any(self._broken(key, finding) for key, finding in after.items()):
             return None
-        if any(after[k].verdict is Fit.NOT_JUDGED for k in self.fitted if k in after):
-            return None  # a claim that fitted and can no longer be judged is not explained
-        repaired = self._repaired(after)
         mended = {slug for slug, *_ in repaired}
-        still = [key for key in self.misfits if key not in repaired]
-        doubted = [k[0] for k in after if k in self.fitted and after[k].verdict is Fit.DOUBTFUL]
         return Candidate(
             reading=reading,
             rank=rank,
             repaired=repaired,
             judged=tuple(f for key, f in after.items() if f.verdict is Fit.FITS and key[0] in mended),
-            leaves=tuple(dict.fromkeys([*(slug for slug, *_ in still), *doubted])),
-            entangled=bool(doubted) or any(not _same(self.misfits[k], after.get(k)) for k in still),
+            leaves=tuple(dict.fromkeys(key[0] for key in self.misfits if key not in repaired)),
             likely=reading.likely(self.panel),
         )
+
+    def _misfitting_checks(self) -> list[str]:
+        """The last registered first: those are arithmetic, the first ones integrate patterns."""
+        return list(dict.fromkeys(slug for slug, *_ in reversed(self.misfits)))
+
+    def _left_open(self, slug: str, reach: Reach, examined: Examined) -> bool:
+        """Whether a check that the reading touches still compares figures that misfit."""
+        if not examined.differs_for(slug):
+            return False
+        after = _keyed(examined.findings({slug}))
+        return any(
+            key in after
+            and after[key].verdict is not Fit.FITS
+            and (finding.expected is not None or after[key].verdict is Fit.NOT_JUDGED)
+            and (reach.bands is None or key[1] is None or key[1] in reach.bands)
+            for key, finding in self.misfits.items()
+            if key[0] == slug
+        )
+
+    def _broken(self, key: Key, after: Finding) -> bool:
+        """Whether a finding is worse than before: a claim that fitted, or that nothing was said of."""
+        if key in self.misfits:
+            return False
+        worse = (
+            (Fit.DOES_NOT_FIT, Fit.DOUBTFUL, Fit.NOT_JUDGED) if key in self.fitted else (Fit.DOES_NOT_FIT,)
+        )
+        return after.verdict in worse
 
     def _repaired(self, after: dict[Key, Finding]) -> dict[Key, Finding]:
         """What misfitted and fits now; an impossible figure that is no longer one fits as well."""
         fits = {k: after[k] for k in self.misfits if k in after and after[k].verdict is Fit.FITS}
         return fits | {k: _settled(f) for k, f in self.misfits.items() if k not in after and f.check == SLIPS}
-
-
-def _same(before: Finding, after: Finding | None) -> bool:
-    """Whether a check says the same again, so that what was reread is not its matter."""
-    return after is not None and all(
-        getattr(before, name) == getattr(after, name)
-        for name in ("verdict", "summary", "claimed", "expected")
-    )
 
 
 def _settled(finding: Finding) -> Finding:
@@ -146,9 +163,7 @@ def _keyed(findings: tuple[Finding, ...]) -> dict[Key, Finding]:
 
 
 def _completed(key: Key, finding: Finding, candidates: list[Candidate]) -> Finding:
-    mine = [c for c in candidates if key in c.repaired]
-    # one that leaves a check it touches in doubt is named only where no reading explains all it touches
-    mine = ([c for c in mine if not c.entangled] or mine)[:LISTED]
+    mine = [c for c in candidates if key in c.repaired][:LISTED]
     cells = ", ".join(str(place) for place in finding.where)
     if not mine:
         said = finding.question or "Please state the frequency, tilt and conditions these figures hold for."
@@ -168,8 +183,6 @@ def _completed(key: Key, finding: Finding, candidates: list[Candidate]) -> Findi
 def _order_said(candidates: list[Candidate]) -> tuple[str, ...]:
     """What the order of the readings does not show."""
     first, *others = candidates
-    if first.entangled:
-        return ("No single reading explains every figure; those named leave others in doubt.",)
     as_well = [c.reading.name for c in others if c.fits_as_well_as(first)]
     return (f"'{first.reading.name}' fits no better than '{as_well[0]}'.",) if as_well else ()
 

@@ -31,11 +31,10 @@ goes first; below the second, a factor of e, the order is no finding, and the re
 
 @dataclass(frozen=True, slots=True)
 class Candidate:
-    """A reading, the misfits it repairs, and the checks it leaves in doubt.
+    """A reading, the misfits it repairs, and the misfits it does not touch.
 
     `judged` are the findings of the repairing checks in all bands: where it rereads one band, the others tell
-    what the panel is like. `entangled`: some of the checks left in doubt depend on what is reread, so that
-    the reading does not explain all it touches.
+    what the panel is like.
     """
 
     reading: InnocentReading
@@ -43,14 +42,12 @@ class Candidate:
     repaired: dict[Key, Finding]
     judged: tuple[Finding, ...]
     leaves: tuple[str, ...]
-    entangled: bool
     likely: bool
 
     @property
-    def order(self) -> tuple[bool, int, bool, float, int]:
-        """Explains all it touches, repairs most, pointed to by the figures, fits best, listed first."""
+    def order(self) -> tuple[int, bool, float, int]:
+        """Repairs most, pointed to by the figures, fits best, listed first."""
         return (
-            self.entangled,
             -len(self.repaired),
             not self.likely,
             self.unlikelihood,
@@ -64,7 +61,7 @@ class Candidate:
 
     def fits_as_well_as(self, other: Candidate, within: float = AS_WELL) -> bool:
         """Whether both explain as much and are as likely."""
-        return self.order[:3] == other.order[:3] and abs(self.unlikelihood - other.unlikelihood) < within
+        return self.order[:2] == other.order[:2] and abs(self.unlikelihood - other.unlikelihood) < within
 
 
 def ranked(candidates: Collection[Candidate]) -> list[Candidate]:
