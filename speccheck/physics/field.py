@@ -47,7 +47,7 @@ class Excitation:
 
     @property
     def row_groups(self) -> tuple[tuple[slice | NDArray[np.intp], float], ...]:
-        """Rows that share a sideways shift, and that shift [m]; each panel group begins with an unshifted row."""
+        """Rows that share a sideways shift [m]; every panel group begins with an unshifted row."""
         if self.row_shifts_m is None:
             return ((slice(None), 0.0),)
         shifts = dict.fromkeys(self.row_shifts_m.tolist())

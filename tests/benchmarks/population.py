@@ -1,68 +1,119 @@
 """How often an honest gain is doubted and a flattering one caught: python tests/benchmarks/population.py
 
 Random plausible panels of each class, with taper, element shape, excitation errors and loss unknown to the
-judge, claim their own beamwidths and gain as a data sheet would print them (rounded). The truth is a
-Gauss-Legendre sphere summed element by element: nothing of it is shared with the package. Loss (symmetric
-triangular over the range of the class), errors and geometry are assumptions about the trade, so the
-percentages are indicative. An argument sets the number of panels a class.
+judge, state their geometry, beamwidths and gain as a data sheet would print them (rounded), and every check
+of the program looks at them. The truth is a Gauss-Legendre sphere summed element by element: nothing of it is
+shared with the package.
+
+Ranges of loss, errors and geometry are assumptions about the trade, so the percentages are indicative. Above
+all they depend on how losses lie within their range: seldom at its ends (symmetric triangular, for which the
+edges of `speccheck.physics.expected` are set), or anywhere alike (uniform). Both are printed: the same panels
+with the same rank of loss. An argument sets the number of panels a class.
 """
 
 from __future__ import annotations
 
 import sys
 from dataclasses import dataclass
+from pathlib import Path
 
 import numpy as np
 
-from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
-from speccheck.physics.expected import GainZone, PanelClass, expected_gain
-from speccheck.physics.layout import ArrayLayout
+sys.path.insert(0, str(Path(__file__).parents[1]))
+
+from checks.cases import panel_of
+
+from speccheck.checks.runner import run_checks
+from speccheck.physics.expected import PanelClass
+from speccheck.records import Fit, Settings
 
 SEED = 4711
-COUNT = 2000
+COUNT = 400
 OFFSETS_DB = (0.0, 1.0, 1.5, 2.0, 3.0)
+LOSSES_DB = {
+    PanelClass.PASSIVE: (0.4, 1.6),
+    PanelClass.MASSIVE_MIMO: (0.3, 1.8),
+    PanelClass.MMWAVE: (0.5, 2.8),
+}
+BANDS_MHZ = {
+    PanelClass.PASSIVE: (1710, 2170),
+    PanelClass.MASSIVE_MIMO: (3300, 3800),
+    PanelClass.MMWAVE: (26500, 27500),
+}
+SPEED_MM_MHZ = 299_792.458
+
+
+def triangular(rank):
+    """Place in a range of a figure of that rank, symmetric about the middle."""
+    return np.sqrt(rank / 2) if rank < 0.5 else 1 - np.sqrt((1 - rank) / 2)
+
+
+DRAWS = {"triangular": triangular, "uniform": lambda rank: rank}
 
 
 @dataclass
 class Truth:
-    """One honest panel: declared layout [wavelengths], what it claims, and its loss."""
+    """One panel: counts, pitches [wavelengths], beam as printed, lossless gain, rank of its loss."""
 
-    layout: ArrayLayout
+    kind: PanelClass
+    counts: tuple[int, int, int]
+    pitches: tuple[float, float]
     tilt_deg: float
     azimuth_deg: float
     elevation_deg: float
-    gain_dbi: float
-    loss_db: float
+    directivity_dbi: float
+    rank: float
+
+    def loss_db(self, draw):
+        low, high = LOSSES_DB[self.kind]
+        return low + (high - low) * DRAWS[draw](self.rank)
+
+    def stated(self, draw, offset_db, *, declared):
+        """The panel as its data sheet prints it."""
+        low, high = BANDS_MHZ[self.kind]
+        wavelength_mm = SPEED_MM_MHZ / ((low + high) / 2)
+        digits = 2 if self.kind is PanelClass.MMWAVE else 1
+        rows, columns, grouped = self.counts
+        gain = round(self.directivity_dbi - self.loss_db(draw), 1) + offset_db
+        sheet = {
+            "frequency_range": [low, high],
+            "polarisations": 2,
+            "array_rows": rows,
+            "array_columns": columns,
+            "vertical_element_spacing": f"{self.pitches[0] * wavelength_mm:.{digits}f} mm",
+            "horizontal_beamwidth": self.azimuth_deg,
+            "vertical_beamwidth": self.elevation_deg,
+            "gain": {"value": round(float(gain), 1), "unit": "dBi", "at": {"tilt_deg": self.tilt_deg}},
+        }
+        if columns > 1:
+            sheet["horizontal_element_spacing"] = f"{self.pitches[1] * wavelength_mm:.{digits}f} mm"
+        if grouped > 1:
+            sheet |= {"subarray_rows": grouped, "subarray_tilt": 0}
+        if declared:
+            sheet["feed_loss"] = round(float(self.loss_db(draw)), 1)
+        return panel_of(sheet)
 
 
 def draw(kind, rng):
-    """Geometry, element, tapers and loss of one panel of a class."""
+    """Geometry, element, tapers and errors of one panel of a class."""
     if kind is PanelClass.PASSIVE:
         rows, columns, grouped = int(rng.integers(6, 15)), 1, 1
-        pitch_v, pitch_h, loss = rng.uniform(0.6, 0.95), 0.5, rng.triangular(0.4, 1.0, 1.6)
+        pitch_v, pitch_h = rng.uniform(0.6, 0.95), 0.5
         azimuth, tilt = rng.uniform(58, 72), rng.uniform(0, 8)
     elif kind is PanelClass.MASSIVE_MIMO:
         grouped = int(rng.integers(1, 4))
         rows, columns = int(rng.choice([4, 6, 8])) * grouped, int(rng.choice([4, 8, 16]))
-        pitch_v, pitch_h, loss = (
-            rng.uniform(0.6, 0.75),
-            rng.uniform(0.48, 0.56),
-            rng.triangular(0.3, 1.05, 1.8),
-        )
+        pitch_v, pitch_h = rng.uniform(0.6, 0.75), rng.uniform(0.48, 0.56)
         azimuth, tilt = rng.uniform(65, 100), 0.0
     else:
         rows, columns, grouped = int(rng.choice([8, 12, 16])), int(rng.choice([8, 12, 16])), 1
-        pitch_v, pitch_h, loss = (
-            rng.uniform(0.48, 0.56),
-            rng.uniform(0.48, 0.56),
-            rng.triangular(0.5, 1.65, 2.8),
-        )
+        pitch_v, pitch_h = rng.uniform(0.48, 0.56), rng.uniform(0.48, 0.56)
         azimuth, tilt = rng.uniform(65, 100), 0.0
     shape = (azimuth, rng.uniform(60, 85), rng.uniform(20, 30))
     pedestals = rng.uniform(0.3, 1.0, 2) if columns > 1 else (rng.uniform(0.3, 1.0), 1.0)
     worst_db, worst_deg = (1.5, 15.0) if kind is PanelClass.MMWAVE else (1.0, 10.0)
     errors = rng.uniform(0.2, worst_db), rng.uniform(2, worst_deg)
-    return (rows, columns, grouped), (pitch_v, pitch_h), shape, pedestals, errors, tilt, loss
+    return (rows, columns, grouped), (pitch_v, pitch_h), shape, pedestals, errors, tilt
 
 
 def excitation(counts, pitch_v, pedestals, errors, *, tilt, rng):
@@ -135,65 +186,61 @@ def width(level, angle, at):
 
 
 def honest(kind, rng):
-    """One honest panel and its data-sheet figures."""
-    counts, pitches, shape, pedestals, errors, tilt, loss = draw(kind, rng)
+    """One panel and its figures."""
+    counts, pitches, shape, pedestals, errors, tilt = draw(kind, rng)
     weights = excitation(counts, pitches[0], pedestals, errors, tilt=tilt, rng=rng)
     peak, azimuth, elevation = peak_and_widths(weights, pitches, shape, tilt)
-    gain = 10 * np.log10(peak / mean_power(weights, pitches, shape)) - loss
-    rows, columns, grouped = counts
-    layout = ArrayLayout(rows, columns, *pitches, subarray_rows=grouped)
-    printed_azimuth = round(azimuth) if columns == 1 else round(azimuth, 1)
-    return Truth(layout, tilt, printed_azimuth, round(elevation, 1), round(gain, 1), round(loss, 1))
+    directivity = 10 * np.log10(peak / mean_power(weights, pitches, shape))
+    printed_azimuth = round(azimuth) if counts[1] == 1 else round(azimuth, 1)
+    rank = rng.uniform()
+    return Truth(kind, counts, pitches, tilt, printed_azimuth, round(elevation, 1), float(directivity), rank)
 
 
-def simulate(kind, count, seed):
-    """Shares of zones by offset, without and with declared loss: {(declared, offset): {zone: share}}."""
+def verdict(panel):
+    """The worst any check says of a panel."""
+    verdicts = {finding.verdict for finding in run_checks(panel, Settings())}
+    return next((v for v in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL) if v in verdicts), Fit.FITS)
+
+
+def simulate(kind, count, seed, *, draws=tuple(DRAWS), offsets=OFFSETS_DB):
+    """Shares of verdicts: {(draw, declared, offset): {verdict: share}}."""
     rng = np.random.default_rng([seed, list(PanelClass).index(kind)])
     tally = {
-        (declared, offset): dict.fromkeys(GainZone, 0) for declared in (False, True) for offset in OFFSETS_DB
+        (name, declared, offset): dict.fromkeys((Fit.DOES_NOT_FIT, Fit.DOUBTFUL, Fit.FITS), 0.0)
+        for name in draws
+        for declared in (False, True)
+        for offset in offsets
     }
-    margins = []
     for _ in range(count):
         truth = honest(kind, rng)
-        for declared in (False, True):
-            edges = expected_gain(
-                truth.layout,
-                SPEED_OF_LIGHT_MPS,
-                kind,
-                tilt_deg=truth.tilt_deg,
-                horizontal_beamwidth_deg=truth.azimuth_deg,
-                vertical_beamwidth_deg=truth.elevation_deg,
-                declared_loss_db=truth.loss_db if declared else None,
-            )
-            for offset in OFFSETS_DB:
-                tally[declared, offset][edges.zone(truth.gain_dbi + offset)] += 1
-        margins.append(truth.gain_dbi - edges.directivity_dbi)
-    shares = {key: {zone: n / count for zone, n in zones.items()} for key, zones in tally.items()}
-    return shares, np.percentile(margins, [2.5, 50, 97.5])
-
-
-def caught(zones):
-    return zones[GainZone.IMPOSSIBLE] + zones[GainZone.QUESTION]
+        for (name, declared, offset), shares in tally.items():
+            shares[verdict(truth.stated(name, offset, declared=declared))] += 1 / count
+    return tally
 
 
 def main(count=COUNT):
-    print(f"{count} panels a class, seed {SEED}; shares in per cent")
-    print(f"{'':26s}{'honest claims':^32s}{'caught, claim too high by':^28s}")
-    print(
-        f"{'class':17s}{'loss':9s}" + "".join(f"{name:>11s}" for name in ("impossible", "questioned", "low")),
-        end="",
-    )
+    print(f"{count} panels a class, seed {SEED}, every check; shares in per cent")
+    print(f"{'':37s}{'honest claims':^24s}{'caught, claim too high by':^28s}")
+    print(f"{'class':17s}{'losses lie':12s}{'loss':8s}{'does not fit':>12s}{'questioned':>12s}", end="")
     print("".join(f"{f'{offset:g} dB':>7s}" for offset in OFFSETS_DB[1:]))
     for kind in PanelClass:
-        shares, margins = simulate(kind, count, SEED)
-        for declared in (False, True):
-            honest_zones = (GainZone.IMPOSSIBLE, GainZone.QUESTION, GainZone.LOW)
-            zones = [100 * shares[declared, 0.0][zone] for zone in honest_zones]
-            found = [100 * caught(shares[declared, offset]) for offset in OFFSETS_DB[1:]]
-            print(f"{kind.value:17s}{'declared' if declared else 'unknown':9s}", end="")
-            print("".join(f"{zone:11.2f}" for zone in zones) + "".join(f"{share:7.1f}" for share in found))
-        low, middle, high = margins
-        print(f"{'':17s}gain less fitted directivity {low:.2f} .. {high:.2f}, median {middle:.2f} dB")
+        shares = simulate(kind, count, SEED)
+        for name in DRAWS:
+            for declared in (False, True):
+                honest_shares = shares[name, declared, 0.0]
+                print(f"{kind.value:17s}{name:12s}{'declared' if declared else 'unknown':8s}", end="")
+                print(
+                    "".join(f"{100 * honest_shares[v]:12.2f}" for v in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)),
+                    end="",
+                )
+                caught = (1 - shares[name, declared, offset][Fit.FITS] for offset in OFFSETS_DB[1:])
+                print("".join(f"{100 * share:7.1f}" for share in caught))
+    print(
+        "Aims: honest does not fit 0.2, questioned 4 at most; 1.5 dB caught 97 (millimetre wave 80), with\n"
+        "the loss declared 99; 3 dB always. The edges are set for triangular losses. Uniform ones put so\n"
+        "many honest panels below the least plausible loss that no edge meets both aims for millimetre\n"
+        "wave: the remedy is the loss statement that the question asks for."
+    )
 
 
 if __name__ == "__main__":

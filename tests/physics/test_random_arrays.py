@@ -18,8 +18,8 @@ from speccheck.physics.lobes import element_lobes, highest_lobe, subarray_lobes
 from speccheck.physics.states import array_states
 
 FAINT_DB = -30.0
-"""The lobe beside the beam counts down to this level: between two zeros that almost meet, one sample wide,
-stands a lobe that no panel was ever judged by. Of all other lobes, those down to -45 dB count."""
+"""The lobe beside the beam counts down to this level below the highest of the cut: between two zeros that
+almost meet, one sample wide, stands a lobe that no panel was ever judged by. Of others, -45 dB counts."""
 
 
 @dataclass(frozen=True)
@@ -32,7 +32,7 @@ class Lobe:
     def matches(self, found):
         wanted = self.level_db
         if math.isnan(wanted):
-            return math.isnan(found)
+            return not found > self.faint_db
         return abs(found - wanted) <= 0.1 or (wanted < self.faint_db and not found > self.faint_db + 3)
 
 
@@ -45,7 +45,7 @@ def figures(array, tilt, scan):
         width, beside, highest = brute.cut(plane)
         yield f"{plane} width", getattr(found, f"{plane}_beamwidth_deg"), width, 0.05
         yield f"{plane} highest", getattr(found, f"highest_sidelobe_{plane}_db"), Lobe(highest), None
-        if not any(level < FAINT_DB for level in beside):
+        if not any(level - max(highest, 0) < FAINT_DB for level in beside):
             first = max((level for level in beside if not math.isnan(level)), default=math.nan)
             yield f"{plane} first", getattr(found, f"first_sidelobe_{plane}_db"), Lobe(first), None
     yield "grating", element_lobes(*call).level_db, Lobe(brute.lattice_lobe()), None

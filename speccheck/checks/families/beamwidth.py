@@ -13,6 +13,7 @@ from speccheck.checks.beams import (
     rest_tilt_deg,
     uniform_widths_deg,
 )
+from speccheck.checks.envelopes import held_as_envelope, is_envelope
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim, last_digit_slack
@@ -57,6 +58,8 @@ def vertical_beamwidth_fits_rows(
     """
     if round(array_rows.nominal) < 2:
         return None
+    if is_envelope(vertical_beamwidth):
+        return held_as_envelope(case, vertical_beamwidth)
     model = model_of(case, "vertical")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
@@ -152,6 +155,8 @@ def horizontal_beamwidth_fits_columns(
     """
     if array_columns is None or round(array_columns.nominal) < 2:
         return _single_column(horizontal_beamwidth, stated=array_columns is not None)
+    if is_envelope(horizontal_beamwidth):
+        return held_as_envelope(case, horizontal_beamwidth)
     model = model_of(case, "horizontal")
     if isinstance(model, Lacking):
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=model.missing, used=model.used)
@@ -161,19 +166,21 @@ def horizontal_beamwidth_fits_columns(
     marked = "beam_columns" in horizontal_beamwidth.at
     own = None if tied else columns_of_width(model, horizontal_beamwidth.nominal, freq_hz, tilt)
     uniform, _ = uniform_widths_deg(flat(model.layout), freq_hz, tilt)
-    if uniform is None:
-        return None
-    if own is None or own == model.layout.columns:
-        pitch = model.horizontal_pitch_wl(freq_hz)
-        words = f"{model.layout.columns} columns at {pitch:.2f} λ ({freq_hz / 1e6:.0f} MHz)"
-        rough = f"exact pattern; 50.8° ÷ ({model.layout.columns} × {pitch:.3f}) without element"
-        return _held(model, horizontal_beamwidth, uniform, words, rough)
+    if uniform is None or own is None or own == model.layout.columns:
+        return None if uniform is None else _of_all(model, horizontal_beamwidth, uniform, freq_hz)
     if gain is None and not marked:
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=("gain",), used=model.used)
     theirs = marked or _gain_of(
         model, own, gain=gain, vertical=vertical_beamwidth, loss=feed_loss, tilt_deg=tilt
     )
     return _of_fewer(model, horizontal_beamwidth, own, uniform, theirs=theirs)
+
+
+def _of_all(model: Model, width: Reading, uniform_deg: float, freq_hz: float) -> Judgement:
+    columns, pitch = model.layout.columns, model.horizontal_pitch_wl(freq_hz)
+    words = f"{columns} columns at {pitch:.2f} λ ({freq_hz / 1e6:.0f} MHz)"
+    rough = f"exact pattern; 50.8° ÷ ({columns} × {pitch:.3f}) without element"
+    return _held(model, width, uniform_deg, words, rough)
 
 
 def _single_column(width: Reading, *, stated: bool) -> Judgement | None:

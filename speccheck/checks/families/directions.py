@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 
 from speccheck.checks.cell_text import words
+from speccheck.checks.envelopes import ENVELOPE
 from speccheck.checks.registry import Judgement, check
 from speccheck.checks.saying import claim
 from speccheck.records import Amount, Fit, Interval, Reading, Step
@@ -21,7 +22,7 @@ _ON_AXIS = re.compile(
 _USUAL_SECTOR_DB = 15.0
 _USUAL_AXIS_DB = 35.0
 _UNDEFINED_CROSS_DB = 25.0
-_CUT = re.compile(r"\b(cut|pattern|schnitt|coupe|corte|taglio)")
+_CUT = re.compile(r"\b(cut|pattern|diagram|schnitt|coupe|corte|taglio|strahlungs)")
 _HORIZON = re.compile(r"horizon(?!tal)|at 0\s*° elevation|elevation 0")
 
 
@@ -159,7 +160,8 @@ def horizontal_cut_through_beam(
 
     Assumptions
     Applies where the words of the width or gain, or a remark on the cuts, name the horizon. The tilt is the
-    one stated beside the figure, else the middle of the range. More than 1 dB below the peak is doubtful.
+    one stated beside the figure, else the middle of the range. More than 1 dB below the peak is doubtful. A
+    remark on cuts that names no plane is asked about where the tilt reaches half the vertical width.
 
     Worked example
     At 6° of tilt with a 7° vertical width the horizon lies 12·(6/7)² = 8.8 dB under the beam peak: width and
@@ -168,7 +170,7 @@ def horizontal_cut_through_beam(
     said = words(horizontal_beamwidth, gain)
     remark = words(remarks)
     if not _HORIZON.search(said) and not (_CUT.search(remark) and _HORIZON.search(remark)):
-        return None
+        return _plane_not_named(electrical_tilt, vertical_beamwidth) if _CUT.search(remark) else None
     if electrical_tilt is None or vertical_beamwidth is None:
         lacking = "electrical_tilt" if electrical_tilt is None else "vertical_beamwidth"
         return Judgement(verdict=Fit.NOT_JUDGED, summary="", missing=(lacking,))
@@ -186,4 +188,57 @@ def horizontal_cut_through_beam(
         ),
         assumptions=(f"Tilt of {tilt:g}°.", "Main beam as a parabola in decibels."),
         question="Please state whether the horizontal cut goes through the beam peak or lies on the horizon.",
+    )
+
+
+def _plane_not_named(tilt: Reading | None, width: Reading | None) -> Judgement | None:
+    """A question where cuts are spoken of, their plane is not named, and the tilt makes it matter."""
+    if tilt is None or width is None or isinstance(tilt.value, str) or isinstance(width.value, str):
+        return None
+    if tilt.high < width.nominal / 2:
+        return None
+    down = round(12 * (tilt.high / width.nominal) ** 2, 1)
+    return Judgement(
+        verdict=Fit.NOT_JUDGED,
+        summary="Horizontal cut through the beam: not judged: the plane of the cuts is not stated; at"
+        f" {tilt.high:g}° tilt the horizon lies {down:.1f} dB below the peak.",
+        working=(Step("Level at the horizon", f"12·({tilt.high:g}/{width.nominal:g})²", down, "dB"),),
+        question="Please state whether the horizontal cut goes through the beam peak or lies on the horizon.",
+    )
+
+
+@check(
+    "patterns-of-one-beam",
+    "Patterns are those of one beam",
+    needs=("remarks",),
+    optional=("gain",),
+    about=("remarks",),
+    source="energy conservation: the mean gain over the sphere is the efficiency, 0 dB at most",
+)
+def patterns_of_one_beam(remarks: Reading, gain: Reading | None) -> Judgement | None:
+    """Asks for the pattern of one beam where the bid says that its patterns are envelopes of many.
+
+    An envelope is right for studies of interference and exposure. It is no pattern of a beam: integrated over
+    the sphere it holds more than the panel is fed with, and its widths and side lobes are nobody's.
+
+    Formula
+    mean of G over the sphere = efficiency ≤ 1; an envelope exceeds it
+
+    Assumptions
+    Applies where a remark on patterns or cuts names an envelope. Widths said to be those of an envelope are
+    held against the steering range by the checks of beamwidths.
+
+    Worked example
+    'patterns show the envelope of all beams' is not judged: the pattern of one beam is asked for.
+    """
+    said = words(remarks)
+    if not (_CUT.search(said) and ENVELOPE.search(said)):
+        return None
+    return Judgement(
+        verdict=Fit.NOT_JUDGED,
+        summary="Patterns are those of one beam: not judged: the patterns are said to be the envelope of all"
+        " beams, whose mean over the sphere may exceed 0 dB; nothing of one beam can be read off them.",
+        question="Please supply the pattern of one beam beside the envelope of all beams, and say which of"
+        " them gain, beamwidths and side lobes are taken from.",
+        used=() if gain is None else (gain,),
     )

@@ -16,6 +16,7 @@ from speccheck.checks.beams import (
     panel_class,
     rest_tilt_deg,
 )
+from speccheck.checks.envelopes import is_envelope
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim, last_digit_slack
@@ -128,7 +129,7 @@ class _Widths:
 
     def horizontal_deg(self, model: Model, freq_hz: float) -> float | None:
         """Width of an array beam falls with frequency, that of a single column stays."""
-        if self.horizontal is None or "beam_columns" in self.horizontal.at:
+        if self.horizontal is None or self.horizontal.at.get("beam_columns") or is_envelope(self.horizontal):
             return None
         width = number(self.horizontal)
         fixed = model.layout.columns == 1 or (width is not None and width >= COLUMN_WIDTHS_DEG[0])
@@ -136,7 +137,8 @@ class _Widths:
 
     def vertical_deg(self, model: Model, freq_hz: float) -> float | None:
         """Width of the rows at a frequency [Hz]."""
-        return None if self.vertical is None else self._at(model, self.vertical, freq_hz)
+        beam = self.vertical is not None and not is_envelope(self.vertical)
+        return self._at(model, self.vertical, freq_hz) if self.vertical and beam else None
 
     @staticmethod
     def _at(model: Model, width: Reading, freq_hz: float) -> float | None:
@@ -198,9 +200,7 @@ def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) ->
         ranked, key=lambda r: (order.index(r[2].zone(value, slack)), abs(value - r[2].question))
     )
     zone = edges.zone(value, slack)
-    expected = beam.expected
-    layout = model.layout
-    counted = f"{layout.rows} × {beam.columns} positions"
+    expected, layout = beam.expected, model.layout
     sense = {
         GainZone.IMPOSSIBLE: f"{value - expected.directivity_dbi:.1f} dB above the lossless value",
         GainZone.QUESTION: f"{value - expected.question_dbi:.1f} dB above what the least loss leaves",
@@ -209,9 +209,9 @@ def _judged(model: Model, gain: Reading, held: list[tuple[Claims, BeamGain]]) ->
     }[zone]
     return Judgement(
         verdict=VERDICTS[zone],
-        summary=f"{claim(gain)} gain claimed; {counted} at {pitches(model, beam.columns, claims.freq_hz)}"
-        " have"
-        f" {expected.directivity_dbi:.1f} dBi lossless at {claims.freq_hz / 1e6:.0f} MHz and"
+        summary=f"{claim(gain)} gain claimed; {layout.rows} × {beam.columns} positions at"
+        f" {pitches(model, beam.columns, claims.freq_hz)} have {expected.directivity_dbi:.1f} dBi"
+        f" lossless at {claims.freq_hz / 1e6:.0f} MHz and"
         f" {expected.low_dbi:.1f} to {expected.question_dbi:.1f} dBi with losses: {sense}.",
         claimed=Amount(round(value, 2), "dBi"),
         expected=Interval(round(expected.low_dbi, 2), round(expected.question_dbi, 2), "dBi"),

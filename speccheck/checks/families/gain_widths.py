@@ -5,6 +5,7 @@ from __future__ import annotations
 import math
 
 from speccheck.checks.beams import SAME_BEAM, claim_freq_hz, flat, rest_tilt_deg, uniform_widths_deg
+from speccheck.checks.envelopes import held_as_envelope, is_envelope
 from speccheck.checks.model import Lacking, Model, model_of
 from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim, last_digit_slack, mhz
@@ -65,7 +66,8 @@ def gain_fits_beamwidths(
     two are for beams narrow in elevation; for a wide one they grow by exp(θv² ÷ (16·ln 2)), θv in radians.
 
     Assumptions
-    Gain and both widths belong to one beam at one frequency. Widths may be half of their last printed digit
+    Gain and both widths belong to one beam. Where the gain is stated for another frequency than the vertical
+    width, the width is taken to fall as the frequency rises. Widths may be half of their last printed digit
     smaller. Horizontal widths to about 130°.
 
     Worked example
@@ -74,12 +76,17 @@ def gain_fits_beamwidths(
     """
     if "element_gain_dbi" in gain.at:
         return _of_the_short_formula(gain)
+    for width in (horizontal_beamwidth, vertical_beamwidth):
+        if is_envelope(width):
+            return held_as_envelope(case, width)
     across, along = horizontal_beamwidth.nominal, vertical_beamwidth.nominal
     note: tuple[str, ...] = ()
     model = model_of(case)
+    if isinstance(model, Model):
+        along, note = _at_frequency_of(gain, vertical_beamwidth, model)
     other = _width_of_another_beam(model, gain, horizontal_beamwidth, electrical_tilt)
     if other is not None and "beam_columns" in horizontal_beamwidth.at:
-        across, note = other, (f"Width of all columns, {other:.1f}°, in place of the broadcast width.",)
+        across, note = other, (*note, f"Width of all columns, {other:.1f}°, in place of the broadcast width.")
     if across > 130:
         return None
     rounding = last_digit_slack(horizontal_beamwidth) / across + last_digit_slack(vertical_beamwidth) / along
@@ -99,8 +106,8 @@ def gain_fits_beamwidths(
         else Fit.FITS
     )
     implied = float(implied_beamwidth_constant(value, across, along))
-    if verdict is not Fit.FITS and other is not None and not note and isinstance(model, Model):
-        return _of_two_beams(gain, horizontal_beamwidth, other, model)
+    if verdict is not Fit.FITS and other is not None and across != other and isinstance(model, Model):
+        return _of_two_beams(gain, horizontal_beamwidth, along, other, model)
     meaning = {
         Fit.FITS: "in the ordinary range",
         Fit.DOUBTFUL: f"{value - planar:+.1f} dB against {_thousands(k_upper)}",
@@ -123,6 +130,7 @@ def gain_fits_beamwidths(
                 round(implied),
                 "deg²",
             ),
+            _mean_step(value, across, along),
         ),
         assumptions=("Gain and both widths belong to one beam at one frequency, widths at -3 dB.", *note),
         question="Please state frequency, tilt and level (-3 dB) of the gain and of each beamwidth.",
@@ -149,6 +157,16 @@ def _edge_steps(
     )
 
 
+def _at_frequency_of(gain: Reading, width: Reading, model: Model) -> tuple[float, tuple[str, ...]]:
+    """Width [deg] of the rows at the frequency of the gain, and a note where that is another one."""
+    gain_hz, width_hz = claim_freq_hz(gain, model), claim_freq_hz(width, model)
+    if gain_hz == width_hz:
+        return width.nominal, ()
+    there = width.nominal * width_hz / gain_hz
+    said = f"Vertical width of {width.nominal:g}° at {width_hz / 1e6:.0f} MHz taken as {there:.1f}°"
+    return there, (f"{said} at {gain_hz / 1e6:.0f} MHz, where the gain holds.",)
+
+
 def _thousands(product: float) -> str:
     return f"{product:,.0f}".replace(",", " ")
 
@@ -173,7 +191,18 @@ def _of_the_short_formula(gain: Reading) -> Judgement:
     )
 
 
-def _of_two_beams(gain: Reading, width: Reading, all_deg: float, model: Model) -> Judgement:
+def _mean_step(gain_dbi: float, across_deg: float, along_deg: float) -> Step:
+    """The mean gain over the sphere of what radiates between the half-power points alone.
+
+    A pattern holds no more than its panel is fed with: a mean above 0 dB is no pattern of one beam, but an
+    envelope of many.
+    """
+    mean_db = gain_dbi + 10 * math.log10(across_deg * along_deg / SOLID_ANGLE)
+    formula = f"{gain_dbi:g} + 10·log10({across_deg:.4g} × {along_deg:.4g} ÷ 41253), 0 dB at most"
+    return Step("Mean of such a pattern over the sphere", formula, round(mean_db, 1), "dB")
+
+
+def _of_two_beams(gain: Reading, width: Reading, along_deg: float, all_deg: float, model: Model) -> Judgement:
     columns = model.layout.columns
     return Judgement(
         verdict=Fit.DOUBTFUL,
@@ -184,10 +213,13 @@ def _of_two_beams(gain: Reading, width: Reading, all_deg: float, model: Model) -
         expected=Interval(round(0.92 * all_deg, 1), round(1.22 * all_deg, 1), "deg"),
         working=(
             Step("Width of all columns", f"{columns} columns, uniform weights", round(all_deg, 1), "deg"),
+            _mean_step(gain.nominal, width.nominal, along_deg),
         ),
-        assumptions=("The width may be that of a broadcast beam or of one column.",),
-        question="Please state which beam (traffic, broadcast, one column) each of gain and beamwidth belongs"
-        " to.",
+        assumptions=(
+            "The width may be that of a broadcast beam, of one column or of the envelope of all beams.",
+        ),
+        question="Please state which beam (traffic, broadcast, one column, envelope of all) each of gain and"
+        " beamwidth belongs to.",
         used=model.used,
     )
 

@@ -5,6 +5,7 @@ from __future__ import annotations
 from dataclasses import replace
 
 from speccheck.checks.beams import COLUMN_WIDTHS_DEG
+from speccheck.checks.envelopes import steered_deg
 from speccheck.checks.innocent.conventions import Reach, Transform, innocent, marked, reread, scaled
 from speccheck.records import Panel, Reading
 
@@ -47,6 +48,23 @@ def broadcast_beam(panel: Panel, reach: Reach) -> Panel:
         return marked(beam_columns=1)(reading) if wide else reading
 
     return reread(panel, reach, ("horizontal_beamwidth",), of_column)
+
+
+@innocent(
+    "widths of the envelope of all beams",
+    "the beamwidths are those of one beam or of the envelope of all beams",
+    _HORIZONTAL,
+    _VERTICAL,
+)
+def envelope_of_all_beams(panel: Panel, reach: Reach) -> Panel:
+    """A width no smaller than the stated steering range of its plane covers all beams."""
+
+    def covering(reading: Reading) -> Reading:
+        range_deg = steered_deg(panel, reading.band, reading)
+        wide = range_deg is not None and 0 < range_deg <= reading.nominal
+        return marked(envelope=1)(reading) if wide else reading
+
+    return reread(panel, reach, (_HORIZONTAL, _VERTICAL), covering)
 
 
 _LEVEL_ASKED = "the {} taken at half power"
