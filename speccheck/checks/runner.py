@@ -73,9 +73,10 @@ class Examination:
         wanted = (check for check in CHECKS.values() if slugs is None or check.slug in slugs)
         return tuple(itertools.chain.from_iterable(self._answer(check).findings for check in wanted))
 
-    def differs_for(self, slug: str) -> bool:
-        """Whether a figure that a check asked for differs from the panel this one is examined beside."""
-        return self._kept(CHECKS[slug]) is None
+    @property
+    def differing(self) -> frozenset[str] | None:
+        """The parameters whose readings differ from the panel this one is examined beside."""
+        return self._differ
 
     def _answer(self, check: Check) -> _Answer:
         answer = self._answers.get(check.slug) or self._kept(check) or self._run(check)

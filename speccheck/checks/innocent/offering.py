@@ -13,6 +13,7 @@ from typing import Protocol
 
 from speccheck.checks.innocent.conventions import INNOCENT_READINGS, InnocentReading, Reach
 from speccheck.checks.innocent.ranking import Candidate, Key, ranked, span_of
+from speccheck.checks.registry import CHECKS
 from speccheck.records import Convention, Finding, Fit, Panel, Step
 
 
@@ -22,8 +23,9 @@ class Examined(Protocol):
     def findings(self, slugs: Collection[str] | None = None) -> tuple[Finding, ...]:
         """What all checks say of it, or those named."""
 
-    def differs_for(self, slug: str) -> bool:
-        """Whether a figure that this check asked for was reread."""
+    @property
+    def differing(self) -> frozenset[str] | None:
+        """The parameters reread; None where more than readings differs."""
 
 
 Rerun = Callable[[Panel], Examined]
@@ -113,14 +115,13 @@ class _Trial:
 
     def _left_open(self, slug: str, reach: Reach, examined: Examined) -> bool:
         """Whether a check that the reading touches still compares figures that misfit."""
-        if not examined.differs_for(slug):
-            return False
         after = _keyed(examined.findings({slug}))
         return any(
             key in after
             and after[key].verdict is not Fit.FITS
             and (finding.expected is not None or after[key].verdict is Fit.NOT_JUDGED)
             and (reach.bands is None or key[1] is None or key[1] in reach.bands)
+            and (_is_about(slug, examined.differing) or after[key] != finding)
             for key, finding in self.misfits.items()
             if key[0] == slug
         )
@@ -138,6 +139,11 @@ class _Trial:
         """What misfitted and fits now; an impossible figure that is no longer one fits as well."""
         fits = {k: after[k] for k in self.misfits if k in after and after[k].verdict is Fit.FITS}
         return fits | {k: _settled(f) for k, f in self.misfits.items() if k not in after and f.check == SLIPS}
+
+
+def _is_about(slug: str, parameters: frozenset[str] | None) -> bool:
+    """Whether a check cannot do without one of the parameters."""
+    return parameters is None or not parameters.isdisjoint(CHECKS[slug].needs)
 
 
 def _settled(finding: Finding) -> Finding:
