@@ -2,6 +2,7 @@
 
 from speccheck.dictionary.concepts import concept_words
 from speccheck.dictionary.folding import fold
+from speccheck.dictionary.index import is_ambiguous
 from speccheck.dictionary.matching import HeadingMatch, match_heading, specified
 from speccheck.dictionary.parameters import LANGUAGES, Example, Parameter, parameters, synonyms
 
@@ -12,6 +13,7 @@ __all__ = [
     "Parameter",
     "concept_words",
     "fold",
+    "is_ambiguous",
     "match_heading",
     "parameters",
     "specified",

@@ -99,8 +99,11 @@ def _same_kind(pieces: list[tuple[str, ...]]) -> str:
 def _with_part(base: tuple[str, ...], part: str) -> str:
     if part in _DIMENSIONS and (not base or find(base).startswith("height")):
         return _DIMENSIONS[part]
-    if part in _ARRAY and (not base or find(base).startswith(("array_", "element_count", "lattice"))):
+    alone = not base and part in ("rows", "columns", "poles")  # 'H/V' alone is a polarisation
+    if part in _ARRAY and (alone or find(base).startswith(("array_", "element_count", "lattice"))):
         return _ARRAY[part]
+    if not base:
+        return ""
     named = {"rows": "row", "columns": "column", "poles": "pol"}.get(part, part)
     for form in (named, {"horizontal": "azimuth", "vertical": "elevation"}.get(part, "")):
         key = find((*base, form)) if form else ""

@@ -6,7 +6,7 @@ import difflib
 import functools
 
 from speccheck.dictionary.concepts import by_concepts, concept_words
-from speccheck.dictionary.folding import fold, key_of, without_neutral, word_list
+from speccheck.dictionary.folding import fold, heading_words, key_of, without_neutral, word_list
 from speccheck.dictionary.parameters import parameters, synonyms
 from speccheck.kept import kept
 
@@ -67,6 +67,8 @@ def suggestions(text: str) -> tuple[str, ...]:
     words = fold(text)[:8]
     if not words or len(text) > _LONGEST_SUGGESTED:
         return ()
+    if key_of(words) in _ambiguous():
+        return (_ambiguous()[key_of(words)],)
     near: dict[tuple[str, str], int] = {}
     for stem in {word[:5] for word in words if len(word) > 2}:
         for entry in _by_stem().get(stem, ()):
@@ -75,6 +77,19 @@ def suggestions(text: str) -> tuple[str, ...]:
     scored = [(difflib.SequenceMatcher(None, text.casefold(), t.casefold()).ratio(), t, k) for t, k in ranked]
     best = sorted((entry for entry in scored if entry[0] > 0.5), reverse=True)
     return tuple(dict.fromkeys(f"{heading} ({key})" for _, heading, key in best))[:3]
+
+
+@functools.lru_cache(maxsize=1024)
+def is_ambiguous(text: str) -> bool:
+    """Whether a heading is known to have several meanings, such as 'Power'."""
+    return key_of(fold(text)) in _ambiguous()
+
+
+@functools.cache
+def _ambiguous() -> dict[str, str]:
+    """Folded heading of more than one meaning to the meanings."""
+    table = heading_words()["ambiguous"]
+    return {key_of(fold(text)): meanings for meanings, texts in table.items() for text in texts}
 
 
 def _claim(table: dict[str, str], text: str, key: str, language: str) -> None:

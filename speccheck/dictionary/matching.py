@@ -19,6 +19,7 @@ from speccheck.dictionary.cuts import Cut, conditions_of, cuts
 from speccheck.dictionary.folding import fold, key_of, word_list
 from speccheck.dictionary.index import known_words, listed, suggestions
 from speccheck.dictionary.parameters import parameters
+from speccheck.dictionary.questions import unasked
 from speccheck.quantities import answers, dimension, split_footnotes, tidy
 
 _LONGEST_HEADING = 160
@@ -111,6 +112,8 @@ def _match(text: str, house: Mapping[str, str], suggest: bool) -> HeadingMatch:
         if whole:
             return whole
     found = _match_body(cuts(unnumbered), unnumbered, house) or _said_twice(unnumbered, house)
+    if found is None and (asked_for := unasked(unnumbered)) != unnumbered:
+        found = _match_body(cuts(asked_for), asked_for, house)
     return found or HeadingMatch(suggestions=suggestions(body) if suggest else ())
 
 

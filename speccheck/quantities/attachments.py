@@ -44,14 +44,15 @@ _SUM = re.compile(r"\d{1,3}(?:\s*[^\W\d]{1,8})?(?:\s*\+\s*\d{1,3}(?:\s*[^\W\d]{1
 _CHAINS = re.compile(r"(\d{1,3})\s?T\s?/?\s?(\d{1,3})\s?R", re.IGNORECASE)
 _PRODUCT = re.compile(r"^(\d{1,3})\s*[x×*]\s*(\d{1,3})(?:\s*=\s*(\d{1,4}))?(?![\d.,-])")
 
+_ACROSS = r"\b(?:h|hp|h-?pol\w*|horizontal\w*|orizzontal\w*|poziom\w*)"
+_UPRIGHT = r"\b(?:v|vp|v-?pol\w*|verti[ck]a\w*|pion\w*)"
+_WITH = r"\s*(?:[/+&,]|and|und|et|y|e|i|en)\s*"
 _TWO = re.compile(
-    r"""
+    rf"""
     ± | ^x$ | \+\s*45 | 45\s*°?\s*/\s*-\s*45 | x-?pol | cross-?pol | crossed | dual | slant | orthogonal | two
     | zwei | doppel | kreuz | double | croisée | doble | cruzada | doppia | incrociata | dupla | podwójna
-    | krzyżowa | dubbel | kruis | \b(?:h|v|hp|vp)(?:-?pol\w*)?\s*(?:[/+&,]|and|und|et|y|e|i|en)\s*(?:h|v|hp|vp)(?:-?pol\w*)?\b
-    | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
-    | horizontal\w*\s*(?:and|und|et|y|e|i|en|[&/+,])\s*verti[ck]a\w* | verti[ck]a\w*\s*(?:and|und|et|y|e|i|en|[&/+,])\s*horizontal\w*
-    | orizzontal\w*\s*(?:e|[&/+,])\s*vertical\w* | vertical\w*\s*(?:e|[&/+,])\s*orizzontal\w* | poziom\w*\s*(?:i|[&/+,])\s*pion\w*
+    | krzyżowa | dubbel | kruis | rhcp\s*[/+&]\s*lhcp | lhcp\s*[/+&]\s*rhcp
+    | {_ACROSS}{_WITH}{_UPRIGHT}\b | {_UPRIGHT}{_WITH}{_ACROSS}\b
     """,
     re.IGNORECASE | re.VERBOSE,
 )

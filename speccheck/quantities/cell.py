@@ -21,6 +21,7 @@ from speccheck.quantities.numerals import numeral
 from speccheck.quantities.ranges import one_range, scan_range
 from speccheck.quantities.shown import shown_around
 from speccheck.quantities.spectrum import band_names, bands
+from speccheck.quantities.spelled import in_digits, in_one_unit
 from speccheck.quantities.statuses import declares, is_error_value, status_of
 from speccheck.quantities.tidy import split_footnotes, tidy
 from speccheck.quantities.units import unit_name
@@ -29,6 +30,7 @@ Raw = str | float | int | bool | datetime | date | time | timedelta | None
 
 _LONGEST_TEXT = 1000
 _POLARISATIONS = (1, 2, 3, 4)
+_COUNTED = ("count", "connectors")
 _PLAIN = re.compile(r"-?[0-9]{1,4}(?:[.,][0-9]{1,2})?")
 _TOLERANCE_WORD = re.compile(
     r"[,;(]?\s*\b(?:toleran[cz]\w*|tolérance|tolerância|tolleranza|tolerantie)\s*(?:of|von|de|di|:)?\s*(?=[±+])",
@@ -128,6 +130,10 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     text = _TOLERANCE_WORD.sub(" ", tidy(body))
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
+    if wanted.kind in _COUNTED:
+        text = in_digits(text, before_names=wanted.kind == "connectors")
+    else:
+        text = in_one_unit(text)
     content = time_share(text, wanted) or with_usual_unit(_read_figures(text, wanted), wanted)
     if not content.quantities and not content.rest:
         content = replace(content, rest=text or raw.strip())

@@ -56,3 +56,9 @@ def referrals() -> tuple[str, ...]:
 def word_set(name: str) -> frozenset[str]:
     """A plain list of the file: ``understood``, ``tilt``, ``answers``."""
     return frozenset(word.casefold() for word in _tables()[name]["words"])
+
+
+@functools.cache
+def number_words() -> dict[str, str]:
+    """A small number in words to its digits."""
+    return {word.casefold(): digits for digits, words in _tables()["numbers"].items() for word in words}

@@ -25,7 +25,8 @@ _HEADINGS = {
     "interband_isolation": (
         "Entkopplung zwischen den Systemen", "isolation entre systèmes", "aislamiento entre sistemas",
         "isolamento tra i sistemi", "izolacja między systemami", "isolatie tussen de systemen",
-        "isolation between systems", "isolation between arrays", "Isolation Band zu Band", "découplage inter-bandes", "aislamiento entre sub-bandas",
+        "isolation between systems", "isolation between arrays", "Isolation Band zu Band",
+        "découplage inter-bandes", "aislamiento entre sub-bandas",
         "isolamento fra le bande", "isolação entre as bandas", "separacja międzypasmowa",
         "isolatie band tot band",
     ),

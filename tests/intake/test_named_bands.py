@@ -36,3 +36,18 @@ def test_a_wider_named_band_is_no_band_of_its_own(tmp_path: Path) -> None:
 
 def test_without_megahertz_the_named_band_is_the_band(tmp_path: Path) -> None:
     assert _panel(tmp_path, "n78", "n78").bands == ((3300.0, 3800.0),)
+
+
+def test_ranges_below_band_names_say_which_part_is_meant(tmp_path: Path) -> None:
+    # n77 is 3300 to 4200 MHz, n78 3300 to 3800 MHz, n41 2496 to 2690 MHz (3GPP TS 38.104 Table 5.2-1)
+    book = openpyxl.Workbook()
+    for row in (
+        ("Parameter", "Unit", "n77", "n78", "n41"),
+        ("Frequency range", "MHz", "3700-3980", "3400-3700", None),
+        ("Gain", "dBi", 24, 24.5, 23),
+    ):
+        book.active.append(row)
+    book.save(tmp_path / "bid.xlsx")
+    panel = read_submission(tmp_path / "bid.xlsx").panels[0]
+    gains = {r.value: r.band for r in panel.readings if r.parameter == "gain"}
+    assert gains == {24.0: (3700.0, 3980.0), 24.5: (3400.0, 3700.0), 23.0: (2496.0, 2690.0)}

@@ -136,3 +136,107 @@ def test_the_spacing_beside_that_of_the_columns_is_along_them(tmp_path: Path) ->
 def test_two_polarisations_in_words(tmp_path: Path, cell: str) -> None:
     rows = [["Parameter", "MW26"], ["Gain (dBi)", 26], ["Polarisation", cell], ["Weight (kg)", 11]]
     assert [entry[-1] for entry in _lines(tmp_path, rows, "polarisations")] == ["2"]
+
+
+def test_questions_are_read_as_the_headings_in_them(tmp_path: Path) -> None:
+    rows = [
+        ["Question", "Answer"],
+        ["What is the maximum gain of the antenna in dBi?", "17.5"],
+        ["Please state the horizontal 3 dB beamwidth", "65°"],
+        ["What is the frequency range of the antenna?", "1710-2690 MHz"],
+        ["How many RF ports does the antenna have?", "four"],
+        ["How much does the antenna weigh without brackets?", "12 kg"],
+    ]
+    keys = ("gain", "horizontal_beamwidth", "operating_bands", "rf_ports", "weight")
+    assert _lines(tmp_path, rows, *keys) == [
+        "bid: B2 gain ≤17.5 dBi @1710-2690",
+        "bid: B3 horizontal_beamwidth 65 deg @1710-2690",
+        "bid: B4 operating_bands 1710..2690 MHz @1710-2690",
+        "bid: B5 rf_ports 4",
+        "bid: B6 weight 12 kg",
+    ]
+
+
+@pytest.mark.parametrize(
+    ("question", "key"),
+    [
+        ("Wie hoch ist der Gewinn der Antenne?", "gain"),
+        ("Veuillez indiquer l'ouverture horizontale à 3 dB", "horizontal_beamwidth"),
+        ("¿Cuántos puertos tiene la antena?", "rf_ports"),
+        ("Qual è il guadagno dell'antenna?", "gain"),
+        ("Qual é o ganho da antena?", "gain"),
+        ("Proszę podać szerokość wiązki w poziomie", "horizontal_beamwidth"),
+        ("Hoeveel poorten heeft de antenne?", "rf_ports"),
+    ],
+)
+def test_questions_in_other_languages(question: str, key: str) -> None:
+    assert Labels({}).of(question).parameters == (key,)
+
+
+def test_power_alone_has_two_meanings_unless_its_figure_says(tmp_path: Path) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["Power", "250 W"], ["Weight (kg)", 12]]
+    submission = read(tmp_path, rows).submission
+    assert [(u.where.cell, "of all ports" in u.suggestion) for u in submission.unread] == [("B3", True)]
+    rows[2] = ["Power", "250 W per port"]
+    assert _lines(tmp_path, rows, "max_power_per_port") == ["X-1: B3 max_power_per_port 250 W"]
+
+
+@pytest.mark.parametrize(
+    ("cell", "metres"),  # 12 inches a foot, 0.0254 m an inch (NIST SP 811)
+    [("6' 2\"", 1.8796), ("1 ft 3 in", 0.381), ("74 3/8 in", 1.889125), ("6 ft.", 1.8288), ("6'", 1.8288)],
+)
+def test_feet_and_inches_are_one_length(tmp_path: Path, cell: str, metres: float) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["Height", cell], ["Weight (kg)", 12]]
+    panel = read(tmp_path, rows).submission.panels[0]
+    assert [r.value for r in panel.readings if r.parameter == "height"] == [pytest.approx(metres)]
+
+
+def test_counts_in_words(tmp_path: Path) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["Columns", "zwei"], ["Rows", "twelve"]]
+    rows += [["Connectors", "two 4.3-10 female"]]
+    assert _lines(tmp_path, rows, "array_columns", "array_rows", "rf_ports") == [
+        "X-1: B3 array_columns 2",
+        "X-1: B4 array_rows 12",
+        "X-1: B5 rf_ports 2",
+    ]
+
+
+def test_a_pair_of_letters_is_no_heading_among_values(tmp_path: Path) -> None:
+    rows = [["Parameter", "X-1", "X-2"], ["Polarisation", "H/V", "V"], ["Gain (dBi)", 17, 16]]
+    assert _lines(tmp_path, rows, "polarisations", "gain") == [
+        "X-1: B2 polarisations 2",
+        "X-1: B3 gain 17 dBi",
+        "X-2: C2 polarisations 1",
+        "X-2: C3 gain 16 dBi",
+    ]
+
+
+@pytest.mark.parametrize(
+    ("first", "second"),
+    [
+        ("Frequency from (MHz)", "Frequency to (MHz)"),
+        ("Start frequency", "Stop frequency"),
+        ("f min", "f max"),
+        ("Frequenz von", "Frequenz bis"),
+    ],
+)
+def test_two_rows_of_band_edges_make_one_band(tmp_path: Path, first: str, second: str) -> None:
+    rows: list[list[object]] = [["Parameter", "X-1"], [first, 1710], [second, 2170], ["Gain (dBi)", 17]]
+    assert _lines(tmp_path, rows, "frequency_range", "gain") == [
+        "X-1: B2 frequency_range 1710..2170 MHz",
+        "X-1: B4 gain 17 dBi @1710-2170",
+    ]
+
+
+def test_one_edge_of_a_band_is_no_range(tmp_path: Path) -> None:
+    rows = [["Parameter", "X-1"], ["Frequency from (MHz)", 1710], ["Gain (dBi)", 17], ["Weight (kg)", 12]]
+    assert _lines(tmp_path, rows, "frequency_range", "operating_bands") == []
+    assert [u.where.cell for u in read(tmp_path, rows).submission.unread] == ["B2"]
+
+
+def test_an_upper_edge_under_to_beside_the_lower_one(tmp_path: Path) -> None:
+    rows = [["Model", "Frequency from", "to", "Gain (dBi)"], ["A-1", 1710, 2170, 17.5], ["B-1", 790, 960, 15]]
+    assert _lines(tmp_path, rows, "gain") == [
+        "A-1: D2 gain 17.5 dBi @1710-2170",
+        "B-1: D3 gain 15 dBi @790-960",
+    ]

@@ -97,6 +97,8 @@ class Outcome:
     unread: Unread | None = None
     footnotes: tuple[str, ...] = ()
     joined: bool = False
+    kept: Found | None = None
+    """A figure that is no reading until another one completes it."""
 
 
 def spread(stated: Quantity, of: Found) -> float | None:

@@ -5,9 +5,12 @@ from __future__ import annotations
 import re
 from collections.abc import Iterable
 
+from speccheck.dictionary import is_ambiguous, match_heading
 from speccheck.intake.tables.labels import Label
+from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN
 
 _CHAINS = re.compile(r"\s*\d{1,4}\s?T\s?[/x-]?\s?\d{1,4}\s?R\s*", re.IGNORECASE)
+_FIGURE = re.compile(rf"(?:{NUMERAL_PATTERN})\s*(?:{UNIT_PATTERN})?|[<>≤≥±=]")
 NOTHING = Label("")
 
 
@@ -16,9 +19,23 @@ def label_by_values(heading: str, values: Iterable[str]) -> Label:
 
     >>> label_by_values("Configuration", ["64T64R", "32T32R"]).parameters
     ('transceivers',)
+    >>> label_by_values("Power", ["250 W per port"]).parameters
+    ('max_power_per_port',)
     """
     texts = list(values)
+    if texts and is_ambiguous(heading):
+        return _by_remark(heading, texts)
     if not texts or not all(map(_CHAINS.fullmatch, texts)):
         return NOTHING
     how = f"heading '{heading}' beside '{texts[0].strip()}', a number of transceivers"
     return Label(heading, ("transceivers",), how=how)
+
+
+def _by_remark(heading: str, texts: list[str]) -> Label:
+    """The label that one remark behind all figures makes of a heading with several meanings."""
+    remarks = {" ".join(_FIGURE.sub(" ", text).split()) for text in texts}
+    if len(remarks) != 1 or not (remark := remarks.pop()):
+        return NOTHING
+    found = match_heading(f"{heading} {remark}", suggest=False).parameters
+    how = f"heading '{heading}' beside '{texts[0].strip()}'"
+    return Label(heading, found, how=how) if len(found) == 1 else NOTHING

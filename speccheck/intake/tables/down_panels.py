@@ -203,6 +203,7 @@ class DownPanels:
         """A row of frequency ranges that differ across one panel's columns gives the columns their bands.
 
         Of several such rows the one with the most ranges; ranges of another that contain them are wider.
+        Over columns headed by names of standard bands the ranges say which part of them is meant.
         """
         rows = self._rows_of(_FREQUENCY_KEYS)
         by_draft = self._by_draft([c for c in values if c.role in ("", "offered", "panel")])
@@ -210,9 +211,14 @@ class DownPanels:
             mine = by_draft[id(draft)]
             spans = [self._spans_of_row(row, mine) for row in rows]
             best = max(spans, key=lambda found: len(set(found.values())), default={})
-            if len(set(best.values())) < 2 or any(c.band for c in mine):
+            named = [c for c in mine if _only_named(c)]
+            if len(set(best.values())) < (1 if named else 2) or any(c.band for c in mine if c not in named):
                 continue
             for column in mine:
+                if column in named and column.index not in best:
+                    continue
+                if column.band_cell is not None:
+                    column.band_name, column.band_cell = column.band_cell.text.strip(), None
                 column.band = best.get(column.index)
                 if column.band is not None and column.band not in draft.bands:
                     draft.bands.append(column.band)
@@ -244,6 +250,11 @@ class DownPanels:
         context = Context(Label(label.text, ("frequency_range",), "MHz"), heading=label.text)
         for low, high in label.bands.spans[:1]:
             draft.claims.append(Claim(cell, context, None, text=f"{low:g}-{high:g} MHz"))
+
+
+def _only_named(column: Column) -> bool:
+    """Whether the band of a column is only that of a standard's name, such as 'n78'."""
+    return column.band_cell is not None and bool(find_bands(column.band_cell.text).names)
 
 
 def _only_band(text: str, unit: str) -> Band | None:

@@ -19,14 +19,19 @@ _LOWER = re.compile(
 _UPPER = re.compile(
     r"high|upper|stop|\bend\b|\bto\b|max|\bbis\b|ober|\bsup|hasta|\ba\b|\bdo\b|\btot\b|boven|\bfin|gorna"
 )
+_ONLY_UPPER = re.compile(
+    r"(?:to|up to|max\.?|high|bis|a|à|hasta|do|tot|ate|al|jusqu'a)(?:\s*[(\[]?(?:mhz|ghz)[)\]]?)?"
+)
 _FARTHEST = 2
 
 
 def edge_columns(headings: Mapping[int, str]) -> tuple[int, int]:
     """Columns of the lower and the upper edge, from the headings by column; zeros where there are none."""
-    edges = {index: _edge(text) for index, text in headings.items()}
+    edges = {index: edge_of(text) for index, text in headings.items()}
     lower = [index for index, edge in edges.items() if edge == "lower"]
     upper = [index for index, edge in edges.items() if edge == "upper"]
+    if len(lower) == 1 and not upper and _ONLY_UPPER.fullmatch(fold(headings.get(lower[0] + 1, ""))):
+        upper = [lower[0] + 1]  # 'Frequency from' beside 'to'
     if len(lower) == len(upper) == 1 and 0 < upper[0] - lower[0] <= _FARTHEST:
         return lower[0], upper[0]
     return 0, 0
@@ -45,7 +50,8 @@ def _text(low: Cell, high: Cell, heading: str) -> str:
     return f"{low.text}-{high.text} {unit}"
 
 
-def _edge(text: str) -> str:
+def edge_of(text: str) -> str:
+    """``lower`` or ``upper`` when a heading names one edge of a band, else empty."""
     folded = fold(text)
     if len(folded) > 40 or not _FREQUENCY.search(folded):
         return ""
