@@ -31,6 +31,8 @@ class _Row:
 
     draft: Draft | None = None
     said: RowBand = field(default_factory=RowBand)
+    note: str = ""
+    """What all figures of the row are said of: the nickname of its band, its tilt."""
 
 
 @dataclass(slots=True)
@@ -39,7 +41,7 @@ class _Known:
 
     draft: Draft
     rows: dict[int, RowBand] = field(default_factory=dict)
-    said: set[RowBand] = field(default_factory=set)
+    said: set[tuple[RowBand, str]] = field(default_factory=set)
 
 
 class AcrossReader:
@@ -144,25 +146,33 @@ class AcrossReader:
             said = RowBand(band_between(self._grid, row, guides.edges, heading), said.name)
         if not said.said:
             said = self._section
+        tilt = self._tilt(row)
+        if tilt and name_cell is None and not said.said:
+            said = self._at.said
         if name_cell is not None:
             self._result.mark(name_cell, "heading")
             known = self._known.get(model_name(name_cell.text))
-            if known and said.said and said not in known.said:
+            if known and (said.said or tilt) and (said, tilt) not in known.said:
                 self._at = _Row(known.draft)
             else:
                 self._start_panel(row, name_cell)
         elif self._at.draft is None or not (guides.named or guides.banded or guides.nicknamed):
             self._start_panel(row, cells[0])
-        self._at.said = said
+        self._at.said, self._at.note = said, f"{said.name} {tilt}".strip() if tilt else said.name
         draft = self._at.draft
         if draft is not None:
             known = self._known[draft.name]
             known.rows[row] = said
-            known.said.add(said)
+            known.said.add((said, tilt))
             if said.band and said.band not in draft.bands:
                 draft.bands.append(said.band)
-                if said is self._section and self._section_cell is not None:
+                if said.band == self._section.band and self._section_cell is not None:
                     self._claim_section(draft, self._section_cell, said.band)
+
+    def _tilt(self, row: int) -> str:
+        """The tilt at which all figures of a row hold, in a table of several rows a band."""
+        cell = self._grid.covering(row, self._guides.tilted) if self._guides.tilted else None
+        return f"tilt {cell.text.strip(' °')}°" if cell is not None else ""
 
     def _claim_section(self, draft: Draft, cell: Cell, band: Band) -> None:
         """The band that a title gives to the rows below it is claimed of each of their panels."""
@@ -202,7 +212,7 @@ class AcrossReader:
         if found.label.parameters:
             context, band, banded = found.context, column.band, found.banded
             if not found.of_frequency or column.index == self._guides.banded:
-                context = self._noted(context, said.name) if said.name else context
+                context = self._noted(context, self._at.note) if self._at.note else context
                 if not banded and said.known:
                     band, banded = said.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
@@ -236,7 +246,7 @@ class AcrossReader:
         if cell.column in guides.edges:
             self._claim_edge(cell, draft, self._at.said.band)
             return True
-        silent = cell.column == guides.nicknamed or cell.column in guides.names_of_bands
+        silent = cell.column in (guides.nicknamed, guides.tilted) or cell.column in guides.names_of_bands
         if silent or (cell.column == guides.banded and self._at.said.point):
             self._result.mark(cell, "label")
             return True

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell, Grid
@@ -17,6 +18,7 @@ from speccheck.intake.tables.regions import Across
 
 _NAME_KEYS = ("model", "panel_type", "part_number")
 _LOOKED_AT = 40
+_TILT = re.compile(r"\s*\d+(?:[.,]\d+)?\s*°?\s*")
 
 
 @dataclass(slots=True)
@@ -36,13 +38,15 @@ class Field:
 class Guides:
     """Columns that say whom and what band a row is about; 0 where there is none.
 
-    `overall` gives the whole range of a panel whose bands stand in the headings.
+    `overall` gives the whole range of a panel whose bands stand in the headings, `tilted` the tilt at which
+    the figures of a row hold.
     """
 
     named: int = 0
     banded: int = 0
     nicknamed: int = 0
     overall: int = 0
+    tilted: int = 0
     names_of_bands: set[int] = field(default_factory=set)
     edges: tuple[int, int] = (0, 0)
     of_bands: frozenset[int] = frozenset()
@@ -71,6 +75,7 @@ def _describe(marks: Marks, table: Across, index: int) -> Field:
     context = Context(
         label=label,
         unit=column.unit,
+        condition=column.condition,
         statistic=column.statistic,
         heading=column.heading,
         band_name=column.band_name if column.band is None else "",
@@ -111,10 +116,27 @@ def find_guides(grid: Grid, table: Across, fields: dict[int, Field]) -> Guides:
         guides.overall, guides.banded = guides.banded, 0
     guides.edges = edge_columns({i: fields[i].column.heading for i in columns})
     guides.nicknamed = next((i for i in columns if holds_nicknames(columns[i])), 0)
-    guides.of_bands = frozenset(
-        {*guides.edges, *guides.names_of_bands, guides.nicknamed, guides.banded} - {0}
-    )
+    guides.tilted = next((i for i in columns if _sets_rows_apart(grid, table, fields[i], guides)), 0)
+    telling = {*guides.edges, *guides.names_of_bands, guides.nicknamed, guides.banded, guides.tilted}
+    guides.of_bands = frozenset(telling - {0})
     return guides
+
+
+def _sets_rows_apart(grid: Grid, table: Across, found: Field, guides: Guides) -> bool:
+    """Whether a column of single tilts tells rows of the same panel and band apart."""
+    if found.label.parameters != ("electrical_tilt",) or found.banded:
+        return False
+    seen: dict[object, set[str]] = {}
+    name = band = ""
+    for row in table.data_rows[:_LOOKED_AT]:
+        cell = grid.cells.get((row, found.column.index))
+        if cell is None or not _TILT.fullmatch(cell.text):
+            return False
+        named, banded = grid.cells.get((row, guides.named)), grid.cells.get((row, guides.banded))
+        band = banded.text if banded is not None else "" if named is not None else band
+        name = named.text if named is not None else name
+        seen.setdefault((name, band), set()).add(cell.text)
+    return any(len(tilts) > 1 for tilts in seen.values())
 
 
 def _name_several_bands(fields: dict[int, Field]) -> bool:

@@ -7,6 +7,7 @@ from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.heading_conditions import condition_of_heading, says_plane, says_tilt
 from speccheck.intake.tables.labels import Label, Labels, is_unit, statistic_of
 from speccheck.intake.tables.words import column_leaning, column_role
 from speccheck.records import Band
@@ -34,6 +35,10 @@ class Column:
     wider: Band | None = None
     statistic: str = ""
     unit: str = ""
+    condition: str = ""
+    plane: str = ""
+    lead: str = ""
+    """Word before the cells of a column of conditions that only its heading says."""
     frequency: Cell | None = None
 
     def take_band(self, band: Band | None, cell: Cell) -> None:
@@ -84,6 +89,8 @@ def describe(index: int, stack: list[Cell], labels: Labels) -> Column:
         _take(column, cell, labels)
     if column.role == "band" and (column.band or column.band_name):
         column.role = ""
+    if column.lead and column.condition:
+        column.role, column.lead = "", ""
     if column.frequency is not None and column.band is None:
         column.band, column.band_cell = labels.of(column.frequency.text).bands.hull, column.frequency
         column.frequency = None
@@ -95,8 +102,11 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
     statistic = statistic_of(text)
     role = column_role(text) or column_leaning(text)
     slack = _SLACK.fullmatch(text)
-    if text in PLANE_LETTERS:
-        column.words.append(text)
+    condition = condition_of_heading(text, labels)
+    if text in PLANE_LETTERS or says_plane(text, labels):
+        column.plane = text
+    elif condition:
+        column.condition = "; ".join(filter(None, (column.condition, condition)))
     elif slack and is_unit(slack[1]):
         column.role, column.unit = "tolerance", slack[1]
     elif role == "unit":
@@ -111,6 +121,8 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
         bands = find_bands(text)
         if bands.spans and bands.proved:
             column.band, column.band_cell = bands.hull, cell
+    elif says_tilt(text, labels):
+        column.role, column.lead = "condition", "tilt "
     elif _is_frequency_heading(labels.of(text)):
         column.frequency = cell
     elif is_band_label(text):

@@ -20,7 +20,7 @@ from speccheck.intake.tables.down_headings import (
 )
 from speccheck.intake.tables.down_panels import NAME_KEYS, DownPanels
 from speccheck.intake.tables.down_regions import Down, cells_between
-from speccheck.intake.tables.down_row import RowCells, asides_of, joined_label, row_cells
+from speccheck.intake.tables.down_row import RowCells, asides_of, in_plane, joined_label, row_cells
 from speccheck.intake.tables.down_standing import Standing
 from speccheck.intake.tables.down_titles import stated_below, waiting_title
 from speccheck.intake.tables.labels import Label
@@ -202,9 +202,9 @@ class DownReader:
         condition = extra.condition_text
         condition = find_bands(condition).rest if find_bands(condition).proved else condition
         context = Context(
-            label=label,
+            label=in_plane(self._marks.labels, label, column.plane),
             unit=extra.unit(column),
-            condition="; ".join(filter(None, (condition, *(c.text for c in extra.asides)))),
+            condition="; ".join(filter(None, (condition, column.condition, *(c.text for c in extra.asides)))),
             statistic=self._statistic(cell, column),
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),

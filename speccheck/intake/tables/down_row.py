@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass, field
+import re
+from dataclasses import dataclass, field, replace
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
@@ -11,6 +12,7 @@ from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import Label, Labels
 from speccheck.quantities import read_cell
 
+_BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]|\s*,?\s*°\s*$")
 _MEASURED = ("number", "range", "scan", "count", "size")
 
 
@@ -19,6 +21,7 @@ class RowCells:
     """Qualifying cells of a row; units and tolerances by column, as a table may have several such columns."""
 
     condition: Cell | None = None
+    lead: str = ""
     tolerances: dict[int, Cell] = field(default_factory=dict)
     band: Cell | None = None
     units: dict[int, Cell] = field(default_factory=dict)
@@ -26,8 +29,8 @@ class RowCells:
 
     @property
     def condition_text(self) -> str:
-        """Text of the condition cell."""
-        return self.condition.text if self.condition else ""
+        """Text of the condition cell, with the word its column leads it with."""
+        return f"{self.lead}{self.condition.text}" if self.condition else ""
 
     def tolerance(self, column: Column) -> Cell | None:
         """The tolerance of a column: the next one after it, or the only one of the row's table."""
@@ -59,7 +62,8 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
                 conditions.append(cell)
             elif cell is not None:
                 found.tolerances[index] = cell
-    found.condition = conditions[0] if conditions else None
+    if conditions:
+        found.condition, found.lead = conditions[0], columns[conditions[0].column].lead
     return found
 
 
@@ -100,3 +104,13 @@ def joined_label(labels: Labels, label: Label | None, condition: Cell | None, gr
         if label:
             return label
     return labels.of(condition.text)
+
+
+def in_plane(labels: Labels, label: Label, plane: str) -> Label:
+    """A label with the plane that the heading of a column adds: 'Beamwidth (°)' under 'Vertical'."""
+    if not plane:
+        return label
+    bare = _BRACKETED.sub("", label.text).strip().removesuffix(label.unit or " ").strip(" ,")
+    texts = (f"{text}{link}{plane}" for text in (label.text, bare) for link in (" ", ", "))
+    found = next((joined for text in texts if (joined := labels.of(text))), label)
+    return replace(found, unit=found.unit or label.unit, text=label.text)

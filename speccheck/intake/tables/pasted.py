@@ -15,6 +15,8 @@ from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
 from speccheck.records import Band
 
+_WORD = re.compile(r"[^\W\d_]{3,}")
+_MOST_WORDS = 7
 _NAME_KEYS = frozenset({"model", "panel_type"})
 
 
@@ -25,6 +27,8 @@ def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
         if place not in result.roles:
             columns[place[1]].append(marks.grid.cells[place])
     for column, cells in columns.items():
+        if len(cells) == 1 and result.drafts and len(_WORD.findall(cells[0].text)) > _MOST_WORDS:
+            continue  # a note below a table, 'Traffic beam: one user, uniform excitation of the whole array'
         last = cells[-1].row
         while (below := marks.grid.cells.get((last + 1, column))) is not None and looks_like_line(below.text):
             last += 1

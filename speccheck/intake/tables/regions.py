@@ -6,6 +6,7 @@ from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.across_groups import parts_rows
+from speccheck.intake.tables.heading_conditions import condition_of_heading
 from speccheck.intake.tables.labels import begins_with_unit, is_heading_filler
 from speccheck.intake.tables.marks import Marks, looks_like_value, says_column_role
 from speccheck.intake.tables.words import column_role, is_aside_of_table
@@ -145,11 +146,15 @@ def _details_heading(marks: Marks, row: int, above: int, following: list[int]) -
     ):
         return False
     words = [c for c in cells if isinstance(c.raw, str) and len(c.text) <= _LONGEST_DETAIL and not c.fault]
-    figures = sum(
-        looks_like_value(c) and not is_heading_filler(c.text) and not begins_with_unit(c.text) for c in cells
-    )
+    figures = sum(looks_like_value(c) and not _belongs_to_heading(marks, c) for c in cells)
     below = max(sum(looks_like_value(c) for c in marks.rows[r]) for r in following)
     return len(words) == len(cells) > 1 and not figures and below > 1
+
+
+def _belongs_to_heading(marks: Marks, cell: Cell) -> bool:
+    text = cell.text
+    filler = is_heading_filler(text) or begins_with_unit(text)
+    return filler or bool(condition_of_heading(text, marks.labels))
 
 
 def _is_upper_heading(marks: Marks, row: int, heading_row: int) -> bool:
