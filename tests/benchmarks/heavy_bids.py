@@ -51,27 +51,22 @@ WHOLE = (
 )
 
 
+def write_bid(path: Path, *, bands: int = len(BANDS), clashing: bool = False) -> Path:
+    """Write one bid as a workbook, with the first so many bands; the path again."""
+    book = Workbook()
+    page = book.active
+    page.title = "Panel data"
+    page.append(["Model", "Sallowmere Six"])
+    page.append(["Frequency band (MHz)", *BANDS[:bands]])
+    for name, row in ROWS:
+        page.append([name, *(CLASHES.get(name, row) if clashing else row)[:bands]])
+    for name, usual, small in WHOLE:
+        page.append([name, small if clashing else usual])
+    book.save(path)
+    return path
+
+
 def write_heavy_bids(folder: Path) -> tuple[Path, Path]:
-    """Write both bids as workbooks.
-
-    Parameters
-    ----------
-    folder : where they go
-
-    Returns
-    -------
-    Paths of the bid of six bands and of the one with some fifty misfits.
-    """
-    paths = folder / "six-bands.xlsx", folder / "fifty-misfits.xlsx"
-    for path, clashing in zip(paths, (False, True), strict=True):
-        book = Workbook()
-        page = book.active
-        page.title = "Panel data"
-        page.append(["Model", "Sallowmere Six"])
-        page.append(["Frequency band (MHz)", *BANDS])
-        for name, row in ROWS:
-            page.append([name, *(CLASHES.get(name, row) if clashing else row)])
-        for name, usual, small in WHOLE:
-            page.append([name, small if clashing else usual])
-        book.save(path)
-    return paths
+    """Write the bid of six bands, and the one with more than fifty misfits, into a folder."""
+    clean, clashing = folder / "six-bands.xlsx", folder / "fifty-misfits.xlsx"
+    return write_bid(clean), write_bid(clashing, clashing=True)

@@ -98,14 +98,48 @@ _BAND = re.compile(r"(\d+(?:\.\d+)?[-–]\d+(?:\.\d+)?)\sMHz")
 _FIGURES = re.compile(r" \([\d.,]+ m\)|; cylindrical model holds up to [\d.,]+ m")
 
 
+_OF_BAND = re.compile(r"(\w+) of (\d+(?:\.\d+)?[-–]\d+(?:\.\d+)?\sMHz): ([^;]*)(?:; )?(.*)")
+_SHEET = re.compile(r"\(([^()!;]+)!(?=[A-Z]{1,3}\d+\))")
+_STATED = re.compile(r"(EIRP stated as) (.*)()(: the stated .*)")
+
+
 def merged_by_band(texts: Iterable[str]) -> tuple[str, ...]:
-    """Sentences that differ in their band alone, said once for all of those bands."""
+    """Sentences that differ in their band, or in band and figure, said once for all of those bands."""
     said: dict[str, list[str]] = {}
     for text in texts:
         found = _BAND.search(text)
         frame = f"{text[: found.start()]}\0{text[found.end() :]}" if found else text
         said.setdefault(frame, []).append(found[1] if found else "")
-    return tuple(frame.replace("\0", ", ".join(bands) + " MHz") for frame, bands in said.items())
+    return _merged_figures(frame.replace("\0", ", ".join(bands) + " MHz") for frame, bands in said.items())
+
+
+def _merged_figures(texts: Iterable[str]) -> tuple[str, ...]:
+    """Power, gain and EIRP of several bands as one sentence each."""
+    said: dict[tuple[str, str], list[str]] = {}
+    for text in texts:
+        if of_band := _OF_BAND.fullmatch(text):
+            name, band, figure, rest = of_band.groups()
+            said.setdefault((f"{name}: ", f"; {rest}" if rest else ""), []).append(f"{band} {figure}")
+        elif stated := _STATED.fullmatch(text):
+            said.setdefault((f"{stated[1]} ", stated[4]), []).append(stated[2])
+        else:
+            said.setdefault((text, ""), []).append("")
+    return tuple(
+        head
+        + _sheet_once("; ".join(figure.rstrip(".") for figure in figures))
+        + (tail or ("." if figures[0] else ""))
+        for (head, tail), figures in said.items()
+    )
+
+
+def _sheet_once(text: str) -> str:
+    """A list of figures with the sheet named before its first cell only, where all cells lie in one."""
+    sheets = dict.fromkeys(_SHEET.findall(text))
+    if len(sheets) != 1:
+        return text
+    named = f"({next(iter(sheets))}!"
+    first, _, rest = text.partition(named)
+    return first + named + rest.replace(named, "(")
 
 
 def region_lines(note: ExposureNote) -> tuple[str, ...]:
