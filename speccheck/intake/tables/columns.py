@@ -103,7 +103,7 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
     role = column_role(text) or column_leaning(text)
     slack = _SLACK.fullmatch(text)
     condition = condition_of_heading(text, labels)
-    if text in PLANE_LETTERS or says_plane(text, labels):
+    if text in PLANE_LETTERS:
         column.plane = text
     elif condition:
         column.condition = "; ".join(filter(None, (column.condition, condition)))
@@ -127,6 +127,8 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
         column.frequency = cell
     elif is_band_label(text):
         _take_band(column, cell, text)
+    elif says_plane(text, labels):
+        column.plane = text
     else:
         _take_name(column, cell, text)
 
