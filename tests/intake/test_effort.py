@@ -10,9 +10,10 @@ import pytest
 from intake.sheets import read
 
 from speccheck.errors import UnusableInputError
-from speccheck.intake.panels import understanding
+from speccheck.intake.panels import joining, understanding
 from speccheck.intake.tables import labels, layout
-from speccheck.records import Reading
+from speccheck.intake.tables.claims import Draft
+from speccheck.records import Band, Reading
 
 TABLE = [["Model", "Gain (dBi)", "VSWR"], ["BR-1", "17.5 ± 0.5", "< 1.5"], ["BR-2", 16, "< 1.5"]]
 
@@ -79,3 +80,21 @@ def test_each_claim_is_marked_once_however_many_tables_a_sheet_holds(
     ]
     account = read(tmp_path, tables)
     assert sum(walked) == sum(len(result.drafts) for result in account.layouts)
+
+
+def test_what_a_panel_states_is_gathered_once_a_piece(
+    tmp_path: Path, monkeypatch: pytest.MonkeyPatch
+) -> None:
+    gathered: list[int] = []
+    stated = joining._stated
+
+    def counted(draft: Draft) -> set[tuple[str, Band | None, str]]:
+        gathered.append(sum(len(piece.claims) for piece in draft.pieces()))
+        return stated(draft)
+
+    monkeypatch.setattr(joining, "_stated", counted)
+    rows = [row for n in range(40) for row in (["Parameter", "Value"], ["Gain", f"{n + 10} dBi"], [])]
+    account = read(tmp_path, rows)
+    claims = [len(draft.claims) for result in account.layouts for draft in result.drafts]
+    assert len(claims) == 40
+    assert sum(gathered) == sum(claims)

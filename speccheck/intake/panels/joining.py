@@ -8,6 +8,10 @@ from speccheck.records import Band
 _TITLE_KEYS = frozenset(
     {"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"}
 )
+_Stated = set[tuple[str, Band | None, str]]
+"""Parameters with the band each is stated for."""
+_NEAREST = 50
+"""A piece belongs to one of the last panels of its name."""
 
 
 def joined(drafts: list[Draft]) -> tuple[list[Draft], list[Draft]]:
@@ -28,6 +32,8 @@ class _Joiner:
         self._kept: list[Draft] = []
         self._by_name: dict[str, list[Draft]] = {}
         self._titles: list[Draft] = []
+        self._stated: dict[int, _Stated] = {}
+        """What each kept draft states, by its identity; grows as pieces join it."""
 
     def take(self, draft: Draft, *, last: bool) -> None:
         """Keep a draft, or join it to one kept before; `last` says that no other follows on its sheet."""
@@ -40,15 +46,18 @@ class _Joiner:
             if title.named:
                 draft.name, draft.where, draft.named = title.name, title.where, True
             draft.joined.append(title)
-        home = self._home(draft)
+        stated = _stated(draft)
+        home = self._home(draft, stated)
         if home is None:
             self._kept.append(draft)
+            self._stated[id(draft)] = stated
             self._by_name.setdefault(draft.name.casefold(), []).append(draft)
             return
         if draft.named and not home.named:
             home.name, home.named = draft.name, True
             self._by_name.setdefault(draft.name.casefold(), []).append(home)
         home.joined.append(draft)
+        self._stated[id(home)] |= stated
         home.bands += [band for band in draft.bands if band not in home.bands]
 
     def finish(self) -> tuple[list[Draft], list[Draft]]:
@@ -64,9 +73,9 @@ class _Joiner:
             only.joined.append(title)
         return self._kept, []
 
-    def _home(self, draft: Draft) -> Draft | None:
-        for other in reversed(self._by_name.get(draft.name.casefold(), [])):
-            if not _clashes(draft, other):
+    def _home(self, draft: Draft, stated: _Stated) -> Draft | None:
+        for other in reversed(self._by_name.get(draft.name.casefold(), [])[-_NEAREST:]):
+            if not _clash(stated, self._stated[id(other)]):
                 return other
         if not self._kept:
             return None
@@ -74,16 +83,15 @@ class _Joiner:
         if draft.named and (last.named or last.grid is draft.grid):
             return None
         alone = len(self._kept) == 1 or last.grid is draft.grid
-        return last if alone and not _clashes(draft, last) else None
+        return last if alone and not _clash(stated, self._stated[id(last)]) else None
 
 
-def _clashes(draft: Draft, other: Draft) -> bool:
+def _clash(mine: _Stated, theirs: _Stated) -> bool:
     """Whether two drafts state the same things and so are two panels."""
-    mine, theirs = _stated(draft), _stated(other)
     shared = {entry for entry in mine & theirs if entry[0] not in _TITLE_KEYS}
     return len(shared) >= 2 and len(shared) * 3 >= min(len(mine), len(theirs))
 
 
-def _stated(draft: Draft) -> set[tuple[str, Band | None, str]]:
+def _stated(draft: Draft) -> _Stated:
     claims: list[Claim] = [claim for piece in draft.pieces() for claim in piece.claims]
     return {(key, c.band, c.context.band_name) for c in claims for key in c.context.label.parameters}

@@ -139,10 +139,8 @@ class Builder:
                 draft.bands[:] = dict.fromkeys([*spans, *draft.bands])
             elif len(spans) == 1 and not claim.banded:
                 overall.append(spans[0])
-        for _, outcome in outcomes:
-            for found in outcome.found:
-                if found.band is not None and found.band not in draft.bands:
-                    draft.bands.append(found.band)
+        of_figures = [f.band for _, outcome in outcomes for f in outcome.found if f.band is not None]
+        draft.bands = list(dict.fromkeys([*draft.bands, *of_figures]))
         named = any(claim.banded and claim.band is None for claim, _ in outcomes)
         if not draft.bands and overall and not named:
             draft.bands = [overall[0]] if len(set(overall)) == 1 else list(dict.fromkeys(overall))
