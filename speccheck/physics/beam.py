@@ -7,7 +7,7 @@ from dataclasses import dataclass
 import numpy as np
 
 from speccheck.physics.decibels import Floats
-from speccheck.physics.field import Excitation, squared
+from speccheck.physics.field import Excitation
 from speccheck.physics.layout import Complex
 
 _STEPS = 30
@@ -20,18 +20,10 @@ _FLAT = 1e-6
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Beam:
-    """Direction [rad] of the beam of each state and its power factors [1]: element, rows, columns."""
+    """Direction [rad] of the beam of each state."""
 
     theta_rad: Floats
     phi_rad: Floats
-    element_power: Floats
-    row_power: Floats
-    column_power: Floats
-
-    @property
-    def intensity(self) -> Floats:
-        """Radiation intensity [1], not normalised."""
-        return self.element_power * self.row_power * self.column_power
 
 
 def find_beam(states: Excitation) -> Beam:
@@ -40,7 +32,7 @@ def find_beam(states: Excitation) -> Beam:
     The element pattern pulls the beam towards boresight. Along an axis where nothing varies the steering
     direction stays; a grating lobe of equal height is never jumped to.
     states [Excitation]: the states.
-    Returns [Beam]: direction and power factors, shape (S,) each.
+    Returns [Beam]: directions, shape (S,).
     Source: definition of the beam peak; analytic derivatives of the array factor.
     """
     reach = _reach(states)
@@ -58,8 +50,7 @@ def find_beam(states: Excitation) -> Beam:
         rise = np.abs(step * (g_t, g_p)).max()
         if rise < _FLAT_RISE and np.abs(step).max() < _SETTLED_RAD:
             break
-    row, column = _turned(states, np.sin(theta) * np.sin(phi), np.cos(theta))
-    return Beam(theta, phi, states.element.power(theta, phi), squared(row.sum(1)), squared(column.sum(1)))
+    return Beam(theta, phi)
 
 
 def _pulled(states: Excitation) -> tuple[Floats, Floats]:
@@ -83,8 +74,8 @@ def _pulled(states: Excitation) -> tuple[Floats, Floats]:
 def _reach(states: Excitation) -> Floats:
     """Longest step [rad] by theta and phi: about a third of a null width, never more than a sixth."""
     k = float(states.distinct.max())
-    extents = (float(line.positions[-1] - line.positions[0]) for line in states.lines)
-    return np.array([[min(2.0 / (k * (extent + 1e-9)), 0.17)] for extent in extents])
+    sides = states.layout.height_m, states.layout.width_m
+    return np.array([[min(2.0 / (k * side + 1e-9), 0.17)] for side in sides])
 
 
 def _uphill(gradient: Floats, curvature: Floats) -> Floats:

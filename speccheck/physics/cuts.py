@@ -29,8 +29,8 @@ class Grid:
     """Angles [rad] of a cut over the front, their sines and cosines [1], shape (P,) each; P is odd."""
 
     angle_rad: Floats
-    sine: Floats
-    cosine: Floats
+    sine: Singles
+    cosine: Singles
 
 
 def angle_at(index: Floats, count: int) -> Floats:
@@ -60,61 +60,79 @@ def front_grid(layout: ArrayLayout, wavenumbers: Floats) -> Grid:
 @lru_cache(maxsize=64)
 def _grid(half: int) -> Grid:
     angle = angle_at(np.arange(2 * half + 1.0), 2 * half + 1)
-    return Grid(angle, np.sin(angle), np.cos(angle))
+    return Grid(angle, np.sin(angle).astype(np.float32), np.cos(angle).astype(np.float32))
 
 
-def principal_cuts(states: Excitation, beam: Beam, grid: Grid) -> Singles:
+@dataclass(frozen=True, eq=False, slots=True)
+class Cuts:
+    """Levels against the beam [1], shape (2 S, P): all horizontal cuts, then all vertical ones; and the
+    intensity [1] of the beam, not normalised, shape (S,)."""
+
+    level: Singles
+    intensity: Floats
+
+
+def principal_cuts(states: Excitation, beam: Beam, grid: Grid) -> Cuts:
     """Cuts through the beam: in phi at constant theta (a cone), then in theta at constant phi.
 
     states [Excitation]: the states.
     beam [Beam]: their beams.
     grid [Grid]: phi, and the angle below the horizon from the zenith down.
-    Returns [1]: level against the beam, shape (2 S, P): all horizontal cuts, then all vertical ones.
+    Returns [Cuts]: levels and the intensity they are held against.
     Source: azimuth and elevation cut as in IEEE Std 149, pattern multiplication.
     """
     count, samples = len(beam.theta_rad), len(grid.angle_rad)
     middle = samples // 2  # the vertical cut sees the columns alike above and below the horizon
-    u_y = np.empty((count, samples + middle + 1), np.float32)
-    sin_phi = np.sin(beam.phi_rad)[:, None]
-    np.multiply(np.sin(beam.theta_rad)[:, None], grid.sine, out=u_y[:, :samples], casting="same_kind")
-    np.multiply(sin_phi, grid.cosine[middle:], out=u_y[:, samples:], casting="same_kind")
+    sin_theta, sin_phi = np.sin(beam.theta_rad)[:, None], np.sin(beam.phi_rad)[:, None]
+    u_y = np.empty((count, samples + middle + 2), np.float32)  # both cuts, then the beam itself
+    np.multiply(sin_theta.astype(np.float32), grid.sine, out=u_y[:, :samples])
+    np.multiply(sin_phi.astype(np.float32), grid.cosine[middle:], out=u_y[:, samples:-1])
+    u_y[:, -1:] = sin_theta * sin_phi
     columns = _column_power(states, u_y)
-    across, below = columns[:, :samples], columns[:, samples:]
+    rows = _row_power(states, beam, grid)
+    across, below, column = columns[:, :samples], columns[:, samples:-1], columns[:, -1:]
+    row, element = rows[:, -1:], states.element.power(beam.theta_rad, beam.phi_rad)
     level = np.empty((2 * count, samples), np.float32)
     horizontal, vertical = level[:count], level[count:]
-    element = states.element.power(beam.theta_rad[:, None], grid.angle_rad)
-    np.multiply(across, element, out=horizontal, casting="same_kind")
-    element = states.element.power(np.pi / 2 + grid.angle_rad, beam.phi_rad[:, None])
-    np.multiply(_row_power(states, sin_phi, grid), element, out=vertical, casting="same_kind")
+    horizontal[:] = states.element.power(beam.theta_rad[:, None], grid.angle_rad)
+    vertical[:] = states.element.power(np.pi / 2 + grid.angle_rad, beam.phi_rad[:, None])
+    horizontal *= across
+    vertical *= rows[:, :-1]
     vertical[:, middle:] *= below
     vertical[:, :middle] *= below[:, :0:-1]
-    vertical /= _single(beam.intensity)
+    array = row * column
+    intensity = element * array[:, 0]
+    vertical /= array * _single(element)
     if states.row_shifts_m is None:  # the row factor is the same all along the horizontal cut
-        horizontal /= _single(beam.column_power * beam.element_power)
+        horizontal /= column * _single(element)
     else:
         u_z = np.broadcast_to(np.cos(beam.theta_rad)[:, None], across.shape)
-        rows = squared(row_factor(states, floats(u_y[:, :samples]), u_z))
-        np.multiply(horizontal, rows / beam.intensity[:, None], out=horizontal, casting="same_kind")
-    return level
+        horizontal *= squared(row_factor(states, floats(u_y[:, :samples]), u_z)).astype(np.float32)
+        horizontal /= array * _single(element)
+    return Cuts(level, intensity)
 
 
 def _single(values: Floats) -> Singles:
     return values.astype(np.float32)[:, None]
 
 
-def _column_power(states: Excitation, u_y: Singles) -> Floats | Singles:
+def _column_power(states: Excitation, u_y: Singles) -> Singles:
     """Power of the column factor."""
     columns = states.lines[1]
     if not columns.factors:
-        return squared(column_factor(states, floats(u_y)))
+        return squared(column_factor(states, floats(u_y))).astype(np.float32)
     return line_power(columns, states.wavenumbers, u_y, states.steer_y, 0.0)
 
 
-def _row_power(states: Excitation, sin_phi: Floats, grid: Grid) -> Floats | Singles:
-    """Power of the row factor of a vertical cut."""
+def _row_power(states: Excitation, beam: Beam, grid: Grid) -> Singles:
+    """Power of the row factor along a vertical cut, and at the beam."""
     rows = states.lines[0]
+    u_z = np.empty((len(beam.theta_rad), len(grid.sine) + 1), np.float32)
+    np.negative(grid.sine, out=u_z[:, :-1])
+    u_z[:, -1] = np.cos(beam.theta_rad)
     if not rows.factors or states.row_shifts_m is not None:
-        u_y = sin_phi * grid.cosine
-        return squared(row_factor(states, u_y, np.broadcast_to(-grid.sine, u_y.shape)))
+        sin_theta = np.concatenate([np.tile(grid.cosine, (len(u_z), 1)), np.sin(beam.theta_rad)[:, None]], 1)
+        u_y = np.sin(beam.phi_rad)[:, None] * sin_theta
+        return squared(row_factor(states, u_y, floats(u_z))).astype(np.float32)
     fixed = -float(np.sin(np.radians(states.layout.subarray_tilt_deg)))
-    return line_power(rows, states.wavenumbers, (-grid.sine).astype(np.float32), states.steer_z, fixed)
+    return line_power(rows, states.wavenumbers, u_z, states.steer_z, fixed)

@@ -98,11 +98,11 @@ class SectorElement:
         -3.0
         """
         elevation, azimuth = floats(theta_rad) - np.pi / 2, floats(phi_rad)
-        bend_t, bend_p = (_PARABOLA / (2 * w * w) for w in (self.el_hpbw_deg, self.az_hpbw_deg))
+        bend_t, bend_p = _PARABOLA / (2 * self.el_hpbw_deg**2), _PARABOLA / (2 * self.az_hpbw_deg**2)
         # the exponentials run over each angle alone, not over all pairs
-        vertical = np.exp(np.maximum(bend_t * elevation * elevation, -_PER_DB * self.el_floor_db))
-        product = vertical * np.exp(bend_p * azimuth * azimuth)
-        return np.asarray(np.maximum(product, 10 ** (-self.floor_db / 10)))
+        vertical = np.exp(np.maximum(bend_t * (elevation * elevation), -_PER_DB * self.el_floor_db))
+        product: Floats = vertical * np.exp(bend_p * (azimuth * azimuth))
+        return np.maximum(product, 10 ** (-self.floor_db / 10))
 
     def log_slopes(self, theta_rad: Floats, phi_rad: Floats) -> tuple[Floats, Floats, Floats, Floats]:
         """Slopes and curvatures of the logarithm of the power, of the parabolas before clamping.

@@ -151,7 +151,7 @@ def line_power(line: Line, wavenumbers: Floats, cosine: Singles, steered: Floats
 
     line [Line]: with factors.
     wavenumbers [rad/m]: shape (S,).
-    cosine [1]: direction cosine along the line, single precision, shape (S, P) or (P,).
+    cosine [1]: direction cosine along the line, single precision, shape (S, P).
     steered [1]: direction cosine of the steering, shape (S,).
     fixed [1]: the same for the fixed direction of the sub-arrays.
     Returns [1]: squared magnitude of the line factor, shape (S, P).

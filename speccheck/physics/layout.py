@@ -255,7 +255,7 @@ def row_weights(layout: ArrayLayout, wavenumbers: Floats, tilt_rad: Floats) -> C
     path = np.sin(tilt_rad)[:, None] * rows.centres
     if layout.subarray_rows > 1 and layout.subarray_tilt_deg:
         path += np.sin(np.radians(layout.subarray_tilt_deg)) * (rows.positions - rows.centres)
-    return np.asarray(rows.amplitudes * np.exp(1j * wavenumbers[:, None] * path))
+    return np.asarray(rows.amplitudes * np.exp((1j * wavenumbers)[:, None] * path))
 
 
 def column_weights(layout: ArrayLayout, wavenumbers: Floats, u_y: Floats) -> Complex:
@@ -268,4 +268,4 @@ def column_weights(layout: ArrayLayout, wavenumbers: Floats, u_y: Floats) -> Com
     Source: 3GPP TR 37.840 clause 5.4.4.
     """
     columns = lines(layout)[1]
-    return np.asarray(columns.amplitudes * np.exp(-1j * (wavenumbers * u_y)[:, None] * columns.centres))
+    return np.asarray(columns.amplitudes * np.exp((-1j * wavenumbers * u_y)[:, None] * columns.centres))

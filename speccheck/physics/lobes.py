@@ -143,7 +143,8 @@ def _all_states(
     grids = np.broadcast_arrays(*(floats(key) for key in keys))
     states = excite(layout, element, *(grid.ravel() for grid in grids))
     beam = find_beam(states)
-    level, theta, phi = beam.intensity, beam.theta_rad, beam.phi_rad
+    theta, phi = beam.theta_rad, beam.phi_rad
+    level = intensity(states, theta[:, None], phi[:, None])[:, 0]
     found = []
     for s, wavelength in enumerate(wavelength_m(grids[0].ravel())):
         state = excite(layout, element, *(grid.ravel()[s : s + 1] for grid in grids))

@@ -12,7 +12,7 @@ from speccheck.physics.beam import find_beam
 from speccheck.physics.cuts import front_grid, principal_cuts
 from speccheck.physics.decibels import Floats, db, floats
 from speccheck.physics.element import Element
-from speccheck.physics.field import excite
+from speccheck.physics.field import excite, intensity
 from speccheck.physics.layout import ArrayLayout
 from speccheck.physics.radiated import radiated_power
 from speccheck.physics.readings import read_cuts
@@ -106,7 +106,9 @@ def directivity_dbi(
     """
     grids = np.broadcast_arrays(floats(freq_hz), floats(tilt_deg), floats(scan_deg))
     states = excite(layout, element, *(grid.ravel() for grid in grids))
-    return db(find_beam(states).intensity / radiated_power(states)).reshape(grids[0].shape)[()]
+    beam = find_beam(states)
+    peak = intensity(states, beam.theta_rad[:, None], beam.phi_rad[:, None])[:, 0]
+    return db(peak / radiated_power(states)).reshape(grids[0].shape)[()]
 
 
 def scan_loss_db(
@@ -146,11 +148,12 @@ def _figures(
     beam = find_beam(states)
     grid = front_grid(layout, states.wavenumbers)
     peaks = np.concatenate([beam.phi_rad, beam.theta_rad - np.pi / 2])
-    read = read_cuts(principal_cuts(states, beam, grid), grid.angle_rad, peaks)
+    cuts = principal_cuts(states, beam, grid)
+    read = read_cuts(cuts.level, grid.angle_rad, peaks)
     count = len(distinct)
     figures = np.empty((15, count))
     figures[:3] = keys
-    figures[3] = 10 * np.log10(beam.intensity / radiated_power(states))
+    figures[3] = 10 * np.log10(cuts.intensity / radiated_power(states))
     figures[4], figures[5] = np.degrees(beam.theta_rad), np.degrees(beam.phi_rad)
     figures[6:8] = np.degrees(read.width_rad).reshape(2, count)
     figures[8:10] = np.fmax(read.before_db, read.after_db).reshape(2, count)
