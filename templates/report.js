@@ -130,6 +130,10 @@
 
   // Wide tables scroll in their own frame, which the keyboard must reach.
   for (const frame of document.querySelectorAll(".wide")) {
-    if (frame.scrollWidth > frame.clientWidth) frame.setAttribute("tabindex", "0");
+    if (frame.scrollWidth <= frame.clientWidth) continue;
+    frame.setAttribute("tabindex", "0");
+    frame.setAttribute("role", "group");
+    const name = frame.querySelector("caption, summary");
+    frame.setAttribute("aria-label", name ? name.textContent.trim() : frame.querySelector("table").getAttribute("aria-label"));
   }
 })();

@@ -8,6 +8,8 @@ import os
 import shutil
 import subprocess
 import tempfile
+from collections.abc import Iterator
+from dataclasses import dataclass
 from pathlib import Path
 from types import TracebackType
 from typing import Any
@@ -25,6 +27,17 @@ _FLAGS = (
     "--remote-debugging-pipe",
     "--window-size=1280,900",
 )
+
+
+@dataclass(frozen=True, slots=True)
+class Spoken:
+    """A node of the accessibility tree; `above` holds the roles around it, the outermost first."""
+
+    role: str
+    name: str
+    description: str
+    level: int
+    above: tuple[str, ...]
 
 
 class Browser:
@@ -127,6 +140,25 @@ class Browser:
         """Ask for the dark or the light scheme."""
         scheme = "dark" if on else "light"
         self.call("Emulation.setEmulatedMedia", features=[{"name": "prefers-color-scheme", "value": scheme}])
+
+    def spoken(self) -> list[Spoken]:
+        """What a screen reader is told of the page, in reading order."""
+        self.call("Accessibility.enable")
+        nodes = {node["nodeId"]: node for node in self.call("Accessibility.getFullAXTree")["nodes"]}
+        (root,) = (node for node in nodes.values() if "parentId" not in node)
+
+        def walk(node: dict[str, Any], above: tuple[str, ...]) -> Iterator[Spoken]:
+            role = node.get("role", {}).get("value", "")
+            if not node.get("ignored"):
+                levels = [p["value"]["value"] for p in node.get("properties", []) if p["name"] == "level"]
+                name, more = (node.get(key, {}).get("value", "") for key in ("name", "description"))
+                yield Spoken(role, name, more, levels[0] if levels else 0, above)
+                above = (*above, role)
+            for child in node.get("childIds", []):
+                if child in nodes:
+                    yield from walk(nodes[child], above)
+
+        return list(walk(root, ()))
 
     def _next(self) -> dict[str, Any]:
         while b"\0" not in self._rest:

@@ -1,4 +1,4 @@
-"""A bidder's own copy, every output: no other bidder in text, metadata, attachments, parts or object streams."""
+"""A bidder's own copy: no other bidder in text, metadata, attachments, parts or object streams."""
 
 from __future__ import annotations
 
