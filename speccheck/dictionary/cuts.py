@@ -28,6 +28,8 @@ _CONDITION = re.compile(
     r"(?:\s(?:tilt|downtilt|edt|scan|steering|azimuth|carriers|tones)\b)?",
     re.IGNORECASE,
 )
+_ORDINAL = re.compile(r"(?:\s*\.)?\s*(?:er|e|ème|eme|rd|th|[ªº°])?\.?\s*(?:ord|rz[ęąa])", re.IGNORECASE)
+"""Behind a number: 'third order' is written '3. Ordnung', '3.er orden', '3ª ordem'."""
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
 _SPLIT_NOTES = re.compile(r"\s*[,;]\s+|\s+[-–:]\s+|:\s*|\s*@\s*|\s+/\s+")
 
@@ -109,6 +111,8 @@ def _without_figures(cut: Cut) -> Cut:
     def keep(match: re.Match[str]) -> str:
         piece = match.group().strip()
         if not any(c.isdigit() for c in piece) or re.search(r"\ddB\b|\d dB\b", piece):
+            return match.group()
+        if _ORDINAL.match(match.string, match.end()):
             return match.group()
         conditions.append(re.sub(rf"^{_AT_WORDS}\s?", "", piece, flags=re.IGNORECASE))
         return " "

@@ -8,6 +8,7 @@ from speccheck.intake.panels.found import Found
 
 ASK_FOR_PLANES = "ask which spacing is horizontal and which vertical"
 _ORDER = re.compile(r"(?<![^\W\d_])(h|v)(?:or\w*|er\w*)?\s*[x×/*]\s*(h|v)(?:or\w*|er\w*)?\W*$", re.IGNORECASE)
+_PRODUCT = re.compile(r"\d\s*[^\W\d]{0,2}\s*[x×*]\s*\d", re.IGNORECASE)
 _SPACINGS = {"h": "horizontal_element_spacing", "v": "vertical_element_spacing"}
 
 
@@ -20,6 +21,9 @@ def part_by_plane(found: list[Found]) -> str:
     told_apart = len({(one.figure.unit, *sorted(one.figure.at.items())) for one in spacings}) > 1
     doubtful = any(one.figure.quantity.alternatives for one in spacings)
     if told_apart or doubtful or len({one.value for one in spacings}) < 2:
+        if len(spacings) == 2 and not (told_apart or doubtful) and _PRODUCT.search(spacings[0].raw):
+            for one, plane in zip(spacings, _SPACINGS.values(), strict=True):  # equal: the order does not matter
+                one.parameter = plane
         return ""
     order = _ORDER.search(spacings[0].raw)
     letters = [letter.lower() for letter in order.groups()] if order else []

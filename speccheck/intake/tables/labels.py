@@ -150,8 +150,9 @@ class Labels:
     def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
         """The heading of several figures, one for each item between `start` and `end` of a heading."""
         found = []
-        if len(unit_name(items.rpartition("/")[2])) > 1:
-            return Label(text)  # 'Frequency band / MHz'
+        last_is_unit = len(unit_name(items.rpartition("/")[2])) > 1  # 'Frequency band / MHz'
+        if last_is_unit or any("/" in word and unit_name(word) for word in items.split()):
+            return Label(text)
         for item in re.split(r"\s*/\s*", items):
             single = f"{text[:start].rstrip(' ([')} ({item}) {text[end:].lstrip(' )]')}".strip()
             found.append(self._with_unit(single) or self._match(single))
