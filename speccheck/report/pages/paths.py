@@ -9,6 +9,8 @@ from itertools import pairwise
 Point = tuple[float, float]
 SLACK = 0.2
 """Farthest that a thinned line may run from its points [SVG units]: a ninth of the width of a curve."""
+_SHAPE = 4
+"""Points of a box or a diamond, which need no thinning."""
 
 
 def path_data(points: Iterable[Point], *, close: bool = False) -> str:
@@ -19,7 +21,7 @@ def path_data(points: Iterable[Point], *, close: bool = False) -> str:
             pieces[-1].append((x, y))
         elif pieces[-1]:
             pieces.append([])
-    drawn = "".join(_piece(thinned(piece)) for piece in pieces if piece)
+    drawn = "".join(_piece(thinned(piece) if len(piece) > _SHAPE else piece) for piece in pieces if piece)
     return drawn + ("Z" if close and drawn else "")
 
 
