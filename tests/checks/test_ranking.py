@@ -107,7 +107,7 @@ def test_two_readings_that_fit_as_well_are_both_named_and_the_report_says_so() -
         names = [c.name for c in finding.conventions][:2]
         assert {n.partition(" ")[0] for n in names} == {"2.15", "both"}
         assert f"'{names[0]}' fits no better than '{names[1]}'." in finding.assumptions
-        assert " or " in finding.question
+        assert ", and whether " in finding.question
 
 
 def test_a_clear_order_needs_no_word() -> None:
@@ -136,3 +136,21 @@ def test_a_fault_elsewhere_keeps_no_reading_from_being_offered() -> None:
     for finding in gains:
         assert finding.conventions[0].name == "both polarisations added into the gain"
         assert finding.conventions[0].leaves == ("vswr-matches-return-loss",)
+
+
+def test_the_figure_shown_is_the_one_that_was_reread() -> None:
+    # the height claimed stays as it is; what changes is the number of rows
+    housing = next(f for f in misfits(COLUMN, array_rows=20, height=1.35) if f.check == "array-fits-housing")
+    rows = housing.conventions[0]
+    assert rows.name == "rows count the dipoles of both polarisations"
+    assert (rows.value, rows.unit) == (10, "")
+
+
+def test_a_reading_twenty_times_less_likely_is_listed_and_not_asked_for() -> None:
+    # few panels are 119° wide at half power, and 119° is what 65° is at -10 dB
+    for finding in misfits(COLUMN, horizontal_beamwidth=119):
+        assert len(finding.conventions) > 1
+        assert (
+            finding.question
+            == "Please confirm (Case!B7) whether the horizontal beamwidth is taken at half power."
+        )

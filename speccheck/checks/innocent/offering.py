@@ -14,7 +14,7 @@ from typing import Protocol
 from speccheck.checks.innocent.conventions import INNOCENT_READINGS, InnocentReading, Reach
 from speccheck.checks.innocent.ranking import Candidate, Key, ranked, span_of
 from speccheck.checks.registry import CHECKS
-from speccheck.records import Convention, Finding, Fit, Panel, Step
+from speccheck.records import Convention, Finding, Fit, Panel, Step, Value
 
 
 class Examined(Protocol):
@@ -32,6 +32,9 @@ Rerun = Callable[[Panel], Examined]
 
 MISFIT = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 LISTED = 5
+WORTH_ASKING = 3.0
+"""Difference of log likelihood up to which the second reading is asked for beside the first: 20 to 1."""
+
 SLIPS = "figure-plausible"
 """The one check that says nothing of a figure that is possible."""
 
@@ -77,7 +80,8 @@ class _Trial:
                 continue
             seen.append(other)
             if candidate := self._judged(rank, reading, reach, self.rerun(other)):
-                return candidate
+                pairs = zip(self.panel.readings, other.readings, strict=True)
+                return replace(candidate, reread=tuple((old, new) for old, new in pairs if new is not old))
         return None
 
     def _reaches(self) -> Iterator[Reach]:
@@ -176,13 +180,15 @@ def _completed(key: Key, finding: Finding, candidates: list[Candidate]) -> Findi
         return replace(
             finding, assumptions=(*finding.assumptions, NONE_FITS), question=_with_cells(said, cells)
         )
-    asked = " or ".join(dict.fromkeys(c.reading.ask for c in mine[:2]))
+    open_ones = [c for c in mine[:2] if c.fits_as_well_as(mine[0], WORTH_ASKING)]
+    asked = ", and whether ".join(dict.fromkeys(c.reading.ask for c in open_ones))
+    reread = ", ".join(dict.fromkeys(str(new.where) for c in open_ones for _, new in c.reread))
     return replace(
         finding,
-        conventions=tuple(_convention(c, c.repaired[key]) for c in mine),
+        conventions=tuple(_convention(c, finding, c.repaired[key]) for c in mine),
         assumptions=(*finding.assumptions, *_order_said(mine)),
         working=(*finding.working, *(s for c in mine for s in _left_over(c, c.repaired[key]))),
-        question=f"Please confirm ({cells}) whether {asked}.",
+        question=f"Please confirm ({reread}) whether {asked}.",
     )
 
 
@@ -194,18 +200,33 @@ def _order_said(candidates: list[Candidate]) -> tuple[str, ...]:
 
 
 def _with_cells(question: str, cells: str) -> str:
-    return question if any(c in question for c in cells.split(", ")) else f"{question} (cells {cells})"
+    if any(cell in question for cell in cells.split(", ")):
+        return question
+    return f"{question.removesuffix('.')} ({cells})."
 
 
-def _convention(candidate: Candidate, after: Finding) -> Convention:
-    value = after.claimed.value if after.claimed else ""
+def _convention(candidate: Candidate, before: Finding, after: Finding) -> Convention:
+    value, unit = _as_read_now(candidate, before, after)
     return Convention(
         name=candidate.reading.name,
         value=f"{value[0]:g} to {value[1]:g}" if isinstance(value, tuple) else value,
-        unit=after.claimed.unit if after.claimed else "",
+        unit=unit,
         repairs=tuple(dict.fromkeys(key[0] for key in candidate.repaired)),
         leaves=candidate.leaves,
     )
+
+
+def _as_read_now(candidate: Candidate, before: Finding, after: Finding) -> tuple[Value, str]:
+    """The claim as reread; where another figure than the claim was reread, that one."""
+    figures = [new for old, new in candidate.reread if new.value != old.value]
+    if figures and (after.claimed is None or after.claimed == before.claimed):
+        return _shortened(figures[0].value), figures[0].unit
+    return (_shortened(after.claimed.value), after.claimed.unit) if after.claimed else ("", "")
+
+
+def _shortened(value: Value) -> Value:
+    """A figure in four digits; counts stay whole."""
+    return value if isinstance(value, str | tuple | int) else float(f"{value:.4g}")
 
 
 def _of_difference(unit: str) -> str:

@@ -7,7 +7,7 @@ from collections.abc import Collection
 from dataclasses import dataclass
 
 from speccheck.checks.innocent.conventions import InnocentReading
-from speccheck.records import Band, CellRef, Finding
+from speccheck.records import Band, CellRef, Finding, Reading
 
 Key = tuple[str, Band | None, tuple[CellRef, ...], int]
 """What a finding is about: check, band, and cells and number where a check has several for a band."""
@@ -31,7 +31,7 @@ goes first; below the second, a factor of e, the order is no finding, and the re
 
 @dataclass(frozen=True, slots=True)
 class Candidate:
-    """A reading, the misfits it repairs, and the misfits it does not touch.
+    """An innocent reading, the figures before and after, the misfits it repairs, and those it does not touch.
 
     `judged` are the findings of the repairing checks in all bands: where it rereads one band, the others tell
     what the panel is like.
@@ -43,6 +43,7 @@ class Candidate:
     judged: tuple[Finding, ...]
     leaves: tuple[str, ...]
     likely: bool
+    reread: tuple[tuple[Reading, Reading], ...] = ()
 
     @property
     def order(self) -> tuple[int, bool, float, int]:
