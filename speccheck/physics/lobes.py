@@ -177,12 +177,15 @@ def _strongest(state: Excitation, wavelength: float, beam: float, points: Floats
     offsets = _box(half_width, (layout.panel_columns, layout.panel_rows))
     if len(centres) == 0:
         return _Lobe(visible_count=visible)
-    power = _seen_power(state, centres[:, None, None], offsets, half_width)
+    offsets = _visible(centres[:, None, None], offsets)
+    power = _power(state, centres[:, None, None], offsets, half_width)
     tops = np.argwhere(_local_maxima(power) & (power > 0))
-    box, y, z = tops[np.argsort(-power[tuple(tops.T)])[:_REFINED]].T
+    # samples brought to the same point of the rim count once
+    _, different = np.unique(power[tuple(tops.T)], return_index=True)
+    box, y, z = tops[different[: -_REFINED - 1 : -1]].T
     if len(box) == 0:
         return _Lobe(visible_count=visible)
-    heights, places = _refined(state, centres[box], half_width, offsets[y, z])
+    heights, places = _refined(state, centres[box], half_width, offsets[box, y, z])
     best = heights.argmax()
     level, where, around = heights[best], places[best], centres[box[best]]
     theta = np.arccos(where[1])
@@ -205,20 +208,23 @@ def _box(half_width: Floats, groups: tuple[int, int] = (1, 1)) -> Floats:
     return floats(np.stack(np.meshgrid(y, z, indexing="ij"), -1))
 
 
-def _seen_power(state: Excitation, centres: Floats, offsets: Floats, half_width: Floats) -> Floats:
-    """Intensity at offsets (..., 2) in the boxes of lattice points; -1 where that is no visible direction.
-
-    What lies beyond visible space counts on its rim, where the flank of a hidden lobe is highest.
-    """
+def _visible(centres: Floats, offsets: Floats) -> Floats:
+    """Offsets (..., 2) from lattice points; what lies beyond visible space is brought to its rim, where the
+    flank of a hidden lobe is highest."""
     u = centres + offsets
-    u = u / np.maximum(np.hypot(u[..., 0], u[..., 1]) * (1 + 1e-9), 1.0)[..., None]
-    seen = (np.abs(u - centres) <= half_width + 1e-12).all(-1)
-    power = np.full(seen.shape, -1.0)
-    u_y, u_z = u[seen].T
+    beyond = np.maximum(np.hypot(u[..., 0], u[..., 1]) * (1 + 1e-9), 1.0)
+    return floats(u / beyond[..., None] - centres)
+
+
+def _power(state: Excitation, centres: Floats, offsets: Floats, half_width: Floats) -> Floats:
+    """Intensity at visible offsets (..., 2) from lattice points; -1 outside their boxes."""
+    inside = (np.abs(offsets) <= half_width + 1e-12).all(-1)
+    power = np.full(inside.shape, -1.0)
+    u_y, u_z = (centres + offsets)[inside].T
     theta = np.arccos(u_z)
     phi = np.arcsin(np.clip(u_y / np.sin(theta), -1, 1))
     if len(u_y):
-        power[seen] = intensity(state, theta[None], phi[None])[0]
+        power[inside] = intensity(state, theta[None], phi[None])[0]
     return power
 
 
@@ -230,12 +236,11 @@ def _refined(
     levels = np.zeros(len(centres))
     for finer in (1, 2):
         near = offsets[:, None] + _box(half_width * (2 / _STEPS) ** finer).reshape(-1, 2)
-        near = np.clip(near, -half_width, half_width)
-        power = _seen_power(state, centres[:, None], near, half_width)
+        near = _visible(centres[:, None], np.clip(near, -half_width, half_width))
+        power = _power(state, centres[:, None], near, half_width)
         highest = power.argmax(1)
         levels, offsets = power[each, highest], near[each, highest]
-    u = centres + offsets
-    return levels, u / np.maximum(np.hypot(u[:, :1], u[:, 1:]) * (1 + 1e-9), 1.0)
+    return levels, centres + offsets
 
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
@@ -244,7 +249,7 @@ def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> 
     theta = np.pi / 2 + phi[1:-1]
     mesh = np.meshgrid(theta, phi, indexing="ij")
     power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)
-    maxima = np.argwhere(_local_maxima(power) & (power > 1e-9 * beam))
+    maxima = np.argwhere(_local_maxima(power, 1e-9) & (power > 1e-9 * beam))
     levels = power[tuple(maxima.T)]
     steps = np.array([theta[1] - theta[0], phi[1] - phi[0]])
     best, level = np.full(2, np.nan), 0.0
@@ -263,10 +268,11 @@ def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> 
     return _Lobe(float(db(level / beam)), theta_deg, phi_deg, others, True)
 
 
-def _local_maxima(power: Floats) -> NDArray[np.bool_]:
-    """Which samples of grids (..., Y, Z) are no lower than their neighbours; edges count as falling off."""
+def _local_maxima(power: Floats, more: float = 0.0) -> NDArray[np.bool_]:
+    """Which samples of grids (..., Y, Z) are no lower than their neighbours, or so much `more` (a share of
+    them); edges count as falling off."""
     margins = [(0, 0)] * (power.ndim - 2) + [(1, 1)] * 2
-    padded = np.pad(power, margins, constant_values=-1.0) * (1 + 1e-9)
+    padded = np.pad(power, margins, constant_values=-1.0) * (1 + more)
     rows, columns = power.shape[-2:]
     highest = np.ones(power.shape, bool)
     for down in range(3) if rows > 1 else (1,):

@@ -86,6 +86,9 @@ GROUPS = (
     8.53,
     7.12,
 )
+# grating lobes seen with their flank at the rim of visible space alone: one column, and a planar array
+RIM = (Array(8, 1, 0.759, 0.456, (96.7, 81.9, 20.5), grouped=4, fixed_tilt=7.94), -9.61, 0.0)
+PLANAR_RIM = (Array(31, 14, 0.869, 0.8815, (96.8, 61.2, 22.0)), 4.456, 5.4965)
 
 
 @settings(max_examples=20, deadline=None, derandomize=True)
@@ -93,5 +96,7 @@ GROUPS = (
 @example(case=LONG_SUBARRAYS)
 @example(case=STAGGERED)
 @example(case=GROUPS)
+@example(case=RIM)
+@example(case=PLANAR_RIM)
 def test_every_figure_of_any_array(case):
     assert wrong(*case) == []
