@@ -133,9 +133,8 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
         for c, reason, nearest in result.unread
     ]
     known = {(c.row, c.column) for c, _, _ in result.unread}
-    for place, role in result.roles.items():
-        cell = result.grid.cells[place]
-        if cell.fault and role != "reading" and place not in known:
+    for place, cell in result.grid.cells.items():
+        if cell.fault and place not in known and result.roles.get(place) != "reading":
             where = reader.where(result.grid.name, cell.address)
             listed.append(Unread(where=where, text=cell.text, reason=cell.fault))
     return listed

@@ -22,6 +22,7 @@ _NOTE_WORD = re.compile(
 )
 _SUPERSCRIPT = str.maketrans("¹²³⁴⁵⁶⁷⁸⁹", "123456789")
 _SHOWN = 8
+_DATES = (date, time)
 
 Where = Callable[[str, str], CellRef]
 
@@ -59,7 +60,7 @@ def grid_notices(grid: Grid, where: Where) -> list[Notice]:
             text=f"holds a date ({plain(cell.text, 40)}); a spreadsheet may have made it of another text",
         )
         for cell in grid.cells.values()
-        if isinstance(cell.raw, date | time)
+        if isinstance(cell.raw, _DATES)
     ]
     return found
 
