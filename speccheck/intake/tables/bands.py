@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import re
+import unicodedata
 from collections.abc import Callable
 from dataclasses import dataclass
 from functools import lru_cache
@@ -14,7 +15,7 @@ from speccheck.standards import operating_band
 
 _NUMBER = r"(\d{1,3}(?:[ ,.'\u00a0\u2009\u202f]\d{3})(?!\d)|\d+(?:[.,]\d+)?)"
 _DASH = (
-    r"\s*(MHz|GHz)?\s*(?:-|–|—|−|‐|‑|~|…|\.{2,3}|÷|\bto\b|\bbis\b|\bà\b|\ba\b|\btot\b|\bdo\b|\baté\b|/)\s*"
+    r"\s*(MHz|GHz)?\s*(?:-|–|—|−|‐|‑|~|…|\.{2,3}|÷|〜|\bto\b|\bbis\b|\bà\b|\ba\b|\btot\b|\bdo\b|\baté\b|/)\s*"
 )
 _RANGE = re.compile(
     r"(?<![\w.,])" + _NUMBER + _DASH + _NUMBER + r"(?:\s*(MHz|GHz))?(?![\d°%λ])", re.IGNORECASE
@@ -22,6 +23,7 @@ _RANGE = re.compile(
 _NAME = re.compile(r"(?<![\w-])(?:(?:NR|LTE|5G|4G|E-?UTRA)[\s-]*)?(?:band\s*)?([nB])(\d{1,3})(?![\w.-])")
 _GAP = 1.1
 """Neighbouring sub-bands leave no more than a duplex gap between them."""
+_WIDE = "０１２３４５６７８９～〜"
 _LONGEST_TITLE = 60
 _SEVERAL = re.compile(r"\d\s*/\s*\d")
 _LOWEST_MHZ, _HIGHEST_MHZ = 60.0, 110_000.0
@@ -58,6 +60,8 @@ def find_bands(text: str) -> BandText:
     """Frequency ranges and 3GPP band names in a text."""
     if len(text) > 300 or not any(letter.isdigit() for letter in text):
         return BandText((), text, False)
+    if not text.isascii() and any(letter in text for letter in _WIDE):
+        text = unicodedata.normalize("NFKC", text)
     spans: list[Band] = []
     proved = False
     rest = text

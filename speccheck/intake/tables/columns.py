@@ -121,7 +121,13 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
         bands = find_bands(text)
         if bands.spans and bands.proved:
             column.band, column.band_cell = bands.hull, cell
-    elif says_tilt(text, labels):
+    else:
+        _take_subject(column, cell, labels, text)
+
+
+def _take_subject(column: Column, cell: Cell, labels: Labels, text: str) -> None:
+    """A heading that says what its figures are of: a band, a plane, a tilt, or a panel by name."""
+    if says_tilt(text, labels):
         column.role, column.lead = "condition", "tilt "
     elif _is_frequency_heading(labels.of(text)):
         column.frequency = cell

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterator
 from dataclasses import replace
 
 from speccheck.intake.files.grid import Cell, Grid
@@ -10,7 +11,7 @@ from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_lab
 from speccheck.intake.tables.claims import Claim, Context, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.down_answers import take_answers
-from speccheck.intake.tables.down_bands import NamedBand, band_of_row
+from speccheck.intake.tables.down_bands import NamedBand, band_of_row, lone_nickname
 from speccheck.intake.tables.down_headings import (
     describe_columns,
     extend,
@@ -39,6 +40,7 @@ class DownReader:
         self._heading_rows: list[int] = []
         self._state = Standing()
         self._numbering: set[int] = set()
+        self._place_in_band = ""
 
     def read(self) -> None:
         """Place every cell of the table and collect its claims."""
@@ -50,6 +52,7 @@ class DownReader:
         self._numbering = numbering_columns(self._marks, self._table, self._heading_rows)
         self._panels.name_column = find_name_column(self._marks, self._table, self._heading_rows)
         self._section_above()
+        self._place_in_band = lone_nickname(self._conditions())
         first = (self._heading_rows[-1] + 1) if self._heading_rows else self._table.top
         for row in range(min(first, self._table.top), self._table.bottom + 1):
             cells = [
@@ -57,6 +60,11 @@ class DownReader:
             ]
             if cells:
                 self._row(row, cells)
+
+    def _conditions(self) -> Iterator[Cell]:
+        columns = [index for index, column in self._columns.items() if column.role == "condition"]
+        for row in range(self._table.top, self._table.bottom + 1):
+            yield from filter(None, (self._grid.cells.get((row, index)) for index in columns))
 
     def _row(self, row: int, cells: list[Cell]) -> None:
         state, table = self._state, self._table
@@ -225,7 +233,7 @@ class DownReader:
     def _bands_of(self, cell: Cell, column: Column, label: Label, extra: RowCells) -> list[NamedBand]:
         if label.bands.spans:
             return [(label.bands.hull, "")]
-        said = band_of_row(extra)
+        said = band_of_row(extra, self._place_in_band)
         if said is not None:
             return [said]
         bands = self._panels.bands_of(column)

@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterable
+
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.columns import Column
@@ -13,10 +15,19 @@ NamedBand = tuple[Band | None, str]
 WHOLE: NamedBand = (None, "")
 
 
-def band_of_row(extra: RowCells) -> NamedBand | None:
-    """The band a row's own band or condition cell names, if any."""
+def lone_nickname(cells: Iterable[Cell]) -> str:
+    """The nickname that conditions give, when they give no other: 'mid band' is then a place in a band."""
+    found = {cell.text for cell in cells if is_band_label(cell.text)}
+    (only,) = found if len(found) == 1 else ("",)
+    return "" if find_bands(only).spans else only
+
+
+def band_of_row(extra: RowCells, place: str = "") -> NamedBand | None:
+    """The band a row's own band or condition cell names, if any; the condition `place` names none."""
     for text in filter(None, (extra.band.text if extra.band else "", extra.condition_text)):
         bands = find_bands(text)
+        if text == place:
+            continue
         if bands.proved or is_band_label(text):
             return bands.hull, "" if bands.hull else text
     return None

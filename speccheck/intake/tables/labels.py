@@ -29,6 +29,8 @@ _TILTS = re.compile(
     rf"{_AT}(?:{_TILT_WORD}\s*(?:of|=|:)?\s*{_ANGLES}|{_ANGLES}\s*(?:of\s+)?{_TILT_WORD})\s*[)]?\s*$",
     re.IGNORECASE,
 )
+_LETTER_FIRST = re.compile(r"[^\W\d_]\s+[^\W\d_]{2,}")
+_SIZES = frozenset({"height", "width", "depth"})
 _CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
 _STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
@@ -218,6 +220,8 @@ class Labels:
             return Label(text)
         if found.condition and _CODE.fullmatch(text):
             return Label(text)  # 'BR-0012' is a model, not a width
+        if found.condition and _LETTER_FIRST.match(text) and set(found.parameters) <= _SIZES:
+            return Label(text)  # 'D of 12 March' is an issue, not a depth
         if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
             return Label(text)  # 'RAL 7035' and 'Model 12' are answers
         condition = found.condition

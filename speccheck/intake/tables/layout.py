@@ -5,17 +5,19 @@ from __future__ import annotations
 from dataclasses import replace
 from itertools import pairwise
 
-from speccheck.intake.files.grid import Grid
+from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.across import AcrossReader
 from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.down import DownReader
 from speccheck.intake.tables.down_regions import find_down
 from speccheck.intake.tables.labels import Labels
-from speccheck.intake.tables.marks import Marks, mark
+from speccheck.intake.tables.marks import Marks, looks_like_value, mark
 from speccheck.intake.tables.naming import Names
 from speccheck.intake.tables.pasted import read_lines
 from speccheck.intake.tables.regions import Across, find_across
 from speccheck.intake.tables.words import column_role
+
+_LONGEST_FIGURE = 40
 
 
 def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
@@ -73,6 +75,9 @@ def _leftovers(marks: Marks, result: SheetResult) -> None:
         for position, cell in enumerate(free):
             if cell.fault:
                 result.mark(cell, "unread")
+            elif (label := _labelled(marks, cell)) is not None:
+                result.unread.append((cell, f"a figure beside '{label.text[:60]}', in no table", ""))
+                result.mark(cell, "unread")
             elif isinstance(cell.raw, str):
                 result.mark(cell, "note")
                 continue
@@ -82,3 +87,11 @@ def _leftovers(marks: Marks, result: SheetResult) -> None:
                     reason = f"a figure beside '{before[:60]}'" if before else "a figure outside every table"
                     result.unread.append((cell, reason, marks.labels.suggestion(before)))
                 result.mark(cell, "unread")
+
+
+def _labelled(marks: Marks, cell: Cell) -> Cell | None:
+    """The heading before a cell of figures in its row, as in a table that was not seen as one."""
+    if len(cell.text) > _LONGEST_FIGURE or marks.is_heading(cell) or not looks_like_value(cell):
+        return None
+    before = [c for c in marks.rows[cell.row] if c.column < cell.column and marks.is_heading(c)]
+    return before[-1] if before else None

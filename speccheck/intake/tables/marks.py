@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 from dataclasses import dataclass, field
 
+from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.labels import Label, Labels, is_unit, split_lines, statistic_of
 from speccheck.intake.tables.words import column_role
@@ -13,6 +14,11 @@ _LONGEST = 2000
 _SIZES = frozenset("HWDBTLPAGS")
 _LETTER_UNIT = re.compile(r"(?<=^[A-Za-z])\s*(?:[(\[]|,\s)\s*(?:mm|cm|m|in|inch|\")\s*[)\]]?$")
 _LONGEST_LETTER = 9
+_COUNTED = re.compile(r"\b\d+\s+[^\W\d_]{3,}")
+_WORD = re.compile(r"[^\W\d_]+")
+_BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
+_MOST_COUNTED = 2
+"""Words behind a number that is no item number: '64 TRX', but not '12 Number of ports'."""
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -129,7 +135,18 @@ def _is_value(text: str, labels: Labels) -> bool:
     """Whether a text is neither heading nor line, wherever it stands; catalogues repeat their values."""
     if len(text) > _LONGEST or not any(letter.isalpha() for letter in text) or is_unit(text):
         return True
-    return not (any(mark in text for mark in _LINE_MARKS) or labels.of(text))
+    if any(mark in text for mark in _LINE_MARKS):
+        return False
+    label = labels.of(text)
+    return not label or _counts(text, label)
+
+
+def _counts(text: str, label: Label) -> bool:
+    """Whether a text says how many of something there are: '192 elements (12x8x2)', '12 rows, 8 columns'."""
+    if not _COUNTED.match(text) or any(parameters()[key].kind != "count" for key in label.parameters):
+        return False
+    words = _WORD.findall(_BRACKETED.sub("", text))
+    return len(words) <= _MOST_COUNTED or len(_COUNTED.findall(text)) > 1
 
 
 def _mark_text(marks: Marks, place: tuple[int, int], text: str, following: Cell | None) -> None:

@@ -16,6 +16,7 @@ _MOST_LANGUAGES = 3
 _TOLD_BY_ONE = frozenset({"parameter", "unit", "remark", "condition", "offered", "required", "compliance"})
 _ARRAY = r"(?:r|b|y|l|m|h|lb|mb|hb)[1-9]\d?"
 _ARRAYS = re.compile(rf"{_ARRAY}(?:\s*[/+&,-]\s*{_ARRAY})*")
+_CODE_OF_ARRAY = re.compile(r"[a-z]{1,2}[1-9]\d?|\d")
 _NUMBER_OF_ARRAY = r"s?(?:[ -]?\d|[ -](?:[a-h]|[ivx]+|[a-z]{1,2}[1-9]\d?))\b.{0,20}"
 _PAGE = re.compile(
     r"^\W*(?:page|seite|pagina|strona|str\.|blatt|sheet|feuille|folio|pag?\.)\s*\d+(?:\s*(?:of|von|sur|de|di|z|van|/)\s*\d+)?\W*$"
@@ -196,10 +197,14 @@ def _colour_and_number(folded: str) -> bool:
 
 
 def names_array(text: str) -> bool:
-    """Whether words only tell the arrays of a panel apart, by place or colour: 'Lower left', 'Yellow'."""
-    words = re.findall(r"[^\W\d_]+", fold(text))
+    """Whether words only tell the arrays of a panel apart, by place, colour or code: 'Lower array R1'."""
+    words = re.findall(r"[^\W_]+", fold(text))
     band = _table()["band"]
-    return bool(words) and band["arrays"].union(band["colours"]).issuperset(words)
+    telling = [word for word in words if word in band["arrays"] | band["colours"]]
+    return bool(telling) and all(
+        word in band["arrays"] | band["colours"] | band["links"] or _CODE_OF_ARRAY.fullmatch(word)
+        for word in words
+    )
 
 
 def answer(text: str) -> str:
