@@ -229,9 +229,14 @@ def lobe_said(lobe: Lobe, enters_at_deg: float) -> str:
     if not lobe.visible or not lobe.present:
         return "No lobe enters within the range."
     return (
-        f"Steered to {lobe.scan_deg:g}° a lobe of {lobe.level_db:.1f} dB stands at {lobe.stands_deg:.0f}°;"
-        f" it enters from {enters_at_deg:.0f}°."
+        f"Steered to {lobe.scan_deg:g}° a second beam (grating lobe) stands at {lobe.stands_deg:.0f}°,"
+        f" {level_said(lobe.level_db)}; it appears from {enters_at_deg:.0f}° on."
     )
+
+
+def level_said(level_db: float) -> str:
+    """A level against the beam [dB] in words."""
+    return f"{abs(level_db):.1f} dB {'above' if level_db > 0 else 'below'} the wanted one"
 
 
 def broken_said(broken: list[str]) -> str:

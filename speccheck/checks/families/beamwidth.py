@@ -94,8 +94,8 @@ def _held(model: Model, width: Reading, uniform_deg: float, words: str, rough: s
     )
     return Judgement(
         verdict=verdict,
-        summary=f"{claim(width)} claimed; {words} have {uniform_deg:.1f}° with uniform weights and up to"
-        f" {WIDE * uniform_deg:.1f}° tapered. The claim is {ratio:.2f} of the uniform width, {tail}.",
+        summary=f"{claim(width)} claimed; {words} have {uniform_deg:.1f}° at the narrowest (uniform weights)"
+        f" and up to {WIDE * uniform_deg:.1f}° tapered. The claim is {ratio:.2f} of the narrowest, {tail}.",
         claimed=Amount(width.nominal, "deg"),
         expected=Interval(round(QUESTION * uniform_deg, 2), round(WIDE * uniform_deg, 2), "deg"),
         working=(

@@ -108,18 +108,11 @@ def gain_fits_beamwidths(
     implied = float(implied_beamwidth_constant(value, across, along))
     if verdict is not Fit.FITS and other is not None and across != other and isinstance(model, Model):
         return _of_two_beams(gain, horizontal_beamwidth, along, other, model)
-    meaning = {
-        Fit.FITS: "in the ordinary range",
-        Fit.DOUBTFUL: f"{value - planar:+.1f} dB against {_thousands(k_upper)}",
-        Fit.DOES_NOT_FIT: "more than a sphere holds",
-    }[verdict]
     return Judgement(
         verdict=verdict,
-        summary=f"{claim(gain)} gain claimed with {across:.4g}° × {along:.4g}°; such a beam has up to"
-        f" {planar:.1f} dBi"
-        f" (K = {_thousands(k_upper)}), {sphere:.1f} dBi at most (K = {_thousands(k_sphere)}). The claim"
-        f" implies K = {_thousands(implied)}:"
-        f" {meaning}.",
+        summary=f"{claim(gain)} gain claimed with {across:.4g}° × {along:.4g}°; a beam of these widths has"
+        f" {least:.1f} to {planar:.1f} dBi, and {sphere:.1f} dBi if it radiated nowhere else"
+        f"{_beyond(value, least, planar, sphere, verdict)}.",
         claimed=Amount(round(value, 2), "dBi"),
         expected=Interval(round(least, 2), round(planar, 2), "dBi"),
         working=(
@@ -167,8 +160,14 @@ def _at_frequency_of(gain: Reading, width: Reading, model: Model) -> tuple[float
     return there, (f"{said} at {gain_hz / 1e6:.0f} MHz, where the gain holds.",)
 
 
-def _thousands(product: float) -> str:
-    return f"{product:,.0f}".replace(",", " ")
+def _beyond(value: float, least: float, usual: float, most: float, verdict: Fit) -> str:
+    """How far a claim [dBi] lies outside, in words."""
+    if verdict is Fit.FITS:
+        return ""
+    if value < least:
+        return f": the claim is {least - value:.1f} dB less"
+    edge, which = (most, "even that") if verdict is Fit.DOES_NOT_FIT else (usual, "the usual")
+    return f": the claim is {value - edge:.1f} dB more than {which}"
 
 
 def _width_of_another_beam(

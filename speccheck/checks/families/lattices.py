@@ -10,6 +10,7 @@ from speccheck.checks.steering_lobes import (
     Steering,
     broken_claims,
     broken_said,
+    level_said,
     lobe_steps,
     span_deg,
     strongest,
@@ -74,7 +75,11 @@ def triangular_lattice(
         verdict=Fit.DOES_NOT_FIT if broken else lobe.verdict,
         summary=f"Triangular lattice of {top_v:.2f} λ × {top_h:.2f} λ at {model.band[1]:g} MHz, steered to"
         f" {abs(steering.largest_deg):g}°. "
-        + (f"A lobe of {lobe.level_db:.1f} dB is visible." if lobe.visible else "No lobe is visible.")
+        + (
+            f"A second beam is visible, {level_said(lobe.level_db)}."
+            if lobe.visible
+            else "No lobe is visible."
+        )
         + broken_said(broken),
         claimed=Amount(round(top_h, 3), "λ"),
         working=(
@@ -143,7 +148,7 @@ def subarray_spacing(
     layout = model.layout
     pitch_wl = layout.subarray_rows * model.vertical_pitch_wl(model.high_hz)
     free = float(grating.pitch_limit_wl(max(abs(e) for e in stated[0])))
-    seen = f"their lobe is {lobe.level_db:.1f} dB against the beam" if lobe.present else "no lobe is seen"
+    seen = f"their lobe is a second beam {level_said(lobe.level_db)}" if lobe.present else "no lobe is seen"
     return Judgement(
         verdict=Fit.DOES_NOT_FIT if broken else lobe.verdict,
         summary=f"Sub-arrays of {layout.subarray_rows} rows stand {pitch_wl:.2f} λ apart at {model.band[1]:g}"

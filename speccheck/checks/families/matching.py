@@ -55,7 +55,8 @@ def vswr_matches_return_loss(
     slack = half_digit(return_loss) + 0.05
     low, high = exact - slack, exact + slack
     verdict = _matching_verdict(vswr, return_loss, claimed - exact, slack)
-    off = "agrees with" if verdict is Fit.FITS else f"is {claimed - exact:+.2f} dB from"
+    way = "less" if claimed < exact else "more"
+    off = "agrees with" if verdict is Fit.FITS else f"is {abs(claimed - exact):.2f} dB {way} than"
     typical = "; one of the two is typical" if _typical(vswr) != _typical(return_loss) else ""
     return Judgement(
         verdict=verdict,

@@ -156,7 +156,8 @@ def transceivers_fit_subarrays(
     ratio = "" if fits else f" The ratio is {claimed / expected:.3g}."
     return Judgement(
         verdict=Fit.FITS if fits else Fit.DOES_NOT_FIT,
-        summary=f"{claim(transceivers)} transceivers claimed; {formula} = {expected}.{ratio}",
+        summary=f"{claim(transceivers)} transceivers claimed; rows and columns of sub-arrays × polarisations"
+        f" give {formula} = {expected}.{ratio}",
         claimed=Amount(claimed, ""),
         expected=Interval(expected, expected, ""),
         working=(Step("Sub-arrays of all polarisations", formula, expected),),
