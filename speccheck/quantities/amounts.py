@@ -10,6 +10,8 @@ from speccheck.quantities.numerals import numeral
 from speccheck.quantities.units import dimension
 
 _JOINING = {"times": "×", "slash": "/", "sep": ",", "colon": ":", "plus": "+", "and": "and"}
+_OPENING = ("open", "sep")
+"""Behind them a word such as 'min.' belongs to the figure that follows: '17.5 dBi (min. 17.0)'."""
 _SHARING = ("×", "/", ",", "and")
 
 
@@ -128,8 +130,10 @@ class _Reader:
             self._pending.words = []
 
     def _sense(self, token: Token) -> None:
-        follows = self._kind(1) in ("num", "minus", "plus", "pm", "open", "statistic", "min", "max")
-        backward = bool(self._found) and not self._sense_leads and not self._pending.sense
+        ahead = 2 if self._kind(1) == "colon" else 1  # 'Min: 16.5'
+        follows = self._kind(ahead) in ("num", "minus", "plus", "pm", "open", "statistic", "min", "max")
+        opens = self._at > 0 and self._tokens[self._at - 1].kind in _OPENING and self._kind(ahead) == "num"
+        backward = bool(self._found) and not (self._sense_leads or self._pending.sense or opens)
         sign = token.text in "<>≤≥~≈"
         if self._found and (backward or not follows) and not sign:
             last = self._found[-1]

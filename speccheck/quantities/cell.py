@@ -20,8 +20,15 @@ from speccheck.quantities.lexer import Token, tokens
 from speccheck.quantities.numerals import numeral
 from speccheck.quantities.ranges import one_range, scan_range
 from speccheck.quantities.shown import shown_around
+from speccheck.quantities.sizes import sides_by_letter
 from speccheck.quantities.spectrum import band_names, bands
-from speccheck.quantities.spelled import in_digits, in_one_unit
+from speccheck.quantities.spelled import (
+    as_ratio,
+    in_digits,
+    in_one_unit,
+    without_ordinals,
+    without_setting_letter,
+)
 from speccheck.quantities.statuses import declares, is_error_value, status_of
 from speccheck.quantities.tidy import split_footnotes, tidy
 from speccheck.quantities.units import unit_name
@@ -130,14 +137,21 @@ def _read_text(raw: str, wanted: Expected) -> CellContent:
     text = _TOLERANCE_WORD.sub(" ", tidy(body))
     if wanted.kind == "text":
         return CellContent(quantities=(Quantity(value=text),), footnotes=marks)
-    if wanted.kind in _COUNTED:
-        text = in_digits(text, before_names=wanted.kind == "connectors")
-    else:
-        text = in_one_unit(text)
+    text = _plainly(text, wanted)
     content = time_share(text, wanted) or with_usual_unit(_read_figures(text, wanted), wanted)
     if not content.quantities and not content.rest:
         content = replace(content, rest=text or raw.strip())
     return replace(content, footnotes=marks, status="declared" if declares(text) else None)
+
+
+def _plainly(text: str, wanted: Expected) -> str:
+    """The text with its figures in digits, one unit and plain signs, as far as its parameter tells."""
+    if wanted.kind in _COUNTED:
+        return in_digits(text, before_names=wanted.kind == "connectors")
+    if wanted.kind == "number":
+        text = without_ordinals(text)
+        return as_ratio(text) if wanted.parameter_unit == "" else in_one_unit(text)
+    return without_setting_letter(text) if wanted.kind == "range" else in_one_unit(text)
 
 
 def _read_figures(text: str, wanted: Expected) -> CellContent:
@@ -151,6 +165,10 @@ def _read_figures(text: str, wanted: Expected) -> CellContent:
         special = special_count(text)
         if special:
             return special
+    if wanted.kind == "size":
+        sides, text = sides_by_letter(text)
+        if sides:
+            return _with_sides(_read_figures(text, wanted), sides)
     names, body = band_names(text) if wanted.kind == "bands" else ((), text)
     parts = tokens(body)
     point = _parse(text, parts, names, wanted, comma=False)
@@ -158,6 +176,13 @@ def _read_figures(text: str, wanted: Expected) -> CellContent:
         return point
     comma = _parse(text, parts, names, wanted, comma=True)
     return point if point == comma else choose(point, comma, wanted)
+
+
+def _with_sides(content: CellContent, sides: tuple[str, ...]) -> CellContent:
+    if len(content.quantities) != len(sides):
+        return content
+    named = [replace(q, parameter=side) for q, side in zip(content.quantities, sides, strict=True)]
+    return replace(content, quantities=tuple(named))
 
 
 def _parse(

@@ -9,7 +9,7 @@ from dataclasses import replace
 from speccheck.quantities.content import CellContent, Quantity
 from speccheck.quantities.figures import Claim
 
-_TRANSCEIVERS = re.compile(r"(\d{1,4})\s?T\s?[/x-]?\s?(\d{1,4})\s?R(?![a-z])", re.IGNORECASE)
+_TRANSCEIVERS = re.compile(r"(\d{1,4})\s?Tx?\s?[/x-]?\s?(\d{1,4})\s?Rx?(?![a-z])", re.IGNORECASE)
 _FACTORS = re.compile(r"\d{1,3}(?:\s?[×xX*]\s?\d{1,3}){1,2}(?:\s?=\s?(\d{1,5}))?")
 
 

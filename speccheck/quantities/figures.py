@@ -210,7 +210,7 @@ def _restates(first: Amount, second: Amount) -> bool:
         return False
     if (first.unit, second.unit) == ("dBc", "dBm"):
         return math.isclose(second.low - first.low, _CARRIER_DBM, abs_tol=0.1)
-    if second.unit == "λ" and second.role == "aside":
+    if "λ" in (first.unit, second.unit) and second.role == "aside":
         return True
     try:
         again = convert(second.low, second.unit, first.unit)

@@ -10,14 +10,15 @@ _WIDEST_HALF_SCAN_DEG = 90.0
 
 
 def one_range(found: list[Quantity]) -> list[Quantity]:
-    """'-60/+60' is one range; a single figure beside a range, such as the step, is no range.
+    """'-60/+60' and '0/10' are one range; a single figure beside a range, such as the step, is no range.
 
     A list of plain settings such as '0/2/4' stays a list.
     """
     if len(found) == 2:
         first, second = found[0].value, found[1].value
-        if isinstance(first, float) and isinstance(second, float) and first < 0 < second:
-            return [replace(found[1], value=(first, second), condition=found[0].condition)]
+        if isinstance(first, float) and isinstance(second, float) and first <= 0 < second:
+            both = replace(found[1], value=(first, second), condition=found[0].condition)
+            return [replace(both, sense="nominal", statistic="")]
     ranges = [q for q in found if isinstance(q.value, tuple)]
     return ranges if ranges and len(ranges) < len(found) else found
 

@@ -47,6 +47,9 @@ def _band(amount: Amount, unit: str, name: str) -> Quantity | None:
         own = "GHz" if max(amount.low, amount.high or 0) < min(_LOWEST_MHZ, _HIGHEST_GHZ) else "MHz"
     low = convert(amount.low, own, "MHz")
     condition = ", ".join(filter(None, [name, " ".join([*amount.before, *amount.words])]))
+    if amount.high is None and amount.tolerance:  # '3500 ± 100 MHz'
+        spread = convert(amount.tolerance, amount.tolerance_unit or own, "MHz")
+        return Quantity(value=(_exact(low - spread), _exact(low + spread)), unit="MHz", condition=condition)
     if amount.high is None:
         return Quantity(value=_exact(low), unit="MHz", condition=condition)
     high = convert(amount.high, own, "MHz")

@@ -18,6 +18,13 @@ _FEET_ONLY = re.compile(r"(?<![\w.,'])(\d{1,2}(?:[.,]\d+)?)\s?'(?=\s|$|[x×,;)])
 _MIXED_INCHES = re.compile(
     rf"(?<![\w.,/'])(?P<inches>\d{{1,3}})[\s-]{_FRACTION.format('top', 'bottom')}\s?(?={_INCHES})"
 )
+_ORDER = re.compile(
+    r"(?<![\w.,])([2357])\s?(?:st|nd|rd|th|[ªº°]|er|ème|eme|e)?\.?\s?(?=(?:ord(?:er|re|en|ine|em|nung)|orde|rz[ęa]du)\b)",
+    re.IGNORECASE,
+)
+_ORDINALS = {"2": "second", "3": "third", "5": "fifth", "7": "seventh"}
+_RATIO = re.compile(r"(\d)\s?/\s?1(?=$|\s|\))")
+_SETTING = re.compile(r"(?<!\w)[Tt](?=\d{1,2}(?:\D|$))")
 _WORD = re.compile(r"[^\W\d_]+(?:-[^\W\d_]+)?")
 _INCHES_A_FOOT = 12
 
@@ -48,6 +55,33 @@ def in_one_unit(text: str) -> str:
     text = _FEET_INCHES.sub(_total(lambda feet: f"{feet:g} in"), text)
     text = _MIXED_INCHES.sub(_total(lambda inches: f"{inches:g} "), text)
     return _FEET_ONLY.sub(r"\1 ft", text)
+
+
+def without_ordinals(text: str) -> str:
+    """A tidy text with the number of an order as a word: '3rd order' is 'third order'.
+
+    >>> without_ordinals("< -150 dBc, 3rd order"), without_ordinals("IM 3. Ordnung")
+    ('< -150 dBc, third order', 'IM third Ordnung')
+    """
+    return _ORDER.sub(lambda found: f"{_ORDINALS[found[1]]} ", text)
+
+
+def as_ratio(text: str) -> str:
+    """'1.5/1' as '1.5:1', where a pure number is asked for.
+
+    >>> as_ratio("< 1.5/1")
+    '< 1.5:1'
+    """
+    return _RATIO.sub(r"\1:1", text)
+
+
+def without_setting_letter(text: str) -> str:
+    """'T0 - T10' as '0 - 10': settings of a tilt by their letter.
+
+    >>> without_setting_letter("T0 - T10")
+    '0 - 10'
+    """
+    return _SETTING.sub("", text)
 
 
 def _total(shown: Callable[[float], str]) -> Callable[[re.Match[str]], str]:

@@ -240,3 +240,45 @@ def test_an_upper_edge_under_to_beside_the_lower_one(tmp_path: Path) -> None:
         "A-1: D2 gain 17.5 dBi @1710-2170",
         "B-1: D3 gain 15 dBi @790-960",
     ]
+
+
+@pytest.mark.parametrize(
+    "cell",
+    [
+        "W356 x H1998 x D115 mm",
+        "1998 (H) x 356 (W) x 115 (D) mm",
+        "H1998 W356 D115",
+        "H: 1998, W: 356, D: 115 mm",
+    ],
+)
+def test_letters_beside_three_sizes_name_the_sides(tmp_path: Path, cell: str) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["Dimensions (H x W x D)", cell], ["Weight (kg)", 12]]
+    assert _lines(tmp_path, rows, "height", "width", "depth") == [
+        "X-1: B3 depth 0.115 m",
+        "X-1: B3 height 1.998 m",
+        "X-1: B3 width 0.356 m",
+    ]
+
+
+def test_cross_polar_figures_at_an_angle_are_those_of_the_sector(tmp_path: Path) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["XPD", "0°: >20 dB, ±60°: >10 dB"], ["Weight (kg)", 12]]
+    assert _lines(tmp_path, rows, "cross_polar_discrimination", "cross_polar_sector") == [
+        "X-1: B3 cross_polar_discrimination ≥20 dB",
+        "X-1: B3 cross_polar_sector ≥10 dB",
+    ]
+
+
+@pytest.mark.parametrize("cell", ["17,5 dBi (min. 17,0)", "17.5 typ, 17.0 min", "Min: 17.0 Typ: 17.5"])
+def test_each_word_bounds_the_figure_it_stands_beside(tmp_path: Path, cell: str) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", cell], ["Weight (kg)", 12], ["Height (mm)", 1300]]
+    assert _lines(tmp_path, rows, "gain") == ["X-1: B2 gain 17.5 dBi", "X-1: B2 gain ≥17 dBi"]
+
+
+def test_the_order_of_intermodulation_is_no_second_figure(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "X-1"],
+        ["Gain (dBi)", 17],
+        ["PIM", "< -150 dBc, 2 x 43 dBm, 3rd order"],
+        ["Weight (kg)", 12],
+    ]
+    assert _lines(tmp_path, rows, "passive_intermodulation") == ["X-1: B3 passive_intermodulation ≤-150 dBc"]

@@ -22,7 +22,7 @@ def part_by_plane(found: list[Found]) -> str:
     doubtful = any(one.figure.quantity.alternatives for one in spacings)
     if told_apart or doubtful or len({one.value for one in spacings}) < 2:
         if len(spacings) == 2 and not (told_apart or doubtful) and _PRODUCT.search(spacings[0].raw):
-            for one, plane in zip(spacings, _SPACINGS.values(), strict=True):  # equal: the order does not matter
+            for one, plane in zip(spacings, _SPACINGS.values(), strict=True):  # equal, in any order
                 one.parameter = plane
         return ""
     order = _ORDER.search(spacings[0].raw)

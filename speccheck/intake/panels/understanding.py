@@ -38,6 +38,7 @@ _COUNT_AND_FACTORS = re.compile(
     r"\s*\d{1,4}\b(?!\s*[x×*/])[^\d(\[]*[(\[]\s*\d{1,3}\s*[x×*]\s*\d", re.IGNORECASE
 )
 _FACTORS_BEHIND = re.compile(r"\s*(?:[(\[,:]|\d)")
+_SECTOR_DEG = 45.0
 _IDENTITY_UNITS = ("", "–", "-", "—")
 MOST_LETTERS = 120_000
 """Letters of different cells: time to understand grows with them, and catalogues repeat their figures."""
@@ -214,11 +215,19 @@ def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator
     if len(keys) == 1:
         for quantity in quantities:
             own = quantity.parameter if quantity.parameter in table else keys[0]
-            yield specified(own, quantity.condition), quantity
+            yield _at_sector_edge(specified(own, quantity.condition), quantity), quantity
             if own == "element_count":
                 yield from ((part.parameter, part) for part in array_of(quantity))
+    elif {quantity.parameter for quantity in quantities} == set(keys):
+        yield from ((quantity.parameter, quantity) for quantity in quantities)
     elif len(quantities) == len(keys) or len(keys) > len(quantities) >= _FEWEST_OF_SEVERAL.get(keys[0], 9):
         yield from zip(keys, quantities, strict=False)
+
+
+def _at_sector_edge(key: str, quantity: Quantity) -> str:
+    """'≥ 10 dB (±60°)' beside '≥ 20 dB (0°)' is the discrimination at the edge of the sector."""
+    wide = key == "cross_polar_discrimination" and abs(quantity.at.get("angle_deg", 0.0)) >= _SECTOR_DEG
+    return "cross_polar_sector" if wide else key
 
 
 def unit_of(context: Context) -> str:
