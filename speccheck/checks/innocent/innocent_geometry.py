@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from dataclasses import replace
 
-from speccheck.checks.innocent.conventions import Reach, innocent, reread, scaled, shifted
+from speccheck.checks.innocent.conventions import Reach, Transform, innocent, reread, scaled, shifted
 from speccheck.dictionary import parameters
 from speccheck.records import Panel, Reading
 
@@ -146,6 +146,26 @@ def calibration_counted(panel: Panel, reach: Reach) -> Panel:
     if calibration is None or isinstance(calibration.value, str):
         return panel
     return reread(panel, reach, ("rf_ports",), shifted(-calibration.nominal))
+
+
+def _joined(bands: int) -> Transform:
+    """Connectors of devices outside the panel, each with one connector for each of so many bands."""
+
+    def divided(reading: Reading) -> Reading:
+        return scaled(1 / bands)(reading) if reading.nominal % bands == 0 else reading
+
+    def reread_panel(panel: Panel, reach: Reach) -> Panel:
+        return reread(panel, reach, ("rf_ports",), divided) if len(panel.bands) >= bands else panel
+
+    return reread_panel
+
+
+for _device, _bands in (("diplexers", 2), ("triplexers", 3)):
+    innocent(
+        f"connectors of external {_device} counted",
+        f"the connectors counted are those of the panel or of external {_device}",
+        "rf_ports",
+    )(_joined(_bands))
 
 
 @innocent(

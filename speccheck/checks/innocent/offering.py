@@ -32,6 +32,8 @@ Rerun = Callable[[Panel], Examined]
 
 MISFIT = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
 LISTED = 5
+ASKED_CELLS = 4
+"""Cells that a question names: the claim and what it is held against stand first among those of a finding."""
 WORTH_ASKING = 3.0
 """Difference of log likelihood up to which the second reading is asked for beside the first: 20 to 1."""
 
@@ -174,8 +176,8 @@ def _keyed(findings: tuple[Finding, ...]) -> dict[Key, Finding]:
 
 def _completed(key: Key, finding: Finding, candidates: list[Candidate]) -> Finding:
     mine = [c for c in candidates if key in c.repaired][:LISTED]
-    cells = ", ".join(str(place) for place in finding.where)
     if not mine:
+        cells = ", ".join(str(place) for place in finding.where[:ASKED_CELLS])
         said = finding.question or "Please state the frequency, tilt and conditions these figures hold for."
         return replace(
             finding, assumptions=(*finding.assumptions, NONE_FITS), question=_with_cells(said, cells)
