@@ -66,7 +66,7 @@ def guard_band(requirement: Requirement, parameter: Parameter, settings: Setting
     if not width or not isinstance(limit, float | int):
         return width
     there = convert(float(limit), requirement.unit, parameter.unit)
-    return abs(convert(there + width, parameter.unit, requirement.unit) - float(limit))
+    return round(abs(convert(there + width, parameter.unit, requirement.unit) - float(limit)), 9)
 
 
 def _span(requirement: Requirement, parameter: Parameter, offered: Comparable, relation: Relation) -> Span:

@@ -26,7 +26,7 @@ class Grade:
 
 def settled(margin: float, scale: float) -> float:
     """Margin with float noise of unit conversion taken out: zero where the figures are equal."""
-    return 0.0 if abs(margin) <= _SLACK * max(1.0, abs(scale)) else margin
+    return 0.0 if abs(margin) <= _SLACK * max(1.0, abs(scale)) else round(margin, 9)
 
 
 def graded(

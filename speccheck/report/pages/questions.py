@@ -3,11 +3,22 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Callable, Iterator
+from collections.abc import Callable, Iterator, Mapping
 from dataclasses import dataclass, replace
 
-from speccheck.records import Assessment, Band, CellRef, Compliance, Fit, Level, MatrixRow, PanelAssessment
+from speccheck.records import (
+    Assessment,
+    Band,
+    CellRef,
+    Compliance,
+    Finding,
+    Fit,
+    Level,
+    MatrixRow,
+    PanelAssessment,
+)
 from speccheck.records.demands import WINDOW_UNKNOWN, blocked
+from speccheck.text import plain
 
 UNANSWERED = (Compliance.NOT_STATED, Compliance.NOT_JUDGED, Compliance.DECLARED_ONLY)
 
@@ -19,6 +30,12 @@ _ASKED = {
     Compliance.NOT_JUDGED: "{what} could not be judged from what the offer states. "
     "Please state the figure, with its unit and conditions.",
 }
+
+_OPEN_ANSWER = (
+    "The offer answers {what} with '{said}'. Please state the figure, with its unit and conditions."
+)
+_LONGEST_SAID = 60
+_OF_BAND = re.compile(r" for [\d.,]+–[\d.,]+ MHz(?=\.$)")
 
 _CELL = re.compile(r"\b[A-Z]{1,3}[1-9][0-9]*\b")
 _REWORD = "{what} cannot be judged as it is worded. The buyer settles the wording; no figure is asked yet."
@@ -50,25 +67,30 @@ class Question:
 
 
 def collect_questions(assessment: Assessment, label: Callable[[str], str]) -> tuple[Question, ...]:
-    """Questions of the findings, then of the requirement rows that no figure answers; none twice."""
+    """Questions of the findings, then of the requirement rows that no figure answers; none twice.
+
+    A figure that both a check and a requirement miss is asked for once, in the words of the requirement.
+    """
     questions: list[Question] = []
     for panel_number, panel in enumerate(assessment.panels, start=1):
         merged: dict[str, Question] = {}
-        for question in (*_from_findings(panel_number, panel), *_from_rows(panel_number, panel, label)):
+        rows = tuple(_from_rows(panel_number, panel, label))
+        words = {key: question.asked for key, question in reversed(rows)}
+        for question in (*_from_findings(panel_number, panel, words), *(question for _, question in rows)):
             known = merged.get(question.asked)
             merged[question.asked] = _joined(known, question) if known else question
         questions.extend(merged.values())
     return tuple(replace(question, number=i) for i, question in enumerate(questions, start=1))
 
 
-def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Question]:
+def _from_findings(panel_number: int, panel: PanelAssessment, words: Mapping[str, str]) -> Iterator[Question]:
     for index, finding in enumerate(panel.findings):
         if finding.question and finding.verdict is not Fit.FITS:
             rows = (row for row in panel.requirements if finding.check in row.in_doubt)
             yield Question(
                 panel_number=panel_number,
                 panel=panel.panel.name,
-                asked=finding.question,
+                asked=_in_words(finding, words),
                 problem=finding.summary,
                 clauses=tuple(dict.fromkeys(row.requirement.clause for row in rows)),
                 bands=(finding.band,) if finding.band else (),
@@ -77,7 +99,17 @@ def _from_findings(panel_number: int, panel: PanelAssessment) -> Iterator[Questi
             )
 
 
-def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str], str]) -> Iterator[Question]:
+def _in_words(finding: Finding, words: Mapping[str, str]) -> str:
+    """What a finding asks; where figures are missing, without its band, which stands beside the question."""
+    if len(finding.missing) == 1 and finding.missing[0] in words:
+        return words[finding.missing[0]]
+    return _OF_BAND.sub("", finding.question) if finding.missing else finding.question
+
+
+def _from_rows(
+    panel_number: int, panel: PanelAssessment, label: Callable[[str], str]
+) -> Iterator[tuple[str, Question]]:
+    """Parameter and question of each row that no figure answers."""
     for row in panel.requirements:
         window_unknown = WINDOW_UNKNOWN in row.note
         unanswered = row.verdict in UNANSWERED or window_unknown
@@ -87,18 +119,22 @@ def _from_rows(panel_number: int, panel: PanelAssessment, label: Callable[[str],
         name = label(row.requirement.parameter) if row.requirement.parameter else "this requirement"
         what = f"{name} (clause {row.requirement.clause})" if row.requirement.clause else name
         papers = row.requirement.operator == "evidence" and row.verdict is Compliance.DECLARED_ONLY
+        said = plain(row.statement.raw.strip(), _LONGEST_SAID) if row.statement else ""
         asked = _TOLERANCE if window_unknown else _PAPERS if papers else _ASKED[row.verdict]
+        if row.verdict is Compliance.NOT_STATED and said:
+            asked = _OPEN_ANSWER
         if blocked(row.requirement.doubts):
             asked = _REWORD
-        yield Question(
+        question = Question(
             panel_number=panel_number,
             panel=panel.panel.name,
-            asked=asked.format(what=what),
+            asked=asked.format(what=what, said=said),
             problem=row.note or row.requirement.wording,
             clauses=(row.requirement.clause,) if row.requirement.clause else (),
             bands=(row.band,) if row.band else (),
             where=_answer_cells(row),
         )
+        yield row.requirement.parameter, question
 
 
 def _answer_cells(row: MatrixRow) -> tuple[CellRef, ...]:
