@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 import sys
 import time
 from collections.abc import Callable, Iterable, Iterator, Sequence
@@ -18,6 +19,8 @@ from speccheck.text import plain
 _SYMBOLS = {Outcome.ACCEPTABLE: "✓", Outcome.CLARIFY: "?", Outcome.REJECT: "×"}
 _WIDTH = 100
 _BAR = 24
+_MORE = re.compile(r" \(\+\d+ more\)$")
+_MOST_LINES = 3
 _SECTIONS = ("Formula", "Assumptions", "Worked example")
 
 
@@ -101,17 +104,26 @@ def _blocks(reasons: Sequence[str]) -> str:
     return plain(reasons[0], 200) + more
 
 
+def _in_lines(text: str, width: int) -> list[str]:
+    """Text in lines of a width, three at most; how many more there are stays."""
+    more = found[0] if (found := _MORE.search(text)) else ""
+    lines = wrap(text, width) or [""]
+    if len(lines) > _MOST_LINES:
+        lines = wrap(text, width, max_lines=_MOST_LINES, placeholder=f" …{more}")
+    return lines
+
+
 def _table(head: tuple[str, ...], rows: Sequence[tuple[str, ...]]) -> str:
     widths = [max(len(row[i]) for row in [head, *rows]) for i in range(len(head) - 1)]
     last = max(20, _WIDTH - sum(widths) - 2 * len(widths))
 
-    def line(row: Sequence[str]) -> str:
-        cells = [cell.ljust(width) for cell, width in zip(row, widths, strict=False)]
-        end = row[-1] if len(row[-1]) <= last else row[-1][: last - 1] + "…"
-        return "  ".join([*cells, end]).rstrip()
+    def lines(row: Sequence[str]) -> Iterator[str]:
+        for at, end in enumerate(_in_lines(row[-1], last)):
+            cells = [(cell if at == 0 else "").ljust(width) for cell, width in zip(row, widths, strict=False)]
+            yield "  ".join([*cells, end]).rstrip()
 
     rule = "─" * min(_WIDTH, sum(widths) + 2 * len(widths) + last)
-    return "\n".join([line(head), rule, *(line(row) for row in rows)])
+    return "\n".join([*lines(head), rule, *(line for row in rows for line in lines(row))])
 
 
 def list_of_checks(checks: Iterable[Check]) -> str:
@@ -137,14 +149,18 @@ def explanation(check: Check) -> str:
     return "\n".join(
         [
             f"{check.title}  ({check.slug})",
-            f"Judges      {scope}",
-            f"Needs       {labels(check.needs)}",
-            f"Uses        {labels(check.optional)}",
-            f"Source      {check.source}",
+            *_named("Judges", scope),
+            *_named("Needs", labels(check.needs)),
+            *_named("Uses", labels(check.optional)),
+            *_named("Source", check.source),
             "",
             *_filled(check.explanation),
         ]
     )
+
+
+def _named(name: str, text: str) -> list[str]:
+    return wrap(text, _WIDTH, initial_indent=f"{name:<12}", subsequent_indent=" " * 12)
 
 
 def _filled(text: str) -> Iterator[str]:
