@@ -279,6 +279,8 @@ class AcrossReader:
                 where = next(c for r in rows if (c := self._grid.cells.get((r, index))) is not None)
             heading = found.column.heading[:80]
             unknown = f"column heading '{heading}' is not in the dictionary"
+            if found.role == "superseded":
+                unknown = f"column '{heading}' holds figures of an earlier year"
             reason = unknown if heading else "a column without a heading"
             nearest = self._marks.labels.suggestion(found.label.text)
             self._result.unread.append((where, f"{reason}; its {found.misses} cells were not read", nearest))

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import re
+from collections import defaultdict
 from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell, Grid
@@ -18,6 +19,7 @@ from speccheck.intake.tables.regions import Across
 
 _NAME_KEYS = ("model", "panel_type", "part_number")
 _LOOKED_AT = 40
+_YEAR = re.compile(r"^(?!.*Hz).*?(?<![\d.,/–-])(20[12]\d)(?![\d.,/–-])", re.IGNORECASE)
 _TILT = re.compile(r"\s*\d+(?:[.,]\d+)?\s*°?\s*")
 
 
@@ -57,7 +59,32 @@ def describe_fields(marks: Marks, table: Across) -> dict[int, Field]:
     rows = [*table.heading_rows, *table.data_rows]
     within = (c.column for row in rows for c in marks.rows.get(row, ()))
     used = sorted({column for column in within if table.left <= column <= table.right})
-    return {index: _describe(marks, table, index) for index in used}
+    fields = {index: _describe(marks, table, index) for index in used}
+    for found in _of_earlier_years(fields):
+        found.label, found.role = Label(found.label.text), "superseded"
+    return fields
+
+
+def _of_earlier_years(fields: dict[int, Field]) -> list[Field]:
+    """Columns such as 'Gain 2025' beside 'Gain' or 'Gain 2026': figures of an earlier year are no claims."""
+    alike: dict[object, list[Field]] = defaultdict(list)
+    for found in fields.values():
+        if found.label:
+            column = found.column
+            key = (
+                found.label.parameters,
+                column.band or column.band_name,
+                column.statistic,
+                column.condition,
+            )
+            alike[key].append(found)
+    earlier = []
+    for several in alike.values():
+        years = [_YEAR.search(found.column.heading) for found in several]
+        newest = max((year[1] for year in years if year), default="")
+        plain = not all(years)
+        earlier += [f for f, y in zip(several, years, strict=True) if y and (plain or y[1] < newest)]
+    return earlier
 
 
 def _describe(marks: Marks, table: Across, index: int) -> Field:

@@ -171,6 +171,10 @@ class DownReader:
                 self._result.mark(cell, "note")
             elif column.role in VALUE_ROLES and cell is not extra.band:
                 self._claim(cell, label, extra)
+            elif column.role == "superseded":
+                reason = f"column '{column.heading[:60]}' holds figures of an earlier issue"
+                self._result.unread.append((cell, reason, ""))
+                self._result.mark(cell, "unread")
             else:
                 self._result.mark(cell, "note" if column.role == "remark" else "label")
         take_answers(

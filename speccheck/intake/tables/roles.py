@@ -5,6 +5,7 @@ from __future__ import annotations
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import is_unit
+from speccheck.intake.tables.versions import settle_versions
 from speccheck.intake.tables.words import answer, column_role
 
 _ANSWERS, _SILENT = 0.6, 0.4
@@ -30,6 +31,7 @@ def settle_roles(
     _details_before_values(columns, cells)
     _offer_beside_requirement(columns)
     _several_offers(columns)
+    settle_versions(columns)
     if not any(c.role in ("", "offered", "panel", "typical", "minimum", "maximum") for c in columns.values()):
         for column in columns.values():
             if column.role in ("condition", "compliance", "group", "band"):

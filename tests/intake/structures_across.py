@@ -1,4 +1,4 @@
-"""Small bids, each with one structure, and their readings by hand: rows, merges, expected lines."""
+"""Small bids with headings across, one structure each; rows, merges, and their readings by hand."""
 
 from __future__ import annotations
 
@@ -6,7 +6,7 @@ from intake.sheets import Rows
 
 _ = None
 
-STRUCTURES: dict[str, tuple[Rows, tuple[str, ...], str]] = {
+ACROSS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
     "group rows first, merged and in the middle; page numbers, sums, repeated headings": (
         [
             ["Type", "Freq. (MHz)", "Gain (dBi)", "VSWR", "Ports"],
@@ -135,129 +135,29 @@ STRUCTURES: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         TM-4: D2 gain 15 dBi @694-960
         TM-4: D3 gain 14.6 dBi @694-960""",
     ),
-    "arrays by name over a row of bands": (
+    "counts with their nouns beside headings of groups": (
         [
-            ["Typ: BR-306-65"],
-            [],
-            ["Merkmal", "Einheit", "Array R1", "Array Y1", "Array P1"],
-            ["Frequenzbereich", "MHz", "694 – 960", "1695 – 2180", "3300 – 3800"],
-            ["Gewinn", "dBi", "16,3", "18,0", "17,5"],
-            ["VSWR", "–", "< 1,5", _, _],
-            ["Gewicht", "kg", "29,4", _, _],
+            ["Unit", _, "Array", _],
+            ["Model", "Band (MHz)", "Antenna array", "Sub-array (V x H)"],
+            ["SAU-64", "3400 - 3800", "192 elements (12x8x2)", "3 x 1"],
+            ["SAU-32", "３３００～３８００", "128 elements (8x8x2)", "4 x 1"],
         ],
-        ("C6:E6", "C7:E7"),
-        """BR-306-65: C4 operating_bands 694..960 MHz @694-960
-        BR-306-65: D4 operating_bands 1695..2180 MHz @1695-2180
-        BR-306-65: E4 operating_bands 3300..3800 MHz @3300-3800
-        BR-306-65: C5 gain 16.3 dBi @694-960
-        BR-306-65: D5 gain 18 dBi @1695-2180
-        BR-306-65: E5 gain 17.5 dBi @3300-3800
-        BR-306-65: C6 vswr ≤1.5
-        BR-306-65: C7 weight 29.4 kg""",
-    ),
-    "arrays by place and colour": (
-        [
-            ["Panel BR-20"],
-            ["Parameter", "Red", "Yellow left"],
-            ["Frequency range (MHz)", "694-960", "1695-2180"],
-            ["Gain (dBi)", 16, 18],
-        ],
-        (),
-        """BR-20: B3 operating_bands 694..960 MHz @694-960
-        BR-20: C3 operating_bands 1695..2180 MHz @1695-2180
-        BR-20: B4 gain 16 dBi @694-960
-        BR-20: C4 gain 18 dBi @1695-2180""",
-    ),
-    "blocks of arrays below one another, and what holds for the whole panel": (
-        [
-            ["HX-10P"],
-            ["R1 | 694–960 MHz | ports 1–2", _, _],
-            ["Gain", 16.1, "dBi"],
-            ["P1 | 3300–4200 MHz | ports 3–4", _, _],
-            ["Gain", 17.9, "dBi"],
-            ["All arrays", _, _],
-            ["VSWR", "≤ 1.5", _],
-            ["Mechanics", _, _],
-            ["Weight", 36.5, "kg"],
-        ],
-        ("A2:C2", "A4:C4", "A6:C6", "A8:C8"),
-        """HX-10P: A2 operating_bands 694..960 MHz @694-960
-        HX-10P: B3 gain 16.1 dBi @694-960
-        HX-10P: A4 operating_bands 3300..4200 MHz @3300-4200
-        HX-10P: B5 gain 17.9 dBi @3300-4200
-        HX-10P: B7 vswr ≤1.5
-        HX-10P: B9 weight 36.5 kg""",
-    ),
-    "statistics among other words over columns": (
-        [
-            ["Type AX-24"],
-            ["Merkmal / Characteristic", "Einheit / Unit", "Typical", "Guaranteed min", "Guaranteed max"],
-            ["Frequenz / Frequency", "MHz", "3300-3600"],
-            ["Gewinn / Gain", "dBi", 24.6, 23.9, _],
-            ["VSWR", "–", 1.3, _, 1.5],
-            ["Gewicht / Weight", "kg", 22, _, _],
-        ],
-        ("C6:E6",),
-        """AX-24: C3 frequency_range 3300..3600 MHz
-        AX-24: C3 operating_bands 3300..3600 MHz @3300-3600
-        AX-24: C4 gain 24.6 dBi @3300-3600
-        AX-24: D4 gain ≥23.9 dBi @3300-3600
-        AX-24: C5 vswr 1.3 @3300-3600
-        AX-24: E5 vswr ≤1.5 @3300-3600
-        AX-24: C6 weight 22 kg""",
-    ),
-    "tilts and planes over columns": (
-        [
-            ["Panel KD-20"],
-            ["Parameter", "Unit", "Tilt 0°", "Tilt 10°"],
-            ["Gain", "dBi", 15, 14.7],
-            [],
-            ["Parameter", "Unit", "Horizontal", "Vertical"],
-            ["HPBW", "°", 65, 12],
-        ],
-        (),
-        """KD-20: C3 gain 15 dBi
-        KD-20: D3 gain 14.7 dBi
-        KD-20: C6 horizontal_beamwidth 65 deg
-        KD-20: D6 vertical_beamwidth 12 deg""",
-    ),
-    "names merged down beside two tables": (
-        [
-            ["KD-20", "Parameter", "Value"],
-            [_, "Frequency", "694-960 MHz"],
-            [_, "Gain", "15 dBi"],
-            ["KD-21", "Parameter", "Value"],
-            [_, "Frequency", "1710-2690 MHz"],
-            [_, "Gain", "17 dBi"],
-        ],
-        ("A1:A3", "A4:A6"),
-        """KD-20: C2 frequency_range 694..960 MHz
-        KD-20: C2 operating_bands 694..960 MHz @694-960
-        KD-20: C3 gain 15 dBi @694-960
-        KD-21: C5 frequency_range 1710..2690 MHz
-        KD-21: C5 operating_bands 1710..2690 MHz @1710-2690
-        KD-21: C6 gain 17 dBi @1710-2690""",
-    ),
-    "a form with its model above the heading row": (
-        [
-            ["Offered model:", _, "HX-69"],
-            [],
-            ["Item", "Requirement", "Required", "Offered", "Comply (Y/N)"],
-            ["A  Electrical"],
-            ["1.1", "Gain", "≥ 15 dBi", "15.8 dBi", "Y"],
-            ["1.2", "VSWR", "≤ 1.5", "≤ 1.45", "Y"],
-        ],
-        (),
-        """HX-69: C1 model HX-69
-        HX-69: D5 gain 15.8 dBi
-        HX-69: D6 vswr ≤1.45""",
-    ),
-    "the range in a panel's title, where nothing else tells": (
-        [["Panel KD-12, 694–960 MHz"], ["Parameter", "Value"], ["Gain", "15 dBi"], ["Weight", "12 kg"]],
-        (),
-        """KD-12: A1 frequency_range 694..960 MHz
-        KD-12: A1 operating_bands 694..960 MHz @694-960
-        KD-12: B3 gain 15 dBi @694-960
-        KD-12: B4 weight 12 kg""",
+        ("A1:B1", "C1:D1"),
+        """SAU-64: B3 frequency_range 3400..3800 MHz
+        SAU-64: B3 operating_bands 3400..3800 MHz @3400-3800
+        SAU-64: C3 element_count 192
+        SAU-64: C3 array_rows 12
+        SAU-64: C3 array_columns 8
+        SAU-64: C3 polarisations 2
+        SAU-64: D3 subarray_rows 3
+        SAU-64: D3 subarray_columns 1
+        SAU-32: B4 frequency_range 3300..3800 MHz
+        SAU-32: B4 operating_bands 3300..3800 MHz @3300-3800
+        SAU-32: C4 element_count 128
+        SAU-32: C4 array_rows 8
+        SAU-32: C4 array_columns 8
+        SAU-32: C4 polarisations 2
+        SAU-32: D4 subarray_rows 4
+        SAU-32: D4 subarray_columns 1""",
     ),
 }

@@ -1,0 +1,150 @@
+"""Small bids with headings down the side, one structure each; rows, merges, and their readings by hand."""
+
+from __future__ import annotations
+
+from intake.sheets import Rows
+
+_ = None
+
+DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
+    "arrays by name over a row of bands": (
+        [
+            ["Typ: BR-306-65"],
+            [],
+            ["Merkmal", "Einheit", "Array R1", "Array Y1", "Array P1"],
+            ["Frequenzbereich", "MHz", "694 – 960", "1695 – 2180", "3300 – 3800"],
+            ["Gewinn", "dBi", "16,3", "18,0", "17,5"],
+            ["VSWR", "–", "< 1,5", _, _],
+            ["Gewicht", "kg", "29,4", _, _],
+        ],
+        ("C6:E6", "C7:E7"),
+        """BR-306-65: C4 operating_bands 694..960 MHz @694-960
+        BR-306-65: D4 operating_bands 1695..2180 MHz @1695-2180
+        BR-306-65: E4 operating_bands 3300..3800 MHz @3300-3800
+        BR-306-65: C5 gain 16.3 dBi @694-960
+        BR-306-65: D5 gain 18 dBi @1695-2180
+        BR-306-65: E5 gain 17.5 dBi @3300-3800
+        BR-306-65: C6 vswr ≤1.5
+        BR-306-65: C7 weight 29.4 kg""",
+    ),
+    "arrays by place and colour": (
+        [
+            ["Panel BR-20"],
+            ["Parameter", "Red", "Yellow left"],
+            ["Frequency range (MHz)", "694-960", "1695-2180"],
+            ["Gain (dBi)", 16, 18],
+        ],
+        (),
+        """BR-20: B3 operating_bands 694..960 MHz @694-960
+        BR-20: C3 operating_bands 1695..2180 MHz @1695-2180
+        BR-20: B4 gain 16 dBi @694-960
+        BR-20: C4 gain 18 dBi @1695-2180""",
+    ),
+    "blocks of arrays below one another, and what holds for the whole panel": (
+        [
+            ["HX-10P"],
+            ["R1 | 694–960 MHz | ports 1–2", _, _],
+            ["Gain", 16.1, "dBi"],
+            ["P1 | 3300–4200 MHz | ports 3–4", _, _],
+            ["Gain", 17.9, "dBi"],
+            ["All arrays", _, _],
+            ["VSWR", "≤ 1.5", _],
+            ["Mechanics", _, _],
+            ["Weight", 36.5, "kg"],
+        ],
+        ("A2:C2", "A4:C4", "A6:C6", "A8:C8"),
+        """HX-10P: A2 operating_bands 694..960 MHz @694-960
+        HX-10P: B3 gain 16.1 dBi @694-960
+        HX-10P: A4 operating_bands 3300..4200 MHz @3300-4200
+        HX-10P: B5 gain 17.9 dBi @3300-4200
+        HX-10P: B7 vswr ≤1.5
+        HX-10P: B9 weight 36.5 kg""",
+    ),
+    "statistics among other words over columns": (
+        [
+            ["Type AX-24"],
+            ["Merkmal / Characteristic", "Einheit / Unit", "Typical", "Guaranteed min", "Guaranteed max"],
+            ["Frequenz / Frequency", "MHz", "3300-3600"],
+            ["Gewinn / Gain", "dBi", 24.6, 23.9, _],
+            ["VSWR", "–", 1.3, _, 1.5],
+            ["Gewicht / Weight", "kg", 22, _, _],
+        ],
+        ("C6:E6",),
+        """AX-24: C3 frequency_range 3300..3600 MHz
+        AX-24: C3 operating_bands 3300..3600 MHz @3300-3600
+        AX-24: C4 gain 24.6 dBi @3300-3600
+        AX-24: D4 gain ≥23.9 dBi @3300-3600
+        AX-24: C5 vswr 1.3 @3300-3600
+        AX-24: E5 vswr ≤1.5 @3300-3600
+        AX-24: C6 weight 22 kg""",
+    ),
+    "tilts and planes over columns": (
+        [
+            ["Panel KD-20"],
+            ["Parameter", "Unit", "Tilt 0°", "Tilt 10°"],
+            ["Gain", "dBi", 15, 14.7],
+            [],
+            ["Parameter", "Unit", "Horizontal", "Vertical"],
+            ["HPBW", "°", 65, 12],
+        ],
+        (),
+        """KD-20: C3 gain 15 dBi
+        KD-20: D3 gain 14.7 dBi
+        KD-20: C6 horizontal_beamwidth 65 deg
+        KD-20: D6 vertical_beamwidth 12 deg""",
+    ),
+    "names merged down beside two tables": (
+        [
+            ["KD-20", "Parameter", "Value"],
+            [_, "Frequency", "694-960 MHz"],
+            [_, "Gain", "15 dBi"],
+            ["KD-21", "Parameter", "Value"],
+            [_, "Frequency", "1710-2690 MHz"],
+            [_, "Gain", "17 dBi"],
+        ],
+        ("A1:A3", "A4:A6"),
+        """KD-20: C2 frequency_range 694..960 MHz
+        KD-20: C2 operating_bands 694..960 MHz @694-960
+        KD-20: C3 gain 15 dBi @694-960
+        KD-21: C5 frequency_range 1710..2690 MHz
+        KD-21: C5 operating_bands 1710..2690 MHz @1710-2690
+        KD-21: C6 gain 17 dBi @1710-2690""",
+    ),
+    "a form with its model above the heading row": (
+        [
+            ["Offered model:", _, "HX-69"],
+            [],
+            ["Item", "Requirement", "Required", "Offered", "Comply (Y/N)"],
+            ["A  Electrical"],
+            ["1.1", "Gain", "≥ 15 dBi", "15.8 dBi", "Y"],
+            ["1.2", "VSWR", "≤ 1.5", "≤ 1.45", "Y"],
+        ],
+        (),
+        """HX-69: C1 model HX-69
+        HX-69: D5 gain 15.8 dBi
+        HX-69: D6 vswr ≤1.45""",
+    ),
+    "the range in a panel's title, where nothing else tells": (
+        [["Panel KD-12, 694–960 MHz"], ["Parameter", "Value"], ["Gain", "15 dBi"], ["Weight", "12 kg"]],
+        (),
+        """KD-12: A1 frequency_range 694..960 MHz
+        KD-12: A1 operating_bands 694..960 MHz @694-960
+        KD-12: B3 gain 15 dBi @694-960
+        KD-12: B4 weight 12 kg""",
+    ),
+    "a place in the band as the only condition that names one": (
+        [
+            ["Product", "ORK-21"],
+            [],
+            ["Parameter", "Condition", "Min.", "Typ.", "Unit"],
+            ["Frequency range", _, _, "1920–2170", "MHz"],
+            ["Gain", "mid band", 17.4, 17.9, "dBi"],
+        ],
+        (),
+        """ORK-21: B1 model ORK-21
+        ORK-21: D4 frequency_range 1920..2170 MHz
+        ORK-21: D4 operating_bands 1920..2170 MHz @1920-2170
+        ORK-21: C5 gain ≥17.4 dBi @1920-2170
+        ORK-21: D5 gain 17.9 dBi @1920-2170""",
+    ),
+}
