@@ -21,6 +21,10 @@ _TRIANGULAR = re.compile(
     r"triang|hexag|stagger|offset|dreieck|versetzt|decal|décal|trójk|driehoek", re.IGNORECASE
 )
 
+_GROUP_PITCH = re.compile(
+    r"d\s?g[\s_,]*h\s*[=:]?\s*(\d+(?:[.,]\d+)?)\s*(λ|wl|lambda|mm|cm|m)\b", re.IGNORECASE
+)
+
 SECTOR_COLUMN_AZ_DEG = 65.0
 """Azimuth width [deg] taken for one column when the bid states none (TR 38.901 Table 7.3-1)."""
 
@@ -43,6 +47,8 @@ class Model:
     used: tuple[Reading, ...]
     assumptions: tuple[str, ...]
     groups: int = 1
+    group_pitch_m: float = 0.0
+    """First column to first column of neighbouring panel groups [m]; 0 where not stated."""
 
     @property
     def low_hz(self) -> float:
@@ -68,7 +74,13 @@ class Model:
         return self.layout.horizontal_pitch_m * freq_hz / SPEED_OF_LIGHT_MPS
 
     def with_columns(self, columns: int) -> Model:
-        """The same array with so many columns forming the beam."""
+        """The same array with so many columns forming the beam; panel groups at their stated distance."""
+        own = self.layout.columns
+        if columns > own and columns % own == 0 and self.group_pitch_m > 0:
+            side_by_side = replace(
+                self.layout, panel_columns=columns // own, panel_horizontal_pitch_m=self.group_pitch_m
+            )
+            return replace(self, layout=side_by_side)
         grouped = self.layout.subarray_columns if columns % self.layout.subarray_columns == 0 else 1
         pitch = self.layout.horizontal_pitch_m
         if columns > 1 and pitch <= 0:
@@ -169,8 +181,9 @@ def model_of(case: Case, plane: Plane = "both") -> Model | Lacking:
         subarray_tilt_deg=tilt,
         lattice=_lattice(maker),
     )
-    groups = _groups(maker)
-    return Model(case.band, layout, _unique(maker.used), tuple(dict.fromkeys(maker.assumptions)), groups)
+    groups, group_pitch = _groups(maker), _group_pitch_m(maker, columns * horizontal)
+    assumed = tuple(dict.fromkeys(maker.assumptions))
+    return Model(case.band, layout, _unique(maker.used), assumed, groups, group_pitch)
 
 
 def _unique(readings: list[Reading]) -> tuple[Reading, ...]:
@@ -197,6 +210,23 @@ def _groups(maker: _Maker) -> int:
         return 1
     maker.assumptions.append(f"{groups} panel groups may form one beam each or one beam together.")
     return groups
+
+
+def _group_pitch_m(maker: _Maker, own_width_m: float) -> float:
+    """Pitch [m] of panel groups side by side (d_g,H of TR 38.901), where it is stated beside their number.
+
+    Groups do not overlap: a pitch below the width of one is the gap between them.
+    """
+    found = _GROUP_PITCH.search(maker.text("panel_groups"))
+    if found is None:
+        return 0.0
+    figure, unit = float(found[1].replace(",", ".")), found[2].lower()
+    wavelength_m = SPEED_OF_LIGHT_MPS / (sum(maker.band) / 2 * 1e6)
+    stated = figure * {"mm": 1e-3, "cm": 1e-2, "m": 1.0}.get(unit, wavelength_m)
+    if stated >= own_width_m * (1 - 1e-6):
+        return stated
+    maker.assumptions.append(f"{found[0].strip()} taken as the gap between panel groups: they would overlap.")
+    return own_width_m + stated
 
 
 def _lattice(maker: _Maker) -> Lattice:

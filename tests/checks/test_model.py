@@ -89,6 +89,22 @@ def test_staggered_lattice_is_recognised(word: str) -> None:
     assert model(lattice=word).layout.lattice is Lattice.TRIANGULAR
 
 
+def test_groups_stand_at_their_stated_distance() -> None:
+    """3GPP TR 38.901 clause 7.3: d_g,H runs from first element to first element; 8 at 41.5 mm take 332 mm."""
+    apart = model(panel_groups="1 x 2, dgH = 400 mm")
+    assert apart.with_columns(16).layout.width_m == pytest.approx(0.400 + 0.332)
+    assert apart.with_columns(8).layout.width_m == pytest.approx(0.332)
+    assert model(panel_groups="1 x 2").with_columns(16).layout.width_m == pytest.approx(2 * 0.332)
+    wavelength_m = 299_792_458 / 3.55e9
+    assert model(panel_groups="1 x 2; dgH 5 λ").group_pitch_m == pytest.approx(5 * wavelength_m)
+
+
+def test_a_distance_below_the_width_of_a_group_is_the_gap() -> None:
+    gap = model(panel_groups="1 x 2, dgH = 20 mm")
+    assert gap.group_pitch_m == pytest.approx(0.332 + 0.020)
+    assert any("gap" in text for text in gap.assumptions)
+
+
 def test_groups_are_counted_and_said() -> None:
     assert model(panel_groups="1 x 2").groups == 2
     assert model(panel_groups="multi-panel").groups == 1
