@@ -1,4 +1,4 @@
-"""Sizes whose figures carry the letter of their side: 'H1998 W356 D115', '356 (W) x 1998 (H) x 115 (D) mm'."""
+"""Sizes with letters of their sides: 'H1998 W356 D115', '356 (W) x 1998 (H) x 115 (D) mm'."""
 
 from __future__ import annotations
 
