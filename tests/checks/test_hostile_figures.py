@@ -9,7 +9,8 @@ from checks.cases import panel_of
 from hypothesis import HealthCheck, given, settings
 from hypothesis import strategies as st
 
-from speccheck.checks import exposure_note
+from speccheck.checks import examine, exposure_note
+from speccheck.checks.innocent.conventions import INNOCENT_READINGS, Reach
 from speccheck.checks.registry import CHECKS
 from speccheck.checks.runner import run_checks
 from speccheck.dictionary import parameters
@@ -65,6 +66,16 @@ def test_no_check_stops(panel):
         assert "stopped with" not in finding.summary, finding.summary
         assert finding.check in CHECKS
         assert all(math.isfinite(f) for f in figures_in(finding)), finding
+
+
+@settings(max_examples=60, deadline=None, suppress_health_check=list(HealthCheck))
+@given(panel=panels())
+def test_no_innocent_reading_fails_and_none_shows_a_figure_without_end(panel):
+    for reading in INNOCENT_READINGS.values():
+        for reach in (Reach(), *(Reach((band,)) for band in panel.bands)):
+            reading.reread(panel, reach)
+    shown = [c.value for finding in examine(panel, Settings()) for c in finding.conventions]
+    assert all(math.isfinite(value) for value in shown if isinstance(value, float))
 
 
 def figures_in(finding: Finding) -> list[float]:
