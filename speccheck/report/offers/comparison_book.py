@@ -2,7 +2,8 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Sequence
+from collections.abc import Collection, Iterator, Sequence
+from dataclasses import dataclass
 
 from speccheck.records import Compliance, Outcome, Requirement, Value
 from speccheck.records.evaluations import Evaluation, OfferCell
@@ -168,17 +169,30 @@ def _rows(view: Comparison) -> Table:
             Column(heading="Without deviation", width=17),
             Column(heading="Note", width=60, look="wrap"),
         ),
-        rows=[row for column in view.columns for row in _offer_rows(view, column)],
+        rows=_AllRows(view),
         frozen=3,
     )
 
 
+@dataclass(frozen=True, slots=True)
+class _AllRows(Collection[Sequence[Content]]):
+    """Rows made as they are written: of many offers they would take more memory than all the rest."""
+
+    view: Comparison
+
+    def __iter__(self) -> Iterator[Sequence[Content]]:
+        return (row for column in self.view.columns for row in _offer_rows(self.view, column))
+
+    def __len__(self) -> int:
+        return sum(len(column.offer.cells) for column in self.view.columns)
+
+    def __contains__(self, row: object) -> bool:
+        return any(row == one for one in self)
+
+
 def _offer_rows(view: Comparison, column: OfferColumn) -> Iterator[Sequence[Content]]:
-    tender = view.evaluation.tender
-    for cell in column.offer.cells if tender else ():
-        requirement = tender.requirements[cell.requirement] if tender else None
-        if requirement is None:
-            continue
+    for cell in column.offer.cells:
+        requirement = view.requirements[cell.requirement]
         yield (
             column.number, column.name, requirement.clause, requirement.level.value,
             label(requirement.parameter) if requirement.parameter else requirement.wording,

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Mapping, Sequence
+from collections.abc import Collection, Mapping, Sequence
 from dataclasses import dataclass, field
 from datetime import date, datetime
 
@@ -43,7 +43,7 @@ class Table:
 
     name: str
     columns: Sequence[Column]
-    rows: Sequence[Sequence[Content]]
+    rows: Collection[Sequence[Content]]
     frozen: int = 1
     printed: int = 0
     spare_rows: int = 0
