@@ -146,7 +146,7 @@ def test_conveniences_of_every_table(book, name):
     assert sheet.freeze_panes[1:] == "2"
     assert sheet.auto_filter.ref.startswith("A1:")
     setup = sheet.page_setup
-    assert (setup.orientation, setup.fitToWidth, setup.fitToHeight) == ("landscape", 1, 0)
+    assert (setup.orientation, setup.fitToHeight) == ("landscape", 0)
     assert sheet.sheet_properties.pageSetUpPr.fitToPage
     assert sheet.print_title_rows == "$1:$1"
     assert sheet.print_area
@@ -160,6 +160,20 @@ def test_conveniences_of_every_table(book, name):
     headings = [cell.value for cell in sheet[1]]
     assert all(headings)
     assert len(set(headings)) == len(headings)
+
+
+@pytest.mark.parametrize("name", ["Read me", "Summary", "Findings", "Requirements", "Questions", "Input 1"])
+def test_print_stays_readable_and_names_its_rows(book, name):
+    """Letters of 7 points at least on A4: a character of 11 points is 7 of 96 pixels an inch wide
+    (ISO/IEC 29500-1, 18.3.1.13, Calibri), and 297 mm less two margins of 0.6 inch hold what is printed."""
+    sheet = book[name]
+    _, _, last, _ = openpyxl.utils.range_boundaries(sheet.print_area.rpartition("!")[2].replace("$", ""))
+    letters = (openpyxl.utils.get_column_letter(n) for n in range(1, last + 1))
+    inches = sum(sheet.column_dimensions[letter].width for letter in letters) * 7 / 96
+    across = sheet.page_setup.fitToWidth
+    repeated = sheet.print_title_cols
+    assert 11 * across * (297 / 25.4 - 1.2) / inches >= 7
+    assert bool(repeated) == (across > 1)
 
 
 def test_status_colours_follow_the_word(book):

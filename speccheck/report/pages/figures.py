@@ -10,7 +10,7 @@ from speccheck.report.pages.array_figures import draw
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.exposure_figures import exposure_figures
 from speccheck.report.pages.formats import Numbers
-from speccheck.report.pages.offer_figures import coverage_chart, interval_chart, margin_chart
+from speccheck.report.pages.offer_figures import coverage_chart, interval_charts, margin_chart
 
 
 @dataclass(frozen=True, slots=True)
@@ -28,7 +28,7 @@ def panel_figures(panel: PanelAssessment, numbers: Numbers, label: Callable[[str
     for band in (*panel.panel.bands, None):
         own = (f for f in panel.findings if f.band == band)
         drawn = (draw(drawing, numbers) for drawing in panel.drawings if drawing.band == band)
-        by_band[band] = _present((interval_chart(own, numbers, band), *drawn))
+        by_band[band] = _present((*interval_charts(own, numbers, band), *drawn))
     return PanelFigures(
         overview=_present((margin_chart(panel, numbers, label), coverage_chart(panel, numbers, label))),
         by_band=by_band,

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import textwrap
-from collections.abc import Callable, Iterable
+from collections.abc import Callable, Iterable, Iterator, Sequence
 
 from speccheck.records import Band, Compliance, Finding, Fit, Interval, MatrixRow, PanelAssessment
 from speccheck.report.pages.canvas import Canvas, Figure, Scale
@@ -22,6 +22,7 @@ _DRAWN = {
 }
 FULL = 640
 MOST_ROWS = 24
+MOST_CLAIMS, CLAIM_HEIGHT = 10, 37
 _LAYERS = {style: i for i, style in enumerate(("grid", "expected", "zero"))}
 """What lies below what in a chart whose rows do not meet; marks lie on top."""
 
@@ -110,14 +111,35 @@ def _closest(rows: Iterable[tuple[MatrixRow, float]], numbers: Numbers, label: L
     return f"{_row_name(row, numbers, label)} ({numbers.signed(row.margin or 0.0, row.requirement.unit)})"
 
 
-def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | None) -> Figure | None:
-    """Claims as marks on the intervals that physics and arithmetic allow, each on its own scale."""
-    shown = [f for f in findings if f.verdict is not Fit.NOT_JUDGED and _ends(f) is not None][:MOST_ROWS]
-    if not shown:
-        return None
-    canvas = Canvas(FULL, 26 + 37 * len(shown), numbers)
-    for i, finding in enumerate(shown):
-        y = 14 + 37 * i
+def interval_charts(findings: Iterable[Finding], numbers: Numbers, band: Band | None) -> tuple[Figure, ...]:
+    """Claims as marks on the intervals that physics and arithmetic allow, each on its own scale.
+
+    Those outside come first; a chart holds few enough rows that a page is not left half empty before it.
+    """
+    shown = [f for f in findings if f.verdict is not Fit.NOT_JUDGED and _ends(f) is not None]
+    outside = [f for f in shown if f.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
+    inside = [f for f in shown if f.verdict not in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
+    where = "" if band is None else f" of {numbers.band(band)}"
+    said = f"{len(outside)} of {len(shown)} claims{where} are outside what is expected, or at its edge"
+    others = f"The other {len(inside)} claims" if outside else _all(len(inside), "claim")
+    return (
+        *_charts(outside, said, numbers),
+        *_charts(inside, f"{others}{where} inside what is expected", numbers),
+    )
+
+
+def _charts(findings: Sequence[Finding], title: str, numbers: Numbers) -> Iterator[Figure]:
+    """One chart, or several of about the same size."""
+    parts = -(-len(findings) // MOST_CLAIMS)
+    for part in range(parts):
+        rows = findings[part * len(findings) // parts : (part + 1) * len(findings) // parts]
+        yield _chart(rows, title if parts == 1 else f"{title}, part {part + 1} of {parts}", numbers)
+
+
+def _chart(findings: Sequence[Finding], title: str, numbers: Numbers) -> Figure:
+    canvas = Canvas(FULL, 26 + CLAIM_HEIGHT * len(findings), numbers)
+    for i, finding in enumerate(findings):
+        y = 14 + CLAIM_HEIGHT * i
         mark = mark_for(finding.verdict)
         lines = textwrap.wrap(finding.title, 46, max_lines=2, placeholder="…")
         for at, line in enumerate(lines):
@@ -125,22 +147,14 @@ def interval_chart(findings: Iterable[Finding], numbers: Numbers, band: Band | N
         _interval_row(canvas, finding, y, mark.tone)
         canvas.write(548, y + 8, f"{mark.symbol} {mark.word}", style="strong")
     canvas.strokes.sort(key=lambda stroke: (_LAYERS.get(stroke.style, len(_LAYERS)), stroke.style))
-    key = "bar: expected interval   ◆ claim   each row has its own scale"
-    canvas.write(290, 22 + 37 * len(shown), key, style="small")
-    outside = [f for f in shown if f.verdict in (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)]
-    where = "" if band is None else f" of {numbers.band(band)}"
-    title = (
-        f"{len(outside)} of {len(shown)} claims{where} are outside what is expected, or at its edge"
-        if outside
-        else f"{_all(len(shown), 'claim')}{where} inside what is expected"
-    )
-    closest = "; ".join(
-        f"{f.title}: {numbers.amount(f.claimed)} against {numbers.interval(f.expected)}"
-        for f in (outside or shown)[:2]
+    key = "bar: expected interval; ◆ claim; each row has its own scale"
+    canvas.write(290, 22 + CLAIM_HEIGHT * len(findings), key, style="small")
+    first = "; ".join(
+        f"{f.title}: {numbers.amount(f.claimed)} against {numbers.interval(f.expected)}" for f in findings[:2]
     )
     return canvas.figure(
         title,
-        f"Claim on the interval expected. {closest}. Figures, working and cells of every row stand with its "
+        f"Claim on the interval expected. {first}. Figures, working and cells of every row stand with its "
         "check below.",
         kind="intervals",
         joined=True,

@@ -26,6 +26,8 @@ LINE_POINTS = 15.0
 TALLEST_POINTS = 409.0
 LONGEST_FOOTER = 90
 """Letters of our own in a footer, which holds 255 with its codes and doubled ampersands."""
+WIDEST_PAGE = 180
+"""Characters on a landscape page whose letters stay above 7 points; 11 points take about 120."""
 WIDE_LETTERS = 1.05
 """Room a letter takes, against the digit that column widths are counted in."""
 
@@ -59,11 +61,23 @@ def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> Iterator[str]:
         f"{hyperlinks(links)}"
         '<pageMargins left="0.6" right="0.6" top="0.6" bottom="0.7" header="0.3" footer="0.3"/>'
         f'<pageSetup paperSize="{1 if imprint.paper.lower() == "letter" else 9}" orientation="landscape"'
-        ' fitToWidth="1" fitToHeight="0"/>'
+        f' fitToWidth="{pages_across(sheet)}" fitToHeight="0" pageOrder="overThenDown"/>'
         f"<headerFooter><oddFooter>{xml_text(_footer(imprint))}</oddFooter></headerFooter>"
         f"{'<legacyDrawing r:id=' + chr(34) + 'notes' + chr(34) + '/>' if notes_of(sheet) else ''}"
         "</worksheet>"
     )
+
+
+def pages_across(sheet: Table | Grid) -> int:
+    """Sheets of paper side by side, so that print is not shrunk below what can be read."""
+    return max(1, -(-round(sum(_printed_widths(sheet))) // WIDEST_PAGE))
+
+
+def _printed_widths(sheet: Table | Grid) -> Sequence[float]:
+    """Widths [characters] of the columns that go on paper."""
+    if isinstance(sheet, Grid):
+        return [sheet.widths.get(n, 9.0) for n in range(1, max(sheet.widths, default=0) + 1)]
+    return [column.width for column in sheet.columns[: sheet.printed or None]]
 
 
 def _rows_of(sheet: Table | Grid) -> Iterator[tuple[int, Row, float | None]]:
@@ -110,8 +124,13 @@ def defined_names(sheet: Table | Grid, number: int) -> str:
         f'<definedName name="_xlnm.{kind}"{where}>{name}!{_absolute(span)}</definedName>'
         for kind, where, span in found
     )
-    if isinstance(sheet, Table):
-        text += f'<definedName name="_xlnm.Print_Titles" localSheetId="{number}">{name}!$1:$1</definedName>'
+    titles = [f"{name}!$1:$1"] if isinstance(sheet, Table) else []
+    if pages_across(sheet) > 1:
+        kept = sheet.frozen if isinstance(sheet, Table) else 1
+        titles.insert(0, f"{name}!$A:${column_letter(kept)}")
+    if titles:
+        kind = f'name="_xlnm.Print_Titles" localSheetId="{number}"'
+        text += f"<definedName {kind}>{','.join(titles)}</definedName>"
     return text
 
 

@@ -36,8 +36,8 @@ def findings(places: Places) -> Table:
             Column(heading="Band from (MHz)", width=10, look="number", note="Empty: the panel as a whole."),
             Column(heading="Band to (MHz)", width=10, look="number"),
             Column(heading="Verdict", width=13, status=tuple(Fit), note="Words of physics; see Lists."),
-            Column(heading="Check", width=44),
-            Column(heading="Summary", width=50, look="wrap"),
+            Column(heading="Check", width=32, look="wrap"),
+            Column(heading="Summary", width=60, look="wrap"),
             *(
                 Column(heading=name, width=11, look="number", note="In the unit beside it.")
                 for name in bounds
