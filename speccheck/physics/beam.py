@@ -55,25 +55,25 @@ def find_beam(states: Excitation) -> Beam:
 
 def _pulled(states: Excitation) -> tuple[Floats, Floats]:
     """First guess: each line a parabola by the spread of its weights, pulled in by the element alone."""
-    angle = np.array([states.theta_rad - np.pi / 2, states.phi_rad])
+    start = np.array([states.theta_rad - np.pi / 2, states.phi_rad])
     stiff = np.array([[2 * line.spread_m2] for line in states.lines]) * states.wavenumbers**2
-    sine = np.sin(angle)
-    for _ in range(2):
-        now, cosine = np.sin(angle), np.cos(angle)
-        stiff_off, stiff_cosine = stiff * (now - sine), stiff * cosine
-        gradient, bend = -stiff_off * cosine, stiff_off * now - stiff_cosine * cosine
-        e_t, e_p, e_tt, e_pp = states.element.log_slopes(angle[0] + np.pi / 2, angle[1])
-        gradient[0] += e_t
-        gradient[1] += e_p
-        bend[0] += e_tt
-        bend[1] += e_pp
-        angle -= gradient / np.minimum(bend, -_FLAT)
+    sine, cosine = np.sin(start), np.cos(start)
+    slope, bend = np.empty_like(start), np.empty_like(start)
+    slope[0], slope[1], bend[0], bend[1] = states.element.log_slopes(start[0] + np.pi / 2, start[1])
+    bend -= stiff * cosine * cosine
+    angle = start - slope / np.minimum(bend, -_FLAT)
+    now, cosine = np.sin(angle), np.cos(angle)
+    slope[0], slope[1], bend[0], bend[1] = states.element.log_slopes(angle[0] + np.pi / 2, angle[1])
+    off = stiff * (now - sine)
+    slope -= off * cosine
+    bend += off * now - stiff * cosine * cosine
+    angle -= slope / np.minimum(bend, -_FLAT)
     return angle[0] + np.pi / 2, angle[1]
 
 
 def _reach(states: Excitation) -> Floats:
     """Longest step [rad] by theta and phi: about a third of a null width, never more than a sixth."""
-    k = float(states.distinct.max())
+    k = states.highest
     sides = states.layout.height_m, states.layout.width_m
     return np.array([[min(2.0 / (k * side + 1e-9), 0.17)] for side in sides])
 

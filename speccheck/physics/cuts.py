@@ -26,9 +26,13 @@ _FEWEST, _MOST = 50, 1500
 
 @dataclass(frozen=True, eq=False, slots=True)
 class Grid:
-    """Angles [rad] of a cut over the front, their sines and cosines [1], shape (P,) each; P is odd."""
+    """Angles [rad] of a cut over the front, their sines and cosines [1], shape (P,) each; P is odd.
+
+    between_rad [rad]: halfway from one to the next, shape (P - 1,).
+    """
 
     angle_rad: Floats
+    between_rad: Floats
     sine: Singles
     cosine: Singles
 
@@ -45,22 +49,27 @@ def angle_at(index: Floats, count: int) -> Floats:
     return (np.pi / 2 * _CLOSEST) * s + (np.pi / 2 * (1 - _CLOSEST)) * (s * s * s)
 
 
-def front_grid(layout: ArrayLayout, wavenumbers: Floats) -> Grid:
+def front_grid(layout: ArrayLayout, wavenumber: float) -> Grid:
     """Where a cut over the front is sampled, fine enough for the longer side.
 
     layout [ArrayLayout]: the panel.
-    wavenumbers [rad/m]: of all states.
+    wavenumber [rad/m]: highest of all states.
     Returns [Grid]: -pi/2 to pi/2, an odd number of samples, six or more to a null width.
     Source: sampling of a pattern whose null width is wavelength over aperture.
     """
-    in_wavelengths = max(layout.height_m, layout.width_m) * float(wavenumbers.max()) / (2 * np.pi)
+    in_wavelengths = max(layout.height_m, layout.width_m) * wavenumber / (2 * np.pi)
     return _grid(min(max(int(np.ceil(_SAMPLES_PER_WAVELENGTH * in_wavelengths)), _FEWEST), _MOST))
 
 
 @lru_cache(maxsize=64)
 def _grid(half: int) -> Grid:
     angle = angle_at(np.arange(2 * half + 1.0), 2 * half + 1)
-    return Grid(angle, np.sin(angle).astype(np.float32), np.cos(angle).astype(np.float32))
+    return Grid(
+        angle,
+        (angle[1:] + angle[:-1]) / 2,
+        np.sin(angle).astype(np.float32),
+        np.cos(angle).astype(np.float32),
+    )
 
 
 @dataclass(frozen=True, eq=False, slots=True)

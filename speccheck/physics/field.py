@@ -28,7 +28,7 @@ class Excitation:
     """A panel driven in S states: wavenumbers [rad/m], steering, weights of rows (S, M), columns (S, N).
 
     `lines` are the rows and columns of the layout; `distinct` holds the F different wavenumbers, `which` the
-    one of each state.
+    one of each state, `highest` the highest [rad/m].
     """
 
     layout: ArrayLayout
@@ -44,6 +44,7 @@ class Excitation:
     which: NDArray[np.intp]
     steer_y: Floats
     steer_z: Floats
+    highest: float
 
     @property
     def row_groups(self) -> tuple[tuple[slice | NDArray[np.intp], float], ...]:
@@ -93,6 +94,7 @@ def excite(
         which,
         u_y,
         -np.sin(tilt),
+        max(places),
     )
 
 

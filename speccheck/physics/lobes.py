@@ -245,7 +245,7 @@ def _refined(
 
 def _anywhere(state: Excitation, beam_rad: tuple[float, float], beam: float) -> _Lobe:
     """Highest local maximum over the front that is not the beam: rivals are climbed to their tops."""
-    phi = front_grid(state.layout, state.wavenumbers).angle_rad
+    phi = front_grid(state.layout, state.highest).angle_rad
     theta = np.pi / 2 + phi[1:-1]
     mesh = np.meshgrid(theta, phi, indexing="ij")
     power = intensity(state, mesh[0].reshape(1, -1), mesh[1].reshape(1, -1)).reshape(mesh[0].shape)

@@ -8,7 +8,7 @@ from functools import lru_cache
 import numpy as np
 from numpy.typing import NDArray
 
-from speccheck.physics.cuts import angle_at
+from speccheck.physics.cuts import Grid, angle_at
 from speccheck.physics.decibels import Floats
 from speccheck.physics.field import Singles
 
@@ -34,35 +34,35 @@ class CutFigures:
     highest_rad: Floats
 
 
-def read_cuts(level: Singles, angle_rad: Floats, peak_rad: Floats) -> CutFigures:
+def read_cuts(level: Singles, grid: Grid, peak_rad: Floats) -> CutFigures:
     """Half-power width and lobes of cuts.
 
     Every maximum of a cut and its crossings of half power are found on the samples and refined together.
     The highest lobe includes grating and sub-array lobes and a rise towards the end of the cut.
     level [1]: power against the beam, shape (C, P).
-    angle_rad [rad]: the angles of `cuts.front_grid`, shape (P,).
+    grid [Grid]: where the cuts are sampled.
     peak_rad [rad]: angle of the beam, shape (C,).
     Returns [CutFigures]: width [rad], lobes [dB], angle of the highest lobe [rad].
     Source: half power at -3.0103 dB of the beam; side lobes as in IEEE Std 145.
     """
     cuts, count = level.shape
     frame = _frame(cuts, count)
-    beam = frame.first + np.searchsorted((angle_rad[1:] + angle_rad[:-1]) / 2, peak_rad)
+    beam = frame.first + np.searchsorted(grid.between_rad, peak_rad)
     edge, crosses = _half_power(level, frame, beam)
     lobe, starts = _maxima(level, frame)
     cut = lobe // count
     place, height = _refined(level, frame, edge, (lobe, cut, starts))
-    angle = angle_at(place, count)
-    before_edge, after_edge = np.where(crosses, angle[: 2 * cuts], np.nan).reshape(2, cuts)
     ends = np.concatenate([starts, starts - 1])
     at_end, height[ends] = height[ends], np.nan
     before, after = _beside(height, lobe, beam)
     height[ends] = np.where(level.take(frame.ends) > level.take(frame.inward), at_end, np.nan)
     highest = np.fmax.reduceat(height, starts)
     where, shown = np.full(cuts, np.nan), height == highest[cut]
-    where[cut[shown]] = angle[2 * cuts :][shown]
+    where[cut[shown]] = place[2 * cuts :][shown]
+    edges = np.where(crosses, place[: 2 * cuts], np.nan)
+    before_edge, after_edge, at_highest = angle_at(np.concatenate([edges, where]), count).reshape(3, cuts)
     before, after, highest = 10 * np.log10(np.maximum([before, after, highest], 1e-30))
-    return CutFigures(after_edge - before_edge, before, after, highest, where)
+    return CutFigures(after_edge - before_edge, before, after, highest, at_highest)
 
 
 @dataclass(frozen=True, eq=False, slots=True)

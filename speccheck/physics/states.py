@@ -146,10 +146,10 @@ def _figures(
     keys = np.array(distinct).T
     states = excite(layout, element, *keys)
     beam = find_beam(states)
-    grid = front_grid(layout, states.wavenumbers)
+    grid = front_grid(layout, states.highest)
     peaks = np.concatenate([beam.phi_rad, beam.theta_rad - np.pi / 2])
     cuts = principal_cuts(states, beam, grid)
-    read = read_cuts(cuts.level, grid.angle_rad, peaks)
+    read = read_cuts(cuts.level, grid, peaks)
     count = len(distinct)
     figures = np.empty((15, count))
     figures[:3] = keys

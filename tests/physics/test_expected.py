@@ -5,6 +5,7 @@ import pytest
 from hypothesis import given, settings
 from hypothesis import strategies as st
 from physics import oracle, tables
+from physics.random_panels import layout_of, random_array
 
 from speccheck.physics.expected import (
     LOSS_RANGE_DB,
@@ -168,3 +169,26 @@ def test_expected_widths():
 )
 def test_class_by_frequency_and_columns(freq_hz, columns, kind):
     assert panel_class(freq_hz, columns) is kind
+
+
+@settings(max_examples=60, deadline=None, derandomize=True)
+@given(
+    seed=st.integers(0, 10**6),
+    horizontal=st.none() | st.floats(1, 150),
+    vertical=st.none() | st.floats(1, 150),
+    kind=st.sampled_from(PanelClass),
+)
+def test_edges_of_any_array_are_in_order(seed, horizontal, vertical, kind):
+    """Single elements, fewer than three sub-arrays, groups, staggered rows: always figures, in order."""
+    array, tilt, scan = random_array(np.random.default_rng(seed))
+    gain = expected_gain(
+        layout_of(array),
+        HZ,
+        kind,
+        tilt_deg=tilt,
+        scan_deg=scan,
+        horizontal_beamwidth_deg=horizontal,
+        vertical_beamwidth_deg=vertical,
+    )
+    assert gain.low_dbi < gain.question_dbi <= gain.impossible_dbi
+    assert gain.directivity_dbi < gain.impossible_dbi
