@@ -160,4 +160,21 @@ ACROSS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         SAU-32: D4 subarray_rows 4
         SAU-32: D4 subarray_columns 1""",
     ),
+    "a row that numbers the columns, and ditto marks": (
+        [
+            ["Model", "Band (MHz)", "Gain (dBi)", "VSWR"],
+            ["(1)", "(2)", "(3)", "(4)"],
+            ["VD-1", "694-960", 15, 1.5],
+            ["VD-2", '"', 16, "ditto"],
+        ],
+        (),
+        """VD-1: B3 frequency_range 694..960 MHz
+        VD-1: B3 operating_bands 694..960 MHz @694-960
+        VD-1: C3 gain 15 dBi @694-960
+        VD-1: D3 vswr 1.5 @694-960
+        VD-2: B4 frequency_range 694..960 MHz
+        VD-2: B4 operating_bands 694..960 MHz @694-960
+        VD-2: C4 gain 16 dBi @694-960
+        VD-2: D4 vswr 1.5 @694-960""",
+    ),
 }

@@ -16,6 +16,7 @@ from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
 from speccheck.intake.tables.regions import Across, cells_of
+from speccheck.intake.tables.repeats import is_ditto, meant
 from speccheck.intake.tables.words import is_aside_of_table
 from speccheck.records import Band
 
@@ -136,9 +137,11 @@ class AcrossReader:
     def _place(self, row: int, cells: list[Cell]) -> None:
         guides, fields = self._guides, self._fields
         name_cell = self._grid.cells.get((row, guides.named)) if guides.named else None
+        if name_cell is not None:
+            name_cell = meant(self._grid, name_cell)
         said = band_of(
-            self._grid.covering(row, guides.banded) if guides.banded else None,
-            self._grid.covering(row, guides.nicknamed) if guides.nicknamed else None,
+            self._meant(row, guides.banded),
+            self._meant(row, guides.nicknamed),
             unit_of(fields[guides.banded]) if guides.banded else "",
         )
         if guides.edges[0] and not said.band:
@@ -168,6 +171,10 @@ class AcrossReader:
                 draft.bands.append(said.band)
                 if said.band == self._section.band and self._section_cell is not None:
                     self._claim_section(draft, self._section_cell, said.band)
+
+    def _meant(self, row: int, column: int) -> Cell | None:
+        cell = self._grid.covering(row, column) if column else None
+        return meant(self._grid, cell) if cell is not None else None
 
     def _tilt(self, row: int) -> str:
         """The tilt at which all figures of a row hold, in a table of several rows a band."""
@@ -209,6 +216,8 @@ class AcrossReader:
         if cell.column in self._guides.of_bands and self._only_guides(cell, draft):
             return
         said, column = self._at.said, found.column
+        if isinstance(cell.raw, str) and is_ditto(cell.raw):
+            cell = replace(meant(self._grid, cell), text=cell.text)
         if found.label.parameters:
             context, band, banded = found.context, column.band, found.banded
             if not found.of_frequency or column.index == self._guides.banded:

@@ -9,6 +9,7 @@ from speccheck.intake.tables.across_groups import parts_rows
 from speccheck.intake.tables.heading_conditions import condition_of_heading
 from speccheck.intake.tables.labels import begins_with_unit, is_heading_filler
 from speccheck.intake.tables.marks import Marks, looks_like_value, says_column_role
+from speccheck.intake.tables.repeats import numbers_columns
 from speccheck.intake.tables.words import column_role, is_aside_of_table
 
 _LOOK_BELOW = 4
@@ -95,7 +96,9 @@ def _grow(marks: Marks, row: int, numbers: list[int], position: int, floor: int)
         below += 1
     above = position - 1
     while above >= 0 and numbers[above] > floor and numbers[above] >= row - 3:
-        if numbers[above] != heading_rows[0] - 1 or not _is_upper_heading(marks, numbers[above], row):
+        of_heading = not numbers_columns(marks.rows[numbers[above]])
+        of_heading = of_heading and _is_upper_heading(marks, numbers[above], row)
+        if numbers[above] != heading_rows[0] - 1 or not of_heading:
             break
         heading_rows.insert(0, numbers[above])
         above -= 1
@@ -201,8 +204,10 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
         heads = (marks.is_heading(cells[0]) and cells[0].column == table.left) or len(headings) > 2
         after = following[position + 1 : position + 1 + _LOOK_BELOW]
         aside = is_aside_of_table(cells[0].text)
-        if (aside and not heads) or (
-            (aside or len(cells) <= _FEW) and parts_rows(marks, cells, heading_row, after)
+        if (
+            (aside and not heads)
+            or numbers_columns(cells)
+            or ((aside or len(cells) <= _FEW) and parts_rows(marks, cells, heading_row, after))
         ):
             table.groups.add(row)
         elif heads:
