@@ -59,10 +59,19 @@ def find_name_column(marks: Marks, table: Down, heading_rows: list[int]) -> int:
     for row in heading_rows:
         for cell in cells_between(marks, row, table.left, table.label_column - 1):
             label = marks.labels.of(cell.text)
-            if column_role(cell.text) == "panel" or label.parameters[:1] in (("model",), ("part_number",)):
+            named = column_role(cell.text) == "panel"
+            named = named or label.parameters[:1] in (("model",), ("part_number",))
+            if named and not _holds_headings(marks, table, cell.column):
                 return cell.column
     columns = range(table.left, table.label_column)
     return next((column for column in columns if _holds_merged_names(marks, table, column)), 0)
+
+
+def _holds_headings(marks: Marks, table: Down, column: int) -> bool:
+    """Whether a column gives the labels in another language: under 'Désignation' stand no names of panels."""
+    rows = range(table.top, table.bottom + 1)
+    cells = [cell for row in rows if (cell := marks.grid.cells.get((row, column))) is not None]
+    return sum(marks.is_heading(cell) for cell in cells) * 3 > len(cells) > 0
 
 
 def _holds_merged_names(marks: Marks, table: Down, column: int) -> bool:

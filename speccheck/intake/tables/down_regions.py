@@ -130,11 +130,27 @@ def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[t
     start = previous = rows[0]
     for row in rows[1:]:
         between = range(previous + 1, row)
-        if any(r in taken or heads_columns(marks, r, column) for r in between):
+        cut = any(r in taken or heads_columns(marks, r, column) for r in between)
+        if cut or (row > start and _names_panels_again(marks, row, column, range(start, row))):
             runs.append((start, previous))
             start = row
         previous = row
     return [*runs, (start, previous)]
+
+
+def _names_panels_again(marks: Marks, row: int, column: int, above: range) -> bool:
+    """Whether a row names other panels for the columns, as a row above did: 'Model | KD-3 | KD-4'."""
+    if not _names_columns(marks, row, column):
+        return False
+    said = [r for r in above if (r, column) in marks.headings]
+    return len(said) > 1 and any(_names_columns(marks, r, column) for r in said)
+
+
+def _names_columns(marks: Marks, row: int, column: int) -> bool:
+    label = marks.headings.get((row, column))
+    if label is None or label.parameters[0] not in ("model", "panel_type"):
+        return False
+    return len({cell.text for cell in marks.rows[row] if cell.column > column}) > 1
 
 
 def heads_columns(marks: Marks, row: int, column: int) -> bool:

@@ -11,6 +11,7 @@ from speccheck.intake.tables.bands import is_band_label
 from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.down_regions import Down
 from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.no_names import of_paper
 from speccheck.intake.tables.titles import PARTS, announced, codes, is_numbered_name, name_in_title
 from speccheck.intake.tables.words import fold, is_generic_sheet_name, is_group_heading, title_prefixes
 
@@ -82,7 +83,7 @@ def _without_prefix(words: str, strength: str) -> str:
 def _score(text: str, sheet: str) -> int:
     """How surely a text is a panel's title; 0 when it is none."""
     words = " ".join(text.split())
-    if len(words) > _LONG_TITLE:
+    if len(words) > _LONG_TITLE or of_paper(model_name(words)):
         return 0
     if announced(words):
         return 5
