@@ -27,7 +27,7 @@ exposure         power_density_wm2(eirp_w, distance_m, reflection=1),
                  REFLECTION_NONE / _GROUND / _FULL
 grating          pitch_limit_wl(scan_deg, count=inf), entry_angle_deg(pitch_wl),
                  entry_freq_hz(pitch_m, scan_deg), lobe_angle_deg(pitch_wl, scan_deg, order=-1),
-                 triangular_side_limit_wl(scan_deg)
+                 triangular_side_limit_wl(scan_deg), lattice_entry_freq_hz(lobes_per_m, beams)
 
 element          SectorElement(az_hpbw_deg=65, el_hpbw_deg=65, floor_db=30, el_floor_db=30) of TR 38.901 form,
                  CosineElement(exponent), IsotropicElement(front_only=False); each

@@ -54,6 +54,28 @@ def entry_freq_hz(pitch_m: ArrayLike, scan_deg: ArrayLike) -> Floats:
     return SPEED_OF_LIGHT_MPS * pitch_limit_wl(scan_deg) / floats(pitch_m)
 
 
+def lattice_entry_freq_hz(lobes_per_m: ArrayLike, beams: ArrayLike) -> float:
+    """Frequency above which some grating lobe of a lattice is visible for some beam of a steering range.
+
+    lobes_per_m [1/m]: points of the reciprocal lattice around the beam, over the wavelength, shape (K, 2).
+    beams [1]: direction cosines of the beams, inside visible space, shape (N, 2).
+    Returns [Hz]: least c/s over lobes g and beams b, with s the larger root of |b + s g| = 1.
+    Source: reciprocal lattice, R. J. Mailloux, "Phased Array Antenna Handbook", ch. 1; a lobe stands on the
+    rim of visible space where its distance from the panel normal in direction cosines is 1. An equilateral
+    lattice of 0.1 m sides, not steered, keeps lobes out up to 1.1547 wavelengths (Hansen, ch. 2).
+
+    >>> up = 10 / 3**0.5
+    >>> points = [[10, up], [10, -up], [-10, up], [-10, -up], [0, 2 * up], [0, -2 * up]]
+    >>> round(lattice_entry_freq_hz(points, [[0, 0]]) / SPEED_OF_LIGHT_MPS * 0.1, 4)
+    1.1547
+    """
+    lobes, beam = floats(lobes_per_m)[:, None], floats(beams)[None]
+    square, along = (lobes**2).sum(-1), (lobes * beam).sum(-1)
+    room = np.clip(1 - (beam**2).sum(-1), 0, None)
+    steps = (np.sqrt(along**2 + square * room) - along) / square
+    return float(SPEED_OF_LIGHT_MPS / steps.max())
+
+
 def lobe_angle_deg(pitch_wl: ArrayLike, scan_deg: ArrayLike, order: ArrayLike = -1) -> Floats:
     """Direction of a grating lobe in the plane of the scan.
 

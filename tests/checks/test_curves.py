@@ -56,6 +56,26 @@ def test_spacing_crosses_its_limit_where_the_grating_lobe_condition_says() -> No
     assert "3754 MHz" in drawing.title
 
 
+def test_limits_of_a_triangular_lattice_are_reached_where_its_first_lobe_enters() -> None:
+    # Hansen, Phased Array Antennas, ch. 2: an equilateral lattice, not steered, keeps lobes out up to a side
+    # of 2/√3 = 1.1547 λ; rows 0.1 m · √3/2 apart, each shifted by half a side: c · 1.1547/0.1 m = 3462 MHz,
+    # 1.1547 · √3/2 = 1 λ
+    drawing = drawn(
+        "spacing",
+        lattice="triangular",
+        array_rows=8.0,
+        array_columns=8.0,
+        vertical_element_spacing=0.1 * math.sqrt(3) / 2,
+        horizontal_element_spacing=0.1,
+    )
+    assert drawing is not None
+    assert drawing.marks["limit_horizontal_wl"] == pytest.approx(1.1547, abs=1e-4)
+    assert drawing.marks["limit_vertical_wl"] == pytest.approx(1, abs=1e-4)
+    for plane in ("vertical", "horizontal"):
+        assert drawing.marks[f"crossing_{plane}_mhz"] == pytest.approx(3462, abs=1)
+    assert draw(drawing, Numbers()) is not None
+
+
 def test_half_a_wavelength_keeps_lobes_out_of_the_steering_map() -> None:
     # d = λ/2 at the band top: no lobe for any steering (Balanis, Antenna Theory, ch. 6)
     half = 299.792458 / 3800 / 2

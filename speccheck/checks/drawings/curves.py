@@ -15,7 +15,7 @@ from speccheck.checks.model import Model, model_of
 from speccheck.checks.registry import Case
 from speccheck.checks.saying import mhz
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
-from speccheck.physics.grating import entry_freq_hz, pitch_limit_wl
+from speccheck.physics.grating import entry_freq_hz, lattice_entry_freq_hz
 from speccheck.physics.layout import Lattice
 from speccheck.records import Band, CellRef, Curve, Drawing, Finding, Panel, Reading, Settings
 
@@ -110,25 +110,18 @@ def _spacing(model: Model, steering: Steering) -> Iterator[Drawing]:
         ("horizontal", layout.columns, layout.horizontal_pitch_m, steering.scan_deg),
     ]
     shown = [plane for plane in planes if plane[1] > 1]
-    if not shown or triangular:
+    if not shown:
         return
+    common = _triangular_entry_hz(model, steering) if triangular else None
     marks: dict[str, float] = {}
     curves, said = [], []
     for name, _, pitch, angle in shown:
         over = [pitch * f * 1e6 / SPEED_OF_LIGHT_MPS for f in model.band]
         curves.append(_curve(f"{name}, {pitch * 1000:.4g} mm", model.band, over, "MHz", "λ"))
-        limit, crossing = float(pitch_limit_wl(angle)), float(entry_freq_hz(pitch, angle)) / 1e6
+        entry_hz = common or float(entry_freq_hz(pitch, angle))
+        limit, crossing = pitch * entry_hz / SPEED_OF_LIGHT_MPS, entry_hz / 1e6
         marks |= {f"limit_{name}_wl": limit, f"angle_{name}_deg": angle, f"crossing_{name}_mhz": crossing}
-        if crossing >= model.band[1]:
-            said.append(f"{name} spacing stays below its limit of {limit:.2f}λ for {angle:.3g}° of steering")
-        elif crossing <= model.band[0]:
-            said.append(
-                f"{name} spacing is above its limit of {limit:.2f}λ for {angle:.3g}° in the whole band"
-            )
-        else:
-            said.append(
-                f"{name} spacing passes its limit of {limit:.2f}λ for {angle:.3g}° at {crossing:.0f} MHz"
-            )
+        said.append(f"{name} spacing {_against(limit, crossing, model.band)} for {angle:.3g}° of steering")
     text = f"{mhz(model.band)}: " + "; ".join(
         f"{name} {c.y[0]:.2f}λ at {c.x[0]:.0f} MHz to {c.y[1]:.2f}λ at {c.x[1]:.0f} MHz"
         for (name, *_), c in zip(shown, curves, strict=True)
@@ -137,11 +130,32 @@ def _spacing(model: Model, steering: Steering) -> Iterator[Drawing]:
     yield Drawing(
         kind="spacing",
         title=title[0].upper() + title[1:],
-        text=f"{text}. Above the limit the centre of a grating lobe is in visible space.",
+        text=f"{text}. Above the limit the centre of a grating lobe is in visible space."
+        + (
+            " Both limits are those of the triangular lattice, which a lobe enters at one frequency."
+            if triangular
+            else ""
+        ),
         band=model.band,
         curves=tuple(curves),
         marks=marks,
         where=_cells(model, steering),
+    )
+
+
+def _against(limit: float, crossing: float, band: Band) -> str:
+    """Where a spacing stands against its limit [wavelengths], reached at a frequency [MHz]."""
+    if crossing >= band[1]:
+        return f"stays below its limit of {limit:.2f}λ"
+    where = "in the whole band" if crossing <= band[0] else f"from {crossing:.0f} MHz on"
+    return f"is above its limit of {limit:.2f}λ {where}"
+
+
+def _triangular_entry_hz(model: Model, steering: Steering) -> float:
+    """Frequency at which the first lobe of a triangular lattice enters for some beam of the claimed range."""
+    u_step, v_step = 1 / model.layout.horizontal_pitch_m, 1 / model.layout.vertical_pitch_m
+    return lattice_entry_freq_hz(
+        list(_lattice_points(u_step, v_step, triangular=True)), np.stack(_range_outline(steering), axis=1)
     )
 
 
