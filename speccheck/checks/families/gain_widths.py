@@ -126,7 +126,7 @@ def gain_fits_beamwidths(
             _mean_step(value, across, along),
         ),
         assumptions=("Gain and both widths belong to one beam at one frequency, widths at -3 dB.", *note),
-        question="Please state frequency, tilt and level (-3 dB) of the gain and of each beamwidth.",
+        question="Please state the level (-3 dB), the frequency and the tilt at which each beamwidth was taken.",
     )
 
 
@@ -276,5 +276,5 @@ def gain_fits_housing(*, case: Case, gain: Reading, height: Reading, width: Read
             if hard
             else "A side is shorter than one wavelength: a guide only.",
         ),
-        question="Please confirm the outer size of the radome and the frequency of the gain figure.",
+        question="Please confirm the outer size of the radome.",
     )
