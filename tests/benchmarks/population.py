@@ -38,7 +38,7 @@ LOSSES_DB = {
 BANDS_MHZ = {
     PanelClass.PASSIVE: (1710, 2170),
     PanelClass.MASSIVE_MIMO: (3300, 3800),
-    PanelClass.MMWAVE: (26500, 27500),
+    PanelClass.MMWAVE: (24250, 27500),
 }
 SPEED_MM_MHZ = 299_792.458
 
