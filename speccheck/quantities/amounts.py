@@ -10,6 +10,7 @@ from speccheck.quantities.numerals import numeral
 from speccheck.quantities.units import dimension
 
 _JOINING = {"times": "×", "slash": "/", "sep": ",", "colon": ":", "plus": "+", "and": "and"}
+_LOWEST_BAND_MHZ = 400.0
 _OPENING = ("open", "sep")
 """Behind them a word such as 'min.' belongs to the figure that follows: '17.5 dBi (min. 17.0)'."""
 _SHARING = ("×", "/", ",", "and")
@@ -120,7 +121,7 @@ class _Reader:
             pending.words.append(token.text)
         elif kind == "unit" and self._found and not self._found[-1].unit:
             self._found[-1].unit = token.value
-        elif kind == "unit" and token.text == "V":  # behind another unit it stands for the vertical plane
+        elif kind == "unit" and token.text in ("V", "LB"):  # behind a unit: vertical plane, low band
             pending.words.append(token.text)
 
     def _settle_words(self, keep: bool = False) -> None:
@@ -242,6 +243,11 @@ class _Reader:
         return kinds[:5] == ["plus", "num", "slash", "minus", "num"]
 
 
+def _is_band(amount: Amount) -> bool:
+    """Whether a range without unit can only be one of megahertz: '694-960: 15.5 dBi, 1695-2690: 17.8'."""
+    return amount.high is not None and not amount.unit and _LOWEST_BAND_MHZ <= amount.low < amount.high
+
+
 def _share_units(found: list[Amount]) -> None:
     """'1998 x 356 x 115 mm' gives its unit to all three; a label before a colon keeps its own."""
     for left, right in itertools.pairwise(found):
@@ -250,7 +256,9 @@ def _share_units(found: list[Amount]) -> None:
             right.role = "at"
     pairs = list(itertools.pairwise(found))
     labels = {id(left) for left, right in pairs if right.joined == ":"}
-    shared = [(a, b) for a, b in pairs if b.joined in _SHARING and a.role == b.role]
+    shared = [
+        (a, b) for a, b in pairs if b.joined in _SHARING and a.role == b.role and _is_band(a) == _is_band(b)
+    ]
     for left, right in reversed(shared):
         if not left.unit and (id(right) not in labels or id(left) in labels or right.joined == "/"):
             left.unit = right.unit

@@ -2,9 +2,12 @@
 
 from __future__ import annotations
 
+import re
+
 from speccheck.intake.tables.claims import Claim, Draft
 from speccheck.records import Band
 
+_LINKS = re.compile(r"[\s_‐‑–—-]+")
 _TITLE_KEYS = frozenset(
     {"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"}
 )
@@ -51,11 +54,11 @@ class _Joiner:
         if home is None:
             self._kept.append(draft)
             self._stated[id(draft)] = stated
-            self._by_name.setdefault(draft.name.casefold(), []).append(draft)
+            self._by_name.setdefault(_key(draft.name), []).append(draft)
             return
         if draft.named and not home.named:
             home.name, home.named = draft.name, True
-            self._by_name.setdefault(draft.name.casefold(), []).append(home)
+            self._by_name.setdefault(_key(draft.name), []).append(home)
         home.joined.append(draft)
         self._stated[id(home)] |= stated
         home.bands += [band for band in draft.bands if band not in home.bands]
@@ -74,7 +77,7 @@ class _Joiner:
         return self._kept, []
 
     def _home(self, draft: Draft, stated: _Stated) -> Draft | None:
-        for other in reversed(self._by_name.get(draft.name.casefold(), [])[-_NEAREST:]):
+        for other in reversed(self._by_name.get(_key(draft.name), [])[-_NEAREST:]):
             if not _clash(stated, self._stated[id(other)]):
                 return other
         if not self._kept:
@@ -95,3 +98,8 @@ def _clash(mine: _Stated, theirs: _Stated) -> bool:
 def _stated(draft: Draft) -> _Stated:
     claims: list[Claim] = [claim for piece in draft.pieces() for claim in piece.claims]
     return {(key, c.band, c.context.band_name) for c in claims for key in c.context.label.parameters}
+
+
+def _key(name: str) -> str:
+    """A name as it is told from others: 'KD-20' and 'kd 20' are one panel."""
+    return _LINKS.sub("", name.casefold()) or name

@@ -10,8 +10,8 @@ from functools import lru_cache
 from speccheck.dictionary import parameters
 from speccheck.intake.panels.ends import join_ends
 from speccheck.intake.panels.found import Found, Outcome
+from speccheck.intake.panels.lists import share_out_list
 from speccheck.intake.panels.noted import settle_by_note, unband_repeated
-from speccheck.intake.panels.planes import ASK_FOR_PLANES, part_by_plane
 from speccheck.intake.panels.reading import Reader
 from speccheck.intake.panels.titled import claims_with_title
 from speccheck.intake.panels.told_by_panel import settle_by_panel
@@ -199,36 +199,7 @@ def _shared_out(
         if bands and not claim.banded and claim.band is None and not _in_figures(found):
             return _named_bands(found, bands), None
         return _frequencies(claim, found, several), None
-    if trouble := part_by_plane(found):
-        return [], Unread(where=first.where, text=first.raw, reason=trouble, suggestion=ASK_FOR_PLANES)
-    alike = _plain_list(found)
-    tilts, statistics = claim.context.label.tilts, claim.context.label.statistics
-    if tilts and len(alike) == len(tilts):
-        for one, tilt in zip(alike, tilts, strict=True):
-            one.at = {"tilt_deg": tilt}
-    elif statistics and len(alike) == len(statistics):
-        for one, statistic in zip(alike, statistics, strict=True):
-            one.take_statistic(statistic)
-    elif len(alike) == len(bands) and claim.band is None:
-        for one, band in zip(alike, bands, strict=True):
-            one.band = band
-    elif alike and all(f.band == claim.band for f in alike):
-        reason = f"{len(alike)} figures in one cell"
-        reason += f", but {len(bands)} known bands to give them to" if claim.band is None else " for one band"
-        ask = "ask which figure holds for which band"
-        return [], Unread(where=first.where, text=first.raw, reason=reason, suggestion=ask)
-    return found, None
-
-
-def _plain_list(found: list[Found]) -> list[Found]:
-    """Several figures of one parameter that nothing in their cell tells apart; empty when there are none."""
-    first = found[0]
-    alike = [f for f in found if f.parameter == first.parameter]
-    if len(alike) < 2 or parameters()[first.parameter].kind not in ("number", "range", "count"):
-        return []
-    told_apart = any(f.figure.quantity.at for f in alike)
-    told_apart = told_apart or len({(f.figure.condition, f.figure.sense) for f in alike}) > 1
-    return [] if told_apart else alike
+    return share_out_list(claim, found, bands)
 
 
 def _named_bands(found: list[Found], bands: list[Band]) -> list[Found]:

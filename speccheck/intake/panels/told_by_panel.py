@@ -43,7 +43,8 @@ def _settle_spacing(found: Found, readings: list[Found], stated: set[str]) -> No
 def _settle_width(found: Found, readings: list[Found]) -> None:
     """A panel that states no other width means its own by that of the broadcast beams; the remark stays."""
     key = _BROADCAST_WIDTHS[found.parameter]
-    if any(other.parameter == key and other.band == found.band for other in readings):
+    same = [o for o in readings if o.parameter in (key, found.parameter) and o.band == found.band]
+    if len(same) > 1:
         return
     found.parameter = key
     found.remark = f"{found.remark}; broadcast beam" if found.remark else "broadcast beam"

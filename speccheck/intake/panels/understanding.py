@@ -12,6 +12,7 @@ from speccheck.intake.files.grid import Raw
 from speccheck.intake.panels.found import Figure
 from speccheck.intake.panels.unitless import with_unit
 from speccheck.intake.tables.claims import Context
+from speccheck.intake.tables.words import is_band_nickname
 from speccheck.quantities import (
     CellContent,
     DecimalHabit,
@@ -146,7 +147,8 @@ def _keys(context: Context, raw: Raw) -> tuple[str, ...]:
     """Parameters a cell answers for, where the cell or the unit says it better than the heading.
 
     '192 elements (12x8x2)' under 'Elements (rows x columns x polarisations)' is their number, as 192 is
-    under 'Elements' beside '12 rows x 8 columns'; a mounting kit in kilograms is a weight.
+    under 'Elements' beside '12 rows x 8 columns'; a mounting kit in kilograms is a weight, and connectors of
+    the low band are not all of the panel's.
     """
     label, keys = context.label, context.label.parameters
     if keys[:2] == ("array_rows", "array_columns"):
@@ -154,6 +156,8 @@ def _keys(context: Context, raw: Raw) -> tuple[str, ...]:
         alone = not isinstance(raw, str) or raw.strip().isdecimal()
         if counted or (alone and _names_elements(label.text)):
             return ("element_count",)
+    elif keys == ("rf_ports",) and any(map(is_band_nickname, label.condition.split(", "))):
+        return ("ports_per_band",)
     elif keys == ("mounting_kit",) and _is_mass(raw, _unit(context)[0]):
         return ("mounting_kit_weight",)
     return keys

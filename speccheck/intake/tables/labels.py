@@ -31,6 +31,9 @@ _TILTS = re.compile(
 )
 _LETTER_FIRST = re.compile(r"[^\W\d_]\s+[^\W\d_]{2,}")
 _SIZES = frozenset({"height", "width", "depth"})
+_FREQUENCIES = re.compile(
+    rf"{_AT}((?:\d+(?:[.,]\d+)?\s*/\s*)+\d+(?:[.,]\d+)?)\s*(GHz|MHz)\s*[)]?\s*$", re.IGNORECASE
+)
 _CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
 _STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
@@ -41,6 +44,8 @@ _BAND_WORD = re.compile(
 )
 _UNIT_BRACKET = re.compile(r"\s*(?:[(\[][^()\[\]\d]{1,8}[)\]]|,?\s*\b(?:dBi|dBd|dB))\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
+_WITHOUT = re.compile(r"\bw/o\b", re.IGNORECASE)
+_THREE_SIDES = re.compile(r"\b[A-Z]\s?[x×/]\s?[A-Z]\s?[x×/]\s?[A-Z]\b", re.IGNORECASE)
 _BAR = re.compile(r"\s*\|\s*")
 _ITEM = r"[^\W\d][^()\[\]/]*"
 _LISTED_IN_BRACKET = re.compile(
@@ -65,6 +70,7 @@ class Label:
     tolerance: bool = False
     how: str = ""
     tilts: tuple[float, ...] = ()
+    frequencies_mhz: tuple[float, ...] = ()
     statistics: tuple[str, ...] = ()
 
     def __bool__(self) -> bool:
@@ -100,7 +106,7 @@ class Labels:
     def _understand(self, text: str) -> Label:
         if not self._could_be_heading(text) or not self._has_room_for(text):
             return Label(text)
-        cleaned = text.strip().rstrip(":").strip()
+        cleaned = _WITHOUT.sub("without", text.strip().rstrip(":").strip())
         attempts = (
             self._with_list,
             self._with_tilts,
@@ -119,6 +125,8 @@ class Labels:
         words = runs(text)
         if len(text) > _LONGEST:
             return False
+        if _THREE_SIDES.search(text):
+            return True
         if not any(stem(word) in self._vocabulary for word in words):
             return False
         return max(map(len, words)) > 1 or (len(words) > 1 and _SEVERAL.search(text) is not None)
@@ -144,8 +152,8 @@ class Labels:
         bracket = _LISTED_IN_BRACKET.search(text)
         if bracket is not None:
             return self._of_items(text, bracket.start(), bracket.end(), bracket[1])
-        lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0]) and cut.start() > 3]
-        if not lists or not _names_something(text[: lists[-1].start()]):
+        lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0])]
+        if not lists or not _names_something(text[: lists[-1].start()] + text[lists[-1].end() :]):
             return Label(text)
         return self._of_items(text, lists[-1].start(), lists[-1].end(), lists[-1][0])
 
@@ -155,7 +163,9 @@ class Labels:
         last_is_unit = len(unit_name(items.rpartition("/")[2])) > 1  # 'Frequency band / MHz'
         if last_is_unit or any("/" in word and unit_name(word) for word in items.split()):
             return Label(text)
-        for item in re.split(r"\s*/\s*", items):
+        listed = re.split(r"\s*/\s*", items)
+        tail = listed[-1].partition(" ")[2]  # '(without/with brackets)'
+        for item in [*(i if " " in i or not tail else f"{i} {tail}" for i in listed[:-1]), listed[-1]]:
             single = f"{text[:start].rstrip(' ([')} ({item}) {text[end:].lstrip(' )]')}".strip()
             found.append(self._with_unit(single) or self._match(single))
         keys = tuple(key for label in found for key in label.parameters)
@@ -163,16 +173,20 @@ class Labels:
         return replace(found[0], parameters=keys) if several else Label(text)
 
     def _with_tilts(self, text: str) -> Label:
-        """'Gain at tilt 0°/5°/10°' heads a list of figures, one a tilt."""
+        """'Gain at tilt 0°/5°/10°' and 'Gain @ 3.3/3.5/3.8 GHz' head lists of figures, one each."""
         bare = _UNIT_BRACKET.sub("", text)
-        listed = _TILTS.search(bare)
+        tilts, frequencies = _TILTS.search(bare), _FREQUENCIES.search(bare)
+        listed = tilts or frequencies
         if listed is None:
             return Label(text)
         inner = self._match(bare[: listed.start()].strip(" ,;") + text[len(bare) :])
         if not inner:
             return inner
-        tilts = tuple(float(number.replace(",", ".")) for number in _NUMBER.findall(listed[1] or listed[2]))
-        return replace(inner, tilts=tilts)
+        numbers = [float(n.replace(",", ".")) for n in _NUMBER.findall(listed[1] or listed[2])]
+        if tilts:
+            return replace(inner, tilts=tuple(numbers))
+        scale = 1000.0 if listed[2].lower() == "ghz" else 1.0
+        return replace(inner, frequencies_mhz=tuple(scale * number for number in numbers))
 
     def _with_statistics(self, text: str) -> Label:
         """'Power consumption, typ./max.' heads two figures of one parameter."""

@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from speccheck.intake.panels.found import Outcome
+from speccheck.intake.panels.found import Found, Outcome
 from speccheck.intake.tables.claims import Claim
 from speccheck.intake.tables.words import fold, is_band_nickname
 from speccheck.records import Band
@@ -15,10 +15,12 @@ def resolve_nicknames(outcomes: list[tuple[Claim, Outcome]]) -> None:
     """Give 'gain, low band' the frequencies that 'frequency range, low band' states."""
     bands: dict[str, set[Band]] = {}
     for claim, outcome in outcomes:
-        name = _nickname(claim) if claim.context.label.parameters[0] in _FREQUENCY else ""
-        if name:
-            spans = [f.value for f in outcome.found if isinstance(f.value, tuple)]
-            bands.setdefault(name, set()).update(spans)
+        if claim.context.label.parameters[0] not in _FREQUENCY:
+            continue
+        spans = [(f.value, _in_cell(f)) for f in outcome.found if isinstance(f.value, tuple)]
+        for span, own in spans:
+            if name := own or _nickname(claim):
+                bands.setdefault(name, set()).add(span)
     for claim, outcome in outcomes if bands else ():
         spans_of_name = bands.get(_nickname(claim), set())
         if claim.band is None and len(spans_of_name) == 1:
@@ -26,6 +28,22 @@ def resolve_nicknames(outcomes: list[tuple[Claim, Outcome]]) -> None:
             claim.banded = True
             for found in outcome.found:
                 found.band = found.band or claim.band
+        for found in outcome.found if claim.band is None else ():
+            spans_of_name = bands.get(_in_cell(found), set())
+            if found.band is None and len(spans_of_name) == 1:
+                (found.band,) = spans_of_name
+
+
+def _in_cell(found: Found) -> str:
+    """The nickname that stands beside a figure in its cell: 'LB: 15.5 dBi; HB: 17.8 dBi'."""
+    for piece in found.figure.condition.split(", "):
+        if is_band_nickname(piece.strip(" :()")):
+            return _bare(piece.strip(" :()"))
+    return ""
+
+
+def _bare(text: str) -> str:
+    return " ".join(word for word in fold(text).split() if word not in _WORDS)
 
 
 def _nickname(claim: Claim) -> str:
@@ -33,5 +51,5 @@ def _nickname(claim: Claim) -> str:
     context = claim.context
     for text in (context.band_name, context.condition, *context.label.condition.split(", ")):
         if text and is_band_nickname(text):
-            return " ".join(word for word in fold(text).split() if word not in _WORDS)
+            return _bare(text)
     return ""
