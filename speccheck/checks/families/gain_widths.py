@@ -126,7 +126,7 @@ def gain_fits_beamwidths(
             _mean_step(value, across, along),
         ),
         assumptions=("Gain and both widths belong to one beam at one frequency, widths at -3 dB.", *note),
-        question="Please state the level (-3 dB), the frequency and the tilt at which each beamwidth was taken.",
+        question="Please state the level (-3 dB), frequency and tilt at which each beamwidth was taken.",
     )
 
 
