@@ -31,6 +31,7 @@ _CONDITION = re.compile(
 _ORDINAL = re.compile(r"(?:\s*\.)?\s*(?:er|e|ème|eme|rd|th|[ªº°])?\.?\s*(?:ord|rz[ęąa])", re.IGNORECASE)
 """Behind a number: 'third order' is written '3. Ordnung', '3.er orden', '3ª ordem'."""
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
+_UNIT_BEFORE_BRACKET = re.compile(r"(?<=[^\W\d])\s([^\s,;:/()\[\]]{2,8}|[°%Ω])\s*(?=[(\[])")
 _SPLIT_NOTES = re.compile(r"\s*[,;]\s+|\s+[-–:]\s+|:\s*|\s*@\s*|\s+/\s+")
 
 
@@ -78,6 +79,10 @@ def _without_unit(cut: Cut) -> Cut:
         if unit:
             rest = f"{cut.text[: bracket.start()]} ({others}) {cut.text[bracket.end() :]}"
             return replace(cut, text=rest, unit=unit)
+    inner = _UNIT_BEFORE_BRACKET.search(cut.text)
+    if inner and (name := unit_name(inner.group(1))):  # 'Weight kg (without kit)'
+        rest = f"{cut.text[: inner.start()]} {cut.text[inner.end() :]}"
+        return replace(cut, text=rest, unit=name)
     trailing = _TRAILING_UNIT.search(cut.text)
     if not trailing or re.search(r"(?<![A-Za-z])\d+$", cut.text[: trailing.start()]):
         return cut

@@ -24,10 +24,11 @@ from intake.corpus_bids_hard import HARD
 from intake.corpus_bids_headings import HEADINGS
 from intake.corpus_bids_layouts import LAYOUTS
 from intake.corpus_bids_sides import SIDES
+from intake.corpus_bids_words import WORDS
 from intake.corpus_texts import TEXTS
 
 CORPUS = Path(__file__).parent / "corpus"
-WORKBOOKS = {**LAYOUTS, **CELLS, **HARD, **HEADINGS, **SIDES}
+WORKBOOKS = {**LAYOUTS, **CELLS, **HARD, **HEADINGS, **SIDES, **WORDS}
 FIXED = datetime(2026, 1, 1)  # noqa: DTZ001 - openpyxl writes naive times
 
 
