@@ -147,4 +147,36 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         ORK-21: C5 gain ≥17.4 dBi @1920-2170
         ORK-21: D5 gain 17.9 dBi @1920-2170""",
     ),
+    "pasted lines under bands": (
+        [
+            ["Antenna KD-20"],
+            ["694-960 MHz:"],
+            ["Gain: 15 dBi"],
+            ["1710-2690 MHz:"],
+            ["Gain: 17 dBi"],
+            ["Weight: 20 kg"],
+        ],
+        (),
+        """KD-20: A2 operating_bands 694..960 MHz @694-960
+        KD-20: A3 gain 15 dBi @694-960
+        KD-20: A4 operating_bands 1710..2690 MHz @1710-2690
+        KD-20: A5 gain 17 dBi @1710-2690
+        KD-20: A6 weight 20 kg""",
+    ),
+    "a row a figure: panel, band and parameter beside each": (
+        [
+            ["Model", "Band", "Parameter", "Value", "Unit"],
+            ["KD-20", "694-960 MHz", "Gain", 15, "dBi"],
+            ["KD-20", "1710-2690 MHz", "Gain", 17, "dBi"],
+            ["KD-21", "1710-2690 MHz", "Gain", 16, "dBi"],
+        ],
+        (),
+        """KD-20: B2 operating_bands 694..960 MHz @694-960
+        KD-20: D2 gain 15 dBi @694-960
+        KD-20: B3 operating_bands 1710..2690 MHz @1710-2690
+        KD-20: D3 gain 17 dBi @1710-2690
+        KD-21: B4 frequency_range 1710..2690 MHz
+        KD-21: B4 operating_bands 1710..2690 MHz @1710-2690
+        KD-21: D4 gain 16 dBi @1710-2690""",
+    ),
 }

@@ -73,8 +73,8 @@ class DownReader:
         left = [c for c in cells if c.column < table.label_column]
         if label_cell is None and beside and (own := [c for c in left if self._marks.is_heading(c)]):
             label_cell = own[-1]
-        self._left_cells(row, [c for c in left if c is not label_cell])
         self._panels.follow(row)
+        self._left_cells(row, [c for c in left if c is not label_cell])
         if label_cell is not None and not beside:
             self._section(label_cell)
             return

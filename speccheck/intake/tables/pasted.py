@@ -32,7 +32,16 @@ def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
         last = cells[-1].row
         while (below := marks.grid.cells.get((last + 1, column))) is not None and looks_like_line(below.text):
             last += 1
-        _Column(marks, result, names, column).read(cells[0].row, last)
+        first = cells[0].row
+        while _heads_lines(marks.grid.cells.get((first - 1, column)), result):
+            first -= 1
+        _Column(marks, result, names, column).read(first, last)
+
+
+def _heads_lines(cell: Cell | None, result: SheetResult) -> bool:
+    """Whether a cell above the first line names the band of the lines below it."""
+    free = cell is not None and isinstance(cell.raw, str) and (cell.row, cell.column) not in result.roles
+    return free and cell is not None and is_band_label(cell.text)
 
 
 _SUPERSEDED = re.compile(
@@ -99,8 +108,8 @@ class _Column:
     def _section(self, cell: Cell, band: Band | None) -> None:
         """A line that only names a band heads the lines below it."""
         self._result.mark(cell, "heading")
-        self._band, self._band_name = band, " ".join(cell.text.split())
         draft = self._draft or self._untitled(cell)
+        self._band, self._band_name = band, " ".join(cell.text.split())
         if band is not None and band not in draft.bands:
             draft.bands.append(band)
             label = Label("heading of the lines below", ("operating_bands",), "MHz")
