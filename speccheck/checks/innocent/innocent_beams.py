@@ -13,6 +13,9 @@ WIDE_BEAM_DEG = 100.0
 """Horizontal width [deg] from which few panels are that wide at half power: most are 60 to 90 (common
 practice), and 65 at half power is 111 to 119 at -10 dB."""
 
+RARE_COLUMN_DEG = 55.0
+"""Width [deg] below which hardly any single column is sold: most are 60 to 90 wide (common practice)."""
+
 ARRAY_BEAM_DEG = 50.0
 """Width [deg] at -10 dB below which a beam is that of an array of columns and not of an element."""
 
@@ -79,14 +82,14 @@ _LEVEL_ASKED = "the {} taken at half power"
 def horizontal_width_at_10_db(panel: Panel, reach: Reach) -> Panel:
     """Width divided by √(10/3), the ratio of a parabola in decibels; a narrow array beam by 1.67.
 
-    A width that would leave less than a single column can have is not re-read.
+    A width that would leave less than single columns usually have is not re-read.
     """
 
     def half_power(reading: Reading) -> Reading:
         columns = panel.get("array_columns", reading.band)
         other = scaled((3 / 10) ** 0.5 if reading.nominal > ARRAY_BEAM_DEG else 1 / 1.67)(reading)
         single = columns is not None and columns.value == 1
-        return reading if single and other.nominal < COLUMN_WIDTHS_DEG[0] else other
+        return reading if single and other.nominal < RARE_COLUMN_DEG else other
 
     return reread(panel, reach, (_HORIZONTAL,), half_power)
 
