@@ -55,7 +55,7 @@ def _label_columns(marks: Marks, by_column: dict[int, list[int]]) -> dict[int, l
 def _has_value_right(marks: Marks, row: int, column: int) -> bool:
     for cell in marks.rows[row]:
         if cell.column > column:
-            return not marks.is_heading(cell) and not _heads_a_list(marks, row, column, cell)
+            return _answers(marks, row, column, cell) and not _heads_a_list(marks, row, column, cell)
     below = marks.grid.cells.get((row + 1, column))
     if below is not None and is_band_label(without_number(below.text)) and not marks.is_heading(below):
         return any(c.column > column for c in marks.rows[row + 1])
@@ -65,6 +65,13 @@ def _has_value_right(marks: Marks, row: int, column: int) -> bool:
         for r in range(row + 1, min(span.bottom, row + 60) + 1)
         for c in marks.rows.get(r, ())
     )
+
+
+def _answers(marks: Marks, row: int, column: int, cell: Cell) -> bool:
+    """Whether a cell may be the value of the label before it: no heading, or the label again, at the end."""
+    said = marks.headings.get((row, cell.column))
+    label = marks.headings[row, column]
+    return said is None or (said.parameters == label.parameters and cell is marks.rows[row][-1])
 
 
 def _heads_a_list(marks: Marks, row: int, column: int, beside: Cell) -> bool:

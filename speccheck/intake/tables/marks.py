@@ -3,11 +3,19 @@
 from __future__ import annotations
 
 import re
+from collections import defaultdict
 from dataclasses import dataclass, field
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.labels import Label, Labels, is_unit, split_lines, statistic_of
+from speccheck.intake.tables.labels import (
+    Label,
+    Labels,
+    is_heading_filler,
+    is_unit,
+    split_lines,
+    statistic_of,
+)
 from speccheck.intake.tables.words import column_role
 
 _LONGEST = 2000
@@ -19,7 +27,21 @@ _WORD = re.compile(r"[^\W\d_]+")
 _BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
 _MOST_COUNTED = 2
 """Words behind a number that is no item number: '64 TRX', but not '12 Number of ports'."""
+_FEWEST_HEADINGS = 4
+_NAME_WITH_NUMBER = re.compile(r"[^\W\d_]\s+\d+\w{0,2}$")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
+
+
+@dataclass(frozen=True, slots=True)
+class Without:
+    """What a second reading of a sheet does without, where the first one did not hang together.
+
+    `names` are places of cells that name no panel; then names over columns, and tables with headings across.
+    """
+
+    names: frozenset[tuple[int, int]] = frozenset()
+    over_columns: bool = False
+    across: bool = False
 
 
 @dataclass(slots=True)
@@ -31,6 +53,11 @@ class Marks:
     rows: dict[int, list[Cell]]
     headings: dict[tuple[int, int], Label] = field(default_factory=dict)
     lines: dict[tuple[int, int], tuple[Label, str]] = field(default_factory=dict)
+    without: Without = Without()
+
+    def may_name(self, cell: Cell) -> bool:
+        """Whether a cell may give a panel its name in this reading."""
+        return (cell.row, cell.column) not in self.without.names
 
     def is_heading(self, cell: Cell) -> bool:
         """Whether a cell is a heading of the dictionary."""
@@ -57,7 +84,34 @@ def mark(grid: Grid, labels: Labels) -> Marks:
             following = cell
     _mark_letters(marks)
     _unmark_column_words(marks)
+    _unmark_answers(marks)
     return marks
+
+
+def _unmark_answers(marks: Marks) -> None:
+    """Words of the dictionary beside figures, below a row of headings, are answers: 'RET included'."""
+    by_row: dict[int, list[int]] = defaultdict(list)
+    for row, column in sorted(marks.headings):
+        by_row[row].append(column)
+    columns: set[int] = set()
+    for row, headings in by_row.items():
+        cells = marks.rows[row]
+        if len(headings) >= _FEWEST_HEADINGS and len(headings) * 4 >= len(cells) * 3:
+            columns = {cell.column for cell in cells}
+        elif columns and _answers(marks, [cell for cell in cells if cell.column in columns], len(columns)):
+            first = min(columns)
+            if first in headings and not _NAME_WITH_NUMBER.search(marks.grid.cells[row, first].text):
+                columns = set()  # headings down the side begin
+                continue
+            for column in headings:
+                if column in columns:
+                    del marks.headings[row, column]
+
+
+def _answers(marks: Marks, under: list[Cell], headings: int) -> bool:
+    """Whether a row below headings holds figures, under half of the headings or more."""
+    plain = [c for c in under if not marks.is_heading(c) and looks_like_value(c)]
+    return len(under) * 2 >= headings and any(not is_heading_filler(c.text) for c in plain)
 
 
 def _unmark_column_words(marks: Marks) -> None:
