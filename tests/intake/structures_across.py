@@ -177,18 +177,18 @@ ACROSS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         VD-2: C4 gain 16 dBi @694-960
         VD-2: D4 vswr 1.5 @694-960""",
     ),
-    "answers and names made of words that head columns elsewhere": (
+    "answers made of words that head columns elsewhere": (
         [
             ["Antenna", "Band (MHz)", "Gain (dBi)", "Polarisation", "Radome material"],
-            ["Gain Max 65", "694-960", 15, "Dual polarisation", "Radome of GRP"],
+            ["Kite 65", "694-960", 15, "Dual polarisation", "Radome of GRP"],
             ["Wind Star", "1710-2690", 17, "Dual polarisation", "Radome of GRP"],
         ],
         (),
-        """Gain Max 65: B2 frequency_range 694..960 MHz
-        Gain Max 65: B2 operating_bands 694..960 MHz @694-960
-        Gain Max 65: C2 gain 15 dBi @694-960
-        Gain Max 65: D2 polarisations 2
-        Gain Max 65: E2 radome_material Radome of GRP
+        """Kite 65: B2 frequency_range 694..960 MHz
+        Kite 65: B2 operating_bands 694..960 MHz @694-960
+        Kite 65: C2 gain 15 dBi @694-960
+        Kite 65: D2 polarisations 2
+        Kite 65: E2 radome_material Radome of GRP
         Wind Star: B3 frequency_range 1710..2690 MHz
         Wind Star: B3 operating_bands 1710..2690 MHz @1710-2690
         Wind Star: C3 gain 17 dBi @1710-2690
