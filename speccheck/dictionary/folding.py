@@ -99,5 +99,11 @@ def _pairs() -> dict[str, dict[str, str]]:
     return table
 
 
+@functools.cache
+def spellings() -> frozenset[str]:
+    """Single words of other spellings and abbreviations, unaccented."""
+    return frozenset(word for form, _ in _spellings() for word in form.split())
+
+
 def _spellings() -> list[tuple[str, str]]:
     return [(_unaccented(form), word) for word, forms in heading_words()["same"].items() for form in forms]

@@ -28,6 +28,11 @@ _SIDES = frozenset({"f", "l", "s", "r"})
 _STATISTICS = ("max", "min", "typical", "mean")
 _TWICE = re.compile(r"\s+[/|=–—-]\s+|\s*\|\s*|\n")
 _GLOSS = re.compile(r"([^()\[\]]+)[(\[]([^()\[\]]{2,60})[)\]]\s*")
+_EACH = re.compile(
+    r"(?<=[^\W\d])\.?/(?=(?:col|column|port|input|trx|row|puerto|porta|porto|accès|entrée|poort|Eingang|kolumnę|Spalte)\b)",
+    re.IGNORECASE,
+)
+"""'Power/port' and 'Elem./col.' are said of each; 'TRX / ports' names two."""
 _MOST_LANGUAGES = 3
 _SHORT = 4
 _NUMBERING = re.compile(r"^\s*(?:(?:\d{1,2}\.)+\d{0,2}\.?\s+|\(?\d{1,2}[.)]\s+|\(?[a-zA-Z]\)\s+|[-•*·▪–]\s+)")
@@ -106,7 +111,7 @@ def _match_known(text: str, suggest: bool) -> HeadingMatch:
 def _match(text: str, house: Mapping[str, str], suggest: bool) -> HeadingMatch:
     if not text or len(text) > _LONGEST_HEADING or not any(c.isalpha() for c in text):
         return HeadingMatch()
-    body = tidy(split_footnotes(text)[0]).strip(" :;.")
+    body = _EACH.sub(" per ", tidy(split_footnotes(text)[0])).strip(" :;.")
     if body != (unnumbered := _NUMBERING.sub("", body)):
         whole = _match_body([Cut(body)], body, house)
         if whole:

@@ -45,7 +45,7 @@ _BAND_WORD = re.compile(
 _UNIT_BRACKET = re.compile(r"\s*(?:[(\[][^()\[\]\d]{1,8}[)\]]|,?\s*\b(?:dBi|dBd|dB))\s*$")
 _LISTED = re.compile(r"(?<![\w/])[^\W\d][\w-]*(?:\s*/\s*[^\W\d][\w-]*){1,2}(?![\w/])")
 _WITHOUT = re.compile(r"\bw/o\b", re.IGNORECASE)
-_THREE_SIDES = re.compile(r"\b[A-Z]\s?[x×/]\s?[A-Z]\s?[x×/]\s?[A-Z]\b", re.IGNORECASE)
+_SYMBOL = re.compile(r"(?:.*\b)?[A-Z]\s?[x×/]\s?[A-Z]\s?[x×/]\s?[A-Z]\b|d_?[hvxyz]\b", re.IGNORECASE)
 _BAR = re.compile(r"\s*\|\s*")
 _ITEM = r"[^\W\d][^()\[\]/]*"
 _LISTED_IN_BRACKET = re.compile(
@@ -125,7 +125,7 @@ class Labels:
         words = runs(text)
         if len(text) > _LONGEST:
             return False
-        if _THREE_SIDES.search(text):
+        if _SYMBOL.match(text):
             return True
         if not any(stem(word) in self._vocabulary for word in words):
             return False

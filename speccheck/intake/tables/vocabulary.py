@@ -5,12 +5,18 @@ from __future__ import annotations
 import re
 from functools import cache, lru_cache
 
-from speccheck.dictionary import concept_words, synonyms
+from speccheck.dictionary import concept_words, spellings, synonyms
 from speccheck.intake.tables.words import fold
 from speccheck.kept import kept
 from speccheck.quantities.units import unit_name
 
-_SOURCES = ("data/headings/*.toml", "intake/**/vocabulary.py", "intake/**/words.py", "**/units.py")
+_SOURCES = (
+    "data/headings/*.toml",
+    "dictionary/*.py",
+    "intake/**/vocabulary.py",
+    "intake/**/words.py",
+    "**/units.py",
+)
 _RUN = re.compile(r"[^\W\d_]+")
 
 
@@ -33,5 +39,5 @@ def vocabulary() -> frozenset[str]:
 
 def _first_letters() -> frozenset[str]:
     texts = (text for table in synonyms().values() for headings in table.values() for text in headings)
-    words = set(runs("\n".join(texts))).union(concept_words())
+    words = set(runs("\n".join(texts))).union(concept_words(), spellings())
     return frozenset(stem(word) for word in words if not unit_name(word))
