@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import os
 import tempfile
-from collections.abc import Iterator, Sequence
+from collections.abc import Iterator
 from contextlib import contextmanager
 from pathlib import Path
 from typing import IO
@@ -56,11 +56,10 @@ def write_text_atomic(path: Path | str, text: str) -> None:
     write_bytes_atomic(path, text.encode("utf-8", "replace"))
 
 
-def remove_unfinished(folder: Path, starts: Sequence[str]) -> None:
-    """Remove what killed programs left of the files in `folder` whose names start so."""
-    wanted = tuple(start[:_NAMED] for start in starts)
+def remove_unfinished(folder: Path, start: str) -> None:
+    """Remove what a killed program left of the files in `folder` whose names start so."""
     for left in folder.glob(".*.part"):
-        if left.name[1:].startswith(wanted):
+        if left.name[1:].startswith(start[:_NAMED]):
             left.unlink(missing_ok=True)
 
 

@@ -2,12 +2,12 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Generator, Iterable, Iterator, Sequence
-from contextlib import closing, contextmanager, suppress
+from collections.abc import Callable, Generator, Iterable, Sequence
+from contextlib import closing, suppress
 from pathlib import Path
 
 from speccheck import __version__
-from speccheck.batch.finished import rules_digest, sweep_unfinished
+from speccheck.batch.finished import rules_digest, under_way
 from speccheck.batch.inputs import BidFile, find_bids
 from speccheck.batch.work import Rules, do_bid
 from speccheck.records import Settings, Tender
@@ -54,7 +54,7 @@ def assess_many(
     bids = find_bids(paths, tender_file=tender_file)
     rules = _rules(tender, settings, formats, Path(out), resume=resume)
     results: dict[int, Bid] = {}
-    with _tidy(bids, rules.out), closing(_results(bids, rules, jobs)) as finished:
+    with closing(_results(bids, rules, jobs)) as finished:
         for place, result in finished:
             results[place] = result
             if progress is not None:
@@ -63,7 +63,8 @@ def assess_many(
     if len(bids) > 1 or sum(len(bid.offers) for bid in evaluation.bids) > 1:
         from speccheck.report.offers.comparison import write_comparison  # noqa: PLC0415 - not for a single offer
 
-        with suppress(PdfUnavailableError):  # the note of every bid tells it
+        # that there is no PDF is told by the note of every bid
+        with suppress(PdfUnavailableError), under_way(rules.out, "comparison", "comparison"):
             write_comparison(evaluation, rules.out, formats)
     return evaluation
 
@@ -75,16 +76,6 @@ def _results(bids: Sequence[BidFile], rules: Rules, jobs: int) -> Generator[tupl
     from speccheck.batch.pool import run  # noqa: PLC0415 - the process pool is not for a single bid
 
     return run(bids, rules, jobs)
-
-
-@contextmanager
-def _tidy(bids: Sequence[BidFile], out: Path) -> Iterator[None]:
-    """No unfinished file before or after, whatever was killed."""
-    sweep_unfinished(out, bids)
-    try:
-        yield
-    finally:
-        sweep_unfinished(out, bids)
 
 
 def evaluate(bids: Sequence[Bid], tender: Tender | None, settings: Settings, digest: str = "") -> Evaluation:

@@ -8,12 +8,12 @@ from __future__ import annotations
 
 import hashlib
 import json
-from collections import defaultdict
-from collections.abc import Sequence
+from collections.abc import Iterator, Sequence
+from contextlib import contextmanager
 from pathlib import Path
 
 from speccheck.atomic import remove_unfinished, write_text_atomic
-from speccheck.batch.inputs import BidFile
+from speccheck.errors import OutputError
 from speccheck.records import Settings, Tender
 from speccheck.records.evaluations import Bid
 from speccheck.report.codec import decode, encode
@@ -73,11 +73,27 @@ def read_mark(out: Path, path: Path, rules: str) -> Bid | None:
     return bid if whole and bid.sha256 and bid.sha256 == file_digest(path) else None
 
 
-def sweep_unfinished(out: Path, bids: Sequence[BidFile]) -> None:
-    """Remove the unfinished files that an earlier run of the same bids left when it was killed."""
-    starts = defaultdict(list, {out: ["comparison."] if len(bids) > 1 else []})
-    for bid in bids:
-        starts[out / bid.folder].append(f"{bid.path.stem}.")
-    for folder, names in starts.items():
-        remove_unfinished(folder, names)
-        remove_unfinished(folder / MARKS_FOLDER, names)
+@contextmanager
+def under_way(out: Path, name: str, stem: str) -> Iterator[None]:
+    """Work on outputs whose names start with `stem`; a run that was killed at it is tidied up first.
+
+    A file tells that the work is begun, so that only then the folder is searched: with a hundred thousand
+    bids in one folder a search for each of them would take longer than the bids.
+
+    Raises
+    ------
+    OutputError : the folder cannot be written to
+    """
+    begun = out / MARKS_FOLDER / f"{name}.begun"
+    try:
+        begun.parent.mkdir(parents=True, exist_ok=True)
+        if begun.exists():
+            remove_unfinished(out, f"{stem}.")
+            remove_unfinished(begun.parent, f"{stem}.")
+        begun.touch()
+    except OSError as error:
+        raise OutputError(str(out), error.strerror or str(error)) from error
+    try:
+        yield
+    finally:
+        begun.unlink(missing_ok=True)

@@ -11,7 +11,7 @@ from dataclasses import dataclass, replace
 from pathlib import Path
 
 from speccheck import pipeline
-from speccheck.batch.finished import file_digest, read_mark, write_mark
+from speccheck.batch.finished import file_digest, read_mark, under_way, write_mark
 from speccheck.batch.inputs import BidFile
 from speccheck.errors import OutputError, UnusableInputError
 from speccheck.records import Assessment, Settings, Tender
@@ -42,9 +42,8 @@ def do_bid(bid: BidFile, rules: Rules) -> Bid:
         if done is not None:
             return replace(done, path=str(bid.path), resumed=True)
     try:
-        out.mkdir(parents=True, exist_ok=True)
-        assessment = pipeline.assess(bid.path, tender=rules.tender, settings=rules.settings)
-        outputs, note = _outputs(assessment, bid.path, out, rules.formats)
+        with under_way(out, bid.path.name, bid.path.stem):
+            return _done(bid, rules, out)
     except (UnusableInputError, OutputError) as error:
         return failed(bid, str(error))
     except Exception as error:
@@ -52,6 +51,11 @@ def do_bid(bid: BidFile, rules: Rules) -> Bid:
         return failed(
             bid, f"{bid.path.name}: the program failed on this file ({kind}: {error}); please report it"
         )
+
+
+def _done(bid: BidFile, rules: Rules, out: Path) -> Bid:
+    assessment = pipeline.assess(bid.path, tender=rules.tender, settings=rules.settings)
+    outputs, note = _outputs(assessment, bid.path, out, rules.formats)
     result = Bid(
         path=str(bid.path),
         file=assessment.submission.file,
