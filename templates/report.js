@@ -128,12 +128,12 @@
     asked.after(button);
   }
 
-  // Wide tables scroll in their own frame, which the keyboard must reach.
-  for (const frame of document.querySelectorAll(".wide")) {
+  // Wide tables and figures scroll in their own frame, which the keyboard must reach.
+  for (const frame of document.querySelectorAll(".wide, figure")) {
     if (frame.scrollWidth <= frame.clientWidth) continue;
     frame.setAttribute("tabindex", "0");
     frame.setAttribute("role", "group");
-    const name = frame.querySelector("caption, summary");
+    const name = frame.querySelector("caption, summary, .figure-title");
     frame.setAttribute("aria-label", name ? name.textContent.trim() : frame.querySelector("table").getAttribute("aria-label"));
   }
 })();
