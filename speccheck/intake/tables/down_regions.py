@@ -71,7 +71,8 @@ def _answers(marks: Marks, row: int, column: int, cell: Cell) -> bool:
     """Whether a cell may be the value of the label before it: no heading, or the label again, at the end."""
     said = marks.headings.get((row, cell.column))
     label = marks.headings[row, column]
-    return said is None or (said.parameters == label.parameters and cell is marks.rows[row][-1])
+    again = said is not None and said.parameters == label.parameters and not label.condition
+    return said is None or (again and cell is marks.rows[row][-1])
 
 
 def _heads_a_list(marks: Marks, row: int, column: int, beside: Cell) -> bool:
