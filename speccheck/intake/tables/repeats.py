@@ -16,6 +16,7 @@ _DITTO = re.compile(
 )
 _HIGHEST = 2_000
 _LONGEST = 12
+_LONGEST_NUMBER = 5
 _FEWEST = 4
 
 
@@ -40,9 +41,9 @@ def meant(grid: Grid, cell: Cell) -> Cell:
 
 def numbers_columns(cells: list[Cell]) -> bool:
     """Whether a row numbers the columns of a table: 1, 2, 3 … or (a), (b), (c) …"""
-    marks = [re.sub(r"\.0$", "", cell.text).strip(" ()[].").lower() for cell in cells]
-    if len(marks) < _FEWEST:
+    if len(cells) < _FEWEST or any(len(cell.text) > _LONGEST_NUMBER for cell in cells[:2]):
         return False
+    marks = [re.sub(r"\.0$", "", cell.text).strip(" ()[].").lower() for cell in cells]
     if all(mark.isdecimal() and len(mark) <= 3 for mark in marks):
         numbers = [int(mark) for mark in marks]
     elif all(len(mark) == 1 and "a" <= mark <= "z" for mark in marks):
