@@ -159,7 +159,7 @@ def _without_notes(cut: Cut) -> Iterator[Cut]:
     brackets = [b.group(1).strip() for b in _BRACKETS.finditer(cut.text)]
     main, *others = [s.strip() for s in _SPLIT_NOTES.split(_BRACKETS.sub(" ", cut.text)) if s.strip()] or [""]
     notes = [n for n in (*others, *brackets) if n][:5]
-    droppable = [n for n in notes if not vital_words().intersection(fold(n))]
+    droppable = [n for n in notes if not (vital_words().intersection(fold(n)) or unit_name(n))]
     for size in range(1, len(droppable) + 1):
         for left_out in itertools.combinations(droppable, size):
             kept = [n for n in notes if n not in left_out]

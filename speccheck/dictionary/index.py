@@ -11,6 +11,7 @@ from speccheck.dictionary.parameters import parameters, synonyms
 from speccheck.kept import kept
 
 _LONGEST_SUGGESTED = 80
+_QUALIFIERS = frozenset({"max", "min", "typical", "mean", "cw", "rms", "rated"})
 _SOURCES = ("data/parameters.toml", "data/headings/*.toml", "dictionary/*.py")
 _TRANSCRIBED = str.maketrans({"ä": "ae", "ö": "oe", "ü": "ue", "Ä": "Ae", "Ö": "Oe", "Ü": "Ue"})
 
@@ -67,8 +68,8 @@ def suggestions(text: str) -> tuple[str, ...]:
     words = fold(text)[:8]
     if not words or len(text) > _LONGEST_SUGGESTED:
         return ()
-    if key_of(words) in _ambiguous():
-        return (_ambiguous()[key_of(words)],)
+    if is_ambiguous(text):
+        return (_ambiguous()[key_of(tuple(word for word in words if word not in _QUALIFIERS))],)
     near: dict[tuple[str, str], int] = {}
     for stem in {word[:5] for word in words if len(word) > 2}:
         for entry in _by_stem().get(stem, ()):
@@ -82,7 +83,8 @@ def suggestions(text: str) -> tuple[str, ...]:
 @functools.lru_cache(maxsize=1024)
 def is_ambiguous(text: str) -> bool:
     """Whether a heading is known to have several meanings, such as 'Power'."""
-    return key_of(fold(text)) in _ambiguous()
+    words = tuple(word for word in fold(text) if word not in _QUALIFIERS)
+    return key_of(words) in _ambiguous()
 
 
 @functools.cache

@@ -282,3 +282,21 @@ def test_the_order_of_intermodulation_is_no_second_figure(tmp_path: Path) -> Non
         ["Weight (kg)", 12],
     ]
     assert _lines(tmp_path, rows, "passive_intermodulation") == ["X-1: B3 passive_intermodulation ≤-150 dBc"]
+
+
+@pytest.mark.parametrize(
+    ("label", "key"),
+    [
+        ("Gain shall be not less than 17 dBi", "gain"),
+        ("Vertical half-power beamwidth not exceeding 8°", "vertical_beamwidth"),
+        ("VSWR shall not exceed 1.5", "vswr"),
+        ("Weight shall not exceed 20 kg (without clamps)", "weight"),
+        ("Gewinn mindestens 17 dBi", "gain"),
+        ("Ganancia no menor de 17 dBi", "gain"),
+        ("ROE ≤ 1,5:1", "vswr"),
+        ("Gain: min. 17 dBi", "gain"),
+    ],
+)
+def test_a_demand_in_the_label_says_nothing_of_the_offer(label: str, key: str) -> None:
+    found = Labels({}).of(label)
+    assert (found.parameters, found.sense) == ((key,), "nominal")

@@ -8,9 +8,10 @@ from dataclasses import dataclass, replace
 
 from speccheck.dictionary import match_heading, parameters
 from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
+from speccheck.intake.tables.demands import demanded
 from speccheck.intake.tables.vocabulary import runs, stem, vocabulary
 from speccheck.intake.tables.words import column_role, is_counting_unit
-from speccheck.quantities.units import unit_name
+from speccheck.quantities import answers, dimension, unit_name
 
 FREQUENCY_KEYS = frozenset({"frequency_range", "operating_bands"})
 _LONGEST = 160
@@ -37,7 +38,6 @@ _FREQUENCIES = re.compile(
 _CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
 _STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
-_DEMAND = re.compile(r"(.*\w.*?)\s*[:,;–-]?\s*(?:[≥≤<>=]+)\s*[-−+±]?\d.*$")
 _BAND_WORD = re.compile(
     r"\b(?:(?:in|im|en|dans|na|w|nel\w*|la|der|the)\s+)*(?:sub-?)?(?:band|bande|banda|pasmo|pasmie|teilband)\b",
     re.I,
@@ -111,10 +111,10 @@ class Labels:
             self._with_list,
             self._with_tilts,
             self._with_statistics,
+            self._with_demand,
             self._with_unit,
             self._match,
             self._with_bands,
-            self._with_demand,
         )
         for found in (attempt(cleaned) for attempt in attempts):
             if found:
@@ -204,8 +204,11 @@ class Labels:
 
     def _with_demand(self, text: str) -> Label:
         """'Vertical beamwidth at -3 dB ≤ 8°': what is asked for stands behind the name of the parameter."""
-        cut = _DEMAND.match(text)
-        return replace(self.of(cut[1]), sense="nominal") if cut else Label(text)
+        names, unit = demanded(text)
+        found = next((label for name in names if (label := self.of(name))), None)
+        if found is None or not answers(unit, dimension(parameters()[found.parameters[0]].unit)):
+            return Label(text)
+        return replace(found, sense="nominal")
 
     def _with_bands(self, text: str) -> Label:
         bands = find_bands(text)
