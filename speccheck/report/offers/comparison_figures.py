@@ -13,7 +13,7 @@ from speccheck.report.pages.view import label
 
 MOST_CHARTS = 12
 MOST_OFFERS = 24
-_WIDTH, _ROW = 320, 16
+_WIDTH, _ROW = 330, 16
 _OUTSIDE = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
 _MOST_NAMED = 4
 
@@ -75,8 +75,8 @@ def _strip(requirement: Requirement, points: Sequence[Point], numbers: Numbers) 
             for value in ends:
                 canvas.diamond(scale(value), y, 4, mark_for(cell.verdict).tone)
         shown = min(cells, key=lambda c: c.margin if c.margin is not None else float("inf"))
-        written = numbers.stated(_rounded(shown), requirement.unit)
-        canvas.write(258, y + 4, f"{mark_for(shown.verdict).symbol} {written}", style="small")
+        written = _short(_rounded(shown), requirement.unit, numbers)
+        canvas.write(254, y + 4, f"{mark_for(shown.verdict).symbol} {written}", style="small")
     name = label(requirement.parameter) if requirement.parameter else requirement.wording[:40]
     unit = shown_unit(requirement.unit)
     canvas.write(142, bottom + 26, f"{name}{f' [{unit}]' if unit else ''}; dashed: limit", "middle", "small")
@@ -93,6 +93,14 @@ def _strip(requirement: Requirement, points: Sequence[Point], numbers: Numbers) 
             for n, who, c in points
         ),
     )
+
+
+def _short(value: float | tuple[float, float] | None, unit: str, numbers: Numbers) -> str:
+    """A figure beside its line, a range without its unit, which the axis names."""
+    if not isinstance(value, tuple):
+        return numbers.stated(value, unit)
+    low, high = map(numbers.plain, value)
+    return f"{low}–{high}" if value[0] >= 0 else f"{low} to {high}"
 
 
 def _in_words(points: Sequence[Point], unit: str, numbers: Numbers) -> str:
