@@ -30,7 +30,7 @@ _BOUND = (
 _SIGN = r"(?:[≥≤<>=]+)"
 _DEMAND = re.compile(
     rf"(?P<name>\S.*?)\s*[:,;–-]?\s*(?:{_SHALL}\s+{_BE}\s*)?"
-    rf"(?:(?:{_BOUND})\s*{_SIGN}?|{_SIGN}|(?<=exceed)|(?<=dépasser))\s*"
+    rf"(?:(?<!\w)(?:{_BOUND})(?!\w)\s*{_SIGN}?|{_SIGN}|(?<=exceed)|(?<=dépasser))\s*"
     r"[-−+±]?\d[\d.,]*(?:\s?[:/]\s?1(?!\d))?\s?(?P<unit>[^\W\d_]{1,7}(?:/[^\W\d_]{1,3})?|[°%])?"
     r"[^()\[\]]*(?P<notes>(?:[(\[][^()\[\]\d]*[)\]])?)\W*$",
     re.IGNORECASE,
