@@ -28,6 +28,7 @@ _BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
 _MOST_COUNTED = 2
 """Words behind a number that is no item number: '64 TRX', but not '12 Number of ports'."""
 _FEWEST_HEADINGS = 4
+_FEWEST_FILLED, _FEWEST_LETTERS = 3, 3
 _NAME_WITH_NUMBER = re.compile(r"[^\W\d_]\s+\d+\w{0,2}$")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
@@ -68,9 +69,20 @@ class Marks:
         return [cell.column for cell in self.rows.get(row, ()) if (row, cell.column) in self.headings]
 
 
+def _rows(grid: Grid) -> dict[int, list[Cell]]:
+    """Cells by row; a title said again in every cell, as some programs unfold merged cells, counts once."""
+    rows = grid.rows()
+    for row, cells in rows.items():
+        first = cells[0].raw
+        if len(cells) >= _FEWEST_FILLED and isinstance(first, str) and first == cells[1].raw:
+            if all(cell.raw == first for cell in cells) and sum(map(str.isalpha, first)) >= _FEWEST_LETTERS:
+                rows[row] = cells[:1]
+    return rows
+
+
 def mark(grid: Grid, labels: Labels) -> Marks:
     """Look at every visible cell once."""
-    marks = Marks(grid, labels, grid.rows())
+    marks = Marks(grid, labels, _rows(grid))
     values: set[str] = set()
     for row, cells in marks.rows.items():
         following: Cell | None = None
