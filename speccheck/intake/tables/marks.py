@@ -73,11 +73,15 @@ def _rows(grid: Grid) -> dict[int, list[Cell]]:
     """Cells by row; a title said again in every cell, as some programs unfold merged cells, counts once."""
     rows = grid.rows()
     for row, cells in rows.items():
-        first = cells[0].raw
-        if len(cells) >= _FEWEST_FILLED and isinstance(first, str) and first == cells[1].raw:
-            if all(cell.raw == first for cell in cells) and sum(map(str.isalpha, first)) >= _FEWEST_LETTERS:
-                rows[row] = cells[:1]
+        if len(cells) >= _FEWEST_FILLED and cells[0].raw == cells[1].raw and _is_unfolded(cells):
+            rows[row] = cells[:1]
     return rows
+
+
+def _is_unfolded(cells: list[Cell]) -> bool:
+    first = cells[0].raw
+    words = isinstance(first, str) and sum(map(str.isalpha, first)) >= _FEWEST_LETTERS
+    return words and all(cell.raw == first for cell in cells)
 
 
 def mark(grid: Grid, labels: Labels) -> Marks:
