@@ -67,7 +67,7 @@ class AcrossReader:
         for row in [*self._table.heading_rows, *self._table.repeated]:
             for cell in cells_of(self._marks, self._table, row):
                 self._result.mark(cell, "heading")
-        self._guides = find_guides(self._grid, self._table, self._fields)
+        self._guides = find_guides(self._marks, self._table, self._fields)
         self._section_above()
         for row in self._table.data_rows:
             self._row(row, cells_of(self._marks, self._table, row))
@@ -132,7 +132,7 @@ class AcrossReader:
         if said is None and self._guides.named and cell.column == self._guides.named:
             self._start_panel(row, cell)
         elif said is None and not self._guides.named and self._names.is_title(cell.text):
-            self._title = cell
+            self._title = cell if self._marks.may_name(cell) else None
 
     def _place(self, row: int, cells: list[Cell]) -> None:
         guides, fields = self._guides, self._fields

@@ -128,9 +128,13 @@ def unit_of(found: Field) -> str:
     return found.label.unit or found.column.unit or "MHz"
 
 
-def find_guides(grid: Grid, table: Across, fields: dict[int, Field]) -> Guides:
+def find_guides(marks: Marks, table: Across, fields: dict[int, Field]) -> Guides:
     """Which columns name the panel and the band of a row."""
-    guides = Guides(_name_column(grid, table, fields))
+    grid = marks.grid
+    naming = fields
+    if marks.without.names:
+        naming = {i: f for i, f in fields.items() if all(map(marks.may_name, cells_below(grid, table, i)))}
+    guides = Guides(_name_column(grid, table, naming))
     columns = {i: cells_below(grid, table, i) for i in fields if i != guides.named}
     frequencies = [
         i for i in columns if _is_frequency(fields[i]) and holds_spans(columns[i], unit_of(fields[i]))

@@ -75,6 +75,8 @@ class SheetResult:
     roles: dict[tuple[int, int], str] = field(default_factory=dict)
     unread: list[tuple[Cell, str, str]] = field(default_factory=list)
     declared: list[Declared] = field(default_factory=list)
+    doubts: list[tuple[str, tuple[Cell, ...]]] = field(default_factory=list)
+    """What does not hang together in the reading of the sheet, and the cells it lies in."""
     _walked: int = 0
 
     def mark_claims(self) -> None:

@@ -249,7 +249,7 @@ class DownReader:
         if state.pending_title is None:
             return
         title, state.pending_title = state.pending_title, None
-        if self._panels.several:
+        if self._panels.several or not self._marks.may_name(title):
             return
         current = self._panels.first
         if not current.claims and self._names.is_title(title.text):
@@ -285,6 +285,8 @@ class DownReader:
             else "value without a heading"
         )
         for cell in beside:
+            if (cell.row, cell.column) in self._marks.lines:
+                continue  # lines of their own beside a group word
             if self._is_value(cell):
                 self._result.unread.append((cell, reason, self._marks.labels.suggestion(label_text)))
                 self._result.mark(cell, "unread")

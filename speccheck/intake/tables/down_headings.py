@@ -44,6 +44,8 @@ def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], besi
         return False
     if label is None or label.row != row or column_role(label.text):
         return all(isinstance(c.raw, str | int | float) for c in beside)
+    if not all(map(marks.may_name, cells)):
+        return False
     if marks.is_heading(label) or any(_FIGURE.fullmatch(c.text) for c in beside if isinstance(c.raw, str)):
         return False
     if any(column_role(c.text) or is_band_label(c.text) for c in beside):
@@ -71,14 +73,19 @@ def _holds_headings(marks: Marks, table: Down, column: int) -> bool:
     """Whether a column gives the labels in another language: under 'Désignation' stand no names of panels."""
     rows = range(table.top, table.bottom + 1)
     cells = [cell for row in rows if (cell := marks.grid.cells.get((row, column))) is not None]
-    return sum(marks.is_heading(cell) for cell in cells) * 3 > len(cells) > 0
+    no_names = sum(marks.is_heading(cell) or not marks.may_name(cell) for cell in cells)
+    return no_names * 3 > len(cells) > 0
 
 
 def _holds_merged_names(marks: Marks, table: Down, column: int) -> bool:
     covering = [marks.grid.covering(row, column) for row in range(table.top, table.bottom + 1)]
     cells = {cell.row: cell for cell in covering if cell is not None}.values()
-    return bool(cells) and all(
-        marks.grid.span(c).bottom > c.row and (codes(c.text) or is_numbered_name(c.text)) for c in cells
+    return (
+        all(map(marks.may_name, cells))
+        and bool(cells)
+        and all(
+            marks.grid.span(c).bottom > c.row and (codes(c.text) or is_numbered_name(c.text)) for c in cells
+        )
     )
 
 
@@ -147,6 +154,9 @@ def describe_columns(
         columns[index] = describe(index, stack, marks.labels)
         _head_in_table(columns[index], used[index], result)
     settle_roles(columns, used, _shares(marks, table, columns, used))
+    for index, column in columns.items():
+        if column.role == "parameter" and _holds_headings(marks, table, index):
+            column.role = "group"
     return columns
 
 

@@ -60,6 +60,7 @@ class DownPanels:
     def open(self, names: Names, heading_rows: list[int]) -> None:
         """Make a draft for each panel named over the columns, or one named by the title."""
         values = self._value_columns()
+        self._unname([c for c in values if not self._may_name(c)])
         self.model_row = self._find_model_row(values)
         if not self.model_row:
             self._name_arrays(values)
@@ -131,6 +132,10 @@ class DownPanels:
         names = {column.name for column in values if column.words}
         return len(names) == 1 and not any(letter.isdigit() for name in names for letter in name)
 
+    def _may_name(self, column: Column) -> bool:
+        named = column.name_cell is None or self._marks.may_name(column.name_cell)
+        return named and not self._marks.without.over_columns
+
     @staticmethod
     def _unname(values: list[Column]) -> None:
         for column in values:
@@ -194,8 +199,9 @@ class DownPanels:
         if len(values) < 2:
             return 0
         for row in self._rows_of(NAME_KEYS):
-            cells = [self._marks.grid.cells.get((row, column.index)) for column in values]
-            if len({cell.text for cell in cells if cell is not None}) > 1:
+            found = (self._marks.grid.cells.get((row, column.index)) for column in values)
+            cells = [cell for cell in found if cell is not None]
+            if len({cell.text for cell in cells}) > 1 and all(map(self._marks.may_name, cells)):
                 return row
         return 0
 

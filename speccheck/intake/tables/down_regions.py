@@ -139,7 +139,9 @@ def _runs(marks: Marks, column: int, rows: list[int], taken: set[int]) -> list[t
     for row in rows[1:]:
         between = range(previous + 1, row)
         cut = any(r in taken or heads_columns(marks, r, column) for r in between)
-        if cut or (row > start and _names_panels_again(marks, row, column, range(start, row))):
+        above = range(start, row)
+        again = marks.without.repeats and _states_again(marks, row, column, above)
+        if cut or again or (row > start and _names_panels_again(marks, row, column, above)):
             runs.append((start, previous))
             start = row
         previous = row
@@ -152,6 +154,11 @@ def _names_panels_again(marks: Marks, row: int, column: int, above: range) -> bo
         return False
     said = [r for r in above if (r, column) in marks.headings]
     return len(said) > 1 and any(_names_columns(marks, r, column) for r in said)
+
+
+def _states_again(marks: Marks, row: int, column: int, above: range) -> bool:
+    text = marks.grid.cells[row, column].text
+    return any(marks.grid.cells[r, column].text == text for r in above if (r, column) in marks.headings)
 
 
 def _names_columns(marks: Marks, row: int, column: int) -> bool:

@@ -15,6 +15,7 @@ from speccheck.intake.tables.marks import Marks, looks_like_value, mark
 from speccheck.intake.tables.naming import Names
 from speccheck.intake.tables.pasted import read_lines
 from speccheck.intake.tables.regions import Across, find_across
+from speccheck.intake.tables.second_look import most_coherent
 from speccheck.intake.tables.words import column_role
 
 _LONGEST_FIGURE = 40
@@ -22,11 +23,14 @@ _LONGEST_FIGURE = 40
 
 def read_layout(grid: Grid, labels: Labels, stem: str) -> SheetResult:
     """Find and walk all tables of a sheet; every visible cell ends up with a role."""
-    marks = mark(grid, labels)
-    result = SheetResult(grid)
-    names = Names(grid, stem)
+    return most_coherent(mark(grid, labels), lambda marks: _walk(marks, stem))
+
+
+def _walk(marks: Marks, stem: str) -> SheetResult:
+    result = SheetResult(marks.grid)
+    names = Names(marks.grid, stem)
     taken: set[int] = set()
-    for table in find_across(marks):
+    for table in () if marks.without.across else find_across(marks):
         taken.update(table.heading_rows, table.data_rows, table.repeated)
         for part in _side_by_side(marks, table):
             AcrossReader(marks, part, result, names).read()

@@ -37,10 +37,12 @@ _LINE_MARKS = (":", "=", "\t", "...", "…")
 class Without:
     """What a second reading of a sheet does without, where the first one did not hang together.
 
-    `names` are places of cells that name no panel; then names over columns, and tables with headings across.
+    `names` are places of cells that name no panel; the others: tables that state a heading twice, names over
+    columns, and tables with headings across.
     """
 
     names: frozenset[tuple[int, int]] = frozenset()
+    repeats: bool = False
     over_columns: bool = False
     across: bool = False
 

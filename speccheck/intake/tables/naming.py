@@ -140,6 +140,7 @@ class Names:
             if any(p not in self._titles and result.roles.get(p, "note") != "note" for p in places):
                 break
             titles = [c for c in near if isinstance(c.raw, str) and not is_band_label(c.text)]
+            titles = [c for c in titles if marks.may_name(c)]
             candidates += [c for c in titles if not (marks.is_heading(c) or is_group_heading(c.text))]
         scores = [_score(c.text, sheet) for c in candidates]
         if any(scores):

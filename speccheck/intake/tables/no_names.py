@@ -82,4 +82,5 @@ def _is_array(words: str) -> bool:
 
 
 def _is_sheet_word(words: str) -> bool:
-    return len(fold(words).split()[-1:][0]) > 1 and is_generic_sheet_name(words)
+    last = fold(words).rpartition(" ")[2]  # 'Panel A' is a name
+    return len(last) > 1 and is_generic_sheet_name(words)

@@ -1,0 +1,78 @@
+"""A sheet whose reading does not hang together is read again without the guesses that may have misled."""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Iterable, Iterator
+from dataclasses import replace
+
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.tables.claims import SheetResult
+from speccheck.intake.tables.coherence import Doubt, doubts_of, incoherence
+from speccheck.intake.tables.marks import Marks, Without, looks_like_value
+
+_ROUNDS = 3
+"""Times a name that proves to be none is given up for the next best."""
+_BETTER = 0.05
+"""By so much another reading must hang together better than one that takes more for granted."""
+
+Place = tuple[int, int]
+Walk = Callable[[Marks], SheetResult]
+
+
+def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
+    """Read a sheet; where that does not hang together, in the few other ways too, and keep the best of them.
+
+    What the best of them leaves in doubt is noted in it. An ordinary sheet is read once.
+    """
+    best = walk(marks)
+    doubts = doubts_of(best, marks)
+    if not doubts:
+        return best
+    least = incoherence(best, marks, doubts)
+    for other in _other_ways(marks, doubts, walk):
+        result = walk(other)
+        left = doubts_of(result, other)
+        score = incoherence(result, marks, left)
+        if score < least - _BETTER:
+            best, doubts, least = result, left, score
+        if not left and best is result:
+            break
+    best.doubts = [(doubt.text, doubt.cells) for doubt in doubts if doubt.weight]
+    return best
+
+
+def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks]:
+    """The sheet without misleading names; also without repeats, names over columns, or headings across."""
+    wrong = _places(cell for doubt in doubts for cell in doubt.no_names)
+    names = wrong | _places(cell for doubt in doubts for cell in doubt.names)
+    plain = {p: label for p, label in marks.headings.items() if not _begins_with_figure(marks, p)}
+    for bare in [marks] if len(plain) == len(marks.headings) else [replace(marks, headings=plain), marks]:
+        yield from _without_names(bare, wrong, walk)
+        for without in (
+            Without(names),
+            Without(wrong, repeats=True),
+            Without(wrong, over_columns=True),
+            Without(wrong, across=True),
+        ):
+            yield replace(bare, without=without)
+
+
+def _without_names(marks: Marks, names: frozenset[Place], walk: Walk) -> Iterator[Marks]:
+    """The sheet without the names that cannot be any, and without those that then take their place."""
+    for _ in range(_ROUNDS):
+        without = replace(marks, without=Without(names))
+        yield without
+        doubts = doubts_of(walk(without), without)
+        more = names | _places(cell for doubt in doubts for cell in doubt.no_names)
+        if more == names:
+            return
+        names = more
+
+
+def _places(cells: Iterable[Cell]) -> frozenset[Place]:
+    return frozenset((cell.row, cell.column) for cell in cells)
+
+
+def _begins_with_figure(marks: Marks, place: Place) -> bool:
+    cell = marks.grid.cells[place]
+    return looks_like_value(cell) and cell.text.lstrip(" <>≤≥±~+-−")[:1].isdigit()
