@@ -300,3 +300,42 @@ def test_the_order_of_intermodulation_is_no_second_figure(tmp_path: Path) -> Non
 def test_a_demand_in_the_label_says_nothing_of_the_offer(label: str, key: str) -> None:
     found = Labels({}).of(label)
     assert (found.parameters, found.sense) == ((key,), "nominal")
+
+
+def test_lines_without_a_colon_belong_to_the_list_around_them(tmp_path: Path) -> None:
+    rows = [
+        ["Panel KX-12"],
+        ["Gain: 17.2 dBi"],
+        ["Vertical beamwidth - 7 deg"],
+        ["VSWR < 1.5"],
+        ["Weight 8.5 kg"],
+    ]
+    assert _lines(tmp_path, rows, "gain", "vertical_beamwidth", "vswr", "weight") == [
+        "KX-12: A2 gain 17.2 dBi",
+        "KX-12: A3 vertical_beamwidth 7 deg",
+        "KX-12: A4 vswr ≤1.5",
+        "KX-12: A5 weight 8.5 kg",
+    ]
+
+
+def test_a_list_may_have_no_colon_at_all(tmp_path: Path) -> None:
+    rows = [["Panel KX-14"], ["Gain 17.2 dBi"], ["Isolation > 30 dB"], ["Dimensions 1310 x 155 x 80 mm"]]
+    assert _lines(tmp_path, rows, "gain", "port_isolation", "height") == [
+        "KX-14: A2 gain 17.2 dBi",
+        "KX-14: A3 port_isolation ≥30 dB",
+        "KX-14: A4 height 1.31 m",
+    ]
+
+
+def test_lines_in_one_cell_beside_a_group_word_are_read(tmp_path: Path) -> None:
+    rows = [
+        ["Item", "Data"],
+        ["Model", "TR-6"],
+        ["Electrical", "Gain: 17.2 dBi\nVSWR: < 1.5"],
+        ["Weight", "8 kg"],
+    ]
+    assert _lines(tmp_path, rows, "gain", "vswr", "weight") == [
+        "TR-6: B3 gain 17.2 dBi",
+        "TR-6: B3 vswr ≤1.5",
+        "TR-6: B4 weight 8 kg",
+    ]

@@ -11,12 +11,15 @@ from speccheck.intake.panels.told_by_value import label_by_values
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.labels import Label, looks_like_line, split_lines
+from speccheck.intake.tables.loose_lines import loose_line
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
 from speccheck.records import Band
 
 _WORD = re.compile(r"[^\W\d_]{3,}")
 _MOST_WORDS = 7
+_FEWEST = 3
+"""Lines without a colon that make a list of their own."""
 _NAME_KEYS = frozenset({"model", "panel_type"})
 
 
@@ -26,22 +29,45 @@ def read_lines(marks: Marks, result: SheetResult, names: Names) -> None:
     for place in sorted(marks.lines):
         if place not in result.roles:
             columns[place[1]].append(marks.grid.cells[place])
+    if not (columns or result.drafts):
+        columns = _loose_columns(marks)
     for column, cells in columns.items():
         if len(cells) == 1 and result.drafts and len(_WORD.findall(cells[0].text)) > _MOST_WORDS:
             continue  # a note below a table, 'Traffic beam: one user, uniform excitation of the whole array'
         last = cells[-1].row
-        while (below := marks.grid.cells.get((last + 1, column))) is not None and looks_like_line(below.text):
+        while (below := marks.grid.cells.get((last + 1, column))) is not None and (
+            looks_like_line(below.text) or _is_loose(marks, below)
+        ):
             last += 1
         first = cells[0].row
-        while _heads_lines(marks.grid.cells.get((first - 1, column)), result):
+        while (above := marks.grid.cells.get((first - 1, column))) is not None and (
+            _heads_lines(above, result) or _is_loose(marks, above)
+        ):
             first -= 1
         _Column(marks, result, names, column).read(first, last)
 
 
-def _heads_lines(cell: Cell | None, result: SheetResult) -> bool:
+def _loose_columns(marks: Marks) -> dict[int, list[Cell]]:
+    """Columns of lines without any colon, on a sheet that holds nothing else."""
+    columns: dict[int, list[Cell]] = defaultdict(list)
+    for cell in marks.grid.cells.values():
+        if _is_loose(marks, cell):
+            columns[cell.column].append(cell)
+    return {column: sorted(cells, key=_row) for column, cells in columns.items() if len(cells) >= _FEWEST}
+
+
+def _row(cell: Cell) -> int:
+    return cell.row
+
+
+def _heads_lines(cell: Cell, result: SheetResult) -> bool:
     """Whether a cell above the first line names the band of the lines below it."""
-    free = cell is not None and isinstance(cell.raw, str) and (cell.row, cell.column) not in result.roles
-    return free and cell is not None and is_band_label(cell.text)
+    free = isinstance(cell.raw, str) and (cell.row, cell.column) not in result.roles
+    return free and is_band_label(cell.text)
+
+
+def _is_loose(marks: Marks, cell: Cell) -> bool:
+    return isinstance(cell.raw, str) and loose_line(cell.text, marks.labels) is not None
 
 
 _SUPERSEDED = re.compile(
@@ -68,6 +94,8 @@ class _Column:
                     self._result.mark(cell, "unread")
             elif (known := _by_value(cell.text)) is not None:
                 self._claim(cell, *known)
+            elif isinstance(cell.raw, str) and (loose := loose_line(cell.text, self._marks.labels)):
+                self._claim(cell, *loose)
             elif looks_like_line(cell.text):
                 self._result.unread.append((cell, f"line '{cell.text[:80]}' has no known label", ""))
                 self._result.mark(cell, "unread")
