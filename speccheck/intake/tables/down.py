@@ -249,7 +249,7 @@ class DownReader:
         if state.pending_title is None:
             return
         title, state.pending_title = state.pending_title, None
-        if self._panels.several:
+        if self._panels.several or not self._marks.may_name(title):
             return
         current = self._panels.first
         if not current.claims and self._names.is_title(title.text):

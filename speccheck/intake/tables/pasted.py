@@ -10,7 +10,8 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.panels.told_by_value import label_by_values
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
-from speccheck.intake.tables.labels import Label, looks_like_line, split_lines
+from speccheck.intake.tables.labels import Label
+from speccheck.intake.tables.lines import looks_like_line, split_lines
 from speccheck.intake.tables.loose_lines import loose_line
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.naming import Names, model_name
@@ -101,7 +102,7 @@ class _Column:
                 self._result.mark(cell, "unread")
             elif isinstance(cell.raw, str) and is_band_label(cell.text):
                 self._section(cell, find_bands(cell.text).hull)
-            elif self._names.is_title(cell.text):
+            elif self._names.is_title(cell.text) and self._marks.may_name(cell):
                 self._title(cell, cell.text)
             else:
                 self._band, self._band_name = None, ""
