@@ -9,6 +9,7 @@ from dataclasses import dataclass, replace
 from speccheck.dictionary import match_heading, parameters
 from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.tables.demands import demanded
+from speccheck.intake.tables.lines import LINE
 from speccheck.intake.tables.vocabulary import runs, stem, vocabulary
 from speccheck.intake.tables.words import column_role, is_counting_unit
 from speccheck.quantities import answers, dimension, unit_name
@@ -52,7 +53,6 @@ _LISTED_IN_BRACKET = re.compile(
     rf"[(\[]\s*({_ITEM}\s[^()\[\]/]*(?:/\s*{_ITEM})+|{_ITEM}(?:/\s*{_ITEM}\s[^()\[\]/]+)+)\s*[)\]]"
 )
 _SEVERAL = re.compile(r"[xX×/*]")
-_LINE = re.compile(r"^\s*[-•*·]?\s*([^:=\t]{2,90}?)\s*(?::|=|\t|\.{3,}|…{2,})\s*(?=\S)(.+)$", re.DOTALL)
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
 
@@ -97,7 +97,7 @@ class Labels:
 
     def parse_line(self, text: str) -> tuple[Label, str] | None:
         """A line ``Label: value`` cut in two, when the label is known."""
-        match = _LINE.match(text)
+        match = LINE.match(text)
         if match is None:
             return None
         label = self.of(match[1])
@@ -148,6 +148,8 @@ class Labels:
 
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
+        if (parted := self._parted_by_bar(text)).parameters:
+            return parted
         text = _BAR.sub("/", text)
         bracket = _LISTED_IN_BRACKET.search(text)
         if bracket is not None:
@@ -156,6 +158,14 @@ class Labels:
         if not lists or not _names_something(text[: lists[-1].start()] + text[lists[-1].end() :]):
             return Label(text)
         return self._of_items(text, lists[-1].start(), lists[-1].end(), lists[-1][0])
+
+    def _parted_by_bar(self, text: str) -> Label:
+        """'VSWR | return loss, dB' heads two figures, each named in full."""
+        parts = [part for part in _BAR.split(text) if part]
+        found = [self._with_unit(part) or self._match(part) for part in parts] if len(parts) > 1 else []
+        keys = tuple(key for label in found for key in label.parameters)
+        several = len(set(keys)) == len(parts) and all(len(label.parameters) == 1 for label in found)
+        return replace(found[0], parameters=keys) if several and found else Label(text)
 
     def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
         """The heading of several figures, one for each item between `start` and `end` of a heading."""
@@ -275,21 +285,6 @@ def begins_with_unit(text: str) -> bool:
     """Whether a text is a unit with a note, such as 'N (150 km/h)'."""
     first = text.split(maxsplit=1)[0] if text.strip() else ""
     return bool(unit_name(first)) and not any(letter.isdigit() for letter in first)
-
-
-def looks_like_line(text: str) -> bool:
-    """Whether a text has the form ``Label: value``, known or not."""
-    return len(text) < 200 and _LINE.match(text) is not None
-
-
-def split_lines(text: str) -> list[str]:
-    """The lines of a cell; pieces between semicolons count as lines when each has a label."""
-    lines = [line.strip() for line in text.splitlines() if line.strip()]
-    split: list[str] = []
-    for line in lines:
-        pieces = [piece.strip() for piece in re.split(r"\s*[;|]\s*", line) if piece.strip()]
-        split += pieces if len(pieces) > 1 and all(map(looks_like_line, pieces)) else [line]
-    return split
 
 
 def statistic_of(text: str) -> str:

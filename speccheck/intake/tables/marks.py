@@ -13,9 +13,9 @@ from speccheck.intake.tables.labels import (
     Labels,
     is_heading_filler,
     is_unit,
-    split_lines,
     statistic_of,
 )
+from speccheck.intake.tables.lines import split_lines
 from speccheck.intake.tables.words import column_role
 
 _LONGEST = 2000
