@@ -102,7 +102,7 @@ class _Column:
                 self._result.mark(cell, "unread")
             elif isinstance(cell.raw, str) and is_band_label(cell.text):
                 self._section(cell, find_bands(cell.text).hull)
-            elif self._names.is_title(cell.text):
+            elif self._names.is_title(cell.text) and self._marks.may_name(cell):
                 self._title(cell, cell.text)
             else:
                 self._band, self._band_name = None, ""
