@@ -32,6 +32,10 @@ _ORDINAL = re.compile(r"(?:\s*\.)?\s*(?:er|e|ème|eme|rd|th|[ªº°])?\.?\s*(?:o
 """Behind a number: 'third order' is written '3. Ordnung', '3.er orden', '3ª ordem'."""
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
 _UNIT_BEFORE_BRACKET = re.compile(r"(?<=[^\W\d])\s([^\s,;:/()\[\]]{2,8}|[°%Ω])\s*(?=[(\[])")
+_UNIT_BEFORE_BOUND = re.compile(
+    r"\s*,\s*([^\s,;:()\[\]]{1,6})\s*,\s*((?:min|max|typ|nom)(?:imum|ical|inal)?\.?)$", re.IGNORECASE
+)
+_INCHES = re.compile(r"[(\[]\s*in\.?\s*[)\]]|[\s,/]\s*in\.?\s*$", re.IGNORECASE)
 _SPLIT_NOTES = re.compile(r"\s*[,;]\s+|\s+[-–:]\s+|:\s*|\s*@\s*|\s+/\s+")
 
 
@@ -51,7 +55,8 @@ def cuts(body: str) -> Iterator[Cut]:
     """
     whole = Cut(body)
     seen: set[Cut] = set()
-    for cut in itertools.chain([whole], _stages(_without_unit(whole)), _stages(whole)):
+    in_inches = [_without_unit(whole)] if _INCHES.search(body) else []  # 'in' is a preposition as well
+    for cut in itertools.chain(in_inches, [whole], _stages(_without_unit(whole)), _stages(whole)):
         if cut not in seen:
             seen.add(cut)
             yield cut
@@ -70,6 +75,20 @@ def _stages(start: Cut) -> Iterator[Cut]:
 
 
 def _without_unit(cut: Cut) -> Cut:
+    inside = _without_bracketed_unit(cut) or _without_inner_unit(cut)
+    if inside is not None:
+        return inside
+    trailing = _TRAILING_UNIT.search(cut.text)
+    if not trailing or re.search(r"(?<![A-Za-z])\d+$", cut.text[: trailing.start()]):
+        return cut
+    letter_alone = trailing.group()[0].isspace() and len(trailing.group(1)) < 2
+    name = unit_name(trailing.group(1))
+    if not name or (letter_alone and trailing.group(1) not in "°%Ω"):
+        return cut
+    return replace(cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=name)
+
+
+def _without_bracketed_unit(cut: Cut) -> Cut | None:
     for bracket in reversed(list(_BRACKETS.finditer(cut.text))):
         name = unit_name(bracket.group(1))
         if name:
@@ -79,18 +98,18 @@ def _without_unit(cut: Cut) -> Cut:
         if unit:
             rest = f"{cut.text[: bracket.start()]} ({others}) {cut.text[bracket.end() :]}"
             return replace(cut, text=rest, unit=unit)
+    return None
+
+
+def _without_inner_unit(cut: Cut) -> Cut | None:
+    """'Weight kg (without kit)' and 'Isolation, dB, min.': the unit stands before a bracket or a bound."""
     inner = _UNIT_BEFORE_BRACKET.search(cut.text)
-    if inner and (name := unit_name(inner.group(1))):  # 'Weight kg (without kit)'
-        rest = f"{cut.text[: inner.start()]} {cut.text[inner.end() :]}"
-        return replace(cut, text=rest, unit=name)
-    trailing = _TRAILING_UNIT.search(cut.text)
-    if not trailing or re.search(r"(?<![A-Za-z])\d+$", cut.text[: trailing.start()]):
-        return cut
-    letter_alone = trailing.group()[0].isspace() and len(trailing.group(1)) < 2
-    name = unit_name(trailing.group(1))
-    if not name or (letter_alone and trailing.group(1) not in "°%Ω"):
-        return cut
-    return replace(cut, text=cut.text[: trailing.start()].strip(" ,;:/"), unit=name)
+    if inner and (name := unit_name(inner.group(1))):
+        return replace(cut, text=f"{cut.text[: inner.start()]} {cut.text[inner.end() :]}", unit=name)
+    bound = _UNIT_BEFORE_BOUND.search(cut.text)
+    if bound and (name := unit_name(bound.group(1))):
+        return replace(cut, text=f"{cut.text[: bound.start()]}, {bound.group(2)}", unit=name)
+    return None
 
 
 def _without_letter(cut: Cut) -> Cut:

@@ -129,7 +129,13 @@ def _said_twice(body: str, house: Mapping[str, str]) -> HeadingMatch | None:
     makes another parameter, or a quality of one, is none.
     """
     gloss = _GLOSS.fullmatch(body)
-    parts = [part for part in (gloss.groups() if gloss else _TWICE.split(body)) if part.strip()]
+    found = _of_parts(gloss.groups(), house, glossed=True) if gloss else None
+    return found or _of_parts(_TWICE.split(body), house, glossed=False)
+
+
+def _of_parts(parts: Iterable[str], house: Mapping[str, str], *, glossed: bool) -> HeadingMatch | None:
+    """What the parts of a heading name alike; None where they differ, or where too little is known."""
+    parts = [part for part in parts if part.strip()]
     if not 2 <= len(parts) <= _MOST_LANGUAGES:
         return None
     found = [_match(part, house, suggest=False) for part in parts]
@@ -137,7 +143,7 @@ def _said_twice(body: str, house: Mapping[str, str]) -> HeadingMatch | None:
     silent = [part for part, match in zip(parts, found, strict=True) if not match.parameters]
     if len({match.parameters for match in known}) != 1 or any(match.tolerance_of for match in known):
         return None
-    if silent and (gloss or len(known) > 1 or any(map(_tells_apart, silent))):
+    if silent and (glossed or len(known) > 1 or any(map(_tells_apart, silent))):
         return None
     senses = {match.sense for match in known} - {"nominal"}
     return replace(

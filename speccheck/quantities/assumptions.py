@@ -10,7 +10,7 @@ from speccheck.quantities.content import CellContent, Quantity
 from speccheck.quantities.decimals import Expected
 from speccheck.quantities.units import convert, dimension
 
-_USUAL = {"length": ("mm", "cm"), "speed": ("km/h",), "force": ("kN",), "power": ("kW",)}
+_USUAL = {"length": ("mm", "cm", "in"), "speed": ("km/h",), "force": ("kN",), "power": ("kW",)}
 _SHARE = re.compile(r"(\d{1,3})\s?:\s?(\d{1,3})")
 _WHOLE_SHARE = 1.0
 
@@ -59,7 +59,9 @@ def _usual(found: Quantity, expected: Expected) -> Quantity:
         return replace(found, value=found.value * 100, unit="%")
     if all(expected.possible[0] <= n <= expected.possible[1] for n in numbers):
         return found
-    for unit in _USUAL.get(dimension(own), ()):
-        if all(expected.plausible[0] <= convert(n, unit, own) <= expected.plausible[1] for n in numbers):
-            return replace(found, unit=unit)
-    return found
+    likely = [
+        unit
+        for unit in _USUAL.get(dimension(own), ())
+        if all(expected.plausible[0] <= convert(n, unit, own) <= expected.plausible[1] for n in numbers)
+    ]
+    return replace(found, unit=likely[0]) if len(likely) == 1 else found  # centimetres or inches: not settled

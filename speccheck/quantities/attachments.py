@@ -24,7 +24,7 @@ _CONNECTOR = re.compile(
     re.IGNORECASE | re.VERBOSE,
 )
 _COUNT_BEFORE = re.compile(
-    r"\(?(\d{1,4})\)?\s*(?:[x×*]|ports?|pcs\.?|stk\.?|pieces|connectors?|st\.?)?\s*(?:of\s+|,\s*|:\s*|\(\s*)?$",
+    r"\(?(\d{1,4})\)?\s*(?:[x×*]|ports?|pcs\.?|stk\.?|pieces|connectors?|st\.?|off|nos?\.?)?\s*(?:of\s+|,\s*|:\s*|\(\s*)?$",
     re.IGNORECASE,
 )
 _COUNT_AFTER = re.compile(

@@ -339,3 +339,32 @@ def test_lines_in_one_cell_beside_a_group_word_are_read(tmp_path: Path) -> None:
         "TR-6: B3 vswr ≤1.5",
         "TR-6: B4 weight 8 kg",
     ]
+
+
+@pytest.mark.parametrize(
+    "label", ["Dimensions (H x W x D), in", "H x W x D (in)", "Length x Width x Depth, in."]
+)
+def test_in_behind_a_size_is_a_unit(tmp_path: Path, label: str) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], [label, "68.1 x 24.3 x 5.5"], ["Weight (kg)", 12]]
+    panel = read(tmp_path, rows).submission.panels[0]
+    sizes = {r.parameter: r.value for r in panel.readings if r.parameter in ("height", "width", "depth")}
+    # 0.0254 m an inch (NIST SP 811)
+    assert sizes == {
+        k: pytest.approx(v) for k, v in (("height", 1.72974), ("width", 0.61722), ("depth", 0.1397))
+    }
+
+
+def test_a_size_that_may_be_centimetres_or_inches_is_not_settled(tmp_path: Path) -> None:
+    rows = [["Model", "X-1"], ["Gain (dBi)", 17], ["Height", 68.1], ["Weight (kg)", 12]]
+    panel = read(tmp_path, rows).submission.panels[0]
+    (height,) = [r for r in panel.readings if r.parameter == "height"]
+    assert sorted(height.alternatives) == pytest.approx([0.681, 1.72974])
+
+
+@pytest.mark.parametrize(
+    ("heading", "unit", "sense"),
+    [("USLS (First Lobe), dB, min.", "dB", "min"), ("PIM, 3rd Order, 2 x 20 W, dBc, max.", "dBc", "max")],
+)
+def test_a_unit_before_a_bound(heading: str, unit: str, sense: str) -> None:
+    found = Labels({}).of(heading)
+    assert (found.unit, found.sense, len(found.parameters)) == (unit, sense, 1)
