@@ -13,8 +13,16 @@ from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.files.limits import Limits
 from speccheck.intake.files.opening import Book, open_book
 from speccheck.intake.panels.declared import contrary_notices
+from speccheck.intake.panels.doubted import Doubted
 from speccheck.intake.panels.joining import joined
-from speccheck.intake.panels.notices import book_notices, footnotes, grid_notices, note_notices, passed_over
+from speccheck.intake.panels.notices import (
+    book_notices,
+    doubt_notices,
+    footnotes,
+    grid_notices,
+    note_notices,
+    passed_over,
+)
 from speccheck.intake.panels.panels import Builder, Built
 from speccheck.intake.panels.reading import Reader
 from speccheck.intake.tables.claims import Draft, SheetResult
@@ -99,13 +107,15 @@ def account_of(book: Book, stem: str, headings: Mapping[str, str]) -> Account:
         raise _no_table(book, labels)
     texts = (cell.raw for grid in visible for cell in grid.cells.values() if isinstance(cell.raw, str))
     reader = Reader(book.file, decimal_habit(dict.fromkeys(texts)))
-    builder = Builder(reader, {result.grid.name: footnotes(result) for result in results})
+    doubted = Doubted({result.grid.name: result.doubts for result in results})
+    builder = Builder(reader, {result.grid.name: footnotes(result) for result in results}, doubted)
     built = [builder.build(draft) for draft in drafts]
     notices: list[Notice] = book_notices(book, reader.where)
     for grid in book.grids:
         notices += grid_notices(grid, reader.where)
     unread: list[Unread] = []
     for result in results:
+        notices += doubt_notices(result, reader.where)
         notices += note_notices(result, labels, reader.where)
         notices += contrary_notices(result.declared, result.grid.name, reader)
         unread += _layout_unread(result, reader)

@@ -10,7 +10,12 @@ from pathlib import Path
 import pytest
 from intake.sheets import Rows, lines, read
 
+from speccheck.intake.files.grid import Grid
+from speccheck.intake.tables.claims import SheetResult
+from speccheck.intake.tables.labels import Labels
+from speccheck.intake.tables.marks import mark
 from speccheck.intake.tables.no_names import never_a_name
+from speccheck.intake.tables.second_look import most_coherent
 
 _ = None
 
@@ -67,7 +72,64 @@ SHEETS: dict[str, tuple[Rows, str]] = {
         QR-8X65: E4 width 0.356 m
         QR-8X65: E5 weight 31 kg""",
     ),
+    "words over the columns that come again name no panel": (
+        [
+            ["Parameter", "KD-1", "KD-2", "KD-3"],
+            ["Status", "in production", "prototype", "in production"],
+            ["Gain (dBi)", 15, 16, 17],
+            ["Weight (kg)", 11, 12, 9],
+        ],
+        """KD-1: B3 gain 15 dBi
+        KD-1: B4 weight 11 kg
+        KD-2: C3 gain 16 dBi
+        KD-2: C4 weight 12 kg
+        KD-3: D3 gain 17 dBi
+        KD-3: D4 weight 9 kg""",
+    ),
+    "a line between title and table, all of words that say what a column is for": (
+        [
+            ["Model", "KD-9"],
+            ["Requirement", "Guaranteed min", "Guaranteed typ", "Unit"],
+            ["Gain", 16.5, 17, "dBi"],
+            ["Isolation", 28, 30, "dB"],
+        ],
+        """KD-9: B1 model KD-9
+        KD-9: B3 gain ≥16.5 dBi
+        KD-9: C3 gain 17 dBi
+        KD-9: B4 port_isolation ≥28 dB
+        KD-9: C4 port_isolation 30 dB""",
+    ),
+    "a block for each band, named in the corner of its heading row": (
+        [
+            ["Model KD-40"],
+            ["Low band", "Value"],
+            ["Frequency range (MHz)", "694-960"],
+            ["Gain (dBi)", 15],
+            [],
+            ["High band", "Value"],
+            ["Frequency range (MHz)", "1710-2690"],
+            ["Gain (dBi)", 17.5],
+        ],
+        """KD-40: B3 operating_bands 694..960 MHz @694-960
+        KD-40: B4 gain 15 dBi @694-960
+        KD-40: B7 operating_bands 1710..2690 MHz @1710-2690
+        KD-40: B8 gain 17.5 dBi @1710-2690""",
+    ),
 }
+
+
+def test_what_does_not_hang_together_is_shown_as_doubt_with_its_cells(tmp_path: Path) -> None:
+    rows = [["Gain (dBi)", 15, 16], ["VSWR", 1.4, 1.5], ["Weight (kg)", 11, 12]]
+    account = read(tmp_path, rows)
+    assert [line for line in lines(account) if not line.endswith("?")] == []
+    (notice,) = [n.text for n in account.submission.notices if "layout" in n.text]
+    assert "A1" not in notice and all(cell in notice for cell in ("B1", "C1", "B2", "C2", "B3", "C3"))
+
+
+def test_a_sheet_that_hangs_together_is_walked_once() -> None:
+    marks, walks = mark(Grid("Sheet1"), Labels({})), []
+    assert most_coherent(marks, lambda way: walks.append(way) or SheetResult(way.grid)).doubts == []
+    assert len(walks) == 1
 
 
 @pytest.mark.parametrize("name", SHEETS)

@@ -96,6 +96,20 @@ def note_notices(result: SheetResult, labels: Labels, where: Where) -> list[Noti
     return found
 
 
+def doubt_notices(result: SheetResult, where: Where) -> list[Notice]:
+    """What does not hang together in a sheet, whichever way it is read: its layout was not understood."""
+    found = []
+    for doubt in result.doubts:
+        cells = sorted(doubt.cells, key=_place)
+        text = f"layout not understood for certain: {doubt.text}; compare {_addresses(cells)}"
+        found.append(Notice(where=where(result.grid.name, cells[0].address), text=text))
+    return found
+
+
+def _place(cell: Cell) -> tuple[int, int]:
+    return cell.row, cell.column
+
+
 def footnotes(result: SheetResult) -> dict[str, str]:
     """Notes below or beside the tables, by their marker."""
     notes: dict[str, str] = {}

@@ -8,6 +8,7 @@ from dataclasses import dataclass, replace
 from functools import lru_cache
 
 from speccheck.dictionary import parameters
+from speccheck.intake.panels.doubted import Doubted
 from speccheck.intake.panels.ends import join_ends
 from speccheck.intake.panels.found import Found, Outcome
 from speccheck.intake.panels.lists import share_out_list
@@ -78,8 +79,9 @@ class Built:
 class Builder:
     """Makes panels of drafts."""
 
-    def __init__(self, reader: Reader, notes: Mapping[str, Mapping[str, str]]) -> None:
+    def __init__(self, reader: Reader, notes: Mapping[str, Mapping[str, str]], doubted: Doubted) -> None:
         self._reader, self._notes = reader, {sheet: found for sheet, found in notes.items() if found}
+        self._doubted = doubted
 
     def build(self, draft: Draft) -> Built:
         """Read the claims of a draft and settle what only the whole panel can settle."""
@@ -114,6 +116,7 @@ class Builder:
         _place(readings, draft.bands, several)
         unband_repeated(readings)
         settle_by_panel(readings)
+        self._doubted.mark(draft, readings)
         panel = Panel(
             name=draft.name,
             where=where,

@@ -66,6 +66,20 @@ class Declared:
     context: Context
 
 
+@dataclass(frozen=True, slots=True)
+class Doubt:
+    """Something in a reading that does not hang together; `weight` is 1 where it spoils the whole sheet.
+
+    `no_names` are cells that gave names and cannot, `names` those that perhaps had better not.
+    """
+
+    text: str
+    cells: tuple[Cell, ...]
+    weight: float
+    no_names: tuple[Cell, ...] = ()
+    names: tuple[Cell, ...] = ()
+
+
 @dataclass(slots=True)
 class SheetResult:
     """What the layout stage hands over for one sheet: drafts, and the role of each cell it placed."""
@@ -75,8 +89,7 @@ class SheetResult:
     roles: dict[tuple[int, int], str] = field(default_factory=dict)
     unread: list[tuple[Cell, str, str]] = field(default_factory=list)
     declared: list[Declared] = field(default_factory=list)
-    doubts: list[tuple[str, tuple[Cell, ...]]] = field(default_factory=list)
-    """What does not hang together in the reading of the sheet, and the cells it lies in."""
+    doubts: list[Doubt] = field(default_factory=list)
     _walked: int = 0
 
     def mark_claims(self) -> None:

@@ -9,7 +9,7 @@ from dataclasses import dataclass
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.claims import Claim, Draft, SheetResult
+from speccheck.intake.tables.claims import Claim, Doubt, Draft, SheetResult
 from speccheck.intake.tables.labels import FREQUENCY_KEYS, Labels
 from speccheck.intake.tables.marks import Marks, looks_like_value
 from speccheck.intake.tables.no_names import never_a_name
@@ -23,20 +23,6 @@ _OF_NAMES = 0.2
 _MOSTLY = 0.6
 _LEAST_CONTRARY, _CONTRARY_SHARE = 2, 0.1
 _FEWEST_FIGURES = 6
-
-
-@dataclass(frozen=True, slots=True)
-class Doubt:
-    """Something in a reading that does not hang together; `weight` is 1 where it spoils the whole sheet.
-
-    `no_names` are cells that gave names and cannot, `names` those that perhaps had better not.
-    """
-
-    text: str
-    cells: tuple[Cell, ...]
-    weight: float
-    no_names: tuple[Cell, ...] = ()
-    names: tuple[Cell, ...] = ()
 
 
 @dataclass(frozen=True, slots=True)
@@ -74,6 +60,7 @@ def doubts_of(result: SheetResult, marks: Marks) -> list[Doubt]:
         _misnamed(named, marks.labels),
         _strewn(named),
         _thin(named),
+        _interleaved(named),
         _without_band(named),
         _contrary(panels),
         _mostly_unread(result),
@@ -119,7 +106,7 @@ def _misnamed(panels: list[_Panel], labels: Labels) -> Doubt | None:
         return None
     cells = tuple(panel.where for panel in wrong)
     said = ", ".join(f"'{p.name}' ({never_a_name(p.name) or 'a parameter'})" for p in wrong[:3])
-    return Doubt(f"panels would be called {said}", cells, len(wrong) / len(panels), cells)
+    return Doubt(f"panels are called {said}", cells, len(wrong) / len(panels), cells)
 
 
 def _strewn(panels: list[_Panel]) -> Doubt | None:
@@ -131,7 +118,7 @@ def _strewn(panels: list[_Panel]) -> Doubt | None:
     if shared >= _LEAST_SHARED or (len(panels) == 2 and shared):
         return None
     cells = tuple(panel.where for panel in panels)
-    text = f"{len(panels)} panels would state hardly a parameter in common"
+    text = f"{len(panels)} panels state hardly a parameter in common"
     return Doubt(text, cells, 1.0 - shared, names=cells)
 
 
@@ -145,7 +132,21 @@ def _thin(panels: list[_Panel]) -> Doubt | None:
         return None
     cells = tuple(panel.where for panel in thin)
     said = ", ".join(f"'{p.name}'" for p in thin[:3])
-    return Doubt(f"{said} would have hardly a figure", cells, len(thin) / len(panels), names=cells)
+    return Doubt(f"{said} has hardly a figure", cells, len(thin) / len(panels), names=cells)
+
+
+def _interleaved(panels: list[_Panel]) -> Doubt | None:
+    """Panels whose columns lie between those of another: 'in production' names no panel."""
+    columns = [{claim.cell.column for claim in panel.claims()} for panel in panels]
+    around = [
+        panel
+        for panel, mine in zip(panels, columns, strict=True)
+        if any(min(mine) < min(c) <= max(c) < max(mine) and c.isdisjoint(mine) for c in columns)
+    ]
+    if not around:
+        return None
+    cells = tuple(panel.where for panel in around)
+    return Doubt(f"the columns of '{around[0].name}' lie apart", cells, len(around) / len(panels), cells)
 
 
 def _without_band(panels: list[_Panel]) -> Doubt | None:
@@ -156,7 +157,7 @@ def _without_band(panels: list[_Panel]) -> Doubt | None:
         return None
     cells = tuple(panel.where for panel in bare)
     said = ", ".join(f"'{p.name}'" for p in bare[:3])
-    return Doubt(f"{said} would have no frequencies", cells, len(bare) / len(panels), names=cells)
+    return Doubt(f"{said} has no frequencies", cells, len(bare) / len(panels), names=cells)
 
 
 def _contrary(panels: list[_Panel]) -> Doubt | None:
@@ -176,7 +177,7 @@ def _contrary(panels: list[_Panel]) -> Doubt | None:
         cells += contrary if len(contrary) > _LEAST_CONTRARY else []
     if not cells or len(cells) < _CONTRARY_SHARE * claims:
         return None
-    text = "the same headings would give one panel different figures for one band"
+    text = "the same headings give one panel different figures for one band"
     return Doubt(text, tuple({id(cell): cell for cell in cells}.values()), len(cells) / claims)
 
 
@@ -195,4 +196,4 @@ def _mostly_unread(result: SheetResult) -> Doubt | None:
     read = sum(len(draft.claims) for draft in result.drafts)
     if len(cells) < _FEWEST_FIGURES or len(cells) <= read:
         return None
-    return Doubt("most figures would be left unread", tuple(cells), 0.0)
+    return Doubt("most figures are left unread", tuple(cells), 0.0)

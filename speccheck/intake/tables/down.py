@@ -94,6 +94,10 @@ class DownReader:
     def _section_above(self) -> None:
         """A band named by the sheet, or alone in the row above the table, holds for all rows."""
         state, top = self._state, min([*self._heading_rows, self._table.top])
+        corner = self._grid.cells.get((top, self._table.label_column)) if self._heading_rows else None
+        if corner is not None and is_band_label(corner.text):
+            self._section(corner)
+            return
         first, last = self._table.label_column, min(self._table.right, self._table.label_column + 40)
         above = [c for row in (top - 1, top - 2) for c in cells_between(self._marks, row, first, last)]
         above = [c for c in above if (c.row, c.column) not in self._result.roles]
@@ -265,8 +269,7 @@ class DownReader:
 
     def _name_panel(self, label: Label, beside: list[Cell]) -> None:
         """A row 'Model' beside one column of values names the panel, or the next one below it."""
-        cells = [c for c in beside if (k := self._columns.get(c.column)) and k.role in VALUE_ROLES]
-        texts = [c for c in cells if isinstance(c.raw, str)]
+        texts = [c for c in beside if isinstance(c.raw, str) and (len(beside) == 1 or self._is_value(c))]
         panels = self._panels
         if panels.several or panels.model_row or len(texts) != 1 or label.parameters[0] != "model":
             return

@@ -29,7 +29,8 @@ def find_headings(marks: Marks, table: Down, result: SheetResult) -> list[int]:
         if any((row, cell.column) in result.roles for cell in cells):
             break
         beside = [cell for cell in cells if cell.column > table.label_column]
-        if beside and _is_heading_row(marks, table, row, cells, beside):
+        heads = any(_stands_over(marks, table, cell) for cell in beside)
+        if heads and _is_heading_row(marks, table, row, cells, beside):
             found.insert(0, row)
         elif found:
             break
@@ -38,14 +39,22 @@ def find_headings(marks: Marks, table: Down, result: SheetResult) -> list[int]:
     return found
 
 
+def _stands_over(marks: Marks, table: Down, cell: Cell) -> bool:
+    """Whether any cell of a table stands below a cell; not so for a list of issues beside a title."""
+    span = marks.grid.span(cell)
+    below = (cells_between(marks, row, span.left, span.right) for row in range(table.top, table.bottom + 1))
+    return any(below)
+
+
 def _is_heading_row(marks: Marks, table: Down, row: int, cells: list[Cell], beside: list[Cell]) -> bool:
     label = marks.grid.covering(row, table.label_column)
     if any((c.row, c.column) in marks.lines for c in cells):
         return False
-    if label is None or label.row != row or column_role(label.text):
-        return all(isinstance(c.raw, str | int | float) for c in beside)
-    if not all(map(marks.may_name, cells)):
+    role = column_role(label.text) if label is not None else ""
+    if role != "parameter" and not all(map(marks.may_name, cells)):
         return False
+    if label is None or label.row != row or role:
+        return all(isinstance(c.raw, str | int | float) for c in beside)
     if marks.is_heading(label) or any(_FIGURE.fullmatch(c.text) for c in beside if isinstance(c.raw, str)):
         return False
     if any(column_role(c.text) or is_band_label(c.text) for c in beside):

@@ -11,6 +11,8 @@ from speccheck.intake.tables.marks import Marks, is_form_heading, looks_like_val
 from speccheck.intake.tables.words import column_role, without_number
 
 _NEAR = 4
+_FEWEST_ROLES = 2
+"""A row of more words, each of which says what a column is for, heads a table."""
 
 
 @dataclass(slots=True)
@@ -175,7 +177,8 @@ def heads_columns(marks: Marks, row: int, column: int) -> bool:
     if cell is None or not beside or (row, column) in marks.headings:
         return False
     bands = len(beside) > 1 and all(find_bands(c.text).proved and is_band_label(c.text) for c in beside)
-    form = is_form_heading([column_role(c.text) for c in (cell, *beside) if isinstance(c.raw, str)])
+    roles = [column_role(c.text) for c in (cell, *beside) if isinstance(c.raw, str)]
+    form = is_form_heading(roles) or (len(roles) > _FEWEST_ROLES and all(roles))
     return column_role(cell.text) == "parameter" or bands or form
 
 

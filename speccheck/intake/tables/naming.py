@@ -83,7 +83,7 @@ def _without_prefix(words: str, strength: str) -> str:
 def _score(text: str, sheet: str) -> int:
     """How surely a text is a panel's title; 0 when it is none."""
     words = " ".join(text.split())
-    if len(words) > _LONG_TITLE or of_paper(model_name(words)):
+    if len(words) > _LONG_TITLE or of_paper(words) or of_paper(model_name(words)):
         return 0
     if announced(words):
         return 5

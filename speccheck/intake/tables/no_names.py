@@ -34,6 +34,7 @@ _ISSUE = (
     rf"|(?:date|datum|fecha|data)\s*:?\s*{_DATE}"
 )
 _OF_PAPER = re.compile(rf"(?:(?:{_DATE}|{_ISSUE})[\s,;/()–-]*)+", re.IGNORECASE)
+_DATED = re.compile(rf"(?:[^\W\d]+\.?:?\s+){{1,2}}{_DATE}", re.IGNORECASE)
 _WHOLE_DATE = re.compile(r"(?<!\d)(?:(?:19|20)\d\d-\d\d-\d\d|\d\d?[./]\d\d?[./](?:19|20)\d\d)(?!\d)")
 _BARE = re.compile(r"[<>≤≥±~+−–-]*\s*(?:\d{1,3}|\d+[.,]\d+)\s*")
 _FIRST_WORD = re.compile(r"[<>≤≥±~+−–-]*\s*\d+(?:[.,]\d+)?\s*([^\s\d()]+)\s*(?:[(\[].*)?")
@@ -47,8 +48,9 @@ _LONGEST, _MOST_WORDS = 70, 9
 
 @lru_cache(maxsize=20_000)
 def of_paper(text: str) -> bool:
-    """Whether a text only dates or numbers the issue of a paper: 'Rev. 4, 2026-02-11'."""
-    return _OF_PAPER.fullmatch(text.strip(" ()[]")) is not None
+    """Whether a text only dates or numbers the issue of a paper: 'Rev. 4, 2026-02-11', 'Printed May 2026'."""
+    bare = text.strip(" ()[]")
+    return (_OF_PAPER.fullmatch(bare) or _DATED.fullmatch(bare)) is not None
 
 
 @lru_cache(maxsize=20_000)

@@ -6,12 +6,14 @@ from collections.abc import Callable, Iterable, Iterator
 from dataclasses import replace
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.claims import SheetResult
-from speccheck.intake.tables.coherence import Doubt, doubts_of, incoherence
+from speccheck.intake.tables.claims import Doubt, SheetResult
+from speccheck.intake.tables.coherence import doubts_of, incoherence
 from speccheck.intake.tables.marks import Marks, Without, looks_like_value
 
 _ROUNDS = 3
 """Times a name that proves to be none is given up for the next best."""
+_KEPT = 3
+"""Names of which one may be that of the only panel."""
 _BETTER = 0.05
 """By so much another reading must hang together better than one that takes more for granted."""
 
@@ -37,7 +39,7 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
             best, doubts, least = result, left, score
         if not left and best is result:
             break
-    best.doubts = [(doubt.text, doubt.cells) for doubt in doubts if doubt.weight]
+    best.doubts = [doubt for doubt in doubts if doubt.weight]
     return best
 
 
@@ -48,7 +50,9 @@ def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks
     plain = {p: label for p, label in marks.headings.items() if not _begins_with_figure(marks, p)}
     for bare in [marks] if len(plain) == len(marks.headings) else [replace(marks, headings=plain), marks]:
         yield from _without_names(bare, wrong, walk)
+        perhaps = sorted(names - wrong)[:_KEPT]
         for without in (
+            *(Without(names - {kept}) for kept in perhaps),
             Without(names),
             Without(wrong, repeats=True),
             Without(wrong, over_columns=True),
