@@ -179,4 +179,21 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         KD-21: B4 operating_bands 1710..2690 MHz @1710-2690
         KD-21: D4 gain 16 dBi @1710-2690""",
     ),
+    "a model beside a list of issues, its name in the column of units": (
+        [
+            ["NORTHMERE LTD", _, _, _, "Issue", "Date"],
+            ["Data sheet DS-22", _, _, _, "A", "14.02.2024"],
+            [_, _, _, _, "B", "03.09.2024"],
+            ["Model", "NM-18"],
+            [],
+            ["Frequency range", "MHz", "1710 to 2200"],
+            ["Gain", "dBi", 17.8],
+            ["Weight", "kg", 11],
+        ],
+        (),
+        """NM-18: C6 frequency_range 1710..2200 MHz
+        NM-18: C6 operating_bands 1710..2200 MHz @1710-2200
+        NM-18: C7 gain 17.8 dBi @1710-2200
+        NM-18: C8 weight 11 kg""",
+    ),
 }

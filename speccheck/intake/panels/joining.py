@@ -46,7 +46,8 @@ class _Joiner:
         title = self._titles[-1] if self._titles and self._titles[-1].grid is draft.grid else None
         if title is not None and last:
             self._titles.pop()
-            if title.named:
+            keys = title.keys()
+            if title.named and ("model" in keys or not draft.named):
                 draft.name, draft.where, draft.named = title.name, title.where, True
             draft.joined.append(title)
         stated = _stated(draft)
