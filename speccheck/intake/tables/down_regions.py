@@ -11,6 +11,7 @@ from speccheck.intake.tables.marks import Marks, is_form_heading, looks_like_val
 from speccheck.intake.tables.words import column_role, without_number
 
 _NEAR = 4
+_LISTED = ("model", "part_number", "manufacturer", "revision")
 _FEWEST_ROLES = 2
 """A row of more words, each of which says what a column is for, heads a table."""
 
@@ -79,7 +80,7 @@ def _answers(marks: Marks, row: int, column: int, cell: Cell) -> bool:
 
 def _heads_a_list(marks: Marks, row: int, column: int, beside: Cell) -> bool:
     """Whether 'Model | Quantity' stands over a list of models, so that 'Quantity' is no model."""
-    if marks.headings[row, column].parameters[0] not in ("model", "part_number", "manufacturer"):
+    if marks.headings[row, column].parameters[0] not in _LISTED:
         return False
     below = (marks.grid.cells.get((row + 1, column)), marks.grid.cells.get((row + 1, beside.column)))
     label, value = below
