@@ -368,3 +368,10 @@ def test_a_size_that_may_be_centimetres_or_inches_is_not_settled(tmp_path: Path)
 def test_a_unit_before_a_bound(heading: str, unit: str, sense: str) -> None:
     found = Labels({}).of(heading)
     assert (found.unit, found.sense, len(found.parameters)) == (unit, sense, 1)
+
+
+def test_a_figure_with_a_unit_is_no_pure_number(tmp_path: Path) -> None:
+    rows = [["Parameter", "V-1"], ["VSWR", "14 dB"], ["Rows", "12 mm"], ["Columns", 4], ["Gain (dBi)", 17]]
+    submission = read(tmp_path, rows).submission
+    assert [r.parameter for r in submission.panels[0].readings] == ["array_columns", "gain"]
+    assert [u.where.cell for u in submission.unread] == ["B2", "B3"]

@@ -22,6 +22,7 @@ from speccheck.quantities import (
     dimension,
     read_cell,
     settle,
+    unit_name,
 )
 from speccheck.records import Sense
 from speccheck.text import plain
@@ -191,6 +192,8 @@ def _ground(context: Context) -> _Ground:
 
 
 def _figure(parameter: Parameter, quantity: Quantity, context: Context, ground: _Ground, tail: str) -> Figure:
+    if parameter.unit == "" and parameter.kind in ("number", "count"):
+        _refuse_unit(quantity, ground.unit, parameter)
     quantity, supplied = with_unit(quantity, parameter)
     settled = settle(
         quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
@@ -212,6 +215,12 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, ground: 
         at=at,
         band=(at["frequency_low_mhz"], at["frequency_high_mhz"]) if named else None,
     )
+
+
+def _refuse_unit(quantity: Quantity, of_heading: str, parameter: Parameter) -> None:
+    """'14 dB' is no standing-wave ratio and '60°' no count; a unit column beside pure numbers is let pass."""
+    if dimension(quantity.unit) not in ("", "count") and quantity.unit != unit_name(of_heading):
+        raise UnknownUnitError(f"a figure in {quantity.unit} is no {parameter.label}")
 
 
 def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator[tuple[str, Quantity]]:
