@@ -154,8 +154,7 @@ def _chart(findings: Sequence[Finding], title: str, numbers: Numbers) -> Figure:
     )
     return canvas.figure(
         title,
-        f"Claim on the interval expected. {first}. Figures, working and cells of every row stand with its "
-        "check below.",
+        f"Claim on the interval expected. {first}. All figures stand with their checks below.",
         kind="intervals",
         joined=True,
     )
