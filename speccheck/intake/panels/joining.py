@@ -46,10 +46,7 @@ class _Joiner:
         title = self._titles[-1] if self._titles and self._titles[-1].grid is draft.grid else None
         if title is not None and last:
             self._titles.pop()
-            keys = title.keys()
-            if title.named and ("model" in keys or not draft.named):
-                draft.name, draft.where, draft.named = title.name, title.where, True
-            draft.joined.append(title)
+            self._give_title(title, draft)
         stated = _stated(draft)
         home = self._home(draft, stated)
         if home is None:
@@ -63,6 +60,17 @@ class _Joiner:
         home.joined.append(draft)
         self._stated[id(home)] |= stated
         home.bands += [band for band in draft.bands if band not in home.bands]
+
+    def _give_title(self, title: Draft, draft: Draft) -> None:
+        """A title names the piece below it, and a nameless one before that piece on its sheet."""
+        keys = title.keys()
+        if title.named and ("model" in keys or not draft.named):
+            before = self._kept[-1] if self._kept and not draft.named else None
+            if before is not None and before.grid is draft.grid and not before.named:
+                before.name, before.where, before.named = title.name, title.where, True
+                self._by_name.setdefault(_key(title.name), []).append(before)
+            draft.name, draft.where, draft.named = title.name, title.where, True
+        draft.joined.append(title)
 
     def finish(self) -> tuple[list[Draft], list[Draft]]:
         """Panels, and titles that belong to none of them."""

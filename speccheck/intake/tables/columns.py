@@ -8,7 +8,7 @@ from dataclasses import dataclass, field
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.heading_conditions import condition_of_heading, says_plane, says_tilt
-from speccheck.intake.tables.labels import Label, Labels, is_unit, statistic_of
+from speccheck.intake.tables.labels import FREQUENCY_KEYS, Label, Labels, is_unit, statistic_of
 from speccheck.intake.tables.words import column_leaning, column_role
 from speccheck.records import Band
 
@@ -40,6 +40,8 @@ class Column:
     lead: str = ""
     """Word before the cells of a column of conditions that only its heading says."""
     frequency: Cell | None = None
+    frequency_unit: str = ""
+    """Unit of the ranges below a heading such as 'Frequency range [GHz]'."""
 
     def take_band(self, band: Band | None, cell: Cell) -> None:
         """Take in the band of a heading cell; one above that contains it stays as the wider band."""
@@ -131,6 +133,10 @@ def _take_subject(column: Column, cell: Cell, labels: Labels, text: str) -> None
         column.role, column.lead = "condition", "tilt "
     elif _is_frequency_heading(labels.of(text)):
         column.frequency = cell
+    elif set(labels.of(text).parameters or ("",)) <= FREQUENCY_KEYS:
+        column.frequency_unit = labels.of(text).unit
+    elif column.frequency_unit and find_bands(f"{text} {column.frequency_unit}").spans:
+        _take_band(column, cell, f"{text} {column.frequency_unit}")
     elif is_band_label(text):
         _take_band(column, cell, text)
     elif says_plane(text, labels):
