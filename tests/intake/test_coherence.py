@@ -99,6 +99,41 @@ SHEETS: dict[str, tuple[Rows, str]] = {
         KD-9: B4 port_isolation ≥28 dB
         KD-9: C4 port_isolation 30 dB""",
     ),
+    "remarks scribbled beside the figures, in a column without a heading": (
+        [
+            ["Parameter", "KD-9"],
+            ["Gain (dBi)", 17, "typical of 3 samples"],
+            ["VSWR", 1.5],
+            ["Front-to-back ratio (dB)", 25, "measured 2025-11-03"],
+        ],
+        """KD-9: B2 gain 17 dBi
+        KD-9: B3 vswr 1.5
+        KD-9: B4 front_to_back_ratio 25 dB""",
+    ),
+    "bands over the columns in words of a value": (
+        [
+            ["Characteristic", "Value at 1710-1880 MHz", "Value at 1920-2170 MHz"],
+            ["Gain (dBi)", 17, 17.6],
+        ],
+        """bid: B1 operating_bands 1710..1880 MHz @1710-1880
+        bid: C1 operating_bands 1920..2170 MHz @1920-2170
+        bid: B2 gain 17 dBi @1710-1880
+        bid: C2 gain 17.6 dBi @1920-2170""",
+    ),
+    "arrays over the columns, 'Array' in the corner": (
+        [
+            ["NW-8P"],
+            ["Array", "R1", "Y1", "Y2"],
+            ["Frequency (MHz)", "694-960", "1695-2690", "1695-2690"],
+            ["Gain (dBi)", 15, 17, 17.2],
+        ],
+        """NW-8P: B3 operating_bands 694..960 MHz @694-960
+        NW-8P: C3 operating_bands 1695..2690 MHz @1695-2690
+        NW-8P: D3 operating_bands 1695..2690 MHz @1695-2690
+        NW-8P: B4 gain 15 dBi @694-960
+        NW-8P: C4 gain 17 dBi @1695-2690
+        NW-8P: D4 gain 17.2 dBi @1695-2690""",
+    ),
     "a block for each band, named in the corner of its heading row": (
         [
             ["Model KD-40"],

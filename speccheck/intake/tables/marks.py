@@ -16,7 +16,7 @@ from speccheck.intake.tables.labels import (
     statistic_of,
 )
 from speccheck.intake.tables.lines import split_lines
-from speccheck.intake.tables.words import column_role
+from speccheck.intake.tables.words import column_role, is_band_nickname
 
 _LONGEST = 2000
 _SIZES = frozenset("HWDBTLPAGS")
@@ -139,7 +139,7 @@ def _unmark_column_words(marks: Marks) -> None:
         if len(headings) > 4:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
-        if is_form_heading(roles):
+        if is_form_heading(roles) or _tells_arrays_apart(cells):
             for column in headings:
                 if column_role(marks.grid.cells[row, column].text):
                     del marks.headings[row, column]
@@ -152,6 +152,13 @@ def _unmark_column_words(marks: Marks) -> None:
             detail = bool(said) and _follows_heading(marks, row, column)
             if "parameter" in roles or statistics > 1 or detail:
                 del marks.headings[row, column]
+
+
+def _tells_arrays_apart(cells: list[Cell]) -> bool:
+    """Whether a row heads the columns of arrays: 'Array | R1 | Y1 | Y2'."""
+    first, *others = cells
+    told = len(others) > 1 and column_role(first.text) == "band"
+    return told and all(isinstance(c.raw, str) and is_band_nickname(c.text) for c in others)
 
 
 def is_form_heading(roles: list[str]) -> bool:

@@ -5,7 +5,7 @@ from __future__ import annotations
 import re
 from functools import lru_cache
 
-from speccheck.intake.tables.bands import is_band_label
+from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.labels import is_unit
 from speccheck.intake.tables.titles import codes
 from speccheck.intake.tables.words import (
@@ -80,7 +80,9 @@ def _is_figure(words: str) -> bool:
 
 
 def _is_array(words: str) -> bool:
-    return is_band_label(words) or names_array(words)
+    bands = find_bands(words)
+    around = bands.proved and not any(map(str.isdigit, bands.rest)) and bands.rest.islower()
+    return around or is_band_label(words) or names_array(words)
 
 
 def _is_sheet_word(words: str) -> bool:

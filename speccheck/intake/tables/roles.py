@@ -2,12 +2,16 @@
 
 from __future__ import annotations
 
+import re
+
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import is_unit
 from speccheck.intake.tables.versions import settle_versions
 from speccheck.intake.tables.words import answer, column_role
 
+_WORD_FIRST = re.compile(r"\s*[^\W\d_]{4,}")
+_MOSTLY = 0.6
 _ANSWERS, _SILENT = 0.6, 0.4
 """Shares of cells from which on, and up to which, a column is surely one of values, or of none."""
 
@@ -26,6 +30,7 @@ def settle_roles(
         if not column.role and not column.band and not column.band_name:
             column.role = _by_content(column, cells.get(index, []))
     _beside_the_values(columns, cells, shares)
+    _scribbles(columns, cells)
     _band_columns(columns, cells)
     _conditions_before_units(columns, cells)
     _details_before_values(columns, cells)
@@ -77,6 +82,25 @@ def _beside_the_offer(columns: dict[int, Column], shares: dict[int, float | None
     for index, share in shares.items():
         if not columns[index].role and columns[index].words and (share or 0.0) < _ANSWERS:
             columns[index].role = "remark"
+
+
+def _scribbles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
+    """Words without a heading, behind figures that fill as many rows, are remarks: 'measured 2025-11-03'."""
+    wordy = {index: _share_of_words(cells.get(index, [])) for index in columns}
+    for index, column in columns.items():
+        before = [
+            i
+            for i, c in columns.items()
+            if i < index and c.role in VALUE_ROLES and len(cells.get(i, ())) >= len(cells.get(index, ()))
+        ]
+        bare = not (column.role or column.cells or column.band or column.band_name)
+        if bare and wordy[index] > _MOSTLY and any(wordy[i] < 1 - _MOSTLY for i in before):
+            column.role = "remark"
+
+
+def _share_of_words(cells: list[Cell]) -> float:
+    words = sum(isinstance(cell.raw, str) and _WORD_FIRST.match(cell.text) is not None for cell in cells)
+    return words / len(cells) if cells else 0.0
 
 
 def _band_columns(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:

@@ -31,7 +31,11 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
     if not doubts:
         return best
     least = incoherence(best, marks, doubts)
+    tried: list[Marks] = [marks]
     for other in _other_ways(marks, doubts, walk):
+        if any(other.without == t.without and len(other.headings) == len(t.headings) for t in tried):
+            continue
+        tried.append(other)
         result = walk(other)
         left = doubts_of(result, other)
         score = incoherence(result, marks, left)
