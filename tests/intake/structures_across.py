@@ -195,4 +195,19 @@ ACROSS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         Wind Star: D3 polarisations 2
         Wind Star: E3 radome_material Radome of GRP""",
     ),
+    "families merged beside part numbers, ranges under an unknown heading": (
+        [
+            ["Family", "Part no.", "NR range (MHz)", "Gain (dBi)"],
+            ["Tor", "WT-04", "694-960", 14.3],
+            [_, "WT-06", "694-960", 16.1],
+        ],
+        ("A2:A3",),
+        """WT-04: A2 panel_type Tor
+        WT-04: C2 frequency_range 694..960 MHz
+        WT-04: C2 operating_bands 694..960 MHz @694-960
+        WT-04: D2 gain 14.3 dBi @694-960
+        WT-06: C3 frequency_range 694..960 MHz
+        WT-06: C3 operating_bands 694..960 MHz @694-960
+        WT-06: D3 gain 16.1 dBi @694-960""",
+    ),
 }

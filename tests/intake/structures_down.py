@@ -196,4 +196,34 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         NM-18: C7 gain 17.8 dBi @1710-2200
         NM-18: C8 weight 11 kg""",
     ),
+    "a model over two tables side by side": (
+        [
+            ["Modello", "VC-18"],
+            [],
+            ["Parametro", "U.M.", "Valore", _, "Parametro", "U.M.", "Valore"],
+            ["Guadagno", "dBi", 15.2, _, "Altezza", "mm", 742],
+            ["ROS", _, 1.5, _, "Peso", "kg", 6.3],
+        ],
+        (),
+        """VC-18: B1 model VC-18
+        VC-18: C4 gain 15.2 dBi
+        VC-18: C5 vswr 1.5
+        VC-18: G4 height 0.742 m
+        VC-18: G5 weight 6.3 kg""",
+    ),
+    "bands in gigahertz under a heading with the unit": (
+        [
+            ["Product", "M28"],
+            [],
+            ["Property", "Unit", "Frequency range [GHz]", _],
+            [_, _, "24.25–27.5", "26.5–29.5"],
+            ["Gain", "dBi", 27.2, 27.9],
+        ],
+        ("C3:D3", "A3:A4", "B3:B4"),
+        """M28: B1 model M28
+        M28: C4 operating_bands 24250..27500 MHz @24250-27500
+        M28: D4 operating_bands 26500..29500 MHz @26500-29500
+        M28: C5 gain 27.2 dBi @24250-27500
+        M28: D5 gain 27.9 dBi @26500-29500""",
+    ),
 }

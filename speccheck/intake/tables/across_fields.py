@@ -95,8 +95,12 @@ def _describe(marks: Marks, table: Across, index: int) -> Field:
     if letters:
         label, column.cells = marks.headings[letters[-1].row, letters[-1].column], stack
     if not label and column.role == "":
-        texts = [c.text for c in cells_below(marks.grid, table, index)]
+        below = cells_below(marks.grid, table, index)
+        texts = [c.text for c in below]
         label = label_by_values(column.heading, texts) or label
+        if not label and column.unit in ("MHz", "GHz") and holds_spans(below, column.unit):
+            how = f"heading '{column.heading}' over ranges in {column.unit}"
+            label = Label(column.heading, ("frequency_range",), column.unit, how=how)
     if column.role == "tolerance" and column.unit:
         label = Label(column.heading)
     context = Context(
@@ -184,10 +188,19 @@ def _is_frequency(found: Field) -> bool:
 def _name_column(grid: Grid, table: Across, fields: dict[int, Field]) -> int:
     for key in _NAME_KEYS:
         named = [i for i, f in fields.items() if f.label.parameters[:1] == (key,)]
+        if key == "panel_type":
+            named = [i for i in named if not _groups_numbered(grid, table, fields, i)]
         if named:
             return next((i for i in named if _holds_words(cells_below(grid, table, i))), named[0])
     roles = [i for i, f in fields.items() if f.role == "panel"]
     return roles[0] if roles else _unlabelled_text_column(grid, table, fields)
+
+
+def _groups_numbered(grid: Grid, table: Across, fields: dict[int, Field], index: int) -> bool:
+    """Whether a column names families of panels, each with a part number of its own in every row."""
+    families = {cell.text for cell in cells_below(grid, table, index)}
+    numbered = (i for i, f in fields.items() if f.label.parameters[:1] == ("part_number",))
+    return any(len({cell.text for cell in cells_below(grid, table, i)}) > len(families) for i in numbered)
 
 
 def _holds_words(cells: list[Cell]) -> bool:
