@@ -32,7 +32,7 @@ _DEMAND = re.compile(
     rf"(?P<name>\S.*?)\s*[:,;–-]?\s*(?:{_SHALL}\s+{_BE}\s*)?"
     rf"(?:(?<!\w)(?:{_BOUND})(?!\w)\s*{_SIGN}?|{_SIGN}|(?<=exceed)|(?<=dépasser))\s*"
     r"[-−+±]?\d[\d.,]*(?:\s?[:/]\s?1(?!\d))?\s?(?P<unit>[^\W\d_]{1,7}(?:/[^\W\d_]{1,3})?|[°%])?"
-    r"[^()\[\]]*(?P<notes>(?:[(\[][^()\[\]\d]*[)\]])?)\W*$",
+    r"[^()\[\]—]*(?P<notes>(?:[(\[][^()\[\]\d]*[)\]])?)\W*$",
     re.IGNORECASE,
 )
 _SHALL_BEFORE_END = re.compile(rf"\s+{_SHALL}(?:\s+{_BE})?$", re.IGNORECASE)
