@@ -23,10 +23,10 @@ from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Comp
 from speccheck.report.pages.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.pages.formats import Numbers, shown_unit
 from speccheck.report.pages.inks import rules, shared_groups
+from speccheck.report.pages.markup import cells, clean, marks, table_rows, workings
 from speccheck.report.pages.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
 from speccheck.report.pages.shared import common_bases, named_reading, named_readings
 from speccheck.report.pages.view import build_view, label, rules_fingerprint
-from speccheck.text import plain
 
 PAPERS = {"a4": "A4", "letter": "letter"}
 _FACES = (("Report Sans", "", 400, "regular"), ("Report Sans", "", 600, "semibold"))
@@ -148,6 +148,10 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         by_weight=_by_weight,
         joined=_joined,
         halves=_halves,
+        marks=marks,
+        table_rows=table_rows,
+        cells=cells,
+        workings=functools.partial(workings, numbers=numbers),
     )
     environment.globals.update(
         FITS=FITS,
@@ -172,7 +176,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
 
 def _clean(value: Any) -> Any:
     """Every text that a template prints loses control and direction marks before it is escaped."""
-    return plain(value, limit=20_000) if type(value) is str else value
+    return clean(value) if type(value) is str else value
 
 
 def _capitalize_first(text: str) -> str:
