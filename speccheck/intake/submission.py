@@ -23,6 +23,7 @@ from speccheck.intake.panels.notices import (
     note_notices,
     passed_over,
 )
+from speccheck.intake.panels.open_records import mirror_cell
 from speccheck.intake.panels.panels import Builder, Built
 from speccheck.intake.panels.reading import Reader
 from speccheck.intake.tables.claims import Draft, SheetResult
@@ -30,7 +31,7 @@ from speccheck.intake.tables.labels import Labels
 from speccheck.intake.tables.layout import read_layout
 from speccheck.intake.tenders.tender_given_as_bid import refuse_tender
 from speccheck.quantities import decimal_habit
-from speccheck.records import MirrorCell, MirrorSheet, Notice, Submission, Unread
+from speccheck.records import MirrorSheet, Notice, Submission, Unread
 
 
 @dataclass(frozen=True, slots=True)
@@ -87,12 +88,18 @@ def _account(path: str | Path, headings: Mapping[str, str] | None, limits: Limit
 
 @contextmanager
 def _collector_at_rest() -> Iterator[None]:
-    """Hold the cycle collector: it would walk the many small records again and again, and none has cycles."""
+    """Hold the cycle collector: it would walk the many small records again and again, and none has cycles.
+
+    Before it goes on they pass to its oldest generation, or it would walk them all at once.
+    """
     running = gc.isenabled()
     gc.disable()
     try:
         yield
     finally:
+        if running and not gc.get_freeze_count():
+            gc.freeze()
+            gc.unfreeze()
         if running:
             gc.enable()
 
@@ -153,7 +160,7 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
 def _mirror(grid: Grid) -> MirrorSheet:
     cells = {**grid.cells, **grid.hidden_cells} if grid.hidden_cells else grid.cells
     ordered = [cells[place] for place in sorted(cells)]
-    mirrored = tuple([MirrorCell(cell.address, _stored(cell), cell.formula) for cell in ordered])
+    mirrored = tuple([mirror_cell(cell.address, _stored(cell), cell.formula) for cell in ordered])
     return MirrorSheet(name=grid.name, hidden=grid.hidden, cells=mirrored)
 
 

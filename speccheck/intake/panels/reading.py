@@ -5,6 +5,7 @@ from __future__ import annotations
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Raw
 from speccheck.intake.panels.found import Figure, Found, Outcome, spread
+from speccheck.intake.panels.open_records import cell_ref
 from speccheck.intake.panels.understanding import Understanding, Understood, unit_of
 from speccheck.intake.tables.claims import Claim, Context
 from speccheck.quantities import DecimalHabit, read_cell
@@ -29,7 +30,7 @@ class Reader:
     def read(self, claim: Claim, sheet: str) -> Outcome:
         """Readings of one claim, or its statement, or why it was not read."""
         cell, context = claim.cell, claim.context
-        where = CellRef(self._file, sheet, cell.address)
+        where = cell_ref(self._file, sheet, cell.address)
         if cell.fault:
             return Outcome(
                 sheet,

@@ -46,7 +46,7 @@ def demanded(text: str) -> tuple[tuple[str, ...], str]:
     >>> demanded("Weight shall not exceed 20 kg (without clamps)"), demanded("VSWR ≤ 1.5")
     ((('Weight (without clamps)', 'Weight'), 'kg'), (('VSWR',), ''))
     """
-    cut = _DEMAND.fullmatch(text)
+    cut = _DEMAND.fullmatch(text) if any(map(str.isdecimal, text)) else None
     if cut is None:
         return (), ""
     name = _SHALL_BEFORE_END.sub("", cut["name"]).strip(" ,;:–-([")

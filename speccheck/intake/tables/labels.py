@@ -52,6 +52,7 @@ _ITEM = r"[^\W\d][^()\[\]/]*"
 _LISTED_IN_BRACKET = re.compile(
     rf"[(\[]\s*({_ITEM}\s[^()\[\]/]*(?:/\s*{_ITEM})+|{_ITEM}(?:/\s*{_ITEM}\s[^()\[\]/]+)+)\s*[)\]]"
 )
+_LISTS = re.compile(r"[/|]")
 _SEVERAL = re.compile(r"[xX×/*]")
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
@@ -75,6 +76,9 @@ class Label:
 
     def __bool__(self) -> bool:
         return bool(self.parameters)
+
+
+_NO_LABEL = Label("")
 
 
 class Labels:
@@ -107,18 +111,11 @@ class Labels:
         if not self._could_be_heading(text) or not self._has_room_for(text):
             return Label(text)
         cleaned = _WITHOUT.sub("without", text.strip().rstrip(":").strip())
-        attempts = (
-            self._with_list,
-            self._with_tilts,
-            self._with_statistics,
-            self._with_demand,
-            self._with_unit,
-            self._match,
-            self._with_bands,
-        )
-        for found in (attempt(cleaned) for attempt in attempts):
+        listed = (self._with_list, self._with_tilts, self._with_statistics) if _LISTS.search(cleaned) else ()
+        for attempt in (*listed, self._with_demand, self._with_unit, self._match, self._with_bands):
+            found: Label = attempt(cleaned)
             if found:
-                return replace(found, text=text)
+                return found if found.text == text else replace(found, text=text)
         return Label(text)
 
     def _could_be_heading(self, text: str) -> bool:
@@ -142,9 +139,9 @@ class Labels:
         """'Total power, W': the letter behind the comma is a unit before it is a word."""
         cut = _UNIT_BEHIND.match(text)
         if cut is None or not unit_name(cut[2]):
-            return Label(text)
+            return _NO_LABEL
         found = self._match(f"{cut[1]} {cut[3]}".strip())
-        return replace(found, unit=found.unit or cut[2]) if len(found.parameters) == 1 else Label(text)
+        return replace(found, unit=found.unit or cut[2]) if len(found.parameters) == 1 else _NO_LABEL
 
     def _with_list(self, text: str) -> Label:
         """'Wind load (front/side)' heads two figures: each word with the rest is a heading of its own."""
@@ -156,7 +153,7 @@ class Labels:
             return self._of_items(text, bracket.start(), bracket.end(), bracket[1])
         lists = [cut for cut in _LISTED.finditer(text) if not unit_name(cut[0])]
         if not lists or not _names_something(text[: lists[-1].start()] + text[lists[-1].end() :]):
-            return Label(text)
+            return _NO_LABEL
         return self._of_items(text, lists[-1].start(), lists[-1].end(), lists[-1][0])
 
     def _parted_by_bar(self, text: str) -> Label:
@@ -165,14 +162,14 @@ class Labels:
         found = [self._with_unit(part) or self._match(part) for part in parts] if len(parts) > 1 else []
         keys = tuple(key for label in found for key in label.parameters)
         several = len(set(keys)) == len(parts) and all(len(label.parameters) == 1 for label in found)
-        return replace(found[0], parameters=keys) if several and found else Label(text)
+        return replace(found[0], parameters=keys) if several and found else _NO_LABEL
 
     def _of_items(self, text: str, start: int, end: int, items: str) -> Label:
         """The heading of several figures, one for each item between `start` and `end` of a heading."""
         found = []
         last_is_unit = len(unit_name(items.rpartition("/")[2])) > 1  # 'Frequency band / MHz'
         if last_is_unit or any("/" in word and unit_name(word) for word in items.split()):
-            return Label(text)
+            return _NO_LABEL
         listed = re.split(r"\s*/\s*", items)
         tail = listed[-1].partition(" ")[2]  # '(without/with brackets)'
         for item in [*(i if " " in i or not tail else f"{i} {tail}" for i in listed[:-1]), listed[-1]]:
@@ -180,7 +177,7 @@ class Labels:
             found.append(self._with_unit(single) or self._match(single))
         keys = tuple(key for label in found for key in label.parameters)
         several = len(set(keys)) == len(found) and all(len(label.parameters) == 1 for label in found)
-        return replace(found[0], parameters=keys) if several else Label(text)
+        return replace(found[0], parameters=keys) if several else _NO_LABEL
 
     def _with_tilts(self, text: str) -> Label:
         """'Gain at tilt 0°/5°/10°' and 'Gain @ 3.3/3.5/3.8 GHz' head lists of figures, one each."""
@@ -188,7 +185,7 @@ class Labels:
         tilts, frequencies = _TILTS.search(bare), _FREQUENCIES.search(bare)
         listed = tilts or frequencies
         if listed is None:
-            return Label(text)
+            return _NO_LABEL
         inner = self._match(bare[: listed.start()].strip(" ,;") + text[len(bare) :])
         if not inner:
             return inner
@@ -206,30 +203,30 @@ class Labels:
         if listed is None or not (
             name := (bare[: listed.start()] + " " + bare[listed.end() :]).strip(" ,;:")
         ):
-            return Label(text)
+            return _NO_LABEL
         said = tuple(statistic_of(word) for word in re.split(r"\s*/\s*", listed[1]))
         said = tuple("typical" if word == "typ" else word for word in said)
         inner = self._with_unit(f"{name}{unit}") or self._match(f"{name}{unit}")
-        return replace(inner, statistics=said) if len(inner.parameters) == 1 and all(said) else Label(text)
+        return replace(inner, statistics=said) if len(inner.parameters) == 1 and all(said) else _NO_LABEL
 
     def _with_demand(self, text: str) -> Label:
         """'Vertical beamwidth at -3 dB ≤ 8°': what is asked for stands behind the name of the parameter."""
         names, unit = demanded(text)
         found = next((label for name in names if (label := self.of(name))), None)
         if found is None or not answers(unit, dimension(parameters()[found.parameters[0]].unit)):
-            return Label(text)
+            return _NO_LABEL
         return replace(found, sense="nominal")
 
     def _with_bands(self, text: str) -> Label:
         bands = find_bands(text)
-        inner = self._match(_tidy(bands.rest)) if bands.spans and bands.rest else Label(text)
+        inner = self._match(_tidy(bands.rest)) if bands.spans and bands.rest else _NO_LABEL
         if not inner and bands.spans:
             inner = self._match(_tidy(_BAND_WORD.sub(" ", bands.rest)))
         return replace(inner, bands=bands) if inner else inner
 
     def letter(self, text: str) -> Label:
         """A single letter as a heading, such as H for the height; only its neighbours can prove it one."""
-        return self._match(text.strip()) if len(text.strip()) == 1 else Label(text)
+        return self._match(text.strip()) if len(text.strip()) == 1 else _NO_LABEL
 
     def suggestion(self, text: str) -> str:
         """The nearest known headings to a text; for the first few hundred texts of a file only."""
@@ -244,13 +241,13 @@ class Labels:
     def _match(self, text: str) -> Label:
         found = match_heading(text, self._synonyms, suggest=False)
         if not found.exact or not found.parameters:
-            return Label(text)
+            return _NO_LABEL
         if found.condition and _CODE.fullmatch(text):
-            return Label(text)  # 'BR-0012' is a model, not a width
+            return _NO_LABEL  # 'BR-0012' is a model, not a width
         if found.condition and _LETTER_FIRST.match(text) and set(found.parameters) <= _SIZES:
-            return Label(text)  # 'D of 12 March' is an issue, not a depth
+            return _NO_LABEL  # 'D of 12 March' is an issue, not a depth
         if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
-            return Label(text)  # 'RAL 7035' and 'Model 12' are answers
+            return _NO_LABEL  # 'RAL 7035' and 'Model 12' are answers
         condition = found.condition
         bands = find_bands(condition) if condition else NO_BANDS
         return Label(
