@@ -100,10 +100,8 @@ def _vertical_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     middle = len(drawing.curves[:3]) // 2
     for i, curve in enumerate(drawing.curves[:3]):
         lowest = FLOOR_DB if i == middle else SIDE_TILT_DB
-        points = zip(curve.x, curve.y, strict=True)
-        canvas.line(
-            ((x(level), y(angle)) if level >= lowest else _HIDDEN for angle, level in points), _ORDER[i]
-        )
+        points = zip(curve.y, x.places(curve.y), y.places(curve.x), strict=True)
+        canvas.line([(at, up) if level >= lowest else _HIDDEN for level, at, up in points], _ORDER[i])
         canvas.write(252, 34 + 13 * i, curve.name, style=f"{_ORDER[i]}-text")
     marks = drawing.marks
     for level, name in ((-3.0, "3db"), (-10.0, "10db")):
@@ -187,10 +185,10 @@ def _steering_map(drawing: Drawing, numbers: Numbers) -> Figure:
     for lobe in lobes:
         outline = [*zip(lobe.x, lobe.y, strict=True), (lobe.x[0], lobe.y[0])]
         canvas.line(
-            ((x(u), y(v)) if max(abs(u), abs(v)) <= 1.6 else _HIDDEN for u, v in outline),
+            ((x(u), y(v)) if -1.6 <= u <= 1.6 and -1.6 <= v <= 1.6 else _HIDDEN for u, v in outline),
             "third" if lobe.name == "sub-array lobe" else "limit",
         )
-    canvas.line([(x(u), y(v)) for u, v in zip(claimed.x, claimed.y, strict=True)], "first", close=True)
+    canvas.line(zip(x.places(claimed.x), y.places(claimed.y), strict=True), "first", close=True)
     canvas.write(x(1.62), y(0) + 3, "u →", "start", "small")
     canvas.write(x(0) + 5, y(1.6) + 8, "v ↑", style="small")
     grouped = any(lobe.name == "sub-array lobe" for lobe in lobes)

@@ -150,6 +150,14 @@ class Scale:
         share = (value - self.low) / (self.high - self.low) if self.high > self.low else 0.5
         return self.start + share * (self.end - self.start)
 
+    def places(self, values: Iterable[float]) -> list[float]:
+        """Places on the page of many values."""
+        if not self.high > self.low:
+            return [self(value) for value in values]
+        step = (self.end - self.start) / (self.high - self.low)
+        origin = self.start - self.low * step
+        return [origin + value * step for value in values]
+
     def clipped(self, value: float) -> float:
         """Place on the page, held inside the axis."""
         return self(min(max(value, self.low), self.high))
@@ -182,8 +190,10 @@ class Plot:
 
     def curve(self, x: Sequence[float], y: Sequence[float], style: str) -> None:
         """A curve, held inside the frame vertically and cut off at its sides."""
-        inside = ((u, v) for u, v in zip(x, y, strict=True) if self.x.low <= u <= self.x.high)
-        self.canvas.line(((self.x(u), self.y.clipped(v)) for u, v in inside), style)
+        low, high = self.y.low, self.y.high
+        held = self.y.places([low if v < low else high if v > high else v for v in y])
+        shown = zip(x, self.x.places(x), held, strict=True)
+        self.canvas.line([(at, level) for u, at, level in shown if self.x.low <= u <= self.x.high], style)
 
     def level(self, value: float, style: str) -> None:
         """A horizontal line over the whole frame."""

@@ -63,7 +63,8 @@ def render(template: str, paper: str, numbers: Numbers, **context: Any) -> str:
     context : what the template prints
     """
     page = _fill(template, paper, numbers, context, wide=False)
-    wide = _WIDE_LETTERS.search("".join(set(page)))
+    beyond_ascii = page.encode().translate(None, delete=bytes(range(128))).decode()
+    wide = _WIDE_LETTERS.search(beyond_ascii)
     return _fill(template, paper, numbers, context, wide=True) if wide else page
 
 
