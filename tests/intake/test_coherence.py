@@ -161,6 +161,23 @@ def test_what_does_not_hang_together_is_shown_as_doubt_with_its_cells(tmp_path: 
     assert "A1" not in notice and all(cell in notice for cell in ("B1", "C1", "B2", "C2", "B3", "C3"))
 
 
+def test_figures_that_cannot_belong_to_their_headings_are_listed_not_read(tmp_path: Path) -> None:
+    headings = ["Gain (dBi)", "VSWR", "Weight (kg)", "Height (mm)"]
+    rows = [headings, ["NW-1", 15, 1.5, 11, 1400], ["NW-2", 16, 1.4, 12, 1500]]
+    account = read(tmp_path, rows)
+    assert not any(
+        r.parameter in ("gain", "vswr", "height") for p in account.submission.panels for r in p.readings
+    )
+    assert {"A2", "B2", "D2", "A3", "B3", "D3"} <= {item.where.cell for item in account.submission.unread}
+
+
+def test_a_note_above_a_list_of_panels_is_no_panel_of_its_own(tmp_path: Path) -> None:
+    headings = ["Model", "Gain (dBi)", "VSWR", "Weight (kg)", "Height (mm)", "Width (mm)", "Isolation (dB)"]
+    rows = [["Nordlicht: overview"], ["Gain: boresight, all columns in phase"], [], headings]
+    rows += [[f"NW-{n}", 15 + n, 1.5, 11, 1400, 200, 28] for n in (1, 2, 3)]
+    assert [panel.name for panel in read(tmp_path, rows).submission.panels] == ["NW-1", "NW-2", "NW-3"]
+
+
 def test_a_sheet_that_hangs_together_is_walked_once() -> None:
     marks, walks = mark(Grid("Sheet1"), Labels({})), []
     assert most_coherent(marks, lambda way: walks.append(way) or SheetResult(way.grid)).doubts == []

@@ -8,7 +8,7 @@ from dataclasses import replace
 
 from speccheck.intake.panels.found import Found
 from speccheck.intake.tables.claims import Doubt, Draft
-from speccheck.records import Value
+from speccheck.records import Unread, Value
 
 
 class Doubted:
@@ -17,27 +17,39 @@ class Doubted:
     def __init__(self, doubts: Mapping[str, Sequence[Doubt]]) -> None:
         self._doubts = {sheet: found for sheet, found in doubts.items() if found}
 
-    def mark(self, draft: Draft, readings: list[Found]) -> None:
-        """Mark what is in doubt: a figure beside a contrary one has that for its alternative.
+    def settle(self, draft: Draft, readings: list[Found], unread: list[Unread]) -> list[Found]:
+        """Readings that may stand: figures out of place are listed as not read.
 
-        Of a panel whose name or extent is in doubt every reading says so.
+        A figure beside a contrary one has that for its alternative; where the name or extent of the panel is
+        in doubt, every reading says so.
         """
         for doubt in self._doubts.get(draft.grid.name, ()):
-            if doubt.no_names or doubt.names:
+            cells = {(draft.grid.name, cell.address) for cell in doubt.cells}
+            if doubt.misplaced:
+                reason = f"layout not understood: {doubt.text}"
+                lost = [found for found in readings if _place(found) in cells]
+                unread += [Unread(where=found.where, text=found.raw, reason=reason) for found in lost]
+                readings = [found for found in readings if _place(found) not in cells]
+            elif doubt.no_names or doubt.names:
                 if any(draft.where is cell for cell in doubt.cells):
                     for found in readings:
                         said = found.recognised or found.figure.recognised
                         found.recognised = f"{said}; layout not understood: {doubt.text}"
             else:
-                _face(readings, {(draft.grid.name, cell.address) for cell in doubt.cells})
+                _face([found for found in readings if _place(found) in cells])
+        return readings
 
 
-def _face(readings: list[Found], cells: set[tuple[str, str]]) -> None:
+def _place(found: Found) -> tuple[str, str]:
+    return found.where.sheet, found.where.cell
+
+
+def _face(readings: list[Found]) -> None:
+    """Give each of several contrary figures the others for alternatives."""
     alike: dict[tuple[object, ...], list[Found]] = defaultdict(list)
     for found in readings:
-        if (found.where.sheet, found.where.cell) in cells:
-            key = (found.parameter, found.band, found.heading, found.figure.condition, found.figure.statistic)
-            alike[key].append(found)
+        key = (found.parameter, found.band, found.heading, found.figure.condition, found.figure.statistic)
+        alike[key].append(found)
     for several in alike.values():
         values: list[Value] = list(dict.fromkeys(found.value for found in several))
         for found in several if len(values) > 1 else ():

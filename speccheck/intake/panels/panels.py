@@ -116,7 +116,7 @@ class Builder:
         _place(readings, draft.bands, several)
         unband_repeated(readings)
         settle_by_panel(readings)
-        self._doubted.mark(draft, readings)
+        readings = self._doubted.settle(draft, readings, unread)
         panel = Panel(
             name=draft.name,
             where=where,

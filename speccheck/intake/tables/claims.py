@@ -70,7 +70,8 @@ class Declared:
 class Doubt:
     """Something in a reading that does not hang together; `weight` is 1 where it spoils the whole sheet.
 
-    `no_names` are cells that gave names and cannot, `names` those that perhaps had better not.
+    `no_names` are cells that gave names and cannot, `names` those that perhaps had better not. `misplaced`
+    figures stand under headings they cannot belong to.
     """
 
     text: str
@@ -78,6 +79,7 @@ class Doubt:
     weight: float
     no_names: tuple[Cell, ...] = ()
     names: tuple[Cell, ...] = ()
+    misplaced: bool = False
 
 
 @dataclass(slots=True)

@@ -13,6 +13,8 @@ from speccheck.intake.tables.claims import Claim, Doubt, Draft, SheetResult
 from speccheck.intake.tables.labels import FREQUENCY_KEYS, Labels
 from speccheck.intake.tables.marks import Marks, looks_like_value
 from speccheck.intake.tables.no_names import never_a_name
+from speccheck.intake.tables.titles import codes
+from speccheck.quantities import UnknownUnitError, convert
 
 _ASIDE = frozenset({"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"})
 _LOOKED_AT = 40
@@ -20,9 +22,14 @@ _LOOKED_AT = 40
 _FEW_KEYS, _USUAL_KEYS = 2, 6
 _LEAST_SHARED = 1 / 3
 _OF_NAMES = 0.2
+_FEWEST_NAMED = 3
+"""Beside so many named panels one without a name is none; beside fewer it may belong to one of them."""
 _MOSTLY = 0.6
 _LEAST_CONTRARY, _CONTRARY_SHARE = 2, 0.1
 _FEWEST_FIGURES = 6
+_FEWEST_MISPLACED, _MISPLACED_SHARE = 3, 0.25
+_STRETCH = 3.0
+"""So far beyond the usual figures a figure is hardly one of its parameter."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -59,10 +66,11 @@ def doubts_of(result: SheetResult, marks: Marks) -> list[Doubt]:
     found = (
         _misnamed(named, marks.labels),
         _strewn(named),
-        _thin(named),
+        _thin(panels if len(named) >= _FEWEST_NAMED else named),
         _interleaved(named),
         _without_band(named),
         _contrary(panels),
+        _misplaced(panels),
         _mostly_unread(result),
     )
     return [doubt for doubt in found if doubt is not None]
@@ -188,6 +196,40 @@ def _subject(claim: Claim) -> tuple[object, ...]:
         label.parameters, label.condition, label.statistic, label.bands.spans, label.sense, label.tolerance,
         context.heading, context.condition, context.statistic, context.band_name, claim.band,
     )  # fmt: skip
+
+
+def _misplaced(panels: list[_Panel]) -> Doubt | None:
+    """Many figures far from any a panel has, or codes of products for figures: beside their headings."""
+    asked = [claim for panel in panels for claim in panel.claims() if _is_plain(claim)]
+    cells = [claim.cell for claim in asked if _is_out_of_place(claim)]
+    if len(cells) < _FEWEST_MISPLACED or len(cells) < _MISPLACED_SHARE * len(asked):
+        return None
+    text = f"{len(cells)} figures cannot belong to their headings"
+    return Doubt(text, tuple(cells), len(cells) / len(asked), misplaced=True)
+
+
+def _is_plain(claim: Claim) -> bool:
+    """Whether a claim is a number, or a single word, for one measured parameter."""
+    keys = claim.context.label.parameters
+    raw = claim.cell.raw
+    number = type(raw) in (int, float) or (isinstance(raw, str) and len(raw.split()) == 1)
+    measured = len(keys) == 1 and parameters()[keys[0]].kind in ("number", "count")
+    return number and measured and claim.text is None
+
+
+def _is_out_of_place(claim: Claim) -> bool:
+    raw, wanted = claim.cell.raw, parameters()[claim.context.label.parameters[0]]
+    if isinstance(raw, str):
+        return raw.strip()[:1].isalpha() and bool(codes(raw.strip()))
+    unit = claim.context.unit or claim.context.label.unit
+    if wanted.plausible is None or (wanted.unit and not unit) or not isinstance(raw, int | float):
+        return False
+    try:
+        value = abs(convert(float(raw), unit, wanted.unit))
+    except UnknownUnitError:
+        return False
+    low, high = wanted.plausible
+    return not low / _STRETCH <= value <= high * _STRETCH
 
 
 def _mostly_unread(result: SheetResult) -> Doubt | None:

@@ -38,7 +38,8 @@ def _walk(marks: Marks, stem: str) -> SheetResult:
     for down in sorted(find_down(marks, taken), key=lambda t: (t.top, t.label_column)):
         DownReader(marks, down, result, names).read()
         result.mark_claims()
-    read_lines(marks, result, names)
+    if not marks.without.lines:
+        read_lines(marks, result, names)
     result.mark_claims()
     result.drafts.sort(key=lambda draft: draft.claims[0].cell.row if draft.claims else 0)
     _leftovers(marks, result)

@@ -38,13 +38,14 @@ class Without:
     """What a second reading of a sheet does without, where the first one did not hang together.
 
     `names` are places of cells that name no panel; the others: tables that state a heading twice, names over
-    columns, and tables with headings across.
+    columns, tables with headings across, and lines beside the tables.
     """
 
     names: frozenset[tuple[int, int]] = frozenset()
     repeats: bool = False
     over_columns: bool = False
     across: bool = False
+    lines: bool = False
 
 
 @dataclass(slots=True)

@@ -48,7 +48,7 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
 
 
 def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks]:
-    """The sheet without misleading names; also without repeats, names over columns, or headings across."""
+    """The sheet without misleading names; also without repeats, names over columns, tables across or lines."""
     wrong = _places(cell for doubt in doubts for cell in doubt.no_names)
     names = wrong | _places(cell for doubt in doubts for cell in doubt.names)
     plain = {p: label for p, label in marks.headings.items() if not _begins_with_figure(marks, p)}
@@ -61,6 +61,7 @@ def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks
             Without(wrong, repeats=True),
             Without(wrong, over_columns=True),
             Without(wrong, across=True),
+            Without(wrong, lines=True),
         ):
             yield replace(bare, without=without)
 
