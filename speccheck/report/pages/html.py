@@ -23,7 +23,7 @@ from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Comp
 from speccheck.report.pages.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
 from speccheck.report.pages.formats import Numbers, shown_unit
 from speccheck.report.pages.inks import rules, shared_groups
-from speccheck.report.pages.markup import cells, clean, marks, table_rows, workings
+from speccheck.report.pages.markup import cells, clean, marks, status, table_rows, workings
 from speccheck.report.pages.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
 from speccheck.report.pages.shared import common_bases, named_reading, named_readings
 from speccheck.report.pages.view import build_view, label, rules_fingerprint
@@ -161,6 +161,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         LEVELS=LEVELS,
         Fit=Fit,
         Level=Level,
+        status=status,
         common_bases=common_bases,
         named_reading=named_reading,
         named_readings=named_readings,

@@ -5,14 +5,16 @@ Every text passes `safe`; class names, coordinates and anchors are the program's
 
 from __future__ import annotations
 
+import functools
 import re
 from collections.abc import Iterable, Mapping, Sequence
 
 from markupsafe import Markup, escape
 
-from speccheck.records import CellRef, Step
+from speccheck.records import CellRef, Compliance, Fit, Outcome, Step
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.formats import Numbers
+from speccheck.report.pages.marks import mark_for
 from speccheck.text import plain
 
 LONGEST_TEXT = 20_000
@@ -29,6 +31,13 @@ def safe(text: str) -> str:
     """Text as it may stand in markup."""
     text = clean(text)
     return str(escape(text)) if _SPECIAL.search(text) else text
+
+
+@functools.cache
+def status(word: Fit | Compliance | Outcome) -> Markup:
+    """A verdict as symbol and word in its tone."""
+    look = mark_for(word)
+    return Markup("<b class={}><i aria-hidden=true>{}</i> {}</b>").format(look.tone, look.symbol, look.word)
 
 
 def marks(figure: Figure) -> Markup:

@@ -141,7 +141,7 @@ def _chart(findings: Sequence[Finding], title: str, numbers: Numbers) -> Figure:
     for i, finding in enumerate(findings):
         y = 14 + CLAIM_HEIGHT * i
         mark = mark_for(finding.verdict)
-        lines = textwrap.wrap(finding.title, 46, max_lines=2, placeholder="…")
+        lines = _lines(finding.title)
         for at, line in enumerate(lines):
             canvas.write(4, y + (8 if len(lines) == 1 else 2 + 13 * at), line, style="text")
         _interval_row(canvas, finding, y, mark.tone)
@@ -158,6 +158,11 @@ def _chart(findings: Sequence[Finding], title: str, numbers: Numbers) -> Figure:
         kind="intervals",
         joined=True,
     )
+
+
+def _lines(title: str) -> list[str]:
+    """A title in one line or two."""
+    return [title] if len(title) <= 46 else textwrap.wrap(title, 46, max_lines=2, placeholder="…")
 
 
 def _ends(finding: Finding) -> tuple[float, float] | None:
