@@ -178,6 +178,13 @@ def test_a_note_above_a_list_of_panels_is_no_panel_of_its_own(tmp_path: Path) ->
     assert [panel.name for panel in read(tmp_path, rows).submission.panels] == ["NW-1", "NW-2", "NW-3"]
 
 
+def test_a_reading_that_loses_the_figures_is_no_better_one(tmp_path: Path) -> None:
+    headings = ["Model", "Gain (dBi)", "Gain (dBi)", "VSWR", "VSWR", "Weight (kg)"]
+    rows = [headings, *([f"KD-{n}", 15, 15.5, 1.5, 1.4, 12] for n in range(4))]
+    found = lines(read(tmp_path, rows))
+    assert "KD-0: B2 gain 15 dBi ?" in found and "KD-0: F2 weight 12 kg" in found and len(found) == 20
+
+
 def test_a_sheet_that_hangs_together_is_walked_once() -> None:
     marks, walks = mark(Grid("Sheet1"), Labels({})), []
     assert most_coherent(marks, lambda way: walks.append(way) or SheetResult(way.grid)).doubts == []

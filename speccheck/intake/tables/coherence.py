@@ -78,11 +78,15 @@ def doubts_of(result: SheetResult, marks: Marks) -> list[Doubt]:
 
 def incoherence(result: SheetResult, marks: Marks, doubts: list[Doubt]) -> float:
     """How badly a reading hangs together: its doubts, figures left out, panels it cannot name."""
-    figures = [place for place, cell in marks.grid.cells.items() if looks_like_value(cell)]
-    read = sum(result.roles.get(place) == "claimed" for place in figures)
-    left_out = 1 - read / len(figures) if figures else 0.0
+    left_out = 1 - share_read(result, marks)
     unnamed = sum(not draft.named for draft in result.drafts) / max(len(result.drafts), 1)
     return sum(doubt.weight for doubt in doubts) + left_out + _OF_NAMES * unnamed
+
+
+def share_read(result: SheetResult, marks: Marks) -> float:
+    """Share of the figures of a sheet that a reading takes for figures of panels."""
+    figures = [place for place, cell in marks.grid.cells.items() if looks_like_value(cell)]
+    return sum(result.roles.get(place) == "claimed" for place in figures) / max(len(figures), 1)
 
 
 def _panels(result: SheetResult) -> list[_Panel]:
@@ -186,7 +190,7 @@ def _contrary(panels: list[_Panel]) -> Doubt | None:
     if not cells or len(cells) < _CONTRARY_SHARE * claims:
         return None
     text = "the same headings give one panel different figures for one band"
-    return Doubt(text, tuple({id(cell): cell for cell in cells}.values()), len(cells) / claims)
+    return Doubt(text, tuple({id(cell): cell for cell in cells}.values()), min(len(cells) / claims, 1.0))
 
 
 def _subject(claim: Claim) -> tuple[object, ...]:

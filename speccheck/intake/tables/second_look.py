@@ -7,7 +7,7 @@ from dataclasses import replace
 
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.claims import Doubt, SheetResult
-from speccheck.intake.tables.coherence import doubts_of, incoherence
+from speccheck.intake.tables.coherence import doubts_of, incoherence, share_read
 from speccheck.intake.tables.marks import Marks, Without, looks_like_value
 
 _ROUNDS = 3
@@ -17,6 +17,8 @@ _KEPT = 3
 _BETTER = 0.05
 """By so much another reading must hang together better than one that takes more for granted."""
 
+_ENOUGH = 0.5
+"""A reading without doubt that loses more of the figures is no better one."""
 Place = tuple[int, int]
 Walk = Callable[[Marks], SheetResult]
 
@@ -30,7 +32,7 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
     doubts = doubts_of(best, marks)
     if not doubts:
         return best
-    least = incoherence(best, marks, doubts)
+    least, enough = incoherence(best, marks, doubts), _ENOUGH * share_read(best, marks)
     tried: list[Marks] = [marks]
     for other in _other_ways(marks, doubts, walk):
         if any(other.without == t.without and len(other.headings) == len(t.headings) for t in tried):
@@ -39,7 +41,7 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
         result = walk(other)
         left = doubts_of(result, other)
         score = incoherence(result, marks, left)
-        if score < least - _BETTER:
+        if score < least - _BETTER and share_read(result, other) > enough:
             best, doubts, least = result, left, score
         if not left and best is result:
             break
@@ -48,7 +50,7 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
 
 
 def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks]:
-    """The sheet without misleading names; also without repeats, names over columns, tables across or lines."""
+    """The sheet without misleading names; also without repeats, names over columns, tables across, lines."""
     wrong = _places(cell for doubt in doubts for cell in doubt.no_names)
     names = wrong | _places(cell for doubt in doubts for cell in doubt.names)
     plain = {p: label for p, label in marks.headings.items() if not _begins_with_figure(marks, p)}
