@@ -36,29 +36,27 @@ class _Joiner:
         self._by_name: dict[str, list[Draft]] = {}
         self._titles: list[Draft] = []
         self._stated: dict[int, _Stated] = {}
-        """What each kept draft states, by its identity; grows as pieces join it."""
+        """What a draft states, by its identity, once it was asked for; grows as pieces join it."""
 
     def take(self, draft: Draft, *, last: bool) -> None:
         """Keep a draft, or join it to one kept before; `last` says that no other follows on its sheet."""
-        if draft.keys() <= _TITLE_KEYS:
+        if _only_names(draft):
             self._titles.append(draft)
             return
         title = self._titles[-1] if self._titles and self._titles[-1].grid is draft.grid else None
         if title is not None and last:
             self._titles.pop()
             self._give_title(title, draft)
-        stated = _stated(draft)
-        home = self._home(draft, stated)
+        home = self._home(draft)
         if home is None:
             self._kept.append(draft)
-            self._stated[id(draft)] = stated
             self._by_name.setdefault(_key(draft.name), []).append(draft)
             return
         if draft.named and not home.named:
             home.name, home.named = draft.name, True
             self._by_name.setdefault(_key(draft.name), []).append(home)
+        self._stated_by(home).update(self._stated_by(draft))
         home.joined.append(draft)
-        self._stated[id(home)] |= stated
         home.bands += [band for band in draft.bands if band not in home.bands]
 
     def _give_title(self, title: Draft, draft: Draft) -> None:
@@ -85,9 +83,15 @@ class _Joiner:
             only.joined.append(title)
         return self._kept, []
 
-    def _home(self, draft: Draft, stated: _Stated) -> Draft | None:
+    def _stated_by(self, draft: Draft) -> _Stated:
+        """What a draft states; in a catalogue of different names nobody asks."""
+        if id(draft) not in self._stated:
+            self._stated[id(draft)] = _stated(draft)
+        return self._stated[id(draft)]
+
+    def _home(self, draft: Draft) -> Draft | None:
         for other in reversed(self._by_name.get(_key(draft.name), [])[-_NEAREST:]):
-            if not _clash(stated, self._stated[id(other)]):
+            if not _clash(self._stated_by(draft), self._stated_by(other)):
                 return other
         if not self._kept:
             return None
@@ -95,7 +99,13 @@ class _Joiner:
         if draft.named and (last.named or last.grid is draft.grid):
             return None
         alone = len(self._kept) == 1 or last.grid is draft.grid
-        return last if alone and not _clash(stated, self._stated[id(last)]) else None
+        return last if alone and not _clash(self._stated_by(draft), self._stated_by(last)) else None
+
+
+def _only_names(draft: Draft) -> bool:
+    """Whether a draft says no more than what a panel is called and by whom it is made."""
+    claims = (claim for piece in draft.pieces() for claim in piece.claims)
+    return all(_TITLE_KEYS.issuperset(claim.context.label.parameters) for claim in claims)
 
 
 def _clash(mine: _Stated, theirs: _Stated) -> bool:

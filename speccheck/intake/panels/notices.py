@@ -84,6 +84,8 @@ def note_notices(result: SheetResult, labels: Labels, where: Where) -> list[Noti
     """Notes that quote a figure of a known parameter: named, because a reader may take them for claims."""
     found = []
     for place, role in result.roles.items():
+        if role not in ("example", "note"):
+            continue
         cell = result.grid.cells[place]
         if role == "example":
             text = "an example row of the form, not read as a claim"

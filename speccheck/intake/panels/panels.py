@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections import Counter
 from collections.abc import Mapping
 from dataclasses import dataclass, replace
-from functools import lru_cache
+from functools import cache, lru_cache
 
 from speccheck.dictionary import parameters
 from speccheck.intake.panels.doubted import Doubted
@@ -254,16 +254,22 @@ def _add_tolerances(
             unread.append(outcome.unread)
 
 
+@cache
+def _keys_of_bands() -> frozenset[str]:
+    """Parameters that have a figure for each band, of whatever panel."""
+    return frozenset(key for key, known in parameters().items() if known.scope == "band") - GEOMETRY
+
+
 def _place(readings: list[Found], bands: list[Band], several: bool) -> None:
     """Bands by the scope of each parameter."""
-    table = parameters()
+    of_bands = _keys_of_bands()
     only = bands[0] if len(bands) == 1 and not several else None
-    by_array = Counter(found.parameter for found in readings if found.band == only) if only else {}
+    by_array = Counter([found.parameter for found in readings if found.band == only]) if only else {}
     for found in readings:
         key = found.parameter
         if key in FREQUENCY:
             continue
-        by_band = table[key].scope == "band" and key not in GEOMETRY
+        by_band = key in of_bands
         if only is not None:
             of_array = key in PER_BAND_IF_SAID and by_array.get(key, 0) > 1 and found.band == only
             found.band = only if by_band or of_array else None

@@ -32,6 +32,8 @@ class _Row:
 
     draft: Draft | None = None
     said: RowBand = field(default_factory=RowBand)
+    known: bool = False
+    """Whether the row is about one band."""
     note: str = ""
     """What all figures of the row are said of: the nickname of its band, its tilt."""
 
@@ -161,7 +163,8 @@ class AcrossReader:
                 self._start_panel(row, name_cell)
         elif self._at.draft is None or not (guides.named or guides.banded or guides.nicknamed):
             self._start_panel(row, cells[0])
-        self._at.said, self._at.note = said, f"{said.name} {tilt}".strip() if tilt else said.name
+        self._at.said, self._at.known = said, said.known
+        self._at.note = f"{said.name} {tilt}".strip() if tilt else said.name
         draft = self._at.draft
         if draft is not None:
             known = self._known[draft.name]
@@ -215,15 +218,15 @@ class AcrossReader:
             return
         if cell.column in self._guides.of_bands and self._only_guides(cell, draft):
             return
-        said, column = self._at.said, found.column
+        column = found.column
         if isinstance(cell.raw, str) and is_ditto(cell.raw):
             cell = replace(meant(self._grid, cell), text=cell.text)
         if found.label.parameters:
             context, band, banded = found.context, column.band, found.banded
             if not found.of_frequency or column.index == self._guides.banded:
                 context = self._noted(context, self._at.note) if self._at.note else context
-                if not banded and said.known:
-                    band, banded = said.band, True
+                if self._at.known and not banded:
+                    band, banded = self._at.said.band, True
             draft.claims.append(Claim(cell, context, band, banded=banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)

@@ -57,8 +57,8 @@ class Guides:
 def describe_fields(marks: Marks, table: Across) -> dict[int, Field]:
     """The columns of a table, from the headings over them and, failing those, from what they hold."""
     rows = [*table.heading_rows, *table.data_rows]
-    within = (c.column for row in rows for c in marks.rows.get(row, ()))
-    used = sorted({column for column in within if table.left <= column <= table.right})
+    within = {c.column for row in rows for c in marks.rows.get(row, ())}
+    used = sorted(column for column in within if table.left <= column <= table.right)
     fields = {index: _describe(marks, table, index) for index in used}
     for found in _of_earlier_years(fields):
         found.label, found.role = Label(found.label.text), "superseded"

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 from collections.abc import Mapping
+from functools import lru_cache
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands
@@ -50,6 +51,7 @@ def _text(low: Cell, high: Cell, heading: str) -> str:
     return f"{low.text}-{high.text} {unit}"
 
 
+@lru_cache(maxsize=2_000)
 def edge_of(text: str) -> str:
     """``lower`` or ``upper`` when a heading names one edge of a band, else empty."""
     folded = fold(text)

@@ -5,6 +5,7 @@ from __future__ import annotations
 import re
 from collections import defaultdict
 from dataclasses import dataclass, field
+from functools import lru_cache
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
@@ -195,6 +196,7 @@ def _mark_letters(marks: Marks) -> None:
             marks.headings[row, column] = label
 
 
+@lru_cache(maxsize=20_000)
 def is_size_letter(text: str) -> bool:
     """Whether a heading is a letter, perhaps with a unit of length, that may head a size."""
     if len(text) >= _LONGEST_LETTER or (len(text) > 1 and text[1] not in " ([,"):

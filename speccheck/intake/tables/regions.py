@@ -181,6 +181,7 @@ def _is_upper_heading(marks: Marks, row: int, heading_row: int) -> bool:
 
 def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list[int]) -> None:
     texts = {c.column: c.text for c in marks.rows[heading_row]}
+    headed = {row for row, _ in marks.headings}
     last = heading_row
     for position, row in enumerate(following):
         cells = cells_of(marks, table, row)
@@ -188,7 +189,7 @@ def _collect_rows(marks: Marks, table: Across, heading_row: int, following: list
             break
         if not cells:
             continue
-        headings = [c for c in cells if marks.is_heading(c) and c.column in texts]
+        headings = [c for c in cells if marks.is_heading(c) and c.column in texts] if row in headed else []
         if len(headings) > 1 and all(texts[c.column] == c.text for c in headings):
             if sum(marks.is_heading(c) for c in marks.rows[row]) > len(headings):
                 break
@@ -248,7 +249,10 @@ def _texts(marks: Marks, row: int) -> list[tuple[int, str]]:
 
 def cells_of(marks: Marks, table: Across, row: int) -> list[Cell]:
     """The cells of a row that belong to a table."""
-    return [c for c in marks.rows.get(row, ()) if table.left <= c.column <= table.right]
+    cells = marks.rows.get(row, [])
+    if cells and table.left <= cells[0].column and cells[-1].column <= table.right:
+        return cells
+    return [c for c in cells if table.left <= c.column <= table.right]
 
 
 def _is_data(marks: Marks, table: Across, row: int) -> bool:
