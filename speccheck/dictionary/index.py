@@ -71,7 +71,7 @@ def suggestions(text: str) -> tuple[str, ...]:
     if is_ambiguous(text):
         return (_ambiguous()[key_of(tuple(word for word in words if word not in _QUALIFIERS))],)
     near: dict[tuple[str, str], int] = {}
-    for stem in {word[:5] for word in words if len(word) > 2}:
+    for stem in dict.fromkeys(word[:5] for word in words if len(word) > 2):  # a set's order changes by run
         for entry in _by_stem().get(stem, ()):
             near[entry] = near.get(entry, 0) + 1
     ranked = sorted(near, key=lambda entry: -near[entry])[:24]
