@@ -120,6 +120,19 @@ SHEETS: dict[str, tuple[Rows, str]] = {
         bid: B2 gain 17 dBi @1710-1880
         bid: C2 gain 17.6 dBi @1920-2170""",
     ),
+    "panels across that only a row of part numbers names": (
+        [
+            ["Part no.", "WT-0465", "WT-0665"],
+            ["Gain (dBi)", 14.3, 16.1],
+            ["Weight (kg)", 11, 12],
+        ],
+        """WT-0465: B1 part_number WT-0465
+        WT-0465: B2 gain 14.3 dBi
+        WT-0465: B3 weight 11 kg
+        WT-0665: C1 part_number WT-0665
+        WT-0665: C2 gain 16.1 dBi
+        WT-0665: C3 weight 12 kg""",
+    ),
     "arrays over the columns, 'Array' in the corner": (
         [
             ["NW-8P"],

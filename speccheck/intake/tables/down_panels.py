@@ -196,9 +196,12 @@ class DownPanels:
         return [r for r in rows if (found := headings.get((r, column))) and set(found.parameters) <= keys]
 
     def _find_model_row(self, values: list[Column]) -> int:
+        """The row that names the panels over the columns; a row of part numbers where nothing else does."""
         if len(values) < 2:
             return 0
-        for row in self._rows_of(NAME_KEYS):
+        unnamed = not any(column.words or column.band or column.band_name for column in values)
+        numbers = self._rows_of(frozenset({"part_number"})) if unnamed else []
+        for row in [*self._rows_of(NAME_KEYS), *numbers]:
             found = (self._marks.grid.cells.get((row, column.index)) for column in values)
             cells = [cell for cell in found if cell is not None]
             if len({cell.text for cell in cells}) > 1 and all(map(self._marks.may_name, cells)):

@@ -166,7 +166,7 @@ def _states_again(marks: Marks, row: int, column: int, above: range) -> bool:
 
 def _names_columns(marks: Marks, row: int, column: int) -> bool:
     label = marks.headings.get((row, column))
-    if label is None or label.parameters[0] not in ("model", "panel_type"):
+    if label is None or label.parameters[0] not in ("model", "panel_type", "part_number"):
         return False
     return len({cell.text for cell in marks.rows[row] if cell.column > column}) > 1
 
