@@ -120,6 +120,21 @@ SHEETS: dict[str, tuple[Rows, str]] = {
         bid: B2 gain 17 dBi @1710-1880
         bid: C2 gain 17.6 dBi @1920-2170""",
     ),
+    "names over the first of a panel's bands only, as merged cells come out of other formats": (
+        [
+            ["Parameter", "NR-1", _, "NR-2", _],
+            ["Band, MHz", "698-960", "1710-2690", "698-960", "1710-2690"],
+            ["Gain, dBi", 13, 18, 14, 19],
+        ],
+        """NR-1: B2 operating_bands 698..960 MHz @698-960
+        NR-1: C2 operating_bands 1710..2690 MHz @1710-2690
+        NR-1: B3 gain 13 dBi @698-960
+        NR-1: C3 gain 18 dBi @1710-2690
+        NR-2: D2 operating_bands 698..960 MHz @698-960
+        NR-2: E2 operating_bands 1710..2690 MHz @1710-2690
+        NR-2: D3 gain 14 dBi @698-960
+        NR-2: E3 gain 19 dBi @1710-2690""",
+    ),
     "panels across that only a row of part numbers names": (
         [
             ["Part no.", "WT-0465", "WT-0665"],

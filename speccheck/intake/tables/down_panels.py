@@ -62,6 +62,7 @@ class DownPanels:
         values = self._value_columns()
         self._unname([c for c in values if not self._may_name(c)])
         self.model_row = self._find_model_row(values)
+        self._share_names(values)
         if not self.model_row:
             self._name_arrays(values)
         title = None
@@ -131,6 +132,19 @@ class DownPanels:
         """Whether one heading without any figure stands over the values; a title names a panel better."""
         names = {column.name for column in values if column.words}
         return len(names) == 1 and not any(letter.isdigit() for name in names for letter in name)
+
+    def _share_names(self, values: list[Column]) -> None:
+        """A name holds for the next columns without heading that give a band: merges get lost on the way."""
+        rows = self._rows_of(_FREQUENCY_KEYS)
+        before: Column | None = None
+        for column in values:
+            if (cell := self._name_cell(column)) is not None:
+                before, name = column, cell
+            elif before is not None and not column.cells and self._gives_band(rows, column):
+                column.words, column.name_cell = before.words, name
+
+    def _gives_band(self, rows: list[int], column: Column) -> bool:
+        return any(column.index in self._spans_of_row(row, [column]) for row in rows)
 
     def _may_name(self, column: Column) -> bool:
         named = column.name_cell is None or self._marks.may_name(column.name_cell)
