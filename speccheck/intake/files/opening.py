@@ -5,6 +5,7 @@ from __future__ import annotations
 import hashlib
 import io
 from dataclasses import dataclass, field
+from itertools import islice
 from pathlib import Path
 
 from speccheck.errors import UnusableInputError
@@ -30,6 +31,7 @@ _BYTES_OF = {
 }
 _OLE = b"\xd0\xcf\x11\xe0\xa1\xb1\x1a\xe1"
 _MARKUP = (b"<!doctype", b"<html", b"<?xml", b"<table")
+_PIECE = 1 << 20
 
 
 @dataclass(slots=True)
@@ -93,7 +95,8 @@ def _content(path: Path, file: str, limits: Limits) -> bytes:
         if not path.is_file():
             raise _refusal(file, "a device or pipe, not a file", "name an ordinary file")
         with path.open("rb") as stream:
-            content = stream.read(limits.file_bytes + 1)
+            pieces = iter(lambda: stream.read(_PIECE), b"")  # one read of the limit takes its memory at once
+            content = b"".join(islice(pieces, limits.file_bytes // _PIECE + 1))
     except (OSError, ValueError) as error:
         reason = getattr(error, "strerror", None) or str(error)
         raise _refusal(

@@ -74,7 +74,7 @@ def _with_own_rows(marks: Marks, table: Across) -> Across:
 
 def _leftovers(marks: Marks, result: SheetResult) -> None:
     """Cells outside every table: notes, unless a figure stands beside a word as if it were a claim."""
-    left = marks.grid.cells.keys() - result.roles.keys()
+    left = {place for place in marks.grid.cells if place not in result.roles}
     for row in sorted({row for row, _ in left}):
         free = [c for c in marks.rows[row] if (row, c.column) in left]
         for position, cell in enumerate(free):
