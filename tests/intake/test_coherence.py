@@ -135,6 +135,28 @@ SHEETS: dict[str, tuple[Rows, str]] = {
         NR-2: D3 gain 14 dBi @698-960
         NR-2: E3 gain 19 dBi @1710-2690""",
     ),
+    "headings over several columns without merges: a new group ends the band before it": (
+        [
+            ["Type", "Low band", _, "High band", _, "Connection", _],
+            [_, "694-960 MHz", _, "1710-2690 MHz", _, _, _],
+            [_, "Gain", "HPBW H", "Gain", "HPBW H", "Isolation", "Weight"],
+            [_, "dBi", "°", "dBi", "°", "dB", "kg"],
+            ["SA-1", 14, 65, 17, 62, 28, 20],
+            ["SA-2", 15, 66, 18, 63, 28, 25],
+        ],
+        """SA-1: B5 gain 14 dBi @694-960
+        SA-1: C5 horizontal_beamwidth 65 deg @694-960
+        SA-1: D5 gain 17 dBi @1710-2690
+        SA-1: E5 horizontal_beamwidth 62 deg @1710-2690
+        SA-1: F5 port_isolation 28 dB
+        SA-1: G5 weight 20 kg
+        SA-2: B6 gain 15 dBi @694-960
+        SA-2: C6 horizontal_beamwidth 66 deg @694-960
+        SA-2: D6 gain 18 dBi @1710-2690
+        SA-2: E6 horizontal_beamwidth 63 deg @1710-2690
+        SA-2: F6 port_isolation 28 dB
+        SA-2: G6 weight 25 kg""",
+    ),
     "panels across that only a row of part numbers names": (
         [
             ["Part no.", "WT-0465", "WT-0665"],

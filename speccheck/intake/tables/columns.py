@@ -64,14 +64,16 @@ class Column:
 def heading_stack(grid: Grid, rows: list[int], column: int, left: int) -> list[Cell]:
     """Heading cells over a column, top to bottom; a heading over several columns counts for each.
 
-    A heading that is not merged reaches to the next filled cell of its row, unless it is in the lowest row.
+    A heading that is not merged reaches to the next filled cell of its row or of one above; the lowest row
+    heads its own columns only.
     """
     stack: list[Cell] = []
     for row in rows:
         cell = grid.covering(row, column)
         own = any(above.column == column for above in stack)
         if cell is None and not own and row != rows[-1] and grid.covering(rows[-1], column) is not None:
-            for before in range(column - 1, max(left, column - 12) - 1, -1):
+            first = max([left, column - 12, *(above.column for above in stack)])
+            for before in range(column - 1, first - 1, -1):
                 cell = grid.cells.get((row, before))
                 if cell is not None:
                     merged = grid.spans.get((row, before))
