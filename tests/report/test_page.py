@@ -97,7 +97,7 @@ def test_rows_and_findings_are_printed_once_for_each_record() -> None:
     judged = [f for f in OUTLINE.findings if f.verdict is not Fit.NOT_JUDGED]
     assert physics.count('<div class="finding') == len(judged)
     inputs = PAGE[PAGE.index('id="inputs"') : PAGE.index('id="annex"')]
-    assert inputs.count("</tr>") >= len(PANEL.readings) + len(PANEL.statements) + len(SUBMISSION.unread)
+    assert inputs.count("<tr") >= len(PANEL.readings) + len(PANEL.statements) + len(SUBMISSION.unread)
 
 
 def test_every_open_row_and_every_misfit_has_a_question() -> None:
@@ -192,13 +192,13 @@ def test_every_figure_has_a_title_that_says_something_and_a_text_equivalent() ->
     assert len(figures) >= 10
     for figure in figures:
         title = re.search(r'<p class="figure-title" id="([^"]+)">(.+?)</p>', figure)
-        caption = re.search(r'<figcaption><span id="([^"]+)">(.+?)</span>', figure)
+        caption = re.search(r"<figcaption><span id=([^>]+)>(.+?)</span>", figure)
         assert title is not None
         assert caption is not None
         assert caption[2] != title[2]
         assert len(caption[2]) > 20
-        assert f'aria-labelledby="{title[1]}" aria-describedby="{caption[1]}"' in figure
-        assert 'role="img"' in figure
+        assert f"aria-labelledby={title[1]} aria-describedby={caption[1]}" in figure
+        assert '<svg role="img" ' in figure
 
 
 def test_modelled_curves_are_called_expected_not_measured() -> None:
@@ -240,7 +240,7 @@ def test_wind_and_mounting_figures_come_with_cautions() -> None:
 def test_the_program_fills_no_name_and_leaves_boxes() -> None:
     block = PAGE[PAGE.index('class="signoff') :].partition("</table>")[0]
     for role in ("Prepared", "Checked", "Approved"):
-        assert f'<tr><th scope="row">{role}</th><td></td><td></td><td></td><td></td></tr>' in block
+        assert f"<tr><th scope=row>{role}<td><td><td><td>\n" in block
 
 
 def test_draft_until_issued() -> None:
@@ -298,5 +298,5 @@ def test_a_very_long_cell_is_whole_on_the_screen_and_short_on_paper():
     page = render_html(replace(sample(), submission=replace(sample().submission, panels=(panel,))))
     shown = re.sub(r"<[^>]*>", "", page)
     assert text in shown
-    assert '<span class="rest">' + "y" * 8_800 + "</span>" in page  # 10 000 less the 1 200 that are printed
+    assert "<span class=rest>" + "y" * 8_800 + "</span>" in page  # 10 000 less the 1 200 that are printed
     assert "10000 characters" in shown

@@ -54,7 +54,7 @@ def marks(figure: Figure) -> Markup:
 
 def table_rows(rows: Iterable[Sequence[str]]) -> Markup:
     """Rows of a table of figures."""
-    lines = [f"<tr><td>{'</td><td>'.join(map(safe, row))}</td></tr>\n" for row in rows]
+    lines = [f"<tr><td>{'<td>'.join(map(safe, row))}\n" for row in rows]
     return Markup("".join(lines))  # noqa: S704 - every text of it is safe
 
 
@@ -74,7 +74,7 @@ def workings(steps: Iterable[Step], numbers: Numbers) -> Markup:
     """Items of a list of steps: what is worked out, its formula with numbers, the result."""
     items = [
         f"<li>{safe(numbers.prose(step.label))}: {safe(numbers.formula(step.formula))}"
-        f" = <b>{safe(numbers.figure(step.value, step.unit))}</b></li>"
+        f" = <b>{safe(numbers.figure(step.value, step.unit))}</b>"
         for step in steps
     ]
     return Markup("\n".join(items))  # noqa: S704 - every text of it is safe
