@@ -7,8 +7,8 @@ from dataclasses import dataclass
 from typing import Literal
 
 from speccheck.quantities.numerals import NUMERAL_PATTERN
-from speccheck.quantities.units import UNIT_PATTERN, unit_name
-from speccheck.quantities.words import longest_phrase, roles
+from speccheck.quantities.units import UNIT_PATTERN, dimension, unit_name
+from speccheck.quantities.words import longest_phrase, roles, word_set
 
 TokenKind = Literal[
     "num", "unit", "pm", "plus", "minus", "range", "times", "slash", "sep", "colon", "open", "close",
@@ -64,7 +64,53 @@ def tokens(text: str) -> list[Token]:
         token = _token(match, found, text)
         if token:
             found.append(token)
-    return _phrases(found)
+    return _phrases(_before_carriers(found))
+
+
+def _before_carriers(found: list[Token]) -> list[Token]:
+    """'-153 dBc a 2x43 dBm': before carriers stands no range, whatever the word or dash could mean elsewhere.
+
+    The carriers may be counted in words, 'a 2 portadoras de 43 dBm'.
+    """
+    if not any(token.kind == "unit" and dimension(token.value) == "power" for token in found):
+        return found
+    result: list[Token] = []
+    index = 0
+    while index < len(found):
+        token, after = found[index], found[index + 1 :]
+        leads, of = _leads_to_carriers(token, result), _last_unit(result)
+        count = _carriers(after) if leads and dimension(of) != "power" else 0
+        count = count or int(leads and token.kind == "word" and of == "dBc" and _is_power(after))
+        result.append(Token("at", token.text) if count else token)
+        index += 1
+        if count > 1:
+            result += [found[index], Token("times", "×")]
+            index += count
+    return result
+
+
+def _last_unit(before: list[Token]) -> str:
+    return next((token.value for token in reversed(before) if token.kind == "unit"), "")
+
+
+def _is_power(after: list[Token]) -> bool:
+    kinds = [token.kind for token in after[:2]]
+    return kinds == ["num", "unit"] and dimension(after[1].value) == "power"
+
+
+def _leads_to_carriers(token: Token, before: list[Token]) -> bool:
+    """Whether a token behind a figure may mean 'at'."""
+    word = token.kind == "word" and token.text.casefold() in word_set("carriers")
+    return bool(before) and (word or token.kind in ("range", "at", "minus"))
+
+
+def _carriers(after: list[Token]) -> int:
+    """How many tokens stand before the power of the carriers that begin a list: 1 in '2 × 43 dBm', else 0."""
+    kinds = [token.kind for token in after[:6]]
+    if kinds[:3] == ["num", "times", "num"]:
+        return int(_is_power(after[2:]))
+    words = next((n for n, kind in enumerate(kinds[1:]) if kind != "word"), 0)
+    return words + 1 if words and kinds[0] == "num" and _is_power(after[words + 1 :]) else 0
 
 
 def _token(match: re.Match[str], found: list[Token], text: str) -> Token | None:

@@ -75,3 +75,43 @@ def test_ports_are_added_up(text: str, ports: int) -> None:
 def test_an_angle_alone_is_no_number_of_polarisations() -> None:
     assert read_cell("45", kind="polarisation").quantities == ()
     assert read_cell(45, kind="polarisation").quantities == ()
+
+
+@pytest.mark.parametrize(
+    "words",
+    [
+        "a",
+        "à",
+        "at",
+        "to",
+        "@",
+        "con",
+        "com",
+        "com",
+        "bei",
+        "mit",
+        "avec",
+        "sous",
+        "przy",
+        "z",
+        "bij",
+        "met",
+        "voor",
+        "per",
+        "-",
+    ],
+)
+@pytest.mark.parametrize("carriers", ["2x43 dBm", "2 × 43 dBm", "2 x 20 W", "2 portadoras de 43 dBm"])
+def test_before_carriers_no_word_makes_a_range(words: str, carriers: str) -> None:
+    # IEC 62037-1: intermodulation is stated at two carriers, usually of 43 dBm (20 W) each
+    for stated in (f"≤ -153 dBc {words} {carriers}", f"-153 dBc máx. {words} {carriers}"):
+        (found,) = read_cell(stated, kind="number", expected="dBc").quantities
+        assert (found.value, found.unit, found.sense) == (-153.0, "dBc", "max"), stated
+        assert found.at["carrier_dbm"] == pytest.approx(43.0, abs=0.05), stated
+
+
+def test_a_range_of_figures_is_still_one() -> None:
+    (found,) = read_cell("0 a 10", kind="range", expected="deg").quantities
+    assert found.value == (0.0, 10.0)
+    (found,) = read_cell("300 a 400 W", kind="number", expected="W").quantities
+    assert found.value == (300.0, 400.0)
