@@ -88,18 +88,12 @@ def _account(path: str | Path, headings: Mapping[str, str] | None, limits: Limit
 
 @contextmanager
 def _collector_at_rest() -> Iterator[None]:
-    """Hold the cycle collector: it would walk the many small records again and again, and none has cycles.
-
-    Before it goes on they pass to its oldest generation, or it would walk them all at once.
-    """
+    """Hold the cycle collector: it would walk the many small records again and again, and none has cycles."""
     running = gc.isenabled()
     gc.disable()
     try:
         yield
     finally:
-        if running and not gc.get_freeze_count():
-            gc.freeze()
-            gc.unfreeze()
         if running:
             gc.enable()
 
