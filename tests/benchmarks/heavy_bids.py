@@ -7,6 +7,8 @@ from pathlib import Path
 from openpyxl import Workbook
 
 BANDS = ("617-698", "694-960", "1427-1518", "1695-2690", "2300-2690", "3300-3800")
+MORE_BANDS = ("3800-4200", "4400-5000")
+"""Bands of a still larger bid; their figures are those of the last band."""
 ROWS = (
     ("Array rows", (6, 6, 8, 10, 10, 12)),
     ("Array columns", (1, 1, 1, 1, 1, 4)),
@@ -54,9 +56,10 @@ def write_bid(path: Path, *, bands: int = len(BANDS), clashing: bool = False) ->
     page = book.active
     page.title = "Panel data"
     page.append(["Model", "Sallowmere Six"])
-    page.append(["Frequency band (MHz)", *BANDS[:bands]])
+    page.append(["Frequency band (MHz)", *(*BANDS, *MORE_BANDS)[:bands]])
     for name, row in ROWS:
-        page.append([name, *(CLASHES.get(name, row) if clashing else row)[:bands]])
+        figures = CLASHES.get(name, row) if clashing else row
+        page.append([name, *(*figures, *(figures[-1] for _ in MORE_BANDS))[:bands]])
     for name, usual, small in WHOLE:
         page.append([name, small if clashing else usual])
     book.save(path)

@@ -4,9 +4,30 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterable
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 
 from speccheck.records import Band, ExposureNote, ExposureRow, ExposureZone
+
+MOST_BANDS = 6
+"""Bands of which a box with all assumptions and cautions still stands on one page, A4 or Letter."""
+
+
+def note_parts(note: ExposureNote) -> tuple[ExposureNote, ...]:
+    """A note of many bands as several, each with its share of the bands and all that bounds every figure.
+
+    The lines of all bands together stand in each part.
+    """
+    bands = tuple(dict.fromkeys(row.band for row in (*note.rows, *note.around) if row.band))
+    count = max(1, -(-len(bands) // MOST_BANDS))
+    shares = [bands[i * len(bands) // count : (i + 1) * len(bands) // count] for i in range(count)]
+    return tuple(
+        replace(
+            note,
+            rows=tuple(row for row in note.rows if row.band is None or row.band in share),
+            around=tuple(zone for zone in note.around if zone.band in share),
+        )
+        for share in shares
+    )
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

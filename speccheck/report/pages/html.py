@@ -20,11 +20,17 @@ from markupsafe import Markup
 from speccheck.atomic import write_bytes_atomic
 from speccheck.errors import OutputError
 from speccheck.records import MOUNTING_CAUTIONS, WIND_CAUTIONS, Assessment, Compliance, Fit, Level, MatrixRow
-from speccheck.report.pages.exposure_lines import exposure_table, merged_by_band, region_lines, zone_table
+from speccheck.report.pages.exposure_lines import (
+    exposure_table,
+    merged_by_band,
+    note_parts,
+    region_lines,
+    zone_table,
+)
 from speccheck.report.pages.formats import Numbers, shown_unit
 from speccheck.report.pages.inks import rules, shared_groups
-from speccheck.report.pages.markup import cells, clean, marks, status, table_rows, workings
 from speccheck.report.pages.marks import COMPLIANCE, FITS, LEVELS, OUTCOMES, mark_for
+from speccheck.report.pages.markup import cells, clean, marks, status, table_rows, workings
 from speccheck.report.pages.shared import common_bases, named_reading, named_readings
 from speccheck.report.pages.view import build_view, label, rules_fingerprint
 
@@ -181,6 +187,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         named_readings=named_readings,
         exposure_table=exposure_table,
         merged_by_band=merged_by_band,
+        note_parts=note_parts,
         region_lines=region_lines,
         rules_fingerprint=rules_fingerprint,
         zone_table=zone_table,

@@ -1,4 +1,4 @@
-"""Markup that a page prints thousands of, joined here: in a template each piece would cost a call and an escape.
+"""Markup that a page prints thousands of, joined here: in a template each piece costs a call and an escape.
 
 Every text passes `safe`; class names, coordinates and anchors are the program's own.
 """
@@ -59,7 +59,7 @@ def table_rows(rows: Iterable[Sequence[str]]) -> Markup:
 
 
 def cells(places: Sequence[CellRef], anchors: Mapping[CellRef, str]) -> Markup:
-    """Addresses, each leading to its row under inputs as read; a sheet is named once, before its first cell."""
+    """Addresses, each a link to its row of inputs as read; a sheet is named once, before its first cell."""
     parts = []
     sheet = None
     for place in places:
