@@ -3,13 +3,14 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Iterator
 from dataclasses import dataclass, replace
 from functools import lru_cache
 
-from speccheck.dictionary import Parameter, match_heading, parameters, specified
+from speccheck.dictionary import Parameter, match_heading, parameters
 from speccheck.intake.files.grid import Raw
 from speccheck.intake.panels.found import Figure
+from speccheck.intake.panels.pairing import paired
+from speccheck.intake.panels.slack import Slack, bare_unit, slack_of, with_slack, without_slack
 from speccheck.intake.panels.unitless import with_unit
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.words import is_band_nickname
@@ -18,7 +19,6 @@ from speccheck.quantities import (
     DecimalHabit,
     Quantity,
     UnknownUnitError,
-    array_of,
     dimension,
     read_cell,
     settle,
@@ -35,12 +35,10 @@ MIN_WORDS = re.compile(
 )
 _UNIT_CONDITION = re.compile(r"\s*(?:@|\bat\b|\bbei\b|[(\[]?(?=2\s?[x×]\s?\d))\s*(.+?)[)\]]?\s*$")
 _AMBIGUOUS = re.compile(r"\d[.,]\d{3}(?!\d)")
-_FEWEST_OF_SEVERAL = {"array_rows": 2, "subarray_rows": 1}  # a plain number of rows may stand alone
 _COUNT_AND_FACTORS = re.compile(
     r"\s*\d{1,4}\b(?!\s*[x×*/])[^\d(\[]*[(\[]\s*\d{1,3}\s*[x×*]\s*\d", re.IGNORECASE
 )
 _FACTORS_BEHIND = re.compile(r"\s*(?:[(\[,:]|\d)")
-_SECTOR_DEG = 45.0
 _IDENTITY_UNITS = ("", "–", "-", "—")
 MOST_LETTERS = 120_000
 """Letters of different cells: time to understand grows with them, and catalogues repeat their figures."""
@@ -73,6 +71,7 @@ class _Ground:
     how: str
     conditions: tuple[str, str]
     of_unit: str
+    slack: Slack | None
 
 
 class Understanding:
@@ -118,7 +117,7 @@ class Understanding:
         trouble = ""
         figures = []
         tail = self._tail(raw, content)
-        for parameter, quantity in _paired(keys, content.quantities):
+        for parameter, quantity in paired(keys, content.quantities):
             try:
                 figures.append(_figure(table[parameter], quantity, context, ground, tail))
             except UnknownUnitError as error:
@@ -188,6 +187,7 @@ def _ground(context: Context) -> _Ground:
         how=label.how or f"heading '{context.heading or label.text}'",
         conditions=(of_label, context.condition),
         of_unit=next(iter(_UNIT_CONDITION.findall(context.unit)), ""),
+        slack=slack_of(label, context.unit),
     )
 
 
@@ -195,13 +195,16 @@ def _figure(parameter: Parameter, quantity: Quantity, context: Context, ground: 
     if parameter.unit == "" and parameter.kind in ("number", "count"):
         _refuse_unit(quantity, ground.unit, parameter)
     quantity, supplied = with_unit(quantity, parameter)
+    slack = with_slack(quantity, ground.slack, parameter)
+    of_heading = tuple(map(without_slack, ground.conditions)) if slack is not quantity else ground.conditions
+    quantity = slack
     settled = settle(
         quantity, parameter.unit, sign=parameter.sign, direction=parameter.direction, keep=parameter.keep
     )
     how = ground.how
     if quantity.unit or parameter.unit:
         how += f"; {supplied or _unit_told(quantity, ground.unit_source, parameter)}"
-    conditions = (context.band_name, *ground.conditions, settled.condition, ground.of_unit)
+    conditions = (context.band_name, *of_heading, settled.condition, ground.of_unit)
     at = _at(" ".join(filter(None, (*ground.conditions, ground.of_unit))), parameter.unit) | dict(settled.at)
     named = "frequency_high_mhz" in at
     return Figure(
@@ -223,26 +226,6 @@ def _refuse_unit(quantity: Quantity, of_heading: str, parameter: Parameter) -> N
         raise UnknownUnitError(f"a figure in {quantity.unit} is no {parameter.label}")
 
 
-def _paired(keys: tuple[str, ...], quantities: tuple[Quantity, ...]) -> Iterator[tuple[str, Quantity]]:
-    table = parameters()
-    if len(keys) == 1:
-        for quantity in quantities:
-            own = quantity.parameter if quantity.parameter in table else keys[0]
-            yield _at_sector_edge(specified(own, quantity.condition), quantity), quantity
-            if own == "element_count":
-                yield from ((part.parameter, part) for part in array_of(quantity))
-    elif {quantity.parameter for quantity in quantities} == set(keys):
-        yield from ((quantity.parameter, quantity) for quantity in quantities)
-    elif len(quantities) == len(keys) or len(keys) > len(quantities) >= _FEWEST_OF_SEVERAL.get(keys[0], 9):
-        yield from zip(keys, quantities, strict=False)
-
-
-def _at_sector_edge(key: str, quantity: Quantity) -> str:
-    """'≥ 10 dB (±60°)' beside '≥ 20 dB (0°)' is the discrimination at the edge of the sector."""
-    wide = key == "cross_polar_discrimination" and abs(quantity.at.get("angle_deg", 0.0)) >= _SECTOR_DEG
-    return "cross_polar_sector" if wide else key
-
-
 def unit_of(context: Context) -> str:
     """The unit that a unit column or a heading gives; empty without any."""
     return _unit(context)[0]
@@ -251,7 +234,7 @@ def unit_of(context: Context) -> str:
 def _unit(context: Context) -> tuple[str, str]:
     for unit, source in ((context.unit, "unit column"), (context.label.unit, "heading")):
         if unit.strip() not in _IDENTITY_UNITS:
-            return _UNIT_CONDITION.sub("", unit), source
+            return bare_unit(_UNIT_CONDITION.sub("", unit)), source
     return "", ""
 
 

@@ -54,6 +54,7 @@ _LISTED_IN_BRACKET = re.compile(
 )
 _LISTS = re.compile(r"[/|]")
 _SEVERAL = re.compile(r"[xX×/*]")
+_WITH_SLACK = re.compile(r"(?<=\S)\s*[,;(\[]?\s*±\s?\d+(?:[.,]\d+)?\s?(?:%|°|[A-Za-z]{1,3})?[\])]?$")
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
 
@@ -274,8 +275,12 @@ def _tidy(text: str) -> str:
 
 
 def is_unit(text: str) -> bool:
-    """Whether a cell holds a unit and nothing else; a dash in a unit column says that there is none."""
-    return len(text) <= 24 and (bool(unit_name(text)) or is_counting_unit(text))
+    """Whether a cell holds a unit, perhaps with a tolerance; a dash among units says that there is none."""
+    return len(text) <= 24 and (
+        bool(unit_name(text))
+        or is_counting_unit(text)
+        or ("±" in text and bool(unit_name(_WITH_SLACK.sub("", text))))
+    )
 
 
 def begins_with_unit(text: str) -> bool:

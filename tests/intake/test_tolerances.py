@@ -1,0 +1,69 @@
+"""Tolerances and limits told beside the figures: by a heading, a unit, a column; written down by hand."""
+
+from __future__ import annotations
+
+from pathlib import Path
+
+import pytest
+
+from speccheck.records import Reading
+from tests.intake.sheets import Rows, read
+
+
+def _only(path: Path, rows: Rows, key: str) -> Reading:
+    (panel,) = read(path, rows).submission.panels
+    (found,) = [r for r in panel.readings if r.parameter == key]
+    return found
+
+
+@pytest.mark.parametrize(
+    ("heading", "key", "value", "tolerance"),
+    [
+        ("Gain [dBi ±0.5]", "gain", 17.5, 0.5),
+        ("Gain (±0.5 dB) [dBi]", "gain", 17.5, 0.5),
+        ("Gewinn, dBi ± 0,5", "gain", 17.5, 0.5),
+        ("Gain dBi +/-0.5", "gain", 17.5, 0.5),
+        ("Ancho de haz horizontal (° ± 5)", "horizontal_beamwidth", 66, 5.0),
+        ("Horizontal beamwidth 65° ±5°", "horizontal_beamwidth", 65, 5.0),
+        ("Horizontal beamwidth 65° ±5°", "horizontal_beamwidth", 66, None),
+        ("Height (mm, ±2)", "height", 1998, 0.002),
+        ("Weight (kg ±5 %)", "weight", 20, 1.0),
+        ("Cross-polar discrimination (±10°), dB", "cross_polar_discrimination", 20, None),
+        ("Front-to-back ratio (180° ±30°), dB", "front_to_back_ratio", 28, None),
+        ("Isolation ±45 (dB)", "port_isolation", 30, None),
+        ("Gain [dBi ±0.5]", "gain", "≥ 17.5", None),
+        ("Gain [dBi ±0.5]", "gain", "17.5 ± 0.3", 0.3),
+    ],
+)
+def test_a_tolerance_in_the_heading_holds_for_its_figures(
+    tmp_path: Path, heading: str, key: str, value: float | str, tolerance: float | None
+) -> None:
+    rows = [["Model", "Frequency (MHz)", heading, "VSWR"], ["KD-1", "1710-2170", value, 1.4]]
+    found = _only(tmp_path, rows, key)
+    assert found.tolerance == (None if tolerance is None else pytest.approx(tolerance))
+
+
+def test_a_tolerance_in_the_row_of_units_holds_for_its_column(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "Frequency", "Gain", "HPBW horizontal", "Weight"],
+        ["", "MHz", "dBi ±0.5", "° ± 5", "kg"],
+        ["KD-1", "1710-2170", 17.5, 65, 20],
+        ["KD-2", "1710-2170", 18.1, 33, 24],
+    ]
+    panels = read(tmp_path, rows).submission.panels
+    told = {(p.name, r.parameter): (r.value, r.tolerance) for p in panels for r in p.readings}
+    assert told["KD-1", "gain"] == (17.5, 0.5)
+    assert told["KD-2", "horizontal_beamwidth"] == (33.0, 5.0)
+    assert told["KD-2", "weight"] == (24.0, None)
+
+
+def test_a_tolerance_in_the_column_of_units_holds_for_its_row(tmp_path: Path) -> None:
+    rows = [
+        ["Parameter", "Unit", "Value"],
+        ["Model", "", "KD-1"],
+        ["Frequency range", "MHz", "1710-2170"],
+        ["Gain", "dBi ±0.5", 17.5],
+        ["Horizontal beamwidth", "° ±5", 65],
+    ]
+    assert _only(tmp_path, rows, "gain").tolerance == 0.5
+    assert _only(tmp_path, rows, "horizontal_beamwidth").tolerance == 5.0
