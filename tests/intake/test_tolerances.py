@@ -67,3 +67,37 @@ def test_a_tolerance_in_the_column_of_units_holds_for_its_row(tmp_path: Path) ->
     ]
     assert _only(tmp_path, rows, "gain").tolerance == 0.5
     assert _only(tmp_path, rows, "horizontal_beamwidth").tolerance == 5.0
+
+
+@pytest.mark.parametrize("heading", ["Limite", "Limit", "Bound", "Grenzwert", "Min/max", "", "Zakres"])
+@pytest.mark.parametrize(
+    ("low", "high", "usual"),
+    [("mini", "maxi", "typ"), ("min.", "max.", "typ."), ("≥", "≤", "typical"), ("mín", "máx", "típico")],
+)
+@pytest.mark.parametrize("before", [True, False])
+def test_a_word_beside_a_bare_figure_says_what_it_bounds(
+    tmp_path: Path, heading: str, words: tuple[str, str, str], before: bool
+) -> None:
+    # common practice: isolation is guaranteed as a minimum, standing-wave ratio as a maximum
+    low, high, usual = words
+
+    def row(label: str, value: object, bound: object, unit: str) -> list[object]:
+        return [label, bound, value, unit] if before else [label, value, unit, bound]
+
+    rows = [
+        row("Parameter", "Value", heading or None, "Unit"),
+        row("Model", "KD-1", None, ""),
+        row("Frequency range", "1710-2170", None, "MHz"),
+        row("Gain", 17.5, usual, "dBi"),
+        row("Port isolation", 30, low, "dB"),
+        row("VSWR", 1.5, high, ""),
+        row("Front-to-back ratio", "> 25", high, "dB"),
+        row("Weight", 20, None, "kg"),
+    ]
+    (panel,) = read(tmp_path, rows).submission.panels
+    told = {r.parameter: (r.value, r.sense, r.statistic) for r in panel.readings}
+    assert told["gain"] == (17.5, "nominal", "typical")
+    assert told["port_isolation"] == (30.0, "min", "")
+    assert told["vswr"] == (1.5, "max", "")
+    assert told["front_to_back_ratio"] == (25.0, "min", "")  # the sign in the cell is nearer than the column
+    assert told["weight"] == (20.0, "nominal", "")

@@ -221,7 +221,7 @@ class DownReader:
             label=in_plane(self._marks.labels, label, column.plane),
             unit=extra.unit(column),
             condition="; ".join(filter(None, (condition, column.condition, *(c.text for c in extra.asides)))),
-            statistic=self._statistic(cell, column),
+            statistic=self._statistic(cell, column) or extra.bound(column),
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )

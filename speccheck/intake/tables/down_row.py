@@ -10,9 +10,11 @@ from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import is_band_label
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import Label, Labels
+from speccheck.intake.tables.words import bound_of
 from speccheck.quantities import read_cell
 
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]|\s*,?\s*°\s*$")
+_BOUNDS = {"minimum": "min", "maximum": "max", "typical": "typ"}
 _MEASURED = ("number", "range", "scan", "count", "size")
 
 
@@ -26,6 +28,7 @@ class RowCells:
     band: Cell | None = None
     units: dict[int, Cell] = field(default_factory=dict)
     asides: list[Cell] = field(default_factory=list)
+    bounds: dict[int, Cell] = field(default_factory=dict)
 
     @property
     def condition_text(self) -> str:
@@ -34,8 +37,12 @@ class RowCells:
 
     def tolerance(self, column: Column) -> Cell | None:
         """The tolerance of a column: the next one after it, or the only one of the row's table."""
-        after = [index for index in self.tolerances if index > column.index]
-        return self.tolerances[min(after)] if after else next(iter(self.tolerances.values()), None)
+        return _of_column(self.tolerances, column)
+
+    def bound(self, column: Column) -> str:
+        """``min``, ``max`` or ``typ`` where a cell beside the figure says only that, else empty."""
+        cell = _of_column(self.bounds, column)
+        return _BOUNDS.get(bound_of(cell.text), "") if cell is not None else ""
 
     def unit(self, column: Column) -> str:
         """The unit that holds for a column: of several the nearest, after it rather than before it."""
@@ -43,6 +50,12 @@ class RowCells:
             return column.unit
         nearest = min(self.units, key=lambda index: (abs(index - column.index), index < column.index))
         return self.units[nearest].text
+
+
+def _of_column(cells: dict[int, Cell], column: Column) -> Cell | None:
+    """Of the cells that qualify the figures of a row the next one after a column, or the only one."""
+    after = [index for index in cells if index > column.index]
+    return cells[min(after)] if after else next(iter(cells.values()), None)
 
 
 def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
@@ -56,12 +69,12 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
                 found.units[index] = cell
             elif cell is not None:
                 found.band = found.band or cell
-        elif column.role in ("condition", "tolerance"):
+        elif column.role in ("condition", "tolerance", "bound"):
             cell = grid.cells.get((row, index))
             if cell is not None and column.role == "condition":
                 conditions.append(cell)
             elif cell is not None:
-                found.tolerances[index] = cell
+                (found.tolerances if column.role == "tolerance" else found.bounds)[index] = cell
     if conditions:
         found.condition, found.lead = conditions[0], columns[conditions[0].column].lead
     return found

@@ -8,7 +8,7 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import is_unit
 from speccheck.intake.tables.versions import settle_versions
-from speccheck.intake.tables.words import answer, column_role
+from speccheck.intake.tables.words import answer, bound_of, column_role
 
 _WORD_FIRST = re.compile(r"\s*[^\W\d_]{4,}")
 _MOSTLY = 0.6
@@ -27,6 +27,8 @@ def settle_roles(
     shares : share of the cells that could be values of their rows' labels, where that can be told
     """
     for index, column in columns.items():
+        if _holds_bounds(cells.get(index, [])):
+            column.role = "bound"
         if not column.role and not column.band and not column.band_name:
             column.role = _by_content(column, cells.get(index, []))
     _beside_the_values(columns, cells, shares)
@@ -42,6 +44,13 @@ def settle_roles(
             if column.role in ("condition", "compliance", "group", "band"):
                 column.role = ""
                 break
+
+
+def _holds_bounds(cells: list[Cell]) -> bool:
+    """Whether a column says of the figures beside it what they bound: 'mini', 'max.', '≥'."""
+    bounds = [bound_of(cell.text) for cell in cells if isinstance(cell.raw, str)]
+    telling = sum(bound in ("minimum", "maximum", "typical") for bound in bounds)
+    return telling > 0 and all(bounds) and len(bounds) == len(cells)
 
 
 def _by_content(column: Column, cells: list[Cell]) -> str:

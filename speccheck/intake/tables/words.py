@@ -216,6 +216,13 @@ def answer(text: str) -> str:
     return ""
 
 
+@lru_cache(maxsize=2000)
+def bound_of(text: str) -> str:
+    """``minimum``, ``maximum``, ``typical`` or ``nominal`` for a cell that only says what a figure bounds."""
+    folded = fold(text).strip("()[]")
+    return next((name for name, words in _table()["bound"].items() if folded in words), "")
+
+
 def is_counting_unit(text: str) -> bool:
     """Whether a text of a unit column is no physical unit: ``pcs``, ``–``, ``dBc @ 2x43 dBm``."""
     return fold(text).strip("[]() ") in _table()["unit"]["words"]
