@@ -238,6 +238,25 @@ def test_text_never_becomes_a_formula(bid):
     assert "\u202e" not in book["Input 1"]["B9"].value
 
 
+def test_rows_are_as_tall_as_what_is_printed(bid):
+    """Working is not printed: twenty steps of it make no row of the paper taller."""
+    panel = bid.panels[0]
+    finding = next(f for f in panel.findings if f.working)
+    long = dataclasses.replace(finding, working=finding.working[:1] * 20)
+    panel = dataclasses.replace(panel, findings=(long,))
+    sheet = openpyxl.load_workbook(io.BytesIO(review_bytes(dataclasses.replace(bid, panels=(panel,)))))[
+        "Findings"
+    ]
+    headings = {cell.value: cell.column_letter for cell in sheet[1]}
+    assert sheet[f"{headings['Working']}2"].value.count("\n") == 19
+    assert sheet.print_area.endswith(f"${headings['Question']}$2")
+    summary = len(sheet[f"{headings['Summary']}2"].value)
+    question = len(sheet[f"{headings['Question']}2"].value)
+    lines = 1 + 1.05 * max(summary / 60, question / 40)
+    assert sheet.row_dimensions[2].height <= 15 * lines
+    assert sheet.row_dimensions[2].customHeight
+
+
 def test_nothing_leads_outside_or_runs(bid):
     data = review_bytes(bid)
     names = parts(data, "")

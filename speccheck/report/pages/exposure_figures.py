@@ -12,6 +12,8 @@ from speccheck.report.pages.formats import Numbers
 WIDTH, HEIGHT = 316, 160
 TOP_WIDTH, TOP_HEIGHT = 640, 220
 _ARC_BEYOND_DEG = 4.0
+_LABEL_WIDTH = 40
+"""Room of a label of a tilt, which stands clear of its falling line [SVG units]."""
 _STEEPEST_DEG = 60.0
 _TALLEST_M = 6.0
 _NEAREST_M, _FARTHEST_M = 0.01, 1e5
@@ -78,7 +80,8 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
         style="small",
     )
     if max(tilts) > min(tilts):
-        x, y = _at(extent * 0.62, max(tilts), (x0, y0 + 13), px)
+        below = 13 + _LABEL_WIDTH * max(0.0, math.sin(math.radians(max(tilts))))
+        x, y = _at(extent * 0.78, max(tilts), (x0, y0 + below), px)
         canvas.write(x, y, f"tilt {_degrees(max(tilts), numbers)}", style="small")
     canvas.box(x0 - 4, y0 - tall * px / 2, 4, tall * px, "panel")
     canvas.write(x0 - 4, y0 - tall * px / 2 - 6, "panel", "middle", "small")

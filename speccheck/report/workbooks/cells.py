@@ -72,12 +72,15 @@ def xml_attribute(text: str) -> str:
     return xml_text(text).replace('"', "&quot;").replace("\n", "&#10;")
 
 
-def row_xml(number: int, row: Sequence[tuple[int, Content, str]], height: float | None) -> str:
+def row_xml(
+    number: int, row: Sequence[tuple[int, Content, str]], height: float | None, *, kept: bool = False
+) -> str:
     """Return a ``row`` element of (column number, content, look) in column order.
 
-    `height` [points] is what the row starts with; a program may fit it anew.
+    `height` [points] is what the row starts with; a program may fit it anew unless it is `kept`.
     """
     tall = f' ht="{height:g}"' if height is not None else ""
+    tall += ' customHeight="1"' if kept else ""
     cells = [_cell(f"{column_letter(column)}{number}", item, look) for column, item, look in row]
     return f'<row r="{number}"{tall}>{"".join(cells)}</row>'
 

@@ -53,9 +53,9 @@ def sheet_xml(sheet: Table | Grid, imprint: Imprint) -> Iterator[str]:
         f"{_columns(sheet)}<sheetData>"
     )
     links: list[tuple[str, Rich]] = []
-    for number, row, height in _rows_of(sheet):
+    for number, row, height, kept in _rows_of(sheet):
         links += _links(number, row)
-        yield row_xml(number, row, height)
+        yield row_xml(number, row, height, kept=kept)
     yield (
         f"</sheetData>{_helps(sheet) if isinstance(sheet, Table) else ''}"
         f"{hyperlinks(links)}"
@@ -80,19 +80,27 @@ def _printed_widths(sheet: Table | Grid) -> Sequence[float]:
     return [column.width for column in sheet.columns[: sheet.printed or None]]
 
 
-def _rows_of(sheet: Table | Grid) -> Iterator[tuple[int, Row, float | None]]:
-    """Yield number, cells (column number, content, look) and height of each row."""
+def _rows_of(sheet: Table | Grid) -> Iterator[tuple[int, Row, float | None, bool]]:
+    """Yield number, cells (column number, content, look), height and whether it is kept, of each row.
+
+    A height is kept where text that is not printed would stretch the row on paper.
+    """
     if isinstance(sheet, Grid):
         for number, cells in sorted(sheet.cells.items()):
-            yield number, [(column, item, "number") for column, item in sorted(cells.items())], None
+            yield number, [(column, item, "number") for column, item in sorted(cells.items())], None, False
         return
     looks = [column.look for column in sheet.columns]
+    printed = sheet.printed or len(looks)
     wrapped = [(n, column.width) for n, column in enumerate(sheet.columns) if column.look == "wrap"]
+    on_paper = [(n, width) for n, width in wrapped if n < printed]
     headings: Row = [(n, c.heading, "heading") for n, c in enumerate(sheet.columns, start=1)]
-    yield 1, headings, _heading_height(sheet)
+    yield 1, headings, _heading_height(sheet), False
     numbers = range(1, len(looks) + 1)
     for number, row in enumerate(sheet.rows, start=2):
-        yield number, list(zip(numbers, row, looks, strict=True)), _row_height(row, wrapped)
+        height = _row_height(row, on_paper)
+        kept = printed < len(looks) and _row_height(row, wrapped) > height
+        tall = height if kept or height > LINE_POINTS else None
+        yield number, list(zip(numbers, row, looks, strict=True)), tall, kept
 
 
 def extent(sheet: Table | Grid) -> str:
@@ -232,10 +240,10 @@ def _heading_height(table: Table) -> float:
     return LINE_POINTS * lines + 4
 
 
-def _row_height(row: Sequence[Content], wrapped: Sequence[tuple[int, float]]) -> float | None:
-    """Height [points] that shows wrapped text whole, for programs that don't fit rows on opening."""
+def _row_height(row: Sequence[Content], wrapped: Sequence[tuple[int, float]]) -> float:
+    """Height [points] that shows the text of wrapped columns whole."""
     lines = max((_lines(_text(row[n]), width) for n, width in wrapped), default=1)
-    return min(LINE_POINTS * lines, TALLEST_POINTS) if lines > 1 else None
+    return min(LINE_POINTS * lines, TALLEST_POINTS)
 
 
 def _text(item: Content) -> str:

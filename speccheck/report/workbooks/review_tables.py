@@ -24,6 +24,10 @@ from speccheck.report.workbooks.review_parts import (
 from speccheck.report.workbooks.review_places import FINDINGS, NumberedFinding, Places
 from speccheck.report.workbooks.sheets import Column, Table
 
+TALLER = (
+    "Rows are as tall as what is printed; double-click the lower edge of a row's number to see all of it."
+)
+
 
 def findings(places: Places) -> Table:
     """One row a finding, with claim, expected interval, working and question."""
@@ -49,7 +53,7 @@ def findings(places: Places) -> Table:
             Column(
                 heading="Innocent readings", width=60, look="wrap", note="Conventions that would explain it."
             ),
-            Column(heading="Working", width=90, look="wrap"),
+            Column(heading="Working", width=90, look="wrap", note=TALLER),
             Column(heading="Assumptions", width=70, look="wrap"),
             Column(heading="Source", width=50, look="wrap"),
             *PEOPLE,
