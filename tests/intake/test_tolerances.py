@@ -71,7 +71,7 @@ def test_a_tolerance_in_the_column_of_units_holds_for_its_row(tmp_path: Path) ->
 
 @pytest.mark.parametrize("heading", ["Limite", "Limit", "Bound", "Grenzwert", "Min/max", "", "Zakres"])
 @pytest.mark.parametrize(
-    ("low", "high", "usual"),
+    "words",
     [("mini", "maxi", "typ"), ("min.", "max.", "typ."), ("≥", "≤", "typical"), ("mín", "máx", "típico")],
 )
 @pytest.mark.parametrize("before", [True, False])

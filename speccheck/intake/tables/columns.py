@@ -37,6 +37,8 @@ class Column:
     unit: str = ""
     condition: str = ""
     plane: str = ""
+    guessed: bool = False
+    """Whether the role of a column of unknown heading was told by its cells alone."""
     lead: str = ""
     """Word before the cells of a column of conditions that only its heading says."""
     frequency: Cell | None = None

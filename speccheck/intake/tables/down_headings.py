@@ -166,6 +166,9 @@ def describe_columns(
     for index, column in columns.items():
         if column.role == "parameter" and _holds_headings(marks, table, index):
             column.role = "group"
+        if column.guessed and column.role == "remark" and used[index]:
+            reason = f"column heading '{column.heading[:80]}' is not known; its cells were taken for remarks"
+            result.unread.append((column.cells[-1], reason, ""))
     return columns
 
 

@@ -81,6 +81,7 @@ def _beside_the_values(
         if not columns[index].role and share is not None and share < _SILENT and values:
             texts = all(isinstance(cell.raw, str) for cell in cells.get(index, []))
             columns[index].role = "condition" if index < values[0] and texts else "remark"
+            columns[index].guessed = bool(columns[index].words)
     _beside_the_offer(columns, shares)
 
 
@@ -90,7 +91,7 @@ def _beside_the_offer(columns: dict[int, Column], shares: dict[int, float | None
         return
     for index, share in shares.items():
         if not columns[index].role and columns[index].words and (share or 0.0) < _ANSWERS:
-            columns[index].role = "remark"
+            columns[index].role, columns[index].guessed = "remark", True
 
 
 def _scribbles(columns: dict[int, Column], cells: dict[int, list[Cell]]) -> None:
