@@ -9,7 +9,7 @@ from dataclasses import dataclass
 from pathlib import Path
 
 from speccheck.errors import UnusableInputError
-from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.files.grid import Grid
 from speccheck.intake.files.limits import Limits
 from speccheck.intake.files.opening import Book, open_book
 from speccheck.intake.panels.declared import contrary_notices
@@ -154,14 +154,8 @@ def _layout_unread(result: SheetResult, reader: Reader) -> list[Unread]:
 def _mirror(grid: Grid) -> MirrorSheet:
     cells = {**grid.cells, **grid.hidden_cells} if grid.hidden_cells else grid.cells
     ordered = [cells[place] for place in sorted(cells)]
-    mirrored = tuple([mirror_cell(cell.address, _stored(cell), cell.formula) for cell in ordered])
+    mirrored = tuple([mirror_cell(cell.address, cell.raw, cell.text, cell.formula) for cell in ordered])
     return MirrorSheet(name=grid.name, hidden=grid.hidden, cells=mirrored)
-
-
-def _stored(cell: Cell) -> str | float:
-    """A number as it is, anything else as text; a truth value, an int to isinstance, is no number."""
-    raw = cell.raw
-    return raw if type(raw) is int or type(raw) is float else cell.text
 
 
 def _no_table(book: Book, labels: Labels) -> UnusableInputError:

@@ -45,6 +45,10 @@ _TOLERANCE_WORD = re.compile(
 )
 
 
+_expected = functools.lru_cache(maxsize=1024)(Expected)
+"""One object for all cells of a heading: what is known of a text is then found by identity."""
+
+
 def read_cell(
     raw: Raw,
     *,
@@ -74,7 +78,7 @@ def read_cell(
     """
     if raw is None:
         return CellContent(status="missing")
-    wanted = Expected(kind, unit_name(unit), decimal_comma, expected, plausible, possible)
+    wanted = _expected(kind, unit_name(unit), decimal_comma, expected, plausible, possible)
     if isinstance(raw, str):
         return _read_text(raw, wanted)
     if isinstance(raw, bool):

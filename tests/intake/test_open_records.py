@@ -15,7 +15,8 @@ from speccheck.records import CellRef, MirrorCell, Reading
 def test_a_closed_record_is_the_record() -> None:
     assert cell_ref("bid.xlsx", "Data", "B2") == CellRef("bid.xlsx", "Data", "B2")
     assert hash(cell_ref("bid.xlsx", "Data", "B2")) == hash(CellRef("bid.xlsx", "Data", "B2"))
-    assert mirror_cell("B2", 18.1, "=A1") == MirrorCell("B2", 18.1, "=A1")
+    assert mirror_cell("B2", 18.1, "18.1", "=A1") == MirrorCell("B2", 18.1, "=A1")
+    assert mirror_cell("B2", True, "TRUE", "").value == "TRUE"
 
 
 def test_a_closed_record_is_frozen() -> None:

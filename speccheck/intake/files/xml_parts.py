@@ -38,12 +38,16 @@ def stream(
     def started(name: str, attributes: dict[str, str]) -> None:
         nonlocal count
         count += 1
-        start = starts.get(name) or starts.get(name[name.rfind(":") + 1 :])
+        start = starts.get(name)
+        if start is None and ":" in name:
+            start = starts.get(name[name.rfind(":") + 1 :])
         if start is not None:
             start(attributes)
 
     def ended(name: str) -> None:
-        end = ends.get(name) or ends.get(name[name.rfind(":") + 1 :])
+        end = ends.get(name)
+        if end is None and ":" in name:
+            end = ends.get(name[name.rfind(":") + 1 :])
         if end is not None:
             end()
 

@@ -44,6 +44,22 @@ class Found:
     recognised: str = ""
     at: Mapping[str, float] | None = None
 
+    def also(self, parameter: str, band: Band | None) -> Found:
+        """The same figure said of another parameter or band."""
+        return Found(
+            self.where,
+            self.raw,
+            self.heading,
+            self.figure,
+            parameter,
+            self.value,
+            band,
+            self.tolerance,
+            self.remark,
+            self.recognised,
+            self.at,
+        )
+
     def take_statistic(self, word: str) -> None:
         """Take what the heading says of this figure of several: ``min``, ``typical``, ``mean`` or ``max``."""
         bounds = word in ("min", "max")

@@ -10,6 +10,7 @@ from __future__ import annotations
 from dataclasses import fields, make_dataclass
 from typing import Any
 
+from speccheck.intake.files.grid import Raw
 from speccheck.records import CellRef, MirrorCell
 
 
@@ -37,11 +38,11 @@ def cell_ref(file: str, sheet: str, cell: str) -> CellRef:
     return closed
 
 
-def mirror_cell(cell: str, value: str | float | None, formula: str) -> MirrorCell:
-    """A cell as it stood."""
+def mirror_cell(cell: str, raw: Raw, text: str, formula: str) -> MirrorCell:
+    """A cell as it stood: a number as it is, anything else as text; a truth value is an int to isinstance."""
     open_cell = _new(_OpenMirrorCell)
     open_cell.cell = cell
-    open_cell.value = value
+    open_cell.value = raw if type(raw) is int or type(raw) is float else text
     open_cell.formula = formula
     open_cell.__class__ = MirrorCell
     closed: MirrorCell = open_cell

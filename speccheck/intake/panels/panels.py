@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from collections import Counter
 from collections.abc import Mapping
-from dataclasses import dataclass, replace
+from dataclasses import dataclass
 from functools import cache, lru_cache
 
 from speccheck.dictionary import parameters
@@ -220,7 +220,7 @@ def _frequencies(claim: Claim, found: list[Found], several: bool) -> list[Found]
         for one in spans:
             one.parameter, one.band = "operating_bands", _span_of(one)
     elif spans and not several:
-        whole = replace(spans[0], parameter="frequency_range", band=None)
+        whole = spans[0].also("frequency_range", None)
         spans[0].parameter, spans[0].band = "operating_bands", _span_of(spans[0])
         return [whole, *found]
     else:

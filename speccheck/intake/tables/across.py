@@ -227,7 +227,7 @@ class AcrossReader:
                 context = self._noted(context, self._at.note) if self._at.note else context
                 if self._at.known and not banded:
                     band, banded = self._at.said.band, True
-            draft.claims.append(Claim(cell, context, band, banded=banded))
+            draft.claims.append(Claim(cell, context, band, None, banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)
         elif cell.column in (self._guides.banded, self._guides.overall):
