@@ -14,7 +14,8 @@ from speccheck.quantities import NUMERAL_PATTERN, unit_name
 
 _BRACKETS = re.compile(r"[\[(]([^\[\]()]*)[\])]")
 _AT_WORDS = (
-    r"(?:@|\b(?:at|bei|for|für|à|pour|a|para|per|przy|dla|bij|voor|with|mit|avec|con|com|z|met|in|within)\b)"
+    r"(?:@|\b(?:at|bei|for|für|à|pour|a|para|per|przy|dla|sous|under|bij|voor|with|mit|avec|con|com|z|met|in"
+    r"|within)\b)"
 )
 # units that conditions of a heading come in; a short list keeps the expression small
 _CONDITION_UNIT = (
@@ -30,8 +31,23 @@ _CONDITION = re.compile(
 )
 _ORDINAL = re.compile(r"(?:\s*\.)?\s*(?:er|e|ème|eme|rd|th|[ªº°])?\.?\s*(?:ord|rz[ęąa])", re.IGNORECASE)
 """Behind a number: 'third order' is written '3. Ordnung', '3.er orden', '3ª ordem'."""
+_ORDER_WORD = r"(?:order|ordre|orden|ordine|ordem|orde|ord\.|ordnung|rz[eę]du|rz[aą]d)"
+_THIRD_ORDER = re.compile(
+    rf"\b(?:(?:d'|de\s|di\s|del\s|du\s)\s?)?{_ORDER_WORD}\s?(?:n[o°]\s?)?"
+    r"(?:3|three|drei|trois|tres|tre|três|trzy|trzeciego|drie)\b"
+    rf"|\b(?:3|iii)(?:\s?\.)?[\s-]?(?:(?:rd|er|e|ème|eme|o|a|go|de|ter|°)\.?)?[\s-]*{_ORDER_WORD}(?!\w)",
+    re.IGNORECASE,
+)
+_CARRIERS = re.compile(
+    rf"(?:{_AT_WORDS}|[,;])?\s*\b"
+    r"(?:\d|two|zwei|deux|dos|due|dois|duas|dwie|dwoma|dwóch|twee)\s+"
+    r"(?:carriers?|tones?|signals?|träger\w*|porteuses?|portadoras?|portanti|nośn\w+|dragers?|draaggolven)\b"
+    r"(?:\s*(?:of|at|@|de|da|di|je|jeweils|à|zu|von|van|po|each|,)?"
+    rf"\s*{NUMERAL_PATTERN}\s?(?:dBm|W)(?!\w)(?:\s+each)?)?",
+    re.IGNORECASE,
+)
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
-_UNIT_BEFORE_BRACKET = re.compile(r"(?<=[^\W\d])\s([^\s,;:/()\[\]]{2,8}|[°%Ω])\s*(?=[(\[])")
+_UNIT_BEFORE_BRACKET = re.compile(r"(?<=[^\W\d])\s([^\s,;:/()\[\]]{2,8}|[°%ΩNW])\s*(?=[(\[])")
 _UNIT_BEFORE_BOUND = re.compile(
     r"\s*,\s*([^\s,;:()\[\]]{1,6})\s*,\s*((?:min|max|typ|nom)(?:imum|ical|inal)?\.?)$", re.IGNORECASE
 )
@@ -53,7 +69,7 @@ def cuts(body: str) -> Iterator[Cut]:
 
     What looks like a unit may be none, so the heading with it comes again at the end.
     """
-    whole = Cut(body)
+    whole = Cut(_THIRD_ORDER.sub("third order", body))
     seen: set[Cut] = set()
     in_inches = [_without_unit(whole)] if _INCHES.search(body) else []  # 'in' is a preposition as well
     for cut in itertools.chain(in_inches, [whole], _stages(_without_unit(whole)), _stages(whole)):
@@ -138,10 +154,10 @@ def _without_figures(cut: Cut) -> Cut:
             return match.group()
         if _ORDINAL.match(match.string, match.end()):
             return match.group()
-        conditions.append(re.sub(rf"^{_AT_WORDS}\s?", "", piece, flags=re.IGNORECASE))
+        conditions.append(re.sub(rf"^(?:[,;]\s*)?(?:{_AT_WORDS})?\s?", "", piece, flags=re.IGNORECASE))
         return " "
 
-    rest = _CONDITION.sub(keep, cut.text)
+    rest = _CONDITION.sub(keep, _CARRIERS.sub(keep, cut.text))
     rest = re.sub(r"[\[(][\s,;@]*[\])]", " ", rest)
     rest = re.sub(rf"(?:\s*[,;@/-]\s*|\s+{_AT_WORDS}\s*)+$", "", " ".join(rest.split()))
     return Cut(rest, cut.unit, (*cut.conditions, *conditions)) if conditions else cut
