@@ -33,8 +33,13 @@ class RowBand:
         return self.band is not None or bool(self.name)
 
 
+_NO_BAND = RowBand()
+
+
 def band_of(cell: Cell | None, nickname: Cell | None, unit: str) -> RowBand:
     """The band two cells of a row name: one with frequencies, one with a nickname such as 'Low band'."""
+    if cell is None and nickname is None:
+        return _NO_BAND
     name = " ".join(nickname.text.split()) if nickname is not None else ""
     if cell is None:
         return RowBand(None, name)

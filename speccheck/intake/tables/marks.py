@@ -138,6 +138,10 @@ def _unmark_column_words(marks: Marks) -> None:
     """Words over the columns of a table with headings down the side head no values: 'Parameter | Typ'."""
     for row in sorted({row for row, _ in marks.headings}):
         cells, headings = marks.rows[row], marks.heading_columns(row)
+        if _are_statistics([marks.grid.cells[row, column] for column in headings], cells):
+            for column in headings:
+                del marks.headings[row, column]
+            continue
         if len(headings) > 4:
             continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
@@ -154,6 +158,12 @@ def _unmark_column_words(marks: Marks) -> None:
             detail = bool(said) and _follows_heading(marks, row, column)
             if "parameter" in roles or statistics > 1 or detail:
                 del marks.headings[row, column]
+
+
+def _are_statistics(headings: list[Cell], cells: list[Cell]) -> bool:
+    """Whether a row says 'Min | Typ | Max' under several names: there 'Typ' is no German 'type'."""
+    said = {statistic_of(cell.text) for cell in cells if isinstance(cell.raw, str)}
+    return len(headings) > 1 and len(said - {""}) > 1 and all(statistic_of(c.text) for c in headings)
 
 
 def _tells_arrays_apart(cells: list[Cell]) -> bool:
@@ -182,7 +192,7 @@ def _mark_letters(marks: Marks) -> None:
     letters = {
         place: _LETTER_UNIT.sub("", cell.text.strip())
         for place, cell in marks.grid.cells.items()
-        if len(cell.text) < _LONGEST_LETTER and isinstance(cell.raw, str) and is_size_letter(cell.text)
+        if isinstance(cell.raw, str) and len(cell.text) < _LONGEST_LETTER and is_size_letter(cell.text)
     }
     for row, column in letters:
         for step in ((0, 1), (1, 0)):
