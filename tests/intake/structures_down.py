@@ -226,4 +226,21 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         M28: C5 gain 27.2 dBi @24250-27500
         M28: D5 gain 27.9 dBi @26500-29500""",
     ),
+    "'Min | Typ | Max' again under each name is statistics, though 'Typ' heads names in German": (
+        [
+            ["Parameter", "Unit", "OR-M8", _, _, "OR-M10", _, _],
+            [_, _, "Min", "Typ", "Max", "Min", "Typ", "Max"],
+            ["Frequency", "MHz", 1710, _, 2170, 1710, _, 2170],
+            ["VSWR", _, "-", 1.3, 1.5, "-", 1.4, 1.5],
+        ],
+        ("A1:A2", "B1:B2", "C1:E1", "F1:H1"),
+        """OR-M8: C3 frequency_range 1710..2170 MHz
+        OR-M8: C3 operating_bands 1710..2170 MHz @1710-2170
+        OR-M8: D4 vswr 1.3 @1710-2170
+        OR-M8: E4 vswr ≤1.5 @1710-2170
+        OR-M10: F3 frequency_range 1710..2170 MHz
+        OR-M10: F3 operating_bands 1710..2170 MHz @1710-2170
+        OR-M10: G4 vswr 1.4 @1710-2170
+        OR-M10: H4 vswr ≤1.5 @1710-2170""",
+    ),
 }
