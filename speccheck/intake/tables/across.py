@@ -8,6 +8,8 @@ from dataclasses import dataclass, field, replace
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.across_bands import RowBand, band_of
 from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
+from speccheck.intake.tables.across_pairs import band_of_pair, pair_with_bands
+from speccheck.intake.tables.across_unknown import report_unknown
 from speccheck.intake.tables.across_whole import settle_whole
 from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
@@ -66,6 +68,7 @@ class AcrossReader:
     def read(self) -> None:
         """Place every cell of the table and collect its claims."""
         self._fields = describe_fields(self._marks, self._table)
+        pair_with_bands(self._marks, self._table, self._fields)
         for row in [*self._table.heading_rows, *self._table.repeated]:
             for cell in cells_of(self._marks, self._table, row):
                 self._result.mark(cell, "heading")
@@ -75,7 +78,7 @@ class AcrossReader:
             self._row(row, cells_of(self._marks, self._table, row))
         panels = [(known.draft, known.rows) for known in self._panels]
         settle_whole(self._grid, panels, self._fields, self._guides.of_bands)
-        self._report_unknown()
+        report_unknown(self._marks, self._table, self._fields, self._result)
 
     def _section_above(self) -> None:
         """A band alone in a row just above the headings, or as name of the sheet, holds for all rows.
@@ -227,6 +230,9 @@ class AcrossReader:
                 context = self._noted(context, self._at.note) if self._at.note else context
                 if self._at.known and not banded:
                     band, banded = self._at.said.band, True
+            if found.pair:
+                band = self._band_of_pair(cell, found, draft)
+                banded = band is not None
             draft.claims.append(Claim(cell, context, band, None, banded))
             if column.band is not None and column.band not in draft.bands:
                 draft.bands.append(column.band)
@@ -240,6 +246,13 @@ class AcrossReader:
         else:
             found.misses += 1
             self._result.mark(cell, "unread")
+
+    def _band_of_pair(self, cell: Cell, found: Field, draft: Draft) -> Band | None:
+        """The band that another cell of the row gives to this one alone."""
+        band = band_of_pair(self._meant(cell.row, found.pair), self._fields[found.pair])
+        if band is not None and band not in draft.bands:
+            draft.bands.append(band)
+        return band
 
     def _claim_range(self, cell: Cell, draft: Draft, found: Field) -> None:
         """Frequencies under a word such as 'Band': the band of a row, or the whole range of its panel."""
@@ -279,20 +292,3 @@ class AcrossReader:
         if key not in self._contexts:
             self._contexts[key] = replace(context, condition=name)
         return self._contexts[key]
-
-    def _report_unknown(self) -> None:
-        """One line for a column that was not read, not one a cell."""
-        for index, found in self._fields.items():
-            if not found.misses:
-                continue
-            where = found.column.cells[-1] if found.column.cells else None
-            if where is None:
-                rows = self._table.data_rows
-                where = next(c for r in rows if (c := self._grid.cells.get((r, index))) is not None)
-            heading = found.column.heading[:80]
-            unknown = f"column heading '{heading}' is not in the dictionary"
-            if found.role == "superseded":
-                unknown = f"column '{heading}' holds figures of an earlier year"
-            reason = unknown if heading else "a column without a heading"
-            nearest = self._marks.labels.suggestion(found.label.text)
-            self._result.unread.append((where, f"{reason}; its {found.misses} cells were not read", nearest))

@@ -34,6 +34,8 @@ class Field:
     misses: int = 0
     of_frequency: bool = False
     banded: bool = False
+    pair: int = 0
+    """The column that gives the band of these figures alone, where a row has several bands."""
 
 
 @dataclass(slots=True)
@@ -141,7 +143,9 @@ def find_guides(marks: Marks, table: Across, fields: dict[int, Field]) -> Guides
     guides = Guides(_name_column(grid, table, naming))
     columns = {i: cells_below(grid, table, i) for i in fields if i != guides.named}
     frequencies = [
-        i for i in columns if _is_frequency(fields[i]) and holds_spans(columns[i], unit_of(fields[i]))
+        i
+        for i in columns
+        if _is_frequency(fields[i]) and not fields[i].pair and holds_spans(columns[i], unit_of(fields[i]))
     ]
     given = [i for i in frequencies if gives_frequencies(columns[i])]
     guides.names_of_bands = {i for i in frequencies if given and i not in given}

@@ -1,0 +1,99 @@
+"""Columns in pairs where a row is a panel: 'Band 1 MHz | Gain 1 dBi | Band 2 MHz | Gain 2 dBi'."""
+
+from __future__ import annotations
+
+import re
+from collections import Counter
+
+from speccheck.intake.files.grid import Cell
+from speccheck.intake.tables.across_bands import gives_frequencies, holds_spans
+from speccheck.intake.tables.across_fields import Field, cells_below
+from speccheck.intake.tables.bands import find_bands
+from speccheck.intake.tables.claims import Context
+from speccheck.intake.tables.labels import Label
+from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.regions import Across
+
+_TAG = re.compile(
+    r"(?<![^\W_])(?:(?:band|bande|banda|pasmo|array|range)\s?|[BRFbrf](?=\d))?#?([1-6]|[A-D]|I{1,3}|IV)(?![^\W_])(?!\s?[/.,x×]\s?\d)",
+)
+_BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
+
+
+def pair_with_bands(marks: Marks, table: Across, fields: dict[int, Field]) -> None:
+    """Tell each column of figures the column that gives its band, where a panel's row has several of these.
+
+    Columns are paired by the number or letter in their headings; where the headings repeat without one, a
+    column belongs to the band before it.
+    """
+    spans = [i for i, found in fields.items() if _gives_bands(marks, table, found)]
+    if len(spans) < 2:
+        return
+    tags = {i: _tag(fields[i].column.heading) for i in spans}
+    if all(tags.values()) and len(set(tags.values())) == len(spans):
+        pairs = _by_tag(marks, fields, {tag: i for i, tag in tags.items()})
+    else:
+        pairs = _by_place(fields, spans)
+    if len(set(pairs.values())) < 2:
+        return
+    for index, span in pairs.items():
+        fields[index].pair = span
+    for index in spans:
+        column = fields[index].column
+        label = Label(column.heading, ("operating_bands",), fields[index].label.unit or column.unit or "MHz")
+        fields[index].label, fields[index].role, fields[index].pair = label, "", index
+        fields[index].context = Context(label, heading=column.heading)
+
+
+def band_of_pair(cell: Cell | None, found: Field) -> tuple[float, float] | None:
+    """The band that a cell of a band's column gives; None without one."""
+    if cell is None:
+        return None
+    text = cell.text if "hz" in cell.text.lower() else f"{cell.text} {found.label.unit}"
+    return find_bands(text).hull
+
+
+def _gives_bands(marks: Marks, table: Across, found: Field) -> bool:
+    if found.banded or (found.label and not found.of_frequency):
+        return False
+    cells = cells_below(marks.grid, table, found.column.index)
+    unit = found.label.unit or found.column.unit or "MHz"
+    return holds_spans(cells, unit) and gives_frequencies(cells)
+
+
+def _tag(heading: str) -> str:
+    found = _TAG.findall(_BRACKETED.sub(" ", heading))
+    return found[-1] if found else ""
+
+
+def _by_tag(marks: Marks, fields: dict[int, Field], spans: dict[str, int]) -> dict[int, int]:
+    """Columns whose heading has the number or letter of a band, to the column of that band."""
+    pairs: dict[int, int] = {}
+    for index, found in fields.items():
+        tag = _tag(found.column.heading)
+        if index in spans.values() or tag not in spans or found.banded:
+            continue
+        bare = marks.labels.of(" ".join(_TAG.sub(" ", found.column.heading).split()))
+        label = bare if bare else found.label
+        if label:
+            found.label, found.role, pairs[index] = label, "", spans[tag]
+            found.context = Context(
+                label, found.column.unit, "", found.column.statistic, found.column.heading
+            )
+    return pairs
+
+
+def _by_place(fields: dict[int, Field], spans: list[int]) -> dict[int, int]:
+    """Columns of headings that come again behind each band, to the column of the band before them."""
+    before = {i: max((s for s in spans if s < i), default=0) for i in fields}
+    groups = {(before[i], found.label.parameters) for i, found in fields.items() if found.label and before[i]}
+    times = Counter(parameters for _, parameters in groups)
+    return {
+        i: before[i]
+        for i, found in fields.items()
+        if i not in spans
+        and before[i]
+        and found.label
+        and not found.banded
+        and times[found.label.parameters] == len(spans)
+    }

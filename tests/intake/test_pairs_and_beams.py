@@ -1,0 +1,45 @@
+"""Rows with several bands side by side, and rows that are beams of one panel; written down by hand."""
+
+from __future__ import annotations
+
+from pathlib import Path
+
+import pytest
+
+from tests.intake.sheets import Rows, line, read
+
+
+def _lines(path: Path, rows: Rows, *keys: str) -> list[str]:
+    panels = read(path, rows).submission.panels
+    return sorted(line(p.name, r) for p in panels for r in p.readings if r.parameter in keys)
+
+
+@pytest.mark.parametrize(
+    "headings",
+    [
+        ("Band 1 MHz", "Gain 1 dBi", "Band 2 MHz", "Gain 2 dBi"),
+        ("Band 1 (MHz)", "Gain band 1 (dBi)", "Band 2 (MHz)", "Gain band 2 (dBi)"),
+        ("Frequency band A, MHz", "Gain A, dBi", "Frequency band B, MHz", "Gain B, dBi"),
+        ("Frequency (MHz)", "Gain (dBi)", "Frequency (MHz)", "Gain (dBi)"),
+        ("Frequenzband 1 [MHz]", "Gewinn 1 [dBi]", "Frequenzband 2 [MHz]", "Gewinn 2 [dBi]"),
+        ("Bande 1 (MHz)", "Gain 1 (dBi)", "Bande 2 (MHz)", "Gain 2 (dBi)"),
+    ],
+)
+def test_a_figure_has_the_band_of_its_pair(tmp_path: Path, headings: tuple[str, ...]) -> None:
+    rows = [
+        ["Model", *headings, "Weight (kg)"],
+        ["DX-1", "694-960", 15.1, "1695-2690", 17.8, 20],
+        ["DX-2", "698-894", 16.1, "1710-2170", 18.1, 22],
+    ]
+    assert _lines(tmp_path, rows, "gain", "weight", "operating_bands") == [
+        "DX-1: B2 operating_bands 694..960 MHz @694-960",
+        "DX-1: C2 gain 15.1 dBi @694-960",
+        "DX-1: D2 operating_bands 1695..2690 MHz @1695-2690",
+        "DX-1: E2 gain 17.8 dBi @1695-2690",
+        "DX-1: F2 weight 20 kg",
+        "DX-2: B3 operating_bands 698..894 MHz @698-894",
+        "DX-2: C3 gain 16.1 dBi @698-894",
+        "DX-2: D3 operating_bands 1710..2170 MHz @1710-2170",
+        "DX-2: E3 gain 18.1 dBi @1710-2170",
+        "DX-2: F3 weight 22 kg",
+    ]
