@@ -43,3 +43,20 @@ def test_a_figure_has_the_band_of_its_pair(tmp_path: Path, headings: tuple[str, 
         "DX-2: E3 gain 18.1 dBi @1710-2170",
         "DX-2: F3 weight 22 kg",
     ]
+
+
+def test_a_family_merged_down_is_that_of_each_of_its_panels(tmp_path: Path) -> None:
+    rows = [
+        ["Family", "Model", "Frequency (MHz)", "Gain (dBi)"],
+        ["Tor", "WT-04", "694-960", 15.1],
+        [None, "WT-06", "694-960", 16.1],
+        ["Fell", "WF-05", "1710-2170", 17.1],
+        [None, "WF-06", "1710-2170", 17.5],
+    ]
+    book = read(tmp_path, rows, merges=["A2:A3", "A4:A5"])
+    told = [
+        (p.name, r.value) for p in book.submission.panels for r in p.readings if r.parameter == "panel_type"
+    ]
+    assert told == [("WT-04", "Tor"), ("WT-06", "Tor"), ("WF-05", "Fell"), ("WF-06", "Fell")]
+    alone = read(tmp_path, rows).submission.panels
+    assert [r for p in alone for r in p.readings if r.parameter == "panel_type"] == []

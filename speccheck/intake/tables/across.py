@@ -7,6 +7,7 @@ from dataclasses import dataclass, field, replace
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.across_bands import RowBand, band_of
+from speccheck.intake.tables.across_families import families, settle_families
 from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
 from speccheck.intake.tables.across_pairs import band_of_pair, pair_with_bands
 from speccheck.intake.tables.across_unknown import report_unknown
@@ -57,6 +58,7 @@ class AcrossReader:
         self._grid: Grid = marks.grid
         self._fields: dict[int, Field] = {}
         self._contexts: dict[tuple[int, str], Context] = {}
+        self._families: list[int] = []
         self._known: dict[str, _Known] = {}
         self._panels: list[_Known] = []
         self._section = RowBand()
@@ -73,6 +75,7 @@ class AcrossReader:
             for cell in cells_of(self._marks, self._table, row):
                 self._result.mark(cell, "heading")
         self._guides = find_guides(self._marks, self._table, self._fields)
+        self._families = settle_families(self._grid, self._table, self._fields, self._guides.named)
         self._section_above()
         for row in self._table.data_rows:
             self._row(row, cells_of(self._marks, self._table, row))
@@ -116,7 +119,7 @@ class AcrossReader:
         draft = self._at.draft
         if draft is None:
             return
-        for cell in cells:
+        for cell in [*cells, *families(self._grid, self._families, row)]:
             if cell.column != self._guides.named:
                 self._claim(cell, draft)
 
