@@ -54,7 +54,7 @@ def marks(figure: Figure) -> Markup:
 
 def table_rows(rows: Iterable[Sequence[str]]) -> Markup:
     """Rows of a table of figures."""
-    lines = [f"<tr><td>{'<td>'.join(map(safe, row))}\n" for row in rows]
+    lines = [f"<tr><td>{'<td>'.join(map(safe, row))}" for row in rows]
     return Markup("".join(lines))  # noqa: S704 - every text of it is safe
 
 
@@ -77,4 +77,4 @@ def workings(steps: Iterable[Step], numbers: Numbers) -> Markup:
         f" = <b>{safe(numbers.figure(step.value, step.unit))}</b>"
         for step in steps
     ]
-    return Markup("\n".join(items))  # noqa: S704 - every text of it is safe
+    return Markup("".join(items))  # noqa: S704 - every text of it is safe
