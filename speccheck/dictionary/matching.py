@@ -90,7 +90,8 @@ def specified(key: str, condition: str) -> str:
     words = " ".join(
         word for word in condition.split(", ", maxsplit=1)[0].split() if not any(c.isdigit() for c in word)
     )
-    if not 0 < len(words) <= _LONGEST_REMARK or not (word_list("vital") | _SIDES).intersection(fold(words)):
+    telling = word_list("vital") | word_list("counts_in") | _SIDES
+    if not 0 < len(words) <= _LONGEST_REMARK or telling.isdisjoint(fold(words)):
         return key
     name = parameters()[key].label.split(",")[0].replace(" per port", "")
     found = match_heading(f"{name} {words}", suggest=False).parameters

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 import pytest
 
-from speccheck.dictionary import match_heading
+from speccheck.dictionary import match_heading, specified
 
 _HEADINGS = {
     "horizontal_beamwidth": (
@@ -57,7 +57,10 @@ _MORE = {
     "front_to_back_ratio": ("voor-naar-achterverhouding", "rapport av./arr.", "forward-to-back ratio"),
     "horizontal_beamwidth": ("Keulenbreite horizontal", "ancho de lóbulo horizontal", "apertura piano H"),
     "weight": ("Gewicht ohne Schellen", "poids hors supports", "waga bez mocowań", "peso sem kit de fixação"),
-    "weight_with_brackets": ("Gewicht inkl. Montagekit", "weight incl. tilt bracket"),
+    "weight_with_brackets": (
+        "Gewicht inkl. Montagekit", "weight incl. tilt bracket", "weight inc. fixings", "peso com fixações",
+        "peso incluyendo abrazaderas", "peso incluse staffe", "gewicht inclusief montagebeugels",
+    ),
     "power_per_transceiver": ("Output power per port (W)",),
     "peak_power_per_port": ("peak power per port",),
     "cross_polar_sector": ("XPD over ±60° sector",),
@@ -108,3 +111,19 @@ def test_a_near_miss_is_never_the_main_parameter(key: str, heading: str) -> None
 @pytest.mark.parametrize("heading", ["gain tolerance", "Toleranz Gewinn", "azimuth beamwidth tolerance"])
 def test_a_tolerance_is_said_to_be_one(heading: str) -> None:
     assert match_heading(heading).tolerance_of
+
+
+_WITH = (
+    "mit Halterungen", "inklusive Befestigung", "avec fixations", "y compris étriers", "con soportes",
+    "incluyendo herrajes", "con staffe", "com fixações", "z uchwytami", "met beugels", "inclusief montageset",
+)  # fmt: skip
+
+
+@pytest.mark.parametrize("remark", _WITH)
+def test_a_remark_beside_a_weight_says_that_brackets_are_counted_in(remark: str) -> None:
+    assert specified("weight", remark) == "weight_with_brackets"
+
+
+@pytest.mark.parametrize("remark", ["ohne Halterungen", "sans fixations", "sem fixações", "bez uchwytów"])
+def test_a_weight_without_brackets_stays_a_weight(remark: str) -> None:
+    assert specified("weight", remark) == "weight"

@@ -243,4 +243,25 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         OR-M10: G4 vswr 1.4 @1710-2170
         OR-M10: H4 vswr ≤1.5 @1710-2170""",
     ),
-}
+    "'sem' and 'com fixações' beside a merged label are two weights": (
+        [["Parâmetro", "Condição", "Unidade", "MD-8"], ["Peso", "sem fixações", "kg", "7,1"],
+         [_, "com fixações", "kg", "10,5"]],
+        ("A2:A3",),
+        """MD-8: D2 weight 7.1 kg
+        MD-8: D3 weight_with_brackets 10.5 kg""",
+    ),
+    "the factors of a number of elements say rows and columns again, of no band": (
+        [["Model", "AX-32"], ["Frequency range (MHz)", "3300-3800"], ["Gain (dBi)", 24], ["Array rows", 8],
+         ["Radiating elements", "128 (8x8x2)"]],
+        (),
+        """AX-32: B1 model AX-32
+        AX-32: B2 frequency_range 3300..3800 MHz
+        AX-32: B2 operating_bands 3300..3800 MHz @3300-3800
+        AX-32: B3 gain 24 dBi @3300-3800
+        AX-32: B4 array_rows 8
+        AX-32: B5 element_count 128
+        AX-32: B5 array_rows 8
+        AX-32: B5 array_columns 8
+        AX-32: B5 polarisations 2""",
+    ),
+}  # fmt: skip

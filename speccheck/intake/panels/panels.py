@@ -264,14 +264,21 @@ def _place(readings: list[Found], bands: list[Band], several: bool) -> None:
     """Bands by the scope of each parameter."""
     of_bands = _keys_of_bands()
     only = bands[0] if len(bands) == 1 and not several else None
-    by_array = Counter([found.parameter for found in readings if found.band == only]) if only else {}
+    several_of = _stated_again(readings, only) if only else frozenset()
     for found in readings:
         key = found.parameter
         if key in FREQUENCY:
             continue
         by_band = key in of_bands
         if only is not None:
-            of_array = key in PER_BAND_IF_SAID and by_array.get(key, 0) > 1 and found.band == only
+            of_array = key in PER_BAND_IF_SAID and key in several_of and found.band == only
             found.band = only if by_band or of_array else None
         elif not by_band and key not in PER_BAND_IF_SAID:
             found.band = None
+
+
+def _stated_again(readings: list[Found], band: Band) -> frozenset[str]:
+    """Parameters that several arrays of one band give; '128 (8x8x2)' only says 'Rows: 8' once more."""
+    elements = {found.where for found in readings if found.parameter == "element_count"}
+    stated = Counter([(f.parameter, f.where in elements) for f in readings if f.band == band])
+    return frozenset(key for (key, _), count in stated.items() if count > 1)
