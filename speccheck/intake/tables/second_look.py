@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Iterable, Iterator
+from collections.abc import Callable, Iterable, Iterator, Mapping
 from dataclasses import replace
 
 from speccheck.intake.files.grid import Cell
@@ -20,6 +20,8 @@ _BETTER = 0.05
 _ENOUGH = 0.5
 """A reading without doubt that loses more of the figures is no better one."""
 Place = tuple[int, int]
+Way = tuple[Without, int]
+"""What a reading does without, and the number of headings it goes by."""
 Walk = Callable[[Marks], SheetResult]
 
 
@@ -33,13 +35,12 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
     if not doubts:
         return best
     least, enough = incoherence(best, marks, doubts), _ENOUGH * share_read(best, marks)
-    tried: list[Marks] = [marks]
-    for other in _other_ways(marks, doubts, walk):
-        if any(other.without == t.without and len(other.headings) == len(t.headings) for t in tried):
+    tried = {_way(marks): doubts}
+    for other in _other_ways(marks, doubts, tried):
+        if _way(other) in tried:
             continue
-        tried.append(other)
         result = walk(other)
-        left = doubts_of(result, other)
+        left = tried[_way(other)] = doubts_of(result, other)
         score = incoherence(result, marks, left)
         if score < least - _BETTER and share_read(result, other) > enough:
             best, doubts, least = result, left, score
@@ -49,13 +50,17 @@ def most_coherent(marks: Marks, walk: Walk) -> SheetResult:
     return best
 
 
-def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks]:
+def _way(marks: Marks) -> Way:
+    return marks.without, len(marks.headings)
+
+
+def _other_ways(marks: Marks, doubts: list[Doubt], tried: Mapping[Way, list[Doubt]]) -> Iterator[Marks]:
     """The sheet without misleading names; also without repeats, names over columns, tables across, lines."""
     wrong = _places(cell for doubt in doubts for cell in doubt.no_names)
     names = wrong | _places(cell for doubt in doubts for cell in doubt.names)
     plain = {p: label for p, label in marks.headings.items() if not _begins_with_figure(marks, p)}
     for bare in [marks] if len(plain) == len(marks.headings) else [replace(marks, headings=plain), marks]:
-        yield from _without_names(bare, wrong, walk)
+        yield from _without_names(bare, wrong, tried)
         perhaps = sorted(names - wrong)[:_KEPT]
         for without in (
             *(Without(names - {kept}) for kept in perhaps),
@@ -68,13 +73,17 @@ def _other_ways(marks: Marks, doubts: list[Doubt], walk: Walk) -> Iterator[Marks
             yield replace(bare, without=without)
 
 
-def _without_names(marks: Marks, names: frozenset[Place], walk: Walk) -> Iterator[Marks]:
-    """The sheet without the names that cannot be any, and without those that then take their place."""
+def _without_names(
+    marks: Marks, names: frozenset[Place], tried: Mapping[Way, list[Doubt]]
+) -> Iterator[Marks]:
+    """The sheet without the names that cannot be any, and without those that then take their place.
+
+    Each way is tried, and what is doubted then known, before the next one is asked for.
+    """
     for _ in range(_ROUNDS):
         without = replace(marks, without=Without(names))
         yield without
-        doubts = doubts_of(walk(without), without)
-        more = names | _places(cell for doubt in doubts for cell in doubt.no_names)
+        more = names | _places(cell for doubt in tried[_way(without)] for cell in doubt.no_names)
         if more == names:
             return
         names = more
