@@ -264,4 +264,26 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         AX-32: B5 array_columns 8
         AX-32: B5 polarisations 2""",
     ),
+    "two panels beside each other, one of bands over columns, are told apart by what a panel has once": (
+        [
+            ["Valmora P7", _, _, _, "Valmora D7"],
+            ["Parametro", "Valore", _, _, "Parametro", "694–960 MHz", "1710–2690 MHz"],
+            ["Banda di frequenza (MHz)", "1710 ÷ 2690", _, _, "Guadagno (dBi)", "15,2", "17,6"],
+            ["Guadagno (dBi)", "16,5", _, _, "Altezza (mm)", 1340, _],
+            ["Altezza (mm)", 780, _, _, "Peso (kg)", "17,8", _],
+            ["Peso (kg)", "6,4"],
+        ],
+        ("F4:G4", "F5:G5"),
+        """Valmora P7: B3 frequency_range 1710..2690 MHz
+        Valmora P7: B3 operating_bands 1710..2690 MHz @1710-2690
+        Valmora P7: B4 gain 16.5 dBi @1710-2690
+        Valmora P7: B5 height 0.78 m
+        Valmora P7: B6 weight 6.4 kg
+        Valmora D7: F2 operating_bands 694..960 MHz @694-960
+        Valmora D7: G2 operating_bands 1710..2690 MHz @1710-2690
+        Valmora D7: F3 gain 15.2 dBi @694-960
+        Valmora D7: G3 gain 17.6 dBi @1710-2690
+        Valmora D7: F4 height 1.34 m
+        Valmora D7: F5 weight 17.8 kg""",
+    ),
 }  # fmt: skip

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 
+from speccheck.dictionary import parameters
 from speccheck.intake.tables.claims import Claim, Draft
 from speccheck.records import Band
 
@@ -13,6 +14,7 @@ _TITLE_KEYS = frozenset(
 )
 _Stated = set[tuple[str, Band | None, str]]
 """Parameters with the band each is stated for."""
+_FEWEST_CONTRARY = 2
 _NEAREST = 50
 """A piece belongs to one of the last panels of its name."""
 
@@ -99,7 +101,9 @@ class _Joiner:
         if draft.named and (last.named or last.grid is draft.grid):
             return None
         alone = len(self._kept) == 1 or last.grid is draft.grid
-        return last if alone and not _clash(self._stated_by(draft), self._stated_by(last)) else None
+        if not alone or _clash(self._stated_by(draft), self._stated_by(last)) or _contrary(draft, last):
+            return None
+        return last
 
 
 def _only_names(draft: Draft) -> bool:
@@ -112,6 +116,27 @@ def _clash(mine: _Stated, theirs: _Stated) -> bool:
     """Whether two drafts state the same things and so are two panels."""
     shared = {entry for entry in mine & theirs if entry[0] not in _TITLE_KEYS}
     return len(shared) >= 2 and len(shared) * 3 >= min(len(mine), len(theirs))
+
+
+def _contrary(mine: Draft, theirs: Draft) -> bool:
+    """Whether two drafts give a whole panel other figures, again and again: no panel has two heights."""
+    one, other = _of_whole(mine), _of_whole(theirs)
+    return sum(one[key].isdisjoint(other[key]) for key in one.keys() & other.keys()) >= _FEWEST_CONTRARY
+
+
+def _of_whole(draft: Draft) -> dict[tuple[str, str], set[str]]:
+    """Figures of what a panel has only one of, as they are written, by parameter and condition."""
+    figures: dict[tuple[str, str], set[str]] = {}
+    for piece in draft.pieces():
+        for claim in piece.claims:
+            label, text = claim.context.label, claim.text or claim.cell.text
+            key = label.parameters[0]
+            measured = len(label.parameters) == 1 and parameters()[key].kind == "number"
+            if measured and parameters()[key].scope == "panel" and any(map(str.isdigit, text)):
+                said = (label.condition, claim.context.condition, claim.context.statistic)
+                condition = " ".join((label.unit, claim.context.unit, *said))
+                figures.setdefault((key, condition), set()).add(text.strip())
+    return figures
 
 
 def _stated(draft: Draft) -> _Stated:
