@@ -46,6 +46,15 @@ _CARRIERS = re.compile(
     rf"\s*{NUMERAL_PATTERN}\s?(?:dBm|W)(?!\w)(?:\s+each)?)?",
     re.IGNORECASE,
 )
+_STATED = re.compile(
+    rf"(?:{_AT_WORDS}\s)?(?<!\w)(?:(?:einer|une|una|um|een)\s)?"
+    r"(?:v(?:_?w(?:ind)?)?|t_?a?(?:mb)?|wind ?speed|windgeschwindigkeit|windsnelheid|ambient temperature"
+    r"|ambient|umgebungstemperatur|temperature|temperatur|(?:vitesse|velocidad|velocità|velocidade|prędkości?)\s(?:\w+\s)?"
+    r"(?:vent|viento|vento|wiatru))\s*(?:of|von|de|di|van)?\s*[=:]?\s*"
+    rf"{NUMERAL_PATTERN}\s?(?:km/h|m/s|mph|kph|kmh|km/u|°\s?C)(?!\w)",
+    re.IGNORECASE,
+)
+"""'(v = 150 km/h)', 'bei Umgebungstemperatur 50 °C': the letter before the figure is no word of the name."""
 _TRAILING_UNIT = re.compile(r"(?:[,;/:]|\s(?:in|en|w)\s|\s)\s?([^\s,;:/()\[\]]{1,12}(?:/[a-z]{1,4})?)\s*$")
 _UNIT_BEFORE_BRACKET = re.compile(r"(?<=[^\W\d])\s([^\s,;:/()\[\]]{2,8}|[°%ΩNW])\s*(?=[(\[])")
 _UNIT_BEFORE_BOUND = re.compile(
@@ -72,7 +81,9 @@ def cuts(body: str) -> Iterator[Cut]:
     whole = Cut(_THIRD_ORDER.sub("third order", body))
     seen: set[Cut] = set()
     in_inches = [_without_unit(whole)] if _INCHES.search(body) else []  # 'in' is a preposition as well
-    for cut in itertools.chain(in_inches, [whole], _stages(_without_unit(whole)), _stages(whole)):
+    stated = _without_stated(whole)
+    as_last = itertools.chain(_stages(_without_unit(stated)), _stages(stated)) if stated != whole else ()
+    for cut in itertools.chain(in_inches, [whole], _stages(_without_unit(whole)), _stages(whole), as_last):
         if cut not in seen:
             seen.add(cut)
             yield cut
@@ -161,6 +172,13 @@ def _without_figures(cut: Cut) -> Cut:
     rest = re.sub(r"[\[(][\s,;@]*[\])]", " ", rest)
     rest = re.sub(rf"(?:\s*[,;@/-]\s*|\s+{_AT_WORDS}\s*)+$", "", " ".join(rest.split()))
     return Cut(rest, cut.unit, (*cut.conditions, *conditions)) if conditions else cut
+
+
+def _without_stated(cut: Cut) -> Cut:
+    """Set figures aside with the symbol or word of what they are: 'v = 150 km/h', 'ambient 50 °C'."""
+    found = [match.group().strip() for match in _STATED.finditer(cut.text)]
+    rest = re.sub(r"[\[(][\s,;@]*[\])]", " ", _STATED.sub(" ", cut.text)).strip(" ,;")
+    return Cut(" ".join(rest.split()), cut.unit, (*cut.conditions, *found)) if found else cut
 
 
 @functools.cache

@@ -26,7 +26,7 @@ _LONGEST_HEADING = 160
 _LONGEST_REMARK = 80
 _SIDES = frozenset({"f", "l", "s", "r"})
 _STATISTICS = ("max", "min", "typical", "mean")
-_TWICE = re.compile(r"\s+[/|=–—-]\s+|\s*\|\s*|\n")
+_TWICE = tuple(map(re.compile, (r"\s+[–—-]\s+", r"\s+[/|=–—-]\s+|\s*\|\s*|\n")))
 _GLOSS = re.compile(r"([^()\[\]]+)[(\[]([^()\[\]]{2,60})[)\]]\s*")
 _EACH = re.compile(
     r"(?<=[^\W\d])\.?/(?=(?:col|column|port|input|trx|row|puerto|porta|porto|accès|entrée|poort|Eingang|kolumnę|Spalte)\b)",
@@ -131,7 +131,8 @@ def _said_twice(body: str, house: Mapping[str, str]) -> HeadingMatch | None:
     """
     gloss = _GLOSS.fullmatch(body)
     found = _of_parts(gloss.groups(), house, glossed=True) if gloss else None
-    return found or _of_parts(_TWICE.split(body), house, glossed=False)
+    parted = (_of_parts(between.split(body), house, glossed=False) for between in _TWICE)
+    return found or next(filter(None, parted), None)
 
 
 def _of_parts(parts: Iterable[str], house: Mapping[str, str], *, glossed: bool) -> HeadingMatch | None:
@@ -192,6 +193,8 @@ def _look_up(text: str, house: Mapping[str, str], *, tolerance_of: bool) -> str:
 def _result(found: str, cut: Cut, words: tuple[str, ...], *, tolerance_of: bool) -> HeadingMatch:
     keys = tuple(found.split("+"))
     statistic = "max" if "pmax" in words else next((s for s in _STATISTICS if s in words), "")
+    if keys[0].startswith("max_power") and word_list("permissible").intersection(words):
+        statistic = statistic or "max"
     bounds = statistic in ("min", "max") and not keys[0].endswith("_max")
     plane = next((p for p in ("horizontal", "vertical") if keys[0].startswith(p)), "")
     condition = ", ".join(cut.conditions)

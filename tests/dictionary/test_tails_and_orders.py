@@ -322,3 +322,58 @@ def test_other_orders_ports_and_sides_are_other_parameters(heading: str, key: st
 )
 def test_carriers_become_a_condition(words: str) -> None:
     assert "43 dBm" in match_heading(f"PIM 3rd order, {words} (dBc)").condition
+
+
+@pytest.mark.parametrize(
+    "heading",
+    [
+        "Windlast frontal (v = 150 km/h)",
+        "Wind load, v=42 m/s, front",
+        "Wind load frontal (wind speed 150 km/h)",
+        "Windlast frontal bei einer Windgeschwindigkeit von 150 km/h",
+        "Windbelasting (windsnelheid 150 km/h)",
+        "Carico del vento frontale (velocità del vento 150 km/h)",
+        "Wind load N (frontal, 150 km/h)",
+    ],
+)
+def test_the_symbol_of_a_speed_is_no_word_of_the_name(heading: str) -> None:
+    found = match_heading(heading)
+    assert found.parameters == ("wind_load",)
+    assert any(speed in found.condition for speed in ("150 km/h", "42 m/s"))
+
+
+def test_a_speed_in_the_name_of_a_speed_stays() -> None:
+    assert match_heading("Survival wind speed 200 km/h").parameters == ("survival_wind_speed",)
+    assert match_heading("Windlast seitlich (v = 150 km/h)").parameters == ("wind_load_lateral",)
+
+
+@pytest.mark.parametrize(
+    ("heading", "keys"),
+    [
+        ("Array size, rows", ("array_rows",)),
+        ("Array size (columns)", ("array_columns",)),
+        ("Ouverture à 3 dB H / V – 3 dB beamwidth H / V (°)", ("horizontal_beamwidth", "vertical_beamwidth")),
+        ("Ouverture H / V - Beamwidth H / V", ("horizontal_beamwidth", "vertical_beamwidth")),
+    ],
+)
+def test_sizes_by_word_and_lists_in_two_languages(heading: str, keys: tuple[str, ...]) -> None:
+    assert match_heading(heading).parameters == keys
+
+
+@pytest.mark.parametrize(
+    "heading",
+    [
+        "Puissance admissible par connecteur",
+        "Zulässige Leistung je Eingang",
+        "Potenza ammissibile per porta",
+        "Potencia admisible por puerto",
+        "Potência admissível por porta",
+        "Dopuszczalna moc na port",
+        "Toelaatbaar vermogen per poort",
+        "Permissible power per port",
+        "Allowed power per port",
+    ],
+)
+def test_what_is_permissible_is_a_maximum(heading: str) -> None:
+    found = match_heading(heading)
+    assert (found.parameters, found.sense) == (("max_power_per_port",), "max")

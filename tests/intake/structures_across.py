@@ -206,6 +206,7 @@ ACROSS: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         WT-04: C2 frequency_range 694..960 MHz
         WT-04: C2 operating_bands 694..960 MHz @694-960
         WT-04: D2 gain 14.3 dBi @694-960
+        WT-06: A2 panel_type Tor
         WT-06: C3 frequency_range 694..960 MHz
         WT-06: C3 operating_bands 694..960 MHz @694-960
         WT-06: D3 gain 16.1 dBi @694-960""",

@@ -60,3 +60,16 @@ def test_a_family_merged_down_is_that_of_each_of_its_panels(tmp_path: Path) -> N
     assert told == [("WT-04", "Tor"), ("WT-06", "Tor"), ("WF-05", "Fell"), ("WF-06", "Fell")]
     alone = read(tmp_path, rows).submission.panels
     assert [r for p in alone for r in p.readings if r.parameter == "panel_type"] == []
+
+
+def test_a_symbol_and_the_unit_below_or_beside_it_name_a_parameter(tmp_path: Path) -> None:
+    across = [["Model", "Band", "G", "VSWR"], [None, "MHz", "dBi", None], ["KD-1", "1710-2170", 18.7, 1.4]]
+    assert _lines(tmp_path, across, "gain") == ["KD-1: C3 gain 18.7 dBi @1710-2170"]
+    down = [
+        ["Parameter", "Unit", "Value"],
+        ["Model", None, "KD-1"],
+        ["G", "dBi", 17.5],
+        ["G", "dB", 3],
+        ["VSWR", "", 1.4],
+    ]
+    assert _lines(tmp_path, down, "gain") == ["KD-1: C3 gain 17.5 dBi"]

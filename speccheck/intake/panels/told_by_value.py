@@ -7,21 +7,36 @@ from collections.abc import Iterable
 
 from speccheck.dictionary import is_ambiguous, match_heading
 from speccheck.intake.tables.labels import Label
-from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN
+from speccheck.quantities import NUMERAL_PATTERN, UNIT_PATTERN, dimension, unit_name
 
 _CHAINS = re.compile(r"\s*\d{1,4}\s?T\s?[/x-]?\s?\d{1,4}\s?R\s*", re.IGNORECASE)
 _FIGURE = re.compile(rf"(?:{NUMERAL_PATTERN})\s*(?:{UNIT_PATTERN})?|[<>≤≥±=]")
+_SYMBOLS = {
+    ("G", "gain"): "gain",
+    ("Gi", "gain"): "gain",
+    ("f", "frequency"): "frequency_range",
+    ("m", "mass"): "weight",
+    ("M", "mass"): "weight",
+    ("F", "force"): "wind_load",
+    ("Z", "resistance"): "impedance",
+}
+"""Symbols that name a parameter together with the dimension of a unit (common practice)."""
 NOTHING = Label("")
 
 
-def label_by_values(heading: str, values: Iterable[str]) -> Label:
-    """The label that values under or beside an unknown heading prove; no label when they prove none.
+def label_by_values(heading: str, values: Iterable[str], unit: str = "") -> Label:
+    """The label that values or a unit beside an unknown heading prove; no label when they prove none.
 
     >>> label_by_values("Configuration", ["64T64R", "32T32R"]).parameters
     ('transceivers',)
     >>> label_by_values("Power", ["250 W per port"]).parameters
     ('max_power_per_port',)
+    >>> label_by_values("G", ["17.5"], "dBi").parameters
+    ('gain',)
     """
+    symbol = (heading.partition(" / ")[0].strip(), dimension(unit_name(unit)))
+    if symbol in _SYMBOLS:
+        return Label(heading, (_SYMBOLS[symbol],), unit, how=f"symbol '{symbol[0]}' over figures in {unit}")
     texts = list(values)
     if texts and is_ambiguous(heading):
         return _by_remark(heading, texts)

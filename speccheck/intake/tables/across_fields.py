@@ -99,7 +99,7 @@ def _describe(marks: Marks, table: Across, index: int) -> Field:
     if not label and column.role == "":
         below = cells_below(marks.grid, table, index)
         texts = [c.text for c in below]
-        label = label_by_values(column.heading, texts) or label
+        label = label_by_values(column.heading, texts, column.unit) or label
         if not label and column.unit in ("MHz", "GHz") and holds_spans(below, column.unit):
             how = f"heading '{column.heading}' over ranges in {column.unit}"
             label = Label(column.heading, ("frequency_range",), column.unit, how=how)

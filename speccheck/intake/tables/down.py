@@ -159,7 +159,9 @@ class DownReader:
         self._band_label(label_cell)
         label = joined_label(self._marks.labels, state.label, extra.condition, state.group)
         if not label and label_cell is not None:
-            label = label_by_values(label_cell.text, [c.text for c in beside if self._is_value(c)])
+            label = label_by_values(
+                label_cell.text, [c.text for c in beside if self._is_value(c)], extra.first_unit
+            )
         if not label:
             self._unknown_row(label if state.label is None else state.label, beside)
             return

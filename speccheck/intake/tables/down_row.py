@@ -35,6 +35,11 @@ class RowCells:
         """Text of the condition cell, with the word its column leads it with."""
         return f"{self.lead}{self.condition.text}" if self.condition else ""
 
+    @property
+    def first_unit(self) -> str:
+        """The unit of the row, before its value columns are told apart."""
+        return next((cell.text for cell in self.units.values()), "")
+
     def tolerance(self, column: Column) -> Cell | None:
         """The tolerance of a column: the next one after it, or the only one of the row's table."""
         return _of_column(self.tolerances, column)
