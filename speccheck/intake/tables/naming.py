@@ -12,6 +12,12 @@ from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.down_regions import Down
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.no_names import of_paper
+from speccheck.intake.tables.title_words import (
+    is_coined_name,
+    is_paper_of_name,
+    settled_by_sheet,
+    without_paper,
+)
 from speccheck.intake.tables.titles import PARTS, announced, codes, is_numbered_name, name_in_title
 from speccheck.intake.tables.words import fold, is_generic_sheet_name, is_group_heading, title_prefixes
 
@@ -51,7 +57,7 @@ def model_name(text: str) -> str:
 
     A longer title is named by the code in it, together with the capitalised words beside the code.
     """
-    words = " ".join(text.split())[:_LONGEST_NAME]
+    words = without_paper(text)[:_LONGEST_NAME]
     stripped = _without_prefix(words, "prefix")
     plain = _OF.sub("", _without_prefix(stripped, "weak"))
     if re.fullmatch(r"\d{1,2}|[A-Za-z]", plain):
@@ -94,11 +100,13 @@ def _score(text: str, sheet: str) -> int:
     prefixed = (
         stripped != words and len(stripped) <= _LONG_NAME and (codes(stripped) or stripped[-1:].isdigit())
     )
-    if prefixed or (inside is not None and any(map(str.isdigit, inside[1]))):
+    no_paper = not _PAPERS.search(fold(words))
+    numbered = inside is not None and any(map(str.isdigit, inside[1]))
+    if prefixed or numbered or (is_paper_of_name(words) and no_paper):
         return 3
-    if (codes(words) or name_in_title(words)) and not _PAPERS.search(fold(words)):
+    if (codes(words) or name_in_title(words)) and no_paper:
         return 2
-    named = is_numbered_name(words) and not _PAPERS.search(fold(words))
+    named = (is_numbered_name(words) or is_coined_name(words)) and no_paper
     return 1 if named or (stripped != words and len(stripped.split()) <= 3) else 0
 
 
@@ -157,4 +165,5 @@ class Names:
     def _taken(self, cell: Cell, result: SheetResult) -> Title:
         self._titles.add((cell.row, cell.column))
         result.mark(cell, "heading")
-        return Title(model_name(cell.text), cell, True)
+        settled = settled_by_sheet(without_paper(cell.text), self._grid.name.strip())
+        return Title(settled or model_name(cell.text), cell, True)

@@ -63,19 +63,19 @@ def is_numbered_name(text: str) -> bool:
     """Whether a short text is a name and its number, such as 'NORDA 65-12'; 'Section 12' is none."""
     words = text.split()
     pairs = [(a, b) for a, b in pairwise(words) if _NUMBER_OF_NAME.fullmatch(b) and not _YEAR.fullmatch(b)]
-    return len(words) <= _SHORT + 1 and any(_is_name(a) and not is_group_word(a) for a, _ in pairs)
+    return len(words) <= _SHORT + 1 and any(is_name_word(a) and not is_group_word(a) for a, _ in pairs)
 
 
 def _around_code(words: list[str]) -> str:
     for index, word in enumerate(words):
-        if not _is_code(word) and not (index and _is_number(word) and _is_name(words[index - 1])):
+        if not _is_code(word) and not (index and _is_number(word) and is_name_word(words[index - 1])):
             continue
         first = last = index
-        while first > 0 and _is_name(words[first - 1]):
+        while first > 0 and is_name_word(words[first - 1]):
             first -= 1
         shouted = all(word.isupper() for word in words if word.isalpha())
         while last + 1 < len(words) and (
-            _is_code(words[last + 1]) or (_is_name(words[last + 1]) and not shouted)
+            _is_code(words[last + 1]) or (is_name_word(words[last + 1]) and not shouted)
         ):
             last += 1
         return " ".join(words[first : last + 1])
@@ -90,7 +90,7 @@ def _is_number(word: str) -> bool:
     return re.fullmatch(r"\d[\d/.-]*", word) is not None
 
 
-def _is_name(word: str) -> bool:
+def is_name_word(word: str) -> bool:
     """Whether a word may be part of a name: capitalised and no word of the trade."""
     return word[:1].isupper() and not _is_generic(word) and not _NOT_A_CODE.match(word)
 

@@ -162,7 +162,10 @@ def is_group_word(word: str) -> bool:
 
 
 def title_prefixes(strength: str = "prefix") -> frozenset[str]:
-    """Words before the name of a panel in a title; the ``weak`` ones, such as 'Data sheet', name none."""
+    """Words before the name of a panel in a title; the ``weak`` ones, such as 'Value', name none.
+
+    ``papers`` are the words for the paper itself, such as 'Data sheet'.
+    """
     return _table()["title"][strength]
 
 

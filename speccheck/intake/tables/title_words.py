@@ -1,0 +1,88 @@
+"""Titles of a short name, perhaps beside a word for the paper: 'Ficha técnica Aldaya 3L', 'Valmora P7'."""
+
+from __future__ import annotations
+
+import re
+from functools import cache, lru_cache
+
+from speccheck.intake.tables.titles import is_name_word
+from speccheck.intake.tables.vocabulary import stem, vocabulary
+from speccheck.intake.tables.words import fold, is_band_nickname, is_group_word, names_array, title_prefixes
+
+_LINK = r"(?:\s*[:,;|–—-]\s*|\s+)"
+_OF = r"(?:(?:of|for|der|des|fur|de|du|del|della|di|da|do|van|voor|dla|pour|per|para)\s+)?"
+_SHORT_CODE = re.compile(r"[A-Z]{1,2}\d{1,2}|\d{1,2}[A-Z]{1,2}")
+_NUMBER = re.compile(r"\d{1,4}(?:[/-]\d{1,4})*")
+_YEAR = re.compile(r"(?:19|20)\d\d")
+_SHORTEST, _MOST_WORDS = 4, 3
+
+
+@cache
+def _papers() -> tuple[re.Pattern[str], re.Pattern[str]]:
+    words = "|".join(re.escape(word) for word in sorted(title_prefixes("papers"), key=len, reverse=True))
+    return re.compile(rf"(?:{words}){_LINK}{_OF}"), re.compile(rf"{_LINK}[(\[]?(?:{words})[)\]]?")
+
+
+@lru_cache(maxsize=20_000)
+def without_paper(text: str) -> str:
+    """A title without the word for the paper before or behind it; the title itself where nothing is left.
+
+    >>> without_paper("Ficha técnica Aldaya 3L"), without_paper("Kaldora 8 – Datenblatt")
+    ('Aldaya 3L', 'Kaldora 8')
+    """
+    words = " ".join(text.split())
+    before, behind = _papers()
+    folded = fold(words)
+    if len(folded) != len(words):
+        return words
+    if (found := before.match(folded)) is not None:
+        return words[found.end() :].strip(" :–—-") or words
+    ends = [found for found in behind.finditer(folded) if found.end() == len(folded)]
+    return words[: ends[0].start()].strip(" :–—-") or words if ends else words
+
+
+def is_paper_of_name(text: str) -> bool:
+    """Whether a word for the paper stands beside what can be a name with a figure: 'Datenblatt Kaldora 8'."""
+    name = without_paper(text)
+    first, *others = name.split()
+    return name != " ".join(text.split()) and bool(others) and _is_coined(first) and _are_numbers(others)
+
+
+def is_coined_name(text: str) -> bool:
+    """Whether a text is a word that is none of the trade and a short code: 'Valmora P7', not 'Section A1'."""
+    first, *others = text.split() or [""]
+    coined = bool(others) and _is_coined(first) and _SHORT_CODE.fullmatch(others[-1]) is not None
+    return coined and _are_numbers(others) and stem(first) not in vocabulary()
+
+
+def _is_coined(word: str) -> bool:
+    known = is_group_word(word) or fold(word) in title_prefixes("counted")
+    return len(word) >= _SHORTEST and word.isalpha() and is_name_word(word) and not known
+
+
+def _are_numbers(words: list[str]) -> bool:
+    """Whether the words behind a name are more of it, the last a figure that is no year or array."""
+    last = words[-1]
+    figure = _NUMBER.fullmatch(last) is not None and not _YEAR.fullmatch(last)
+    apart = is_band_nickname(last) or names_array(" ".join(words))
+    return (
+        len(words) < _MOST_WORDS
+        and (figure or _SHORT_CODE.fullmatch(last) is not None)
+        and not apart
+        and all(map(is_name_word, words[:-1]))
+        and (last[0].isdigit() or is_name_word(last))
+    )
+
+
+def settled_by_sheet(title: str, sheet: str) -> str:
+    """The name of a sheet that ends the title behind words in lower case or of the trade; empty for others.
+
+    >>> settled_by_sheet("Karta wyrobu Aldaya 3L", "Aldaya 3L"), settled_by_sheet("Vela KD-12", "KD-12")
+    ('Aldaya 3L', '')
+    """
+    words, name = title.split(), sheet.split()
+    before = words[: -len(name)]
+    named = any(map(str.isdigit, sheet)) and any(len(word) >= _SHORTEST for word in name)
+    if not named or not before or fold(" ".join(words[len(before) :])) != fold(" ".join(name)):
+        return ""
+    return " ".join(words[len(before) :]) if not is_name_word(before[-1]) else ""

@@ -1,0 +1,58 @@
+"""Titles that name a panel and titles that do not: expectations by hand, as an engineer reads them."""
+
+from __future__ import annotations
+
+from pathlib import Path
+
+import pytest
+from intake.sheets import Rows, lines, read, save
+
+from speccheck.intake.files.grid import Grid
+from speccheck.intake.submission import read_account
+from speccheck.intake.tables.naming import Names, model_name
+
+_TABLE: Rows = [[], ["Gain (dBi)", 17], ["Weight (kg)", 12]]
+
+_PAPERS = {
+    "Ficha técnica Aldaya 3L": "Aldaya 3L",
+    "Technisches Datenblatt Kaldora 8": "Kaldora 8",
+    "Kaldora 8S – Datenblatt": "Kaldora 8S",
+    "Fiche technique : Vela 12": "Vela 12",
+    "Karta katalogowa Wierzba 4H": "Wierzba 4H",
+    "Scheda tecnica dell'antenna Vela 12": "Vela 12",
+    "Folha de dados da antena Mira 4L": "Mira 4L",
+    "Productblad Kaldora 8S": "Kaldora 8S",
+    "Kaldora 8S (technische specificatie)": "Kaldora 8S",
+    "Data sheet: Norda 65-12": "Norda 65-12",
+    "Valmora P7": "Valmora P7",
+}
+
+
+def _is_title(text: str) -> bool:
+    return Names(Grid("Sheet1"), "bid").is_title(text)
+
+
+@pytest.mark.parametrize("title", _PAPERS)
+def test_a_word_for_the_paper_beside_a_name_is_none_of_it(title: str, tmp_path: Path) -> None:
+    (panel,) = read(tmp_path, [[title], *_TABLE]).submission.panels
+    assert (panel.name, _is_title(title)) == (_PAPERS[title], True)
+
+
+@pytest.mark.parametrize(
+    "text",
+    ["Section A1", "Ports P1", "Anexo A1", "Tabelle B2", "Array R1", "Gelb Y1", "Datenblatt 2026",
+     "Data sheet page 2", "Specification Rev 3", "Datasheet Lot 2", "Ficha técnica"],
+)  # fmt: skip
+def test_a_part_of_a_paper_names_no_panel(text: str) -> None:
+    assert not _is_title(text)
+
+
+def test_the_name_of_a_sheet_that_ends_its_title_is_the_panels(tmp_path: Path) -> None:
+    sheets = {name: [[f"Karta wyrobu {name}"], *_TABLE] for name in ("Aldaya 3L", "Aldaya 2L")}
+    account = read_account(save(tmp_path / "bid.xlsx", sheets))
+    assert [panel.name for panel in account.submission.panels] == ["Aldaya 3L", "Aldaya 2L"]
+
+
+def test_a_title_with_more_of_the_name_than_its_sheet_keeps_it(tmp_path: Path) -> None:
+    account = read_account(save(tmp_path / "bid.xlsx", {"KD-12": [["Vela KD-12"], *_TABLE]}))
+    assert lines(account)[0].startswith("Vela KD-12: ") and model_name("Vela KD-12") == "Vela KD-12"
