@@ -10,12 +10,19 @@ from speccheck.intake.panels.found import Found
 from speccheck.intake.tables.claims import Doubt, Draft
 from speccheck.records import Unread, Value
 
+_MOST_OTHERS = 20
+"""Contrary figures kept beside each: a column of a thousand would give each the thousand."""
+
 
 class Doubted:
     """The cells of a file whose reading does not hang together with others, by sheet."""
 
     def __init__(self, doubts: Mapping[str, Sequence[Doubt]]) -> None:
-        self._doubts = {sheet: found for sheet, found in doubts.items() if found}
+        self._doubts = {
+            sheet: [(doubt, {(sheet, cell.address) for cell in doubt.cells}) for doubt in found]
+            for sheet, found in doubts.items()
+            if found
+        }
 
     def settle(self, draft: Draft, readings: list[Found], unread: list[Unread]) -> list[Found]:
         """Readings that may stand: figures out of place are listed as not read.
@@ -23,8 +30,7 @@ class Doubted:
         A figure beside a contrary one has that for its alternative; where the name or extent of the panel is
         in doubt, every reading says so.
         """
-        for doubt in self._doubts.get(draft.grid.name, ()):
-            cells = {(draft.grid.name, cell.address) for cell in doubt.cells}
+        for doubt, cells in self._doubts.get(draft.grid.name, ()):
             if doubt.misplaced:
                 reason = f"layout not understood: {doubt.text}"
                 lost = [found for found in readings if _place(found) in cells]
@@ -52,7 +58,8 @@ def _face(readings: list[Found]) -> None:
         alike[key].append(found)
     for several in alike.values():
         values: list[Value] = list(dict.fromkeys(found.value for found in several))
+        few = values[: _MOST_OTHERS + 1]
         for found in several if len(values) > 1 else ():
-            others = tuple(value for value in values if value != found.value)
+            others = tuple(value for value in few if value != found.value)
             quantity = replace(found.figure.quantity, alternatives=others)
             found.figure = replace(found.figure, quantity=quantity)
