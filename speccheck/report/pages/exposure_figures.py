@@ -14,6 +14,8 @@ TOP_WIDTH, TOP_HEIGHT = 640, 220
 _ARC_BEYOND_DEG = 4.0
 _LABEL_WIDTH = 40
 """Room of a label of a tilt, which stands clear of its falling line [SVG units]."""
+_SHARES = (0.62, 0.78, 0.86, 0.4, 0.25)
+"""Where along the falling line its label may stand, the best place first."""
 _STEEPEST_DEG = 60.0
 _TALLEST_M = 6.0
 _NEAREST_M, _FARTHEST_M = 0.01, 1e5
@@ -81,13 +83,21 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
     )
     if max(tilts) > min(tilts):
         below = 13 + _LABEL_WIDTH * max(0.0, math.sin(math.radians(max(tilts))))
-        x, y = _at(extent * 0.78, max(tilts), (x0, y0 + below), px)
+        places = [_at(extent * share, max(tilts), (x0, y0 + below), px) for share in _SHARES]
+        x, y = next((place for place in places if _is_free(canvas, place)), places[0])
         canvas.write(x, y, f"tilt {_degrees(max(tilts), numbers)}", style="small")
     canvas.box(x0 - 4, y0 - tall * px / 2, 4, tall * px, "panel")
     canvas.write(x0 - 4, y0 - tall * px / 2 - 6, "panel", "middle", "small")
     if far is not None and shown_far:
         canvas.line(((x0 + far * px, y0 - 10), (x0 + far * px, y0 + 10)), "zero")
-        canvas.write(x0 + far * px, y0 - 14, f"far field {numbers.rounded_up(far)}", "middle", "small")
+        beside_panel = far * px < 60
+        canvas.write(
+            x0 + far * px + (3 if beside_panel else 0),
+            y0 - 14,
+            f"far field {numbers.rounded_up(far)}",
+            "start" if beside_panel else "middle",
+            "small",
+        )
     elif far is not None:
         canvas.write(
             WIDTH - 4, 12, f"far field from {numbers.rounded_up(far)}, beyond this drawing", "end", "small"
@@ -101,6 +111,17 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
         "together; read with this box’s assumptions and cautions.",
         note="Expected, not measured.",
         kind="exposure-side",
+    )
+
+
+def _is_free(canvas: Canvas, place: tuple[float, float]) -> bool:
+    """Whether a label of a tilt at a place runs into none of the centred labels."""
+    x, y = place
+    return all(
+        abs(label.y - y) >= 11
+        or abs(label.x - (x + _LABEL_WIDTH / 2)) >= 2.8 * len(label.text) + _LABEL_WIDTH / 2
+        for label in canvas.labels
+        if label.anchor == "middle"
     )
 
 

@@ -17,7 +17,8 @@ def note_parts(note: ExposureNote) -> tuple[ExposureNote, ...]:
 
     The lines of all bands together stand in each part.
     """
-    bands = tuple(dict.fromkeys(row.band for row in (*note.rows, *note.around) if row.band))
+    named = (*(row.band for row in note.rows), *(zone.band for zone in note.around))
+    bands = tuple(dict.fromkeys(band for band in named if band))
     count = max(1, -(-len(bands) // MOST_BANDS))
     shares = [bands[i * len(bands) // count : (i + 1) * len(bands) // count] for i in range(count)]
     return tuple(

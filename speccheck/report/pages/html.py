@@ -251,10 +251,9 @@ def _stylesheet(paper: str, *, wide: bool) -> str:
 
 @functools.cache
 def _asset(name: str) -> str:
-    """Style or script of the templates folder, without the blanks that indent it and without comment lines."""
-    return re.sub(
-        r"\n\s*(?://[^\n]*\n\s*)*", "\n", (templates_folder() / name).read_text(encoding="utf-8").strip()
-    )
+    """Style or script of the templates folder, without indents and lines of comment."""
+    text = (templates_folder() / name).read_text(encoding="utf-8").strip()
+    return re.sub(r"\n\s*(?://[^\n]*\n\s*)*", "\n", text)
 
 
 def _font(name: str) -> str:
