@@ -73,3 +73,69 @@ def test_a_symbol_and_the_unit_below_or_beside_it_name_a_parameter(tmp_path: Pat
         ["VSWR", "", 1.4],
     ]
     assert _lines(tmp_path, down, "gain") == ["KD-1: C3 gain 17.5 dBi"]
+
+
+BEAMS = [["Broadcast beam", 17.5, 65], ["Traffic beam", 24.5, 12], ["Service beam, edge", 22.5, 14]]
+HEADINGS = ["Gain (dBi)", "HPBW H (°)"]
+KEYS = ("gain", "broadcast_gain", "horizontal_beamwidth", "broadcast_horizontal_beamwidth")
+
+
+def test_rows_that_are_beams_are_of_one_panel(tmp_path: Path) -> None:
+    rows = [["Model: SX64-35"], ["Frequency range: 3300-3800 MHz"], [], ["Beam", *HEADINGS], *BEAMS]
+    assert _lines(tmp_path, rows, *KEYS) == [
+        "SX64-35: B5 broadcast_gain 17.5 dBi @3300-3800",
+        "SX64-35: B6 gain 24.5 dBi @3300-3800",
+        "SX64-35: B7 gain 22.5 dBi @3300-3800",
+        "SX64-35: C5 broadcast_horizontal_beamwidth 65 deg @3300-3800",
+        "SX64-35: C6 horizontal_beamwidth 12 deg @3300-3800",
+        "SX64-35: C7 horizontal_beamwidth 14 deg @3300-3800",
+    ]
+    (panel,) = read(tmp_path, rows).submission.panels
+    assert {r.condition for r in panel.readings if r.parameter == "gain"} == {
+        "Traffic beam",
+        "Service beam, edge",
+    }
+
+
+def test_rows_of_a_panel_and_beam_make_one_panel_each(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "Frequency (MHz)", "Beam", "Gain (dBi)", "Weight (kg)"],
+        ["SX-1", "3300-3800", "SSB", 17.5, 40],
+        ["SX-1", "3300-3800", "Traffic (max. gain)", 24.5, 40],
+        ["SX-2", "3400-3800", "SSB", 16.5, 30],
+        ["SX-2", "3400-3800", "Traffic (max. gain)", 23.5, 30],
+    ]
+    assert _lines(tmp_path, rows, "gain", "broadcast_gain") == [
+        "SX-1: D2 broadcast_gain 17.5 dBi @3300-3800",
+        "SX-1: D3 gain 24.5 dBi @3300-3800",
+        "SX-2: D4 broadcast_gain 16.5 dBi @3400-3800",
+        "SX-2: D5 gain 23.5 dBi @3400-3800",
+    ]
+
+
+def test_columns_that_are_beams_are_of_one_panel(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "", "SX64-35"],
+        ["Frequency range", "MHz", "3300-3800"],
+        ["Parameter", "Unit", "Broadcast beam", "Traffic beam"],
+        ["Gain", "dBi", 17.5, 24.5],
+        ["HPBW horizontal", "°", 65, 12],
+        ["VSWR", "", 1.5, 1.5],
+    ]
+    assert _lines(tmp_path, rows, *KEYS) == [
+        "SX64-35: C4 broadcast_gain 17.5 dBi @3300-3800",
+        "SX64-35: C5 broadcast_horizontal_beamwidth 65 deg @3300-3800",
+        "SX64-35: D4 gain 24.5 dBi @3300-3800",
+        "SX64-35: D5 horizontal_beamwidth 12 deg @3300-3800",
+    ]
+
+
+def test_numbers_of_beams_down_the_side_stay_counts(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "SX-1"],
+        ["Gain (dBi)", 24.5],
+        ["Broadcast beams", 8],
+        ["Traffic beams", 64],
+        ["VSWR", 1.5],
+    ]
+    assert _lines(tmp_path, rows, "beam_count") == ["SX-1: B3 beam_count 8", "SX-1: B4 beam_count 64"]

@@ -13,6 +13,7 @@ from speccheck.intake.tables.across_pairs import band_of_pair, pair_with_bands
 from speccheck.intake.tables.across_unknown import report_unknown
 from speccheck.intake.tables.across_whole import settle_whole
 from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
+from speccheck.intake.tables.beams import of_beam, said_apart
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.edges import band_between
 from speccheck.intake.tables.labels import Label
@@ -157,7 +158,7 @@ class AcrossReader:
             said = RowBand(band_between(self._grid, row, guides.edges, heading), said.name)
         if not said.said:
             said = self._section
-        tilt = self._tilt(row)
+        tilt = said_apart(self._grid, guides.beamed, guides.tilted, row)
         if tilt and name_cell is None and not said.said:
             said = self._at.said
         if name_cell is not None:
@@ -167,7 +168,7 @@ class AcrossReader:
                 self._at = _Row(known.draft)
             else:
                 self._start_panel(row, name_cell)
-        elif self._at.draft is None or not (guides.named or guides.banded or guides.nicknamed):
+        elif self._at.draft is None or not guides.tell_panels:
             self._start_panel(row, cells[0])
         self._at.said, self._at.known = said, said.known
         self._at.note = f"{said.name} {tilt}".strip() if tilt else said.name
@@ -184,11 +185,6 @@ class AcrossReader:
     def _meant(self, row: int, column: int) -> Cell | None:
         cell = self._grid.covering(row, column) if column else None
         return meant(self._grid, cell) if cell is not None else None
-
-    def _tilt(self, row: int) -> str:
-        """The tilt at which all figures of a row hold, in a table of several rows a band."""
-        cell = self._grid.covering(row, self._guides.tilted) if self._guides.tilted else None
-        return f"tilt {cell.text.strip(' °')}°" if cell is not None else ""
 
     def _claim_section(self, draft: Draft, cell: Cell, band: Band) -> None:
         """The band that a title gives to the rows below it is claimed of each of their panels."""
@@ -214,7 +210,7 @@ class AcrossReader:
         """The panel of rows that name none: the one of the title above, or one of several."""
         top = self._table.heading_rows[0]
         title = self._names.above(top, self._table.left, self._table.right, self._marks, self._result)
-        several = len(self._table.data_rows) > 1 and not (self._guides.banded or self._guides.nicknamed)
+        several = len(self._table.data_rows) > 1 and not self._guides.tell_rows
         name = f"{title.name} row {row}" if several else title.name
         return Draft(name, self._grid, cell, named=title.certain)
 
@@ -274,8 +270,8 @@ class AcrossReader:
         if cell.column in guides.edges:
             self._claim_edge(cell, draft, self._at.said.band)
             return True
-        silent = cell.column in (guides.nicknamed, guides.tilted) or cell.column in guides.names_of_bands
-        if silent or (cell.column == guides.banded and self._at.said.point):
+        silent = {guides.nicknamed, guides.tilted, guides.beamed, *guides.names_of_bands}
+        if cell.column in silent or (cell.column == guides.banded and self._at.said.point):
             self._result.mark(cell, "label")
             return True
         return False
@@ -293,5 +289,6 @@ class AcrossReader:
         """A context with the nickname of the row's band, made once for each."""
         key = (id(context), name)
         if key not in self._contexts:
-            self._contexts[key] = replace(context, condition=name)
+            noted = replace(context, condition=name)
+            self._contexts[key] = of_beam(context, name) if self._guides.beamed else noted
         return self._contexts[key]

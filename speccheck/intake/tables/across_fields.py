@@ -9,6 +9,7 @@ from dataclasses import dataclass, field
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
 from speccheck.intake.tables.across_bands import gives_frequencies, holds_nicknames, holds_spans
+from speccheck.intake.tables.beams import hold_beams
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.columns import Column, heading_stack
 from speccheck.intake.tables.composing import compose
@@ -43,7 +44,7 @@ class Guides:
     """Columns that say whom and what band a row is about; 0 where there is none.
 
     `overall` gives the whole range of a panel whose bands stand in the headings, `tilted` the tilt at which
-    the figures of a row hold.
+    the figures of a row hold, `beamed` the beam.
     """
 
     named: int = 0
@@ -51,9 +52,20 @@ class Guides:
     nicknamed: int = 0
     overall: int = 0
     tilted: int = 0
+    beamed: int = 0
     names_of_bands: set[int] = field(default_factory=set)
     edges: tuple[int, int] = (0, 0)
     of_bands: frozenset[int] = frozenset()
+
+    @property
+    def tell_rows(self) -> bool:
+        """Whether a column tells the rows of one panel apart: by band, array or beam."""
+        return bool(self.banded or self.nicknamed or self.beamed)
+
+    @property
+    def tell_panels(self) -> bool:
+        """Whether a column names the panels, or tells rows of one panel apart."""
+        return bool(self.named) or self.tell_rows
 
 
 def describe_fields(marks: Marks, table: Across) -> dict[int, Field]:
@@ -140,7 +152,10 @@ def find_guides(marks: Marks, table: Across, fields: dict[int, Field]) -> Guides
     naming = fields
     if marks.without.names:
         naming = {i: f for i, f in fields.items() if all(map(marks.may_name, cells_below(grid, table, i)))}
-    guides = Guides(_name_column(grid, table, naming))
+    beamed = next((i for i in fields if hold_beams(cells_below(grid, table, i))), 0)
+    guides = Guides(
+        _name_column(grid, table, {i: f for i, f in naming.items() if i != beamed}), beamed=beamed
+    )
     columns = {i: cells_below(grid, table, i) for i in fields if i != guides.named}
     frequencies = [
         i
@@ -156,7 +171,7 @@ def find_guides(marks: Marks, table: Across, fields: dict[int, Field]) -> Guides
     guides.edges = edge_columns({i: fields[i].column.heading for i in columns})
     guides.nicknamed = next((i for i in columns if holds_nicknames(columns[i])), 0)
     guides.tilted = next((i for i in columns if _sets_rows_apart(grid, table, fields[i], guides)), 0)
-    telling = {*guides.edges, *guides.names_of_bands, guides.nicknamed, guides.banded, guides.tilted}
+    telling = {*guides.edges, *guides.names_of_bands, guides.nicknamed, guides.banded, guides.tilted, beamed}
     guides.of_bands = frozenset(telling - {0})
     return guides
 

@@ -7,6 +7,7 @@ from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
+from speccheck.intake.tables.beams import is_beam_name
 from speccheck.intake.tables.heading_conditions import condition_of_heading, says_plane, says_tilt
 from speccheck.intake.tables.labels import FREQUENCY_KEYS, Label, Labels, is_unit, statistic_of
 from speccheck.intake.tables.words import column_leaning, column_role
@@ -37,6 +38,7 @@ class Column:
     unit: str = ""
     condition: str = ""
     plane: str = ""
+    beam: str = ""
     guessed: bool = False
     """Whether the role of a column of unknown heading was told by its cells alone."""
     lead: str = ""
@@ -109,7 +111,9 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
     role = column_role(text) or column_leaning(text)
     slack = _SLACK.fullmatch(text)
     condition = condition_of_heading(text, labels)
-    if text in PLANE_LETTERS:
+    if is_beam_name(text) and set(labels.of(text).parameters) <= {"beam_count"}:
+        column.beam = text
+    elif text in PLANE_LETTERS:
         column.plane = text
     elif condition:
         column.condition = "; ".join(filter(None, (column.condition, condition)))

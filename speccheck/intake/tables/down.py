@@ -8,6 +8,7 @@ from dataclasses import replace
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
 from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
+from speccheck.intake.tables.beams import of_beam
 from speccheck.intake.tables.claims import Claim, Context, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.down_answers import take_answers
@@ -217,16 +218,15 @@ class DownReader:
     ) -> None:
         band, name = said_of
         heading = self._state.label.text if self._state.label else ""
-        condition = extra.condition_text
-        condition = find_bands(condition).rest if find_bands(condition).proved else condition
         context = Context(
             label=in_plane(self._marks.labels, label, column.plane),
             unit=extra.unit(column),
-            condition="; ".join(filter(None, (condition, column.condition, *(c.text for c in extra.asides)))),
+            condition=extra.conditions(column),
             statistic=self._statistic(cell, column) or extra.bound(column),
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )
+        context = of_beam(context, column.beam) if column.beam else context
         draft = self._panels.of(column)
         banded = band is not None or bool(name)
         draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance(column)))

@@ -7,7 +7,7 @@ from dataclasses import dataclass, field, replace
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.bands import is_band_label
+from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.labels import Label, Labels
 from speccheck.intake.tables.words import bound_of
@@ -34,6 +34,12 @@ class RowCells:
     def condition_text(self) -> str:
         """Text of the condition cell, with the word its column leads it with."""
         return f"{self.lead}{self.condition.text}" if self.condition else ""
+
+    def conditions(self, column: Column) -> str:
+        """What a figure is said of beside its band: condition cell, heading of its column, remarks."""
+        said = find_bands(self.condition_text)
+        own = said.rest if said.proved else self.condition_text
+        return "; ".join(filter(None, (own, column.condition, *(cell.text for cell in self.asides))))
 
     @property
     def first_unit(self) -> str:

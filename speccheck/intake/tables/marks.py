@@ -9,6 +9,7 @@ from functools import lru_cache
 
 from speccheck.dictionary import parameters
 from speccheck.intake.files.grid import Cell, Grid
+from speccheck.intake.tables.beams import unmark_beams
 from speccheck.intake.tables.labels import (
     Label,
     Labels,
@@ -103,6 +104,7 @@ def mark(grid: Grid, labels: Labels) -> Marks:
                     _mark_text(marks, (row, cell.column), raw, following)
             following = cell
     _mark_letters(marks)
+    unmark_beams(marks)
     _unmark_column_words(marks)
     _unmark_answers(marks)
     return marks
