@@ -56,3 +56,24 @@ def test_the_name_of_a_sheet_that_ends_its_title_is_the_panels(tmp_path: Path) -
 def test_a_title_with_more_of_the_name_than_its_sheet_keeps_it(tmp_path: Path) -> None:
     account = read_account(save(tmp_path / "bid.xlsx", {"KD-12": [["Vela KD-12"], *_TABLE]}))
     assert lines(account)[0].startswith("Vela KD-12: ") and model_name("Vela KD-12") == "Vela KD-12"
+
+
+@pytest.mark.parametrize(
+    "title",
+    [
+        "Antenna type {}",
+        "Panel {}",
+        "Type d'antenne {}",
+        "Antena tipo {}",
+        "Typ anteny {}",
+        "Antenna type no. {}",
+    ],
+)
+@pytest.mark.parametrize("counts", [("1", "2"), ("A", "B"), ("I", "II")])
+def test_counted_types_over_columns_are_two_panels(
+    title: str, counts: tuple[str, str], tmp_path: Path
+) -> None:
+    names = [title.format(count) for count in counts]
+    rows = [["Parameter", *names], ["Frequency range (MHz)", "694-960", "1710-2690"], ["Gain (dBi)", 15, 17]]
+    panels = read(tmp_path, rows).submission.panels
+    assert [(p.name, p.readings[-1].value) for p in panels] == [(names[0], 15), (names[1], 17)]

@@ -10,6 +10,7 @@ from speccheck.dictionary import match_heading, parameters
 from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.tables.demands import demanded
 from speccheck.intake.tables.lines import LINE
+from speccheck.intake.tables.titles import counts_panels
 from speccheck.intake.tables.vocabulary import runs, stem, vocabulary
 from speccheck.intake.tables.words import column_role, is_counting_unit
 from speccheck.quantities import answers, dimension, unit_name
@@ -241,7 +242,7 @@ class Labels:
 
     def _match(self, text: str) -> Label:
         found = match_heading(text, self._synonyms, suggest=False)
-        if not found.exact or not found.parameters:
+        if not found.exact or not found.parameters or counts_panels(text):
             return _NO_LABEL
         if found.condition and _CODE.fullmatch(text):
             return _NO_LABEL  # 'BR-0012' is a model, not a width
@@ -249,13 +250,12 @@ class Labels:
             return _NO_LABEL  # 'D of 12 March' is an issue, not a depth
         if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
             return _NO_LABEL  # 'RAL 7035' and 'Model 12' are answers
-        condition = found.condition
-        bands = find_bands(condition) if condition else NO_BANDS
+        bands = find_bands(found.condition) if found.condition else NO_BANDS
         return Label(
             text=text,
             parameters=tuple(found.parameters),
             unit=found.unit,
-            condition=condition,
+            condition=found.condition,
             bands=bands if bands.proved or set(found.parameters) <= FREQUENCY_KEYS else NO_BANDS,
             sense=found.sense,
             statistic=found.statistic,

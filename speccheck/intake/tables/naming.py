@@ -18,7 +18,14 @@ from speccheck.intake.tables.title_words import (
     settled_by_sheet,
     without_paper,
 )
-from speccheck.intake.tables.titles import PARTS, announced, codes, is_numbered_name, name_in_title
+from speccheck.intake.tables.titles import (
+    PARTS,
+    announced,
+    codes,
+    is_numbered_name,
+    name_in_title,
+    only_counts,
+)
 from speccheck.intake.tables.words import fold, is_generic_sheet_name, is_group_heading, title_prefixes
 
 _DESCRIBES = re.compile(
@@ -60,7 +67,7 @@ def model_name(text: str) -> str:
     words = without_paper(text)[:_LONGEST_NAME]
     stripped = _without_prefix(words, "prefix")
     plain = _OF.sub("", _without_prefix(stripped, "weak"))
-    if re.fullmatch(r"\d{1,2}|[A-Za-z]", plain):
+    if only_counts(plain):
         return words
     titled = name_in_title(words)
     if titled:

@@ -17,11 +17,13 @@ _NOT_A_CODE = re.compile(
 PARTS = re.compile(r"\s*[:,;|]\s+|\s+[-–—/]\s+|\s+:\s*")
 _BRACKETED = re.compile(r"\s*[(\[][^()\[\]]*[)\]]")
 _GENERIC = re.compile(
-    r"antenn|antena|panel|band$|sheet|daten|sector|sektor|passiv|activ|aktiv|port$|ports$|beam|array|mimo|technical|"
-    r"specif|revision|issue|rev\.?$|draft|offer|tender|bid$|model|type|typ$|product|dual|multi|quad|hexa|octo|penta"
+    r"panel|band$|sheet|daten|sector|sektor|passiv|activ|aktiv|port$|ports$|beam|array|mimo|technical|"
+    r"specif|revision|issue|rev\.?$|draft|offer|tender|bid$|model|type|typ$|tipo$|anten|^n[or]\.?$|^n°$|product|dual|multi|quad|hexa|octo|penta"
 )
 _NUMBER_OF_NAME = re.compile(r"\d{2}[\d/.-]*|\d[/-]\d+")
 _YEAR = re.compile(r"(?:19|20)\d\d(?:[-/.]\d\d?)*")
+_COUNT = re.compile(r"\d{1,2}|[A-Za-z]|[IVX]{1,4}")
+_SIZES = ("H", "W", "D", "L", "P")
 _SHORT = 3
 
 
@@ -57,6 +59,19 @@ def name_in_title(text: str) -> str:
         if name:
             return name
     return named if len(named.split()) <= _SHORT + 1 else ""
+
+
+def only_counts(text: str) -> bool:
+    """Whether what is left of a title only counts: '1', 'B', 'II', 'no. 2', 'type 1'; alone it is no name."""
+    *words, last = text.split() or [""]
+    return _COUNT.fullmatch(last) is not None and all(map(_is_generic, words))
+
+
+def counts_panels(text: str) -> bool:
+    """Whether a text tells a panel from others by a letter: 'Panel A', 'Type II'; 'Panel H' is a size."""
+    words, _, last = text.rpartition(" ")
+    lettered = last.isalpha() and last.isupper() and _COUNT.fullmatch(last) is not None
+    return lettered and bool(words) and last not in _SIZES and all(map(_is_generic, words.split()))
 
 
 def is_numbered_name(text: str) -> bool:
