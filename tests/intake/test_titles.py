@@ -77,3 +77,17 @@ def test_counted_types_over_columns_are_two_panels(
     rows = [["Parameter", *names], ["Frequency range (MHz)", "694-960", "1710-2690"], ["Gain (dBi)", 15, 17]]
     panels = read(tmp_path, rows).submission.panels
     assert [(p.name, p.readings[-1].value) for p in panels] == [(names[0], 15), (names[1], 17)]
+
+
+@pytest.mark.parametrize("names", [("Klein", "Gross"), ("", "")])
+def test_contrary_tables_beside_each_other_are_no_one_panel(names: tuple[str, str], tmp_path: Path) -> None:
+    rows = [
+        [names[0], "", "", names[1]],
+        ["Parameter", "Value", "", "Parameter", "694-960 MHz", "1710-2690 MHz"],
+        ["Gain (dBi)", 16.5, "", "Gain (dBi)", 15.2, 17.6],
+        ["Height (mm)", 780, "", "Height (mm)", 1340],
+        ["Weight (kg)", 6.4, "", "Weight (kg)", 17.8],
+    ]
+    panels = read(tmp_path, rows, ["E4:F4", "E5:F5"]).submission.panels
+    gains = [[r.value for r in panel.readings if r.parameter == "gain"] for panel in panels]
+    assert sorted(gains) == [[15.2, 17.6], [16.5]] and panels[0].name != panels[1].name

@@ -51,6 +51,7 @@ class _Joiner:
             self._give_title(title, draft)
         home = self._home(draft)
         if home is None:
+            self._tell_apart(draft)
             self._kept.append(draft)
             self._by_name.setdefault(_key(draft.name), []).append(draft)
             return
@@ -60,6 +61,12 @@ class _Joiner:
         self._stated_by(home).update(self._stated_by(draft))
         home.joined.append(draft)
         home.bands += [band for band in draft.bands if band not in home.bands]
+
+    def _tell_apart(self, draft: Draft) -> None:
+        """Add its place to the name of a panel that has none of its own, where another is called alike."""
+        alike = self._by_name.get(_key(draft.name), [])
+        if not draft.named and any(other.grid is draft.grid for other in alike[-_NEAREST:]):
+            draft.name = f"{draft.name} (table at {draft.where.address})"
 
     def _give_title(self, title: Draft, draft: Draft) -> None:
         """A title names the piece below it, and a nameless one before that piece on its sheet."""
@@ -93,7 +100,10 @@ class _Joiner:
 
     def _home(self, draft: Draft) -> Draft | None:
         for other in reversed(self._by_name.get(_key(draft.name), [])[-_NEAREST:]):
-            if not _clash(self._stated_by(draft), self._stated_by(other)):
+            sure = draft.named and other.named
+            if not _clash(self._stated_by(draft), self._stated_by(other)) and (
+                sure or not _contrary(draft, other)
+            ):
                 return other
         if not self._kept:
             return None
