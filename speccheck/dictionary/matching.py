@@ -28,6 +28,7 @@ _SIDES = frozenset({"f", "l", "s", "r"})
 _STATISTICS = ("max", "min", "typical", "mean")
 _TWICE = tuple(map(re.compile, (r"\s+[–—-]\s+", r"\s+[/|=–—-]\s+|\s*\|\s*|\n")))
 _GLOSS = re.compile(r"([^()\[\]]+)[(\[]([^()\[\]]{2,60})[)\]]\s*")
+_BARE_SIGN = re.compile(r"([≥>≤<])\s*(?:$|[)\](\[,;])")
 _EACH = re.compile(
     r"(?<=[^\W\d])\.?/(?=(?:col|column|port|input|trx|row|puerto|porta|porto|accès|entrée|poort|Eingang|kolumnę|Spalte)\b)",
     re.IGNORECASE,
@@ -171,8 +172,17 @@ def _match_body(forms: Iterable[Cut], body: str, house: Mapping[str, str]) -> He
     for cut in forms:
         found = _look_up(cut.text, house, tolerance_of=tolerance_of)
         if found and _unit_fits(cut.unit, found):
-            return _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
+            result = _result(found, conditions_of(cut), words, tolerance_of=tolerance_of)
+            return _with_sign(result, body) if result.sense == "nominal" else result
     return None
+
+
+def _with_sign(match: HeadingMatch, body: str) -> HeadingMatch:
+    """'VSWR (≤)' and 'Isolation, dB ≥': a sign without a figure says what the figures below bound."""
+    sign = _BARE_SIGN.search(body)
+    if sign is None or parameters()[match.parameters[0]].kind not in ("number", "count"):
+        return match
+    return replace(match, sense="min" if sign[1] in "≥>" else "max")
 
 
 def _unit_fits(unit: str, keys: str) -> bool:

@@ -75,6 +75,24 @@ def test_a_symbol_and_the_unit_below_or_beside_it_name_a_parameter(tmp_path: Pat
     assert _lines(tmp_path, down, "gain") == ["KD-1: C3 gain 17.5 dBi"]
 
 
+def test_three_bands_over_units_one_of_them_empty(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "Band 1", "Gain 1", "Band 2", "Gain 2", "Band 3", "Gain 3", "Ports"],
+        ["", "MHz", "dBi", "MHz", "dBi", "MHz", "dBi", ""],
+        ["TX-1", "694-960", 15, "1427-1518", 16.5, "1695-2690", 17.5, 6],
+        ["TX-2", "694-960", 16, "–", "–", "1695-2690", 18.5, 4],
+    ]
+    assert _lines(tmp_path, rows, "gain", "rf_ports") == [
+        "TX-1: C3 gain 15 dBi @694-960",
+        "TX-1: E3 gain 16.5 dBi @1427-1518",
+        "TX-1: G3 gain 17.5 dBi @1695-2690",
+        "TX-1: H3 rf_ports 6",
+        "TX-2: C4 gain 16 dBi @694-960",
+        "TX-2: G4 gain 18.5 dBi @1695-2690",
+        "TX-2: H4 rf_ports 4",
+    ]
+
+
 BEAMS = [["Broadcast beam", 17.5, 65], ["Traffic beam", 24.5, 12], ["Service beam, edge", 22.5, 14]]
 HEADINGS = ["Gain (dBi)", "HPBW H (°)"]
 KEYS = ("gain", "broadcast_gain", "horizontal_beamwidth", "broadcast_horizontal_beamwidth")

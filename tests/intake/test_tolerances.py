@@ -101,3 +101,34 @@ def test_a_word_beside_a_bare_figure_says_what_it_bounds(
     assert told["vswr"] == (1.5, "max", "")
     assert told["front_to_back_ratio"] == (25.0, "min", "")  # the sign in the cell is nearer than the column
     assert told["weight"] == (20.0, "nominal", "")
+
+
+def test_a_row_of_signs_and_tolerances_below_the_units(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "Frequency", "Gain", "Isolation", "VSWR"],
+        ["", "MHz", "dBi", "dB", ""],
+        ["", "", "±0.5", "≥", "≤"],
+        ["KD-1", "1710-2170", 17.5, 30, 1.5],
+        ["KD-2", "698-960", 16.5, 28, 1.4],
+    ]
+    panels = read(tmp_path, rows).submission.panels
+    told = {(p.name, r.parameter): (r.value, r.sense, r.tolerance) for p in panels for r in p.readings}
+    assert {name for name, _ in told} == {"KD-1", "KD-2"}
+    assert told["KD-1", "gain"] == (17.5, "nominal", 0.5)
+    assert told["KD-2", "port_isolation"] == (28.0, "min", None)
+    assert told["KD-2", "vswr"] == (1.4, "max", None)
+
+
+@pytest.mark.parametrize(
+    ("heading", "sense"),
+    [
+        ("Isolation (dB), ≥", "min"),
+        ("Isolation ≥ [dB]", "min"),
+        ("Isolation (≥)", "min"),
+        ("Isolation", "nominal"),
+    ],
+)
+def test_a_sign_in_a_heading_says_what_its_figures_bound(tmp_path: Path, heading: str, sense: str) -> None:
+    rows = [["Model", "Frequency (MHz)", heading, "VSWR (≤)"], ["KD-1", "1710-2170", 30, 1.5]]
+    assert _only(tmp_path, rows, "port_isolation").sense == sense
+    assert _only(tmp_path, rows, "vswr").sense == "max"

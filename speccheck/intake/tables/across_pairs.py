@@ -8,9 +8,9 @@ from collections import Counter
 from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.across_bands import gives_frequencies, holds_spans
 from speccheck.intake.tables.across_fields import Field, cells_below
-from speccheck.intake.tables.bands import find_bands
+from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.claims import Context
-from speccheck.intake.tables.labels import Label
+from speccheck.intake.tables.labels import Label, is_unit
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.regions import Across
 
@@ -42,7 +42,7 @@ def pair_with_bands(marks: Marks, table: Across, fields: dict[int, Field]) -> No
         column = fields[index].column
         label = Label(column.heading, ("operating_bands",), fields[index].label.unit or column.unit or "MHz")
         fields[index].label, fields[index].role, fields[index].pair = label, "", index
-        fields[index].context = Context(label, heading=column.heading)
+        fields[index].context, fields[index].banded = Context(label, heading=column.heading), False
 
 
 def band_of_pair(cell: Cell | None, found: Field) -> tuple[float, float] | None:
@@ -54,9 +54,11 @@ def band_of_pair(cell: Cell | None, found: Field) -> tuple[float, float] | None:
 
 
 def _gives_bands(marks: Marks, table: Across, found: Field) -> bool:
-    if found.banded or (found.label and not found.of_frequency):
+    if found.column.band is not None or (found.label and not found.of_frequency):
         return False
-    cells = cells_below(marks.grid, table, found.column.index)
+    if found.banded and not all(is_band_label(c.text) or is_unit(c.text) for c in found.column.cells):
+        return False
+    cells = [c for c in cells_below(marks.grid, table, found.column.index) if any(map(str.isdigit, c.text))]
     unit = found.label.unit or found.column.unit or "MHz"
     return holds_spans(cells, unit) and gives_frequencies(cells)
 

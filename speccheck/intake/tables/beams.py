@@ -7,7 +7,7 @@ from dataclasses import replace
 from functools import lru_cache
 from typing import TYPE_CHECKING
 
-from speccheck.dictionary import parameters, specified
+from speccheck.dictionary import match_heading, parameters, specified
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.labels import FREQUENCY_KEYS
@@ -27,6 +27,7 @@ _TRAFFIC = re.compile(
 )
 _BOUND = re.compile(r"\s*[(\[][^()\[\]]*\b(?:max|min)[^()\[\]]*[)\]]", re.IGNORECASE)
 """'Traffic (max. gain)' is the beam of the largest gain; none of its figures is a limit."""
+_BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
 _MOST_WORDS = 7
 _FEWEST = 2
 _UNITS_BETWEEN = 2
@@ -37,11 +38,14 @@ _UNITS_BETWEEN = 2
 def is_beam_name(text: str) -> bool:
     """Whether a text names a kind of beam and no parameter of it.
 
-    >>> is_beam_name("Broadcast beam"), is_beam_name("Traffic (max. gain)"), is_beam_name("Traffic beams: 64")
+    >>> is_beam_name("Broadcast beam"), is_beam_name("Traffic (max. gain)"), is_beam_name("Traffic beam gain")
     (True, True, False)
     """
-    told = len(text) <= _LONGEST and bool(_BROADCAST.search(text) or _TRAFFIC.match(text.strip()))
-    return told and ":" not in text and len(text.split()) <= _MOST_WORDS
+    told = len(text) <= _LONGEST and bool(_BROADCAST.search(text) or _TRAFFIC.search(text))
+    if not told or ":" in text or len(text.split()) > _MOST_WORDS:
+        return False
+    bare = _BRACKETED.sub(" ", text)
+    return set(match_heading(bare, suggest=False).parameters) <= {"beam_count"}
 
 
 def hold_beams(cells: list[Cell]) -> bool:

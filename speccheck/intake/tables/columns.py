@@ -9,7 +9,7 @@ from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.beams import is_beam_name
 from speccheck.intake.tables.heading_conditions import condition_of_heading, says_plane, says_tilt
-from speccheck.intake.tables.labels import FREQUENCY_KEYS, Label, Labels, is_unit, statistic_of
+from speccheck.intake.tables.labels import FREQUENCY_KEYS, SLACK_ALONE, Label, Labels, is_unit, statistic_of
 from speccheck.intake.tables.words import column_leaning, column_role
 from speccheck.records import Band
 
@@ -119,6 +119,8 @@ def _take(column: Column, cell: Cell, labels: Labels) -> None:
         column.condition = "; ".join(filter(None, (column.condition, condition)))
     elif slack and is_unit(slack[1]):
         column.role, column.unit = "tolerance", slack[1]
+    elif SLACK_ALONE.fullmatch(text):
+        column.unit = f"{column.unit} {text}".strip()  # below the unit: 'dBi' over '±0.5'
     elif role == "unit":
         column.role = role
     elif is_unit(text):

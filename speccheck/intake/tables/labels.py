@@ -34,10 +34,11 @@ _TILTS = re.compile(
 )
 _LETTER_FIRST = re.compile(r"[^\W\d_]\s+[^\W\d_]{2,}")
 _SIZES = frozenset({"height", "width", "depth"})
-_FREQUENCIES = re.compile(
-    rf"{_AT}((?:\d+(?:[.,]\d+)?\s*/\s*)+\d+(?:[.,]\d+)?)\s*(GHz|MHz)\s*[)]?\s*$", re.IGNORECASE
-)
+_FREQUENCIES = re.compile(rf"{_AT}((?:\d+(?:[.,]\d+)?\s*/\s*)+\d+(?:[.,]\d+)?)\s*([GM]Hz)\s*[)]?\s*$", re.I)
 _CODE = re.compile(r"[^\W\d_]{1,4}[-/. ]?\d[\w./-]*")
+_NUMBERED = re.compile(
+    r"(?:gain|gewinn|ganho|zysk|winst|vswr|tilt|hpbw|xpd|fbr|pim|eirp) [1-6]", re.IGNORECASE
+)
 _STATISTICS = re.compile(r"[,(]?\s*\b((?:[^\W\d_]{2,9}\.?\s*/\s*){1,2}[^\W\d_]{2,9}\.?)\s*\)?\s*$")
 _UNIT_BEHIND = re.compile(r"^(.+?)\s*(?:,|\s/(?!\s*[HVWD]\b)|\bin\b)\s*([^\s,()\[\]]{1,8})\s*((?:[(\[].*)?)$")
 _BAND_WORD = re.compile(
@@ -53,8 +54,8 @@ _ITEM = r"[^\W\d][^()\[\]/]*"
 _LISTED_IN_BRACKET = re.compile(
     rf"[(\[]\s*({_ITEM}\s[^()\[\]/]*(?:/\s*{_ITEM})+|{_ITEM}(?:/\s*{_ITEM}\s[^()\[\]/]+)+)\s*[)\]]"
 )
-_LISTS = re.compile(r"[/|]")
-_SEVERAL = re.compile(r"[xX×/*]")
+_LISTS, _SEVERAL = re.compile(r"[/|]"), re.compile(r"[xX×/*]")
+SLACK_ALONE = re.compile(r"\s*(?:±|\+/-)\s?\d(?:[.,]\d+)?\s?%?\s*")
 _WITH_SLACK = re.compile(r"(?<=\S)\s*[,;(\[]?\s*±\s?\d+(?:[.,]\d+)?\s?(?:%|°|[A-Za-z]{1,3})?[\])]?$")
 _STATISTIC = {"minimum": "min", "typical": "typ", "maximum": "max"}
 
@@ -244,8 +245,8 @@ class Labels:
         found = match_heading(text, self._synonyms, suggest=False)
         if not found.exact or not found.parameters or counts_panels(text):
             return _NO_LABEL
-        if found.condition and _CODE.fullmatch(text):
-            return _NO_LABEL  # 'BR-0012' is a model, not a width
+        if found.condition and _CODE.fullmatch(text) and not _NUMBERED.fullmatch(text):
+            return _NO_LABEL  # 'BR-0012' is a model, not a width; 'Gain 1' is the gain of the first band
         if found.condition and _LETTER_FIRST.match(text) and set(found.parameters) <= _SIZES:
             return _NO_LABEL  # 'D of 12 March' is an issue, not a depth
         if any(letter.isdigit() for letter in text) and parameters()[found.parameters[0]].kind == "text":
@@ -276,11 +277,8 @@ def _tidy(text: str) -> str:
 
 def is_unit(text: str) -> bool:
     """Whether a cell holds a unit, perhaps with a tolerance; a dash among units says that there is none."""
-    return len(text) <= 24 and (
-        bool(unit_name(text))
-        or is_counting_unit(text)
-        or ("±" in text and bool(unit_name(_WITH_SLACK.sub("", text))))
-    )
+    with_slack = "±" in text and unit_name(_WITH_SLACK.sub("", text))
+    return len(text) <= 24 and bool(with_slack or unit_name(text) or is_counting_unit(text))
 
 
 def begins_with_unit(text: str) -> bool:
@@ -296,4 +294,5 @@ def statistic_of(text: str) -> str:
 
 def is_heading_filler(text: str) -> bool:
     """Whether a cell under a heading still belongs to the heading: a unit, band or statistic."""
-    return is_unit(text) or is_band_label(text) or bool(statistic_of(text)) or text.strip() in ("H", "V")
+    told = is_unit(text) or is_band_label(text) or bool(statistic_of(text)) or text.strip() in ("H", "V")
+    return told or SLACK_ALONE.fullmatch(text) is not None
