@@ -91,3 +91,14 @@ def test_contrary_tables_beside_each_other_are_no_one_panel(names: tuple[str, st
     panels = read(tmp_path, rows, ["E4:F4", "E5:F5"]).submission.panels
     gains = [[r.value for r in panel.readings if r.parameter == "gain"] for panel in panels]
     assert sorted(gains) == [[15.2, 17.6], [16.5]] and panels[0].name != panels[1].name
+
+
+@pytest.mark.parametrize("corner", ["Parameter", None])
+@pytest.mark.parametrize("heads", [("Min", "Typ"), ("694-960 MHz", "1710-2690 MHz"), ("Value", "Value")])
+def test_a_row_of_models_over_a_row_of_headings_names_the_columns(
+    corner: str | None, heads: tuple[str, str], tmp_path: Path
+) -> None:
+    rows = [["Model", "KD-8", None, "KD-9", None], [corner, *heads, *heads], ["Gain (dBi)", 16, 18, 17, 19]]
+    panels = read(tmp_path, rows, ["B1:C1", "D1:E1"]).submission.panels
+    gains = {panel.name: [r.value for r in panel.readings if r.parameter == "gain"] for panel in panels}
+    assert gains == {"KD-8": [16, 18], "KD-9": [17, 19]}

@@ -32,6 +32,7 @@ _MOST_COUNTED = 2
 _FEWEST_HEADINGS = 4
 _FEWEST_FILLED, _FEWEST_LETTERS = 3, 3
 _NAME_WITH_NUMBER = re.compile(r"[^\W\d_]\s+\d+\w{0,2}$")
+_HEADS_VALUES = ("offered", "unit", "minimum", "typical", "maximum")
 _LINE_MARKS = (":", "=", "\t", "...", "…")
 
 
@@ -146,6 +147,9 @@ def _unmark_column_words(marks: Marks) -> None:
             continue
         if len(headings) > 4:
             continue
+        if _names_over_headings(marks, row, headings):
+            del marks.headings[row, headings[0]]
+            continue
         roles = [column_role(cell.text) for cell in cells if isinstance(cell.raw, str)]
         if is_form_heading(roles) or _tells_arrays_apart(cells):
             for column in headings:
@@ -166,6 +170,22 @@ def _are_statistics(headings: list[Cell], cells: list[Cell]) -> bool:
     """Whether a row says 'Min | Typ | Max' under several names: there 'Typ' is no German 'type'."""
     said = {statistic_of(cell.text) for cell in cells if isinstance(cell.raw, str)}
     return len(headings) > 1 and len(said - {""}) > 1 and all(statistic_of(c.text) for c in headings)
+
+
+def _names_over_headings(marks: Marks, row: int, headings: list[int]) -> bool:
+    """Whether 'Model | KD-1 | KD-2' stands over a row of bands, of 'Min | Typ' or of 'Parameter | Value'."""
+    first, *names = marks.rows[row]
+    if headings != [first.column] or column_role(first.text) != "panel":
+        return False
+    below = marks.rows.get(row + 1, [])
+    beside = [cell for cell in below if cell.column > first.column]
+    corner = [column_role(cell.text) for cell in below if cell.column <= first.column]
+    heads = len(beside) > 1 and all(
+        isinstance(cell.raw, str)
+        and (is_heading_filler(cell.text) or column_role(cell.text) in _HEADS_VALUES)
+        for cell in beside
+    )
+    return heads and corner in ([], ["parameter"]) and len({cell.text for cell in names}) > 1
 
 
 def _tells_arrays_apart(cells: list[Cell]) -> bool:
