@@ -22,6 +22,8 @@ def _lines(path: Path, rows: Rows, *keys: str) -> list[str]:
         ("Frequency band A, MHz", "Gain A, dBi", "Frequency band B, MHz", "Gain B, dBi"),
         ("Frequency (MHz)", "Gain (dBi)", "Frequency (MHz)", "Gain (dBi)"),
         ("Frequenzband 1 [MHz]", "Gewinn 1 [dBi]", "Frequenzband 2 [MHz]", "Gewinn 2 [dBi]"),
+        ("Low band (MHz)", "Low band gain (dBi)", "High band (MHz)", "High band gain (dBi)"),
+        ("LB (MHz)", "LB gain (dBi)", "HB (MHz)", "HB gain (dBi)"),
         ("Bande 1 (MHz)", "Gain 1 (dBi)", "Bande 2 (MHz)", "Gain 2 (dBi)"),
     ],
 )
@@ -73,6 +75,19 @@ def test_a_symbol_and_the_unit_below_or_beside_it_name_a_parameter(tmp_path: Pat
         ["VSWR", "", 1.4],
     ]
     assert _lines(tmp_path, down, "gain") == ["KD-1: C3 gain 17.5 dBi"]
+
+
+def test_bands_before_all_figures_are_told_by_their_names(tmp_path: Path) -> None:
+    headings = ["Low band (MHz)", "High band (MHz)", "Gain low band (dBi)", "Gain high band (dBi)", "VSWR"]
+    rows = [["Model", *headings], ["DX-1", "694-960", "1695-2690", 15, 17.5, 1.5]]
+    assert _lines(tmp_path, [*rows, ["DX-2", "698-960", "1710-2690", 16, 18.5, 1.4]], "gain", "vswr") == [
+        "DX-1: D2 gain 15 dBi @694-960",
+        "DX-1: E2 gain 17.5 dBi @1695-2690",
+        "DX-1: F2 vswr 1.5",
+        "DX-2: D3 gain 16 dBi @698-960",
+        "DX-2: E3 gain 18.5 dBi @1710-2690",
+        "DX-2: F3 vswr 1.4",
+    ]
 
 
 def test_three_bands_over_units_one_of_them_empty(tmp_path: Path) -> None:

@@ -17,6 +17,23 @@ from speccheck.intake.tables.regions import Across
 _TAG = re.compile(
     r"(?<![^\W_])(?:(?:band|bande|banda|pasmo|array|range)\s?|[BRFbrf](?=\d))?#?([1-6]|[A-D]|I{1,3}|IV)(?![^\W_])(?!\s?[/.,x×]\s?\d)",
 )
+_PLACES = {
+    "low": re.compile(
+        r"\b(?:low(?:er)?[- ]?band|lb|unteres band|bande basse|banda (?:baja|bassa|baixa|inferiore?)"
+        r"|pasmo dolne|dolne pasmo|lage band)\b",
+        re.IGNORECASE,
+    ),
+    "middle": re.compile(
+        r"\b(?:mid(?:dle)?[- ]?band|mb|mittleres band|bande m[ée]diane|banda (?:media|m[ée]dia)"
+        r"|pasmo środkowe|midden ?band)\b",
+        re.IGNORECASE,
+    ),
+    "high": re.compile(
+        r"\b(?:(?:high|upp)(?:er)?[- ]?band|hb|oberes band|bande haute|banda (?:alta|superiore?)"
+        r"|pasmo górne|górne pasmo|hoge band)\b",
+        re.IGNORECASE,
+    ),
+}
 _BRACKETED = re.compile(r"[(\[][^()\[\]]*[)\]]")
 
 
@@ -64,8 +81,9 @@ def _gives_bands(marks: Marks, table: Across, found: Field) -> bool:
 
 
 def _tag(heading: str) -> str:
-    found = _TAG.findall(_BRACKETED.sub(" ", heading))
-    return found[-1] if found else ""
+    bare = _BRACKETED.sub(" ", heading)
+    found = _TAG.findall(bare)
+    return found[-1] if found else next((name for name, words in _PLACES.items() if words.search(bare)), "")
 
 
 def _by_tag(marks: Marks, fields: dict[int, Field], spans: dict[str, int]) -> dict[int, int]:
