@@ -90,6 +90,22 @@ def test_bands_before_all_figures_are_told_by_their_names(tmp_path: Path) -> Non
     ]
 
 
+def test_bands_of_both_directions_hold_for_all_figures(tmp_path: Path) -> None:
+    rows = [
+        ["Model", "Tx band (MHz)", "Rx band (MHz)", "Gain (dBi)"],
+        ["KD-1", "1805-1880", "1710-1785", 17.5],
+        ["KD-2", "925-960", "880-915", 16.5],
+    ]
+    assert _lines(tmp_path, rows, "gain", "operating_bands", "frequency_range") == [
+        "KD-1: B2 operating_bands 1805..1880 MHz @1805-1880",
+        "KD-1: C2 operating_bands 1710..1785 MHz @1710-1785",
+        "KD-1: D2 gain 17.5 dBi",
+        "KD-2: B3 operating_bands 925..960 MHz @925-960",
+        "KD-2: C3 operating_bands 880..915 MHz @880-915",
+        "KD-2: D3 gain 16.5 dBi",
+    ]
+
+
 def test_three_bands_over_units_one_of_them_empty(tmp_path: Path) -> None:
     rows = [
         ["Model", "Band 1", "Gain 1", "Band 2", "Gain 2", "Band 3", "Gain 3", "Ports"],

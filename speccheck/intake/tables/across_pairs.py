@@ -2,11 +2,12 @@
 
 from __future__ import annotations
 
+import itertools
 import re
 from collections import Counter
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.across_bands import gives_frequencies, holds_spans
+from speccheck.intake.tables.across_bands import gives_frequencies
 from speccheck.intake.tables.across_fields import Field, cells_below
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.claims import Context
@@ -52,7 +53,9 @@ def pair_with_bands(marks: Marks, table: Across, fields: dict[int, Field]) -> No
     else:
         pairs = _by_place(fields, spans)
     if len(set(pairs.values())) < 2:
-        return
+        pairs = {}
+        if not _are_apart(marks, table, fields, spans):
+            return
     for index, span in pairs.items():
         fields[index].pair = span
     for index in spans:
@@ -66,7 +69,8 @@ def band_of_pair(cell: Cell | None, found: Field) -> tuple[float, float] | None:
     """The band that a cell of a band's column gives; None without one."""
     if cell is None:
         return None
-    text = cell.text if "hz" in cell.text.lower() else f"{cell.text} {found.label.unit}"
+    unit = found.label.unit or found.column.unit or "MHz"
+    text = cell.text if "hz" in cell.text.lower() else f"{cell.text} {unit}"
     return find_bands(text).hull
 
 
@@ -76,8 +80,18 @@ def _gives_bands(marks: Marks, table: Across, found: Field) -> bool:
     if found.banded and not all(is_band_label(c.text) or is_unit(c.text) for c in found.column.cells):
         return False
     cells = [c for c in cells_below(marks.grid, table, found.column.index) if any(map(str.isdigit, c.text))]
-    unit = found.label.unit or found.column.unit or "MHz"
-    return holds_spans(cells, unit) and gives_frequencies(cells)
+    ranges = [cell for cell in cells if band_of_pair(cell, found) is not None]  # a price is no range
+    return 2 * len(ranges) > len(cells) and gives_frequencies(cells)
+
+
+def _are_apart(marks: Marks, table: Across, fields: dict[int, Field], spans: list[int]) -> bool:
+    """Whether no row gives bands that meet: 'Tx band' and 'Rx band' are bands of their own."""
+    for row in table.data_rows:
+        cells = [(marks.grid.covering(row, index), fields[index]) for index in spans]
+        bands = sorted(band for cell, found in cells if (band := band_of_pair(cell, found)) is not None)
+        if any(lower[1] > upper[0] for lower, upper in itertools.pairwise(bands)):
+            return False
+    return True
 
 
 def _tag(heading: str) -> str:
