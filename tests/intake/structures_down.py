@@ -286,4 +286,16 @@ DOWN: dict[str, tuple[Rows, tuple[str, ...], str]] = {
         Valmora D7: F4 height 1.34 m
         Valmora D7: F5 weight 17.8 kg""",
     ),
+    "rows below a weight say what it is with and without": (
+        [["Parametr", "Jedn.", "KD-8", "KD-9"], ["Masa", "kg"], ["bez uchwytów", "kg", 12, 13],
+         ["z uchwytami", "kg", 15, 16], ["Masa (g)", _, 9000, 8000], ["– z uchwytami", _, 9500, _]],
+        (),
+        """KD-8: C3 weight 12 kg
+        KD-8: C4 weight_with_brackets 15 kg
+        KD-8: C5 weight 9 kg
+        KD-8: C6 weight_with_brackets 9.5 kg
+        KD-9: D3 weight 13 kg
+        KD-9: D4 weight_with_brackets 16 kg
+        KD-9: D5 weight 8 kg""",
+    ),
 }  # fmt: skip

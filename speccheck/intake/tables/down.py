@@ -85,7 +85,7 @@ class DownReader:
             return
         if label_cell is not None:
             span = self._grid.span(label_cell)
-            state.label = self._marks.labels.of(label_cell.text)
+            state.take(label_cell, self._marks.labels)
             state.label_row, state.label_bottom = row, span.bottom
             self._result.mark(label_cell, "label")
         elif not beside:
