@@ -21,6 +21,7 @@ class Amount:
     """A figure as it stands among its neighbours.
 
     `joined` is the sign before it: ``×``, ``/``, ``,``, ``:``, ``+``, ``and``, or empty.
+    `joint` is the sign or word between the ends of a range.
     `role` is ``at`` after '@' or 'at', ``aside`` in parentheses. `plusminus` marks '±45'.
     """
 
@@ -36,6 +37,7 @@ class Amount:
     joined: str = ""
     role: str = ""
     spelled: str = ""
+    joint: str = ""
     words: list[str] = field(default_factory=list)
     before: list[str] = field(default_factory=list)
 
@@ -186,6 +188,7 @@ class _Reader:
     def _range(self, found: Amount) -> None:
         signed = 1 + (self._kind(1) in ("minus", "plus"))
         if self._kind() == "range" and self._kind(signed) == "num" and self._same_kind(found, signed + 1):
+            found.joint = self._tokens[self._at].text
             self._at += 1
             found.high, spelled = self._number()
             found.spelled += "-" + spelled

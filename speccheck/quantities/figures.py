@@ -48,6 +48,8 @@ def claims(found: list[Amount], unit: str, expected: str | None) -> list[Claim]:
         for amount in found:
             if not amount.unit and amount.high is not None and _looks_like_band(amount.low, amount.high):
                 amount.unit = "MHz"
+    if len(found) == 1 and _is_figure_and_place(found[0], unit, wanted):
+        found = _apart(found[0])
     result: list[Claim] = []
     for labels, values in _labelled(found):
         here = _plain_claims(values, wanted)
@@ -60,6 +62,20 @@ def claims(found: list[Amount], unit: str, expected: str | None) -> list[Claim]:
         result += here
     _share_conditions(result)
     return _without_restatements(result)
+
+
+def _is_figure_and_place(amount: Amount, unit: str, wanted: str) -> bool:
+    """'17,5 a 5°' under a heading in dBi: the word means 'at', as the unit is of another kind."""
+    if amount.high is None or not amount.joint.isalpha() or not unit:
+        return False
+    band = dimension(amount.unit) == "frequency" and amount.low >= _LOWEST_BAND_MHZ
+    return not band and answers(unit, wanted) and not answers(amount.unit, wanted)
+
+
+def _apart(amount: Amount) -> list[Amount]:
+    low, _, high = amount.spelled.rpartition("-")
+    place = Amount(amount.high or 0.0, unit=amount.unit, role="at", spelled=high, words=amount.words)
+    return [replace(amount, high=None, unit="", spelled=low, words=[]), place]
 
 
 def answers(unit: str, wanted: str) -> bool:

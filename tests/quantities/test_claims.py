@@ -115,3 +115,17 @@ def test_a_range_of_figures_is_still_one() -> None:
     assert found.value == (0.0, 10.0)
     (found,) = read_cell("300 a 400 W", kind="number", expected="W").quantities
     assert found.value == (300.0, 400.0)
+
+
+@pytest.mark.parametrize("word", ["a", "à", "to", "do", "tot", "al"])
+def test_behind_a_figure_a_unit_of_another_kind_is_a_place(word: str) -> None:
+    (gain,) = read_cell(f"17,5 {word} 5°", kind="number", unit="dBi", expected="dBi").quantities
+    assert (gain.value, gain.unit, gain.at) == (17.5, "dBi", {"tilt_deg": 5.0})
+    (wind,) = read_cell(f"520 {word} 150 km/h", kind="number", unit="N", expected="N").quantities
+    assert (wind.value, wind.unit) == (520.0, "N")
+    assert wind.at["wind_speed_mps"] == pytest.approx(150 / 3.6)
+
+
+def test_a_range_of_frequencies_is_no_gain_at_a_frequency() -> None:
+    found = read_cell("1710 a 2170 MHz", kind="number", unit="dBi", expected="dBi").quantities
+    assert not any(one.value == 1710.0 for one in found)
