@@ -3,24 +3,22 @@
 from __future__ import annotations
 
 import re
-from functools import cache, lru_cache
+from functools import lru_cache
 
 from speccheck.intake.tables.titles import is_name_word
 from speccheck.intake.tables.vocabulary import stem, vocabulary
 from speccheck.intake.tables.words import fold, is_band_nickname, is_group_word, names_array, title_prefixes
 
-_LINK = r"(?:\s*[:,;|–—-]\s*|\s+)"
-_OF = r"(?:(?:of|for|der|des|fur|de|du|del|della|di|da|do|van|voor|dla|pour|per|para)\s+)?"
+_OF_ENGLISH, _OF_GERMAN, _OF_POLISH = ("of", "for"), ("der", "des", "fur"), ("dla",)
+_OF_LATIN = ("de", "du", "del", "della", "di", "da", "do", "pour", "per", "para")
+_OF_DUTCH = ("van", "voor")
+_OF = frozenset({*_OF_ENGLISH, *_OF_GERMAN, *_OF_POLISH, *_OF_LATIN, *_OF_DUTCH})
+_MARKS = " :,;|()[]–—-"
+_LONGEST_PAPER = 5
 _SHORT_CODE = re.compile(r"[A-Z]{1,2}\d{1,2}|\d{1,2}[A-Z]{1,2}")
 _NUMBER = re.compile(r"\d{1,4}(?:[/-]\d{1,4})*")
 _YEAR = re.compile(r"(?:19|20)\d\d")
 _SHORTEST, _MOST_WORDS = 4, 3
-
-
-@cache
-def _papers() -> tuple[re.Pattern[str], re.Pattern[str]]:
-    words = "|".join(re.escape(word) for word in sorted(title_prefixes("papers"), key=len, reverse=True))
-    return re.compile(rf"(?:{words}){_LINK}{_OF}"), re.compile(rf"{_LINK}[(\[]?(?:{words})[)\]]?")
 
 
 @lru_cache(maxsize=20_000)
@@ -30,21 +28,23 @@ def without_paper(text: str) -> str:
     >>> without_paper("Ficha técnica Aldaya 3L"), without_paper("Kaldora 8 – Datenblatt")
     ('Aldaya 3L', 'Kaldora 8')
     """
-    words = " ".join(text.split())
-    before, behind = _papers()
-    folded = fold(words)
-    if len(folded) != len(words):
-        return words
-    if (found := before.match(folded)) is not None:
-        return words[found.end() :].strip(" :–—-") or words
-    ends = [found for found in behind.finditer(folded) if found.end() == len(folded)]
-    return words[: ends[0].start()].strip(" :–—-") or words if ends else words
+    words = text.split()
+    papers = title_prefixes("papers")
+    begin = [fold(word) for word in words[: _LONGEST_PAPER + 1]]
+    end = [fold(word) for word in words[-_LONGEST_PAPER:]]
+    for size in range(min(_LONGEST_PAPER, len(words) - 1), 0, -1):
+        if " ".join(begin[:size]).strip(_MARKS) in papers:
+            linked = words[size:] if begin[size] not in _OF else words[size + 1 :]
+            return " ".join(linked).strip(" :–—-") or " ".join(words)
+        if " ".join(end[-size:]).strip(_MARKS) in papers:
+            return " ".join(words[:-size]).strip(" :,–—-") or " ".join(words)
+    return " ".join(words)
 
 
 def is_paper_of_name(text: str) -> bool:
     """Whether a word for the paper stands beside what can be a name with a figure: 'Datenblatt Kaldora 8'."""
     name = without_paper(text)
-    first, *others = name.split()
+    first, *others = name.split() or [""]
     return name != " ".join(text.split()) and bool(others) and _is_coined(first) and _are_numbers(others)
 
 
