@@ -188,3 +188,23 @@ def test_numbers_of_beams_down_the_side_stay_counts(tmp_path: Path) -> None:
         ["VSWR", 1.5],
     ]
     assert _lines(tmp_path, rows, "beam_count") == ["SX-1: B3 beam_count 8", "SX-1: B4 beam_count 64"]
+
+
+def test_a_beam_alone_in_its_row_is_that_of_the_rows_below(tmp_path: Path) -> None:
+    figures = [[["Gain (dBi)", gain], ["HPBW H (°)", width]] for gain, width in ((17.5, 65), (24.5, 12))]
+    rows = [["Model", "SX-64"], ["Frequency range", "3300-3800 MHz"]]
+    rows += [
+        ["Broadcast beam"],
+        *figures[0],
+        ["Traffic beam"],
+        *figures[1],
+        ["Mechanical"],
+        ["Weight (kg)", 40],
+    ]
+    assert _lines(tmp_path, rows, *KEYS, "weight") == [
+        "SX-64: B10 weight 40 kg",
+        "SX-64: B4 broadcast_gain 17.5 dBi @3300-3800",
+        "SX-64: B5 broadcast_horizontal_beamwidth 65 deg @3300-3800",
+        "SX-64: B7 gain 24.5 dBi @3300-3800",
+        "SX-64: B8 horizontal_beamwidth 12 deg @3300-3800",
+    ]

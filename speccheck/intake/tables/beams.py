@@ -61,7 +61,7 @@ def of_beam(context: Context, beam: str) -> Context:
     What is said of the whole panel, such as its weight, is said of no beam.
     """
     label = context.label
-    if not label or any(parameters()[key].scope != "band" for key in label.parameters):
+    if not beam or not label or any(parameters()[key].scope != "band" for key in label.parameters):
         return context
     if set(label.parameters) <= FREQUENCY_KEYS:
         return context
@@ -90,6 +90,8 @@ def unmark_beams(marks: Marks) -> None:
 
 
 def _stands_among_beams(marks: Marks, cell: Cell) -> bool:
+    if len(marks.rows[cell.row]) == 1:
+        return True  # it heads the rows below
     if hold_beams([other for other in marks.rows[cell.row] if is_beam_name(other.text)]):
         return True
     in_column = [

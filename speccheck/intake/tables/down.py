@@ -8,7 +8,7 @@ from dataclasses import replace
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
 from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
-from speccheck.intake.tables.beams import of_beam
+from speccheck.intake.tables.beams import is_beam_name, of_beam
 from speccheck.intake.tables.claims import Claim, Context, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
 from speccheck.intake.tables.down_answers import take_answers
@@ -149,8 +149,8 @@ class DownReader:
             return
         self._result.mark(cell, "heading")
         state.section_band, state.section_name = None, ""
-        state.group = cell.text
-        state.pending_title = waiting_title(self._names, state.pending_title, cell)
+        state.group, state.beam = cell.text, cell.text if is_beam_name(cell.text) else ""
+        state.pending_title = None if state.beam else waiting_title(self._names, state.pending_title, cell)
 
     def _values(self, row: int, label_cell: Cell | None, beside: list[Cell]) -> None:
         state = self._state
@@ -226,7 +226,7 @@ class DownReader:
             heading=heading or label.text,
             band_name=name or (column.band_name if band is not None and band == column.band else ""),
         )
-        context = of_beam(context, column.beam) if column.beam else context
+        context = of_beam(context, column.beam or self._state.beam)
         draft = self._panels.of(column)
         banded = band is not None or bool(name)
         draft.claims.append(Claim(cell, context, band, banded=banded, tolerance=extra.tolerance(column)))

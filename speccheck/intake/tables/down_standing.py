@@ -25,6 +25,7 @@ class Standing:
     side_band: Band | None = None
     side_name: str = ""
     side_bottom: int = 0
+    beam: str = ""
     group: str = ""
     pending_title: Cell | None = None
     weight: Cell | None = None
