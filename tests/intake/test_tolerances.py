@@ -132,3 +132,31 @@ def test_a_sign_in_a_heading_says_what_its_figures_bound(tmp_path: Path, heading
     rows = [["Model", "Frequency (MHz)", heading, "VSWR (≤)"], ["KD-1", "1710-2170", 30, 1.5]]
     assert _only(tmp_path, rows, "port_isolation").sense == sense
     assert _only(tmp_path, rows, "vswr").sense == "max"
+
+
+def test_limits_of_a_form_are_those_of_its_demands(tmp_path: Path) -> None:
+    rows = [
+        ["Parameter", "Limit", "Required", "Offered", "Unit"],
+        ["Model", "", "", "KD-1", ""],
+        ["Frequency range", "", "1710-2170", "1710-2170", "MHz"],
+        ["Gain", "min", 17, 17.5, "dBi"],
+        ["VSWR", "max", 1.5, 1.4, ""],
+    ]
+    assert _only(tmp_path, rows, "gain").sense == "nominal"
+    assert _only(tmp_path, rows, "vswr").sense == "nominal"
+
+
+def test_a_word_not_known_in_a_column_of_limits_is_listed(tmp_path: Path) -> None:
+    rows = [
+        ["Parámetro", "Valor", "Unidad", "Límite"],
+        ["Modelo", "KD-1", "", ""],
+        ["Banda", "1710-2170", "MHz", ""],
+        ["Ganancia", "17,5", "dBi", "típ."],
+        ["Aislamiento", "30", "dB", "mín."],
+        ["ROE", "1,5", "", "máx."],
+        ["Relación F/B", "25", "dB", "garantizado"],
+        ["Peso", "20", "kg", "según lote"],
+    ]
+    assert _only(tmp_path, rows, "port_isolation").sense == "min"
+    assert _only(tmp_path, rows, "gain").statistic == "typical"
+    assert [u.text for u in read(tmp_path, rows).submission.unread] == ["según lote"]

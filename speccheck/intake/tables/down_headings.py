@@ -12,7 +12,7 @@ from speccheck.intake.tables.down_regions import Down, cells_between, heads_colu
 from speccheck.intake.tables.marks import Marks
 from speccheck.intake.tables.roles import settle_roles
 from speccheck.intake.tables.titles import codes, is_numbered_name
-from speccheck.intake.tables.words import column_role
+from speccheck.intake.tables.words import bound_of, column_role
 from speccheck.intake.tenders.answering import labelled, share_answering
 
 _REACH = 7
@@ -166,10 +166,19 @@ def describe_columns(
     for index, column in columns.items():
         if column.role == "parameter" and _holds_headings(marks, table, index):
             column.role = "group"
+        if column.role == "bound":
+            _list_unknown_bounds(used[index], result)
         if column.guessed and column.role == "remark" and used[index]:
             reason = f"column heading '{column.heading[:80]}' is not known; its cells were taken for remarks"
             result.unread.append((column.cells[-1], reason, ""))
     return columns
+
+
+def _list_unknown_bounds(cells: list[Cell], result: SheetResult) -> None:
+    for cell in cells:
+        if not bound_of(cell.text):
+            reason = "not known as a word for what the figure beside it bounds"
+            result.unread.append((cell, reason, ""))
 
 
 def _head_in_table(column: Column, cells: list[Cell], result: SheetResult) -> None:

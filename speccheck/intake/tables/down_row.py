@@ -73,6 +73,7 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
     """Find the qualifying cells of a row; a merged unit or band holds for all rows it covers."""
     found = RowCells()
     conditions: list[Cell] = []
+    demands = any(column.role == "required" for column in columns.values())  # what is bounded is the demand
     for index, column in columns.items():
         if column.role in ("unit", "band") and (column.role != "band" or column.band is None):
             cell = grid.covering(row, index)
@@ -84,7 +85,7 @@ def row_cells(grid: Grid, columns: dict[int, Column], row: int) -> RowCells:
             cell = grid.cells.get((row, index))
             if cell is not None and column.role == "condition":
                 conditions.append(cell)
-            elif cell is not None:
+            elif cell is not None and not (demands and column.role == "bound"):
                 (found.tolerances if column.role == "tolerance" else found.bounds)[index] = cell
     if conditions:
         found.condition, found.lead = conditions[0], columns[conditions[0].column].lead

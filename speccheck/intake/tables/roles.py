@@ -12,6 +12,8 @@ from speccheck.intake.tables.words import answer, bound_of, column_role
 
 _WORD_FIRST = re.compile(r"\s*[^\W\d_]{4,}")
 _MOSTLY = 0.6
+_BOUNDS = 0.75
+"""Share of cells that must be words such as 'max.' where a column says what the figures beside it bound."""
 _ANSWERS, _SILENT = 0.6, 0.4
 """Shares of cells from which on, and up to which, a column is surely one of values, or of none."""
 
@@ -48,9 +50,11 @@ def settle_roles(
 
 def _holds_bounds(cells: list[Cell]) -> bool:
     """Whether a column says of the figures beside it what they bound: 'mini', 'max.', '≥'."""
-    bounds = [bound_of(cell.text) for cell in cells if isinstance(cell.raw, str)]
+    if not all(isinstance(cell.raw, str) for cell in cells):
+        return False
+    bounds = [bound_of(cell.text) for cell in cells]
     telling = sum(bound in ("minimum", "maximum", "typical") for bound in bounds)
-    return telling > 0 and all(bounds) and len(bounds) == len(cells)
+    return 2 * telling > len(cells) and sum(map(bool, bounds)) >= _BOUNDS * len(cells)
 
 
 def _by_content(column: Column, cells: list[Cell]) -> str:
