@@ -309,6 +309,8 @@ def test_any_two_ports_are_ports(heading: str) -> None:
         ("PIM 5th order (2 x 43 dBm)", "passive_intermodulation"),
         ("Intermodulation 5. Ordnung", "passive_intermodulation"),
         ("Isolation between two bands", "port_isolation"),
+        ("Max power, two ports (W)", "max_power_per_port"),
+        ("Gain, any two columns", "subarray_gain"),
         ("Total power of all ports at 50 °C (W)", "max_power_per_port"),
         ("Side wind load at 150 km/h", "wind_load"),
     ],
