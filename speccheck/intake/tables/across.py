@@ -120,7 +120,9 @@ class AcrossReader:
         draft = self._at.draft
         if draft is None:
             return
-        for cell in [*cells, *families(self._grid, self._families, row)]:
+        if self._families:
+            cells = [*cells, *families(self._grid, self._families, row)]
+        for cell in cells:
             if cell.column != self._guides.named:
                 self._claim(cell, draft)
 
