@@ -102,3 +102,23 @@ def test_a_row_of_models_over_a_row_of_headings_names_the_columns(
     panels = read(tmp_path, rows, ["B1:C1", "D1:E1"]).submission.panels
     gains = {panel.name: [r.value for r in panel.readings if r.parameter == "gain"] for panel in panels}
     assert gains == {"KD-8": [16, 18], "KD-9": [17, 19]}
+
+
+@pytest.mark.parametrize(
+    "note",
+    [
+        "Ersetzt RHN-65-17 (Gewinn 16,9 dBi).",
+        "Replaces RHN-65-17",
+        "Remplace RHN-65-17",
+    ],
+)
+def test_what_a_panel_replaces_is_not_its_name(note: str, tmp_path: Path) -> None:
+    path = save(tmp_path / "bid.xlsx", {"Datenblatt": [["Sektorantenne RHN-65-18"], [note], *_TABLE]})
+    (panel,) = read_account(path).submission.panels
+    assert panel.name == "RHN-65-18"
+
+
+def test_a_sheet_called_after_the_paper_names_no_panel(tmp_path: Path) -> None:
+    rows: Rows = [["Karta katalogowa"], ["Antena sektorowa", "WISLANA 3P65-16"], *_TABLE]
+    (panel,) = read_account(save(tmp_path / "bid.xlsx", {"Karta katalogowa": rows})).submission.panels
+    assert panel.name == "WISLANA 3P65-16"

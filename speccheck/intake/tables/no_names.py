@@ -43,6 +43,11 @@ _FIRM = re.compile(
     r"s\.?a\.?s?|s\.?r\.?l|s\.?p\.?a|b\.?v|n\.?v|oy|ab|a/s|sp\.? z o\.? ?o)\.?$",
     re.IGNORECASE,
 )
+_REPLACES = re.compile(
+    r"(?:this\s+)?(?:replac(?:es|ing)|supersed(?:es|ing)|successor (?:of|to)"
+    r"|ersetzt|ersatz f[uü]r|nachfolger (?:von|der|des)|remplace|annule et remplace|su[bs]stitu(?:ye|i)|reemplaza|sostituisce|zast[eę]puje|vervangt)\b",
+    re.IGNORECASE,
+)
 _LONGEST, _MOST_WORDS = 70, 9
 
 
@@ -66,6 +71,7 @@ def never_a_name(text: str) -> str:
         ("a word over rows", is_group_heading(words) or is_aside_of_table(words)),
         ("a band or array", _is_array(words)),
         ("a word for a sheet", not any(map(str.isdigit, words)) and _is_sheet_word(words)),
+        ("what it replaces", _REPLACES.match(words) is not None),
         ("a firm", _FIRM.search(words) is not None),
     )
     return next((kind for kind, is_so in kinds if is_so), "")

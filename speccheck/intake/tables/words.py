@@ -131,7 +131,7 @@ def _roles_of_words() -> dict[str, frozenset[str]]:
 def is_generic_sheet_name(name: str) -> bool:
     """Whether a sheet name says nothing of the panel on it: 'Data 2', 'Panels A', 'Datasheets'."""
     folded = fold(name).rstrip("0123456789 -_.()")
-    generic = _table()["sheet"]["generic"] | {""}
+    generic = _table()["sheet"]["generic"] | title_prefixes("papers") | {""}
     bare = re.sub(r"[ -][a-z]$", "", folded)
     return bool({folded, bare, bare.removesuffix("s"), bare.removesuffix("en")} & generic)
 
