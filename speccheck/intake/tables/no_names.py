@@ -45,7 +45,8 @@ _FIRM = re.compile(
 )
 _REPLACES = re.compile(
     r"(?:this\s+)?(?:replac(?:es|ing)|supersed(?:es|ing)|successor (?:of|to)"
-    r"|ersetzt|ersatz f[uü]r|nachfolger (?:von|der|des)|remplace|annule et remplace|su[bs]stitu(?:ye|i)|reemplaza|sostituisce|zast[eę]puje|vervangt)\b",
+    r"|ersetzt|ersatz f[uü]r|nachfolger (?:von|der|des)|remplace|annule et remplace"
+    r"|su[bs]stitu(?:ye|i)|reemplaza|sostituisce|zast[eę]puje|vervangt)\b",
     re.IGNORECASE,
 )
 _LONGEST, _MOST_WORDS = 70, 9
