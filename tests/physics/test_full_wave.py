@@ -1,4 +1,4 @@
-"""Array figures against a method-of-moments solver run in the test (optional: pip install PyNEC)."""
+"""Array figures against a method-of-moments solver run in the test."""
 
 import warnings
 from dataclasses import dataclass
