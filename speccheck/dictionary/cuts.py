@@ -38,6 +38,8 @@ _THIRD_ORDER = re.compile(
     rf"|\b(?:3|iii)(?:\s?\.)?[\s-]?(?:(?:rd|er|e|ème|eme|o|a|go|de|ter|°)\.?)?[\s-]*{_ORDER_WORD}(?!\w)",
     re.IGNORECASE,
 )
+_DECIBELS = re.compile(r"\s?dB(?!\w)", re.IGNORECASE)
+"""Behind the level of a width: the unit stays in the name, where '3 dB' is a word."""
 _CARRIERS = re.compile(
     rf"(?:{_AT_WORDS}|[,;])?\s*\b"
     r"(?:\d|two|zwei|deux|dos|due|dois|duas|dwie|dwoma|dwóch|twee)\s+"
@@ -165,7 +167,8 @@ def _without_figures(cut: Cut) -> Cut:
             return match.group()
         if _ORDINAL.match(match.string, match.end()):
             return match.group()
-        conditions.append(re.sub(rf"^(?:[,;]\s*)?(?:{_AT_WORDS})?\s?", "", piece, flags=re.IGNORECASE))
+        unit = " dB" if _DECIBELS.match(match.string, match.end()) else ""
+        conditions.append(re.sub(rf"^(?:[,;]\s*)?(?:{_AT_WORDS})?\s?", "", piece, flags=re.IGNORECASE) + unit)
         return " "
 
     rest = _CONDITION.sub(keep, _CARRIERS.sub(keep, cut.text))

@@ -32,6 +32,9 @@ class Fit(StrEnum):
     NOT_JUDGED = "not judged"
 
 
+FIT_GRAVITY = {Fit.FITS: 0, Fit.NOT_JUDGED: 0, Fit.DOUBTFUL: 1, Fit.DOES_NOT_FIT: 2}
+
+
 class Compliance(StrEnum):
     """Verdict of a tender requirement on an offer (the middle pair after ILAC-G8:09/2019)."""
 
@@ -43,6 +46,23 @@ class Compliance(StrEnum):
     NOT_STATED = "not stated"
     NOT_JUDGED = "not judged"
     DEVIATION_ACCEPTED = "deviation accepted"
+
+
+PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
+FAILED = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
+OPEN = (Compliance.DECLARED_ONLY, Compliance.NOT_STATED, Compliance.NOT_JUDGED)
+
+GRAVITY = (
+    Compliance.FAILS,
+    Compliance.FAILS_NARROWLY,
+    Compliance.NOT_STATED,
+    Compliance.DECLARED_ONLY,
+    Compliance.NOT_JUDGED,
+    Compliance.DEVIATION_ACCEPTED,
+    Compliance.MEETS_NARROWLY,
+    Compliance.MEETS,
+)
+"""Verdicts from the one that weighs most to the one that weighs least."""
 
 
 class Outcome(StrEnum):

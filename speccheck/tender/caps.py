@@ -6,7 +6,7 @@ import re
 from collections.abc import Iterator, Sequence
 
 from speccheck.records import Compliance, Level, MatrixRow, Requirement
-from speccheck.tender.grading import FAILING, OPEN
+from speccheck.records.words import FAILED, OPEN
 
 _CAP = re.compile(r"negative deviations ≤ (\d+)")
 
@@ -22,7 +22,7 @@ def capped(requirements: Sequence[Requirement], rows: Sequence[MatrixRow]) -> It
         if match is None:
             continue
         cap = int(match[1])
-        missed = _clauses(rows, FAILING)
+        missed = _clauses(rows, FAILED)
         undecided = _clauses(rows, OPEN) - missed
         if len(missed) > cap:
             verdict = Compliance.FAILS

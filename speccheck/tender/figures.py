@@ -10,8 +10,9 @@ from speccheck.dictionary import Parameter
 from speccheck.quantities import UnknownUnitError, convert
 from speccheck.records import Compliance, Reading, Requirement, Sense, Settings
 from speccheck.records.demands import WINDOW_UNKNOWN, doubt_code
+from speccheck.records.words import FAILED, PASSED
 from speccheck.tender.conditions import Comparable
-from speccheck.tender.grading import FAILING, PASSING, Grade, graded, rounded, settled
+from speccheck.tender.grading import Grade, graded, rounded, settled
 from speccheck.tender.offers import Relation
 from speccheck.tender.statistics import canonical, could_decide, offered_statistic
 
@@ -53,8 +54,8 @@ def compare(
     except (UnknownUnitError, ValueError) as error:
         return Comparison(reading, Grade(Compliance.NOT_JUDGED, None, f"unit not comparable: {error}"), None)
     grade = _against_limit(requirement, parameter, reading, span, settings)
-    reasons = _differences(requirement, parameter, offered, relation, meets=grade.verdict in PASSING)
-    if reasons and grade.verdict in (*PASSING, *FAILING):
+    reasons = _differences(requirement, parameter, offered, relation, meets=grade.verdict in PASSED)
+    if reasons and grade.verdict in (*PASSED, *FAILED):
         grade = replace(grade, verdict=Compliance.NOT_JUDGED, note="; ".join(reasons))
     return Comparison(reading, grade, span)
 
@@ -147,7 +148,7 @@ def _windowed(requirement: Requirement, parameter: Parameter, reading: Reading, 
     """
     bare = reading.tolerance is None and not isinstance(reading.value, tuple)
     firm = canonical(requirement.statistic, parameter.direction) in ("", "each")
-    if bare and firm and parameter.direction == "window" and grade.verdict in PASSING:
+    if bare and firm and parameter.direction == "window" and grade.verdict in PASSED:
         return replace(grade, verdict=Compliance.MEETS_NARROWLY, note=WINDOW_UNKNOWN)
     return grade
 

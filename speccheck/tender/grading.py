@@ -10,6 +10,7 @@ from dataclasses import dataclass
 
 from speccheck.records import Compliance
 from speccheck.records.demands import margin_unit
+from speccheck.records.words import FAILED
 
 _SLACK = 1e-9
 """Share of the figures below which two floats count as equal."""
@@ -63,25 +64,8 @@ def rounded(grade: Grade, allowance: float) -> Grade:
     A shortfall within it is a narrow pass, after conversion of units as in the offer's own unit. A shortfall
     of the whole half is none: the limit itself would have been printed one digit higher.
     """
-    short = grade.verdict in FAILING and grade.margin is not None and grade.margin < 0
+    short = grade.verdict in FAILED and grade.margin is not None and grade.margin < 0
     if not short or (grade.margin or 0.0) + allowance <= _SLACK:
         return grade
     note = f"ROUND: short by less than half a unit of the last digit printed ({allowance:.2g})"
     return Grade(Compliance.MEETS_NARROWLY, grade.margin, note)
-
-
-PASSING = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
-FAILING = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
-OPEN = (Compliance.DECLARED_ONLY, Compliance.NOT_STATED, Compliance.NOT_JUDGED)
-
-SEVERITY = (
-    Compliance.FAILS,
-    Compliance.FAILS_NARROWLY,
-    Compliance.NOT_STATED,
-    Compliance.DECLARED_ONLY,
-    Compliance.NOT_JUDGED,
-    Compliance.DEVIATION_ACCEPTED,
-    Compliance.MEETS_NARROWLY,
-    Compliance.MEETS,
-)
-"""Verdicts from the one that weighs most to the one that weighs least."""

@@ -19,6 +19,7 @@ from speccheck.records import (
     Tender,
 )
 from speccheck.records.demands import blocked
+from speccheck.records.words import FAILED, GRAVITY, PASSED
 from speccheck.tender.answer_rule import answer_rule, ruled
 from speccheck.tender.capabilities import covers_bands, covers_range, nearest
 from speccheck.tender.caps import capped
@@ -26,7 +27,7 @@ from speccheck.tender.conditions import at_demanded_tilt, comparable
 from speccheck.tender.deviations import with_deviation
 from speccheck.tender.doubts import marked
 from speccheck.tender.figures import Comparison, compare, guard_band
-from speccheck.tender.grading import FAILING, PASSING, SEVERITY, Grade, graded, settled
+from speccheck.tender.grading import Grade, graded, settled
 from speccheck.tender.named import compare_names
 from speccheck.tender.offers import Offer, offers
 from speccheck.tender.premises import under_premise
@@ -151,7 +152,7 @@ def _figure_row(requirement: Requirement, offer: Offer, panel: Panel, settings: 
     ]
     governing = min(compared, key=_weight)
     grade = _over_tilts(requirement, offer, settings) or governing.grade
-    if grade.verdict in FAILING and _counted_by_band(requirement, readings):
+    if grade.verdict in FAILED and _counted_by_band(requirement, readings):
         note = "stated band by band; the number for the whole panel is not stated"
         grade = replace(grade, verdict=Compliance.NOT_JUDGED, note=note)
     notes = [
@@ -175,7 +176,7 @@ def _counted_by_band(requirement: Requirement, readings: Sequence[Reading]) -> b
 
 def _weight(comparison: Comparison) -> tuple[int, float]:
     margin = comparison.grade.margin
-    return SEVERITY.index(comparison.grade.verdict), margin if margin is not None else float("inf")
+    return GRAVITY.index(comparison.grade.verdict), margin if margin is not None else float("inf")
 
 
 def _in_unit(comparison: Comparison) -> float | tuple[float, float] | None:
@@ -197,7 +198,7 @@ def _conversion(requirement: Requirement, comparison: Comparison) -> str:
 
 def _declared_beside(offer: Offer, grade: Grade) -> str:
     declared = [s for s in offer.statements if s.status is Status.DECLARED]
-    if declared and grade.verdict in FAILING:
+    if declared and grade.verdict in FAILED:
         return f"'{declared[0].raw.strip()}' in {declared[0].where} stands beside a figure that does not meet"
     return ""
 
@@ -223,6 +224,6 @@ def _over_tilts(requirement: Requirement, offer: Offer, settings: Settings) -> G
     unclear = requirement.statistic == "mean-dB" and any(
         text.startswith("STAT") for text in requirement.doubts
     )
-    if unclear and (grades[0].verdict in PASSING) != (grades[1].verdict in PASSING):
+    if unclear and (grades[0].verdict in PASSED) != (grades[1].verdict in PASSED):
         return Grade(Compliance.NOT_JUDGED, wanted.margin, f"the two kinds of mean disagree: {said}")
     return replace(wanted, note=said)

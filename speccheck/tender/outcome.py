@@ -10,7 +10,7 @@ from collections.abc import Iterator, Sequence
 from speccheck.dictionary import parameters
 from speccheck.records import Finding, Fit, Level, MatrixRow, Outcome
 from speccheck.records.demands import margin_unit
-from speccheck.tender.grading import FAILING, OPEN
+from speccheck.records.words import FAILED, OPEN
 
 
 def outcome(findings: Sequence[Finding], rows: Sequence[MatrixRow]) -> tuple[Outcome, tuple[str, ...]]:
@@ -45,7 +45,7 @@ def _mandatory(rows: Sequence[MatrixRow]) -> Iterator[MatrixRow]:
 
 def _failed(rows: Sequence[MatrixRow]) -> Iterator[str]:
     for row in _mandatory(rows):
-        if row.verdict in FAILING:
+        if row.verdict in FAILED:
             unit = margin_unit(row.requirement.unit)
             shown = "°" if unit == "deg" else f" {unit}".rstrip()
             margin = f" by {abs(row.margin):.3g}{shown}" if row.margin else ""

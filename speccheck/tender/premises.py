@@ -7,7 +7,7 @@ from dataclasses import replace
 
 from speccheck.dictionary import parameters
 from speccheck.records import Compliance, Level, MatrixRow, Requirement
-from speccheck.tender.grading import FAILING, PASSING
+from speccheck.records.words import FAILED, PASSED
 
 Judge = Callable[[Requirement], Iterator[MatrixRow]]
 
@@ -60,9 +60,9 @@ def _premise(requirement: Requirement) -> Requirement:
 
 def _holds(rows: Sequence[MatrixRow]) -> bool | None:
     verdicts = {row.verdict for row in rows}
-    if verdicts and verdicts <= set(PASSING):
+    if verdicts and verdicts <= set(PASSED):
         return True
-    return False if verdicts and verdicts <= set(FAILING) else None
+    return False if verdicts and verdicts <= set(FAILED) else None
 
 
 def _words(asked: Requirement) -> str:

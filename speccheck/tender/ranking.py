@@ -12,7 +12,7 @@ from itertools import pairwise
 
 from speccheck.records import Level, Outcome, Requirement
 from speccheck.records.evaluations import Bid, Offer, Standing, Swing, Weight
-from speccheck.tender.grading import PASSING
+from speccheck.records.words import PASSED
 
 _LEAST_GAIN = 1e-9
 _NO_POINTS = ("rule", "after award", "information", "evidence", "baseline", "condition")
@@ -51,7 +51,7 @@ def earned(offer: Offer, requirements: Sequence[Requirement]) -> Mapping[int, fl
     """Share (0 or 1) of each group's weight that an offer earns: 1 where every row of it passes."""
     rows: dict[int, list[bool]] = {}
     for cell in offer.cells:
-        rows.setdefault(cell.requirement, []).append(cell.verdict in PASSING)
+        rows.setdefault(cell.requirement, []).append(cell.verdict in PASSED)
     return {
         first: float(all(rows.get(place) and all(rows[place]) for place in places))
         for first, places in groups(requirements).items()

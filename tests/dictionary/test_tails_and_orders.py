@@ -379,3 +379,8 @@ def test_sizes_by_word_and_lists_in_two_languages(heading: str, keys: tuple[str,
 def test_what_is_permissible_is_a_maximum(heading: str) -> None:
     found = match_heading(heading)
     assert (found.parameters, found.sense) == (("max_power_per_port",), "max")
+
+
+def test_the_level_of_a_width_keeps_its_unit() -> None:
+    assert match_heading("Ouverture horizontale à -3 dB").condition == "-3 dB"
+    assert match_heading("Half-power beamwidth at -3 dB, horizontal").condition == "-3 dB"

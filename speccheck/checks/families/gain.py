@@ -23,6 +23,7 @@ from speccheck.checks.saying import claim, last_digit_slack
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.physics.expected import GainZone
 from speccheck.records import Amount, Fit, Interval, Reading, Step
+from speccheck.records.words import FIT_GRAVITY
 
 VERDICTS = {
     GainZone.IMPOSSIBLE: Fit.DOES_NOT_FIT,
@@ -103,7 +104,7 @@ def gain_fits_geometry(
         )
         for one in stated
     ]
-    return max(judged, key=lambda j: _SEVERITY[j.verdict])
+    return max(judged, key=lambda j: FIT_GRAVITY[j.verdict])
 
 
 def _all_round(gain: Reading, width: Reading | None) -> Judgement:
@@ -115,9 +116,6 @@ def _all_round(gain: Reading, width: Reading | None) -> Judgement:
         question="Please state how the panel forms a beam that wide, and confirm that the horizontal width"
         " is that of one beam at -3 dB.",
     )
-
-
-_SEVERITY = {Fit.FITS: 0, Fit.NOT_JUDGED: 0, Fit.DOUBTFUL: 1, Fit.DOES_NOT_FIT: 2}
 
 
 @dataclass(frozen=True, slots=True)

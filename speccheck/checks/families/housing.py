@@ -10,6 +10,7 @@ from speccheck.checks.registry import Case, Judgement, check
 from speccheck.checks.saying import claim
 from speccheck.physics.decibels import SPEED_OF_LIGHT_MPS
 from speccheck.records import Amount, Fit, Interval, Reading, Step
+from speccheck.records.words import FIT_GRAVITY
 
 
 @dataclass(frozen=True, slots=True)
@@ -108,7 +109,7 @@ def array_fits_housing(
     sides = _sides(model, height, width, group_count(panel_groups))
     if not sides:
         return None
-    worst = max(sides, key=lambda side: (_SEVERITY[side.verdict], side.full_m / side.stated.high))
+    worst = max(sides, key=lambda side: (FIT_GRAVITY[side.verdict], side.full_m / side.stated.high))
     return Judgement(
         verdict=worst.verdict,
         summary=" ".join(side.sentence for side in sorted(sides, key=lambda s: s is not worst)),
@@ -127,9 +128,6 @@ def array_fits_housing(
         question="Please confirm the spacing in millimetres and the outer size with the radome.",
         used=model.used,
     )
-
-
-_SEVERITY = {Fit.FITS: 0, Fit.NOT_JUDGED: 0, Fit.DOUBTFUL: 1, Fit.DOES_NOT_FIT: 2}
 
 
 def _sides(model: Model, height: Reading | None, width: Reading | None, groups: int) -> list[_Side]:

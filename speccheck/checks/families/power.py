@@ -73,12 +73,7 @@ def eirp_fits_power_and_gain(
         expected=Interval(round(low, 3), round(high, 3), "dBm"),
         working=(
             power.step,
-            Step(
-                "Total power as a level",
-                f"10·log10({power.nominal_w:.5g}) + 30",
-                _r(dbm(power.nominal_w)),
-                "dBm",
-            ),
+            _level(power),
             Step(
                 "Power plus gain",
                 f"{dbm(power.nominal_w):.2f} dBm + {gain.nominal:.2f} dBi",
@@ -252,12 +247,7 @@ def radiated_power_below_conducted(case: Case, trp: Reading, feed_loss: Reading 
         expected=Interval(_r(low), _r(high), "dBm"),
         working=(
             power.step,
-            Step(
-                "Total power as a level",
-                f"10·log10({power.nominal_w:.5g}) + 30",
-                _r(dbm(power.nominal_w)),
-                "dBm",
-            ),
+            _level(power),
             Step("With the largest loss", f"{dbm(power.low_w):.2f} dBm − {loss_db:g} dB", _r(low), "dBm"),
         ),
         assumptions=(*power.assumptions, f"Losses of 0 to {loss_db:g} dB."),
@@ -268,3 +258,8 @@ def radiated_power_below_conducted(case: Case, trp: Reading, feed_loss: Reading 
 
 def _r(value: object) -> float:
     return round(float(value), 3)  # type: ignore[arg-type]
+
+
+def _level(power: TransmitPower) -> Step:
+    formula = f"10·log10({power.nominal_w:.5g}) + 30"
+    return Step("Total power as a level", formula, _r(dbm(power.nominal_w)), "dBm")

@@ -61,7 +61,6 @@ class Grid:
     spans: dict[Place, Span] = field(default_factory=dict)
     hidden: bool = False
     hidden_rows: frozenset[int] = frozenset()
-    hidden_columns: tuple[tuple[int, int], ...] = ()
     _spans_by_row: dict[int, list[Span]] | None = None
 
     def span(self, cell: Cell) -> Span:

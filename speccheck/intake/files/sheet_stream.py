@@ -96,7 +96,7 @@ class _SheetReader:
                 hidden = cell.row in hidden_rows or any(low <= cell.column <= high for low, high in ranges)
                 (grid.hidden_cells if hidden else grid.cells)[place] = cell
         grid.spans = {(span.top, span.left): span for span in self._spans}
-        grid.hidden_rows, grid.hidden_columns = frozenset(hidden_rows), tuple(ranges)
+        grid.hidden_rows = frozenset(hidden_rows)
         return grid
 
     def _start_row(self, at: dict[str, str]) -> None:

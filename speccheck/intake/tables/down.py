@@ -86,7 +86,7 @@ class DownReader:
         if label_cell is not None:
             span = self._grid.span(label_cell)
             state.take(label_cell, self._marks.labels)
-            state.label_row, state.label_bottom = row, span.bottom
+            state.label_bottom = span.bottom
             self._result.mark(label_cell, "label")
         elif not beside:
             return

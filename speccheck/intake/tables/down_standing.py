@@ -18,7 +18,6 @@ class Standing:
     """The label of the row, the band and group above it, and a title that may begin a panel."""
 
     label: Label | None = None
-    label_row: int = 0
     label_bottom: int = 0
     section_band: Band | None = None
     section_name: str = ""

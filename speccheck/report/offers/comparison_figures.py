@@ -4,8 +4,9 @@ from __future__ import annotations
 
 from collections.abc import Iterator, Sequence
 
-from speccheck.records import Compliance, Requirement
+from speccheck.records import Requirement
 from speccheck.records.evaluations import Offer, OfferCell
+from speccheck.records.words import FAILED
 from speccheck.report.pages.canvas import Canvas, Figure, scale_around
 from speccheck.report.pages.formats import Numbers, shown_unit
 from speccheck.report.pages.marks import mark_for
@@ -14,7 +15,6 @@ from speccheck.report.pages.view import label
 MOST_CHARTS = 12
 MOST_OFFERS = 24
 _WIDTH, _ROW = 330, 16
-_OUTSIDE = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
 _MOST_NAMED = 4
 
 Row = tuple[int, str, Offer]
@@ -104,7 +104,7 @@ def _short(value: float | tuple[float, float] | None, unit: str, numbers: Number
 
 
 def _in_words(points: Sequence[Point], unit: str, numbers: Numbers) -> str:
-    outside = [(n, who, c) for n, who, c in points if (c.underlying or c.verdict) in _OUTSIDE]
+    outside = [(n, who, c) for n, who, c in points if (c.underlying or c.verdict) in FAILED]
     if not outside:
         return f"All {len(points)} figures are inside the limit."
     named = [

@@ -5,13 +5,13 @@ from __future__ import annotations
 from collections.abc import Iterator, Sequence
 from dataclasses import dataclass
 
-from speccheck.records import Compliance, Requirement
+from speccheck.records import Requirement
 from speccheck.records.evaluations import Weight
+from speccheck.records.words import PASSED
 from speccheck.report.offers.comparison_view import Column, Comparison
 
 MOST_PLACES = 12
 MOST_SWINGS = 12
-_PASSED = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -37,7 +37,7 @@ def points_lines(view: Comparison, columns: Sequence[Column]) -> tuple[PointsLin
 
 def _earns(column: Column, one: Weight) -> bool:
     rows = [column.cells.get(place, ()) for place in one.requirements]
-    return all(cells and all(cell.verdict in _PASSED for cell in cells) for cells in rows)
+    return all(cells and all(cell.verdict in PASSED for cell in cells) for cells in rows)
 
 
 def swing_texts(view: Comparison) -> tuple[str, ...]:

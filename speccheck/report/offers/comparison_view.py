@@ -8,6 +8,7 @@ from functools import cached_property
 
 from speccheck.records import Compliance, Level, Outcome, Requirement
 from speccheck.records.evaluations import Bid, Evaluation, Offer, OfferCell
+from speccheck.records.words import FAILED, GRAVITY, OPEN
 from speccheck.report.offers.comparison_figures import MOST_CHARTS, charted, strips
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.formats import Numbers
@@ -16,19 +17,6 @@ MOST_COLUMNS = 60
 """Offers whose figures a page can show; its list of offers, the workbook and the JSON hold all of them."""
 COLUMNS_PER_TABLE = 5
 MARKS_PER_TABLE = 20
-
-_SEVERITY = (
-    Compliance.FAILS,
-    Compliance.FAILS_NARROWLY,
-    Compliance.NOT_STATED,
-    Compliance.DECLARED_ONLY,
-    Compliance.NOT_JUDGED,
-    Compliance.DEVIATION_ACCEPTED,
-    Compliance.MEETS_NARROWLY,
-    Compliance.MEETS,
-)
-_FAILED = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
-_OPEN = (Compliance.NOT_STATED, Compliance.DECLARED_ONLY, Compliance.NOT_JUDGED)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -186,8 +174,8 @@ def _counts(evaluation: Evaluation, offer: Offer) -> tuple[int, int, int, int, i
     """Rows: mandatory passed, failed, open; claims in doubt; accepted deviations."""
     requirements = evaluation.tender.requirements if evaluation.tender else ()
     cells = [c for c in offer.cells if requirements[c.requirement].level is Level.MANDATORY]
-    failed = sum(c.verdict in _FAILED for c in cells)
-    open_ = sum(c.verdict in _OPEN for c in cells)
+    failed = sum(c.verdict in FAILED for c in cells)
+    open_ = sum(c.verdict in OPEN for c in cells)
     doubted = sum(bool(c.in_doubt) for c in offer.cells)
     accepted = sum(c.verdict is Compliance.DEVIATION_ACCEPTED for c in offer.cells)
     return len(cells) - failed - open_, failed, open_, doubted, accepted
@@ -210,6 +198,6 @@ def _entry(cells: Sequence[OfferCell]) -> Entry | None:
         return None
 
     def weight(cell: OfferCell) -> tuple[int, float]:
-        return _SEVERITY.index(cell.verdict), cell.margin if cell.margin is not None else float("inf")
+        return GRAVITY.index(cell.verdict), cell.margin if cell.margin is not None else float("inf")
 
     return Entry(cell=min(cells, key=weight), bands=len(cells))

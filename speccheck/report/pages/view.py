@@ -26,6 +26,7 @@ from speccheck.records import (
     Tender,
 )
 from speccheck.records.demands import margin_unit
+from speccheck.records.words import FAILED
 from speccheck.report.pages.canvas import Figure
 from speccheck.report.pages.figures import panel_figures
 from speccheck.report.pages.formats import Numbers
@@ -35,7 +36,6 @@ from speccheck.report.pages.questions import Question, collect_questions
 from speccheck.report.pages.summary import Tally, decisions, sentence, tally
 
 MISFITS = (Fit.DOES_NOT_FIT, Fit.DOUBTFUL)
-MISSES = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -234,7 +234,7 @@ def _panel_view(
         sentence=sentence(counted, len(own), bool(assessment.tender)),
         tally=counted,
         findings=findings,
-        contradictions=tuple(r for r in panel.requirements if r.statement and r.verdict in MISSES),
+        contradictions=tuple(r for r in panel.requirements if r.statement and r.verdict in FAILED),
         bands=_bands(panel, findings, drawn.by_band),
         figures=drawn.overview,
         exposure_figures=drawn.exposure,

@@ -4,7 +4,8 @@ from __future__ import annotations
 
 from collections.abc import Iterable, Sequence
 
-from speccheck.records import Assessment, Compliance, Fit, Level, Outcome, PanelAssessment
+from speccheck.records import Assessment, Fit, Level, Outcome, PanelAssessment
+from speccheck.records.words import FAILED, OPEN, PASSED
 from speccheck.report.pages.questions import Question
 from speccheck.report.pages.summary import tally
 from speccheck.report.workbooks.cells import Content, Rich, column_letter
@@ -42,20 +43,15 @@ def summary(assessment: Assessment, questions: Iterable[Question], judged: Seque
     )
 
 
-_MET = (Compliance.MEETS, Compliance.MEETS_NARROWLY, Compliance.DEVIATION_ACCEPTED)
-_MISSED = (Compliance.FAILS, Compliance.FAILS_NARROWLY)
-_OPEN = (Compliance.DECLARED_ONLY, Compliance.NOT_STATED, Compliance.NOT_JUDGED)
-
-
 def _summary_row(number: int, one: PanelAssessment, questions: int, reviewed: Rich) -> list[Content]:
     counted = tally(one)
     return [
         Rich(value=one.panel.name or f"Panel {number}", look="text"),
         one.outcome.value,
         *(counted.findings[fit] for fit in (Fit.FITS, Fit.DOUBTFUL, Fit.DOES_NOT_FIT, Fit.NOT_JUDGED)),
-        *(counted.of(Level.MANDATORY, *words) for words in (_MET, _MISSED, _OPEN)),
-        counted.of(Level.DESIRABLE, *_MET),
-        counted.of(Level.DESIRABLE, *_MISSED, *_OPEN),
+        *(counted.of(Level.MANDATORY, *words) for words in (PASSED, FAILED, OPEN)),
+        counted.of(Level.DESIRABLE, *PASSED),
+        counted.of(Level.DESIRABLE, *FAILED, *OPEN),
         questions,
         reviewed,
         "; ".join(one.reasons),

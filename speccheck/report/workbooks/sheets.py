@@ -46,7 +46,6 @@ class Table:
     rows: Collection[Sequence[Content]]
     frozen: int = 1
     printed: int = 0
-    spare_rows: int = 0
     sortable: bool = True
 
 
