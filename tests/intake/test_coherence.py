@@ -13,8 +13,8 @@ from intake.sheets import Rows, lines, read
 from speccheck.intake.files.grid import Grid
 from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.labels import Labels
-from speccheck.intake.tables.marks import mark
-from speccheck.intake.tables.no_names import never_a_name
+from speccheck.intake.tables.marking import mark
+from speccheck.intake.tables.names.refused import never_a_name
 from speccheck.intake.tables.second_look import most_coherent
 
 _ = None

@@ -9,7 +9,7 @@ from intake.sheets import Rows, lines, read, save
 
 from speccheck.intake.files.grid import Grid
 from speccheck.intake.submission import read_account
-from speccheck.intake.tables.naming import Names, model_name
+from speccheck.intake.tables.names.naming import Names, model_name
 
 _TABLE: Rows = [[], ["Gain (dBi)", 17], ["Weight (kg)", 12]]
 

@@ -5,15 +5,12 @@ from __future__ import annotations
 import re
 from dataclasses import replace
 from functools import lru_cache
-from typing import TYPE_CHECKING
 
 from speccheck.dictionary import match_heading, parameters, specified
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.labels import FREQUENCY_KEYS
-
-if TYPE_CHECKING:
-    from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.marks import Marks
 
 _LONGEST = 60
 _BROADCAST = re.compile(

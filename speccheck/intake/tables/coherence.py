@@ -12,8 +12,8 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.claims import Claim, Doubt, Draft, SheetResult
 from speccheck.intake.tables.labels import FREQUENCY_KEYS, Labels
 from speccheck.intake.tables.marks import Marks, looks_like_value
-from speccheck.intake.tables.no_names import never_a_name
-from speccheck.intake.tables.titles import codes
+from speccheck.intake.tables.names.refused import never_a_name
+from speccheck.intake.tables.names.titles import codes
 from speccheck.quantities import UnknownUnitError, convert
 
 _ASIDE = frozenset({"model", "part_number", "manufacturer", "revision", "panel_type", "remarks", "standards"})

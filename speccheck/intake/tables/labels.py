@@ -10,7 +10,7 @@ from speccheck.dictionary import match_heading, parameters
 from speccheck.intake.tables.bands import NO_BANDS, BandText, find_bands, is_band_label
 from speccheck.intake.tables.demands import demanded
 from speccheck.intake.tables.lines import LINE
-from speccheck.intake.tables.titles import counts_panels
+from speccheck.intake.tables.names.titles import counts_panels
 from speccheck.intake.tables.vocabulary import runs, stem, vocabulary
 from speccheck.intake.tables.words import column_role, is_counting_unit
 from speccheck.quantities import answers, dimension, unit_name

@@ -6,15 +6,16 @@ from dataclasses import replace
 from itertools import pairwise
 
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.across import AcrossReader
+from speccheck.intake.tables.across.reader import AcrossReader
+from speccheck.intake.tables.across.regions import Across, find_across
 from speccheck.intake.tables.claims import SheetResult
-from speccheck.intake.tables.down import DownReader
-from speccheck.intake.tables.down_regions import find_down
+from speccheck.intake.tables.down.reader import DownReader
+from speccheck.intake.tables.down.regions import find_down
 from speccheck.intake.tables.labels import Labels
-from speccheck.intake.tables.marks import Marks, looks_like_value, mark
-from speccheck.intake.tables.naming import Names
+from speccheck.intake.tables.marking import mark
+from speccheck.intake.tables.marks import Marks, looks_like_value
+from speccheck.intake.tables.names.naming import Names
 from speccheck.intake.tables.pasted import read_lines
-from speccheck.intake.tables.regions import Across, find_across
 from speccheck.intake.tables.second_look import most_coherent
 from speccheck.intake.tables.words import column_role
 

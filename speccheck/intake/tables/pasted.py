@@ -14,7 +14,7 @@ from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.lines import looks_like_line, split_lines
 from speccheck.intake.tables.loose_lines import loose_line
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.naming import Names, model_name
+from speccheck.intake.tables.names.naming import Names, model_name
 from speccheck.records import Band
 
 _WORD = re.compile(r"[^\W\d_]{3,}")

@@ -11,23 +11,23 @@ from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_lab
 from speccheck.intake.tables.beams import is_beam_name, of_beam
 from speccheck.intake.tables.claims import Claim, Context, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
-from speccheck.intake.tables.down_answers import take_answers
-from speccheck.intake.tables.down_bands import NamedBand, band_of_row, lone_nickname
-from speccheck.intake.tables.down_headings import (
+from speccheck.intake.tables.down.answers import take_answers
+from speccheck.intake.tables.down.bands import NamedBand, band_of_row, lone_nickname
+from speccheck.intake.tables.down.headings import (
     describe_columns,
     extend,
     find_headings,
     find_name_column,
     numbering_columns,
 )
-from speccheck.intake.tables.down_panels import NAME_KEYS, DownPanels
-from speccheck.intake.tables.down_regions import Down, cells_between
-from speccheck.intake.tables.down_row import RowCells, asides_of, in_plane, joined_label, row_cells
-from speccheck.intake.tables.down_standing import Standing
-from speccheck.intake.tables.down_titles import stated_below, waiting_title
+from speccheck.intake.tables.down.panels import NAME_KEYS, DownPanels
+from speccheck.intake.tables.down.regions import Down, cells_between
+from speccheck.intake.tables.down.row import RowCells, asides_of, in_plane, joined_label, row_cells
+from speccheck.intake.tables.down.standing import Standing
+from speccheck.intake.tables.down.titles import stated_below, waiting_title
 from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.naming import Names, model_name
+from speccheck.intake.tables.names.naming import Names, model_name
 from speccheck.intake.tables.words import without_number
 
 

@@ -8,10 +8,10 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.bands import is_band_label
 from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column, describe, heading_stack
-from speccheck.intake.tables.down_regions import Down, cells_between, heads_columns
+from speccheck.intake.tables.down.regions import Down, cells_between, heads_columns
 from speccheck.intake.tables.marks import Marks
+from speccheck.intake.tables.names.titles import codes, is_numbered_name
 from speccheck.intake.tables.roles import settle_roles
-from speccheck.intake.tables.titles import codes, is_numbered_name
 from speccheck.intake.tables.words import bound_of, column_role
 from speccheck.intake.tenders.answering import labelled, share_answering
 

@@ -6,20 +6,20 @@ import re
 from dataclasses import dataclass, field, replace
 
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.across_bands import RowBand, band_of
-from speccheck.intake.tables.across_families import families, settle_families
-from speccheck.intake.tables.across_fields import Field, describe_fields, find_guides, unit_of
-from speccheck.intake.tables.across_pairs import band_of_pair, pair_with_bands
-from speccheck.intake.tables.across_unknown import report_unknown
-from speccheck.intake.tables.across_whole import settle_whole
+from speccheck.intake.tables.across.bands import RowBand, band_of
+from speccheck.intake.tables.across.families import families, settle_families
+from speccheck.intake.tables.across.fields import Field, describe_fields, find_guides, unit_of
+from speccheck.intake.tables.across.pairs import band_of_pair, pair_with_bands
+from speccheck.intake.tables.across.regions import Across, cells_of
+from speccheck.intake.tables.across.unknown import report_unknown
+from speccheck.intake.tables.across.whole import settle_whole
 from speccheck.intake.tables.bands import band_of_title, find_bands, is_band_label
 from speccheck.intake.tables.beams import of_beam, said_apart
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.edges import band_between
 from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.naming import Names, model_name
-from speccheck.intake.tables.regions import Across, cells_of
+from speccheck.intake.tables.names.naming import Names, model_name
 from speccheck.intake.tables.repeats import is_ditto, meant
 from speccheck.intake.tables.words import is_aside_of_table
 from speccheck.records import Band

@@ -9,16 +9,15 @@ from functools import lru_cache
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import is_band_label
 from speccheck.intake.tables.claims import SheetResult
-from speccheck.intake.tables.down_regions import Down
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.no_names import of_paper
-from speccheck.intake.tables.title_words import (
+from speccheck.intake.tables.names.papers import (
     is_coined_name,
     is_paper_of_name,
     settled_by_sheet,
     without_paper,
 )
-from speccheck.intake.tables.titles import (
+from speccheck.intake.tables.names.refused import of_paper
+from speccheck.intake.tables.names.titles import (
     PARTS,
     announced,
     codes,
@@ -136,11 +135,6 @@ class Names:
     def is_title(self, text: str) -> bool:
         """Whether a text reads as the title of a panel."""
         return _score(text, self._grid.name.strip()) > 0
-
-    def title_for(self, table: Down, heading_rows: list[int], marks: Marks, result: SheetResult) -> Title:
-        """The name of the one panel a table is about."""
-        top = heading_rows[0] if heading_rows else table.top
-        return self.above(top, table.label_column, table.right, marks, result)
 
     def above(self, top: int, left: int, right: int, marks: Marks, result: SheetResult) -> Title:
         """The nearest title above a row, else the sheet's name, else the file's."""

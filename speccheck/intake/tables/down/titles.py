@@ -3,9 +3,9 @@
 from __future__ import annotations
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.down_regions import Down
+from speccheck.intake.tables.down.regions import Down
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.naming import Names
+from speccheck.intake.tables.names.naming import Names
 from speccheck.intake.tables.words import is_generic_sheet_name, is_group_heading
 
 _LOOK_AHEAD = 60

@@ -7,7 +7,7 @@ from functools import lru_cache
 
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.labels import is_unit
-from speccheck.intake.tables.titles import codes
+from speccheck.intake.tables.names.titles import codes
 from speccheck.intake.tables.words import (
     column_role,
     fold,

@@ -2,10 +2,10 @@
 
 from __future__ import annotations
 
-from speccheck.intake.tables.across_fields import Field
+from speccheck.intake.tables.across.fields import Field
+from speccheck.intake.tables.across.regions import Across
 from speccheck.intake.tables.claims import SheetResult
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.regions import Across
 
 
 def report_unknown(marks: Marks, table: Across, fields: dict[int, Field], result: SheetResult) -> None:

@@ -7,7 +7,7 @@ from collections.abc import Iterable
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.columns import Column
-from speccheck.intake.tables.down_row import RowCells
+from speccheck.intake.tables.down.row import RowCells
 from speccheck.records import Band
 
 NamedBand = tuple[Band | None, str]

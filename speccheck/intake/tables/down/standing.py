@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, replace
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.down_bands import NamedBand
+from speccheck.intake.tables.down.bands import NamedBand
 from speccheck.intake.tables.labels import Label, Labels
 from speccheck.records import Band
 

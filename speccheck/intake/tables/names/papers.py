@@ -5,7 +5,7 @@ from __future__ import annotations
 import re
 from functools import lru_cache
 
-from speccheck.intake.tables.titles import is_name_word
+from speccheck.intake.tables.names.titles import is_name_word
 from speccheck.intake.tables.vocabulary import stem, vocabulary
 from speccheck.intake.tables.words import fold, is_band_nickname, is_group_word, names_array, title_prefixes
 

@@ -8,12 +8,12 @@ from speccheck.intake.files.grid import Cell
 from speccheck.intake.tables.bands import find_bands
 from speccheck.intake.tables.claims import Claim, Context, Draft, SheetResult
 from speccheck.intake.tables.columns import VALUE_ROLES, Column
-from speccheck.intake.tables.down_bands import ColumnBands
-from speccheck.intake.tables.down_regions import Down
+from speccheck.intake.tables.down.bands import ColumnBands
+from speccheck.intake.tables.down.regions import Down
 from speccheck.intake.tables.labels import Label
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.naming import Names, model_name
-from speccheck.intake.tables.titles import codes
+from speccheck.intake.tables.names.naming import Names, Title, model_name
+from speccheck.intake.tables.names.titles import codes
 from speccheck.intake.tables.words import names_array
 from speccheck.records import Band
 
@@ -67,17 +67,22 @@ class DownPanels:
             self._name_arrays(values)
         title = None
         if not self.model_row and (self._name_groups_of_bands(values) or self._name_nothing(values)):
-            title = names.title_for(self._table, heading_rows, self._marks, self._result)
+            title = self._title(names, heading_rows)
             self._unname(values if title.certain else [])
         for column in values:
             cell = self._name_cell(column)
             if cell is not None and model_name(cell.text) not in self._drafts:
                 self._add(model_name(cell.text), cell, named=True)
         if not self._drafts:
-            title = title or names.title_for(self._table, heading_rows, self._marks, self._result)
+            title = title or self._title(names, heading_rows)
             self._add("", title.cell, named=title.certain).name = title.name
         self._bands_from_row(values)
         self._claims_of_headings(values)
+
+    def _title(self, names: Names, heading_rows: list[int]) -> Title:
+        """The name of the one panel that the table is about."""
+        top = heading_rows[0] if heading_rows else self._table.top
+        return names.above(top, self._table.label_column, self._table.right, self._marks, self._result)
 
     def start(self, name: str, cell: Cell) -> None:
         """Begin the next panel of a table that lists panels below one another."""

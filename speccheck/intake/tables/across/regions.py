@@ -5,7 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.across_groups import parts_rows
+from speccheck.intake.tables.across.groups import parts_rows
 from speccheck.intake.tables.heading_conditions import condition_of_heading
 from speccheck.intake.tables.labels import begins_with_unit, is_heading_filler
 from speccheck.intake.tables.marks import Marks, looks_like_value, says_column_role

@@ -8,15 +8,16 @@ from dataclasses import dataclass, field
 
 from speccheck.intake.files.grid import Cell, Grid
 from speccheck.intake.panels.told_by_value import label_by_values
-from speccheck.intake.tables.across_bands import gives_frequencies, holds_nicknames, holds_spans
+from speccheck.intake.tables.across.bands import gives_frequencies, holds_nicknames, holds_spans
+from speccheck.intake.tables.across.regions import Across
 from speccheck.intake.tables.beams import hold_beams
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.columns import Column, heading_stack
 from speccheck.intake.tables.composing import compose
 from speccheck.intake.tables.edges import edge_columns
 from speccheck.intake.tables.labels import FREQUENCY_KEYS, Label
-from speccheck.intake.tables.marks import Marks, is_size_letter
-from speccheck.intake.tables.regions import Across
+from speccheck.intake.tables.marking import is_size_letter
+from speccheck.intake.tables.marks import Marks
 
 _NAME_KEYS = ("model", "panel_type", "part_number")
 _LOOKED_AT = 40

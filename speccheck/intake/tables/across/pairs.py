@@ -7,13 +7,13 @@ import re
 from collections import Counter
 
 from speccheck.intake.files.grid import Cell
-from speccheck.intake.tables.across_bands import gives_frequencies
-from speccheck.intake.tables.across_fields import Field, cells_below
+from speccheck.intake.tables.across.bands import gives_frequencies
+from speccheck.intake.tables.across.fields import Field, cells_below
+from speccheck.intake.tables.across.regions import Across
 from speccheck.intake.tables.bands import find_bands, is_band_label
 from speccheck.intake.tables.claims import Context
 from speccheck.intake.tables.labels import Label, is_unit
 from speccheck.intake.tables.marks import Marks
-from speccheck.intake.tables.regions import Across
 
 _TAG = re.compile(
     r"(?<![^\W_])(?:(?:band|bande|banda|pasmo|array|range)\s?|[BRFbrf](?=\d))?#?([1-6]|[A-D]|I{1,3}|IV)(?![^\W_])(?!\s?[/.,x×]\s?\d)",

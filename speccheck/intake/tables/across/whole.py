@@ -6,8 +6,8 @@ from collections import defaultdict
 from collections.abc import Collection, Mapping
 
 from speccheck.intake.files.grid import Grid
-from speccheck.intake.tables.across_bands import RowBand
-from speccheck.intake.tables.across_fields import Field
+from speccheck.intake.tables.across.bands import RowBand
+from speccheck.intake.tables.across.fields import Field
 from speccheck.intake.tables.claims import Claim, Draft
 
 Rows = Mapping[int, RowBand]

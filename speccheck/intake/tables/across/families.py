@@ -5,9 +5,9 @@ from __future__ import annotations
 from collections.abc import Iterator
 
 from speccheck.intake.files.grid import Cell, Grid
-from speccheck.intake.tables.across_fields import Field
+from speccheck.intake.tables.across.fields import Field
+from speccheck.intake.tables.across.regions import Across
 from speccheck.intake.tables.labels import Label
-from speccheck.intake.tables.regions import Across
 
 _FAMILY = ("panel_type",)
 

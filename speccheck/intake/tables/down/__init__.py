@@ -1,0 +1,1 @@
+"""Tables with parameters down the side: a column is a panel, a band or a statistic."""
