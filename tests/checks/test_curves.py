@@ -58,8 +58,9 @@ def test_spacing_crosses_its_limit_where_the_grating_lobe_condition_says() -> No
 
 def test_limits_of_a_triangular_lattice_are_reached_where_its_first_lobe_enters() -> None:
     # Hansen, Phased Array Antennas, ch. 2: an equilateral lattice, not steered, keeps lobes out up to a side
-    # of 2/√3 = 1.1547 λ; rows 0.1 m · √3/2 apart, each shifted by half a side: c · 1.1547/0.1 m = 3462 MHz,
-    # 1.1547 · √3/2 = 1 λ
+    # of 2/√3 = 1.1547 λ: sides (s, 0) and (s/2, s√3/2) have the reciprocal (1/s, -1/(√3 s)) of length
+    # 2/(√3 s), which is 1, the rim of visible space, at that side. Rows 0.1 m · √3/2 apart, each shifted by
+    # half a side: c · 1.1547/0.1 m = 3462 MHz, 1.1547 · √3/2 = 1 λ
     drawing = drawn(
         "spacing",
         lattice="triangular",
@@ -91,7 +92,7 @@ def test_half_a_wavelength_keeps_lobes_out_of_the_steering_map() -> None:
 
 def test_lobes_of_sub_arrays_stand_a_wavelength_over_their_pitch_apart() -> None:
     # lobes at sin θ + n·λ/D (Mailloux, Phased Array Antenna Handbook, ch. 7): three rows of 58 mm at 3800 MHz
-    # have λ/D = 78.893/174 = 0.453; the third order is the element lattice's own
+    # have λ/D = 78.893/174 = 0.453, twice 0.907; the third, 1.360 = λ/58 mm, is the element lattice's own
     grouped = drawn("steering-map", **ACTIVE | {"vertical_element_spacing": 0.058, "subarray_rows": 3.0})
     assert grouped is not None
     own = grouped.curves[0]

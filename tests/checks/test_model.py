@@ -100,6 +100,8 @@ def test_groups_stand_at_their_stated_distance() -> None:
 
 
 def test_a_distance_below_the_width_of_a_group_is_the_gap() -> None:
+    # 20 mm from first to first element would lay groups of 8 · 41.5 = 332 mm over one another: a gap
+    # (common practice) puts the second 332 + 20 mm away
     gap = model(panel_groups="1 x 2, dgH = 20 mm")
     assert gap.group_pitch_m == pytest.approx(0.332 + 0.020)
     assert any("gap" in text for text in gap.assumptions)

@@ -72,7 +72,8 @@ def test_the_honest_panel_is_left_in_peace(panel: dict[str, Any]) -> None:
             "both widths given to one side of the beam",
         ),
         (COLUMN, {"vertical_beamwidth": 3.2}, "vertical width given to one side of the beam"),
-        # a parabola in decibels is √(10/3) wider at -10 dB: 119°; a uniform line 1.67: 10.6°
+        # a parabola in decibels is √(10/3) wider at -10 dB: 65.1° · 1.826 = 119°; a uniform line, sin²x/x² =
+        # 0.5 at x = 1.392 and 0.1 at 2.319, is 1.67 wider: 6.35° · 1.67 = 10.6°
         (COLUMN, {"horizontal_beamwidth": 119, "vertical_beamwidth": 10.6}, "both widths taken at -10 dB"),
         (COLUMN, {"vertical_beamwidth": 10.6}, "vertical width taken at -10 dB"),
         (COLUMN, {"vertical_element_spacing": "4.87 mm"}, "lengths in inches"),  # 123.6 ÷ 25.4
@@ -102,7 +103,8 @@ def test_the_planted_convention_is_named_first(
 
 
 def test_two_readings_that_fit_as_well_are_both_named_and_the_report_says_so() -> None:
-    # 2.58 dB over an honest gain is as far from 2.15 as from 3.01 dB
+    # (2.15 + 3.01)/2 = 2.58 dB over an honest gain is as far from 2.15 as from 3.01 dB: over 19.25 − 1.2 =
+    # 18.05 dBi, printed 18.1, it is 20.63 to 20.68 dBi
     for finding in misfits(COLUMN, gain="20.65 dBi"):
         names = [c.name for c in finding.conventions][:2]
         assert {n.partition(" ")[0] for n in names} == {"2.15", "both"}
@@ -122,7 +124,8 @@ def test_a_declared_loss_tells_the_dipole_from_the_polarisations() -> None:
 
 
 def test_no_reading_is_offered_that_leaves_a_misfit_it_touches() -> None:
-    # 27 dBi is what the area of the housing allows, 10·log10(4π·0.56·0.52 ÷ 0.0857²), but not 8 × 8 positions
+    # 27 dBi, 3 dB less, is what the area of the housing allows, 10·log10(4π·0.56·0.52 ÷ 0.0857²) = 27.0, but
+    # 8 × 8 positions have 23.45 dBi
     found = misfits(PLANAR, gain="30 dBi", height=0.56, width=0.52)
     assert "gain-fits-housing" in [f.check for f in found]
     for finding in found:
@@ -139,7 +142,8 @@ def test_a_fault_elsewhere_keeps_no_reading_from_being_offered() -> None:
 
 
 def test_the_figure_shown_is_the_one_that_was_reread() -> None:
-    # the height claimed stays as it is; what changes is the number of rows
+    # the height claimed stays as it is; what changes is the number of rows: 20 · 123.6 = 2472 mm are longer
+    # than 1350 mm, half of them, 1236 mm, are not
     housing = next(f for f in misfits(COLUMN, array_rows=20, height=1.35) if f.check == "array-fits-housing")
     rows = housing.conventions[0]
     assert rows.name == "rows count the dipoles of both polarisations"
@@ -147,7 +151,8 @@ def test_the_figure_shown_is_the_one_that_was_reread() -> None:
 
 
 def test_a_reading_twenty_times_less_likely_is_listed_and_not_asked_for() -> None:
-    # few panels are 119° wide at half power, and 119° is what 65° is at -10 dB
+    # few panels are 119° wide at half power (common practice), and 119° is what 65° is at -10 dB:
+    # 65.1° · √(10/3) = 118.9°
     for finding in misfits(COLUMN, horizontal_beamwidth=119):
         assert len(finding.conventions) > 1
         assert (

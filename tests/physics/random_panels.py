@@ -1,4 +1,7 @@
-"""Random arrays of the trade, from a seeded generator, and their counterparts in the package."""
+"""Random arrays, from a seeded generator, and their counterparts in the package.
+
+Ranges are assumptions that span common practice and more; no expected figure stands here.
+"""
 
 from __future__ import annotations
 

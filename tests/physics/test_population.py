@@ -1,5 +1,6 @@
 """A reduced run of tests/benchmarks/population.py through every check: honest panels pass, flattering are
-caught. Losses as the edges are set for: symmetric about the middle of their range."""
+caught. Losses as the edges are set for: symmetric about the middle of their range. The shares asked for are
+the aims of this project that the whole run prints, with room for so few panels."""
 
 import numpy as np
 import pytest

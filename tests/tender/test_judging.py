@@ -258,6 +258,7 @@ def test_a_shortfall_of_the_whole_half_unit_was_not_rounded() -> None:
 
 
 def test_a_lone_digit_was_not_rounded() -> None:
+    """1.5 would round to 2, but a VSWR is printed with a decimal (common practice): '2' falls 0.5 short."""
     assert _row(demand("vswr", "≤", 1.5), says("vswr", 2.0, "2")).verdict is Compliance.FAILS
 
 
@@ -293,5 +294,6 @@ def test_the_range_shown_is_the_one_that_answers_in_the_unit_demanded() -> None:
 
 
 def test_a_narrow_verdict_names_the_guard_band_with_its_unit() -> None:
+    # 17 − 16.9 = 0.1 dB, less than the 0.3 dB; a difference of two levels is in dB (ITU-R V.574, from memory)
     row = _row(demand("gain", "≥", 17.0), says("gain", 16.9, "16.90"), guard_bands={"gain": 0.3})
     assert row.note == "within the guard band of 0.3 dB"

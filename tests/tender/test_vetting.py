@@ -48,6 +48,7 @@ def test_gain_out_of_reach_names_the_limiting_rows() -> None:
 
 
 def test_a_beamwidth_without_tolerance_counts_too() -> None:
+    """The 15.4 dBi of the box above, below the 17 dBi demanded."""
     found = vet(_must(BOX[0], "Horizontal beamwidth 65°", BOX[2], "Gain shall be at least 17 dBi"))
     assert [f.check for f in found] == ["tender-gain-attainable"]
     assert "nominally 65 deg" in found[0].summary
