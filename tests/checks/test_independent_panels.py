@@ -153,8 +153,9 @@ def test_the_convention_behind_a_moved_gain_is_named_first(
 
     A loss anywhere within ±0.4 dB of its middle and a directivity good to 0.2 dB (one standard deviation,
     assumed) lie beyond half the gap, 0.43 dB, on one side in 8 % of draws, by integration of the normal tail:
-    2 of 24 panels, with a standard deviation of √(24 · 0.08 · 0.92) = 1.3; so 4 of 24 at most. No other
-    convention lowers a gain by about 2.15 dB: none.
+    2 of 24 panels are to be expected, with a standard deviation of √(24 · 0.08 · 0.92) = 1.3. One in six is 4
+    of 24; 3 and 0 are stricter. All three are what is reached today, limits against getting worse, and no
+    facts of the trade.
     """
     missed = []
     for panel in SOUND:
