@@ -84,3 +84,29 @@ def test_compliance_distances_are_rounded_up(metres: float, written: str) -> Non
 def test_dates_follow_the_habit_and_name_the_month(order: str, written: str) -> None:
     assert Numbers(date_order=order).day("2027-03-31") == written
     assert Numbers(date_order=order).day("") == ""
+
+
+@pytest.mark.parametrize(
+    ("value", "unit", "shown"),
+    [
+        (12.5, "deg", "12.5°"),
+        (26.55, "dBi", "26.55 dBi"),
+        (11.0223, "kg", "11.0 kg"),
+        ((59.0, 71.0), "deg", "59 to 71°"),
+    ],
+)
+def test_what_a_bidder_offers_is_not_rounded_to_another_figure(value: object, unit: str, shown: str) -> None:
+    assert POINT.offered(value, unit).replace("\u202f", " ") == shown
+
+
+def test_halves_are_rounded_as_a_spreadsheet_rounds_them() -> None:
+    # ISO 80000-1, rounding by rule B (from memory): of two equally near multiples the greater in magnitude.
+    assert [POINT.plain(0.735, 2), POINT.plain(-0.735, 2), POINT.plain(12.5, 0)] == ["0.74", "−0.74", "13"]
+
+
+def test_a_margin_keeps_the_half_degree_that_was_stated() -> None:
+    assert POINT.signed(-46.5, "deg") == "−46.5°"
+
+
+def test_sentences_carry_a_minus_sign_and_leave_what_was_quoted() -> None:
+    assert POINT.prose("at -63° in 3400-3800 MHz, read '-3 dB'") == "at −63° in 3400-3800 MHz, read '-3 dB'"

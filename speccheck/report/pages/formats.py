@@ -6,6 +6,7 @@ import datetime as dt
 import math
 import re
 from dataclasses import dataclass
+from decimal import ROUND_HALF_UP, Decimal
 
 from speccheck.records import Amount, Band, Interval, Value
 from speccheck.records.demands import margin_unit
@@ -40,6 +41,7 @@ _DECIMAL_IN_PROSE = re.compile(
     r"'[^']*'|“[^”]*”|"  # what a bidder wrote is quoted as it stands
     rf"(?<![\w.,])\d+\.\d+(?=(?:\s?(?:to|and|–|…|±|×)\s?[+−-]?\d+(?:\.\d+)?)*\s?{_UNITS})"
 )
+_MINUS_IN_PROSE = re.compile(r"'[^']*'|“[^”]*”|(?<![\w.,)\]°!'’-])-(?=\d)")
 _POWER_OF_TEN = re.compile(r"(?<![\w.])\d(?:\.\d+)?e\+\d+")
 _DECIMAL_IN_FORMULA = re.compile(r"(?<=\d)\.(?=\d)")
 
@@ -78,7 +80,7 @@ class Numbers:
             if "e" in text and abs(value) < 1e15:
                 text = f"{value:.0f}" if abs(value) >= 1 else f"{value:.9f}".rstrip("0")
         else:
-            text = f"{value:.{decimals}f}"
+            text = f"{_half_away(value, decimals):.{decimals}f}"
             if float(text) == 0:
                 text = text.lstrip("-")
         text = text.replace("-", MINUS)
@@ -112,7 +114,7 @@ class Numbers:
     def signed(self, value: float, unit: str = "", decimals: int | None = None) -> str:
         """A difference of two figures in `unit`: always with its sign."""
         (value,), unit = _in_millimetres((value,), unit)
-        digits = decimals_for(value, unit) if decimals is None else decimals
+        digits = _margin_decimals(value, unit) if decimals is None else decimals
         text, unit = self.plain(value, digits), margin_unit(unit)
         return self._with_unit(text if text.startswith(MINUS) or float(value) == 0 else f"+{text}", unit)
 
@@ -126,6 +128,13 @@ class Numbers:
         ends, unit = _in_millimetres(stated, amount.unit)
         shown = [self.plain(v, _least_decimals(v, unit)) for v in ends]
         return self._with_unit(" to ".join(shown), unit)
+
+    def offered(self, value: Value, unit: str = "") -> str:
+        """What a bidder offers: the unit's usual digits, one more where that holds his figure whole."""
+        if isinstance(value, str):
+            return self.figure(value, unit)
+        ends, unit = _in_millimetres(value if isinstance(value, tuple) else (value,), unit)
+        return self._with_unit(" to ".join(self.plain(v, _offered_decimals(v, unit)) for v in ends), unit)
 
     def interval(self, interval: Interval | None) -> str:
         """What a claim is held against: both ends, or the one that is not open."""
@@ -141,6 +150,7 @@ class Numbers:
 
     def prose(self, text: str) -> str:
         """A sentence of the program: its figures with units in the page's decimal sign, quotes untouched."""
+        text = _MINUS_IN_PROSE.sub(lambda m: MINUS if m[0] == "-" else m[0], text)
         if not self.decimal_comma:
             return text
         return _DECIMAL_IN_PROSE.sub(lambda m: m[0] if m[0][0] in "'“" else m[0].replace(".", ","), text)
@@ -148,6 +158,7 @@ class Numbers:
     def formula(self, text: str) -> str:
         """A formula with its numbers; beside a decimal comma its arguments are parted by semicolons."""
         text = _POWER_OF_TEN.sub(lambda m: self.plain(float(m[0]), 0) if float(m[0]) < 1e12 else m[0], text)
+        text = _MINUS_IN_PROSE.sub(lambda m: MINUS if m[0] == "-" else m[0], text)
         if not self.decimal_comma:
             return text
         return _DECIMAL_IN_FORMULA.sub(",", text.replace(", ", "; "))
@@ -190,6 +201,24 @@ def decimals_for(value: float, unit: str) -> int:
     if value == 0 or not math.isfinite(value):
         return 0
     return max(0, 2 - math.floor(math.log10(abs(value))))
+
+
+def _half_away(value: float, decimals: int) -> float:
+    """The number as printed in full, rounded half away from zero: 0.735 is 0.74 here as in a workbook."""
+    if abs(value) >= _FARTHEST_M:
+        return value
+    return float(Decimal(repr(float(value))).quantize(Decimal(1).scaleb(-decimals), ROUND_HALF_UP))
+
+
+def _offered_decimals(value: float, unit: str) -> int:
+    digits = decimals_for(value, unit)
+    return digits + (round(value, digits) != round(value, 9) == round(value, digits + 1))
+
+
+def _margin_decimals(value: float, unit: str) -> int:
+    """Digits of a margin: a half degree that a bidder stated is not rounded away."""
+    digits = decimals_for(value, unit)
+    return 1 if unit == "deg" and math.isfinite(value) and round(value, 1) != round(value) else digits
 
 
 def _least_decimals(value: float, unit: str) -> int | None:

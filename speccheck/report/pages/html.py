@@ -157,6 +157,7 @@ def _environment(numbers: Numbers) -> jinja2.Environment:
         stated=numbers.stated,
         figure=numbers.figure,
         signed=numbers.signed,
+        offered=numbers.offered,
         amount=numbers.amount,
         interval=numbers.interval,
         band=numbers.band,
