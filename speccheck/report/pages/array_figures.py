@@ -46,17 +46,15 @@ def _spacing(drawing: Drawing, numbers: Numbers) -> Figure:
         plane = curve.name.partition(",")[0]
         style = _CURVE_STYLES[i]
         plot.curve(curve.x, curve.y, style)
-        canvas.write(
-            218, plot.y(curve.y[-1]) + 4, f"{plane} {numbers.plain(curve.y[-1], 2)}λ", style=f"{style}-text"
-        )
+        said = f"{plane} {numbers.plain(curve.y[-1], 2)}λ"
+        canvas.write(218, plot.y(curve.y[-1]) + 4, said, style=f"{style}-text")
         limit = drawing.marks[f"limit_{plane}_wl"]
         plot.level(limit, "limit")
         crossing = drawing.marks[f"crossing_{plane}_mhz"]
         if ends[0] < crossing < ends[-1]:
             canvas.dot(plot.x(crossing), plot.y(limit), 4, "open")
-            canvas.write(
-                plot.x(crossing), plot.y(limit) - 8, f"{numbers.plain(crossing, 0)} MHz", "middle", "strong"
-            )
+            met = f"{numbers.plain(crossing, 0)} MHz"
+            canvas.write(plot.x(crossing), plot.y(limit) - 8, met, "middle", "strong")
         angle = numbers.figure(drawing.marks[f"angle_{plane}_deg"], "deg")
         rows.append(
             (curve.name, *(f"{numbers.plain(y, 2)}λ" for y in (curve.y[0], curve.y[-1], limit)), angle)
@@ -98,11 +96,14 @@ def _vertical_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     axes(canvas, x, y, "Level against the beam [dB]", "Elevation [°]", y_ticks=range(-90, 91, 30))
     canvas.line(((x.start, y(0)), (x.end, y(0))), "axis")
     middle = len(drawing.curves[:3]) // 2
+    styles = _ORDER if middle else ("first",)
     for i, curve in enumerate(drawing.curves[:3]):
         lowest = FLOOR_DB if i == middle else SIDE_TILT_DB
         points = zip(curve.y, x.places(curve.y), y.places(curve.x), strict=True)
-        canvas.line([(at, up) if level >= lowest else _HIDDEN for level, at, up in points], _ORDER[i])
-        canvas.write(252, 34 + 13 * i, curve.name, style=f"{_ORDER[i]}-text")
+        canvas.line([(at, up) if level >= lowest else _HIDDEN for level, at, up in points], styles[i])
+        canvas.write(252, 34 + 13 * i, curve.name, style=f"{styles[i]}-text")
+        canvas.line(((297, 31 + 13 * i), (318, 31 + 13 * i)), styles[i])
+    above = f"Least and greatest tilt: drawn above {numbers.plain(SIDE_TILT_DB)} dB."
     marks = drawing.marks
     for level, name in ((-3.0, "3db"), (-10.0, "10db")):
         if f"expected_{name}_from_deg" in marks:
@@ -114,14 +115,13 @@ def _vertical_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     for i, (said, name) in enumerate((("−3 dB", "3db"), ("−10 dB", "10db"))):
         if f"expected_{name}_deg" in marks:
             canvas.write(252, 140 + 30 * i, said, style="small")
-            canvas.write(
-                252, 153 + 30 * i, numbers.figure(marks[f"expected_{name}_deg"], "deg"), style="small"
-            )
+            width = numbers.figure(marks[f"expected_{name}_deg"], "deg")
+            canvas.write(252, 153 + 30 * i, width, style="small")
     return canvas.figure(
         drawing.title,
         drawing.text,
         where=drawing.where,
-        note=f"{EXPECTED} Least and greatest tilt: drawn above {numbers.plain(SIDE_TILT_DB)} dB.",
+        note=f"{EXPECTED} {above}" if middle else EXPECTED,
         kind=drawing.kind,
         **_width_table(drawing, numbers),
     )
@@ -132,14 +132,15 @@ def _horizontal_cut(drawing: Drawing, numbers: Numbers) -> Figure:
     plot = axes(
         canvas,
         Scale(-180, 180, 40, 310),
-        Scale(-30, 0, 160, 22),
+        Scale(-30, 0, 160, 36),
         "Azimuth [°]",
         "Level against the beam [dB]",
         x_ticks=range(-180, 181, 60),
     )
     for i, curve in enumerate(drawing.curves[:3]):
         plot.curve(curve.x, curve.y, _CURVE_STYLES[i])
-        canvas.write(304, 34 + 13 * i, curve.name, "end", f"{_CURVE_STYLES[i]}-text")
+        canvas.line(((40 + 92 * i, 23), (58 + 92 * i, 23)), _CURVE_STYLES[i])
+        canvas.write(62 + 92 * i, 26, curve.name, style=f"{_CURVE_STYLES[i]}-text")
     marks, y = drawing.marks, 206.0
     for name_shown, name in (("−3 dB", "3db"), ("−10 dB", "10db")):
         expected, claimed = marks.get(f"expected_{name}_deg"), marks.get(f"claimed_{name}_deg")
@@ -147,13 +148,13 @@ def _horizontal_cut(drawing: Drawing, numbers: Numbers) -> Figure:
         said = []
         if expected is not None:
             canvas.line(((plot.x(-expected / 2), y), (plot.x(expected / 2), y)), "span")
-            said.append(f"{numbers.plain(expected, 0)}° expected")
+            said.append(f"{numbers.figure(expected, 'deg')} expected")
         if claimed is not None:
             ends = [plot.x(-min(claimed, 358) / 2), plot.x(min(claimed, 358) / 2)]
             canvas.line(((ends[0], y - 5), (ends[0], y + 5)), "claimspan")
             canvas.line(((ends[0], y), (ends[1], y)), "claimspan")
             canvas.line(((ends[1], y - 5), (ends[1], y + 5)), "claimspan")
-            said.append(f"{numbers.plain(claimed, 0)}° claimed")
+            said.append(f"{numbers.offered(claimed, 'deg')} claimed")
         canvas.write(310, y + 15, ", ".join(said) or "no width", "end", "small")
         y += 26
     return canvas.figure(

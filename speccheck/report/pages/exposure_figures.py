@@ -91,9 +91,17 @@ def _side_view(panel: Panel, note: ExposureNote, rows: Sequence[ExposureRow], nu
     if far is not None and shown_far:
         canvas.line(((x0 + far * px, y0 - 10), (x0 + far * px, y0 + 10)), "zero")
         beside_panel = far * px < 60
+        rise_px = max(
+            (
+                row.distance_m * px * math.sin(math.radians(_ARC_BEYOND_DEG - min(tilts)))
+                for row in rows
+                if abs(row.distance_m - far) * px < _LABEL_WIDTH
+            ),
+            default=0.0,
+        )
         canvas.write(
             x0 + far * px + (3 if beside_panel else 0),
-            y0 - 14,
+            max(y0 - max(14, rise_px + 5), 10),
             f"far field {numbers.rounded_up(far)}",
             "start" if beside_panel else "middle",
             "small",
