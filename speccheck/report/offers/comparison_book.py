@@ -94,7 +94,7 @@ def _offers(view: Comparison) -> Table:
             Column(heading="Panel", width=28),
             Column(heading="File", width=24),
             Column(heading="Outcome", width=13, status=tuple(Outcome)),
-            *(Column(heading=name, width=11, look="number0") for name in counts),
+            *(Column(heading=name, width=13, look="number0") for name in counts),
             Column(heading="Physics misfits", width=11, look="number0"),
             Column(heading="Physics doubts", width=11, look="number0"),
             Column(heading="Points", width=9, look="number"),
@@ -139,10 +139,10 @@ def _demand(view: Comparison, requirement: Requirement) -> str:
 
 def _entry_text(view: Comparison, requirement: Requirement, cell: OfferCell) -> Content:
     mark = mark_for(cell.verdict)
-    figure = view.numbers.figure(cell.offered, requirement.unit) if cell.offered is not None else cell.raw
+    figure = view.numbers.offered(cell.offered, requirement.unit) if cell.offered is not None else cell.raw
     margin = f" ({view.numbers.signed(cell.margin, requirement.unit)})" if cell.margin is not None else ""
     doubt = ", in doubt" if cell.in_doubt else ""
-    return Rich(value=f"{mark.symbol} {mark.word}: {figure or '–'}{margin}{doubt}", look=mark.tone)
+    return Rich(value=f"{mark.symbol} {mark.word}: {figure or '–'}{margin}{doubt}", look=f"{mark.tone}-wrap")
 
 
 def _rows(view: Comparison) -> Table:

@@ -102,7 +102,8 @@ def form_bytes(tender: Tender | None = None) -> bytes:
     sheets: list[Table | Grid] = [_read_me(tender), _bid(keys, chosen)]
     if tender is not None:
         sheets.append(_clauses(tender, chosen))
-    sheets.append(_lists(keys))
+    if _offered(keys):
+        sheets.append(_lists(keys))
     source = f" for {tender.file}" if tender else ""
     rules = tender.settings if tender else None
     return book_bytes(

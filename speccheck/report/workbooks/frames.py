@@ -91,7 +91,7 @@ def _rows_of(sheet: Table | Grid) -> Iterator[tuple[int, Row, float | None, bool
         return
     looks = [column.look for column in sheet.columns]
     printed = sheet.printed or len(looks)
-    wrapped = [(n, column.width) for n, column in enumerate(sheet.columns) if column.look == "wrap"]
+    wrapped = [(n, column.width) for n, column in enumerate(sheet.columns) if column.look in ("wrap", "link")]
     on_paper = [(n, width) for n, width in wrapped if n < printed]
     headings: Row = [(n, c.heading, "heading") for n, c in enumerate(sheet.columns, start=1)]
     yield 1, headings, _heading_height(sheet), False

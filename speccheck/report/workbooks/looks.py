@@ -46,7 +46,7 @@ def _looks() -> dict[str, Look]:
         "text": Look(written=True),
         "wrap": Look(written=True, wrapped=True),
         "bold": Look(written=True, bold=True),
-        "link": Look(written=True, underlined=True, ink="0B5394"),
+        "link": Look(written=True, wrapped=True, underlined=True, ink="0B5394"),
         "example": Look(written=True, italic=True, ink="52606D"),
         "example-number": Look(italic=True, ink="52606D"),
         "date": Look(number_format=DATE_FORMAT),
@@ -59,6 +59,7 @@ def _looks() -> dict[str, Look]:
     }
     looks |= {f"number{n}": Look(number_format="0." + "0" * n if n else "0") for n in range(5)}
     looks |= {tone: Look(fill=fill, ink=ink) for tone, (fill, ink) in TONES.items()}
+    looks |= {f"{tone}-wrap": Look(fill=fill, ink=ink, wrapped=True) for tone, (fill, ink) in TONES.items()}
     return looks
 
 

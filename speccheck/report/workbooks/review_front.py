@@ -205,7 +205,7 @@ def lists() -> Table:
             Column(heading="Meaning of outcome or level", width=50, look="wrap"),
             Column(heading="Physics verdict", width=16, status=tuple(Fit)),
             Column(heading="Meaning of physics verdict", width=50, look="wrap"),
-            Column(heading="Reviewer's verdict", width=18, status=(*Fit, *Compliance)),
+            Column(heading="Reviewer's verdict", width=23, status=(*Fit, *Compliance)),
             Column(heading="Meaning for a requirement", width=50, look="wrap"),
             Column(heading="Yes or no", width=10),
         ),

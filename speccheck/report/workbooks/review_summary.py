@@ -81,7 +81,7 @@ def question_list(questions: Iterable[Question], places: Places) -> Table:
             Column(heading="Panel", width=18),
             Column(heading="Clause", width=10),
             Column(heading="Bands (MHz)", width=18),
-            Column(heading="Cells", width=20, look="link"),
+            Column(heading="Cells", width=34, look="link"),
             Column(heading="What was found", width=50, look="wrap"),
             Column(heading="Question", width=56, look="wrap"),
             Column(heading="Owner", width=14, look="entry", note="Who sends it and follows it up."),

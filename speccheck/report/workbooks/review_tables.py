@@ -47,7 +47,7 @@ def findings(places: Places) -> Table:
                 for name in bounds
             ),
             Column(heading="Unit", width=8),
-            Column(heading="Cells", width=24, look="link", note="Leads to the first of the cells."),
+            Column(heading="Cells", width=34, look="link", note="Leads to the first of the cells."),
             Column(heading="Question", width=40, look="wrap"),
             Column(heading="Claimed in words", width=16),
             Column(
