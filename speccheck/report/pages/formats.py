@@ -114,7 +114,7 @@ class Numbers:
     def signed(self, value: float, unit: str = "", decimals: int | None = None) -> str:
         """A difference of two figures in `unit`: always with its sign."""
         (value,), unit = _in_millimetres((value,), unit)
-        digits = _margin_decimals(value, unit) if decimals is None else decimals
+        digits = margin_decimals(value, unit) if decimals is None else decimals
         text, unit = self.plain(value, digits), margin_unit(unit)
         return self._with_unit(text if text.startswith(MINUS) or float(value) == 0 else f"+{text}", unit)
 
@@ -215,7 +215,7 @@ def _offered_decimals(value: float, unit: str) -> int:
     return digits + (round(value, digits) != round(value, 9) == round(value, digits + 1))
 
 
-def _margin_decimals(value: float, unit: str) -> int:
+def margin_decimals(value: float, unit: str) -> int:
     """Digits of a margin: a half degree that a bidder stated is not rounded away."""
     digits = decimals_for(value, unit)
     return 1 if unit == "deg" and math.isfinite(value) and round(value, 1) != round(value) else digits

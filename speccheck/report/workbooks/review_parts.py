@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterable, Sequence
+from collections.abc import Callable, Iterable, Sequence
 
 from speccheck.records import Band, CellRef, Value
 from speccheck.report.pages.formats import decimals_for
@@ -32,11 +32,13 @@ def band_edges(band: Band | None) -> tuple[float | None, float | None]:
     return band or (None, None)
 
 
-def number_cell(value: float | None, unit: str) -> Content:
+def number_cell(
+    value: float | None, unit: str, decimals: Callable[[float, str], int] = decimals_for
+) -> Content:
     """A real number that shows the digits its unit's data support."""
     if value is None:
         return None
-    return Rich(value=value, look=f"number{min(decimals_for(value, unit), MOST_DECIMALS)}")
+    return Rich(value=value, look=f"number{min(decimals(value, unit), MOST_DECIMALS)}")
 
 
 def spread(value: Value | None) -> tuple[Content, Content, str]:

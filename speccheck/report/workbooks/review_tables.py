@@ -10,7 +10,7 @@ from speccheck.records import (
     MatrixRow,
     Step,
 )
-from speccheck.report.pages.formats import Numbers, shown_unit
+from speccheck.report.pages.formats import Numbers, margin_decimals, shown_unit
 from speccheck.report.pages.view import label
 from speccheck.report.workbooks.cells import Content
 from speccheck.report.workbooks.review_parts import (
@@ -151,7 +151,7 @@ def _requirement_row(panel: str, row: MatrixRow, places: Places) -> list[Content
         *limit,
         shown_unit(asked.unit),
         *offered[:2],
-        number_cell(row.margin, asked.unit),
+        number_cell(row.margin, asked.unit, margin_decimals),
         row.verdict.value,
         linked_cells((answer.where,), places) if answer else "",
         answer.raw if answer else "",
