@@ -107,7 +107,7 @@ def _horizontal(  # noqa: PLR0917 what the cut is of, then where it is taken
             f"Horizontal cut of one column, drawn for its claimed {marks['claimed_3db_deg']:.3g}° at −3 dB"
         )
         if "expected_10db_deg" in marks:
-            title += f": {marks['expected_10db_deg']:.0f}° at −10 dB expected"
+            title += f": {marks['expected_10db_deg']:.3g}° at −10 dB expected"
         basis = ", with the claimed −3 dB width of the column"
     return Drawing(
         kind="horizontal-cut",
@@ -125,7 +125,7 @@ _LEVELS = (("expected_3db_deg", "−3 dB"), ("expected_10db_deg", "−10 dB"))
 
 
 def _expected(marks: dict[str, float]) -> str:
-    said = [f"{marks[key]:.0f}° at {level}" for key, level in _LEVELS if key in marks]
+    said = [f"{marks[key]:.3g}° at {level}" for key, level in _LEVELS if key in marks]
     return " and ".join(said) or "no −3 dB width"
 
 
